@@ -1,0 +1,84 @@
+import { z } from "zod";
+import { warningSchema } from "../warnings";
+import { inputNameSchema } from "./inputs-schema";
+
+/** Quantities stored trial by trial with a revision. Gas in scf at 14.696 psia and 60 degF, condensate in STB. */
+export const vectorNames = [
+  "wetGasInPlaceScf",
+  "dryGasInPlaceScf",
+  "condensateInPlaceStb",
+  "salesGasScf",
+  "condensateRecoverableStb",
+] as const;
+export type VectorName = (typeof vectorNames)[number];
+
+/** Quantities summarised for one reservoir; `condensateLeftStb` is in place less recoverable, trial by trial. */
+export const resultNames = [...vectorNames, "condensateLeftStb"] as const;
+export type ResultName = (typeof resultNames)[number];
+
+/** Derived fluid and rock quantities, summarised without a curve. */
+export const derivedNames = [
+  "zFactor",
+  "gasFormationVolumeFactorCfPerScf",
+  "wellstreamGravity",
+  "dryGasFraction",
+  "condensateYieldStbPerMmscfWellstream",
+  "wetGasPerAcreFootScf",
+  "condensatePerAcreFootStb",
+] as const;
+export type DerivedName = (typeof derivedNames)[number];
+
+/** P90 is the low case: 90 % of trials are at least this. Quantiles use the R-7 method (Hyndman and Fan 1996). */
+export const rangeSchema = z.object({
+  p90: z.number(),
+  p50: z.number(),
+  p10: z.number(),
+  mean: z.number(),
+});
+export type Range = z.infer<typeof rangeSchema>;
+
+export const quantitySummarySchema = rangeSchema.extend({
+  standardDeviation: z.number(),
+  minimum: z.number(),
+  maximum: z.number(),
+  /** sampling error of each percentile and of the mean (one standard error) */
+  standardErrors: rangeSchema,
+  /** equal bins from `low` to `high` */
+  histogram: z.object({ low: z.number(), high: z.number(), counts: z.array(z.number()) }),
+  /** `values[i]` is exceeded (or reached) with chance `probabilities[i]`, from 1 down to 0 */
+  exceedance: z.object({ values: z.array(z.number()), probabilities: z.array(z.number()) }),
+});
+export type QuantitySummary = z.infer<typeof quantitySummarySchema>;
+
+/** What one input does to one result. */
+export const driverSchema = z.object({
+  input: inputNameSchema,
+  /** Spearman rank correlation of the input with the result over the trials */
+  rankCorrelation: z.number(),
+  /** squared rank correlation over the sum of them; 0 for a constant. Shares of correlated inputs overlap */
+  shareOfSpread: z.number(),
+  /** the result with this input at its P90 and at its P10, the others at their P50 */
+  swing: z.object({ atP90: z.number(), atP10: z.number() }),
+});
+export type Driver = z.infer<typeof driverSchema>;
+
+export const simulationSummarySchema = z.object({
+  engineVersion: z.string(),
+  seed: z.number().int(),
+  trials: z.number().int(),
+  /** percentiles of the sampled inputs (after truncation), so a screen can show what was actually sampled */
+  inputs: z.record(inputNameSchema, rangeSchema),
+  results: z.record(z.enum(resultNames), quantitySummarySchema),
+  derived: z.record(z.enum(derivedNames), rangeSchema),
+  /** ranked by share of the spread, largest first */
+  drivers: z.object({
+    wetGasInPlaceScf: z.array(driverSchema),
+    condensateRecoverableStb: z.array(driverSchema),
+  }),
+  /** the results with every input at its P50 */
+  deterministic: z.record(z.enum(resultNames), z.number()),
+  warnings: z.array(warningSchema),
+});
+export type SimulationSummary = z.infer<typeof simulationSummarySchema>;
+
+export type TrialVectors = Record<VectorName, Float64Array>;

@@ -1,0 +1,10 @@
+/** @type {import("next").NextConfig} */
+const config = {
+  // These read files or load optional drivers at run time, so they stay outside the bundle.
+  serverExternalPackages: ["sequelize", "pg", "pg-boss", "piscina", "@node-rs/argon2", "pino"],
+  poweredByHeader: false,
+  reactStrictMode: true,
+  devIndicators: false,
+};
+
+export default config;

@@ -1,0 +1,46 @@
+import path from "node:path";
+import { defineConfig } from "vitest/config";
+
+const alias = {
+  "@": path.resolve(import.meta.dirname),
+  // Outside Next there is no client bundle to protect, so the guard module is empty.
+  "server-only": path.resolve(import.meta.dirname, "tests/support/server-only.ts"),
+};
+
+export default defineConfig({
+  test: {
+    reporters: ["default", "./tests/support/summary-reporter.ts"],
+    projects: [
+      {
+        resolve: { alias },
+        test: {
+          name: "unit",
+          include: ["tests/{analytics,components,policy,services,scripts}/**/*.test.{ts,tsx}"],
+          environment: "node",
+        },
+      },
+      {
+        resolve: { alias },
+        test: {
+          name: "api",
+          include: ["tests/api/**/*.test.ts"],
+          environment: "node",
+          fileParallelism: false,
+          testTimeout: 30_000,
+          hookTimeout: 120_000,
+        },
+      },
+      {
+        resolve: { alias },
+        test: {
+          name: "e2e",
+          include: ["tests/e2e/**/*.test.ts"],
+          environment: "node",
+          fileParallelism: false,
+          testTimeout: 120_000,
+          hookTimeout: 300_000,
+        },
+      },
+    ],
+  },
+});
