@@ -1,0 +1,120 @@
+import PgBoss from "pg-boss";
+import type { Sequelize, Transaction } from "sequelize";
+import { env } from "../env";
+import { log } from "../log";
+import { type JobHandlers, type JobName, type JobPayload, jobNames, jobs } from "./jobs";
+
+/**
+ * The work queue, kept in the same PostgreSQL as the data so that a job can be written in the
+ * transaction that needs it: either both happen or neither.
+ */
+
+const held = globalThis as typeof globalThis & { dewledgerQueue?: Promise<PgBoss> };
+
+/** The queue of this process, connected on first use; one instance survives hot reload. */
+function queue(): Promise<PgBoss> {
+  held.dewledgerQueue ??= connect({ supervise: false }).catch((error: unknown) => {
+    // The next call tries again; a database that is away must not disable the queue for ever.
+    held.dewledgerQueue = undefined;
+    throw error;
+  });
+  return held.dewledgerQueue;
+}
+
+async function connect({ supervise }: { supervise: boolean }): Promise<PgBoss> {
+  const boss = new PgBoss({
+    connectionString: env().DATABASE_URL,
+    application_name: "dewledger-queue",
+    max: 4,
+    supervise,
+    schedule: supervise,
+  });
+  boss.on("error", (error) => log.error({ err: error }, "queue"));
+  await boss.start();
+  for (const name of jobNames) await boss.createQueue(name, { name, ...jobs[name].options });
+  return boss;
+}
+
+export interface EnqueueOptions {
+  /** Write the job in this transaction, so that it exists only if the change does. */
+  transaction?: Transaction;
+  /** The connection that the transaction belongs to. */
+  sequelize?: Sequelize;
+  /** While a job with this key waits, another one is not added. */
+  singletonKey?: string;
+  /** Not before this many seconds from now. */
+  delaySeconds?: number;
+}
+
+/**
+ * Ask for a piece of work.
+ *
+ * @returns the job's id, or null when one with the same singleton key is already waiting
+ * @throws {z.ZodError} when the payload does not have the job's shape
+ */
+export async function enqueue<Name extends JobName>(
+  name: Name,
+  payload: JobPayload<Name>,
+  { transaction, sequelize, singletonKey, delaySeconds }: EnqueueOptions = {},
+): Promise<string | null> {
+  const data = jobs[name].payload.parse(payload);
+  const boss = await queue();
+  return boss.send(name, data, {
+    ...(singletonKey === undefined ? {} : { singletonKey }),
+    ...(delaySeconds === undefined ? {} : { startAfter: delaySeconds }),
+    ...(transaction === undefined || sequelize === undefined
+      ? {}
+      : { db: within(sequelize, transaction) }),
+  });
+}
+
+/** Lets the queue write through a transaction of ours. */
+function within(sequelize: Sequelize, transaction: Transaction): PgBoss.Db {
+  return {
+    executeSql: async (text, values) => {
+      const [rows] = await sequelize.query(text, { bind: values, transaction });
+      return { rows };
+    },
+  };
+}
+
+/**
+ * Run jobs in this process until `stop` is called. `stop` lets the work in hand finish for at most
+ * `patienceSeconds`; what is not finished then goes back to the queue.
+ */
+export async function workOn(
+  handlers: JobHandlers,
+): Promise<{ stop: (patienceSeconds?: number) => Promise<void> }> {
+  const boss = await connect({ supervise: true });
+  for (const name of jobNames) await register(boss, name, handlers);
+  return {
+    stop: (patienceSeconds = 20) =>
+      boss.stop({ graceful: true, wait: true, timeout: patienceSeconds * 1000 }),
+  };
+}
+
+async function register<Name extends JobName>(
+  boss: PgBoss,
+  name: Name,
+  handlers: JobHandlers,
+): Promise<void> {
+  await boss.work<unknown>(name, { pollingIntervalSeconds: 1, batchSize: 1 }, async ([job]) => {
+    const line = log.child({ job: name, jobId: job.id });
+    const started = performance.now();
+    try {
+      const payload = jobs[name].payload.parse(job.data) as JobPayload<Name>;
+      await handlers[name](payload, { id: job.id });
+      line.info({ ms: Math.round(performance.now() - started) }, "job done");
+    } catch (error) {
+      line.error({ err: error }, "job failed, to be tried again");
+      throw error;
+    }
+  });
+}
+
+/** Close this process's connection to the queue, for programs that end. */
+export async function closeQueue(): Promise<void> {
+  const open = held.dewledgerQueue;
+  held.dewledgerQueue = undefined;
+  if (open !== undefined) await (await open).stop({ graceful: false, wait: true });
+}
