@@ -1,0 +1,58 @@
+import { ApiToken } from "./api-token";
+import { AuditEvent } from "./audit-event";
+import { Basin } from "./basin";
+import { Estimate } from "./estimate";
+import { EstimateTrials } from "./estimate-trials";
+import { Field } from "./field";
+import { FluidSample } from "./fluid-sample";
+import { Import } from "./import";
+import { PriceDeck } from "./price-deck";
+import { PriceDeckPrice } from "./price-deck-price";
+import { Reservoir } from "./reservoir";
+import { Settings } from "./settings";
+import { User } from "./user";
+
+ApiToken.belongsTo(User, { as: "user", foreignKey: "userId" });
+AuditEvent.belongsTo(User, { as: "actor", foreignKey: "actorId" });
+
+Field.belongsTo(Basin, { as: "basin", foreignKey: "basinId" });
+Field.belongsTo(User, { as: "responsibleEngineer", foreignKey: "responsibleEngineerId" });
+Field.hasMany(Reservoir, { as: "reservoirs", foreignKey: "fieldId" });
+Basin.hasMany(Field, { as: "fields", foreignKey: "basinId" });
+
+Reservoir.belongsTo(Field, { as: "field", foreignKey: "fieldId" });
+Reservoir.hasMany(FluidSample, { as: "fluidSamples", foreignKey: "reservoirId" });
+Reservoir.hasMany(Estimate, { as: "estimates", foreignKey: "reservoirId" });
+FluidSample.belongsTo(Reservoir, { as: "reservoir", foreignKey: "reservoirId" });
+
+Estimate.belongsTo(Reservoir, { as: "reservoir", foreignKey: "reservoirId" });
+Estimate.belongsTo(FluidSample, { as: "fluidSample", foreignKey: "fluidSampleId" });
+Estimate.belongsTo(User, { as: "creator", foreignKey: "createdBy" });
+Estimate.belongsTo(User, { as: "submitter", foreignKey: "submittedBy" });
+Estimate.belongsTo(User, { as: "decider", foreignKey: "decidedBy" });
+Estimate.hasOne(EstimateTrials, { as: "vectors", foreignKey: "estimateId" });
+EstimateTrials.belongsTo(Estimate, { as: "estimate", foreignKey: "estimateId" });
+
+PriceDeck.hasMany(PriceDeckPrice, { as: "prices", foreignKey: "priceDeckId" });
+PriceDeckPrice.belongsTo(PriceDeck, { as: "deck", foreignKey: "priceDeckId" });
+PriceDeck.belongsTo(User, { as: "creator", foreignKey: "createdBy" });
+PriceDeck.belongsTo(User, { as: "publisher", foreignKey: "publishedBy" });
+
+Import.belongsTo(User, { as: "creator", foreignKey: "createdBy" });
+
+/** Every query goes through here, so that no model is ever used before its associations exist. */
+export {
+  ApiToken,
+  AuditEvent,
+  Basin,
+  Estimate,
+  EstimateTrials,
+  Field,
+  FluidSample,
+  Import,
+  PriceDeck,
+  PriceDeckPrice,
+  Reservoir,
+  Settings,
+  User,
+};
