@@ -1,9 +1,10 @@
 import { createHash } from "node:crypto";
 import fs from "node:fs";
 import path from "node:path";
+import { fileURLToPath } from "node:url";
 
 /** The folder of this clone. */
-export const root = path.resolve(import.meta.dirname, "..", "..");
+export const root = path.resolve(path.dirname(fileURLToPath(import.meta.url)), "..", "..");
 
 /** Everything this installation keeps outside the database: secrets, records, local fakes. */
 export const dataDirectory = path.join(root, ".data");

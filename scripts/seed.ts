@@ -1,0 +1,64 @@
+/**
+ * Fill the database.
+ *
+ *     tsx scripts/seed.ts          rows that the product needs (safe to repeat)
+ *     tsx scripts/seed.ts --demo   the same, and the demo scenario when the database is empty
+ */
+import fs from "node:fs";
+import path from "node:path";
+import process from "node:process";
+import { pathToFileURL } from "node:url";
+import { sequelize } from "../models/sequelize";
+import { closeQueue } from "../services/queue/queue";
+import { say, sayFailure, seconds } from "./lib/console-output.mjs";
+import { demoState, emptyDatabase, markDemoFinished, markDemoStarted } from "./lib/demo-load";
+import { loadSettings } from "./lib/dotenv.mjs";
+import { Failure } from "./lib/failure.mjs";
+import { withMigrations } from "./lib/migrations";
+import { root } from "./lib/paths.mjs";
+
+async function main(args: string[]): Promise<void> {
+  loadSettings();
+  const url = process.env.DATABASE_URL;
+  if (!url) throw new Failure("DATABASE_URL is not set.", "See .env.example.");
+  const wantsDemo = args.includes("--demo");
+  const state = wantsDemo ? await demoState(url) : "own-data";
+  if (state === "cut-short") {
+    say("The last load of the demo was cut short; starting it afresh");
+    await emptyDatabase(url);
+    await withMigrations(url, (migrations) => migrations.up());
+  }
+  await seedReference();
+  if (state === "empty" || state === "cut-short") await loadDemo(url);
+}
+
+/** Every seeders/…-reference-….ts, in the order of its name. */
+async function seedReference(): Promise<void> {
+  const folder = path.join(root, "seeders");
+  const files = fs.readdirSync(folder).filter((file) => /-reference-.+\.ts$/.test(file));
+  for (const file of files.sort()) {
+    const seeder = (await import(pathToFileURL(path.join(folder, file)).href)) as {
+      seed: () => Promise<void>;
+    };
+    await seeder.seed();
+  }
+}
+
+async function loadDemo(url: string): Promise<void> {
+  const { seedDemo } = await import("../seeders/demo");
+  const started = Date.now();
+  await markDemoStarted(url);
+  await seedDemo();
+  await markDemoFinished(url);
+  say(`Demo loaded in ${seconds(Date.now() - started)}`);
+}
+
+try {
+  await main(process.argv.slice(2));
+} catch (error) {
+  sayFailure(error);
+  process.exitCode = 1;
+} finally {
+  await closeQueue();
+  await sequelize.close();
+}
