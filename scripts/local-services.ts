@@ -31,8 +31,9 @@ if (values.storage !== undefined) {
 }
 process.send?.("ready");
 
-for (const signal of ["SIGTERM", "SIGINT"] as const) {
-  process.on(signal, () => {
+// "disconnect": the program that started this one is gone, killed perhaps.
+for (const event of ["SIGTERM", "SIGINT", "disconnect"] as const) {
+  process.on(event, () => {
     Promise.all(closers.map((close) => close())).then(() => process.exit(0));
   });
 }

@@ -16,11 +16,12 @@ log.info("worker ready");
 process.send?.("ready");
 
 let stopping = false;
-for (const signal of ["SIGTERM", "SIGINT"] as const) {
-  process.on(signal, () => {
+// "disconnect": the program that started this one is gone, killed perhaps.
+for (const event of ["SIGTERM", "SIGINT", "disconnect"] as const) {
+  process.on(event, () => {
     if (stopping) return;
     stopping = true;
-    log.info({ signal }, "worker stops");
+    log.info({ event }, "worker stops");
     work
       .stop()
       .then(() => sequelize.close())

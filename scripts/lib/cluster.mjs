@@ -43,6 +43,7 @@ export function databaseUrl({ password, port }, database) {
  * @param {string} [options.name] tells this clone's clusters apart
  * @param {string} [options.database]
  * @param {boolean} [options.durable] false gives up safety after a crash for speed: tests only
+ * @param {() => void} [options.onStart] called just before the server is started, if it has to be
  * @returns {Promise<{ url: string, port: number, home: string, startedNow: boolean,
  *   createdNow: boolean, version: number, stop: () => Promise<void> }>}
  */
@@ -50,6 +51,7 @@ export async function openCluster({
   name = "dewledger",
   database = "dewledger",
   durable = true,
+  onStart,
 } = {}) {
   const home = clusterHome(name);
   const data = path.join(home, "data");
@@ -62,7 +64,10 @@ export async function openCluster({
   if (createdNow) await create(cluster);
 
   const startedNow = runningPostmaster(data) === null;
-  if (startedNow) await start(cluster);
+  if (startedNow) {
+    onStart?.();
+    await start(cluster);
+  }
   const connection = readConnection(cluster);
   await ensureDatabase(cluster, connection, database);
   return {

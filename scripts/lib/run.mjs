@@ -1,6 +1,14 @@
 import { spawn } from "node:child_process";
 import fs from "node:fs";
 
+/** Programs that run at this moment, so that a signal to us reaches them too. */
+const running = new Set();
+
+/** End every program that `run` waits for. */
+export function stopRunning() {
+  for (const child of running) child.kill("SIGTERM");
+}
+
 /**
  * Run a program to its end and collect what it prints. Standard input is closed, so a program
  * that would ask a question fails instead of waiting for ever.
@@ -23,6 +31,7 @@ export function run(command, args, { cwd, env, onLine, inherit = false, signal }
       stdio: inherit ? ["ignore", "inherit", "inherit"] : ["ignore", "pipe", "pipe"],
       signal,
     });
+    running.add(child);
     let output = "";
     let stdout = "";
     const take = (chunk) => {
@@ -36,10 +45,14 @@ export function run(command, args, { cwd, env, onLine, inherit = false, signal }
     });
     child.stderr?.setEncoding("utf8").on("data", take);
     child.on("error", (error) => {
+      running.delete(child);
       if (error.code === "ENOENT") resolve({ code: 127, output: `${command}: not found`, stdout });
       else reject(error);
     });
-    child.on("close", (code, by) => resolve({ code: code ?? (by ? 128 : 1), output, stdout }));
+    child.on("close", (code) => {
+      running.delete(child);
+      resolve({ code: code ?? 128, output, stdout });
+    });
   });
 }
 
