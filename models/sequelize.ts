@@ -31,7 +31,12 @@ export const sequelize: Sequelize = (holder.dewledgerSequelize ??= new Sequelize
   dialect: "postgres",
   dialectModule: pg,
   logging: false,
-  pool: { max: 10, min: 0, idle: 10_000, acquire: 20_000 },
+  pool: {
+    max: Number(process.env.DATABASE_POOL_SIZE || 10),
+    min: 0,
+    idle: 10_000,
+    acquire: 20_000,
+  },
   define: { underscored: true, timestamps: false },
   hooks: { beforeConnect: connectTo },
 }));

@@ -1,0 +1,27 @@
+import type { CreationAttributes, Transaction } from "sequelize";
+import { Basin } from "../associations";
+
+interface Options {
+  transaction?: Transaction;
+  lock?: boolean;
+}
+
+export async function findBasin(id: string, options: Options = {}): Promise<Basin | null> {
+  return Basin.findByPk(id, options);
+}
+
+export async function findBasinBySlug(slug: string, options: Options = {}): Promise<Basin | null> {
+  return Basin.findOne({ where: { slug }, ...options });
+}
+
+/** All of them, by name: a company has a handful. */
+export async function listAllBasins(): Promise<Basin[]> {
+  return Basin.findAll({ order: [["name", "ASC"]] });
+}
+
+export async function createBasinRow(
+  values: CreationAttributes<Basin>,
+  options: { transaction: Transaction },
+): Promise<Basin> {
+  return Basin.create(values, options);
+}

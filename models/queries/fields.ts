@@ -1,0 +1,69 @@
+import { Op, type CreationAttributes, type Transaction, type WhereOptions } from "sequelize";
+import { Basin, Field, Reservoir, User } from "../associations";
+
+interface Options {
+  transaction?: Transaction;
+  lock?: boolean;
+}
+
+/** The parents that every screen shows with a field. */
+const parents = [
+  { model: Basin, as: "basin" },
+  { model: User, as: "responsibleEngineer", attributes: ["id", "name"] },
+];
+
+/** The bare row, for changing it. */
+export async function findField(id: string, options: Options = {}): Promise<Field | null> {
+  return Field.findByPk(id, options);
+}
+
+export async function findFieldWithParents(
+  id: string,
+  options: Options = {},
+): Promise<Field | null> {
+  return Field.findByPk(id, { ...options, include: parents });
+}
+
+/** The field with its basin, engineer and reservoirs (by name). */
+export async function findFieldBySlug(slug: string, options: Options = {}): Promise<Field | null> {
+  return Field.findOne({
+    where: { slug },
+    include: [...parents, { model: Reservoir, as: "reservoirs" }],
+    order: [[{ model: Reservoir, as: "reservoirs" }, "name", "ASC"]],
+    ...options,
+  });
+}
+
+export interface FieldFilter {
+  basinId?: string;
+  /** part of the name, in any case */
+  search?: string;
+}
+
+export async function listFieldsPage(
+  filter: FieldFilter,
+  page: { limit: number; offset: number },
+): Promise<{ rows: Field[]; count: number }> {
+  const where: WhereOptions<Field> = {
+    ...(filter.basinId && { basinId: filter.basinId }),
+    ...(filter.search && {
+      name: {
+        [Op.iLike]: `%${filter.search.replace(/[\\%_]/g, (character) => `\\${character}`)}%`,
+      },
+    }),
+  };
+  return Field.findAndCountAll({
+    where,
+    include: parents,
+    order: [["name", "ASC"]],
+    distinct: true,
+    ...page,
+  });
+}
+
+export async function createFieldRow(
+  values: CreationAttributes<Field>,
+  options: { transaction: Transaction },
+): Promise<Field> {
+  return Field.create(values, options);
+}

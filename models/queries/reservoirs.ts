@@ -1,0 +1,43 @@
+import type { CreationAttributes, Transaction } from "sequelize";
+import { Basin, Field, Reservoir } from "../associations";
+
+interface Options {
+  transaction?: Transaction;
+  lock?: boolean;
+}
+
+/** The bare row, for changing it. */
+export async function findReservoir(id: string, options: Options = {}): Promise<Reservoir | null> {
+  return Reservoir.findByPk(id, options);
+}
+
+/** The reservoir with its field and basin. */
+export async function findReservoirWithField(
+  id: string,
+  options: Options = {},
+): Promise<Reservoir | null> {
+  return Reservoir.findByPk(id, {
+    ...options,
+    include: [{ model: Field, as: "field", include: [{ model: Basin, as: "basin" }] }],
+  });
+}
+
+export async function findReservoirBySlug(
+  fieldId: string,
+  slug: string,
+  options: Options = {},
+): Promise<Reservoir | null> {
+  return Reservoir.findOne({ where: { fieldId, slug }, ...options });
+}
+
+/** The reservoirs of one field, by name. */
+export async function listReservoirsOfField(fieldId: string): Promise<Reservoir[]> {
+  return Reservoir.findAll({ where: { fieldId }, order: [["name", "ASC"]], limit: 500 });
+}
+
+export async function createReservoirRow(
+  values: CreationAttributes<Reservoir>,
+  options: { transaction: Transaction },
+): Promise<Reservoir> {
+  return Reservoir.create(values, options);
+}

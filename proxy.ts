@@ -1,0 +1,19 @@
+import { getToken } from "next-auth/jwt";
+import { NextResponse, type NextRequest } from "next/server";
+
+/**
+ * Send visitors without a cookie to the sign-in page. A courtesy, never the lock: whether the cookie still stands for
+ * somebody, and what they may do, is decided on every request by app/_server.
+ */
+export async function proxy(request: NextRequest): Promise<NextResponse> {
+  if (await getToken({ req: request })) return NextResponse.next();
+  const signIn = new URL("/sign-in", request.nextUrl);
+  const wanted = request.nextUrl.pathname + request.nextUrl.search;
+  if (wanted !== "/") signIn.searchParams.set("callbackUrl", wanted);
+  return NextResponse.redirect(signIn);
+}
+
+export const config = {
+  /** pages only: not the API, the public pages, Next's own files, or anything with a file extension */
+  matcher: ["/((?!api/|sign-in|setup|_next/|.*\\.[\\w]+$).*)"],
+};
