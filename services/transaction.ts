@@ -36,15 +36,22 @@ function constraintOf(error: BaseError & { original?: Error }): string {
   return original && "constraint" in original ? String(original.constraint) : "";
 }
 
+const current = new AsyncLocalStorage<Transaction>();
+
 /**
- * One unit of work: all of it happens, or none. Violated constraints come out as the errors that people can act on;
- * anything else comes out as it was.
+ * One unit of work: all of it happens, or none. A use case called within another one's unit of work joins it, so that
+ * an import of a hundred rows is one unit made of the same use cases as work by hand. Violated constraints come out as
+ * the errors that people can act on; anything else comes out as it was.
  */
 export async function inTransaction<Result>(
   work: (transaction: Transaction) => Promise<Result>,
 ): Promise<Result> {
+  const joined = current.getStore();
+  if (joined) return work(joined);
   try {
-    return await sequelize.transaction(work);
+    return await sequelize.transaction((transaction) =>
+      current.run(transaction, () => work(transaction)),
+    );
   } catch (error) {
     if (error instanceof UniqueConstraintError) {
       const message = uniqueMessages[constraintOf(error)] ?? "This exists already.";
