@@ -1,3 +1,4 @@
+import { isDeepStrictEqual } from "node:util";
 import type { Transaction } from "sequelize";
 import {
   createAuditEvent,
@@ -64,7 +65,7 @@ export function changesBetween<Record extends object>(
   const changed: { before: Partial<Record>; after: Partial<Record> } = { before: {}, after: {} };
   for (const key of Object.keys(after) as (keyof Record)[]) {
     if (after[key] === undefined) continue;
-    if (JSON.stringify(before[key]) === JSON.stringify(after[key])) continue;
+    if (isDeepStrictEqual(before[key], after[key])) continue;
     changed.before[key] = before[key];
     changed.after[key] = after[key];
   }

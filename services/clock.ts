@@ -7,6 +7,11 @@ export function now(): Date {
   return pretended.getStore() ?? new Date();
 }
 
+/** Whether the present work is pretended to be of another time; nobody is written to about such work. */
+export function isPretending(): boolean {
+  return pretended.getStore() !== undefined;
+}
+
 /** The business date of `now()`, in UTC, as `YYYY-MM-DD`. */
 export function today(): string {
   return now().toISOString().slice(0, 10);

@@ -45,6 +45,7 @@ export const policy = {
   "estimate.update": ["engineer"],
   "estimate.run": ["engineer"],
   "estimate.submit": ["engineer"],
+  "estimate.discard": ["engineer"],
   "estimate.approve": ["reviewer"],
   "estimate.return": ["reviewer"],
 

@@ -1,4 +1,13 @@
-import { Op, fn, col, where, type CreationAttributes, type Transaction } from "sequelize";
+import {
+  Op,
+  QueryTypes,
+  fn,
+  col,
+  where,
+  type CreationAttributes,
+  type Transaction,
+} from "sequelize";
+import { sequelize } from "../sequelize";
 import type { Role } from "../vocabulary";
 import { User } from "../associations";
 
@@ -17,6 +26,14 @@ export async function findUserByEmail(email: string, options: Options = {}): Pro
   return User.findOne({
     where: where(fn("lower", col("email")), email.trim().toLowerCase()),
     ...options,
+  });
+}
+
+/** Let the transactions that open a new installation pass one at a time. */
+export async function queueForSetup(transaction: Transaction): Promise<void> {
+  await sequelize.query("select pg_advisory_xact_lock(hashtext('first administrator'))", {
+    type: QueryTypes.SELECT,
+    transaction,
   });
 }
 
