@@ -13,6 +13,8 @@ const A8 = 0.1844;
 const A9 = 0.1056;
 const A10 = 0.6134;
 const A11 = 0.721;
+/** A1 to A11, for the solver of the trial loop, which must use the same numbers. */
+export const DRANCHUK_ABOU_KASSEM = [A1, A2, A3, A4, A5, A6, A7, A8, A9, A10, A11] as const;
 /** critical z of the fit: rho = 0.27 Ppr / (z Tpr) */
 const CRITICAL_Z = 0.27;
 

@@ -1,0 +1,259 @@
+import { DomainError } from "../errors";
+import { choleskyFactor, invertLower } from "../numerics/cholesky";
+import { normalQuantile } from "../numerics/normal";
+import { rankByCounting, type OrderWorkspace } from "../numerics/order-statistics";
+import { fillPermutation, type RandomStream } from "../numerics/random";
+
+export interface CorrelatedPair<Name extends string> {
+  a: Name;
+  b: Name;
+  /** Spearman's rank correlation, -1 to 1 */
+  rank: number;
+}
+
+/** Inputs that are tied to one another, directly or through others, and the correlations between their scores. */
+export interface CorrelationBlock<Name extends string> {
+  readonly names: readonly Name[];
+  /** lower Cholesky factor of the normal-score correlations, row by row */
+  readonly factor: Float64Array;
+}
+
+/**
+ * Splits correlated inputs into blocks that are independent of each other, and checks that each is possible.
+ *
+ * The rank correlation r of a pair becomes the correlation 2 sin(pi r / 6) of their normal scores, which is what
+ * gives a joint normal distribution the rank correlation r (Pearson 1907). An impossible set is refused, never
+ * repaired: a repair would change a number that somebody entered.
+ *
+ * @param order  every name, in the order that fixes the blocks' columns
+ * @throws {DomainError} when a pair is given twice, ties an input to itself or exactly, or when the correlations
+ *   contradict each other (no joint distribution has them all); the message names the pairs
+ */
+export function correlationBlocks<Name extends string>(
+  order: readonly Name[],
+  pairs: readonly CorrelatedPair<Name>[],
+): CorrelationBlock<Name>[] {
+  const known = new Map<string, number>();
+  for (const pair of pairs) {
+    checkPair(pair, known);
+    known.set(keyOf(pair.a, pair.b), pair.rank);
+  }
+  const between = (a: Name, b: Name) =>
+    a === b ? 1 : scoreCorrelation(known.get(keyOf(a, b)) ?? 0);
+  return components(order, pairs).map((names) => {
+    const n = names.length;
+    const target = Float64Array.from({ length: n * n }, (_, i) =>
+      between(names[Math.floor(i / n)], names[i % n]),
+    );
+    const factor = choleskyFactor(target, n);
+    if (factor === null) throw contradiction(names, pairs, between);
+    return { names, factor };
+  });
+}
+
+function keyOf(a: string, b: string): string {
+  return a < b ? `${a}|${b}` : `${b}|${a}`;
+}
+
+function scoreCorrelation(rank: number): number {
+  return 2 * Math.sin((Math.PI / 6) * rank);
+}
+
+function checkPair({ a, b, rank }: CorrelatedPair<string>, known: ReadonlyMap<string, number>) {
+  const details = { input: `${a}, ${b}`, value: rank };
+  if (a === b) throw new DomainError(`${a} cannot be correlated with itself.`, details);
+  if (known.has(keyOf(a, b))) {
+    throw new DomainError(`The correlation of ${a} with ${b} is given twice.`, details);
+  }
+  if (!(Math.abs(rank) < 1)) {
+    throw new DomainError(
+      `The rank correlation of ${a} with ${b} is ${rank}; it must lie between -1 and 1. Exactly 1 or -1 would make ` +
+        "one input follow from the other: use at most 0.99.",
+      details,
+    );
+  }
+}
+
+function components<Name extends string>(
+  order: readonly Name[],
+  pairs: readonly CorrelatedPair<Name>[],
+): Name[][] {
+  const leader = new Map<Name, Name>();
+  const find = (name: Name): Name => {
+    const parent = leader.get(name) ?? name;
+    return parent === name ? name : find(parent);
+  };
+  for (const { a, b } of pairs) leader.set(find(a), find(b));
+  const tied = new Set(pairs.flatMap(({ a, b }) => [a, b]));
+  const groups = new Map<Name, Name[]>();
+  for (const name of order) {
+    if (!tied.has(name)) continue;
+    const group = groups.get(find(name)) ?? [];
+    group.push(name);
+    groups.set(find(name), group);
+  }
+  return [...groups.values()];
+}
+
+function contradiction<Name extends string>(
+  names: readonly Name[],
+  pairs: readonly CorrelatedPair<Name>[],
+  between: (a: Name, b: Name) => number,
+): DomainError {
+  const culprits = contradictoryTriple(names, between) ?? names;
+  const named = pairs
+    .filter(({ a, b }) => culprits.includes(a) && culprits.includes(b))
+    .map(({ a, b, rank }) => `${a} with ${b} ${rank}`);
+  return new DomainError(
+    `These rank correlations contradict each other, no set of values can have them all: ${named.join("; ")}. ` +
+      "Pairs that are not listed count as 0.",
+    { input: "correlations", pairs: named },
+  );
+}
+
+/** The first three names whose own 3 x 3 matrix is already impossible; most mistakes are of this kind. */
+function contradictoryTriple<Name extends string>(
+  names: readonly Name[],
+  between: (a: Name, b: Name) => number,
+): Name[] | null {
+  for (let i = 0; i < names.length; i += 1) {
+    for (let j = i + 1; j < names.length; j += 1) {
+      for (let k = j + 1; k < names.length; k += 1) {
+        const triple = [names[i], names[j], names[k]];
+        const [x, y, z] = [
+          between(triple[0], triple[1]),
+          between(triple[0], triple[2]),
+          between(triple[1], triple[2]),
+        ];
+        if (1 + 2 * x * y * z - x * x - y * y - z * z <= 1e-10) return triple;
+      }
+    }
+  }
+  return null;
+}
+
+/**
+ * Normal scores of van der Waerden: quantiles of i / (n + 1), i = 1..n, ascending and scaled to unit variance.
+ * They depend on n alone, so a workspace keeps them.
+ */
+export function normalScores(count: number): Float64Array {
+  const scores = Float64Array.from({ length: count }, (_, i) =>
+    normalQuantile((i + 1) / (count + 1)),
+  );
+  const meanSquare = scores.reduce((sum, score) => sum + score * score, 0) / count;
+  const scale = meanSquare > 0 ? 1 / Math.sqrt(meanSquare) : 1;
+  return scores.map((score) => score * scale);
+}
+
+/**
+ * Gives columns of scores the wanted correlations: T = M F^-1 C of Iman and Conover, with M'M / n = F'F and the
+ * target C'C. The first column keeps its order; the columns are overwritten.
+ *
+ * @param columns  k columns of n scores with mean 0
+ * @param factor   lower Cholesky factor of the target, k x k
+ * @throws {DomainError} when n is too small for k columns (their own correlations are then singular)
+ * @see R. L. Iman, W. J. Conover, A distribution-free approach to inducing rank correlation among input variables,
+ *      Commun. Stat. Simul. Comput. 11 (1982) 311-334
+ */
+export function correlateScores(
+  columns: readonly Float64Array[],
+  count: number,
+  factor: Float64Array,
+): void {
+  const k = columns.length;
+  const own = new Float64Array(k * k);
+  for (let i = 0; i < k; i += 1) {
+    for (let j = 0; j <= i; j += 1) own[i * k + j] = dot(columns[i], columns[j], count) / count;
+  }
+  const ownFactor = choleskyFactor(own, k);
+  if (ownFactor === null) {
+    throw new DomainError(`${count} trials are too few to correlate ${k} inputs.`, {
+      input: "trials",
+      value: count,
+    });
+  }
+  const weights = product(factor, invertLower(ownFactor, k), k);
+  // From the last column up: each needs the untouched columns before it.
+  for (let j = k - 1; j >= 0; j -= 1) {
+    const column = columns[j];
+    scale(column, weights[j * k + j], count);
+    for (let i = 0; i < j; i += 1) addScaled(column, columns[i], weights[j * k + i], count);
+  }
+}
+
+function dot(x: Float64Array, y: Float64Array, count: number): number {
+  let sum = 0;
+  for (let i = 0; i < count; i += 1) sum += x[i] * y[i];
+  return sum;
+}
+
+function scale(x: Float64Array, factor: number, count: number): void {
+  for (let i = 0; i < count; i += 1) x[i] *= factor;
+}
+
+function addScaled(x: Float64Array, y: Float64Array, factor: number, count: number): void {
+  if (factor === 0) return;
+  for (let i = 0; i < count; i += 1) x[i] += factor * y[i];
+}
+
+function product(left: Float64Array, right: Float64Array, n: number): Float64Array {
+  const out = new Float64Array(n * n);
+  for (let i = 0; i < n; i += 1) {
+    for (let j = 0; j < n; j += 1) {
+      let sum = 0;
+      for (let m = 0; m < n; m += 1) sum += left[i * n + m] * right[m * n + j];
+      out[i * n + j] = sum;
+    }
+  }
+  return out;
+}
+
+/** Scratch for {@link fillCorrelatedRanks}. */
+export interface RankWorkspace {
+  readonly words: Uint32Array;
+  readonly order: Uint32Array;
+  readonly scores: Float64Array;
+  readonly scoreColumns: readonly Float64Array[];
+  readonly counting: OrderWorkspace;
+}
+
+/**
+ * Draws the ranks of a block's inputs, one array per input, so that values put in that order have the block's rank
+ * correlations. Each input keeps exactly its own values: only their order is chosen.
+ *
+ * @param randoms  one stream per input of the block
+ * @param ranks    one array of n ranks per input, overwritten
+ */
+export function fillCorrelatedRanks(
+  factor: Float64Array,
+  randoms: readonly RandomStream[],
+  count: number,
+  workspace: RankWorkspace,
+  ranks: readonly Uint32Array[],
+): void {
+  const columns = workspace.scoreColumns.slice(0, ranks.length);
+  ranks.forEach((own, i) => {
+    fillPermutation(randoms[i], own, count, workspace.words);
+    const column = columns[i];
+    for (let t = 0; t < count; t += 1) column[t] = workspace.scores[own[t]];
+  });
+  correlateScores(columns, count, factor);
+  for (let i = 1; i < ranks.length; i += 1) {
+    rankByCounting(columns[i], count, workspace.counting, ranks[i], workspace.order);
+  }
+}
+
+/**
+ * Spearman's rank correlation of two sets of ranks 0..n-1 without ties.
+ *
+ *     1 - 6 sum (a - b)^2 / (n (n^2 - 1))
+ */
+export function spearman(a: Uint32Array, b: Uint32Array, count: number): number {
+  if (count < 2) return 0;
+  let sum = 0;
+  for (let i = 0; i < count; i += 1) {
+    const difference = a[i] - b[i];
+    sum += difference * difference;
+  }
+  return 1 - (6 * sum) / (count * (count * count - 1));
+}
