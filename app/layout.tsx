@@ -8,6 +8,7 @@ import "./styles/marks.css";
 import "./styles/forms.css";
 import "./styles/shell.css";
 import "./styles/sign-in.css";
+import "./styles/estimate.css";
 import "./globals.css";
 
 export const metadata: Metadata = {
