@@ -1,5 +1,6 @@
 import PgBoss from "pg-boss";
-import type { Sequelize, Transaction } from "sequelize";
+import type { Transaction } from "sequelize";
+import { sequelize } from "@/models/sequelize";
 import { env } from "../env";
 import { log } from "../log";
 import { type JobHandlers, type JobName, type JobPayload, jobNames, jobs } from "./jobs";
@@ -38,8 +39,6 @@ async function connect({ supervise }: { supervise: boolean }): Promise<PgBoss> {
 export interface EnqueueOptions {
   /** Write the job in this transaction, so that it exists only if the change does. */
   transaction?: Transaction;
-  /** The connection that the transaction belongs to. */
-  sequelize?: Sequelize;
   /** While a job with this key waits, another one is not added. */
   singletonKey?: string;
   /** Not before this many seconds from now. */
@@ -55,21 +54,19 @@ export interface EnqueueOptions {
 export async function enqueue<Name extends JobName>(
   name: Name,
   payload: JobPayload<Name>,
-  { transaction, sequelize, singletonKey, delaySeconds }: EnqueueOptions = {},
+  { transaction, singletonKey, delaySeconds }: EnqueueOptions = {},
 ): Promise<string | null> {
   const data = jobs[name].payload.parse(payload);
   const boss = await queue();
   return boss.send(name, data, {
     ...(singletonKey === undefined ? {} : { singletonKey }),
     ...(delaySeconds === undefined ? {} : { startAfter: delaySeconds }),
-    ...(transaction === undefined || sequelize === undefined
-      ? {}
-      : { db: within(sequelize, transaction) }),
+    ...(transaction === undefined ? {} : { db: within(transaction) }),
   });
 }
 
 /** Lets the queue write through a transaction of ours. */
-function within(sequelize: Sequelize, transaction: Transaction): PgBoss.Db {
+function within(transaction: Transaction): PgBoss.Db {
   return {
     executeSql: async (text, values) => {
       const [rows] = await sequelize.query(text, { bind: values, transaction });

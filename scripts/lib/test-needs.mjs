@@ -1,0 +1,32 @@
+/** What the tests that were asked for need besides the code. No argument means all tests. */
+
+const UNIT = /(^|\/)tests\/(analytics|components|policy|services|scripts)(\/|$)/;
+const BROWSER = /(^|\/)tests\/e2e(\/|$)/;
+
+/** Whether the product has to run. */
+export function needsProduct(args) {
+  const projects = projectsOf(args);
+  const files = filesOf(args);
+  if (projects.length > 0) return projects.some((project) => project !== "unit");
+  return files.length === 0 || files.some((file) => !UNIT.test(file));
+}
+
+/** Whether the browser has to be there. */
+export function needsBrowser(args) {
+  const projects = projectsOf(args);
+  const files = filesOf(args);
+  if (projects.length > 0) return projects.includes("e2e");
+  return files.length === 0 || files.some((file) => BROWSER.test(file));
+}
+
+function projectsOf(args) {
+  return args.flatMap((argument, at) => {
+    if (argument.startsWith("--project=")) return [argument.slice("--project=".length)];
+    return argument === "--project" && at + 1 < args.length ? [args[at + 1]] : [];
+  });
+}
+
+/** Arguments that name files; the value of an option such as -t is none. */
+function filesOf(args) {
+  return args.filter((argument) => argument.includes("tests/"));
+}
