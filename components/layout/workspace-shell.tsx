@@ -1,0 +1,42 @@
+import { Suspense, type ReactNode } from "react";
+import type { MenuGroup } from "@/components/ui/choice";
+import { BasisStrip, type DeckChoice } from "./basis-strip";
+import { Footer } from "./footer";
+import { TopBar, type NavItem, type Person } from "./top-bar";
+
+export interface WorkspaceShellProps {
+  person: Person;
+  nav: readonly NavItem[];
+  decks: readonly DeckChoice[];
+  account: MenuGroup[];
+  tools?: ReactNode;
+  /** what made the numbers, for the footer */
+  provenance?: ReactNode;
+  children: ReactNode;
+}
+
+/** Navigation, basis, page, footer: what every signed-in page stands in. */
+export function WorkspaceShell({
+  person,
+  nav,
+  decks,
+  account,
+  tools,
+  provenance,
+  children,
+}: WorkspaceShellProps) {
+  return (
+    <>
+      <a className="skip-link" href="#main">
+        Skip to content
+      </a>
+      {/* Both read the address, which is known only in the browser while a page is prerendered. */}
+      <Suspense fallback={<div className="h-[88px]" />}>
+        <TopBar person={person} nav={nav} account={account} tools={tools} />
+        <BasisStrip decks={decks} />
+      </Suspense>
+      {children}
+      <Footer provenance={provenance} />
+    </>
+  );
+}
