@@ -258,7 +258,7 @@ function unitOf(name: QuantityName, symbol: string): Unit {
   const { units, noun } = quantityOf(name);
   if (!Object.hasOwn(units, symbol)) {
     throw new DomainError(
-      `“${symbol}” is not a unit of ${noun}; use ${Object.keys(units).join(", ")}`,
+      `“${symbol}” is not a unit of ${noun.replace(/^an? /, "")}; use ${Object.keys(units).join(", ")}`,
       { input: "unit" },
     );
   }

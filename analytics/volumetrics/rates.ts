@@ -27,7 +27,7 @@ export interface WellstreamRates {
  * @param formationVolumeFactorCfPerScf  of the wellstream at reservoir conditions
  * @throws {DomainError} when a rate is negative or the formation volume factor is not positive
  * @example wellstreamRates({ stream: "condensate", stbPerDay: 100 }, { primarySeparatorGasOilRatioScfPerStb: 12000,
- *   surfaceGasOilRatioScfPerStb: 12450, wellstreamScfPerStb: 13275.781 }, 0.00350679).voidageRbPerDay // => 829.186
+ *   surfaceGasOilRatioScfPerStb: 12450, wellstreamScfPerStb: 13275.781 }, 0.00350679).voidageRbPerDay // => 829.187
  */
 export function wellstreamRates(
   metered: MeteredRate,
