@@ -1,0 +1,132 @@
+import { DomainError } from "@/analytics/errors";
+import {
+  compileDistribution,
+  type CompiledDistribution,
+} from "@/analytics/uncertainty/distribution";
+import { distributionSchema, type Distribution } from "@/analytics/uncertainty/distribution-schema";
+import { checkInputs } from "@/analytics/volumetrics/check-inputs";
+import {
+  inputNames,
+  type EstimateInputs,
+  type InputName,
+} from "@/analytics/volumetrics/inputs-schema";
+import type { Warning } from "@/analytics/warnings";
+import { emptyFields, mapInputs, type EstimateText, type InputText } from "./estimate-text";
+import { inputCatalogue, inputOfPath } from "./input-catalogue";
+import { readField, readPlain, type FieldReading } from "./quantities-of-inputs";
+import { shapeOf } from "./shapes";
+
+/** What the fields of one input read as. */
+export interface InputReading {
+  /** `null` while something is missing or impossible */
+  distribution: Distribution | null;
+  compiled: CompiledDistribution | null;
+  /** by parameter key, and by `minimum` and `maximum` */
+  fields: Record<string, FieldReading>;
+  /** why the figures make no distribution, when that is no single field's fault */
+  problem: string | null;
+  isComplete: boolean;
+}
+
+/** What all fields read as. */
+export interface EstimateReading {
+  inputs: Record<InputName, InputReading>;
+  /** ready for the engine; `null` while anything is missing or impossible */
+  estimate: EstimateInputs | null;
+  /** names of inputs with a field to fill in */
+  incomplete: InputName[];
+  /** names of inputs with an impossible figure */
+  impossible: InputName[];
+  /** what is impossible about the whole, such as correlations that contradict each other */
+  problem: string | null;
+  warnings: Warning[];
+}
+
+const EMPTY: FieldReading = { value: null, preview: null, problem: null };
+
+/** Reads the fields of one input: each by itself, then all of them as a distribution. */
+export function readInput(name: InputName, text: InputText): InputReading {
+  const { unit } = inputCatalogue[name];
+  const fields: Record<string, FieldReading> = {};
+  for (const { key, inUnit } of shapeOf(text.kind).parameters) {
+    fields[key] = readField(text.fields[key] ?? "", name, inUnit, unit);
+  }
+  const bounded = text.kind !== "constant";
+  fields.minimum = bounded ? readField(text.minimum, name, true, unit) : EMPTY;
+  fields.maximum = bounded ? readField(text.maximum, name, true, unit) : EMPTY;
+  if (name === "temperatureDegF" && text.kind === "normal") {
+    // A spread of temperatures has no zero to convert.
+    fields.standardDeviation = readPlain(text.fields.standardDeviation ?? "");
+  }
+
+  const isComplete = emptyFields(text).length === 0;
+  const readable = Object.values(fields).every((field) => field.problem === null);
+  if (!isComplete || !readable) {
+    return { distribution: null, compiled: null, fields, problem: null, isComplete };
+  }
+  return { ...compileReading(text, fields), isComplete };
+}
+
+function compileReading(
+  text: InputText,
+  fields: Record<string, FieldReading>,
+): Omit<InputReading, "isComplete"> {
+  const values = Object.entries(fields).flatMap(([key, field]) =>
+    field.value === null ? [] : [[key, field.value] as const],
+  );
+  const distribution = distributionSchema.parse({ kind: text.kind, ...Object.fromEntries(values) });
+  try {
+    return { distribution, compiled: compileDistribution(distribution), fields, problem: null };
+  } catch (error) {
+    if (!(error instanceof DomainError)) throw error;
+    return { distribution: null, compiled: null, ...placeProblem(fields, error) };
+  }
+}
+
+/** Puts the reason at the field that it names, or above all of them. */
+function placeProblem(
+  fields: Record<string, FieldReading>,
+  error: DomainError,
+): Pick<InputReading, "fields" | "problem"> {
+  const key = error.details.input?.split(".").at(-1);
+  if (key === undefined || !(key in fields)) return { fields, problem: error.message };
+  return {
+    fields: { ...fields, [key]: { ...fields[key], problem: error.message } },
+    problem: null,
+  };
+}
+
+/** Reads everything, and asks the engine what it thinks of it. */
+export function readEstimate(text: EstimateText): EstimateReading {
+  const inputs = mapInputs((name) => readInput(name, text.inputs[name]));
+  const incomplete = inputNames.filter((name) => !inputs[name].isComplete);
+  const impossible = inputNames.filter(
+    (name) => inputs[name].isComplete && inputs[name].distribution === null,
+  );
+  const partial = { inputs, incomplete, impossible, estimate: null, problem: null, warnings: [] };
+  if (incomplete.length > 0 || impossible.length > 0 || text.fluid === null) return partial;
+
+  const estimate: EstimateInputs = {
+    schemaVersion: 1,
+    uncertain: mapInputs((name) => ({
+      distribution: inputs[name].distribution as Distribution,
+      source: text.inputs[name].source.trim(),
+    })),
+    correlations: text.correlations.map((pair) => ({ ...pair })),
+    fluid: text.fluid,
+    depthFt: text.depthFt,
+  };
+  try {
+    return { ...partial, estimate, warnings: checkInputs(estimate) };
+  } catch (error) {
+    if (!(error instanceof DomainError)) throw error;
+    const name = inputOfPath(error.details.input);
+    if (name === null) return { ...partial, problem: error.message };
+    const placed = placeProblem(inputs[name].fields, error);
+    return {
+      ...partial,
+      impossible: [name],
+      inputs: { ...inputs, [name]: { ...inputs[name], ...placed, distribution: null } },
+    };
+  }
+}

@@ -1,0 +1,336 @@
+"use client";
+
+import { densityCurve } from "@/analytics/uncertainty/distribution";
+import { usualRanges } from "@/analytics/volumetrics/usual-ranges";
+import type { InputName } from "@/analytics/volumetrics/inputs-schema";
+import type { Warning } from "@/analytics/warnings";
+import { DensityCurve } from "@/components/charts/density-curve";
+import { Menu } from "@/components/ui/choice";
+import { formatFigure, MISSING } from "@/components/ui/format";
+import { Icon } from "@/components/ui/icon";
+import type { InputReading } from "./estimate-reading";
+import type { InputText } from "./estimate-text";
+import { inputCatalogue, lineOf } from "./input-catalogue";
+import { InputNotes } from "./input-notes";
+import { typedFigure } from "./quantities-of-inputs";
+import { QuantityInput } from "./quantity-input";
+import { convertShape, shapeOf, shapes, type Slot } from "./shapes";
+import { suspectUnit, type UnitSuspicion } from "./unit-suspicion";
+
+export interface InputRowProps {
+  name: InputName;
+  text: InputText;
+  reading: InputReading;
+  warnings: readonly Warning[];
+  /** absent: the row is read, not typed */
+  onChange?: (text: InputText) => void;
+}
+
+const slots: Slot[] = ["low", "best", "high"];
+const percentileOf = { low: "p90", best: "p50", high: "p10" } as const;
+const columnName = { low: "P90", best: "P50", high: "P10" } as const;
+
+/** One line of the input table, and under it what there is to say about the line. */
+export function InputRow({ name, text, reading, warnings, onChange }: InputRowProps) {
+  const about = inputCatalogue[name];
+  const usual = usualRanges[name];
+  const notesId = `notes-${name}`;
+  const suspicion = onChange ? suspicionOf(name, text, reading) : null;
+  const problems = [
+    ...new Set(
+      [reading.problem, ...Object.values(reading.fields).map((field) => field.problem)].filter(
+        (problem): problem is string => problem !== null,
+      ),
+    ),
+  ];
+  // The question about units says what the warning about the range says, and more.
+  const shown = suspicion
+    ? warnings.filter(({ code }) => code !== "unusual_value" && code !== "wide_range")
+    : warnings;
+  const hasNotes = problems.length > 0 || suspicion !== null || shown.length > 0;
+  const hasBounds = text.kind !== "constant" && (text.minimum !== "" || text.maximum !== "");
+  const isFlagged = suspicion !== null || shown.length > 0;
+
+  return (
+    <>
+      <tr data-followed={hasNotes || hasBounds || undefined}>
+        <td className="folio">{lineOf(name)}</td>
+        <th scope="row">
+          {about.label}
+          <small>{about.unitWords}</small>
+        </th>
+        {slots.map((slot) => (
+          <SlotCell
+            key={slot}
+            {...{ name, slot, text, reading, suspicion, notesId, onChange }}
+            flagged={isFlagged && suspicion === null}
+          />
+        ))}
+        <td className="curve">
+          <Curve name={name} reading={reading} flagged={isFlagged} />
+        </td>
+        <td className="hint">
+          <span className="hint-line">
+            <ShapeMenu {...{ name, text, reading, onChange }} />
+            <span className="text-ink-soft">
+              Usual {formatUsual(usual.usual[0])} to {formatUsual(usual.usual[1])}
+            </span>
+          </span>
+          <SourceLine label={about.label} text={text} onChange={onChange} />
+        </td>
+      </tr>
+      {hasBounds && (
+        <tr className="follow" data-followed={hasNotes || undefined}>
+          <td className="folio" />
+          <td colSpan={6}>
+            <Bounds {...{ name, text, reading, notesId, onChange }} />
+          </td>
+        </tr>
+      )}
+      {hasNotes && (
+        <tr className="follow">
+          <td className="folio" />
+          <td colSpan={6}>
+            <InputNotes
+              id={notesId}
+              unit={about.unit}
+              problems={problems}
+              suspicion={suspicion}
+              warnings={shown}
+              onConvert={onChange && ((values) => onChange(withValues(text, values)))}
+            />
+          </td>
+        </tr>
+      )}
+    </>
+  );
+}
+
+const formatUsual = (value: number) => typedFigure(value);
+
+function withValues(text: InputText, values: Record<string, number>): InputText {
+  const typed = Object.entries(values).map(([key, value]) => [key, typedFigure(value)]);
+  return { ...text, fields: { ...text.fields, ...Object.fromEntries(typed) } };
+}
+
+/** Only shapes whose figures are values of the input can be in another unit as a whole. */
+function suspicionOf(
+  name: InputName,
+  text: InputText,
+  reading: InputReading,
+): UnitSuspicion | null {
+  const { parameters } = shapeOf(text.kind);
+  if (parameters.some(({ key, inUnit }) => !inUnit || key === "standardDeviation")) return null;
+  const values = parameters.flatMap(({ key }) => {
+    const value = reading.fields[key].value;
+    return value === null ? [] : [{ key, value }];
+  });
+  if (values.length < parameters.length) return null;
+  const { usual, ratio } = usualRanges[name];
+  return suspectUnit(name, values, {
+    low: usual[0],
+    high: usual[1],
+    ratioHigh: ratio?.[1] ?? null,
+  });
+}
+
+interface CellProps {
+  name: InputName;
+  slot: Slot;
+  text: InputText;
+  reading: InputReading;
+  suspicion: UnitSuspicion | null;
+  flagged: boolean;
+  notesId: string;
+  onChange?: (text: InputText) => void;
+}
+
+/** A parameter to type, or the percentile that follows from the others. */
+function SlotCell({ name, slot, text, reading, suspicion, flagged, notesId, onChange }: CellProps) {
+  const about = inputCatalogue[name];
+  const parameter = shapeOf(text.kind).parameters.find((candidate) => candidate.slot === slot);
+  const percentile = reading.compiled?.range[percentileOf[slot]];
+  if (!parameter || !onChange) {
+    const typed = parameter && reading.fields[parameter.key].value;
+    const differs = parameter && parameter.label !== columnName[slot];
+    return (
+      <td className="slot">
+        <span className="derived" data-typed={parameter ? "" : undefined}>
+          {formatFigure(onChange ? percentile : (percentile ?? typed))}
+        </span>
+        <span className="slot-name">
+          {columnName[slot]}
+          {!onChange && differs && typed !== null && typed !== undefined && (
+            <span className="sr-only">{`; ${parameter.label} ${formatFigure(typed)}`}</span>
+          )}
+        </span>
+      </td>
+    );
+  }
+  return (
+    <td className="slot">
+      <QuantityInput
+        label={`${about.label}, ${parameter.label}`}
+        value={text.fields[parameter.key] ?? ""}
+        unit={parameter.inUnit ? about.unit : undefined}
+        reading={reading.fields[parameter.key]}
+        flagged={flagged || (suspicion?.keys.includes(parameter.key) ?? false)}
+        describedBy={notesId}
+        onChange={(value) =>
+          onChange({ ...text, fields: { ...text.fields, [parameter.key]: value } })
+        }
+      />
+      <span className="slot-name" aria-hidden="true">
+        {parameter.label === columnName[slot]
+          ? parameter.label
+          : `${parameter.label}${percentile === undefined ? "" : ""}`}
+      </span>
+    </td>
+  );
+}
+
+function Curve({
+  name,
+  reading,
+  flagged,
+}: {
+  name: InputName;
+  reading: InputReading;
+  flagged: boolean;
+}) {
+  const { compiled, distribution } = reading;
+  if (!compiled || !distribution) {
+    return <span className="text-ink-soft">{reading.isComplete ? "No curve" : "To fill in"}</span>;
+  }
+  if (distribution.kind === "constant") return <span className="text-ink-soft">One value</span>;
+  const { x, density } = densityCurve(distribution);
+  const [low, high] = usualRanges[name].usual;
+  return (
+    <DensityCurve
+      name={inputCatalogue[name].label}
+      unit={inputCatalogue[name].unit || undefined}
+      points={x.map((value, index) => ({ x: value, density: density[index] }))}
+      range={compiled.range}
+      usual={{ low, high }}
+      flagged={flagged}
+    />
+  );
+}
+
+function ShapeMenu({
+  name,
+  text,
+  reading,
+  onChange,
+}: Pick<CellProps, "name" | "text" | "reading" | "onChange">) {
+  const current = shapeOf(text.kind);
+  if (!onChange) return <b>{current.label}</b>;
+  const isBounded = text.minimum !== "" || text.maximum !== "";
+  const { possible } = usualRanges[name];
+  return (
+    <Menu
+      button={
+        <>
+          {current.label}
+          <Icon name="chevron-down" size={9} />
+        </>
+      }
+      label={`Shape of ${inputCatalogue[name].label}: ${current.label}`}
+      buttonClassName="shape-button"
+      groups={[
+        {
+          heading: "Shape",
+          entries: shapes.map((shape) => ({
+            label: shape.label,
+            current: shape.kind === text.kind,
+            onSelect: () => onChange(reshaped(text, reading, shape.kind)),
+          })),
+        },
+        {
+          heading: "Bounds",
+          entries: [
+            {
+              label: isBounded ? "Take the bounds away" : "Cut off what cannot be",
+              note: isBounded ? undefined : "conditions the curve on lying inside",
+              disabled: text.kind === "constant",
+              onSelect: () =>
+                onChange({
+                  ...text,
+                  minimum: isBounded ? "" : typedFigure(possible[0]),
+                  maximum: isBounded || possible[1] === Infinity ? "" : typedFigure(possible[1]),
+                }),
+            },
+          ],
+        },
+      ]}
+    />
+  );
+}
+
+function reshaped(text: InputText, reading: InputReading, kind: InputText["kind"]): InputText {
+  if (kind === text.kind) return text;
+  const next = { ...text, kind };
+  return reading.compiled ? withValues(next, convertShape(reading.compiled.quantile, kind)) : next;
+}
+
+function Bounds({
+  name,
+  text,
+  reading,
+  notesId,
+  onChange,
+}: Pick<CellProps, "name" | "text" | "reading" | "notesId" | "onChange">) {
+  const { label, unit } = inputCatalogue[name];
+  if (!onChange) {
+    return (
+      <p className="bounds">
+        Cut off {text.minimum !== "" && `below ${text.minimum} `}
+        {text.maximum !== "" && `above ${text.maximum}`}
+      </p>
+    );
+  }
+  return (
+    <div className="bounds">
+      {(["minimum", "maximum"] as const).map((key) => (
+        <span key={key} className="flex items-center gap-1.5">
+          {key === "minimum" ? "Not below" : "Not above"}
+          <QuantityInput
+            label={`${label}, ${key === "minimum" ? "not below" : "not above"}`}
+            value={text[key]}
+            unit={unit}
+            reading={reading.fields[key]}
+            describedBy={notesId}
+            onChange={(value) => onChange({ ...text, [key]: value })}
+          />
+        </span>
+      ))}
+      {reading.compiled && reading.compiled.lostMass > 0 && (
+        <span>
+          Cuts away {formatFigure(reading.compiled.lostMass * 100, { digits: 2 })} % of the curve
+        </span>
+      )}
+    </div>
+  );
+}
+
+function SourceLine({
+  label,
+  text,
+  onChange,
+}: {
+  label: string;
+  text: InputText;
+  onChange?: (text: InputText) => void;
+}) {
+  if (!onChange) return <span className="text-ink-soft">{text.source || MISSING}</span>;
+  return (
+    <input
+      className="source-input"
+      aria-label={`Source of ${label}`}
+      placeholder="Where this comes from"
+      maxLength={500}
+      value={text.source}
+      onChange={(event) => onChange({ ...text, source: event.target.value })}
+    />
+  );
+}

@@ -1,0 +1,75 @@
+import { displayUnit, type QuantityName } from "@/analytics/units/conversions";
+import { parseQuantity, type ParsedQuantity } from "@/analytics/units/parse-quantity";
+import type { InputName } from "@/analytics/volumetrics/inputs-schema";
+
+export const quantityOfInput: Record<InputName, QuantityName> = {
+  areaAcres: "area",
+  netThicknessFt: "length",
+  porosity: "fraction",
+  waterSaturation: "fraction",
+  pressurePsia: "pressure",
+  temperatureDegF: "temperature",
+  condensateYieldStbPerMmscf: "condensateYield",
+  gasRecovery: "fraction",
+  condensateRecovery: "fraction",
+  salesGasFraction: "fraction",
+};
+
+export interface FieldReading {
+  /** in the input's own unit; `null` while the field is empty or cannot be read */
+  value: number | null;
+  /** what arithmetic or another unit comes to, such as "= 3,488 acre"; `null` for a plain number */
+  preview: string | null;
+  /** why the text cannot be read; `null` while the field is empty */
+  problem: string | null;
+}
+
+/** A figure as a person would type it back: grouped, and with every digit that it has. */
+export function typedFigure(value: number): string {
+  return value.toLocaleString("en-US", { maximumSignificantDigits: 12 });
+}
+
+/**
+ * Reads what stands in a field of one input.
+ *
+ * @param name   the input; its unit is assumed where none is typed
+ * @param inUnit `false` for a parameter that is a plain number, such as the mean of a logarithm
+ * @param unit   printed after the preview
+ */
+export function readField(
+  text: string,
+  name: InputName,
+  inUnit: boolean,
+  unit: string,
+): FieldReading {
+  return inUnit ? readQuantity(text, quantityOfInput[name], unit) : readPlain(text);
+}
+
+/** Reads a quantity of any kind, such as a separator pressure; as `readField`. */
+export function readQuantity(text: string, quantity: QuantityName, unit: string): FieldReading {
+  if (text.trim() === "") return { value: null, preview: null, problem: null };
+  return reading(text, parseQuantity(text, quantity), unit, displayUnit(quantity, "field"));
+}
+
+/** Reads a number that carries no unit: a gravity, a logarithm. Arithmetic is accepted here too. */
+export function readPlain(text: string): FieldReading {
+  if (text.trim() === "") return { value: null, preview: null, problem: null };
+  // A temperature is the one quantity that may be negative, as a logarithm may.
+  return reading(text, parseQuantity(text, "temperature"), "", "degF");
+}
+
+function reading(
+  text: string,
+  parsed: ParsedQuantity,
+  unit: string,
+  ownUnit: string,
+): FieldReading {
+  if (!parsed.ok) return { value: null, preview: null, problem: parsed.reason };
+  const isPlain = /^[-−]?[\d,.' \u00a0\u2009\u202f]+$/.test(text.trim()) && parsed.unit === ownUnit;
+  const figure = parsed.value.toLocaleString("en-US", { maximumSignificantDigits: 4 });
+  return {
+    value: parsed.value,
+    preview: isPlain ? null : `= ${figure}${unit ? ` ${unit}` : ""}`,
+    problem: null,
+  };
+}

@@ -1,0 +1,168 @@
+/**
+ * Calculations without a record behind them: previews on the screens, and questions that scripts ask. All are pure
+ * analytics; what is impossible comes back as the place in the request and the reason.
+ */
+import { recombine, wellstreamGravityAtYield, yieldConstants } from "@/analytics/fluid/wellstream";
+import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
+import { gasProperties, type GasProperties } from "@/analytics/gas/gas-properties";
+import { pseudocritical } from "@/analytics/gas/pseudocritical";
+import { compileDistribution, densityCurve } from "@/analytics/uncertainty/distribution";
+import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
+import {
+  AIR_MOLECULAR_WEIGHT,
+  baseAtPressure,
+  CANONICAL_BASE,
+  convertGasVolume,
+} from "@/analytics/units/standard-conditions";
+import { inPlace } from "@/analytics/volumetrics/in-place";
+import { checkInputs } from "@/analytics/volumetrics/check-inputs";
+import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
+import type { SimulationSummary } from "@/analytics/volumetrics/results-schema";
+import { runSimulation } from "./compute/pool";
+import { refuseImpossible } from "./errors";
+
+interface GasQuestion {
+  gasGravity: number;
+  pressurePsia: number;
+  temperatureDegF: number;
+  nitrogen: number;
+  carbonDioxide: number;
+  hydrogenSulphide: number;
+}
+
+/** z, formation volume factor, density and viscosity of a gas of known gravity. */
+export function calculateZFactor(question: GasQuestion): GasProperties {
+  return refuseImpossible("", () => gasProperties(question));
+}
+
+/** A separator test's wellstream, its balance, and its gas at reservoir conditions when they are given. */
+export function calculateWellstream(question: {
+  separatorTest: SeparatorTest;
+  reservoir: { pressurePsia: number; temperatureDegF: number } | null;
+}) {
+  const { separatorTest: test, reservoir } = question;
+  const wellstream = refuseImpossible("separatorTest", () => recombine(test));
+  const { temperatureDegR, pressurePsia } = pseudocritical(wellstream.wellstreamGravity, test);
+  const atReservoir =
+    reservoir &&
+    refuseImpossible("reservoir", () =>
+      gasProperties({ ...test, ...reservoir, gasGravity: wellstream.wellstreamGravity }),
+    );
+  return {
+    ...wellstream,
+    condensateMolecularWeightMethod:
+      test.condensateMolecularWeight === null ? ("cragoe" as const) : ("laboratory" as const),
+    wellstreamMolecularWeight: wellstream.wellstreamGravity * AIR_MOLECULAR_WEIGHT,
+    balance: balanceOf(test, wellstream),
+    pseudocritical: { temperatureDegR, pressurePsia },
+    atReservoir,
+    warnings: [...wellstream.warnings, ...(atReservoir?.warnings ?? [])],
+  };
+}
+
+/** Streams of one stock-tank barrel's wellstream, as scf at 14.696 psia and 60 degF and as shares of its moles. */
+function balanceOf(test: SeparatorTest, wellstream: ReturnType<typeof recombine>) {
+  const base = baseAtPressure(test.basePressurePsia);
+  const measured = (
+    stream: "primary_separator" | "second_separator" | "stock_tank",
+    gas: { gasOilRatioScfPerStb: number; gasGravity: number } | null | undefined,
+  ) =>
+    gas
+      ? [
+          {
+            stream,
+            scfPerStb: convertGasVolume(gas.gasOilRatioScfPerStb, base, CANONICAL_BASE),
+            gravity: gas.gasGravity,
+          },
+        ]
+      : [];
+  const streams = [
+    ...measured("primary_separator", test.primarySeparator),
+    ...measured("second_separator", test.secondSeparator?.gas),
+    ...measured("stock_tank", test.stockTankGas),
+    ...(wellstream.unmeasuredVapourScfPerStb === null
+      ? []
+      : [
+          {
+            stream: "unmeasured" as const,
+            scfPerStb: wellstream.unmeasuredVapourScfPerStb,
+            gravity: null,
+          },
+        ]),
+    {
+      stream: "condensate" as const,
+      scfPerStb: wellstream.vapourEquivalentScfPerStb,
+      gravity: wellstream.condensateMolecularWeight / AIR_MOLECULAR_WEIGHT,
+    },
+  ];
+  return streams.map((stream) => ({
+    ...stream,
+    moleShare: stream.scfPerStb / wellstream.wellstreamScfPerStb,
+  }));
+}
+
+/** Gas and condensate in place of one reservoir with single values. */
+export function calculateInPlace(question: {
+  areaAcres: number;
+  netThicknessFt: number;
+  porosity: number;
+  waterSaturation: number;
+  pressurePsia: number;
+  temperatureDegF: number;
+  separatorTest: SeparatorTest;
+  zFactor: number | null;
+  condensateYieldStbPerMmscf: number | null;
+}) {
+  const { separatorTest, zFactor, condensateYieldStbPerMmscf: typedYield, ...rock } = question;
+  const tested = refuseImpossible("separatorTest", () => recombine(separatorTest));
+  const condensateYieldStbPerMmscf = typedYield ?? tested.condensateYieldStbPerMmscf;
+  const wellstreamGravity = wellstreamGravityAtYield(
+    condensateYieldStbPerMmscf,
+    yieldConstants(tested),
+  );
+  const result = refuseImpossible("", () =>
+    inPlace({
+      ...rock,
+      wellstream: { ...tested, condensateYieldStbPerMmscf, wellstreamGravity },
+      impurities: separatorTest,
+      measuredZFactor: zFactor ?? undefined,
+    }),
+  );
+  return {
+    ...result,
+    wellstreamGravity,
+    condensateYieldStbPerMmscf,
+    warnings: [...tested.warnings, ...result.warnings],
+  };
+}
+
+/** Percentiles, moments and a drawable density of a distribution. */
+export function calculateDistribution(question: { distribution: Distribution; points: number }) {
+  const { distribution, points } = question;
+  return refuseImpossible("distribution", () => {
+    const compiled = compileDistribution(distribution);
+    const { minimum, maximum } = compiled.support;
+    const curve = densityCurve(distribution, points);
+    return {
+      range: { ...compiled.range, mean: compiled.mean },
+      standardDeviation: compiled.standardDeviation,
+      support: { low: finiteOrNull(minimum), high: finiteOrNull(maximum) },
+      lostMass: compiled.lostMass,
+      curve: { values: curve.x, densities: curve.density },
+    };
+  });
+}
+
+const finiteOrNull = (value: number) => (Number.isFinite(value) ? value : null);
+
+/** A simulation whose trials are not kept. Impossible inputs are refused before a thread is asked. */
+export async function calculateSimulation(question: {
+  inputs: EstimateInputs;
+  trials: number;
+  seed: number;
+}): Promise<SimulationSummary> {
+  const { inputs, trials, seed } = question;
+  refuseImpossible("inputs", () => checkInputs(inputs));
+  const { summary } = await runSimulation(inputs, { trials, seed });
+  return summary;
+}
