@@ -101,8 +101,8 @@ export function countSample(
 }
 
 /**
- * Writes the rank (0 for the smallest) of each value to `ranks`. Equal values are ranked in the order in which they
- * stand.
+ * Writes the rank (0 for the smallest) of each value to `ranks`, and the positions of the values from smallest to
+ * largest to `order`. Equal values are ranked in the order in which they stand.
  */
 export function rankByCounting(
   values: ArrayLike<number>,
@@ -113,7 +113,7 @@ export function rankByCounting(
 ): void {
   const { minimum, maximum } = extremes(values, count);
   if (minimum === maximum) {
-    for (let i = 0; i < count; i += 1) ranks[i] = i;
+    for (let i = 0; i < count; i += 1) ranks[i] = order[i] = i;
     return;
   }
   const bins = rankBins(count);

@@ -26,7 +26,6 @@ import { columns, createWorkspace, type SimulationWorkspace } from "./workspace"
 export const ENGINE_VERSION = "1.0.0";
 
 export const DEFAULT_TRIALS = 10_000;
-export const TRIALS_RANGE = [100, 1_000_000] as const;
 
 export interface SimulationOptions {
   /** 100 to 1,000,000; 10,000 unless given */
@@ -57,10 +56,10 @@ export interface Simulation {
 export function simulate(inputs: EstimateInputs, options: SimulationOptions): Simulation {
   const { seed } = options;
   const trials = options.trials ?? DEFAULT_TRIALS;
-  checkOptions(trials, seed, options.workspace);
+  const workspace = options.workspace ?? createWorkspace(trials);
+  checkOptions(trials, seed, workspace);
   const prepared = prepareInputs(inputs);
   const fluid = fluidConstants(prepared.wellstream, inputs.fluid);
-  const workspace = options.workspace ?? createWorkspace(trials);
 
   const sampled = sampleInputs(prepared.distributions, prepared.blocks, seed, workspace);
   const impossible = evaluateTrials(fluid, workspace.inputs, trials, workspace, workspace.outputs);
@@ -96,21 +95,14 @@ export function simulate(inputs: EstimateInputs, options: SimulationOptions): Si
   };
 }
 
-function checkOptions(trials: number, seed: number, workspace?: SimulationWorkspace): void {
-  const [fewest, most] = TRIALS_RANGE;
-  if (!Number.isInteger(trials) || trials < fewest || trials > most) {
-    throw new DomainError(
-      `The number of trials is a whole number from ${fewest} to ${most.toLocaleString("en-GB")}; ${trials} is not.`,
-      { input: "trials", value: trials },
-    );
-  }
+function checkOptions(trials: number, seed: number, workspace: SimulationWorkspace): void {
   if (!Number.isSafeInteger(seed) || seed < 0) {
     throw new DomainError(`The seed is a whole number, 0 or more; ${seed} is not.`, {
       input: "seed",
       value: seed,
     });
   }
-  if (workspace && workspace.trials !== trials) {
+  if (workspace.trials !== trials) {
     throw new DomainError(
       `The workspace was made for ${workspace.trials} trials, not for ${trials}.`,
       { input: "workspace", value: workspace.trials },

@@ -1,0 +1,91 @@
+/**
+ * What a calculation thread does. Bundled to dist/workers/compute.mjs by scripts/build-workers.mjs and run by the pool
+ * in pool.ts; nothing else imports it.
+ */
+import { move, transferableSymbol, valueSymbol } from "piscina";
+import { ConvergenceError, DomainError } from "@/analytics/errors";
+import {
+  rollUp as rollUpMembers,
+  type RollUp,
+  type RollUpMember,
+  type RollUpOptions,
+} from "@/analytics/portfolio/roll-up";
+import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
+import {
+  DEFAULT_TRIALS,
+  simulate as simulateReservoir,
+  type Simulation,
+  type SimulationOptions,
+} from "@/analytics/volumetrics/simulate";
+import { createWorkspace, type SimulationWorkspace } from "@/analytics/volumetrics/workspace";
+
+export interface SimulationTask {
+  inputs: EstimateInputs;
+  options: Omit<SimulationOptions, "workspace">;
+}
+
+export interface RollUpTask {
+  members: RollUpMember[];
+  options: RollUpOptions;
+}
+
+/** An error of analytics keeps its class only as data: a thrown one arrives as a plain Error. */
+export type Outcome<Value> =
+  | { ok: true; value: Value }
+  | {
+      ok: false;
+      kind: "domain" | "convergence";
+      message: string;
+      details: Record<string, unknown>;
+    };
+
+/** The arrays of the last run, reused while the number of trials stays the same. */
+let workspace: SimulationWorkspace | null = null;
+
+export function simulate({ inputs, options }: SimulationTask) {
+  return settle<Simulation>(
+    () => {
+      const trials = options.trials ?? DEFAULT_TRIALS;
+      if (workspace?.trials !== trials) workspace = createWorkspace(trials);
+      return simulateReservoir(inputs, { ...options, trials, workspace });
+    },
+    ({ vectors }) => Object.values(vectors).map(({ buffer }) => buffer as ArrayBuffer),
+  );
+}
+
+export function rollUp({ members, options }: RollUpTask) {
+  return settle<RollUp>(
+    () => rollUpMembers(members, options),
+    ({ total, groups }) =>
+      [total, ...Object.values(groups).flatMap((values) => Object.values(values))].flatMap(
+        ({ vectors }) => Object.values(vectors).map(({ buffer }) => buffer as ArrayBuffer),
+      ),
+  );
+}
+
+/** Runs a task and hands its arrays over without copying them. */
+function settle<Value>(
+  run: () => Value,
+  buffersOf: (value: Value) => ArrayBuffer[],
+): Outcome<Value> {
+  try {
+    const value = run();
+    return handOver({ ok: true, value }, buffersOf(value));
+  } catch (error) {
+    if (!(error instanceof DomainError || error instanceof ConvergenceError)) throw error;
+    const kind = error instanceof DomainError ? "domain" : "convergence";
+    return { ok: false, kind, message: error.message, details: error.details };
+  }
+}
+
+function handOver<Value extends object>(value: Value, buffers: ArrayBuffer[]): Value {
+  // Piscina unwraps this on the other side, so its type there is the value's.
+  return move({
+    get [transferableSymbol]() {
+      return buffers;
+    },
+    get [valueSymbol]() {
+      return value;
+    },
+  } as never) as unknown as Value;
+}
