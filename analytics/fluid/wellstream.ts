@@ -94,9 +94,12 @@ function unmeasuredGas(
       severity: "warning",
       input: "fluid.stockTankGas",
       message:
-        `The correlation gives ${Math.round(whole)} scf/STB for everything after the first separator, but the condensate ` +
-        `alone is ${Math.round(vapourEquivalentScfPerStb)} scf/STB and the measured stages ` +
-        `${Math.round(measuredAfterFirst.volume)} scf/STB. The unmeasured gas counts as nil; measure it.`,
+        (volume < 0
+          ? `The correlation gives ${Math.round(whole)} scf/STB for everything after the first separator, but the ` +
+            `condensate alone is ${Math.round(vapourEquivalentScfPerStb)} scf/STB and the measured stages ` +
+            `${Math.round(measuredAfterFirst.volume)} scf/STB.`
+          : "The stages measured after the first separator weigh more than the correlation gives all of them.") +
+        " The unmeasured gas counts as nil; measure it.",
     });
     return { gas: { volume: 0, mass: 0 }, warnings };
   }

@@ -64,7 +64,7 @@ export function gasFormationVolumeFactorCfPerScf(
  * The same as reservoir barrels per thousand standard cubic feet, the unit of black-oil tables.
  *
  * @throws {DomainError} when pressure, absolute temperature or z is not positive
- * @example gasFormationVolumeFactorRbPerMscf(6500, 260, 1.12) // => 0.624585
+ * @example gasFormationVolumeFactorRbPerMscf(6500, 260, 1.12) // => 0.624586
  */
 export function gasFormationVolumeFactorRbPerMscf(
   pressurePsia: number,

@@ -94,7 +94,7 @@ const percent = (fraction: number) => `${Number((fraction * 100).toPrecision(3))
  *     gh = (g - 0.9672 yN2 - 1.5195 yCO2 - 1.1767 yH2S) / (1 - yN2 - yCO2 - yH2S)
  *
  * @throws {DomainError} when the impurities alone are heavier than the gas
- * @example hydrocarbonGravity(0.8, { nitrogen: 0.02, carbonDioxide: 0.04, hydrogenSulphide: 0.05 }) // => 0.742742
+ * @example hydrocarbonGravity(0.8, { nitrogen: 0.02, carbonDioxide: 0.04, hydrogenSulphide: 0.05 }) // => 0.742743
  * @see R. P. Sutton, SPE Reservoir Eval. Eng. 10 (June 2007) 270-284, SPE 97099
  */
 export function hydrocarbonGravity(gasGravity: number, impurities: Impurities): number {
