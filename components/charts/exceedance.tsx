@@ -126,48 +126,35 @@ export function Exceedance({
     >
       <ExceedanceReader curve={curve} scale={scale} unit={unit} />
       {before && (
-        <PlotLabel
-          x={positionOn(scale, before.range.p90)}
-          y={10}
-          anchor="start"
-          soft
-          dx={8}
-          dy={-12}
-        >
-          {before.label} P90 {formatFigure(before.range.p90)}
-        </PlotLabel>
+        <>
+          <PlotDot x={positionOn(scale, before.range.p90)} y={10} shape="open" />
+          <PlotLabel
+            x={positionOn(scale, before.range.p90)}
+            y={10}
+            anchor="start"
+            soft
+            dx={8}
+            dy={-12}
+          >
+            {before.label} P90 {formatFigure(before.range.p90)}
+          </PlotLabel>
+        </>
       )}
-      {arithmetic &&
-        (["p90", "p10"] as const).map((key) => {
-          const x = positionOn(scale, arithmetic[key]);
-          const y = key === "p90" ? 10 : 90;
-          return (
-            <span key={key}>
-              <PlotDot x={x} y={y} shape="diamond" />
-              <PlotLabel
-                x={x}
-                y={y}
-                soft
-                anchor={x > 80 ? "end" : x < 20 ? "start" : "middle"}
-                dy={key === "p90" ? 20 : -18}
-              >
-                Sum of {key.toUpperCase()}s {formatFigure(arithmetic[key])}
-              </PlotLabel>
-            </span>
-          );
-        })}
+      {arithmetic && <ArithmeticMarks sums={arithmetic} scale={scale} />}
       {readings.map(({ key, chance, label }) => {
         const x = positionOn(scale, range[key]);
         const y = 100 - chance * 100;
+        // Under the point where the curve it had runs above it.
+        const under = before !== undefined && key === "p90";
         return (
           <span key={key}>
             <PlotDot x={x} y={y} />
             <PlotLabel
               x={x}
               y={y}
-              anchor={x > 84 ? "end" : "start"}
-              dx={x > 84 ? -10 : 10}
-              dy={-10}
+              anchor={under ? "middle" : x > 84 ? "end" : "start"}
+              dx={under ? -18 : x > 84 ? -10 : 10}
+              dy={under ? 16 : -10}
             >
               <b>{label}</b> {formatFigure(range[key])}
             </PlotLabel>
@@ -176,4 +163,26 @@ export function Exceedance({
       })}
     </Plot>
   );
+}
+
+/** Sums of the members' percentiles: diamonds, because they are no probabilities. */
+function ArithmeticMarks({ sums, scale }: { sums: { p90: number; p10: number }; scale: Scale }) {
+  return (["p90", "p10"] as const).map((key) => {
+    const x = positionOn(scale, sums[key]);
+    const y = key === "p90" ? 10 : 90;
+    return (
+      <span key={key}>
+        <PlotDot x={x} y={y} shape="diamond" />
+        <PlotLabel
+          x={x}
+          y={y}
+          soft
+          anchor={x > 80 ? "end" : x < 20 ? "start" : "middle"}
+          dy={key === "p90" ? 20 : -28}
+        >
+          Sum of {key.toUpperCase()}s {formatFigure(sums[key])}
+        </PlotLabel>
+      </span>
+    );
+  });
 }

@@ -1,5 +1,6 @@
 import type { CSSProperties } from "react";
 import { formatFigure, MISSING } from "@/components/ui/format";
+import { VisuallyHidden } from "@/components/ui/text";
 import { percent, positionOn, ticksOf, type Scale } from "./scale";
 
 /** P90 is the low case: 90 % chance of at least this much. */
@@ -75,7 +76,7 @@ export function RangeMark({
   format = formatPlain,
 }: RangeMarkProps) {
   if (!range || ![range.p90, range.p50, range.p10].every(Number.isFinite)) {
-    return <span className="no-mark">{`No range`}</span>;
+    return <span className="no-mark">No range</span>;
   }
   const at = {
     p90: positionOn(scale, range.p90),
@@ -147,13 +148,16 @@ function BeforeBox({ before, scale }: { before: MarkRange; scale: Scale }) {
 /** The axis of a column of range marks, printed in its heading: the axis is the column. */
 export function RangeScale({ scale, ticks }: { scale: Scale; ticks?: number }) {
   return (
-    <span className="range-scale" aria-hidden="true">
-      {ticksOf(scale, ticks).map(({ value, label, position }) => (
-        <i key={value} style={{ left: percent(position) }}>
-          {label}
-        </i>
-      ))}
-    </span>
+    <>
+      <VisuallyHidden>Range from P90 to P10</VisuallyHidden>
+      <span className="range-scale" aria-hidden="true">
+        {ticksOf(scale, ticks).map(({ value, label, position }) => (
+          <i key={value} style={{ left: percent(position) }}>
+            {label}
+          </i>
+        ))}
+      </span>
+    </>
   );
 }
 

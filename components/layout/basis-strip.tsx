@@ -97,7 +97,7 @@ export function BasisStrip({ decks, fixed = {} }: BasisStripProps) {
   ];
 
   return (
-    <div className="basis-strip" role="group" aria-label="Basis of every number on this page">
+    <section className="basis-strip" aria-label="Basis of every number on this page">
       <em>Basis</em>
       {parts.map((part) => (
         <BasisPartMenu
@@ -112,7 +112,7 @@ export function BasisStrip({ decks, fixed = {} }: BasisStripProps) {
         <RangeKey />
         <span className="key-words">tick P50, dot mean</span>
       </div>
-    </div>
+    </section>
   );
 }
 

@@ -68,14 +68,14 @@ export function TopBar({ person, nav, account, tools }: TopBarProps) {
         <Menu
           align="end"
           buttonClassName="account"
-          label={`Account: ${person.name}, ${person.role}`}
           button={
             <>
               <span className="avatar" aria-hidden="true">
                 {person.initials}
               </span>
-              <span className="account-name" aria-hidden="true">
+              <span className="account-name">
                 {person.name}
+                <span className="sr-only">, </span>
                 <small>{person.role}</small>
               </span>
             </>

@@ -26,7 +26,7 @@ export function Flag({
   return (
     <span className={tone === "plain" ? "flag flag-plain" : "flag"} title={title}>
       {icon && <Icon name={icon} />}
-      {children}
+      <span>{children}</span>
     </span>
   );
 }
