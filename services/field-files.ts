@@ -1,0 +1,48 @@
+import type { Field } from "@/models/field";
+import type { Reservoir } from "@/models/reservoir";
+import { findField, findFieldBySlug } from "@/models/queries/fields";
+import { listReservoirsOfField } from "@/models/queries/reservoirs";
+import { listRevisionRanges, type RevisionRangeRow } from "@/models/queries/revision-ranges";
+import { NotFoundError } from "./errors";
+import { authorise, type Actor } from "./policy";
+import { getReservoirFileBySlugs, type ReservoirFile } from "./reservoirs";
+
+/** A field with its reservoirs, and every revision of each. */
+export interface FieldFile {
+  field: Field;
+  reservoirs: { reservoir: Reservoir; revisions: RevisionRangeRow[] }[];
+}
+
+/**
+ * A field with all that its page shows, by its id or by the word of its address.
+ *
+ * @throws {NotFoundError}
+ */
+export async function getFieldFile(actor: Actor, idOrSlug: string): Promise<FieldFile> {
+  authorise(actor, "field.read");
+  const slug = isUuid(idOrSlug) ? (await findField(idOrSlug))?.slug : idOrSlug;
+  const field = slug === undefined ? null : await findFieldBySlug(slug);
+  if (!field) throw new NotFoundError("field");
+  const reservoirs = await listReservoirsOfField(field.id);
+  const revisions = await listRevisionRanges(reservoirs.map(({ id }) => id));
+  return {
+    field,
+    reservoirs: reservoirs.map((reservoir) => ({
+      reservoir,
+      revisions: revisions.filter((row) => row.reservoirId === reservoir.id),
+    })),
+  };
+}
+
+/** A reservoir with all that its page shows, ranges of its revisions included, by the words of its address. */
+export async function getReservoirPage(
+  actor: Actor,
+  fieldSlug: string,
+  reservoirSlug: string,
+): Promise<{ file: ReservoirFile; revisions: RevisionRangeRow[] }> {
+  const file = await getReservoirFileBySlugs(actor, fieldSlug, reservoirSlug);
+  return { file, revisions: await listRevisionRanges([file.reservoir.id]) };
+}
+
+const isUuid = (text: string) =>
+  /^[0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{12}$/i.test(text);
