@@ -28,7 +28,13 @@ export async function installDependencies() {
     // Production would leave out what builds and tests the product.
     const env = { ...process.env, NODE_ENV: "development" };
     const args = ["ci", "--no-audit", "--no-fund", "--loglevel=http"];
-    const { code, output } = await run("npm", args, { cwd: root, env, onLine: note });
+    let fetched = 0;
+    const onLine = (line) => {
+      if (!/^npm http fetch GET 200 .*\.tgz/.test(line)) return;
+      fetched += 1;
+      note(`${fetched} packages fetched`);
+    };
+    const { code, output } = await run("npm", args, { cwd: root, env, onLine });
     if (code === 127) {
       throw new Failure("npm was not found on PATH.", "Install npm, which comes with Node.");
     }
