@@ -1,3 +1,4 @@
+import type { Transaction } from "sequelize";
 import type { Estimate } from "@/models/estimate";
 import type { FluidSample } from "@/models/fluid-sample";
 import type { Reservoir } from "@/models/reservoir";
@@ -92,8 +93,14 @@ export async function createReservoir(actor: Actor, input: NewReservoir): Promis
       },
       transaction,
     );
-    return reservoir;
+    return reload(reservoir.id, transaction);
   });
+}
+
+async function reload(id: string, transaction: Transaction): Promise<Reservoir> {
+  const reservoir = await findReservoirWithField(id, { transaction });
+  if (!reservoir) throw new NotFoundError("reservoir");
+  return reservoir;
 }
 
 /** Change a reservoir. The address (slug) stays, so that links keep working. */
@@ -107,7 +114,9 @@ export async function updateReservoir(
   return inTransaction(async (transaction) => {
     const reservoir = await findReservoir(id, { transaction, lock: true });
     if (!reservoir) throw new NotFoundError("reservoir");
-    assertVersion(reservoir, expectedVersion);
+    if (reservoir.version !== expectedVersion) {
+      assertVersion(await reload(id, transaction), expectedVersion);
+    }
     const changes = changesBetween(
       { name: reservoir.name, depthFt: reservoir.depthFt },
       { ...patch, name: patch.name?.trim() },
@@ -118,6 +127,6 @@ export async function updateReservoir(
       { actor, action: "reservoir.updated", entity: "reservoir", entityId: id, ...changes },
       transaction,
     );
-    return reservoir;
+    return reload(id, transaction);
   });
 }

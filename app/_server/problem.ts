@@ -57,6 +57,7 @@ const faultStatus: Record<RequestFault, number> = {
   malformed_json: 400,
   too_large: 413,
   invalid_query: 400,
+  no_idempotency: 400,
 };
 
 type Description = Pick<

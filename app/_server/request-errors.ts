@@ -6,7 +6,8 @@ export type RequestFault =
   | "not_json"
   | "malformed_json"
   | "too_large"
-  | "invalid_query";
+  | "invalid_query"
+  | "no_idempotency";
 
 export class RequestError extends Error {
   override readonly name = "RequestError";

@@ -54,6 +54,8 @@ export interface Route<
   body?: Body;
   /** the request must say with If-Match which version it is about */
   versioned?: Versioned;
+  /** the answer holds a secret that must not be kept to answer a repetition with: Idempotency-Key is refused */
+  answersOnce?: true;
   /** of success; 200 unless something was created (201) or queued (202) */
   status?: 200 | 201 | 202;
   /** returns a row or a plain value; a `Response` (a file, a stream) goes out as it is; `undefined` answers 204 */
@@ -120,6 +122,12 @@ export function withRoute<
 
       const key = request.headers.get("idempotency-key");
       if (request.method !== "POST" || key === null || !actor) return finish(await work());
+      if (route.answersOnce) {
+        throw new RequestError(
+          "no_idempotency",
+          "This answer is given once; send no Idempotency-Key.",
+        );
+      }
       const whole = JSON.stringify([instance, request.nextUrl.search, rawBody]);
       return finish(await once(actor, key, whole, async () => remembered(await work())));
     }

@@ -1,24 +1,29 @@
 import type { CreationAttributes, Transaction } from "sequelize";
-import { Basin, Field, Reservoir } from "../associations";
+import { Basin, Field, Reservoir, User } from "../associations";
 
 interface Options {
   transaction?: Transaction;
   lock?: boolean;
 }
 
+const fieldParents = [
+  { model: Basin, as: "basin" },
+  { model: User, as: "responsibleEngineer", attributes: ["id", "name"] },
+];
+
 /** The bare row, for changing it. */
 export async function findReservoir(id: string, options: Options = {}): Promise<Reservoir | null> {
   return Reservoir.findByPk(id, options);
 }
 
-/** The reservoir with its field and basin. */
+/** The reservoir with its field, and that one's basin and responsible engineer. */
 export async function findReservoirWithField(
   id: string,
   options: Options = {},
 ): Promise<Reservoir | null> {
   return Reservoir.findByPk(id, {
     ...options,
-    include: [{ model: Field, as: "field", include: [{ model: Basin, as: "basin" }] }],
+    include: [{ model: Field, as: "field", include: fieldParents }],
   });
 }
 
