@@ -9,6 +9,7 @@ import path from "node:path";
 import { build } from "esbuild";
 import { root } from "./lib/paths.mjs";
 
+// esbuild prints its errors itself, with the line at fault.
 await build({
   absWorkingDir: root,
   entryPoints: ["scripts/worker.ts", "scripts/local-services.ts"],
@@ -22,4 +23,4 @@ await build({
   target: "node20",
   sourcemap: true,
   logLevel: "error",
-});
+}).catch(() => process.exit(1));

@@ -8,8 +8,6 @@ import fs from "node:fs";
 import path from "node:path";
 import process from "node:process";
 import { pathToFileURL } from "node:url";
-import { sequelize } from "../models/sequelize";
-import { closeQueue } from "../services/queue/queue";
 import { say, sayFailure, seconds } from "./lib/console-output.mjs";
 import { demoState, emptyDatabase, markDemoFinished, markDemoStarted } from "./lib/demo-load";
 import { loadSettings } from "./lib/dotenv.mjs";
@@ -21,27 +19,33 @@ async function main(args: string[]): Promise<void> {
   loadSettings();
   const url = process.env.DATABASE_URL;
   if (!url) throw new Failure("DATABASE_URL is not set.", "See .env.example.");
-  const wantsDemo = args.includes("--demo");
-  const state = wantsDemo ? await demoState(url) : "own-data";
+  const state = args.includes("--demo") ? await demoState(url) : "own-data";
   if (state === "cut-short") {
     say("The last load of the demo was cut short; starting it afresh");
     await emptyDatabase(url);
     await withMigrations(url, (migrations) => migrations.up());
   }
-  await seedReference();
-  if (state === "empty" || state === "cut-short") await loadDemo(url);
+  const seeders: (() => Promise<void>)[] = referenceSeeders();
+  if (state === "empty" || state === "cut-short") seeders.push(() => loadDemo(url));
+  // The second start of an installation ends here, without loading the product's code.
+  if (seeders.length === 0) return;
+  try {
+    for (const seed of seeders) await seed();
+  } finally {
+    await disconnect();
+  }
 }
 
 /** Every seeders/…-reference-….ts, in the order of its name. */
-async function seedReference(): Promise<void> {
+function referenceSeeders(): (() => Promise<void>)[] {
   const folder = path.join(root, "seeders");
   const files = fs.readdirSync(folder).filter((file) => /-reference-.+\.ts$/.test(file));
-  for (const file of files.sort()) {
+  return files.sort().map((file) => async () => {
     const seeder = (await import(pathToFileURL(path.join(folder, file)).href)) as {
       seed: () => Promise<void>;
     };
     await seeder.seed();
-  }
+  });
 }
 
 async function loadDemo(url: string): Promise<void> {
@@ -53,12 +57,17 @@ async function loadDemo(url: string): Promise<void> {
   say(`Demo loaded in ${seconds(Date.now() - started)}`);
 }
 
+/** Close what the seeders have opened; an open connection would keep this program alive. */
+async function disconnect(): Promise<void> {
+  const { closeQueue } = await import("../services/queue/queue");
+  const { sequelize } = await import("../models/sequelize");
+  await closeQueue();
+  await sequelize.close();
+}
+
 try {
   await main(process.argv.slice(2));
 } catch (error) {
   sayFailure(error);
   process.exitCode = 1;
-} finally {
-  await closeQueue();
-  await sequelize.close();
 }

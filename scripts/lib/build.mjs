@@ -10,10 +10,12 @@ import { run } from "./run.mjs";
 
 /** Everything the build reads. A new top-level folder of the product belongs here. */
 const SOURCES = [
-  ...["analytics", "app", "components", "fonts", "models", "public", "scripts", "seeders"],
-  ...["services", "workers", "proxy.ts", "instrumentation.ts", "next.config.mjs"],
-  ...["package-lock.json", "package.json", "postcss.config.mjs", "tailwind.config.ts"],
-  "tsconfig.json",
+  ...["analytics", "app", "components", "fonts", "models", "public", "services"],
+  ...["proxy.ts", "instrumentation.ts", "next.config.mjs", "package-lock.json", "package.json"],
+  ...["postcss.config.mjs", "tailwind.config.ts", "tsconfig.json"],
+  ...["build-programs.mjs", "build-workers.mjs", "local-services.ts", "worker.ts"].map(
+    (file) => `scripts/${file}`,
+  ),
 ];
 
 const STAMP = path.join(root, ".next", "dewledger-build");
