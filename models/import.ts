@@ -23,7 +23,7 @@ export class Import extends Model<InferAttributes<Import>, InferCreationAttribut
   declare rowsApplied: CreationOptional<number>;
   declare rowsUnchanged: CreationOptional<number>;
   declare progress: CreationOptional<number>;
-  declare report: CreationOptional<unknown>;
+  declare report: CreationOptional<Record<string, unknown> | null>;
   declare createdBy: string;
   declare createdAt: CreationOptional<Date>;
   declare updatedAt: CreationOptional<Date>;

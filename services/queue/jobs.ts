@@ -12,6 +12,11 @@ export const jobs = {
     payload: mailMessage,
     options: { retryLimit: 12, retryDelay: 15, retryBackoff: true, expireInSeconds: 120 },
   },
+  /** Run the estimates that an import made. What was run stays run, so a retry goes on where it stopped. */
+  "run-estimates": {
+    payload: z.object({ importId: z.uuid() }),
+    options: { retryLimit: 5, retryDelay: 5, retryBackoff: true, expireInSeconds: 3600 },
+  },
 } as const;
 
 export type JobName = keyof typeof jobs;
