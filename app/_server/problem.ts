@@ -57,6 +57,8 @@ const faultStatus: Record<RequestFault, number> = {
   malformed_json: 400,
   too_large: 413,
   invalid_query: 400,
+  malformed_form: 400,
+  unsupported_media_type: 415,
   no_idempotency: 400,
 };
 

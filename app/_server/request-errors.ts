@@ -7,6 +7,8 @@ export type RequestFault =
   | "malformed_json"
   | "too_large"
   | "invalid_query"
+  | "malformed_form"
+  | "unsupported_media_type"
   | "no_idempotency";
 
 export class RequestError extends Error {
