@@ -18,16 +18,24 @@ export interface OrderWorkspace {
   readonly counts: Uint32Array;
   readonly cursors: Int32Array;
   readonly picked: Float64Array;
+  readonly low: Uint32Array;
+  readonly high: Uint32Array;
+  readonly half: Uint32Array;
+  readonly wideKeys: Uint32Array;
 }
 
 export function createOrderWorkspace(capacity: number): OrderWorkspace {
-  const bins = Math.max(rankBins(capacity), quantileBins(capacity));
+  const bins = quantileBins(capacity);
   return {
     capacity,
     keys: new Uint16Array(capacity),
     counts: new Uint32Array(bins + 1),
     cursors: new Int32Array(bins + 1),
     picked: new Float64Array(capacity),
+    low: new Uint32Array(RADIX),
+    high: new Uint32Array(RADIX),
+    half: new Uint32Array(capacity),
+    wideKeys: new Uint32Array(capacity),
   };
 }
 
@@ -100,9 +108,18 @@ export function countSample(
   return { minimum, maximum, mean, standardDeviation, quantiles, histogram };
 }
 
+/** Ranking sorts by the upper and the lower half of a 22-bit key: two passes over 2,048 bins that stay in cache. */
+const RADIX_BITS = 11;
+const RADIX = 1 << RADIX_BITS;
+
 /**
  * Writes the rank (0 for the smallest) of each value to `ranks`, and the positions of the values from smallest to
  * largest to `order`. Equal values are ranked in the order in which they stand.
+ *
+ * Two counting passes over the value's 22-bit position between the extremes put nearly everything in place; an
+ * insertion pass settles values that share a key.
+ *
+ * @param values finite numbers; not changed
  */
 export function rankByCounting(
   values: ArrayLike<number>,
@@ -116,28 +133,60 @@ export function rankByCounting(
     for (let i = 0; i < count; i += 1) ranks[i] = order[i] = i;
     return;
   }
-  const bins = rankBins(count);
-  fillKeys(values, count, minimum, maximum, bins, 0, workspace);
-  const { keys, counts, cursors } = workspace;
-  let start = 0;
-  for (let bin = 0; bin < bins; bin += 1) {
-    cursors[bin] = start;
-    start += counts[bin];
+  const { low, high, half, wideKeys } = workspace;
+  low.fill(0);
+  high.fill(0);
+  const scale = (RADIX * RADIX - 1) / (maximum - minimum);
+  for (let i = 0; i < count; i += 1) {
+    const key = ((values[i] - minimum) * scale) | 0;
+    wideKeys[i] = key;
+    low[key & (RADIX - 1)] += 1;
+    high[key >>> RADIX_BITS] += 1;
   }
-  for (let i = 0; i < count; i += 1) order[cursors[keys[i]]++] = i;
-  // Each cursor now stands at the end of its bin.
-  let from = 0;
-  for (let bin = 0; bin < bins; bin += 1) {
-    const to = cursors[bin];
-    if (to - from > 1) sortIndices(order, from, to, values);
-    from = to;
+  toStarts(low);
+  toStarts(high);
+  for (let i = 0; i < count; i += 1) half[low[wideKeys[i] & (RADIX - 1)]++] = i;
+  for (let i = 0; i < count; i += 1) {
+    const index = half[i];
+    order[high[wideKeys[index] >>> RADIX_BITS]++] = index;
   }
+  settle(order, count, values);
   for (let rank = 0; rank < count; rank += 1) ranks[order[rank]] = rank;
 }
 
-/** About half a value per bin on average keeps bins short where normal-shaped data are densest. */
-function rankBins(count: number): number {
-  return Math.min(MAXIMUM_BINS, Math.max(64, 2 * count));
+/** Counts to the positions at which their bins start. */
+function toStarts(counts: Uint32Array): void {
+  let start = 0;
+  for (let bin = 0; bin < RADIX; bin += 1) {
+    const size = counts[bin];
+    counts[bin] = start;
+    start += size;
+  }
+}
+
+/** Insertion sort of an order that is nearly right; a sort with a comparator should it turn out not to be. */
+function settle(order: Uint32Array, count: number, values: ArrayLike<number>): void {
+  let moves = 8 * count;
+  let before = values[order[0]];
+  for (let i = 1; i < count; i += 1) {
+    const index = order[i];
+    const value = values[index];
+    if (value >= before) {
+      before = value;
+      continue;
+    }
+    let j = i - 1;
+    while (j >= 0 && values[order[j]] > value) {
+      order[j + 1] = order[j];
+      j -= 1;
+      moves -= 1;
+    }
+    order[j + 1] = index;
+    if (moves < 0) {
+      order.subarray(0, count).sort((a, b) => values[a] - values[b] || a - b);
+      return;
+    }
+  }
 }
 
 function quantileBins(count: number): number {
@@ -252,22 +301,5 @@ function sortSegment(values: Float64Array, from: number, to: number): void {
       j -= 1;
     }
     values[j + 1] = value;
-  }
-}
-
-function sortIndices(order: Uint32Array, from: number, to: number, values: ArrayLike<number>) {
-  if (to - from > SHORT) {
-    order.subarray(from, to).sort((a, b) => values[a] - values[b] || a - b);
-    return;
-  }
-  for (let i = from + 1; i < to; i += 1) {
-    const index = order[i];
-    const value = values[index];
-    let j = i - 1;
-    while (j >= from && values[order[j]] > value) {
-      order[j + 1] = order[j];
-      j -= 1;
-    }
-    order[j + 1] = index;
   }
 }

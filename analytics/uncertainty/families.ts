@@ -1,5 +1,6 @@
 import { incompleteBeta, logBeta, betaQuantile } from "../numerics/beta";
-import { normalCdf, normalPdf, normalQuantile, normalQuantileUnchecked } from "../numerics/normal";
+import { normalCdf, normalPdf, normalQuantile } from "../numerics/normal";
+import { fillNormalQuantiles } from "../numerics/normal-table";
 import { createBetaTable, type BetaTable } from "./beta-table";
 
 /**
@@ -162,9 +163,8 @@ export function normalFamily(mean: number, standardDeviation: number): Family {
       return { mean: mean + standardDeviation * shift, variance: standardDeviation ** 2 * spread };
     },
     fillQuantiles(probabilities, count, out) {
-      for (let i = 0; i < count; i += 1) {
-        out[i] = mean + standardDeviation * normalQuantileUnchecked(probabilities[i]);
-      }
+      fillNormalQuantiles(probabilities, count, out);
+      for (let i = 0; i < count; i += 1) out[i] = mean + standardDeviation * out[i];
     },
   };
 }
@@ -188,9 +188,8 @@ export function lognormalFamily(mu: number, sigma: number): Family {
       return { mean: first, variance: second - first ** 2 };
     },
     fillQuantiles(probabilities, count, out) {
-      for (let i = 0; i < count; i += 1) {
-        out[i] = Math.exp(mu + sigma * normalQuantileUnchecked(probabilities[i]));
-      }
+      fillNormalQuantiles(probabilities, count, out);
+      for (let i = 0; i < count; i += 1) out[i] = Math.exp(mu + sigma * out[i]);
     },
   };
 }

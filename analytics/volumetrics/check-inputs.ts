@@ -207,6 +207,9 @@ function fluidWarnings({ fluid }: EstimateInputs, prepared: PreparedInputs): War
   return warnings;
 }
 
+// Made once: building a formatter takes longer than a thousand trials.
+const FIGURE = new Intl.NumberFormat("en-GB", { maximumSignificantDigits: 3 });
+
 function figure(value: number): string {
-  return Number(value.toPrecision(3)).toLocaleString("en-GB", { maximumFractionDigits: 6 });
+  return FIGURE.format(value);
 }
