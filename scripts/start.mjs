@@ -4,7 +4,7 @@
  */
 import "./lib/node-version.mjs";
 import process from "node:process";
-import { build, buildWorkers } from "./lib/build.mjs";
+import { build, buildWorkers, isBuilt } from "./lib/build.mjs";
 import { openCluster, rememberDatabaseUrl } from "./lib/cluster.mjs";
 import { say, sayFailure, task } from "./lib/console-output.mjs";
 import { installDependencies } from "./lib/dependencies.mjs";
@@ -65,13 +65,14 @@ async function main() {
   const isOwnDatabase = !process.env.DATABASE_URL;
   const { env, standIns, mailPage } = await settings({ databaseUrl, address });
   const checked = await checkSettings(env);
+  // The demo's figures are computed on the same threads as everybody's.
+  if (dev || !isBuilt()) await buildWorkers();
   await migrate(env);
   const demo = isOwnDatabase || checked.DEWLEDGER_DEMO;
   await task(demo ? "Looking after the demo" : "Looking after reference rows", () =>
     seed(env, { demo }),
   );
-  if (dev) await buildWorkers();
-  else if (!(await build())) say("The build is up to date");
+  if (!dev && !(await build())) say("The build is up to date");
 
   await startProcesses(group, { env, standIns, host, port, address });
   await greet({ address, mailPage, demo });
@@ -166,12 +167,12 @@ async function greet({ address, mailPage, demo }) {
   if (mailPage !== null) say(`Local mail            ${mailPage}`);
   if (demo) {
     const { tsImport } = await import("tsx/esm/api");
-    const { demoPeople, DEMO_PASSWORD } = await tsImport(
+    const { demoPeople, demoPassword } = await tsImport(
       "../seeders/demo/people.ts",
       import.meta.url,
     );
     say();
-    say(`Demo accounts, all with the password ${DEMO_PASSWORD}`);
+    say(`Demo accounts, all with the password ${demoPassword}`);
     for (const { name, email, role } of demoPeople) {
       say(`  ${email.padEnd(38)} ${role.padEnd(14)} ${name}`);
     }

@@ -1,19 +1,11 @@
+import { type DemoPerson, demoPassword, demoPeople } from "@/seeders/demo/people";
+import type { Role } from "@/services/policy";
 import { testEnvironment } from "./environment";
 
-/** The five people of the demo, by role, and the password they share. */
-export const people = {
-  engineer: "ines.okonrae@quillmere.example",
-  reviewer: "tobias.falkmere@quillmere.example",
-  planner: "marit.sundeholt@quillmere.example",
-  executive: "ruth.calderwyn@quillmere.example",
-  administrator: "joss.pemberlea@quillmere.example",
-} as const;
-
-export type Role = keyof typeof people;
-
-export const roles = Object.keys(people) as Role[];
-
-export const demoPassword = "dew-ledger-2027";
+/** The demo's people, by role: one of each. */
+export const people = Object.fromEntries(
+  demoPeople.map((person) => [person.role, person]),
+) as Record<Role, DemoPerson>;
 
 /** An answer of the API. `body` is the parsed JSON, or the text when it is something else. */
 export interface ApiAnswer<Body> {
@@ -156,5 +148,5 @@ export async function signInWith(email: string, password: string): Promise<ApiCl
 
 /** Sign in as the demo's person of a role. */
 export function signIn(role: Role): Promise<ApiClient> {
-  return signInWith(people[role], demoPassword);
+  return signInWith(people[role].email, demoPassword);
 }

@@ -1,7 +1,8 @@
 import fs from "node:fs";
 import path from "node:path";
 import { type Browser, type BrowserContext, chromium, type Page } from "playwright-core";
-import { type Role, signIn } from "./api";
+import type { Role } from "@/services/policy";
+import { signIn } from "./api";
 import { testEnvironment } from "./environment";
 
 /** Debian's Chromium; one per test file, closed in `afterAll`. */
