@@ -2,7 +2,11 @@
  * The units in which a portfolio is reported. They are fixed, not chosen by size, so that two pages, two files and two
  * years always compare figure by figure.
  */
-import { CUBIC_METRES_PER_BARREL, CUBIC_METRES_PER_CUBIC_FOOT, type UnitSystem } from "./conversions";
+import {
+  CUBIC_METRES_PER_BARREL,
+  CUBIC_METRES_PER_CUBIC_FOOT,
+  type UnitSystem,
+} from "./conversions";
 import { CANONICAL_BASE, convertGasVolume, standardConditions } from "./standard-conditions";
 
 /** Standard conditions by the name a basis gives them: a pressure at 60 degF, or `metric` (ISO 13443). */

@@ -3,10 +3,11 @@ import { availableParallelism } from "node:os";
 import path from "node:path";
 import { Piscina } from "piscina";
 import { ConvergenceError, DomainError } from "@/analytics/errors";
+import type { Ledger, LedgerMember, LedgerOptions } from "@/analytics/portfolio/ledger";
 import type { RollUp, RollUpMember, RollUpOptions } from "@/analytics/portfolio/roll-up";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import type { Simulation, SimulationOptions } from "@/analytics/volumetrics/simulate";
-import type { Outcome, RollUpTask, SimulationTask } from "./worker";
+import type { LedgerTask, Outcome, RollUpTask, SimulationTask } from "./worker";
 
 /** One pool a process, kept across hot reloads in development. */
 const holder = globalThis as typeof globalThis & { dewledgerComputePool?: Piscina };
@@ -57,6 +58,27 @@ export async function runRollUp(
 ): Promise<RollUp> {
   const task: RollUpTask = { members, options };
   return valueOf<RollUp>(await pool().run(task, { name: "rollUp", signal }));
+}
+
+/**
+ * `computeLedger` on a thread. The members' arrays are handed over, not copied: the caller must not use them again.
+ *
+ * @throws {DomainError} as `computeLedger`
+ */
+export async function runLedger(
+  members: LedgerMember[],
+  options: LedgerOptions,
+  { signal }: ComputeOptions = {},
+): Promise<Ledger> {
+  const task: LedgerTask = { members, options };
+  const buffers = new Set(
+    members.flatMap(({ vectors }) =>
+      Object.values(vectors).map(({ buffer }) => buffer as ArrayBuffer),
+    ),
+  );
+  return valueOf<Ledger>(
+    await pool().run(task, { name: "ledger", signal, transferList: [...buffers] }),
+  );
 }
 
 /** Ends the threads; for a process that is about to stop, and for tests. */

@@ -5,6 +5,12 @@
 import { move, transferableSymbol, valueSymbol } from "piscina";
 import { ConvergenceError, DomainError } from "@/analytics/errors";
 import {
+  computeLedger,
+  type Ledger,
+  type LedgerMember,
+  type LedgerOptions,
+} from "@/analytics/portfolio/ledger";
+import {
   rollUp as rollUpMembers,
   type RollUp,
   type RollUpMember,
@@ -27,6 +33,11 @@ export interface SimulationTask {
 export interface RollUpTask {
   members: RollUpMember[];
   options: RollUpOptions;
+}
+
+export interface LedgerTask {
+  members: LedgerMember[];
+  options: LedgerOptions;
 }
 
 /** An error of analytics keeps its class only as data: a thrown one arrives as a plain Error. */
@@ -60,6 +71,14 @@ export function rollUp({ members, options }: RollUpTask) {
       [total, ...Object.values(groups).flatMap((values) => Object.values(values))].flatMap(
         ({ vectors }) => Object.values(vectors).map(({ buffer }) => buffer as ArrayBuffer),
       ),
+  );
+}
+
+/** Summaries only: what comes back is small, and the summing up of many fields stays off the event loop. */
+export function ledger({ members, options }: LedgerTask) {
+  return settle<Ledger>(
+    () => computeLedger(members, options),
+    () => [],
   );
 }
 

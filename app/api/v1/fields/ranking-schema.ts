@@ -1,0 +1,177 @@
+import { z } from "zod";
+import { rankedClasses, estimateFilters } from "@/analytics/portfolio/ranking";
+import {
+  defaultRankingColumns,
+  orderColumns,
+  rankingColumnIds,
+} from "@/analytics/portfolio/ranking-columns";
+import { rangeSchema } from "@/analytics/volumetrics/results-schema";
+import { basisSchema } from "@/components/basis/basis";
+
+/** "saltmarrow,corrith" or a name given twice -> a list without repeats. */
+const listOf = <Item extends z.ZodType<string, string>>(item: Item, most = 200) =>
+  z
+    .union([z.string(), z.array(z.string())])
+    .optional()
+    .transform((given) => [
+      ...new Set((Array.isArray(given) ? given : [given ?? ""]).flatMap((part) => part.split(","))),
+    ])
+    .transform((parts) => parts.filter((part) => part !== ""))
+    .pipe(z.array(item).max(most));
+
+const yieldBound = z.coerce.number().min(0).max(1e6).optional();
+
+/** The filter of the ranking, as its address has it. */
+export const rankingFilterSchema = z.object({
+  /** part of the name of a field, its basin or its operator */
+  search: z.string().max(100).default(""),
+  /** slugs, separated by commas */
+  basin: listOf(z.string().max(100)),
+  class: listOf(z.enum(rankedClasses)),
+  /** state of the field's estimates; `none` has no estimate on this basis */
+  state: listOf(z.enum(estimateFilters)),
+  /** ids of responsible engineers */
+  engineer: listOf(z.uuid()),
+  /** STB per MMscf of surface gas */
+  yieldFrom: yieldBound,
+  yieldTo: yieldBound,
+});
+
+export const rankingOrderSchema = z.object({
+  sort: z.enum(["name", ...rankingColumnIds]).default("liquidValueMean"),
+  direction: z.enum(["ascending", "descending"]).default("descending"),
+});
+
+const columnsSchema = listOf(z.enum(rankingColumnIds)).transform((ids) =>
+  ids.length === 0 ? [...defaultRankingColumns] : orderColumns(ids),
+);
+
+/** GET /api/v1/fields */
+export const rankingQuerySchema = basisSchema
+  .extend(rankingFilterSchema.shape)
+  .extend(rankingOrderSchema.shape)
+  .extend({
+    limit: z.coerce.number().int().min(1).max(1000).default(200),
+    offset: z.coerce.number().int().min(0).default(0),
+  });
+
+/** GET /api/v1/exports/ranking.csv: the ranking's own address, with its columns and without paging. */
+export const rankingExportQuerySchema = basisSchema
+  .extend(rankingFilterSchema.shape)
+  .extend(rankingOrderSchema.shape)
+  .extend({ columns: columnsSchema });
+
+/** GET /api/v1/fields/together */
+export const togetherQuerySchema = basisSchema.extend({
+  ids: listOf(z.uuid(), 1000).refine((ids) => ids.length > 0, "say which fields"),
+});
+
+export const chosenPricesSchema = z.object({
+  deckId: z.uuid(),
+  deckName: z.string(),
+  deckVersion: z.number(),
+  asOfOn: z.string(),
+  currency: z.string(),
+  case: z.enum(["low", "mid", "high"]),
+  condensatePerStb: z.number().nullable(),
+  gasPerMscf: z.number().nullable(),
+});
+
+/** Volumes in scf (14.696 psia, 60 degF) and STB, values in the currency of the deck. */
+export const ledgerRangesSchema = z.object({
+  wetGasInPlaceScf: rangeSchema,
+  dryGasInPlaceScf: rangeSchema,
+  condensateInPlaceStb: rangeSchema,
+  salesGasScf: rangeSchema,
+  condensateRecoverableStb: rangeSchema,
+  /** null where the deck has no such price */
+  liquidValue: rangeSchema.nullable(),
+  gasValue: rangeSchema.nullable(),
+});
+
+export const rankedFieldSchema = z.object({
+  id: z.uuid(),
+  slug: z.string(),
+  name: z.string(),
+  basin: z.object({ id: z.uuid(), slug: z.string(), name: z.string() }),
+  operator: z.string(),
+  prmsClass: z.enum(rankedClasses),
+  prmsSubClass: z.string(),
+  workingInterest: z.number(),
+  netRevenueInterest: z.number(),
+  chanceOfCommerciality: z.number(),
+  engineer: z.object({ id: z.uuid(), name: z.string() }).nullable(),
+  condensateYieldStbPerMmscf: z.number().nullable(),
+  hydrogenSulphide: z.number().nullable(),
+  cautions: z.array(z.string()),
+  chosen: z.array(
+    z.object({
+      estimateId: z.uuid(),
+      reservoirName: z.string(),
+      reservoirSlug: z.string(),
+      revision: z.number(),
+      state: z.enum(["draft", "submitted", "approved", "returned", "superseded"]),
+      effectiveOn: z.string().nullable(),
+      engineVersion: z.string().nullable(),
+      seed: z.number(),
+      trials: z.number(),
+    }),
+  ),
+  leftOut: z.array(
+    z.object({
+      reservoirName: z.string(),
+      reason: z.enum(["no_estimate", "other_number_of_trials"]),
+    }),
+  ),
+  open: z.array(
+    z.object({
+      reservoirName: z.string(),
+      reservoirSlug: z.string(),
+      revision: z.number(),
+      state: z.enum(["draft", "submitted", "returned"]),
+    }),
+  ),
+  ranges: ledgerRangesSchema.nullable(),
+  rank: z.number().nullable(),
+  rankRange: z.object({ low: z.number(), high: z.number() }).nullable(),
+});
+
+/** A group of fields: added up trial by trial, and the sum of the column apart. */
+export const groupTotalSchema = z.object({
+  /** fields counted; those without an estimate are not */
+  fields: z.number(),
+  trialByTrial: ledgerRangesSchema,
+  arithmeticSum: ledgerRangesSchema,
+});
+
+export const rankingSchema = z.object({
+  items: z.array(rankedFieldSchema),
+  /** rows that match the filter */
+  total: z.number(),
+  limit: z.number(),
+  offset: z.number(),
+  /** fields in the book, whatever the filter */
+  fieldsInAll: z.number(),
+  /** of all rows that match, not of the page; null when none of them has an estimate */
+  totals: groupTotalSchema.nullable(),
+  prices: chosenPricesSchema.nullable(),
+  /** which field comes first by liquid value in most trials of the whole portfolio */
+  leader: z.object({ name: z.string(), chance: z.number() }).nullable(),
+  /** lowest P90 and highest P10 of the liquid value among the rows, for one scale over all pages */
+  scale: z.object({ low: z.number(), high: z.number() }).nullable(),
+  /** what can be filtered by */
+  choices: z.object({
+    basins: z.array(z.object({ slug: z.string(), name: z.string() })),
+    engineers: z.array(z.object({ id: z.uuid(), name: z.string() })),
+    yieldStbPerMmscf: z.object({ low: z.number(), high: z.number() }).nullable(),
+  }),
+  engine: z.object({ versions: z.array(z.string()), trials: z.number() }).nullable(),
+});
+export type Ranking = z.infer<typeof rankingSchema>;
+export type RankingRow = z.infer<typeof rankedFieldSchema>;
+
+export const togetherSchema = z.object({
+  total: groupTotalSchema.nullable(),
+  prices: chosenPricesSchema.nullable(),
+});
+export type Together = z.infer<typeof togetherSchema>;

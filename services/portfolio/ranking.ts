@@ -1,0 +1,267 @@
+import type { Ledger, VolumeRanges } from "@/analytics/portfolio/ledger";
+import {
+  matchesFilter,
+  scaleRange,
+  sortFields,
+  sumRanges,
+  type LedgerRanges,
+  type LeftOut,
+  type RankedField,
+  type RankingFilter,
+  type SortDirection,
+} from "@/analytics/portfolio/ranking";
+import { rankingColumn, type RankingSortId } from "@/analytics/portfolio/ranking-columns";
+import { vectorNames } from "@/analytics/volumetrics/results-schema";
+import type { PortfolioFieldRow, PortfolioReservoirRow } from "@/models/queries/portfolio";
+import { authorise, type Actor } from "../policy";
+import { findPrices, type ChosenPrices, type PortfolioBasis } from "./basis";
+import { loadBook, rollUpFields, type Book } from "./roll-ups";
+
+/** Every field with its figures on a basis, and what they were computed from. */
+export interface RankedBook {
+  book: Book;
+  prices: ChosenPrices | null;
+  /** largest mean liquid value first; without an estimate last */
+  fields: RankedField[];
+  /** of the whole portfolio; null when nothing is in the figures */
+  ledger: Ledger | null;
+}
+
+/** Trial-by-trial total of some fields, with the arithmetic sum of their columns apart. */
+export interface GroupTotal {
+  /** fields that are in the figures */
+  fields: number;
+  trialByTrial: LedgerRanges;
+  arithmeticSum: LedgerRanges;
+}
+
+/** The whole ranking on a basis. Every screen and file of the portfolio starts from this. */
+export async function loadRanking(basis: PortfolioBasis): Promise<RankedBook> {
+  const [book, prices] = await Promise.all([loadBook(basis.estimates), findPrices(basis)]);
+  const ledger = await rollUpFields(book, basis);
+  const reservoirs = new Map<string, PortfolioReservoirRow[]>();
+  for (const reservoir of book.reservoirs) {
+    reservoirs.set(reservoir.fieldId, [...(reservoirs.get(reservoir.fieldId) ?? []), reservoir]);
+  }
+  const unranked = book.fields.map((field) =>
+    describeField(field, reservoirs.get(field.id) ?? [], book, ledger, prices),
+  );
+  const fields = sortFields(
+    unranked,
+    ({ ranges }) => ranges?.condensateRecoverableStb.mean ?? null,
+    "descending",
+  ).map((field, index) => ({ ...field, rank: field.ranges === null ? null : index + 1 }));
+  return { book, prices, fields, ledger };
+}
+
+/**
+ * Volumes with their values: recoverable condensate times the realised condensate price, sales gas times the realised
+ * gas price, undiscounted. A value without a price is null, never 0.
+ */
+export function withValues(volumes: VolumeRanges, prices: ChosenPrices | null): LedgerRanges {
+  const condensatePerStb = prices?.condensatePerStb ?? null;
+  const gasPerMscf = prices?.gasPerMscf ?? null;
+  return {
+    ...volumes,
+    liquidValue:
+      condensatePerStb === null
+        ? null
+        : scaleRange(volumes.condensateRecoverableStb, condensatePerStb),
+    gasValue: gasPerMscf === null ? null : scaleRange(volumes.salesGasScf, gasPerMscf / 1000),
+  };
+}
+
+/** Total of the fields among these that are in the figures, or null when none is. */
+export async function totalOf(
+  { book, prices }: Pick<RankedBook, "book" | "prices">,
+  basis: PortfolioBasis,
+  fields: readonly RankedField[],
+): Promise<GroupTotal | null> {
+  const ledger = await rollUpFields(book, basis, new Set(fields.map(({ id }) => id)));
+  if (!ledger) return null;
+  const members = Object.values(ledger.fields).map(({ ranges }) => ranges);
+  const summed = Object.fromEntries(
+    vectorNames.map((name) => [name, sumRanges(members.map((ranges) => ranges[name]))]),
+  ) as VolumeRanges;
+  return {
+    fields: members.length,
+    trialByTrial: withValues(ledger.total.ranges, prices),
+    arithmeticSum: withValues(summed, prices),
+  };
+}
+
+export interface RankingRequest {
+  basis: PortfolioBasis;
+  filter: RankingFilter;
+  sort: RankingSortId;
+  direction: SortDirection;
+}
+
+/** The rows of the ranking that a person looks at, in their order, with the total of all of them. */
+export async function selectRanking({ basis, filter, sort, direction }: RankingRequest) {
+  const ranked = await loadRanking(basis);
+  const matching = ranked.fields.filter((field) => matchesFilter(field, filter));
+  const rows = sortFields(matching, rankingColumn(sort).value, direction);
+  return { ...ranked, rows, totals: await totalOf(ranked, basis, matching) };
+}
+
+/** GET /api/v1/fields */
+export async function listRanking(
+  actor: Actor,
+  request: RankingRequest & { limit: number; offset: number },
+) {
+  authorise(actor, "portfolio.read");
+  const { rows, fields, prices, totals, book } = await selectRanking(request);
+  const { limit, offset } = request;
+  const known = rows.flatMap(({ ranges }) => ranges?.liquidValue ?? []);
+  const leader = fields.find(({ ranges }) => ranges !== null);
+  return {
+    items: rows.slice(offset, offset + limit),
+    total: rows.length,
+    limit,
+    offset,
+    fieldsInAll: fields.length,
+    totals,
+    prices,
+    leader: await leaderOf(request.basis, book, leader),
+    scale:
+      known.length === 0
+        ? null
+        : {
+            low: Math.min(...known.map(({ p90 }) => p90)),
+            high: Math.max(
+              ...known.map(({ p10 }) => p10),
+              totals?.trialByTrial.liquidValue?.p10 ?? 0,
+            ),
+          },
+    choices: choicesOf(fields),
+    engine: engineOf(book),
+  };
+}
+
+/** GET /api/v1/fields/together: what some chosen fields come to. */
+export async function totalTogether(
+  actor: Actor,
+  request: { basis: PortfolioBasis; fieldIds: readonly string[] },
+) {
+  authorise(actor, "portfolio.read");
+  const ranked = await loadRanking(request.basis);
+  const chosen = ranked.fields.filter(({ id }) => request.fieldIds.includes(id));
+  return { total: await totalOf(ranked, request.basis, chosen), prices: ranked.prices };
+}
+
+/** How often the field with the largest mean also comes first in a trial. */
+async function leaderOf(basis: PortfolioBasis, book: Book, leader: RankedField | undefined) {
+  const ledger = leader && (await rollUpFields(book, basis));
+  if (!ledger) return null;
+  return { name: leader.name, chance: ledger.fields[leader.id].ranks.chanceFirst };
+}
+
+/** What made the figures, for the foot of a page. */
+export function engineOf({ counted, trials }: Book) {
+  if (counted.length === 0) return null;
+  const versions = counted.flatMap(({ reservoir }) => reservoir.engineVersion ?? []);
+  return { versions: [...new Set(versions)].sort(), trials };
+}
+
+function choicesOf(fields: readonly RankedField[]) {
+  const byName = <Item extends { name: string }>(items: Iterable<Item>) =>
+    [...items].sort((a, b) => a.name.localeCompare(b.name, "en"));
+  const yields = fields.flatMap((field) => field.condensateYieldStbPerMmscf ?? []);
+  return {
+    basins: byName(
+      new Map(
+        fields.map(({ basin }) => [basin.slug, { slug: basin.slug, name: basin.name }]),
+      ).values(),
+    ),
+    engineers: byName(
+      new Map(
+        fields.flatMap(({ engineer }) => (engineer ? [[engineer.id, engineer]] : [])),
+      ).values(),
+    ),
+    yieldStbPerMmscf:
+      yields.length === 0 ? null : { low: Math.min(...yields), high: Math.max(...yields) },
+  };
+}
+
+function describeField(
+  field: PortfolioFieldRow,
+  reservoirs: readonly PortfolioReservoirRow[],
+  book: Book,
+  ledger: Ledger | null,
+  prices: ChosenPrices | null,
+): RankedField {
+  const entry = ledger?.fields[field.id];
+  const counted = reservoirs.filter(({ trials }) => trials !== null && trials === book.trials);
+  return {
+    id: field.id,
+    slug: field.slug,
+    name: field.name,
+    basin: { id: field.basinId, slug: field.basinSlug, name: field.basinName },
+    operator: field.operator,
+    prmsClass: field.prmsClass,
+    prmsSubClass: field.prmsSubClass,
+    workingInterest: field.workingInterest,
+    netRevenueInterest: field.netRevenueInterest,
+    chanceOfCommerciality: field.chanceOfCommerciality,
+    engineer:
+      field.engineerId !== null && field.engineerName !== null
+        ? { id: field.engineerId, name: field.engineerName }
+        : null,
+    condensateYieldStbPerMmscf: entry ? yieldOf(entry.ranges) : null,
+    hydrogenSulphide:
+      counted.length === 0
+        ? null
+        : Math.max(...counted.map(({ hydrogenSulphide }) => hydrogenSulphide ?? 0)),
+    cautions: [...new Set(counted.flatMap(({ cautionCodes }) => cautionCodes))].sort(),
+    chosen: counted.map(toChosen),
+    leftOut: reservoirs.filter((reservoir) => !counted.includes(reservoir)).map(toLeftOut),
+    open: reservoirs.flatMap(toOpen),
+    ranges: entry ? withValues(entry.ranges, prices) : null,
+    rank: null,
+    rankRange: entry ? { low: entry.ranks.low, high: entry.ranks.high } : null,
+  };
+}
+
+/** Ratio of the means, so that a field of several reservoirs has the yield of what it would produce together. */
+function yieldOf({ condensateInPlaceStb, dryGasInPlaceScf }: VolumeRanges): number | null {
+  return dryGasInPlaceScf.mean > 0
+    ? (condensateInPlaceStb.mean / dryGasInPlaceScf.mean) * 1e6
+    : null;
+}
+
+function toChosen(reservoir: PortfolioReservoirRow): RankedField["chosen"][number] {
+  const { estimateId, revision, state, seed, trials } = reservoir;
+  if (
+    estimateId === null ||
+    revision === null ||
+    state === null ||
+    seed === null ||
+    trials === null
+  )
+    throw new Error(`reservoir ${reservoir.id} was counted without an estimate`);
+  return {
+    estimateId,
+    reservoirName: reservoir.name,
+    reservoirSlug: reservoir.slug,
+    revision,
+    state,
+    effectiveOn: reservoir.effectiveOn,
+    engineVersion: reservoir.engineVersion,
+    seed,
+    trials,
+  };
+}
+
+const toLeftOut = ({ name, estimateId }: PortfolioReservoirRow): LeftOut => ({
+  reservoirName: name,
+  reason: estimateId === null ? "no_estimate" : "other_number_of_trials",
+});
+
+function toOpen({ name, slug, openRevision, openState }: PortfolioReservoirRow) {
+  if (openRevision === null) return [];
+  if (openState !== "draft" && openState !== "submitted" && openState !== "returned") return [];
+  return [
+    { reservoirName: name, reservoirSlug: slug, revision: openRevision, state: openState } as const,
+  ];
+}
