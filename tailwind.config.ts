@@ -37,7 +37,7 @@ const tremor = {
 
 const config: Config = {
   content: [
-    "./app/**/*.{ts,tsx}",
+    "./app/**/*.tsx",
     "./components/**/*.{ts,tsx}",
     "./node_modules/@tremor/react/dist/**/*.{js,mjs}",
   ],

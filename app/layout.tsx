@@ -5,6 +5,7 @@ import { sans, serif } from "./fonts";
 import "./styles/ledger.css";
 import "./styles/table.css";
 import "./styles/marks.css";
+import "./styles/statement.css";
 import "./styles/forms.css";
 import "./styles/shell.css";
 import "./styles/sign-in.css";

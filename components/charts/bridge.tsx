@@ -1,0 +1,179 @@
+import { formatFigure } from "@/components/ui/format";
+import { Plot, PlotLabel } from "./plot";
+import { positionOn, scaleFor, ticksOf, type Scale } from "./scale";
+
+export interface BridgeStep {
+  label: string;
+  /** change of the total; they add exactly because they are changes of the mean */
+  change: number;
+}
+
+export interface BridgeProps {
+  /** "Mean liquid value, $ million" */
+  quantity: string;
+  from: { label: string; value: number };
+  steps: readonly BridgeStep[];
+  to: { label: string; value: number };
+  height?: number;
+  /** decimals of the values; three significant digits unless told otherwise */
+  decimals?: number;
+}
+
+interface Bar {
+  label: string;
+  kind: "end" | "rise" | "fall";
+  low: number;
+  high: number;
+  /** the total after this bar */
+  after: number;
+  text: string;
+}
+
+function barsOf({ from, steps, to, decimals }: BridgeProps): Bar[] {
+  const end = (label: string, value: number): Bar => ({
+    label,
+    kind: "end",
+    low: 0,
+    high: value,
+    after: value,
+    text: formatFigure(value, { decimals }),
+  });
+  let total = from.value;
+  const middle = steps.map(({ label, change }): Bar => {
+    const before = total;
+    total += change;
+    return {
+      label,
+      kind: change < 0 ? "fall" : "rise",
+      low: Math.min(before, total),
+      high: Math.max(before, total),
+      after: total,
+      text: formatFigure(change, { decimals, signed: true }),
+    };
+  });
+  return [end(from.label, from.value), ...middle, end(to.label, to.value)];
+}
+
+/** An axis that starts just below the lowest step, so that small changes can be seen; it says so. */
+function bridgeScale(bars: readonly Bar[]): Scale {
+  const levels = bars.flatMap(({ kind, low, high }) => (kind === "end" ? [high] : [low, high]));
+  const low = Math.min(...levels);
+  const high = Math.max(...levels);
+  const spread = high - low || Math.abs(high) || 1;
+  if (low <= 0 || spread > low) return scaleFor(levels, { kind: "linear", pad: 0.08 });
+  const ticks = ticksOf({ kind: "linear", domain: [low - spread * 0.5, high] }, 5);
+  return { kind: "linear", domain: [ticks[0].value, high + spread * 0.12] };
+}
+
+/** What moved a total from one round to the next. A fall is a hollow bar and a minus sign, never red. */
+export function Bridge(props: BridgeProps) {
+  const { quantity, from, to, steps, height = 250, decimals } = props;
+  const bars = barsOf(props);
+  const scale = bridgeScale(bars);
+  const start = scale.domain[0];
+  const yOf = (value: number) => 100 - positionOn(scale, value);
+  const slot = 100 / bars.length;
+  const inset = slot * 0.2;
+  const spoken = steps.map(
+    ({ label, change }) => `${label} ${formatFigure(change, { signed: true, decimals })}`,
+  );
+
+  return (
+    <>
+      <div className="phone:hidden">
+        <Plot
+          label={`Bridge of ${quantity}: ${from.label} ${formatFigure(from.value)}, ${spoken.join(", ")}, ${to.label} ${formatFigure(to.value)}`}
+          height={height}
+          yTitle={
+            start === 0
+              ? quantity
+              : `${quantity} (axis starts at ${formatFigure(start, { decimals: 0 })})`
+          }
+          yTicks={ticksOf(scale, 5).map((tick) => ({ ...tick, position: 100 - tick.position }))}
+          xTicks={bars.map(({ label }, index) => ({
+            value: index,
+            label,
+            position: (index + 0.5) * slot,
+          }))}
+          shapes={bars.map((bar, index) => {
+            const top = yOf(bar.high);
+            const bottom = bar.kind === "end" ? 100 : yOf(bar.low);
+            return (
+              <g key={bar.label}>
+                <rect
+                  className={`bridge-${bar.kind}`}
+                  x={index * slot + inset}
+                  width={slot - 2 * inset}
+                  y={top}
+                  height={Math.max(bottom - top, 0)}
+                />
+                {index < bars.length - 1 && (
+                  <line
+                    className="line-soft line-thin"
+                    x1={(index + 1) * slot - inset}
+                    x2={(index + 1) * slot + inset}
+                    y1={yOf(bar.after)}
+                    y2={yOf(bar.after)}
+                  />
+                )}
+              </g>
+            );
+          })}
+        >
+          {bars.map((bar, index) => (
+            <PlotLabel
+              key={bar.label}
+              x={(index + 0.5) * slot}
+              y={yOf(bar.high)}
+              anchor="above"
+              dy={-3}
+            >
+              <b className={bar.kind === "rise" ? "text-positive" : undefined}>{bar.text}</b>
+            </PlotLabel>
+          ))}
+        </Plot>
+      </div>
+      <div className="hidden phone:block">
+        <BridgeList bars={bars} scale={scale} quantity={quantity} />
+      </div>
+    </>
+  );
+}
+
+/** The same steps as a list of bars: for a phone, and for a narrow column. */
+export function BridgeList({
+  bars,
+  scale,
+  quantity,
+}: {
+  bars: readonly Bar[];
+  scale: Scale;
+  quantity: string;
+}) {
+  return (
+    <table className="ledger-table bridge-list">
+      <caption className="sr-only">{quantity}</caption>
+      <tbody>
+        {bars.map((bar) => {
+          const left = bar.kind === "end" ? 0 : positionOn(scale, bar.low);
+          return (
+            <tr key={bar.label}>
+              <th scope="row" className={bar.kind === "end" ? undefined : "plain"}>
+                {bar.label}
+              </th>
+              <td className="bridge-cell" aria-hidden="true">
+                <i
+                  className={`bridge-${bar.kind}`}
+                  style={{ left: `${left}%`, width: `${positionOn(scale, bar.high) - left}%` }}
+                />
+              </td>
+              <td className={`right strong${bar.kind === "rise" ? " text-positive" : ""}`}>
+                {bar.text}
+              </td>
+            </tr>
+          );
+        })}
+      </tbody>
+    </table>
+  );
+}
