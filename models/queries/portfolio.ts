@@ -42,6 +42,9 @@ export interface PortfolioReservoirRow {
   hydrogenSulphide: number | null;
   /** codes of warnings with severity `caution`, of the chosen revision */
   cautionCodes: string[];
+  /** mean recoverable condensate of the chosen and of the open revision, STB, gross */
+  condensateMeanStb: number | null;
+  openCondensateMeanStb: number | null;
   openRevision: number | null;
   openState: EstimateState | null;
   openSubmittedAt: Date | null;
@@ -92,6 +95,10 @@ export async function listPortfolioReservoirs(
             coalesce(array(select distinct jsonb_path_query(
               chosen.summary, '$.warnings[*] ? (@.severity == "caution").code') #>> '{}'),
               '{}') as "cautionCodes",
+            (chosen.summary #>> '{results,condensateRecoverableStb,mean}')::double precision
+              as "condensateMeanStb",
+            (open.summary #>> '{results,condensateRecoverableStb,mean}')::double precision
+              as "openCondensateMeanStb",
             open.revision as "openRevision", open.state as "openState",
             open.submitted_at as "openSubmittedAt", open.decided_at as "openDecidedAt",
             open.updated_at as "openUpdatedAt",
@@ -102,11 +109,38 @@ export async function listPortfolioReservoirs(
           where e.reservoir_id = r.id and ${choices[choice]}
           order by e.revision desc limit 1) chosen on true
        left join lateral (
-         select e.revision, e.state, e.submitted_at, e.decided_at, e.updated_at from estimates e
+         select e.revision, e.state, e.summary, e.submitted_at, e.decided_at, e.updated_at
+           from estimates e
           where e.reservoir_id = r.id and e.state in ('draft', 'submitted', 'returned')
           order by e.revision desc limit 1) open on true
       order by r.field_id, lower(r.name)`,
     { type: QueryTypes.SELECT },
+  );
+}
+
+/** What was approved for a reservoir on a day: its means, gross, in STB and scf. */
+export interface PastEstimateRow {
+  reservoirId: string;
+  revision: number;
+  condensateMeanStb: number;
+  salesGasMeanScf: number;
+}
+
+/**
+ * The revision that was in force for each reservoir on a date, of those that had one.
+ *
+ * @param date  YYYY-MM-DD
+ */
+export async function listEstimatesInForceOn(date: string): Promise<PastEstimateRow[]> {
+  return sequelize.query<PastEstimateRow>(
+    `select distinct on (reservoir_id) reservoir_id as "reservoirId", revision,
+            (summary #>> '{results,condensateRecoverableStb,mean}')::double precision
+              as "condensateMeanStb",
+            (summary #>> '{results,salesGasScf,mean}')::double precision as "salesGasMeanScf"
+       from estimates
+      where effective_on <= :date
+      order by reservoir_id, revision desc`,
+    { type: QueryTypes.SELECT, replacements: { date } },
   );
 }
 

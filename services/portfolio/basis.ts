@@ -58,7 +58,8 @@ function pricesOf(deck: PriceDeck, priceCase: PriceCase): ChosenPrices {
     const price = deck.prices?.find(
       (candidate) => candidate.product === product && candidate.priceCase === priceCase,
     );
-    return price ? price.benchmark + price.differential : null;
+    // Prices have four decimals; a sum of two doubles has more.
+    return price ? Math.round((price.benchmark + price.differential) * 1e4) / 1e4 : null;
   };
   return {
     deckId: deck.id,

@@ -97,9 +97,11 @@ export async function rollUpFields(
   });
 }
 
-const interestOf = (field: PortfolioFieldRow, { interest }: VolumeBasis) =>
+/** The company's share on this basis, 0 to 1. */
+export const interestOf = (field: PortfolioFieldRow, { interest }: VolumeBasis) =>
   interest === "net" ? field.netRevenueInterest : 1;
-const chanceOf = (field: PortfolioFieldRow, { risk }: VolumeBasis) =>
+/** What every trial is multiplied by for risk on this basis, 0 to 1. */
+export const chanceOf = (field: PortfolioFieldRow, { risk }: VolumeBasis) =>
   risk === "risked" ? field.chanceOfCommerciality : 1;
 
 /** A hash of everything that the result depends on; the trials of an open revision change with `computedAt`. */
