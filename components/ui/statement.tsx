@@ -29,18 +29,18 @@ export function KeyFigures({
 }) {
   return (
     <section
-      className={classNames("key-figures", headline && "key-figures-headline")}
+      className={classNames("statement", headline && "statement-headline")}
       aria-label={label}
       data-count={figures.length}
     >
       {figures.map((figure, index) => (
         <div key={index}>
           <h2>{figure.label}</h2>
-          <p className="key-figure">
+          <p className="statement-figure">
             <span>{figure.figure}</span>
             {figure.unit && <Unit>{figure.unit}</Unit>}
           </p>
-          {figure.note && <p className="key-note">{figure.note}</p>}
+          {figure.note && <p className="statement-note">{figure.note}</p>}
           {figure.mark}
         </div>
       ))}
