@@ -25,17 +25,19 @@ export interface CorrelationBlock<Name extends string> {
  * gives a joint normal distribution the rank correlation r (Pearson 1907). An impossible set is refused, never
  * repaired: a repair would change a number that somebody entered.
  *
- * @param order  every name, in the order that fixes the blocks' columns
+ * @param order    every name, in the order that fixes the blocks' columns
+ * @param labelOf  what messages call a name
  * @throws {DomainError} when a pair is given twice, ties an input to itself or exactly, or when the correlations
  *   contradict each other (no joint distribution has them all); the message names the pairs
  */
 export function correlationBlocks<Name extends string>(
   order: readonly Name[],
   pairs: readonly CorrelatedPair<Name>[],
+  labelOf: (name: Name) => string = (name) => name,
 ): CorrelationBlock<Name>[] {
   const known = new Map<string, number>();
   for (const pair of pairs) {
-    checkPair(pair, known);
+    checkPair(pair, known, labelOf);
     known.set(keyOf(pair.a, pair.b), pair.rank);
   }
   const between = (a: Name, b: Name) =>
@@ -46,7 +48,7 @@ export function correlationBlocks<Name extends string>(
       between(names[Math.floor(i / n)], names[i % n]),
     );
     const factor = choleskyFactor(target, n);
-    if (factor === null) throw contradiction(names, pairs, between);
+    if (factor === null) throw contradiction(names, pairs, between, labelOf);
     return { names, factor };
   });
 }
@@ -59,15 +61,21 @@ function scoreCorrelation(rank: number): number {
   return 2 * Math.sin((Math.PI / 6) * rank);
 }
 
-function checkPair({ a, b, rank }: CorrelatedPair<string>, known: ReadonlyMap<string, number>) {
-  const details = { input: `${a}, ${b}`, value: rank };
-  if (a === b) throw new DomainError(`${a} cannot be correlated with itself.`, details);
+function checkPair<Name extends string>(
+  { a, b, rank }: CorrelatedPair<Name>,
+  known: ReadonlyMap<string, number>,
+  labelOf: (name: Name) => string,
+): void {
+  const pair = `${labelOf(a)} with ${labelOf(b)}`;
+  const details = { input: "correlations", value: rank, pairs: [`${pair} ${rank}`] };
+  if (a === b)
+    throw new DomainError(`The correlation of ${pair} ties an input to itself.`, details);
   if (known.has(keyOf(a, b))) {
-    throw new DomainError(`The correlation of ${a} with ${b} is given twice.`, details);
+    throw new DomainError(`The correlation of ${pair} is given twice.`, details);
   }
   if (!(Math.abs(rank) < 1)) {
     throw new DomainError(
-      `The rank correlation of ${a} with ${b} is ${rank}; it must lie between -1 and 1. Exactly 1 or -1 would make ` +
+      `The rank correlation of ${pair} is ${rank}; it must lie between -1 and 1. Exactly 1 or -1 would make ` +
         "one input follow from the other: use at most 0.99.",
       details,
     );
@@ -99,11 +107,12 @@ function contradiction<Name extends string>(
   names: readonly Name[],
   pairs: readonly CorrelatedPair<Name>[],
   between: (a: Name, b: Name) => number,
+  labelOf: (name: Name) => string,
 ): DomainError {
   const culprits = contradictoryTriple(names, between) ?? names;
   const named = pairs
     .filter(({ a, b }) => culprits.includes(a) && culprits.includes(b))
-    .map(({ a, b, rank }) => `${a} with ${b} ${rank}`);
+    .map(({ a, b, rank }) => `${labelOf(a)} with ${labelOf(b)} ${rank}`);
   return new DomainError(
     `These rank correlations contradict each other, no set of values can have them all: ${named.join("; ")}. ` +
       "Pairs that are not listed count as 0.",

@@ -31,7 +31,7 @@ export function prepareInputs(inputs: EstimateInputs): PreparedInputs {
     distributions: columns(inputNames, (name) =>
       within(`uncertain.${name}`, () => compileInput(inputs, name)),
     ),
-    blocks: correlationBlocks(inputNames, inputs.correlations),
+    blocks: correlationBlocks(inputNames, inputs.correlations, (name) => usualRanges[name].label),
     wellstream: within("fluid", () => recombine(inputs.fluid)),
   };
 }
