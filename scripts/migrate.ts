@@ -44,9 +44,8 @@ function explain(error: unknown): unknown {
   if (error instanceof FailedMigration) {
     return new Failure(
       `Migration ${error.migration} could not be ${error.direction === "up" ? "applied" : "reverted"}: ${error.message}`,
-      `It was rolled back whole, so the database is as it was before it; ${error.done} migration(s) before\n` +
-        "it are kept. Nothing was lost. Correct the migration or the data it names, then run the\n" +
-        "same command again.",
+      "It was rolled back whole; those before it are kept, and nothing was lost. Correct the\n" +
+        "migration or the data it names, then run the same command again.",
     );
   }
   if (error instanceof Error && "code" in error) {

@@ -61,14 +61,14 @@ async function main() {
     () => group.stop(),
   );
 
-  const databaseUrl = process.env.DATABASE_URL || (await startCluster(group, hadCluster));
-  const isOwnDatabase = !process.env.DATABASE_URL;
-  const { env, standIns, mailPage } = await settings({ databaseUrl, address });
+  const { env, standIns, mailPage } = await settings({ address });
   const checked = await checkSettings(env);
+  const isPrivate = !env.DATABASE_URL;
+  if (isPrivate) env.DATABASE_URL = await startCluster(group, hadCluster);
   // The demo's figures are computed on the same threads as everybody's.
   if (dev || !isBuilt()) await buildWorkers();
   await migrate(env);
-  const demo = isOwnDatabase || checked.DEWLEDGER_DEMO;
+  const demo = isPrivate || checked.DEWLEDGER_DEMO;
   await task(demo ? "Looking after the demo" : "Looking after reference rows", () =>
     seed(env, { demo }),
   );

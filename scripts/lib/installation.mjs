@@ -6,6 +6,8 @@ import { rememberedPorts } from "./remembered-ports.mjs";
 import { rememberedSecret } from "./secrets.mjs";
 import { run } from "./run.mjs";
 
+const PRIVATE_DATABASE = "postgresql://127.0.0.1/private";
+
 /**
  * The arguments with which Node runs a TypeScript program of ours. The condition `react-server`
  * makes the package `server-only` an empty module, as it is inside Next's own server.
@@ -17,13 +19,12 @@ export const typescript = (...args) => ["--conditions=react-server", "--import",
  * installation's own secret, address and stand-ins.
  *
  * @param {object} options
- * @param {string} options.databaseUrl
  * @param {string} options.address as in http://127.0.0.1:3000
  * @param {NodeJS.ProcessEnv} [options.given] what the person set
  * @returns {Promise<{ env: NodeJS.ProcessEnv, standIns: string[], mailPage: string | null }>}
  *   standIns: arguments for local-services, empty when none is needed
  */
-export async function settings({ databaseUrl, address, given = process.env }) {
+export async function settings({ address, given = process.env }) {
   const needsMail = !given.SMTP_URL;
   const needsStorage = !given.S3_ENDPOINT;
   const ports = await rememberedPorts([
@@ -32,7 +33,6 @@ export async function settings({ databaseUrl, address, given = process.env }) {
   ]);
   const env = {
     ...given,
-    DATABASE_URL: databaseUrl,
     NEXTAUTH_URL: given.NEXTAUTH_URL || address,
     NEXTAUTH_SECRET: given.NEXTAUTH_SECRET || rememberedSecret("session-secret"),
     NEXT_TELEMETRY_DISABLED: "1",
@@ -56,7 +56,10 @@ export async function settings({ databaseUrl, address, given = process.env }) {
   };
 }
 
-/** Check every setting and stop with the whole list of what is wrong. */
+/**
+ * Check every setting and stop with the whole list of what is wrong. A database that is not named
+ * will be the private one, which needs no check.
+ */
 export async function checkSettings(env) {
   const { tsImport } = await import("tsx/esm/api");
   const { parseEnvironment, EnvironmentError } = await tsImport(
@@ -64,7 +67,7 @@ export async function checkSettings(env) {
     import.meta.url,
   );
   try {
-    return parseEnvironment(env);
+    return parseEnvironment({ ...env, DATABASE_URL: env.DATABASE_URL || PRIVATE_DATABASE });
   } catch (error) {
     if (error instanceof EnvironmentError) throw new Failure(error.message);
     throw error;

@@ -19,7 +19,6 @@ export class FailedMigration extends Error {
   constructor(
     readonly migration: string,
     readonly direction: "up" | "down",
-    readonly done: number,
     override readonly cause: unknown,
   ) {
     super(cause instanceof Error ? cause.message : String(cause));
@@ -73,7 +72,6 @@ export async function withMigrations<Result>(
 }
 
 function migrationRun(sequelize: Sequelize): MigrationRun {
-  let done = 0;
   const inTransaction = async (
     name: string,
     direction: "up" | "down",
@@ -85,10 +83,9 @@ function migrationRun(sequelize: Sequelize): MigrationRun {
       await migration[direction]({ context: sequelize.getQueryInterface() });
       await sequelize.query(record, { bind: [name] });
       await sequelize.query("commit");
-      done += 1;
     } catch (error) {
       await sequelize.query("rollback");
-      throw new FailedMigration(name, direction, done, error);
+      throw new FailedMigration(name, direction, error);
     }
   };
   const umzug = new Umzug({
