@@ -5,6 +5,8 @@ const config = {
   poweredByHeader: false,
   reactStrictMode: true,
   devIndicators: false,
+  // `forbidden()`: a page that a role may not see answers 403, with a page of its own.
+  experimental: { authInterrupts: true },
   // Types are checked by `npm test`, tests included; a start need not wait for them.
   typescript: { ignoreBuildErrors: true },
 };

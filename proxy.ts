@@ -6,9 +6,14 @@ import { NextResponse, type NextRequest } from "next/server";
  * somebody, and what they may do, is decided on every request by app/_server.
  */
 export async function proxy(request: NextRequest): Promise<NextResponse> {
-  if (await getToken({ req: request })) return NextResponse.next();
-  const signIn = new URL("/sign-in", request.nextUrl);
   const wanted = request.nextUrl.pathname + request.nextUrl.search;
+  if (await getToken({ req: request })) {
+    // A page cannot read its own address on the server; session.ts needs it when the cookie stands for nobody any more.
+    const headers = new Headers(request.headers);
+    headers.set("x-dewledger-page", wanted);
+    return NextResponse.next({ request: { headers } });
+  }
+  const signIn = new URL("/sign-in", request.nextUrl);
   if (wanted !== "/") signIn.searchParams.set("callbackUrl", wanted);
   return NextResponse.redirect(signIn);
 }

@@ -29,10 +29,13 @@ export const policy = {
   "people.read": everyone,
   "calculation.run": everyone,
   "apiToken.manage": everyone,
+  /** one's own */
+  "password.change": everyone,
 
-  "basin.create": ["engineer", "planner"],
+  /** an administrator opens an empty book with its first basin and field; what is in them is for others to say */
+  "basin.create": ["engineer", "planner", "administrator"],
   "basin.update": ["planner"],
-  "field.create": ["engineer", "planner"],
+  "field.create": ["engineer", "planner", "administrator"],
   "field.update": ["engineer", "planner"],
   /** working and net revenue interest, chance of commerciality: what turns volumes into the company's money */
   "field.updateCommercial": ["planner"],

@@ -1,8 +1,8 @@
 import "server-only";
 import { getToken } from "next-auth/jwt";
-import { cookies } from "next/headers";
+import { cookies, headers } from "next/headers";
 import { NextRequest } from "next/server";
-import { redirect } from "next/navigation";
+import { forbidden, redirect } from "next/navigation";
 import { cache } from "react";
 import { env } from "@/services/env";
 import { can, type Action, type Actor } from "@/services/policy";
@@ -36,14 +36,20 @@ export const currentActor = cache(async (): Promise<Actor | null> => {
   return actorOfCookie(new NextRequest(env().NEXTAUTH_URL, { headers: { cookie } }));
 });
 
+/** Where proxy.ts says which page was asked for, so that signing in can lead back to it. */
+export const pageHeader = "x-dewledger-page";
+
 /**
- * The same for a page that takes a signed-in person; others are sent to sign in.
+ * The same for a page that takes a signed-in person; others are sent to sign in, and come back here afterwards.
  *
- * @param action  what the page is for; a person whose role lacks it is sent to the front page
+ * @param action  what the page is for; a person whose role lacks it is answered 403
  */
 export async function requireActor(action?: Action): Promise<Actor> {
   const actor = await currentActor();
-  if (!actor) redirect("/sign-in");
-  if (action && !can(actor, action)) redirect("/");
+  if (!actor) {
+    const page = (await headers()).get(pageHeader);
+    redirect(page ? `/sign-in?callbackUrl=${encodeURIComponent(page)}` : "/sign-in");
+  }
+  if (action && !can(actor, action)) forbidden();
   return actor;
 }

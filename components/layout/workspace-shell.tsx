@@ -7,7 +7,8 @@ import { TopBar, type NavItem, type Person } from "./top-bar";
 export interface WorkspaceShellProps {
   person: Person;
   nav: readonly NavItem[];
-  decks: readonly DeckChoice[];
+  /** for the basis strip; left out on pages whose figures stand on no basis */
+  decks?: readonly DeckChoice[];
   account: MenuGroup[];
   tools?: ReactNode;
   /** what made the numbers, for the footer */
@@ -33,7 +34,7 @@ export function WorkspaceShell({
       {/* Both read the address, which is known only in the browser while a page is prerendered. */}
       <Suspense fallback={<div className="h-[88px]" />}>
         <TopBar person={person} nav={nav} account={account} tools={tools} />
-        <BasisStrip decks={decks} />
+        {decks && <BasisStrip decks={decks} />}
       </Suspense>
       {children}
       <Footer provenance={provenance} />

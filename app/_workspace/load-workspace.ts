@@ -1,0 +1,53 @@
+import "server-only";
+import { ENGINE_VERSION } from "@/analytics/volumetrics/simulate";
+import { requireActor } from "@/app/_server/session";
+import type { DeckChoice } from "@/components/layout/basis-strip";
+import type { NavItem, Person } from "@/components/layout/top-bar";
+import { can, type Actor } from "@/services/policy";
+import { listPriceDecks } from "@/services/price-decks";
+
+/** Everybody who is signed in, as the top bar and the sections need them. */
+export interface Workspace {
+  person: Person;
+  nav: NavItem[];
+  /** what made the numbers, for the footer */
+  engineVersion: string;
+}
+
+/** For the layout of signed-in pages. Visitors are sent to sign in. */
+export async function loadWorkspace(): Promise<Workspace> {
+  const actor = await requireActor();
+  return { person: personOf(actor), nav: sectionsOf(actor), engineVersion: ENGINE_VERSION };
+}
+
+/** Published price decks, latest first, for the basis strip. */
+export async function loadDecks(): Promise<DeckChoice[]> {
+  const actor = await requireActor();
+  const decks = await listPriceDecks(actor, { state: "published" }, { limit: 50, offset: 0 });
+  return decks.items.map(({ id, name, versionNumber, asOfOn }) => ({
+    id,
+    name: `${name} v${versionNumber}`,
+    asOf: asOfOn,
+  }));
+}
+
+function personOf({ name, role }: Actor): Person {
+  const words = name.split(/\s+/).filter(Boolean);
+  const initials = [words[0], words.length > 1 ? words.at(-1) : undefined];
+  return {
+    name,
+    role: role.charAt(0).toUpperCase() + role.slice(1),
+    initials: initials.map((word) => word?.charAt(0).toUpperCase() ?? "").join(""),
+  };
+}
+
+function sectionsOf(actor: Actor): NavItem[] {
+  return [
+    { href: "/portfolio", label: "Portfolio" },
+    { href: "/fields", label: "Fields" },
+    { href: "/prices", label: "Prices" },
+    { href: "/review", label: "Review" },
+    ...(can(actor, "user.read") ? [{ href: "/people", label: "People" }] : []),
+    ...(can(actor, "audit.read") ? [{ href: "/audit", label: "Audit" }] : []),
+  ];
+}

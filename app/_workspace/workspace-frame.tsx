@@ -1,0 +1,48 @@
+"use client";
+
+import { signOut } from "next-auth/react";
+import type { ReactNode } from "react";
+import type { DeckChoice } from "@/components/layout/basis-strip";
+import type { NavItem, Person } from "@/components/layout/top-bar";
+import { WorkspaceShell } from "@/components/layout/workspace-shell";
+import { useSessionWatch } from "./use-session-watch";
+import { useWaitingCount } from "./use-waiting-count";
+
+export interface WorkspaceFrameProps {
+  person: Person;
+  nav: readonly NavItem[];
+  engineVersion: string;
+  /** left out on pages whose figures stand on no basis */
+  decks?: readonly DeckChoice[];
+  children: ReactNode;
+}
+
+/** The shell of every signed-in page, with the parts of it that live in the browser. */
+export function WorkspaceFrame({
+  person,
+  nav,
+  engineVersion,
+  decks,
+  children,
+}: WorkspaceFrameProps) {
+  useSessionWatch();
+  const waiting = useWaitingCount();
+  return (
+    <WorkspaceShell
+      person={person}
+      nav={nav.map((item) => (item.href === "/review" ? { ...item, count: waiting } : item))}
+      decks={decks}
+      account={[
+        {
+          entries: [
+            { label: "Profile", href: "/profile" },
+            { label: "Sign out", onSelect: () => void signOut({ callbackUrl: "/sign-in" }) },
+          ],
+        },
+      ]}
+      provenance={decks && `Engine ${engineVersion}`}
+    >
+      {children}
+    </WorkspaceShell>
+  );
+}
