@@ -69,7 +69,9 @@ export async function enqueue<Name extends JobName>(
 function within(transaction: Transaction): PgBoss.Db {
   return {
     executeSql: async (text, values) => {
-      const [rows] = await sequelize.query(text, { bind: values, transaction });
+      // Sequelize takes `undefined` for a forgotten value; the driver, and pg-boss, take it for null.
+      const bind: unknown[] = values.map((value: unknown) => value ?? null);
+      const [rows] = await sequelize.query(text, { bind, transaction });
       return { rows };
     },
   };
