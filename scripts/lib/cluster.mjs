@@ -1,8 +1,8 @@
 import { randomBytes } from "node:crypto";
 import fs from "node:fs";
 import path from "node:path";
-import { lastLines, failureFromOutput, Failure } from "./failure.mjs";
-import { requireSpace } from "./disk-space.mjs";
+import { failureFromOutput, Failure } from "./failure.mjs";
+import { freeMegabytes, requireSpace } from "./disk-space.mjs";
 import { cloneChecksum, dataPath, readJsonIfAny, root, writeFileAtomically } from "./paths.mjs";
 import { choosePort } from "./ports.mjs";
 import { findPostgres } from "./postgres-binaries.mjs";
@@ -290,14 +290,13 @@ async function start(cluster) {
     const said = fs.existsSync(log) ? fs.readFileSync(log, "utf8") : output;
     // Somebody took the port between our look and the server's.
     if (/could not bind|Address already in use/i.test(said) && attempt < 4) continue;
-    const failure = failureFromOutput(
+    // On a full disk the server's last words may have found no room in the log either.
+    const isFull = ((await freeMegabytes(home)) ?? Infinity) < 20;
+    throw failureFromOutput(
       "Starting the database",
-      said,
+      isFull ? `${said}\nNo space left on device` : said,
       `The data in ${data} was not touched. The server's log is ${log}.`,
     );
-    throw failure.detail === ""
-      ? failure
-      : new Failure(failure.message, failure.remedy, lastLines(said, 12));
   }
 }
 

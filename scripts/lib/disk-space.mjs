@@ -13,12 +13,13 @@ export async function requireSpace(directory, megabytes, purpose) {
   const free = await freeMegabytes(directory);
   if (free === null || free >= megabytes) return;
   throw new Failure(
-    `The disk that holds ${directory} has ${Math.floor(free)} MB free; ${purpose} need about ${megabytes} MB.`,
+    `The disk that holds ${directory} has ${Math.floor(free)} MB free; about ${megabytes} MB are needed for ${purpose}.`,
     "Free some space and run the same command again. Nothing was changed.",
   );
 }
 
-async function freeMegabytes(directory) {
+/** The space left where a file would be written [MB], or null when the system does not say. */
+export async function freeMegabytes(directory) {
   for (let at = path.resolve(directory); ; at = path.dirname(at)) {
     try {
       const { bavail, bsize } = await fs.statfs(at);
