@@ -2,6 +2,7 @@ import type { Transaction } from "sequelize";
 import type { PriceDeck } from "@/models/price-deck";
 import {
   createPriceDeckRow,
+  deletePriceDeck,
   findCurrentPriceDeck,
   findLatestDeckVersion,
   findPriceDeck,
@@ -181,6 +182,31 @@ export async function updatePriceDeck(
       transaction,
     );
     return reload(id, transaction);
+  });
+}
+
+/** Throw a draft away that was never published; the audit trail keeps what it held. */
+export async function discardPriceDeck(
+  actor: Actor,
+  id: string,
+  expectedVersion: number,
+): Promise<void> {
+  authorise(actor, "priceDeck.update");
+  await inTransaction(async (transaction) => {
+    const deck = await lockDraft(id, expectedVersion, transaction);
+    const { name, versionNumber, currency, asOfOn, note } = deck;
+    const prices = (await listPricesOfDeck(id, transaction)).map(toDeckPrice);
+    await deletePriceDeck(deck, { transaction });
+    await recordAudit(
+      {
+        actor,
+        action: "priceDeck.discarded",
+        entity: "priceDeck",
+        entityId: id,
+        before: { name, versionNumber, currency, asOfOn, note, prices },
+      },
+      transaction,
+    );
   });
 }
 

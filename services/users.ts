@@ -11,10 +11,11 @@ import {
 } from "@/models/queries/users";
 import { changesBetween, recordAudit } from "./audit";
 import { now } from "./clock";
-import { ConflictError, NotFoundError } from "./errors";
+import { ConflictError, InvalidInputError, NotFoundError } from "./errors";
 import { toPage, type Page, type PageRequest } from "./paging";
-import { hashPassword } from "./passwords";
+import { hashPassword, verifyPassword } from "./passwords";
 import { authorise, type Actor, type Role } from "./policy";
+import { assertMayTry, clearFailures, countFailure } from "./sign-in-limits";
 import { inTransaction } from "./transaction";
 import { assertVersion, saveVersioned } from "./versions";
 
@@ -169,6 +170,55 @@ export async function signOutEverywhere(actor: Actor): Promise<void> {
     await user.save({ transaction });
     await recordAudit(
       { actor, action: "user.signedOutEverywhere", entity: "user", entityId: user.id },
+      transaction,
+    );
+  });
+}
+
+/**
+ * Replace one's own password. It ends every session there is, the present one included: the person signs in again with
+ * the new one. Wrong guesses at the present password count as failed attempts to sign in.
+ *
+ * @param networkAddress  where the attempt comes from
+ * @throws {InvalidInputError} when the present password is not right, or the new one is the same
+ * @throws {TooManyRequestsError} after too many failures
+ */
+export async function changeOwnPassword(
+  actor: Actor,
+  input: { currentPassword: string; password: string },
+  networkAddress: string,
+): Promise<void> {
+  authorise(actor, "password.change");
+  const attempt = { email: actor.email, networkAddress };
+  await assertMayTry(attempt);
+  const known = await findUser(actor.id);
+  if (!(await verifyPassword(input.currentPassword, known?.passwordHash ?? null))) {
+    await countFailure(attempt);
+    throw new InvalidInputError([
+      { pointer: "#/currentPassword", detail: "is not your present password" },
+    ]);
+  }
+  if (input.password === input.currentPassword) {
+    throw new InvalidInputError([
+      { pointer: "#/password", detail: "must differ from the present password" },
+    ]);
+  }
+  await clearFailures(attempt);
+  const passwordHash = await hashPassword(input.password);
+  await inTransaction(async (transaction) => {
+    const user = await findUser(actor.id, { transaction, lock: true });
+    if (!user) throw new NotFoundError("person");
+    user.passwordHash = passwordHash;
+    user.sessionEpoch += 1;
+    await saveVersioned(user, transaction);
+    await recordAudit(
+      {
+        actor,
+        action: "user.passwordChanged",
+        entity: "user",
+        entityId: user.id,
+        after: { password: "replaced", sessions: "ended" },
+      },
       transaction,
     );
   });

@@ -6,17 +6,12 @@ import { env } from "@/services/env";
 import { TooManyRequestsError } from "@/services/errors";
 import { log } from "@/services/log";
 import { signIn } from "@/services/sessions";
+import { networkAddressOf } from "./network-address";
 
 const credentialsSchema = z.object({
   email: z.string().min(1).max(320),
   password: z.string().min(1).max(1000),
 });
-
-/** The first address of X-Forwarded-For: Next puts the caller's there when no proxy did. */
-function networkAddressOf(headers: Record<string, unknown> | undefined): string {
-  const forwarded = headers?.["x-forwarded-for"];
-  return typeof forwarded === "string" ? forwarded.split(",")[0].trim() : "unknown";
-}
 
 /** A function, because settings are read when the first request needs them and not when the build loads this file. */
 export function authOptions(): NextAuthOptions {
@@ -36,7 +31,11 @@ export function authOptions(): NextAuthOptions {
           if (!credentials.success) return null;
           try {
             const { email, password } = credentials.data;
-            const claim = await signIn(email, password, networkAddressOf(request.headers));
+            const claim = await signIn(
+              email,
+              password,
+              networkAddressOf(request.headers?.["x-forwarded-for"]),
+            );
             return claim && { id: claim.userId, ...claim };
           } catch (error) {
             // next-auth hands the message of an error to the sign-in page as `?error=`.

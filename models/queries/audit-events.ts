@@ -18,25 +18,48 @@ export async function createAuditEvent(
   await AuditEvent.create(values, options);
 }
 
+const withActor = [{ model: User, as: "actor", attributes: ["id", "name"] }];
+
+function conditionsOf({ entity, entityId, actorId, from, to }: AuditFilter) {
+  const where: WhereOptions<AuditEvent> = {
+    ...(entity && { entity }),
+    ...(entityId && { entityId }),
+    ...(actorId && { actorId }),
+    ...((from ?? to) && { at: { ...(from && { [Op.gte]: from }), ...(to && { [Op.lt]: to }) } }),
+  };
+  return where;
+}
+
 export async function listAuditEventsPage(
   filter: AuditFilter,
   page: { limit: number; offset: number },
 ): Promise<{ rows: AuditEvent[]; count: number }> {
-  const where: WhereOptions<AuditEvent> = {
-    ...(filter.entity && { entity: filter.entity }),
-    ...(filter.entityId && { entityId: filter.entityId }),
-    ...(filter.actorId && { actorId: filter.actorId }),
-    ...((filter.from ?? filter.to) && {
-      at: {
-        ...(filter.from && { [Op.gte]: filter.from }),
-        ...(filter.to && { [Op.lt]: filter.to }),
-      },
-    }),
-  };
   return AuditEvent.findAndCountAll({
-    where,
-    include: [{ model: User, as: "actor", attributes: ["id", "name"] }],
+    where: conditionsOf(filter),
+    include: withActor,
     order: [["id", "DESC"]],
     ...page,
   });
+}
+
+/**
+ * Every event of a filter, newest first, a batch at a time. Each batch begins below the last event of the one before, so
+ * what is written meanwhile neither repeats nor hides an event.
+ */
+export async function* walkAuditEvents(
+  filter: AuditFilter,
+  batchSize: number,
+): AsyncGenerator<AuditEvent> {
+  let below: string | null = null;
+  for (;;) {
+    const batch: AuditEvent[] = await AuditEvent.findAll({
+      where: { [Op.and]: [conditionsOf(filter), below === null ? {} : { id: { [Op.lt]: below } }] },
+      include: withActor,
+      order: [["id", "DESC"]],
+      limit: batchSize,
+    });
+    yield* batch;
+    if (batch.length < batchSize) return;
+    below = batch[batch.length - 1].id;
+  }
 }

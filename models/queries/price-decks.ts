@@ -90,3 +90,12 @@ export async function replacePrices(
     options,
   );
 }
+
+/** Throw a draft away, prices and all. */
+export async function deletePriceDeck(
+  deck: PriceDeck,
+  options: { transaction: Transaction },
+): Promise<void> {
+  await PriceDeckPrice.destroy({ where: { priceDeckId: deck.id }, ...options });
+  await deck.destroy(options);
+}

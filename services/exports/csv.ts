@@ -6,7 +6,7 @@ export type CsvCell = string | number | null;
 export interface CsvFile {
   /** the header row */
   names: readonly string[];
-  rows: Iterable<readonly CsvCell[]>;
+  rows: Iterable<readonly CsvCell[]> | AsyncIterable<readonly CsvCell[]>;
   /** a byte-order mark, without which spreadsheets take UTF-8 for something else; programs do better without */
   byteOrderMark: boolean;
 }

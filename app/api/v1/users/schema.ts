@@ -2,7 +2,7 @@ import { z } from "zod";
 import { roles } from "@/models/vocabulary";
 import { momentSchema, nameSchema } from "../common-schema";
 
-const passwordSchema = z
+export const passwordSchema = z
   .string()
   .min(12, "must have at least 12 characters")
   .max(200, "must have at most 200 characters");

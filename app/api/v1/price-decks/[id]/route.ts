@@ -1,5 +1,5 @@
 import { withRoute } from "@/app/_server/with-route";
-import { getPriceDeck, updatePriceDeck } from "@/services/price-decks";
+import { discardPriceDeck, getPriceDeck, updatePriceDeck } from "@/services/price-decks";
 import { idParams } from "../../common-schema";
 import { presentPriceDeck } from "../presenter";
 import { priceDeckPatchSchema } from "../schema";
@@ -20,4 +20,13 @@ export const PATCH = withRoute({
   handler: ({ actor, params, body, expectedVersion }) =>
     updatePriceDeck(actor, params.id, body, expectedVersion),
   present: presentPriceDeck,
+});
+
+/** Throw a draft away; a published deck stays. */
+export const DELETE = withRoute({
+  may: "priceDeck.update",
+  params: idParams,
+  versioned: true,
+  handler: ({ actor, params, expectedVersion }) =>
+    discardPriceDeck(actor, params.id, expectedVersion),
 });
