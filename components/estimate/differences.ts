@@ -55,6 +55,10 @@ export function isSameFluid(a: SeparatorTest | null, b: SeparatorTest | null): b
   return sortedJson(a) === sortedJson(b);
 }
 
+export function isSameInputs(a: EstimateInputs, b: EstimateInputs): boolean {
+  return sortedJson(a) === sortedJson(b);
+}
+
 /** What differs between two versions of the same draft, as parts that a person can choose one by one. */
 export type DraftPart = InputName | "correlations" | "fluid" | "depthFt";
 

@@ -1,4 +1,4 @@
-import { displayUnit, type QuantityName } from "@/analytics/units/conversions";
+import { canonicalUnit, quantityOf, type QuantityName } from "@/analytics/units/conversions";
 import { parseQuantity, type ParsedQuantity } from "@/analytics/units/parse-quantity";
 import type { InputName } from "@/analytics/volumetrics/inputs-schema";
 
@@ -24,9 +24,13 @@ export interface FieldReading {
   problem: string | null;
 }
 
-/** A figure as a person would type it back: grouped, and with every digit that it has. */
+/** A figure as a person would type it back: grouped, with every digit that it has, so that it reads as itself. */
 export function typedFigure(value: number): string {
-  return value.toLocaleString("en-US", { maximumSignificantDigits: 12 });
+  const text = String(value);
+  if (text.includes("e")) return text;
+  const [whole, decimals] = text.split(".");
+  const grouped = whole.replace(/\B(?=(\d{3})+$)/g, ",");
+  return decimals === undefined ? grouped : `${grouped}.${decimals}`;
 }
 
 /**
@@ -45,28 +49,42 @@ export function readField(
   return inUnit ? readQuantity(text, quantityOfInput[name], unit) : readPlain(text);
 }
 
-/** Reads a quantity of any kind, such as a separator pressure; as `readField`. */
-export function readQuantity(text: string, quantity: QuantityName, unit: string): FieldReading {
+/**
+ * Reads a quantity of any kind, such as a separator pressure; as `readField`.
+ *
+ * @param unit    printed after the preview
+ * @param symbol  unit that is assumed where none is typed, and that the preview is in
+ */
+export function readQuantity(
+  text: string,
+  quantity: QuantityName,
+  unit: string,
+  symbol: string = canonicalUnit(quantity),
+): FieldReading {
   if (text.trim() === "") return { value: null, preview: null, problem: null };
-  return reading(text, parseQuantity(text, quantity), unit, displayUnit(quantity, "field"));
+  const parsed = parseQuantity(text, quantity, symbol);
+  return reading(text, parsed, unit, symbol, quantity);
 }
 
 /** Reads a number that carries no unit: a gravity, a logarithm. Arithmetic is accepted here too. */
 export function readPlain(text: string): FieldReading {
   if (text.trim() === "") return { value: null, preview: null, problem: null };
   // A temperature is the one quantity that may be negative, as a logarithm may.
-  return reading(text, parseQuantity(text, "temperature"), "", "degF");
+  return reading(text, parseQuantity(text, "temperature"), "", "degF", "temperature");
 }
 
 function reading(
   text: string,
   parsed: ParsedQuantity,
   unit: string,
-  ownUnit: string,
+  symbol: string,
+  quantity: QuantityName,
 ): FieldReading {
   if (!parsed.ok) return { value: null, preview: null, problem: parsed.reason };
-  const isPlain = /^[-−]?[\d,.' \u00a0\u2009\u202f]+$/.test(text.trim()) && parsed.unit === ownUnit;
-  const figure = parsed.value.toLocaleString("en-US", { maximumSignificantDigits: 4 });
+  const isPlain = /^[-−]?[\d,.' \u00a0\u2009\u202f]+$/.test(text.trim()) && parsed.unit === symbol;
+  const { factor, offset = 0 } = quantityOf(quantity).units[symbol];
+  const shown = (parsed.value - offset) / factor;
+  const figure = shown.toLocaleString("en-US", { maximumSignificantDigits: 4 });
   return {
     value: parsed.value,
     preview: isPlain ? null : `= ${figure}${unit ? ` ${unit}` : ""}`,

@@ -1,0 +1,94 @@
+"use client";
+
+import { differenceFinding } from "@/components/estimate/findings";
+import { inputDifferences, isSameFluid } from "@/components/estimate/differences";
+import { DifferenceTable } from "@/components/estimate/difference-table";
+import { ExceedanceSection } from "@/components/estimate/exceedance-section";
+import { FindingList } from "@/components/estimate/finding-list";
+import { resultGroups } from "@/components/estimate/result-rows";
+import { ResultChangeTable } from "@/components/estimate/result-change-table";
+import { Columns, Section, Stack } from "@/components/ui/section";
+import { EmptyState } from "@/components/ui/status";
+import { useReservoir } from "../_editor/reservoir-context";
+import { DecisionPanel } from "./decision-panel";
+
+/** What a reviewer looks at: inputs and results against the approved revision, the checks, and the decision. */
+export function CompareTab() {
+  const { shown, before, draft, results, resultBasis, place, warnings } = useReservoir();
+  const inputs = draft?.reading.estimate ?? shown?.inputs ?? null;
+  if (!inputs) {
+    return (
+      <EmptyState title="Nothing to compare yet">
+        The comparison appears when every input is filled in.
+      </EmptyState>
+    );
+  }
+  const differences = inputDifferences(inputs, before?.inputs ?? null);
+  const changed = differences.filter(({ isSame }) => !isSame);
+  const fluidChanged = before !== null && !isSameFluid(inputs.fluid, before.inputs.fluid);
+  const label = shown ? `r${shown.revision}` : "first estimate";
+  return (
+    <Columns kind="side">
+      <Stack>
+        <Section
+          title={
+            before
+              ? differenceFinding(changed.length, differences.length, before.revision)
+              : "A first estimate: every input is new"
+          }
+          note={`${before ? `Box: approved r${before.revision}. Line: ${label}. Each input on its own scale.` : "Each input on its own scale."}${fluidChanged ? " The separator test is another one." : ""}`}
+        >
+          <DifferenceTable differences={differences} warnings={warnings} />
+        </Section>
+        {results.summary && (
+          <Section
+            title={before ? "What it does to the results" : "Results"}
+            note={`${resultBasis.interestFactor === 1 ? "Gross" : "Net to the company"}, before the chance of commerciality.`}
+          >
+            <ResultChangeTable
+              groups={resultGroups(results.summary, before?.summary ?? null, resultBasis)}
+            />
+          </Section>
+        )}
+        {results.summary && (
+          <ExceedanceSection
+            summary={results.summary}
+            label={label}
+            before={
+              before?.summary ? { label: `r${before.revision}`, summary: before.summary } : null
+            }
+            basis={resultBasis}
+            place={`${place.field}-${place.reservoir}`}
+          />
+        )}
+      </Stack>
+      <aside className="editor-side" aria-label="Checks and decision">
+        <Section title={warnings.length === 0 ? "No check warns" : "Checks that warn"}>
+          <FindingList
+            findings={
+              warnings.length === 0
+                ? [
+                    {
+                      tone: "done",
+                      text: "Every input and the fluid are within their usual ranges",
+                    },
+                  ]
+                : warnings.map(({ severity, message }) => ({
+                    tone: severity === "caution" ? "caution" : "warning",
+                    text: message,
+                  }))
+            }
+          />
+        </Section>
+        {shown?.note && (
+          <Section
+            title={`What ${shown.submitter?.name ?? shown.creator?.name ?? "the author"} says`}
+          >
+            <p className="text-13">{shown.note}</p>
+          </Section>
+        )}
+        <DecisionPanel />
+      </aside>
+    </Columns>
+  );
+}

@@ -1,0 +1,174 @@
+"use client";
+
+import type { ResultName } from "@/analytics/volumetrics/results-schema";
+import { Drivers } from "@/components/estimate/drivers";
+import { ExceedanceSection } from "@/components/estimate/exceedance-section";
+import { resultGroups, resultFactor, resultUnit } from "@/components/estimate/result-rows";
+import { ResultTable } from "@/components/estimate/result-table";
+import { Columns, Section, Stack } from "@/components/ui/section";
+import { EmptyState, Skeleton } from "@/components/ui/status";
+import { LedgerTable, FigureCell } from "@/components/ui/table";
+import { formatDate, fractionDigits } from "@/components/ui/format";
+import { useReservoir } from "../_editor/reservoir-context";
+import { derivedRows } from "./derived-rows";
+
+/** Everything a run gives, with the errors of its sampling. */
+export function ResultsTab() {
+  const { results, resultBasis, before, shown, place, draft } = useReservoir();
+  const { summary } = results;
+  if (!summary) {
+    return draft?.reading.estimate ? (
+      <Skeleton lines={10} label="Working the results out" />
+    ) : (
+      <EmptyState title="Nothing was run yet">
+        Results appear here when every input is filled in.
+      </EmptyState>
+    );
+  }
+  const placeName = `${place.field}-${place.reservoir}`;
+  const label = shown ? `r${shown.revision}` : "first estimate";
+  const old = before?.summary ? { label: `r${before.revision}`, summary: before.summary } : null;
+  return (
+    <Stack>
+      <Columns kind="equal">
+        <Section
+          title="In place and recoverable"
+          note={`${resultBasis.interestFactor === 1 ? "Gross" : "Net to the company"}, before the chance of commerciality. ${old ? `Box behind a mark: approved ${old.label}.` : ""}`}
+        >
+          <ResultTable
+            caption="In place and recoverable"
+            groups={resultGroups(summary, old?.summary ?? null, resultBasis)}
+            isStale={results.isStale}
+          />
+        </Section>
+        <Section
+          title="What follows from the inputs"
+          note="Percentiles of the trials; the wellstream is recombined in each of them."
+        >
+          <DerivedTable />
+        </Section>
+      </Columns>
+      <Columns kind="equal">
+        <ExceedanceSection
+          summary={summary}
+          label={label}
+          before={old}
+          basis={resultBasis}
+          place={placeName}
+        />
+        <Drivers summary={summary} basis={resultBasis} />
+      </Columns>
+      <Columns kind="equal">
+        <ExceedanceSection
+          summary={summary}
+          label={label}
+          before={old}
+          basis={resultBasis}
+          result="salesGasScf"
+          name="Sales gas"
+          place={placeName}
+        />
+        <Drivers summary={summary} basis={resultBasis} result="wetGasInPlaceScf" />
+      </Columns>
+      <SamplingSection />
+    </Stack>
+  );
+}
+
+function DerivedTable() {
+  const { results, resultBasis } = useReservoir();
+  if (!results.summary) return null;
+  return (
+    <LedgerTable caption="Derived quantities">
+      <thead>
+        <tr>
+          <th scope="col">Quantity</th>
+          {["P90", "P50", "P10", "Mean"].map((level) => (
+            <th key={level} scope="col" className="right">
+              {level}
+            </th>
+          ))}
+        </tr>
+      </thead>
+      <tbody>
+        {derivedRows(results.summary, resultBasis).map(({ label, unit, range }) => {
+          const digits = fractionDigits([range.p90, range.p50, range.p10, range.mean]);
+          return (
+            <tr key={label}>
+              <th scope="row" className="wrap font-normal">
+                {label} {unit && <span className="unit">{unit}</span>}
+              </th>
+              <FigureCell value={range.p90} fraction={digits} />
+              <FigureCell value={range.p50} fraction={digits} strong />
+              <FigureCell value={range.p10} fraction={digits} />
+              <FigureCell value={range.mean} fraction={digits} />
+            </tr>
+          );
+        })}
+      </tbody>
+    </LedgerTable>
+  );
+}
+
+const sampled: { name: ResultName; label: string }[] = [
+  { name: "wetGasInPlaceScf", label: "Wet gas in place" },
+  { name: "salesGasScf", label: "Sales gas" },
+  { name: "condensateInPlaceStb", label: "Condensate in place" },
+  { name: "condensateRecoverableStb", label: "Condensate to the tank" },
+];
+
+/** How well the trials know the percentiles, and what made them. */
+function SamplingSection() {
+  const { results, resultBasis, shown } = useReservoir();
+  const { summary } = results;
+  if (!summary) return null;
+  const { condensateRecoverableStb: headline } = summary.results;
+  const worst = Math.max(
+    headline.standardErrors.p90 / headline.p90,
+    headline.standardErrors.p10 / headline.p10,
+  );
+  return (
+    <Section
+      title={`${summary.trials.toLocaleString("en-US")} trials know the ends to within ${(worst * 100).toFixed(1)} %`}
+      note={`One standard error of sampling, for condensate to the tank. Latin hypercube, seed ${summary.seed}, engine ${summary.engineVersion}${shown?.computedAt && results.isFull ? `, run ${formatDate(shown.computedAt, "time")} UTC` : ""}.`}
+    >
+      <LedgerTable caption="Sampling errors and moments">
+        <thead>
+          <tr>
+            <th scope="col">Quantity</th>
+            {["Mean", "Standard deviation", "Error of P90", "Error of P50", "Error of P10"].map(
+              (heading) => (
+                <th key={heading} scope="col" className="right">
+                  {heading}
+                </th>
+              ),
+            )}
+            <th scope="col" className="right">
+              All at P50
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {sampled.map(({ name, label }) => {
+            const quantity = summary.results[name];
+            const factor = resultFactor(name, resultBasis);
+            const { standardErrors } = quantity;
+            return (
+              <tr key={name}>
+                <th scope="row" className="font-normal">
+                  {label} <span className="unit">{resultUnit(name, resultBasis)}</span>
+                </th>
+                <FigureCell value={quantity.mean * factor} strong />
+                <FigureCell value={quantity.standardDeviation * factor} />
+                <FigureCell value={standardErrors.p90 * factor} digits={2} />
+                <FigureCell value={standardErrors.p50 * factor} digits={2} />
+                <FigureCell value={standardErrors.p10 * factor} digits={2} />
+                <FigureCell value={summary.deterministic[name] * factor} soft />
+              </tr>
+            );
+          })}
+        </tbody>
+      </LedgerTable>
+    </Section>
+  );
+}

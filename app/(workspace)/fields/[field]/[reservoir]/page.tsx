@@ -1,0 +1,5 @@
+import { InputsTab } from "./_components/inputs-tab";
+
+export default function InputsPage() {
+  return <InputsTab />;
+}

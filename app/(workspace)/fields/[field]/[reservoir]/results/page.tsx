@@ -1,0 +1,5 @@
+import { ResultsTab } from "../_components/results-tab";
+
+export default function ResultsPage() {
+  return <ResultsTab />;
+}

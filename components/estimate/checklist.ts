@@ -1,0 +1,100 @@
+import { inputNames } from "@/analytics/volumetrics/inputs-schema";
+import type { Warning } from "@/analytics/warnings";
+import type { EstimateReading } from "./estimate-reading";
+import type { EstimateText } from "./estimate-text";
+import { inputCatalogue } from "./input-catalogue";
+
+export interface ChecklistItem {
+  /** done; to be explained; to be done before it can be submitted */
+  tone: "done" | "warning" | "open";
+  text: string;
+}
+
+const numbers = [
+  "no",
+  "one",
+  "two",
+  "three",
+  "four",
+  "five",
+  "six",
+  "seven",
+  "eight",
+  "nine",
+  "ten",
+];
+const inWords = (count: number) => numbers[count] ?? String(count);
+const capital = (text: string) => text[0].toUpperCase() + text.slice(1);
+const labels = (names: readonly (keyof typeof inputCatalogue)[]) =>
+  names.map((name) => inputCatalogue[name].label.toLowerCase()).join(", ");
+
+/** What stands between a draft and a reviewer, worked out from what is in the fields. */
+export function submitChecklist(draft: {
+  text: EstimateText;
+  reading: EstimateReading;
+  warnings: readonly Warning[];
+  /** name of the attached fluid sample; `null` when the sheet was typed by hand */
+  sampleName: string | null;
+  /** trials of the run that belongs to these inputs; `null` when there is none */
+  trials: number | null;
+}): ChecklistItem[] {
+  return [
+    inputsItem(draft.reading),
+    fluidItem(draft.text, draft.sampleName),
+    sourcesItem(draft.text),
+    ...(draft.reading.estimate ? [warningsItem(draft.warnings), runItem(draft.trials)] : []),
+  ];
+}
+
+/** Nothing that is open stands in the way. */
+export const canSubmit = (items: readonly ChecklistItem[]) =>
+  items.every(({ tone }) => tone !== "open");
+
+function inputsItem({ incomplete, impossible, problem }: EstimateReading): ChecklistItem {
+  if (impossible.length > 0) {
+    return {
+      tone: "open",
+      text: `${capital(inWords(impossible.length))} impossible: ${labels(impossible)}`,
+    };
+  }
+  if (incomplete.length > 0) {
+    const which = incomplete.length <= 4 ? `: ${labels(incomplete)}` : "";
+    return {
+      tone: "open",
+      text: `${capital(inWords(incomplete.length))} of ${inWords(inputNames.length)} inputs to fill in${which}`,
+    };
+  }
+  if (problem !== null) return { tone: "open", text: problem };
+  return { tone: "done", text: "Ten inputs complete, no impossible value" };
+}
+
+function fluidItem(text: EstimateText, sampleName: string | null): ChecklistItem {
+  if (text.fluid === null) return { tone: "open", text: "A fluid sample to enter" };
+  return sampleName === null
+    ? { tone: "warning", text: "Separator test typed by hand; no sample stands behind it" }
+    : { tone: "done", text: `Fluid sample ${sampleName}` };
+}
+
+function sourcesItem(text: EstimateText): ChecklistItem {
+  const missing = inputNames.filter((name) => text.inputs[name].source.trim() === "");
+  if (missing.length === 0) return { tone: "done", text: "Every input says where it comes from" };
+  const which = missing.length <= 3 ? `: ${labels(missing)}` : "";
+  return {
+    tone: "warning",
+    text: `${capital(inWords(missing.length))} ${missing.length === 1 ? "input does" : "inputs do"} not say where ${missing.length === 1 ? "it comes" : "they come"} from${which}`,
+  };
+}
+
+function warningsItem(warnings: readonly Warning[]): ChecklistItem {
+  if (warnings.length === 0) return { tone: "done", text: "No warning" };
+  return {
+    tone: "warning",
+    text: `${capital(inWords(warnings.length))} ${warnings.length === 1 ? "warning" : "warnings"} that a reviewer will ask about`,
+  };
+}
+
+function runItem(trials: number | null): ChecklistItem {
+  return trials === null
+    ? { tone: "warning", text: "Not run in full yet; submitting runs it" }
+    : { tone: "done", text: `Run with ${trials.toLocaleString("en-US")} trials` };
+}

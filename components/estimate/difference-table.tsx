@@ -1,0 +1,120 @@
+import type { Warning } from "@/analytics/warnings";
+import { RangeMark } from "@/components/charts/range-mark";
+import { scaleFor } from "@/components/charts/scale";
+import { formatPercent, fractionDigits } from "@/components/ui/format";
+import { Icon } from "@/components/ui/icon";
+import { FigureCell, FolioCell, LedgerTable } from "@/components/ui/table";
+import { Unit } from "@/components/ui/text";
+import type { InputDifference } from "./differences";
+import { inputCatalogue, inputOfPath, lineOf } from "./input-catalogue";
+
+/** Inputs before over now; each row scales itself. */
+export function DifferenceTable({
+  differences,
+  warnings,
+}: {
+  differences: readonly InputDifference[];
+  warnings: readonly Warning[];
+}) {
+  return (
+    <LedgerTable caption="Inputs against the approved revision" density="change" framed>
+      <thead>
+        <tr>
+          <FolioCell heading />
+          <th scope="col">Input</th>
+          {["P90", "P50", "P10"].map((level) => (
+            <th key={level} scope="col" className="right">
+              {level}
+            </th>
+          ))}
+          <th scope="col" className="mark">
+            P90 to P10
+          </th>
+          <th scope="col" className="right">
+            P50 moves
+          </th>
+        </tr>
+      </thead>
+      <tbody>
+        {differences.map((difference) => (
+          <DifferenceRow
+            key={difference.name}
+            difference={difference}
+            warning={warnings.find(({ input }) => inputOfPath(input) === difference.name)}
+          />
+        ))}
+      </tbody>
+    </LedgerTable>
+  );
+}
+
+function DifferenceRow({
+  difference,
+  warning,
+}: {
+  difference: InputDifference;
+  warning: Warning | undefined;
+}) {
+  const { name, now, before, medianChange, shapeChanged, isSame, source } = difference;
+  const about = inputCatalogue[name];
+  const scale = scaleFor([now.p90, now.p10, before?.p90, before?.p10], {
+    kind: "linear",
+    fromZero: false,
+    pad: 0.14,
+  });
+  const digits = fractionDigits([now.p90, now.p50, now.p10, before?.p50]);
+  const shown = isSame ? undefined : before;
+  return (
+    <tr className={warning ? "flagged" : undefined}>
+      <td className="folio">{lineOf(name)}</td>
+      <th scope="row" className={isSame ? "wrap font-normal soft" : "wrap"}>
+        {about.label} {about.unit && <Unit>{about.unit}</Unit>}
+        <small className="block font-normal text-ink-soft">
+          {warning ? (
+            <span className="text-warning-ink">
+              <Icon name="warning" /> {warning.message}
+            </span>
+          ) : (
+            !isSame && source
+          )}
+        </small>
+      </th>
+      {(["p90", "p50", "p10"] as const).map((level) => (
+        <FigureCell
+          key={level}
+          value={now[level]}
+          before={shown ? shown[level] : undefined}
+          soft={isSame}
+          fraction={digits}
+        />
+      ))}
+      <td className="mark">
+        {now.p90 === now.p10 ? (
+          <span className="no-mark">One value</span>
+        ) : (
+          <RangeMark
+            name={about.label}
+            range={now}
+            before={shown ?? null}
+            unit={about.unit || undefined}
+            scale={scale}
+            tone={isSame ? "soft" : "ink"}
+            gridLines={false}
+          />
+        )}
+      </td>
+      <td className={isSame ? "right soft" : "right strong"}>
+        {isSame
+          ? "same"
+          : medianChange === null
+            ? "new"
+            : Math.abs(medianChange) < 0.0005 && shapeChanged
+              ? "shape"
+              : formatPercent(medianChange, {
+                  signed: true,
+                  decimals: Math.abs(medianChange) < 0.1 ? 1 : 0,
+                })}
+      </td>
+    </tr>
+  );
+}
