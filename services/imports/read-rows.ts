@@ -60,18 +60,52 @@ class EarlierRows {
   }
 }
 
-/** Reads every row of a table; a row that contradicts an earlier good one is bad. */
+/** A field's data may stand in any of its rows: what a row leaves blank is taken from the others. */
+function shareFieldData(rows: readonly ReservoirRow[]): ReservoirRow[] {
+  const shared = new Map<string, RowFieldData>();
+  for (const { field, fieldData } of rows) {
+    const known = shared.get(nameKey(field)) ?? fieldData;
+    shared.set(nameKey(field), filled(known, fieldData));
+  }
+  return rows.map((row) => ({
+    ...row,
+    fieldData: filled(row.fieldData, shared.get(nameKey(row.field)) ?? row.fieldData),
+  }));
+}
+
+function filled(own: RowFieldData, other: RowFieldData): RowFieldData {
+  return {
+    operator: own.operator ?? other.operator,
+    workingInterest: own.workingInterest ?? other.workingInterest,
+    netRevenueInterest: own.netRevenueInterest ?? other.netRevenueInterest,
+    prmsClass: own.prmsClass ?? other.prmsClass,
+    prmsSubClass: own.prmsSubClass ?? other.prmsSubClass,
+    chanceOfCommerciality: own.chanceOfCommerciality ?? other.chanceOfCommerciality,
+  };
+}
+
+/**
+ * Reads every row of a table; a row that contradicts an earlier good one is bad.
+ *
+ * @param today  `YYYY-MM-DD`; a sample cannot be of a later day
+ */
 export function readRows(table: Table, today: string): ReadRow[] {
   const earlier = new EarlierRows();
-  return table.rows.map((tableRow) => {
-    const read = readRow(tableRow, table.units, today);
-    if (read.kind === "bad") return read;
-    const problems = earlier.conflicts(read.row);
+  const read = table.rows.map((tableRow): ReadRow => {
+    const own = readRow(tableRow, table.units, today);
+    if (own.kind === "bad") return own;
+    const problems = earlier.conflicts(own.row);
     if (problems.length > 0) {
-      const { line, basin, field, reservoir } = read.row;
+      const { line, basin, field, reservoir } = own.row;
       return { kind: "bad", row: { line, basin, field, reservoir, problems } };
     }
-    earlier.add(read.row);
-    return read;
+    earlier.add(own.row);
+    return own;
+  });
+  const good = shareFieldData(read.flatMap((entry) => (entry.kind === "good" ? [entry.row] : [])));
+  const byLine = new Map(good.map((row) => [row.line, row]));
+  return read.map((entry) => {
+    const row = entry.kind === "good" ? byLine.get(entry.row.line) : undefined;
+    return row ? { kind: "good", row } : entry;
   });
 }
