@@ -9,7 +9,7 @@ import path from "node:path";
 import process from "node:process";
 import { pathToFileURL } from "node:url";
 import { say, sayFailure, seconds } from "./lib/console-output.mjs";
-import { demoState, emptyDatabase, markDemoFinished, markDemoStarted } from "./lib/demo-load";
+import { type DemoLoad, emptyDatabase, withDemoLoad } from "./lib/demo-load";
 import { loadSettings } from "./lib/dotenv.mjs";
 import { Failure } from "./lib/failure.mjs";
 import { withMigrations } from "./lib/migrations";
@@ -19,21 +19,23 @@ async function main(args: string[]): Promise<void> {
   loadSettings();
   const url = process.env.DATABASE_URL;
   if (!url) throw new Failure("DATABASE_URL is not set.", "See .env.example.");
-  const state = args.includes("--demo") ? await demoState(url) : "own-data";
-  if (state === "cut-short") {
-    say("The last load of the demo was cut short; starting it afresh");
-    await emptyDatabase(url);
-    await withMigrations(url, (migrations) => migrations.up());
-  }
-  const seeders: (() => Promise<void>)[] = referenceSeeders();
-  if (state === "empty" || state === "cut-short") seeders.push(() => loadDemo(url));
-  // The second start of an installation ends here, without loading the product's code.
-  if (seeders.length === 0) return;
-  try {
-    for (const seed of seeders) await seed();
-  } finally {
-    await disconnect();
-  }
+  await withDemoLoad(url, async (load) => {
+    const state = args.includes("--demo") ? await load.state() : "own-data";
+    if (state === "cut-short") {
+      say("The last load of the demo was cut short; starting it afresh");
+      await emptyDatabase(url);
+      await withMigrations(url, (migrations) => migrations.up());
+    }
+    const seeders = referenceSeeders();
+    if (state === "empty" || state === "cut-short") seeders.push(() => loadDemo(load));
+    // The second start of an installation ends here, without loading the product's code.
+    if (seeders.length === 0) return;
+    try {
+      for (const seed of seeders) await seed();
+    } finally {
+      await disconnect();
+    }
+  });
 }
 
 /** Every seeders/…-reference-….ts, in the order of its name. */
@@ -48,12 +50,12 @@ function referenceSeeders(): (() => Promise<void>)[] {
   });
 }
 
-async function loadDemo(url: string): Promise<void> {
+async function loadDemo(load: DemoLoad): Promise<void> {
   const { seedDemo } = await import("../seeders/demo");
   const started = Date.now();
-  await markDemoStarted(url);
+  await load.markStarted();
   await seedDemo();
-  await markDemoFinished(url);
+  await load.markFinished();
   say(`Demo loaded in ${seconds(Date.now() - started)}`);
 }
 

@@ -48,8 +48,6 @@ async function main() {
 
   const hadCluster = await recover();
   if (!(await isPortFree(port, host))) throw portTakenFailure(port, command);
-  if (!(await installDependencies())) say("Packages are up to date");
-
   const group = new ProcessGroup({
     recordFile: runRecordFile(),
     logFolder: dataPath("logs"),
@@ -61,6 +59,7 @@ async function main() {
     () => group.stop(),
   );
 
+  if (!(await installDependencies())) say("Packages are up to date");
   const { env, standIns, mailPage } = await settings({ address });
   const checked = await checkSettings(env);
   const isPrivate = !env.DATABASE_URL;

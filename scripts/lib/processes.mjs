@@ -6,6 +6,7 @@ import { say } from "./console-output.mjs";
 import { failureFromOutput } from "./failure.mjs";
 import { dataPath, readJsonIfAny, root, writeFileAtomically } from "./paths.mjs";
 import { identify, isSameProcess } from "./process-identity.mjs";
+import { observeRuns } from "./run.mjs";
 
 /**
  * The processes that one command started. Each runs in a process group of its own, so that Ctrl-C
@@ -47,6 +48,11 @@ export class ProcessGroup {
     };
     fs.mkdirSync(logFolder, { recursive: true, mode: 0o700 });
     this.#write();
+    observeRuns((event, name, pid) => {
+      this.#record.children = this.#record.children.filter((child) => child.pid !== pid);
+      if (event === "started") this.#record.children.push({ name, ...identify(pid) });
+      this.#write();
+    });
   }
 
   /** Remember that this run started the database cluster, and so has to stop it. */
@@ -113,6 +119,7 @@ export class ProcessGroup {
 
   /** Remove the record, when nothing of this run is left. */
   forget() {
+    observeRuns(() => undefined);
     if (this.#recordFile !== null) fs.rmSync(this.#recordFile, { force: true });
   }
 

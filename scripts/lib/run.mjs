@@ -4,9 +4,25 @@ import fs from "node:fs";
 /** Programs that run at this moment, so that a signal to us reaches them too. */
 const running = new Set();
 
-/** End every program that `run` waits for. */
+/** Told of each program that starts or ends, so that it can be found after a kill -9. */
+let observer = () => undefined;
+
+/**
+ * @param {(event: "started" | "ended", command: string, pid: number) => void} callback
+ */
+export function observeRuns(callback) {
+  observer = callback;
+}
+
+/** End every program that `run` waits for, with what it has started. */
 export function stopRunning() {
-  for (const child of running) child.kill("SIGTERM");
+  for (const child of running) {
+    try {
+      process.kill(-child.pid, "SIGTERM");
+    } catch {
+      // It has just ended by itself.
+    }
+  }
 }
 
 /**
@@ -20,18 +36,19 @@ export function stopRunning() {
  * @param {NodeJS.ProcessEnv} [options.env]
  * @param {(line: string) => void} [options.onLine] called with each line as it is printed
  * @param {boolean} [options.inherit] let it print straight to this terminal; nothing is collected
- * @param {AbortSignal} [options.signal] ends the program when aborted
  * @returns {Promise<{ code: number, output: string, stdout: string }>} code 127: no such program
  */
-export function run(command, args, { cwd, env, onLine, inherit = false, signal } = {}) {
+export function run(command, args, { cwd, env, onLine, inherit = false } = {}) {
   return new Promise((resolve, reject) => {
     const child = spawn(command, args, {
       cwd,
       env: env ?? process.env,
       stdio: inherit ? ["ignore", "inherit", "inherit"] : ["ignore", "pipe", "pipe"],
-      signal,
+      // A group of its own, so that it ends together with what it has started.
+      detached: true,
     });
     running.add(child);
+    if (child.pid !== undefined) observer("started", command, child.pid);
     let output = "";
     let stdout = "";
     const take = (chunk) => {
@@ -51,6 +68,7 @@ export function run(command, args, { cwd, env, onLine, inherit = false, signal }
     });
     child.on("close", (code) => {
       running.delete(child);
+      observer("ended", command, child.pid);
       resolve({ code: code ?? 128, output, stdout });
     });
   });
