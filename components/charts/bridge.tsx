@@ -15,8 +15,6 @@ export interface BridgeProps {
   steps: readonly BridgeStep[];
   to: { label: string; value: number };
   height?: number;
-  /** decimals of the values; three significant digits unless told otherwise */
-  decimals?: number;
 }
 
 interface Bar {
@@ -29,7 +27,12 @@ interface Bar {
   text: string;
 }
 
-function barsOf({ from, steps, to, decimals }: BridgeProps): Bar[] {
+/** The same decimals for every bar, so that what is printed adds up as drawn: "5,560 +245 −58". */
+const decimalsFor = (total: number) =>
+  Math.min(3, Math.max(0, 2 - Math.floor(Math.log10(Math.abs(total) || 1))));
+
+function barsOf({ from, steps, to }: BridgeProps): Bar[] {
+  const decimals = decimalsFor(Math.max(Math.abs(from.value), Math.abs(to.value)));
   const end = (label: string, value: number): Bar => ({
     label,
     kind: "end",
@@ -67,27 +70,23 @@ function bridgeScale(bars: readonly Bar[]): Scale {
 
 /** What moved a total from one round to the next. A fall is a hollow bar and a minus sign, never red. */
 export function Bridge(props: BridgeProps) {
-  const { quantity, from, to, steps, height = 250, decimals } = props;
+  const { quantity, height = 250 } = props;
   const bars = barsOf(props);
   const scale = bridgeScale(bars);
   const start = scale.domain[0];
   const yOf = (value: number) => 100 - positionOn(scale, value);
   const slot = 100 / bars.length;
   const inset = slot * 0.2;
-  const spoken = steps.map(
-    ({ label, change }) => `${label} ${formatFigure(change, { signed: true, decimals })}`,
-  );
+  const spoken = bars.map(({ label, text }) => `${label} ${text}`).join(", ");
 
   return (
     <>
       <div className="phone:hidden">
         <Plot
-          label={`Bridge of ${quantity}: ${from.label} ${formatFigure(from.value)}, ${spoken.join(", ")}, ${to.label} ${formatFigure(to.value)}`}
+          label={`Bridge of ${quantity}: ${spoken}`}
           height={height}
           yTitle={
-            start === 0
-              ? quantity
-              : `${quantity} (axis starts at ${formatFigure(start, { decimals: 0 })})`
+            start === 0 ? quantity : `${quantity} (axis starts at ${ticksOf(scale, 5)[0].label})`
           }
           yTicks={ticksOf(scale, 5).map((tick) => ({ ...tick, position: 100 - tick.position }))}
           xTicks={bars.map(({ label }, index) => ({

@@ -10,6 +10,7 @@ export interface PlotLine {
   dashed?: boolean;
   /** where the label stands, as a share of the points; the end unless told otherwise */
   labelAt?: number;
+  labelSide?: "above" | "below";
 }
 
 export interface LinePlotProps {
@@ -116,9 +117,9 @@ export function LinePlot({
             <PlotLabel
               x={xOf(point.x)}
               y={yOf(point.y)}
-              anchor={share > 0.8 ? "end" : "start"}
-              dx={share > 0.8 ? -4 : 8}
-              dy={-10}
+              anchor={share > 0.8 ? "end" : share > 0.2 ? "middle" : "start"}
+              dx={share > 0.8 ? -4 : share > 0.2 ? 0 : 8}
+              dy={line.labelSide === "below" ? 12 : -12}
               toned
             >
               {line.label}
@@ -164,5 +165,5 @@ function zoneBox({ axis, from, to }: Zone, xOf: Place, yOf: Place) {
 function zoneLabel({ axis, from, to }: Zone, xOf: Place, yOf: Place) {
   return axis === "x"
     ? { x: (xOf(from) + xOf(to)) / 2, y: 4, anchor: "middle" as const }
-    : { x: 100, y: (yOf(from) + yOf(to)) / 2, anchor: "end" as const, dx: -6 };
+    : { x: 0, y: (yOf(from) + yOf(to)) / 2, anchor: "start" as const, dx: 6 };
 }

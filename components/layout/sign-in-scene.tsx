@@ -64,7 +64,7 @@ export function SignInScene() {
           <text className="meaning" x="204" y="780">
             at least, 9 in 10
           </text>
-          <text className="meaning" x="366" y="780">
+          <text className="meaning" x="350" y="780">
             even odds
           </text>
           <text className="meaning" x="588" y="780">
