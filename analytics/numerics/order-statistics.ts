@@ -8,6 +8,8 @@
 const HISTOGRAM_BINS = 40;
 /** Keys are stored in 16 bits. */
 const MAXIMUM_BINS = 65_000;
+/** Quantiles that can be asked for in one pass. */
+const MAXIMUM_QUANTILES = 256;
 /** Below this length an insertion sort beats the built-in sort. */
 const SHORT = 24;
 
@@ -18,6 +20,8 @@ export interface OrderWorkspace {
   readonly counts: Uint32Array;
   readonly cursors: Int32Array;
   readonly picked: Float64Array;
+  readonly binOfRank: Int32Array;
+  readonly placeOfRank: Int32Array;
   readonly low: Uint32Array;
   readonly high: Uint32Array;
   readonly half: Uint32Array;
@@ -32,6 +36,8 @@ export function createOrderWorkspace(capacity: number): OrderWorkspace {
     counts: new Uint32Array(bins + 1),
     cursors: new Int32Array(bins + 1),
     picked: new Float64Array(capacity),
+    binOfRank: new Int32Array(2 * MAXIMUM_QUANTILES),
+    placeOfRank: new Int32Array(2 * MAXIMUM_QUANTILES),
     low: new Uint32Array(RADIX),
     high: new Uint32Array(RADIX),
     half: new Uint32Array(capacity),
@@ -47,7 +53,7 @@ export interface CountedSample {
   /** with n - 1 in the denominator; 0 for a single value */
   standardDeviation: number;
   /** quantiles, in the order of the probabilities that were asked for */
-  quantiles: Float64Array;
+  quantiles: number[];
   /** counts in 40 equal bins from minimum to maximum; all in the first when the two are equal */
   histogram: number[];
 }
@@ -78,7 +84,7 @@ export function quantileSorted(
  *
  * @param values         finite numbers; not changed
  * @param count          how many of them to use, 1 to `workspace.capacity`
- * @param probabilities  ascending, each 0 to 1
+ * @param probabilities  ascending, each 0 to 1; at most 256 of them
  */
 export function countSample(
   values: ArrayLike<number>,
@@ -88,11 +94,10 @@ export function countSample(
 ): CountedSample {
   const { minimum, maximum, sum } = extremes(values, count);
   const mean = sum / count;
-  const quantiles = new Float64Array(probabilities.length);
+  const quantiles = new Array<number>(probabilities.length).fill(minimum);
   const histogram = new Array<number>(HISTOGRAM_BINS).fill(0);
   if (minimum === maximum) {
     histogram[0] = count;
-    quantiles.fill(minimum);
     return { minimum, maximum, mean: minimum, standardDeviation: 0, quantiles, histogram };
   }
   const bins = quantileBins(count);
@@ -238,14 +243,12 @@ function pickQuantiles(
   count: number,
   bins: number,
   probabilities: ArrayLike<number>,
-  { keys, counts, cursors, picked }: OrderWorkspace,
-  quantiles: Float64Array,
+  { keys, counts, cursors, picked, binOfRank, placeOfRank }: OrderWorkspace,
+  quantiles: number[],
 ): void {
   // cursors: -1 for a bin nobody needs, else where its next value goes.
   cursors.fill(-1, 0, bins);
   const ranks = probabilities.length * 2;
-  const binOf = new Int32Array(ranks);
-  const offset = new Int32Array(ranks);
   let bin = 0;
   let before = 0;
   let free = 0;
@@ -259,8 +262,8 @@ function pickQuantiles(
       cursors[bin] = free;
       free += counts[bin];
     }
-    binOf[r] = bin;
-    offset[r] = rank - before;
+    binOfRank[r] = bin;
+    placeOfRank[r] = rank - before;
   }
   for (let i = 0; i < count; i += 1) {
     const key = keys[i];
@@ -272,19 +275,19 @@ function pickQuantiles(
   }
   let sortedTo = -1;
   for (let r = 0; r < ranks; r += 1) {
-    const wanted = binOf[r];
+    const wanted = binOfRank[r];
     const end = cursors[wanted];
     const start = end - counts[wanted];
     if (wanted > sortedTo) {
       sortSegment(picked, start, end);
       sortedTo = wanted;
     }
-    offset[r] += start;
+    placeOfRank[r] += start;
   }
   for (let q = 0; q < quantiles.length; q += 1) {
     const h = (count - 1) * probabilities[q];
-    const below = picked[offset[2 * q]];
-    quantiles[q] = below + (h - Math.floor(h)) * (picked[offset[2 * q + 1]] - below);
+    const below = picked[placeOfRank[2 * q]];
+    quantiles[q] = below + (h - Math.floor(h)) * (picked[placeOfRank[2 * q + 1]] - below);
   }
 }
 

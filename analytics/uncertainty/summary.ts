@@ -87,7 +87,7 @@ export function summariseSample(
       mean: standardDeviation / Math.sqrt(count),
     },
     histogram: { low: minimum, high: maximum, counts: histogram },
-    exceedance: { values: Array.from(quantiles), probabilities: EXCEEDANCE_PROBABILITIES.slice() },
+    exceedance: { values: quantiles, probabilities: EXCEEDANCE_PROBABILITIES.slice() },
   };
 }
 
@@ -95,7 +95,7 @@ export function summariseSample(
  * sqrt(p (1 - p) / n) / f, with 1 / f the slope of the quantile function over 2 percentiles either side (5 where the
  * sample is too small for that to hold a hundred values).
  */
-function quantileError(quantiles: Float64Array, percent: number, count: number): number {
+function quantileError(quantiles: readonly number[], percent: number, count: number): number {
   const half = count >= 2500 ? 2 : 5;
   const inverseDensity =
     (quantiles[percent + half] - quantiles[percent - half]) / ((2 * half) / 100);
