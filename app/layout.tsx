@@ -10,6 +10,7 @@ import "./styles/forms.css";
 import "./styles/shell.css";
 import "./styles/sign-in.css";
 import "./styles/estimate.css";
+import "./styles/lists.css";
 import "./globals.css";
 
 export const metadata: Metadata = {

@@ -1,0 +1,67 @@
+import type { AuditEventView } from "@/app/api/v1/audit-events/schema";
+import { MISSING } from "@/components/ui/format";
+
+/** One value that an event set, as people read it. */
+export interface Change {
+  name: string;
+  /** `undefined` when there was nothing to compare with */
+  before: string | undefined;
+  after: string | undefined;
+}
+
+const LONGEST = 160;
+
+/** What an event changed, value by value; nested values by their path, long lists by their length. */
+export function changesOf({ before, after }: AuditEventView): Change[] {
+  const was = flatten(before);
+  const is = flatten(after);
+  return [...new Set([...was.keys(), ...is.keys()])]
+    .filter((name) => was.get(name) !== is.get(name))
+    .map((name) => ({
+      name: pathWords(name),
+      before: was.get(name) ?? (before === null ? undefined : MISSING),
+      after: is.get(name) ?? (after === null ? undefined : MISSING),
+    }));
+}
+
+function flatten(record: Record<string, unknown> | null): Map<string, string> {
+  const values = new Map<string, string>();
+  const walk = (value: unknown, path: string, depth: number) => {
+    if (typeof value === "object" && value !== null && !Array.isArray(value) && depth < 4) {
+      for (const [key, part] of Object.entries(value)) {
+        walk(part, path === "" ? key : `${path}.${key}`, depth + 1);
+      }
+    } else if (path !== "") values.set(path, valueWords(value));
+  };
+  walk(record, "", 0);
+  return values;
+}
+
+function valueWords(value: unknown): string {
+  if (value === null || value === undefined || value === "") return MISSING;
+  if (typeof value === "boolean") return value ? "yes" : "no";
+  if (typeof value === "number") return String(value).replace("-", "\u2212");
+  const text = typeof value === "string" ? value : JSON.stringify(value);
+  if (text.length <= LONGEST) return text;
+  return Array.isArray(value) ? `${value.length} entries` : `${text.slice(0, LONGEST)}…`;
+}
+
+/** "inputs.uncertain.netThicknessFt" -> "inputs, uncertain, net thickness ft" */
+const pathWords = (path: string) => path.split(".").map(camelWords).join(", ");
+
+const camelWords = (text: string) =>
+  text
+    .replace(/_/g, " ")
+    .replace(
+      /([a-z0-9])([A-Z])/g,
+      (_, end: string, start: string) => `${end} ${start.toLowerCase()}`,
+    );
+
+/** "estimate.approved" -> "Estimate approved"; "user.signedOutEverywhere" -> "User signed out everywhere" */
+export function actionWords(action: string): string {
+  const words = action.split(".").map(camelWords).join(" ").toLowerCase();
+  return words.charAt(0).toUpperCase() + words.slice(1);
+}
+
+/** "priceDeck" -> "Price deck" */
+export const entityWords = (entity: string) => actionWords(entity);
