@@ -25,6 +25,7 @@ export class ProblemError extends Error {
 
 export interface RequestOptions<Schema extends z.ZodType> {
   method?: "GET" | "POST" | "PATCH" | "PUT" | "DELETE";
+  /** sent as JSON, or as it is when it is a form */
   body?: unknown;
   /** version of the row that is being changed, sent as If-Match */
   version?: number;
@@ -44,6 +45,8 @@ export async function request<Schema extends z.ZodType>(
   path: string,
   { method = "GET", body, version, idempotencyKey, signal, schema }: RequestOptions<Schema>,
 ): Promise<z.output<Schema>> {
+  // The browser names a form's type itself, with the boundary it chose.
+  const isForm = body instanceof FormData;
   let response: Response;
   try {
     response = await fetch(path, {
@@ -51,11 +54,11 @@ export async function request<Schema extends z.ZodType>(
       signal,
       headers: {
         accept: "application/json",
-        ...(body !== undefined && { "content-type": "application/json" }),
+        ...(body !== undefined && !isForm && { "content-type": "application/json" }),
         ...(version !== undefined && { "if-match": `"${version}"` }),
         ...(idempotencyKey !== undefined && { "idempotency-key": idempotencyKey }),
       },
-      body: body === undefined ? undefined : JSON.stringify(body),
+      body: body === undefined || isForm ? body : JSON.stringify(body),
     });
   } catch (error) {
     if (signal?.aborted) throw error;

@@ -47,6 +47,7 @@ function sectionsOf(actor: Actor): NavItem[] {
     { href: "/fields", label: "Fields" },
     { href: "/prices", label: "Prices" },
     { href: "/review", label: "Review" },
+    ...(can(actor, "import.read") ? [{ href: "/import", label: "Import" }] : []),
     ...(can(actor, "user.read") ? [{ href: "/people", label: "People" }] : []),
     ...(can(actor, "audit.read") ? [{ href: "/audit", label: "Audit" }] : []),
   ];

@@ -36,6 +36,7 @@ export function WorkspaceFrame({
         {
           entries: [
             { label: "Profile", href: "/profile" },
+            { label: "API and tokens", href: "/api-guide" },
             { label: "Sign out", onSelect: () => void signOut({ callbackUrl: "/sign-in" }) },
           ],
         },
