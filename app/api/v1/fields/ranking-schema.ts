@@ -77,6 +77,8 @@ export const chosenPricesSchema = z.object({
   gasPerMscf: z.number().nullable(),
 });
 
+export type ChosenPricesView = z.infer<typeof chosenPricesSchema>;
+
 /** Volumes in scf (14.696 psia, 60 degF) and STB, values in the currency of the deck. */
 export const ledgerRangesSchema = z.object({
   wetGasInPlaceScf: rangeSchema,

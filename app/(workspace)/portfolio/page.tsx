@@ -1,0 +1,8 @@
+import type { Metadata } from "next";
+import { StatementPage } from "./_components/statement-page";
+
+export const metadata: Metadata = { title: "Statement of the portfolio" };
+
+export default function PortfolioPage() {
+  return <StatementPage />;
+}
