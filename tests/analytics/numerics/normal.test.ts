@@ -26,6 +26,11 @@ describe("normalQuantile", () => {
     );
   });
 
+  it("gives the 1.28155 standard deviations between P50 and P10", () => {
+    // NIST/SEMATECH e-Handbook of Statistical Methods, table of the normal distribution.
+    expect(normalQuantile(0.9)).toBeCloseTo(1.2815515655446, 13);
+  });
+
   it("undoes normalCdf", () => {
     fc.assert(
       fc.property(fc.double({ min: 1e-12, max: 1 - 1e-12, noNaN: true }), (p) => {
@@ -63,6 +68,12 @@ describe("incompleteBeta", () => {
       expect(Math.abs(incompleteBeta(x, a, b) - expected)).toBeLessThan(2e-14);
     },
   );
+
+  it("is the polynomial 1 - (1 - x)^5 - 5 x (1 - x)^4 for shapes 2 and 4", () => {
+    const x = 0.25;
+    expect(incompleteBeta(x, 2, 4)).toBeCloseTo(1 - (1 - x) ** 5 - 5 * x * (1 - x) ** 4, 14);
+    expect(incompleteBeta(x, 2, 4)).toBeCloseTo(0.3671875, 14);
+  });
 
   it("refuses an argument outside 0 to 1 and a shape that is not positive", () => {
     expect(() => incompleteBeta(1.2, 2, 3)).toThrow("needs 0 <= x <= 1");

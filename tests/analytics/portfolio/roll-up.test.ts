@@ -55,6 +55,7 @@ describe("rollUp", () => {
 
   it.each(published)(
     "adds ten lognormals with dependence $dependence as theory does",
+    { timeout: 60_000 },
     ({ dependence, p90, standardDeviation }) => {
       const { total } = rollUp(ten(50_000), { ...options, dependence });
       const summary = summariseTotal(total.vectors.condensate);

@@ -172,7 +172,7 @@ describe("compileDistribution", () => {
       .map(({ p90, ratio, kind }): Distribution => ({ kind, p90, p10: p90 * ratio })),
   );
 
-  it("has a quantile function that rises, and that cdf undoes", () => {
+  it("has a quantile function that rises, and that cdf undoes", { timeout: 60_000 }, () => {
     fc.assert(
       fc.property(anyDistribution, probability, probability, (definition, p, q) => {
         const { quantile, cdf } = compileDistribution(definition);
@@ -182,7 +182,7 @@ describe("compileDistribution", () => {
     );
   });
 
-  it("stays inside its bounds when truncated", () => {
+  it("stays inside its bounds when truncated", { timeout: 60_000 }, () => {
     fc.assert(
       fc.property(
         anyDistribution,

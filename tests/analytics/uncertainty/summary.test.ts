@@ -50,7 +50,7 @@ describe("summariseSample", () => {
     }
   });
 
-  it("covers the truth as often as one standard error should", () => {
+  it("covers the truth as often as one standard error should", { timeout: 60_000 }, () => {
     const truth = {
       p90: lognormal.quantile(0.1),
       p50: 1,

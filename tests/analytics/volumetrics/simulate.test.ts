@@ -131,61 +131,71 @@ describe("simulate", () => {
     },
   );
 
-  it("has the closed form of a product of lognormals when only those vary", () => {
-    // ln(A h phi) is normal: the means and variances of the logarithms of the three add up.
-    const fixed = constants({
-      areaAcres: 1,
-      netThicknessFt: 1,
-      porosity: 0.1,
-      waterSaturation: 0.25,
-      pressurePsia: 6500,
-      temperatureDegF: 260,
-      condensateYieldStbPerMmscf: 80,
-      gasRecovery: 0.7,
-      condensateRecovery: 0.4,
-      salesGasFraction: 0.9,
-    });
-    const one = simulate(buildInputs(fixed, { correlations: [] }), {
-      trials: 100,
-      seed: 1,
-    }).summary;
-    const perUnit = one.deterministic.wetGasInPlaceScf / 0.1;
-    const { summary: run } = simulate(
-      buildInputs(
-        {
-          ...fixed,
-          areaAcres: { kind: "lognormalP90P10", p90: 1000, p10: 4000 },
-          netThicknessFt: { kind: "lognormalP90P10", p90: 30, p10: 120 },
-          porosity: { kind: "lognormalP90P10", p90: 0.12, p10: 0.2 },
-        },
-        { correlations: [] },
-      ),
-      { trials: 40_000, seed: 3 },
-    );
-    const ranges = [
-      [1000, 4000],
-      [30, 120],
-      [0.12, 0.2],
-    ];
-    const mu = ranges.reduce((sum, [p90, p10]) => sum + Math.log(p90 * p10) / 2, Math.log(perUnit));
-    const sigma = Math.sqrt(
-      ranges.reduce((sum, [p90, p10]) => sum + (Math.log(p10 / p90) / 2.5631031310892007) ** 2, 0),
-    );
-    const closed = compileDistribution({ kind: "lognormal", mu, sigma });
-    const result = run.results.wetGasInPlaceScf;
-    const expected = { ...closed.range, mean: closed.mean };
-    for (const level of ["p90", "p50", "p10", "mean"] as const) {
-      expect(Math.abs(result[level] - expected[level])).toBeLessThan(
-        3 * result.standardErrors[level],
+  it(
+    "has the closed form of a product of lognormals when only those vary",
+    { timeout: 60_000 },
+    () => {
+      // ln(A h phi) is normal: the means and variances of the logarithms of the three add up.
+      const fixed = constants({
+        areaAcres: 1,
+        netThicknessFt: 1,
+        porosity: 0.1,
+        waterSaturation: 0.25,
+        pressurePsia: 6500,
+        temperatureDegF: 260,
+        condensateYieldStbPerMmscf: 80,
+        gasRecovery: 0.7,
+        condensateRecovery: 0.4,
+        salesGasFraction: 0.9,
+      });
+      const one = simulate(buildInputs(fixed, { correlations: [] }), {
+        trials: 100,
+        seed: 1,
+      }).summary;
+      const perUnit = one.deterministic.wetGasInPlaceScf / 0.1;
+      const { summary: run } = simulate(
+        buildInputs(
+          {
+            ...fixed,
+            areaAcres: { kind: "lognormalP90P10", p90: 1000, p10: 4000 },
+            netThicknessFt: { kind: "lognormalP90P10", p90: 30, p10: 120 },
+            porosity: { kind: "lognormalP90P10", p90: 0.12, p10: 0.2 },
+          },
+          { correlations: [] },
+        ),
+        { trials: 40_000, seed: 3 },
       );
-    }
-    // Shares of the variance of the logarithm: 0.476, 0.476 and 0.065 of what A, h and phi give together.
-    const share = (input: string) =>
-      run.drivers.wetGasInPlaceScf.find((d) => d.input === input)?.shareOfSpread;
-    expect(share("areaAcres")).toBeCloseTo(0.468, 1);
-    expect(share("porosity")).toBeCloseTo(0.064, 1);
-    expect(share("gasRecovery")).toBe(0);
-  });
+      const ranges = [
+        [1000, 4000],
+        [30, 120],
+        [0.12, 0.2],
+      ];
+      const mu = ranges.reduce(
+        (sum, [p90, p10]) => sum + Math.log(p90 * p10) / 2,
+        Math.log(perUnit),
+      );
+      const sigma = Math.sqrt(
+        ranges.reduce(
+          (sum, [p90, p10]) => sum + (Math.log(p10 / p90) / 2.5631031310892007) ** 2,
+          0,
+        ),
+      );
+      const closed = compileDistribution({ kind: "lognormal", mu, sigma });
+      const result = run.results.wetGasInPlaceScf;
+      const expected = { ...closed.range, mean: closed.mean };
+      for (const level of ["p90", "p50", "p10", "mean"] as const) {
+        expect(Math.abs(result[level] - expected[level])).toBeLessThan(
+          3 * result.standardErrors[level],
+        );
+      }
+      // Shares of the variance of the logarithm: 0.476, 0.476 and 0.065 of what A, h and phi give together.
+      const share = (input: string) =>
+        run.drivers.wetGasInPlaceScf.find((d) => d.input === input)?.shareOfSpread;
+      expect(share("areaAcres")).toBeCloseTo(0.468, 1);
+      expect(share("porosity")).toBeCloseTo(0.064, 1);
+      expect(share("gasRecovery")).toBe(0);
+    },
+  );
 
   it("gives the sampled inputs the percentiles of their distributions", () => {
     for (const name of inputNames) {
@@ -249,20 +259,25 @@ describe("simulate", () => {
     expect(after.inputRanks.areaAcres).toEqual(before.inputRanks.areaAcres);
   });
 
-  it("states standard errors that hold a long run's percentiles, on the safe side", () => {
-    const truth = simulate(inputs, { trials: 200_000, seed: 1 }).summary.results
-      .condensateRecoverableStb;
-    let squares = 0;
-    const seeds = 12;
-    for (let seed = 100; seed < 100 + seeds; seed += 1) {
-      const run = simulate(inputs, { trials: 2000, seed }).summary.results.condensateRecoverableStb;
-      for (const level of ["p90", "p50", "p10", "mean"] as const) {
-        squares += ((run[level] - truth[level]) / run.standardErrors[level]) ** 2;
+  it(
+    "states standard errors that hold a long run's percentiles, on the safe side",
+    { timeout: 60_000 },
+    () => {
+      const truth = simulate(inputs, { trials: 100_000, seed: 1 }).summary.results
+        .condensateRecoverableStb;
+      let squares = 0;
+      const seeds = 12;
+      for (let seed = 100; seed < 100 + seeds; seed += 1) {
+        const run = simulate(inputs, { trials: 2000, seed }).summary.results
+          .condensateRecoverableStb;
+        for (const level of ["p90", "p50", "p10", "mean"] as const) {
+          squares += ((run[level] - truth[level]) / run.standardErrors[level]) ** 2;
+        }
       }
-    }
-    // Independent trials would give 1; a Latin hypercube gives less, never much more.
-    expect(squares / (4 * seeds)).toBeLessThan(1.2);
-  });
+      // Independent trials would give 1; a Latin hypercube gives less, never much more.
+      expect(squares / (4 * seeds)).toBeLessThan(1.2);
+    },
+  );
 
   it.each([
     [

@@ -14,13 +14,17 @@ beforeAll(() => {
 afterAll(closePool);
 
 describe("runSimulation", () => {
-  it("gives the bytes that the calling thread would have given, run after run", async () => {
-    const inputs = buildInputs();
-    for (const trials of [500, 800, 500]) {
-      const there = await runSimulation(inputs, { trials, seed: 3 });
-      expect(there).toEqual(simulate(inputs, { trials, seed: 3 }));
-    }
-  });
+  it(
+    "gives the bytes that the calling thread would have given, run after run",
+    { timeout: 60_000 },
+    async () => {
+      const inputs = buildInputs();
+      for (const trials of [500, 800, 500]) {
+        const there = await runSimulation(inputs, { trials, seed: 3 });
+        expect(there).toEqual(simulate(inputs, { trials, seed: 3 }));
+      }
+    },
+  );
 
   it("brings an impossible input back as the error it was", async () => {
     const inputs = buildInputs({ porosity: { kind: "constant", value: 0.6 } });
