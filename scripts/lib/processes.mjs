@@ -1,5 +1,6 @@
 import { spawn } from "node:child_process";
 import fs from "node:fs";
+import path from "node:path";
 import process from "node:process";
 import { setTimeout as sleep } from "node:timers/promises";
 import { say } from "./console-output.mjs";
@@ -48,9 +49,11 @@ export class ProcessGroup {
     };
     fs.mkdirSync(logFolder, { recursive: true, mode: 0o700 });
     this.#write();
-    observeRuns((event, name, pid) => {
+    observeRuns((event, program, pid) => {
       this.#record.children = this.#record.children.filter((child) => child.pid !== pid);
-      if (event === "started") this.#record.children.push({ name, ...identify(pid) });
+      if (event === "started") {
+        this.#record.children.push({ name: path.basename(program), ...identify(pid) });
+      }
       this.#write();
     });
   }
