@@ -18,6 +18,12 @@ export async function createAuditEvent(
   await AuditEvent.create(values, options);
 }
 
+/** By the moment first: work that is told afterwards (a history that is loaded) stands where it belongs. */
+const newestFirst: [string, string][] = [
+  ["at", "DESC"],
+  ["id", "DESC"],
+];
+
 const withActor = [{ model: User, as: "actor", attributes: ["id", "name"] }];
 
 function conditionsOf({ entity, entityId, actorId, from, to }: AuditFilter) {
@@ -37,7 +43,7 @@ export async function listAuditEventsPage(
   return AuditEvent.findAndCountAll({
     where: conditionsOf(filter),
     include: withActor,
-    order: [["id", "DESC"]],
+    order: newestFirst,
     ...page,
   });
 }
@@ -50,16 +56,17 @@ export async function* walkAuditEvents(
   filter: AuditFilter,
   batchSize: number,
 ): AsyncGenerator<AuditEvent> {
-  let below: string | null = null;
+  let below: WhereOptions<AuditEvent> = {};
   for (;;) {
-    const batch: AuditEvent[] = await AuditEvent.findAll({
-      where: { [Op.and]: [conditionsOf(filter), below === null ? {} : { id: { [Op.lt]: below } }] },
+    const batch = await AuditEvent.findAll({
+      where: { [Op.and]: [conditionsOf(filter), below] },
       include: withActor,
-      order: [["id", "DESC"]],
+      order: newestFirst,
       limit: batchSize,
     });
     yield* batch;
     if (batch.length < batchSize) return;
-    below = batch[batch.length - 1].id;
+    const { at, id } = batch[batch.length - 1];
+    below = { [Op.or]: [{ at: { [Op.lt]: at } }, { at, id: { [Op.lt]: id } }] };
   }
 }

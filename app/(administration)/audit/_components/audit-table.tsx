@@ -58,7 +58,7 @@ export function AuditTable({ events, isOld, onlyRecord }: AuditTableProps) {
   );
 }
 
-const SHOWN = 4;
+const SHOWN = 3;
 
 /** The first few values in sight; the rest of a long event (a whole set of inputs) behind a word. */
 function Changes({ changes }: { changes: readonly Change[] }) {

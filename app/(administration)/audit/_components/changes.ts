@@ -4,7 +4,7 @@ import { MISSING } from "@/components/ui/format";
 /** One value that an event set, as people read it. */
 export interface Change {
   name: string;
-  /** `undefined` when there was nothing to compare with */
+  /** `undefined` when the event says nothing of it */
   before: string | undefined;
   after: string | undefined;
 }
@@ -17,11 +17,16 @@ export function changesOf({ before, after }: AuditEventView): Change[] {
   const is = flatten(after);
   return [...new Set([...was.keys(), ...is.keys()])]
     .filter((name) => was.get(name) !== is.get(name))
-    .map((name) => ({
-      name: pathWords(name),
-      before: was.get(name) ?? (before === null ? undefined : MISSING),
-      after: is.get(name) ?? (after === null ? undefined : MISSING),
-    }));
+    .sort((a, b) => weightOf(a) - weightOf(b))
+    .map((name) => ({ name: pathWords(name), before: was.get(name), after: is.get(name) }));
+}
+
+/** What tells most stands first; the rest keeps its order. */
+const telling = ["name", "state", "role", "active", "note"];
+
+function weightOf(path: string): number {
+  const place = telling.indexOf(path);
+  return place < 0 ? telling.length + path.split(".").length : place;
 }
 
 function flatten(record: Record<string, unknown> | null): Map<string, string> {

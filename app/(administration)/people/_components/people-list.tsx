@@ -2,6 +2,7 @@
 
 import { useState } from "react";
 import { errorWords } from "@/app/_client/request";
+import { countWord } from "@/app/_client/words";
 import type { UserView } from "@/app/api/v1/users/schema";
 import { Button } from "@/components/ui/button";
 import { SearchField } from "@/components/ui/field";
@@ -105,6 +106,7 @@ function titleOf(people: readonly UserView[] | undefined): string {
   if (!people) return "People";
   const active = people.filter((person) => person.active).length;
   const inactive = people.length - active;
-  const head = active === 1 ? "One person has an account" : `${active} people have an account`;
+  const head =
+    active === 1 ? "One person has an account" : `${countWord(active)} people have an account`;
   return inactive === 0 ? head : `${head}, ${inactive} ${inactive === 1 ? "is" : "are"} inactive`;
 }

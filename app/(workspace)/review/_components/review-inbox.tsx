@@ -1,6 +1,7 @@
 "use client";
 
 import { errorWords } from "@/app/_client/request";
+import { countWord } from "@/app/_client/words";
 import { useSession } from "@/app/_client/use-session";
 import { useBasis } from "@/components/basis/use-basis";
 import { Button, LinkButton } from "@/components/ui/button";
@@ -80,7 +81,7 @@ export function ReviewInbox() {
             title={
               returned.length === 1
                 ? "One went back to its engineer"
-                : `${returned.length} went back to their engineers`
+                : `${countWord(returned.length)} went back to their engineers`
             }
             note={`Condensate to the tank, ${unit}. They come back here when they are submitted again.`}
           >

@@ -1,4 +1,5 @@
 import { DateTime } from "luxon";
+import { countWord } from "@/app/_client/words";
 import type { ReviewItemView } from "@/app/api/v1/review/schema";
 
 /** "today", "yesterday", "6 days": how long something has waited, in calendar days of UTC. */
@@ -13,11 +14,6 @@ function daysBetween(since: string, now: Date): number {
   const to = DateTime.fromJSDate(now, { zone: "utc" }).startOf("day");
   return Math.max(0, Math.round(to.diff(from, "days").days));
 }
-
-const numbers = ["No", "One", "Two", "Three", "Four", "Five", "Six", "Seven", "Eight", "Nine"];
-
-/** 3 -> "Three", 24 -> "24": for the beginning of a sentence. */
-export const countWord = (count: number) => numbers[count] ?? String(count);
 
 /** The finding over the inbox. */
 export function inboxTitle(waiting: readonly ReviewItemView[], now: Date): string {
