@@ -98,6 +98,9 @@ function copyText(node: Text, origin: DOMRect) {
     "font-weight": style.fontWeight,
     "font-style": style.fontStyle,
     "xml:space": "preserve",
+    // Opened where our faces are not installed, a word keeps its width and meets no neighbour.
+    textLength: box.width,
+    lengthAdjust: "spacingAndGlyphs",
   });
   text.textContent = content;
   return text;
@@ -108,18 +111,23 @@ const isHidden = (element: Element) => {
   return style.display === "none" || style.visibility === "hidden" || element.matches(".sr-only");
 };
 
+/** Room for the titles of axes, which stand outside the drawing's box [px]. */
+const MARGIN = 20;
+
 /** The figure inside `root` as the text of an svg file. */
 export function svgOf(root: HTMLElement, title: string): string {
   const origin = root.getBoundingClientRect();
   const drawing = create("svg", {
     xmlns: SVG,
-    viewBox: `0 0 ${origin.width} ${origin.height}`,
-    width: origin.width,
-    height: origin.height,
+    viewBox: `${-MARGIN} ${-MARGIN} ${origin.width + 2 * MARGIN} ${origin.height + 2 * MARGIN}`,
+    width: origin.width + 2 * MARGIN,
+    height: origin.height + 2 * MARGIN,
   });
   const name = create("title", {});
   name.textContent = title;
   const ground = create("rect", {
+    x: -MARGIN,
+    y: -MARGIN,
     width: "100%",
     height: "100%",
     fill: getComputedStyle(document.body).backgroundColor,

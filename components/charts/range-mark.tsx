@@ -30,7 +30,7 @@ export interface RangeMarkProps {
   ticks?: number;
   /** prints P90, P50 and P10 under their positions; on for large marks */
   values?: boolean;
-  /** opens the tooltip from the right edge, near the screen's right side */
+  /** the edge the tooltip lines up with; a row's opens leftwards, because marks stand at the right of a table */
   tipSide?: "left" | "right";
   format?: (value: number) => string;
 }
@@ -72,7 +72,7 @@ export function RangeMark({
   gridLines = size === "row",
   ticks,
   values = size === "large",
-  tipSide = "left",
+  tipSide = size === "row" ? "right" : "left",
   format = formatPlain,
 }: RangeMarkProps) {
   if (!range || ![range.p90, range.p50, range.p10].every(Number.isFinite)) {

@@ -23,7 +23,7 @@ export interface BasisStripProps {
 }
 
 const words = {
-  case: { low: "low case", mid: "mid case", high: "high case" },
+  case: { low: "Low case", mid: "Mid case", high: "High case" },
   estimates: { approved: "Approved only", latest: "Drafts too" },
   interest: { gross: "Gross, 100 %", net: "Net to company" },
   risk: { unrisked: "Unrisked", risked: "Risked" },
@@ -59,7 +59,7 @@ export function BasisStrip({ decks, fixed = {} }: BasisStripProps) {
   const latest = decks[0];
   const deck = basis.deck === "latest" ? latest : decks.find(({ id }) => id === basis.deck);
   const deckWords = deck ? `${deck.name}, ${formatDate(deck.asOf)}` : "No published deck";
-  const caseWords = basis.case === "mid" ? "" : `, ${words.case[basis.case]}`;
+  const caseWords = basis.case === "mid" ? "" : `, ${words.case[basis.case].toLowerCase()}`;
 
   const deckGroup: MenuGroup = {
     heading: "Price deck",

@@ -7,6 +7,7 @@ export function csvOf(header: readonly string[], rows: readonly (readonly unknow
     {
       header: true,
       columns: [...header],
+      record_delimiter: "windows",
       // Only text can be a formula: a negative number stays a number.
       cast: { string: (text) => (/^[=+\-@\t\r]/.test(text) ? `'${text}` : text) },
     },
