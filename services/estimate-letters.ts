@@ -7,16 +7,19 @@ import { sendLetter } from "./mail/send";
 import { estimateDecidedLetter, estimateSubmittedLetter } from "./mail/templates/estimate-letters";
 import { can, type Actor } from "./policy";
 
-/** @param estimate  with its reservoir and field */
-function referenceTo(estimate: Estimate) {
+/**
+ * @param estimate  with its reservoir and field
+ * @param tab  of the reservoir's pages; the first one when not given
+ */
+function referenceTo(estimate: Estimate, tab = "") {
   const { reservoir, revision } = estimate;
   if (!reservoir?.field) throw new Error("the estimate was loaded without its place");
-  const path = `/fields/${reservoir.field.slug}/${reservoir.slug}`;
+  const path = `/fields/${reservoir.field.slug}/${reservoir.slug}${tab}`;
   return {
     reservoirName: reservoir.name,
     fieldName: reservoir.field.name,
     revision,
-    url: new URL(`${path}?revision=${revision}`, env().NEXTAUTH_URL).href,
+    url: new URL(path, env().NEXTAUTH_URL).href,
   };
 }
 
@@ -31,7 +34,7 @@ export async function tellReviewers(
   for (const reviewer of reviewers.filter((person) => can(person, "estimate.approve", estimate))) {
     await sendLetter(
       reviewer.email,
-      estimateSubmittedLetter(reviewer.name, actor.name, referenceTo(estimate)),
+      estimateSubmittedLetter(reviewer.name, actor.name, referenceTo(estimate, "/compare")),
       { transaction },
     );
   }

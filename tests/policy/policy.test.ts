@@ -82,11 +82,11 @@ describe("policy", () => {
     expect(can(actor(role), action)).toBe(allowed);
   });
 
-  it("lets an executive change nothing at all", () => {
+  it("lets an executive change nothing but their own password", () => {
     const writes = allowedActions(actor("executive")).filter(
       (action) => !/\.(read|run|manage)$/.test(action),
     );
-    expect(writes).toEqual(["export.create"]);
+    expect(writes).toEqual(["password.change", "export.create"]);
   });
 });
 
