@@ -39,8 +39,6 @@ async function connect({ supervise }: { supervise: boolean }): Promise<PgBoss> {
 export interface EnqueueOptions {
   /** Write the job in this transaction, so that it exists only if the change does. */
   transaction?: Transaction;
-  /** While a job with this key waits, another one is not added. */
-  singletonKey?: string;
   /** Not before this many seconds from now. */
   delaySeconds?: number;
 }
@@ -48,21 +46,23 @@ export interface EnqueueOptions {
 /**
  * Ask for a piece of work.
  *
- * @returns the job's id, or null when one with the same singleton key is already waiting
+ * @returns the job's id
  * @throws {z.ZodError} when the payload does not have the job's shape
  */
 export async function enqueue<Name extends JobName>(
   name: Name,
   payload: JobPayload<Name>,
-  { transaction, singletonKey, delaySeconds }: EnqueueOptions = {},
-): Promise<string | null> {
+  { transaction, delaySeconds }: EnqueueOptions = {},
+): Promise<string> {
   const data = jobs[name].payload.parse(payload);
   const boss = await queue();
-  return boss.send(name, data, {
-    ...(singletonKey === undefined ? {} : { singletonKey }),
+  const id = await boss.send(name, data, {
     ...(delaySeconds === undefined ? {} : { startAfter: delaySeconds }),
     ...(transaction === undefined ? {} : { db: within(transaction) }),
   });
+  // pg-boss answers null for a job that a throttle dropped, and ours have none.
+  if (id === null) throw new Error(`The queue did not take the job ${name}`);
+  return id;
 }
 
 /** Lets the queue write through a transaction of ours. */

@@ -54,16 +54,14 @@ describe("enqueue", () => {
     await expect(enqueue("send-mail", wrong)).rejects.toThrow(/email/i);
   });
 
-  it("adds a job with a singleton key once", async () => {
+  it("leaves a delayed job waiting", async () => {
     const message = {
       to: "ruth.calderwyn@quillmere.example",
-      subject: "Once",
+      subject: "Later",
       text: "x",
       html: "<p>x</p>",
     };
-    const options = { singletonKey: "once", delaySeconds: 600 };
-    await enqueue("send-mail", message, options);
-    await enqueue("send-mail", message, options);
-    expect(await waitingJobs("Once")).toBe(1);
+    await enqueue("send-mail", message, { delaySeconds: 600 });
+    expect(await waitingJobs("Later")).toBe(1);
   });
 });
