@@ -16,6 +16,9 @@ export function readNumber(cell: string): { value: number } | { reason: string }
     const value = Number(text);
     return Number.isFinite(value) ? { value } : { reason: "Too large to be a figure." };
   }
+  if (/^[+-]?0,\d+$/.test(text)) {
+    return { reason: `Write decimals with a point: ${text.replace(",", ".")}.` };
+  }
   if (/^[+-]?\d+,\d+$/.test(text)) {
     return {
       reason: `A comma in a figure can mean thousands or decimals. Write ${text.replace(",", ".")} or ${text.replace(",", "")}.`,

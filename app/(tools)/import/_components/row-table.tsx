@@ -39,23 +39,33 @@ export function RowTable({ file, show, onShow, onPage }: RowTableProps) {
           </button>
         ))}
       </div>
-      <LedgerTable caption="Rows of the sheet" framed>
-        <thead>
-          <tr>
-            <FolioCell heading>Line</FolioCell>
-            <th scope="col">Reservoir</th>
-            <th scope="col">{isDone ? "Done" : "Would be"}</th>
-            <th scope="col">Column</th>
-            <th scope="col">Value</th>
-            <th scope="col">What to know</th>
-          </tr>
-        </thead>
-        <tbody>
-          {items.map((row) => (
-            <RowLines key={row.line} row={row} isDone={isDone} />
-          ))}
-        </tbody>
-      </LedgerTable>
+      <ul
+        className="hidden border-t-2 border-ink bg-sheet phone:block"
+        aria-label="Rows of the sheet"
+      >
+        {items.map((row) => (
+          <StackedRow key={row.line} row={row} isDone={isDone} />
+        ))}
+      </ul>
+      <div className="phone:hidden">
+        <LedgerTable caption="Rows of the sheet" framed>
+          <thead>
+            <tr>
+              <FolioCell heading>Line</FolioCell>
+              <th scope="col">Reservoir</th>
+              <th scope="col">{isDone ? "Done" : "Would be"}</th>
+              <th scope="col">Column</th>
+              <th scope="col">Value</th>
+              <th scope="col">What to know</th>
+            </tr>
+          </thead>
+          <tbody>
+            {items.map((row) => (
+              <RowLines key={row.line} row={row} isDone={isDone} />
+            ))}
+          </tbody>
+        </LedgerTable>
+      </div>
       {total > limit && (
         <nav className="mt-3 flex items-center gap-3 text-13" aria-label="Pages of rows">
           <Button
@@ -138,21 +148,62 @@ function linesOf({ problems, changes, warnings }: Row): Line[] {
   ];
 }
 
-/** A row, with a line for each thing to know about it. */
-function RowLines({ row, isDone }: { row: Row; isDone: boolean }) {
-  const lines = linesOf(row);
-  const span = Math.max(1, lines.length);
-  const words = actionWords[row.action][isDone ? "done" : "planned"];
-  const place = (
+interface RowProps {
+  row: Row;
+  isDone: boolean;
+}
+
+/** The reservoir, as a link once it is in the book, over its field and basin. */
+function Place({ row }: { row: Row }) {
+  return (
     <>
       {row.fieldSlug && row.reservoirSlug ? (
         <Link href={`/fields/${row.fieldSlug}/${row.reservoirSlug}`}>{row.reservoir}</Link>
       ) : (
         row.reservoir || "–"
       )}
-      <small>{[row.field, row.basin].filter(Boolean).join(", ")}</small>
+      <small className="block font-normal text-ink-soft">
+        {[row.field, row.basin].filter(Boolean).join(", ")}
+      </small>
     </>
   );
+}
+
+function ActionWords({ row, isDone }: RowProps) {
+  const words = actionWords[row.action][isDone ? "done" : "planned"];
+  return row.action === "refused" ? <b className="text-rock">{words}</b> : words;
+}
+
+/** The same row on a phone: what to know stands under the reservoir. */
+function StackedRow({ row, isDone }: RowProps) {
+  return (
+    <li className="grid grid-cols-[auto_1fr_auto] gap-x-3 border-b border-rule p-2 text-13">
+      <span className="text-ink-soft">
+        <span className="sr-only">Line </span>
+        {row.line}
+      </span>
+      <span className="min-w-0 font-semibold">
+        <Place row={row} />
+      </span>
+      <span>
+        <ActionWords row={row} isDone={isDone} />
+      </span>
+      {linesOf(row).map((line, index) => (
+        <div key={index} className="col-span-2 col-start-2 mt-2 min-w-0">
+          <div className="break-words text-ink-soft">
+            {line.column || "Row"}: <span className="text-ink">{line.value}</span>
+          </div>
+          <LineText line={line} />
+        </div>
+      ))}
+    </li>
+  );
+}
+
+/** A row, with a line for each thing to know about it. */
+function RowLines({ row, isDone }: RowProps) {
+  const lines = linesOf(row);
+  const span = Math.max(1, lines.length);
   return (
     <>
       {Array.from({ length: span }, (_, index) => {
@@ -165,11 +216,11 @@ function RowLines({ row, isDone }: { row: Row; isDone: boolean }) {
                   {row.line}
                 </td>
                 <th scope="row" className="wrap min-w-36 align-top" rowSpan={span}>
-                  {place}
+                  <Place row={row} />
                 </th>
                 <td className="align-top" rowSpan={span}>
                   <span className="inline-block py-[7px]">
-                    {row.action === "refused" ? <b className="text-rock">{words}</b> : words}
+                    <ActionWords row={row} isDone={isDone} />
                   </span>
                 </td>
               </>
@@ -188,22 +239,28 @@ function LineCells({ line }: { line: Line }) {
       <td className="wrap min-w-40 break-words">{line.column || "–"}</td>
       <td className="wrap min-w-28 break-words">{line.value}</td>
       <td className="wrap min-w-64">
-        <span className="flex gap-1.5">
-          {line.tone === "problem" && (
-            <span className="text-rock">
-              <Icon name="close" size={11} />
-              <span className="sr-only">Refused: </span>
-            </span>
-          )}
-          {line.tone === "warning" && (
-            <span className="text-warning-ink">
-              <Icon name="warning" size={11} />
-              <span className="sr-only">Worth a look: </span>
-            </span>
-          )}
-          <span>{line.text}</span>
-        </span>
+        <LineText line={line} />
       </td>
     </>
+  );
+}
+
+function LineText({ line }: { line: Line }) {
+  return (
+    <span className="flex gap-1.5">
+      {line.tone === "problem" && (
+        <span className="text-rock">
+          <Icon name="close" size={11} />
+          <span className="sr-only">Refused: </span>
+        </span>
+      )}
+      {line.tone === "warning" && (
+        <span className="text-warning-ink">
+          <Icon name="warning" size={11} />
+          <span className="sr-only">Worth a look: </span>
+        </span>
+      )}
+      <span className="min-w-0">{line.text}</span>
+    </span>
   );
 }

@@ -1,0 +1,65 @@
+import "server-only";
+import {
+  distributionRequestSchema,
+  inPlaceRequestSchema,
+  simulationRequestSchema,
+  wellstreamRequestSchema,
+  zFactorRequestSchema,
+} from "@/app/api/v1/calculations/schema";
+import {
+  calculateDistribution,
+  calculateInPlace,
+  calculateSimulation,
+  calculateWellstream,
+  calculateZFactor,
+} from "@/services/calculations";
+import {
+  distributionExample,
+  inPlaceExample,
+  simulationExample,
+  wellstreamExample,
+  zFactorExample,
+} from "../_components/examples";
+
+const LIST_ENTRIES_SHOWN = 3;
+
+/** Long lists cut short, so that an answer fits on a page. */
+function abridged(value: unknown): unknown {
+  if (Array.isArray(value)) {
+    const shown = value.slice(0, LIST_ENTRIES_SHOWN).map(abridged);
+    const left = value.length - shown.length;
+    return left > 0 ? [...shown, `… and ${left} more`] : shown;
+  }
+  if (typeof value !== "object" || value === null) return value;
+  return Object.fromEntries(Object.entries(value).map(([key, part]) => [key, abridged(part)]));
+}
+
+async function calculate(): Promise<Record<string, unknown>> {
+  const simulation = await calculateSimulation(simulationRequestSchema.parse(simulationExample));
+  const { engineVersion, seed, trials, results, drivers } = simulation;
+  return {
+    wellstream: calculateWellstream(wellstreamRequestSchema.parse(wellstreamExample)),
+    "z-factor": calculateZFactor(zFactorRequestSchema.parse(zFactorExample)),
+    "in-place": calculateInPlace(inPlaceRequestSchema.parse(inPlaceExample)),
+    distribution: calculateDistribution(distributionRequestSchema.parse(distributionExample)),
+    simulation: {
+      engineVersion,
+      seed,
+      trials,
+      results: { condensateRecoverableStb: results.condensateRecoverableStb },
+      drivers: { condensateRecoverableStb: drivers.condensateRecoverableStb.slice(0, 1) },
+    },
+  };
+}
+
+let answers: Promise<Record<string, unknown>> | undefined;
+
+/** What the examples of the guide come to, by calculation: computed by this very engine, once a process. */
+export async function exampleAnswers(): Promise<Record<string, unknown>> {
+  answers ??= calculate().catch((error: unknown) => {
+    answers = undefined;
+    throw error;
+  });
+  const whole = await answers;
+  return Object.fromEntries(Object.entries(whole).map(([name, value]) => [name, abridged(value)]));
+}
