@@ -1,7 +1,7 @@
 import type { Ledger } from "@/analytics/portfolio/ledger";
 import { spreadOf } from "@/analytics/portfolio/ranking-columns";
 import type { RankedField } from "@/analytics/portfolio/ranking";
-import type { PortfolioReservoirRow } from "@/models/queries/portfolio";
+import type { PortfolioFieldRow, PortfolioReservoirRow } from "@/models/queries/portfolio";
 import type { PortfolioBasis } from "./basis";
 import type { RankedBook } from "./ranking";
 import { chanceOf, interestOf } from "./roll-ups";
@@ -12,6 +12,7 @@ const MATERIAL_SHARE = 0.05;
 const WIDE_SPREAD = 5;
 /** A returned revision that nobody has touched for so long has been forgotten. */
 const FORGOTTEN_DAYS = 7;
+const DAY_MS = 86_400_000;
 
 interface At {
   name: string;
@@ -21,22 +22,25 @@ interface At {
 /** Something that somebody should look at, as data; the screen has the words. */
 export type Attention =
   | (At & {
+      /** revisions of one field that wait for a reviewer, or were returned and forgotten */
       kind: "submitted" | "returned";
-      reservoirName: string;
-      reservoirSlug: string;
-      revision: number;
-      /** since it was submitted or returned */
+      revisions: { reservoirName: string; reservoirSlug: string; revision: number }[];
+      /** of the one that waits longest */
       days: number;
-      /** what approving it as it stands would do to the mean, STB on this basis; null without results */
+      /** what approving them as they stand would do to the mean, STB on this basis; null without results */
       changeStb: number | null;
     })
   | (At & {
-      kind: "caution";
-      codes: string[];
-      hydrogenSulphide: number | null;
+      /** a range that is wide where it matters, or a place where people can get hurt, or both */
+      kind: "field";
+      /** P10 over P90; null when it is not remarkable */
+      spread: number | null;
+      /** of the portfolio's mean recoverable condensate, 0 to 1 */
       share: number;
+      samples: number;
+      cautions: string[];
+      hydrogenSulphide: number | null;
     })
-  | (At & { kind: "wide"; spread: number; share: number; rank: number; samples: number })
   | { kind: "no_estimate"; names: string[] }
   | { kind: "basin"; name: string; shareOfVariance: number; rankCorrelation: number }
   | { kind: "price"; condensateMeanStb: number };
@@ -54,59 +58,42 @@ export function attentionOf(
   const total = ledger.total.ranges.condensateRecoverableStb.mean;
   const shareOf = ({ ranges }: RankedField) =>
     total > 0 ? (ranges?.condensateRecoverableStb.mean ?? 0) / total : 0;
-  const byId = new Map(book.fields.map((field) => [field.id, field]));
-
-  const waiting = book.reservoirs.flatMap((reservoir): Attention[] => {
-    const field = byId.get(reservoir.fieldId);
-    const since = sinceOf(reservoir);
-    if (!field || since === null || reservoir.openRevision === null) return [];
-    const kind = reservoir.openState === "submitted" ? "submitted" : "returned";
-    const days = Math.floor((at.getTime() - since.getTime()) / 86_400_000);
-    if (kind === "returned" && days < FORGOTTEN_DAYS) return [];
+  const waiting = book.fields.flatMap((field) => {
     const factor = interestOf(field, basis) * chanceOf(field, basis);
-    const { openCondensateMeanStb, condensateMeanStb } = reservoir;
-    return [
-      {
-        kind,
-        name: field.name,
-        fieldSlug: field.slug,
-        reservoirName: reservoir.name,
-        reservoirSlug: reservoir.slug,
-        revision: reservoir.openRevision,
-        days,
-        changeStb:
-          openCondensateMeanStb === null
-            ? null
-            : factor * (openCondensateMeanStb - (condensateMeanStb ?? 0)),
-      },
-    ];
+    const reservoirs = book.reservoirs.filter(({ fieldId }) => fieldId === field.id);
+    return (["submitted", "returned"] as const).flatMap((kind) =>
+      waitingOf(kind, field, reservoirs, factor, at),
+    );
   });
 
-  const cautions = fields
-    .filter(({ cautions: codes, ranges }) => codes.length > 0 && ranges !== null)
-    .map((field): Attention => {
-      const { name, slug, cautions: codes, hydrogenSulphide } = field;
-      const share = shareOf(field);
-      return { kind: "caution", name, fieldSlug: slug, codes, hydrogenSulphide, share };
-    });
-
-  const wide = fields.flatMap((field): Attention[] => {
-    const spread = spreadOf(field);
+  const remarkable = fields.flatMap((field): Attention[] => {
+    if (field.ranges === null) return [];
     const share = shareOf(field);
-    if (spread === null || field.rank === null) return [];
-    if (spread < WIDE_SPREAD || share < MATERIAL_SHARE) return [];
-    const { name, slug, rank } = field;
+    const known = spreadOf(field);
+    const isWide = known !== null && known >= WIDE_SPREAD && share >= MATERIAL_SHARE;
+    if (!isWide && field.cautions.length === 0) return [];
+    const { name, slug, cautions, hydrogenSulphide } = field;
     const samples = book.reservoirs
       .filter(({ fieldId }) => fieldId === field.id)
       .reduce((sum, { sampleCount }) => sum + sampleCount, 0);
-    return [{ kind: "wide", name, fieldSlug: slug, spread, share, rank, samples }];
+    return [
+      {
+        kind: "field",
+        name,
+        fieldSlug: slug,
+        spread: isWide ? known : null,
+        share,
+        samples,
+        cautions,
+        hydrogenSulphide,
+      },
+    ];
   });
 
   const without = fields.filter(({ ranges }) => ranges === null).map(({ name }) => name);
   return [
     ...waiting.sort((a, b) => materialOf(b) - materialOf(a)),
-    ...wide,
-    ...cautions,
+    ...remarkable,
     ...(without.length > 0 ? [{ kind: "no_estimate" as const, names: without }] : []),
     ...largestBasin(ledger, book.fields),
     { kind: "price", condensateMeanStb: total },
@@ -114,6 +101,34 @@ export function attentionOf(
 }
 
 const materialOf = (item: Attention) => ("changeStb" in item ? Math.abs(item.changeStb ?? 0) : 0);
+
+/** The revisions of a field that wait in one way, as one item, or nothing. */
+function waitingOf(
+  kind: "submitted" | "returned",
+  { name, slug }: PortfolioFieldRow,
+  reservoirs: readonly PortfolioReservoirRow[],
+  factor: number,
+  at: Date,
+): Attention[] {
+  const revisions: (Attention & { kind: "submitted" })["revisions"] = [];
+  let days = 0;
+  let changeStb: number | null = 0;
+  for (const reservoir of reservoirs) {
+    const since = reservoir.openState === kind ? sinceOf(reservoir) : null;
+    if (since === null || reservoir.openRevision === null) continue;
+    const waited = Math.floor((at.getTime() - since.getTime()) / DAY_MS);
+    if (kind === "returned" && waited < FORGOTTEN_DAYS) continue;
+    const { name: reservoirName, slug: reservoirSlug, openRevision: revision } = reservoir;
+    revisions.push({ reservoirName, reservoirSlug, revision });
+    days = Math.max(days, waited);
+    const { openCondensateMeanStb: after, condensateMeanStb: before } = reservoir;
+    changeStb =
+      changeStb === null || after === null ? null : changeStb + factor * (after - (before ?? 0));
+  }
+  return revisions.length === 0
+    ? []
+    : [{ kind, name, fieldSlug: slug, revisions, days, changeStb }];
+}
 
 /** Since when a revision waits: for its reviewer, or for somebody to take it up again. */
 function sinceOf(reservoir: PortfolioReservoirRow): Date | null {

@@ -3,7 +3,13 @@
 import Link from "next/link";
 import type { AttentionView, Statement } from "@/app/api/v1/portfolio/schema";
 import { useBasis } from "@/components/basis/use-basis";
-import { capital, listWords, moneyWords, type Reporting } from "@/components/portfolio/reporting";
+import {
+  capital,
+  listWords,
+  moneyWords,
+  numberWords,
+  type Reporting,
+} from "@/components/portfolio/reporting";
 import { formatFigure, formatPercent } from "@/components/ui/format";
 import { Section } from "@/components/ui/section";
 import { FindingList, type Finding } from "@/components/ui/statement";
@@ -48,65 +54,83 @@ function changeWords(barrels: number, { liquid, reporting }: Words): string {
   return `${amount < 0 ? "take away" : "add"} ${size}`;
 }
 
-const cautionWords: Record<string, { aside: string; detail: string }> = {
-  sour_gas: {
-    aside: "Sour",
-    detail: "Hydrogen sulphide harms people and steel; plan wells and plant for sour service.",
-  },
-  high_pressure_high_temperature: {
-    aside: "HPHT",
-    detail: "High pressure and temperature: equipment and well design need their own review.",
-  },
+const cautionAsides: Record<string, string> = {
+  sour_gas: "Sour",
+  high_pressure_high_temperature: "HPHT",
 };
 
+function cautionWords(code: string, hydrogenSulphide: number | null): string {
+  switch (code) {
+    case "sour_gas":
+      return `${hydrogenSulphide ? `${formatPercent(hydrogenSulphide, { decimals: 1 })} hydrogen sulphide` : "Hydrogen sulphide"}: people, wells and plant need sour-service design.`;
+    case "high_pressure_high_temperature":
+      return "High pressure and temperature: wells and equipment need a design review of their own.";
+    default:
+      return `${capital(code.replaceAll("_", " "))}.`;
+  }
+}
+
+const sampleWords = (samples: number) =>
+  samples === 0
+    ? "no laboratory sample supports it"
+    : `${numberWords(samples)} laboratory sample${samples === 1 ? " supports" : "s support"} it`;
+
+function waitingFinding(item: Waiting, words: Words): Finding {
+  const submitted = item.kind === "submitted";
+  const [first] = item.revisions;
+  const sameRevision = item.revisions.every(({ revision }) => revision === first.revision);
+  const places = listWords(item.revisions.map(({ reservoirName }) => reservoirName));
+  const several = item.revisions.length > 1;
+  const change = item.changeStb;
+  const effect =
+    change === null
+      ? ""
+      : ` Approved as ${several ? "they stand, they" : "it stands, it"} would ${changeWords(change, words)} ${change < 0 ? "from" : "to"} the mean ${words.liquid.name}.`;
+  return {
+    tone: submitted ? "waiting" : "warning",
+    title: words.link(
+      several ? `/fields/${item.fieldSlug}` : `/fields/${item.fieldSlug}/${first.reservoirSlug}`,
+      sameRevision ? `${item.name}, revision ${first.revision}` : item.name,
+    ),
+    detail: submitted
+      ? `${places} ${several ? "wait" : "waits"} for a reviewer.${effect}`
+      : `${places} ${several ? "were" : "was"} returned and nobody has taken ${several ? "them" : "it"} up.`,
+    aside: (
+      <>
+        {submitted ? "In review" : "Returned"}
+        <br />
+        {daysWords(item.days)}
+      </>
+    ),
+  };
+}
+
+type Waiting = Extract<AttentionView, { kind: "submitted" | "returned" }>;
+
 function findingOf(item: AttentionView, words: Words): Finding {
-  const { liquid, reporting, link } = words;
+  const { reporting, link } = words;
   switch (item.kind) {
     case "submitted":
-    case "returned": {
-      const submitted = item.kind === "submitted";
-      const effect =
-        item.changeStb === null
-          ? ""
-          : ` Approved as it stands, it would ${changeWords(item.changeStb, words)} ${item.changeStb < 0 ? "of" : "to the"} mean ${liquid.name}.`;
-      return {
-        tone: submitted ? "waiting" : "warning",
-        title: link(
-          `/fields/${item.fieldSlug}/${item.reservoirSlug}`,
-          `${item.name}, revision ${item.revision}`,
-        ),
-        detail: submitted
-          ? `${item.reservoirName} waits for a reviewer.${effect}`
-          : `${item.reservoirName} was returned and nobody has taken it up.`,
-        aside: (
-          <>
-            {submitted ? "In review" : "Returned"}
-            <br />
-            {daysWords(item.days)}
-          </>
-        ),
-      };
-    }
-    case "wide":
+    case "returned":
+      return waitingFinding(item, words);
+    case "field": {
+      const wide =
+        item.spread !== null &&
+        `P10 is ${formatFigure(item.spread, { digits: 2 })} times P90, on ${formatPercent(item.share)} of the liquid; ${sampleWords(item.samples)}.`;
+      const cautions = item.cautions.map((code) => cautionWords(code, item.hydrogenSulphide));
+      const asides = [
+        ...(item.spread === null ? [] : ["Wide range"]),
+        ...item.cautions.map((code) => cautionAsides[code] ?? "Caution"),
+      ];
       return {
         tone: "warning",
         title: link(`/fields/${item.fieldSlug}`, item.name),
-        detail: `P10 is ${formatFigure(item.spread, { digits: 2 })} times P90, on ${formatPercent(item.share)} of the liquid. ${item.samples === 0 ? "No laboratory sample supports it." : `${item.samples === 1 ? "One laboratory sample supports" : `${item.samples} laboratory samples support`} it.`}`,
-        aside: "Wide range",
-      };
-    case "caution": {
-      const known = item.codes.map(
-        (code) => cautionWords[code] ?? { aside: "Caution", detail: code.replaceAll("_", " ") },
-      );
-      const sour =
-        item.codes.includes("sour_gas") && item.hydrogenSulphide
-          ? `${formatPercent(item.hydrogenSulphide, { decimals: 2 })} H₂S. `
-          : "";
-      return {
-        tone: "warning",
-        title: link(`/fields/${item.fieldSlug}`, item.name),
-        detail: sour + known.map(({ detail }) => detail).join(" "),
-        aside: known.map(({ aside }) => aside).join(", "),
+        detail: [wide, ...cautions].filter(Boolean).join(" "),
+        aside: asides.map((aside) => (
+          <span key={aside} className="block">
+            {aside}
+          </span>
+        )),
       };
     }
     case "no_estimate":
@@ -126,7 +150,7 @@ function findingOf(item: AttentionView, words: Words): Finding {
       return {
         title: link("/prices", "Condensate price"),
         detail: `Each ${reporting.currency}1 per STB moves the mean liquid value by ${moneyWords(item.condensateMeanStb, reporting.currency)}: there are ${formatFigure(barrels)} ${reporting.condensate.unit} behind it.`,
-        aside: capital("price"),
+        aside: "Price",
       };
     }
   }

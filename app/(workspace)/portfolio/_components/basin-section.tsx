@@ -115,5 +115,6 @@ function findingOf(basins: Statement["basins"]): string {
       : `All of it lies in ${leader.name}`;
   const most = means.reduce((best, basin) => (basin.open > best.open ? basin : best));
   if (most.total <= 0 || most.open / most.total < 0.005) return `${lead}; all of it is reserves`;
-  return `${lead}; ${formatPercent(most.open / most.total)} of ${most.name} is not yet reserves`;
+  const where = most.name === leader.name ? "it" : most.name;
+  return `${lead}; ${formatPercent(most.open / most.total)} of ${where} is not yet reserves`;
 }

@@ -37,7 +37,7 @@ export function ExceedanceSection({
       }
       note={
         several &&
-        `The ${formatFigure(sum.p90)} that the column of P90s adds to is ${certaintyWords(totals.chanceOfSummedP90)}: the chance of at least that much is ${formatPercent(totals.chanceOfSummedP90, { decimals: 1 })}. Percentiles do not add; trials do.`
+        `The ${formatFigure(sum.p90)} that the column of P90s adds to is ${certaintyWords(totals.chanceOfSummedP90)}: the chance of at least that much is ${chanceWords(totals.chanceOfSummedP90)}. Percentiles do not add; trials do.`
       }
       fileName="portfolio-liquid-exceedance"
       data={{
@@ -59,6 +59,10 @@ export function ExceedanceSection({
     </ChartFrame>
   );
 }
+
+/** A simulation of so many trials never shows a certainty. */
+const chanceWords = (chance: number) =>
+  chance > 0.9995 ? "over 99.9\u00a0%" : formatPercent(chance, { decimals: 1 });
 
 /** A sum of P90s is a modest amount; how modest is said in a word. */
 function certaintyWords(chance: number): string {

@@ -152,18 +152,18 @@ function StatementBody({ statement, basis }: { statement: Statement; basis: Basi
         </div>
       )}
       <TotalsSection {...part} basis={basis} />
-      <Columns className="mt-[var(--gap)]">
-        <ExceedanceSection {...part} />
-        <AttentionSection {...part} />
-      </Columns>
-      <Columns className="mt-[var(--gap)]">
-        <ConcentrationSection {...part} />
+      <Columns className="statement-columns mt-[var(--gap)]">
         <Stack>
+          <ExceedanceSection {...part} />
+          <ConcentrationSection {...part} />
+          {statement.year && <YearBridge {...part} year={statement.year} />}
+        </Stack>
+        <Stack>
+          <AttentionSection {...part} />
           <BasinSection {...part} />
           {statement.year && <MoversSection {...part} year={statement.year} />}
         </Stack>
       </Columns>
-      {statement.year && <YearBridge {...part} year={statement.year} />}
     </>
   );
 }

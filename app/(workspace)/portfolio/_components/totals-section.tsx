@@ -68,7 +68,7 @@ export function TotalsSection({
         {year &&
           `Changes are of the mean, from estimates revised since ${formatDate(year.since)}, at today’s interests and prices. `}
         {prices?.condensatePerStb != null &&
-          `Values are undiscounted, at the deck’s flat price: ${reporting.currency}${prices.condensatePerStb} per STB of condensate${prices.gasPerMscf === null ? "" : `, ${reporting.currency}${prices.gasPerMscf} per Mscf of sales gas`}. `}
+          `Values are undiscounted, at the deck’s flat price: ${reporting.currency}${prices.condensatePerStb.toFixed(2)} per STB of condensate${prices.gasPerMscf === null ? "" : `, ${reporting.currency}${prices.gasPerMscf.toFixed(2)} per Mscf of sales gas`}. `}
         {basis.risk === "risked" &&
           "Risked: every trial is multiplied by the field’s chance of commerciality, so means are exact and ranges leave out the chance of nothing."}
       </p>

@@ -117,7 +117,6 @@ export function YearBridge({ statement, reporting, year }: PartProps) {
 
   return (
     <ChartFrame
-      className="mt-[var(--gap)]"
       title={`${change < 0 ? "Down" : "Up"} ${size} on the estimates of a year ago`}
       note={`Estimates in force on ${since} against those of now, at today’s interests, chances and prices. Means add, so each step is exact.`}
       fileName="portfolio-liquid-year"

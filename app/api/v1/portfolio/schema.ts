@@ -14,26 +14,20 @@ export const attentionSchema = z.discriminatedUnion("kind", [
   z.object({
     kind: z.enum(["submitted", "returned"]),
     ...place,
-    reservoirName: z.string(),
-    reservoirSlug: z.string(),
-    revision: z.number(),
+    revisions: z.array(
+      z.object({ reservoirName: z.string(), reservoirSlug: z.string(), revision: z.number() }),
+    ),
     days: z.number(),
     changeStb: z.number().nullable(),
   }),
   z.object({
-    kind: z.literal("caution"),
+    kind: z.literal("field"),
     ...place,
-    codes: z.array(z.string()),
-    hydrogenSulphide: z.number().nullable(),
+    spread: z.number().nullable(),
     share: z.number(),
-  }),
-  z.object({
-    kind: z.literal("wide"),
-    ...place,
-    spread: z.number(),
-    share: z.number(),
-    rank: z.number(),
     samples: z.number(),
+    cautions: z.array(z.string()),
+    hydrogenSulphide: z.number().nullable(),
   }),
   z.object({ kind: z.literal("no_estimate"), names: z.array(z.string()) }),
   z.object({
