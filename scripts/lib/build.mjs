@@ -3,9 +3,10 @@ import path from "node:path";
 import { task } from "./console-output.mjs";
 import { contentHash } from "./content-hash.mjs";
 import { requireSpace } from "./disk-space.mjs";
-import { failureFromOutput } from "./failure.mjs";
+import { Failure, failureFromOutput } from "./failure.mjs";
 import { withLock } from "./lock.mjs";
 import { dataPath, readTextIfAny, root, writeFileAtomically } from "./paths.mjs";
+import { recordedRun } from "./processes.mjs";
 import { run } from "./run.mjs";
 
 /** Everything the build reads. A new top-level folder of the product belongs here. */
@@ -42,6 +43,7 @@ export function isBuilt() {
 export async function build() {
   return withLock(dataPath("build.lock"), "The build", async () => {
     if (isBuilt()) return false;
+    refuseUnderRunningProduct();
     const hash = sourcesHash();
     await requireSpace(root, 800, "the build");
     fs.rmSync(STAMP, { force: true });
@@ -52,6 +54,17 @@ export async function build() {
     writeFileAtomically(STAMP, hash, 0o644);
     return true;
   });
+}
+
+/** A product that runs from the old build would find its files exchanged. */
+function refuseUnderRunningProduct() {
+  const { state, record } = recordedRun();
+  const isOther = state === "running" && record.supervisor.pid !== process.pid;
+  if (!isOther || record.command !== "npm start") return;
+  throw new Failure(
+    `The sources have changed, and ${record.address} still runs from the last build.`,
+    "Stop it with Ctrl-C in its terminal, then run the same command again.",
+  );
 }
 
 /** Bundle the programs that run beside Next: the calculation threads, the worker, the stand-ins. */

@@ -19,6 +19,11 @@ export function needsBrowser(args) {
   return files.length === 0 || files.some((file) => BROWSER.test(file));
 }
 
+/** Whether tests are chosen by their names, so that the others of a file count as skipped. */
+export function selectsByName(args) {
+  return args.some((argument) => /^(-t|--testNamePattern)(=|$)/.test(argument));
+}
+
 function projectsOf(args) {
   return args.flatMap((argument, at) => {
     if (argument.startsWith("--project=")) return [argument.slice("--project=".length)];

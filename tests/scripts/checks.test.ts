@@ -1,7 +1,7 @@
 import { describe, expect, it, vi } from "vitest";
 import { Checks } from "@/scripts/lib/checks.mjs";
 import { isSupported } from "@/scripts/lib/node-version.mjs";
-import { needsBrowser, needsProduct } from "@/scripts/lib/test-needs.mjs";
+import { needsBrowser, needsProduct, selectsByName } from "@/scripts/lib/test-needs.mjs";
 
 describe("Checks", () => {
   const silently = () => vi.spyOn(process.stdout, "write").mockReturnValue(true);
@@ -53,6 +53,16 @@ describe("needsBrowser", () => {
     [["--project", "e2e"], true],
   ])("for %j is %j", (args, needed) => {
     expect(needsBrowser(args)).toBe(needed);
+  });
+});
+
+describe("selectsByName", () => {
+  it.each([
+    [["-t", "answers 403"], true],
+    [["--testNamePattern=answers"], true],
+    [["tests/api/fields.test.ts"], false],
+  ])("for %j is %j", (args, selects) => {
+    expect(selectsByName(args)).toBe(selects);
   });
 });
 
