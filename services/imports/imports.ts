@@ -274,7 +274,7 @@ export async function commitImport(
       transaction,
     );
     if (hasRuns) {
-      await enqueue("run-estimates", { importId: id }, { transaction, singletonKey: id });
+      await enqueue("run-estimates", { importId: id }, { transaction });
     }
   });
   return getImport(actor, id);
