@@ -3,6 +3,7 @@
 import type { ResultName } from "@/analytics/volumetrics/results-schema";
 import { Drivers } from "@/components/estimate/drivers";
 import { ExceedanceSection } from "@/components/estimate/exceedance-section";
+import { HistogramSection } from "@/components/estimate/histogram-section";
 import { resultGroups, resultFactor, resultUnit } from "@/components/estimate/result-rows";
 import { ResultTable } from "@/components/estimate/result-table";
 import { Columns, Section, Stack } from "@/components/ui/section";
@@ -69,6 +70,22 @@ export function ResultsTab() {
           place={placeName}
         />
         <Drivers summary={summary} basis={resultBasis} result="wetGasInPlaceScf" />
+      </Columns>
+      <Columns kind="equal">
+        <HistogramSection
+          summary={summary}
+          basis={resultBasis}
+          result="condensateRecoverableStb"
+          name="Condensate to the tank"
+          place={placeName}
+        />
+        <HistogramSection
+          summary={summary}
+          basis={resultBasis}
+          result="wetGasInPlaceScf"
+          name="Wet gas in place"
+          place={placeName}
+        />
       </Columns>
       <SamplingSection />
     </Stack>
