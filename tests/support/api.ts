@@ -1,11 +1,13 @@
-import { type DemoPerson, demoPassword, demoPeople } from "@/seeders/demo/people";
+import { demoPassword, demoPeople } from "@/seeders/demo/people";
 import type { Role } from "@/services/policy";
 import { testEnvironment } from "./environment";
 
-/** The demo's people, by role: one of each. */
+export { demoPassword };
+
+/** The e-mail addresses of the demo's people, by role: one of each. */
 export const people = Object.fromEntries(
-  demoPeople.map((person) => [person.role, person]),
-) as Record<Role, DemoPerson>;
+  demoPeople.map(({ role, email }) => [role, email]),
+) as Record<Role, string>;
 
 /** An answer of the API. `body` is the parsed JSON, or the text when it is something else. */
 export interface ApiAnswer<Body> {
@@ -148,5 +150,5 @@ export async function signInWith(email: string, password: string): Promise<ApiCl
 
 /** Sign in as the demo's person of a role. */
 export function signIn(role: Role): Promise<ApiClient> {
-  return signInWith(people[role].email, demoPassword);
+  return signInWith(people[role], demoPassword);
 }
