@@ -1,15 +1,37 @@
-import type { BaseName } from "@/analytics/units/reporting-units";
-import { reportingUnits } from "@/analytics/units/reporting-units";
+import { reportingUnits, type BaseName } from "@/analytics/units/reporting-units";
 import type { UnitSystem } from "@/analytics/units/conversions";
 import type { Range, ResultName, SimulationSummary } from "@/analytics/volumetrics/results-schema";
+import type { Basis } from "@/components/basis/basis";
 import type { Tone } from "@/components/charts/range-mark";
+import { formatPercent } from "@/components/ui/format";
 
 /** What a table of results is shown in. */
 export interface ResultBasis {
   units: UnitSystem;
   base: BaseName;
-  /** 1 for the whole reservoir, the net revenue interest for the company's part */
-  interestFactor: number;
+  /** what every volume is multiplied by: the company's share, and the chance of commerciality when risked */
+  factor: number;
+  /** "Net to the company (70.4 %), unrisked" */
+  words: string;
+}
+
+/** A reservoir's results on the basis of the page, in the interest and with the chance of its field. */
+export function resultBasisOf(
+  basis: Pick<Basis, "units" | "base" | "interest" | "risk">,
+  field: { netRevenueInterest: number; chanceOfCommerciality: number },
+): ResultBasis {
+  const isNet = basis.interest === "net";
+  const isRisked = basis.risk === "risked";
+  const share = formatPercent(field.netRevenueInterest, { decimals: 1 });
+  const chance = formatPercent(field.chanceOfCommerciality);
+  return {
+    units: basis.units,
+    base: basis.base,
+    factor: (isNet ? field.netRevenueInterest : 1) * (isRisked ? field.chanceOfCommerciality : 1),
+    words:
+      (isNet ? `Net to the company (${share})` : "Gross") +
+      (isRisked ? `, times the ${chance} chance of commerciality` : ", unrisked"),
+  };
 }
 
 export interface ResultRow {
@@ -55,7 +77,7 @@ export function resultGroups(
 ): ResultGroup[] {
   const units = reportingUnits(basis.units, basis.base);
   return layout.map(({ title, kind, rows }) => {
-    const factor = units[kind].factor * basis.interestFactor;
+    const factor = units[kind].factor * basis.factor;
     return {
       title,
       unit: units[kind].unit,
@@ -74,7 +96,7 @@ export function resultGroups(
 export function resultFactor(name: ResultName, basis: ResultBasis): number {
   const units = reportingUnits(basis.units, basis.base);
   const kind = name.endsWith("Stb") ? "condensate" : "gas";
-  return units[kind].factor * basis.interestFactor;
+  return units[kind].factor * basis.factor;
 }
 
 export function resultUnit(name: ResultName, basis: ResultBasis): string {

@@ -25,8 +25,9 @@ function presentRevisionRange(row: RevisionRangeRow): RevisionRangeView {
   };
 }
 
-export function presentFieldFile({ field, reservoirs }: FieldFile): FieldFileView {
+export function presentFieldFile({ field, reservoirs, ...figures }: FieldFile): FieldFileView {
   return {
+    ...figures,
     field: presentField(field),
     reservoirs: reservoirs.map(({ reservoir, revisions }) => ({
       id: reservoir.id,

@@ -3,6 +3,7 @@ import { rangeSchema } from "@/analytics/volumetrics/results-schema";
 import { estimateStates } from "@/models/vocabulary";
 import { dateSchema, momentSchema } from "../common-schema";
 import { reservoirFileSchema } from "../reservoirs/schema";
+import { chosenPricesSchema, rankedFieldSchema } from "./ranking-schema";
 import { fieldSchema } from "./schema";
 
 /** The field by its id, or by the word of its address. */
@@ -41,6 +42,10 @@ export const fieldFileSchema = z.object({
       revisions: z.array(revisionRangeSchema),
     }),
   ),
+  /** the field's row of the ranking on the basis; its ranges are added up trial by trial */
+  ranked: rankedFieldSchema,
+  fieldsInAll: z.number().int(),
+  prices: chosenPricesSchema.nullable(),
 });
 export type FieldFileView = z.infer<typeof fieldFileSchema>;
 

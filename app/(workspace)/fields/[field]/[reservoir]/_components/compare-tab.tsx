@@ -43,7 +43,7 @@ export function CompareTab() {
         {results.summary && (
           <Section
             title={before ? "What it does to the results" : "Results"}
-            note={`${resultBasis.interestFactor === 1 ? "Gross" : "Net to the company"}, before the chance of commerciality.`}
+            note={`${resultBasis.words}.`}
           >
             <ResultChangeTable
               groups={resultGroups(results.summary, before?.summary ?? null, resultBasis)}

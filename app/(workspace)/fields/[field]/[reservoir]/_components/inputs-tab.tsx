@@ -172,9 +172,7 @@ function RunWords() {
       <p>
         {isStale && draft ? "Catching up with what you typed. " : ""}
         P90 of condensate is known to within {(error * 100).toFixed(1)} % (one standard error).{" "}
-        {resultBasis.interestFactor === 1 ? "Gross" : "Net to the company"}, before the chance of
-        commerciality.
-        {before && ` Box behind a mark: approved r${before.revision}.`}
+        {resultBasis.words}.{before && ` Box behind a mark: approved r${before.revision}.`}
       </p>
     </div>
   );

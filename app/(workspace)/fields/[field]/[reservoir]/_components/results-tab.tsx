@@ -34,7 +34,7 @@ export function ResultsTab() {
       <Columns kind="equal">
         <Section
           title="In place and recoverable"
-          note={`${resultBasis.interestFactor === 1 ? "Gross" : "Net to the company"}, before the chance of commerciality. ${old ? `Box behind a mark: approved ${old.label}.` : ""}`}
+          note={`${resultBasis.words}. ${old ? `Box behind a mark: approved ${old.label}.` : ""}`}
         >
           <ResultTable
             caption="In place and recoverable"

@@ -9,7 +9,7 @@ import type { ReservoirPageView } from "@/app/api/v1/fields/file-schema";
 import { useBasis } from "@/components/basis/use-basis";
 import { readEstimate, type EstimateReading } from "@/components/estimate/estimate-reading";
 import { textOfInputs, type EstimateText } from "@/components/estimate/estimate-text";
-import type { ResultBasis } from "@/components/estimate/result-rows";
+import { resultBasisOf, type ResultBasis } from "@/components/estimate/result-rows";
 import { useTakeEstimate, type Place } from "../_queries/reservoir-page";
 import { readBackup } from "./draft-backup";
 import { useDraft, type Draft } from "./use-draft";
@@ -82,15 +82,8 @@ export function ReservoirProvider({ place, page, children }: ProviderProps) {
 
 function useShared(page: ReservoirPageView) {
   const { basis, withBasis } = useBasis();
-  const { netRevenueInterest } = page.field;
-  const resultBasis = useMemo<ResultBasis>(
-    () => ({
-      units: basis.units,
-      base: basis.base,
-      interestFactor: basis.interest === "net" ? netRevenueInterest : 1,
-    }),
-    [basis, netRevenueInterest],
-  );
+  const { field } = page;
+  const resultBasis = useMemo(() => resultBasisOf(basis, field), [basis, field]);
   return { basis, withBasis, resultBasis };
 }
 
