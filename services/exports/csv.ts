@@ -23,6 +23,8 @@ export function csvStream({ names, rows, byteOrderMark }: CsvFile): ReadableStre
     header: true,
     columns: [...names],
     record_delimiter: "windows",
+    // Off by default once a delimiter is named; a lone line feed in a cell would then break its record.
+    quote_record_delimiter: true,
     bom: byteOrderMark,
     escape_formulas: true,
   });
