@@ -28,7 +28,7 @@ export function CalculationGuide({
   ].join("\n");
   return (
     <Section title={title} note={`POST ${path}. ${purpose}`} id={name}>
-      <div className="grid gap-4">
+      <div className="grid grid-cols-1 gap-4">
         <div className="columns columns-equal">
           <CodeBlock label={`Ask for ${title.toLowerCase()}`}>{curl}</CodeBlock>
           <CodeBlock label="Answer, long lists cut short">

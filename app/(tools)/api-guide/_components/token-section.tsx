@@ -22,7 +22,7 @@ export function TokenSection() {
       title={tokensTitle(data ? live.length : null)}
       note="A token acts as you. Give each script its own, so that one can be revoked without the others."
     >
-      <div className="grid gap-4">
+      <div className="grid grid-cols-1 gap-4">
         <NewToken />
         {isPending && <Skeleton lines={3} label="Loading your tokens" />}
         {!isPending && !data && (
@@ -67,7 +67,7 @@ function NewToken() {
   }
 
   return (
-    <div className="grid gap-3">
+    <div className="grid grid-cols-1 gap-3">
       <form
         className="flex flex-wrap items-end gap-2"
         onSubmit={(event) => {

@@ -17,7 +17,7 @@ const takes = ({ kind, units, choices }: Column): string => {
 /** Every column of the sheet, from the same list that the reader and the template use. */
 export function ColumnGuide() {
   return (
-    <div className="grid gap-3">
+    <div className="grid grid-cols-1 gap-3">
       <Disclosure label="Shapes of ranges">
         <div className="mt-2">
           <LedgerTable caption="Shapes of ranges">

@@ -33,7 +33,7 @@ export function FileChoice({ busy, onFile }: FileChoiceProps) {
   }
 
   return (
-    <div className="grid gap-3">
+    <div className="grid grid-cols-1 gap-3">
       <div
         className={classNames(
           "grid justify-items-start gap-2 border border-dashed p-4",

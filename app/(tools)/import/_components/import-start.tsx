@@ -31,7 +31,7 @@ export function ImportStart({ guide }: { guide: ReactNode }) {
               title="1. Fill in the template"
               note="Names of columns in row 1, units in row 2. Change a unit in row 2 and the whole column follows it."
             >
-              <div className="grid gap-3">
+              <div className="grid grid-cols-1 gap-3">
                 <a
                   className="button justify-self-start"
                   href="/api/v1/imports/template.csv"

@@ -12,7 +12,7 @@ export function RunProgress({ file }: { file: ImportDetail }) {
     rowsBad > 0 && `${rowsWords(rowsBad)} left out`,
   ].filter(Boolean);
   return (
-    <div className="grid gap-3">
+    <div className="grid grid-cols-1 gap-3">
       {state === "applying" && (
         <Progress
           label="Running the simulations"
