@@ -67,7 +67,7 @@ function DifferenceRow({
   return (
     <tr className={warning ? "flagged" : undefined}>
       <td className="folio">{lineOf(name)}</td>
-      <th scope="row" className={isSame ? "wrap font-normal soft" : "wrap"}>
+      <th scope="row" className={isSame ? "wrap plain soft" : "wrap"}>
         {about.label} {about.unit && <Unit>{about.unit}</Unit>}
         <small className="block font-normal text-ink-soft">
           {warning ? (

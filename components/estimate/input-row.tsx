@@ -6,7 +6,7 @@ import type { InputName } from "@/analytics/volumetrics/inputs-schema";
 import type { Warning } from "@/analytics/warnings";
 import { DensityCurve } from "@/components/charts/density-curve";
 import { Menu } from "@/components/ui/choice";
-import { formatFigure, MISSING } from "@/components/ui/format";
+import { formatFigure, formatPercent, MISSING } from "@/components/ui/format";
 import { Icon } from "@/components/ui/icon";
 import type { InputReading } from "./estimate-reading";
 import type { InputText } from "./estimate-text";
@@ -25,6 +25,9 @@ export interface InputRowProps {
   /** absent: the row is read, not typed */
   onChange?: (text: InputText) => void;
 }
+
+/** Bounds that cut away less than this are a safeguard, not a description. */
+const LEAST_LOST_MASS = 0.0005;
 
 const slots: Slot[] = ["low", "best", "high"];
 const percentileOf = { low: "p90", best: "p50", high: "p10" } as const;
@@ -158,7 +161,7 @@ function SlotCell({ name, slot, text, reading, suspicion, flagged, notesId, onCh
         <span className="derived" data-typed={parameter ? "" : undefined}>
           {formatFigure(onChange ? percentile : (percentile ?? typed))}
         </span>
-        <span className="slot-name">
+        <span className="slot-name" data-same="">
           {columnName[slot]}
           {!onChange && differs && typed !== null && typed !== undefined && (
             <span className="sr-only">{`; ${parameter.label} ${formatFigure(typed)}`}</span>
@@ -180,10 +183,12 @@ function SlotCell({ name, slot, text, reading, suspicion, flagged, notesId, onCh
           onChange({ ...text, fields: { ...text.fields, [parameter.key]: value } })
         }
       />
-      <span className="slot-name" aria-hidden="true">
-        {parameter.label === columnName[slot]
-          ? parameter.label
-          : `${parameter.label}${percentile === undefined ? "" : ""}`}
+      <span
+        className="slot-name"
+        aria-hidden="true"
+        data-same={parameter.label === columnName[slot] || undefined}
+      >
+        {parameter.label}
       </span>
     </td>
   );
@@ -304,9 +309,9 @@ function Bounds({
           />
         </span>
       ))}
-      {reading.compiled && reading.compiled.lostMass > 0 && (
+      {reading.compiled && reading.compiled.lostMass >= LEAST_LOST_MASS && (
         <span>
-          Cuts away {formatFigure(reading.compiled.lostMass * 100, { digits: 2 })} % of the curve
+          Cuts away {formatPercent(reading.compiled.lostMass, { decimals: 1 })} of the curve
         </span>
       )}
     </div>

@@ -72,7 +72,9 @@ export function InputTable({ text, reading, warnings, zFactor, onChange }: Input
             {(["p90", "p50", "p10"] as const).map((key) => (
               <td key={key} className="slot">
                 <span className="derived">{formatFigure(zFactor?.[key])}</span>
-                <span className="slot-name">{key.toUpperCase()}</span>
+                <span className="slot-name" data-same="">
+                  {key.toUpperCase()}
+                </span>
               </td>
             ))}
             <td className="curve soft">Not typed</td>

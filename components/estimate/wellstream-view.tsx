@@ -109,7 +109,7 @@ export function BalanceTable({ wellstream }: { wellstream: WellstreamResponse })
       <tbody>
         {wellstream.balance.map(({ stream, scfPerStb, gravity, moleShare }) => (
           <tr key={stream}>
-            <th scope="row" className="wrap font-normal">
+            <th scope="row" className="wrap plain">
               {streams[stream]}
             </th>
             <td className="right">
@@ -179,7 +179,7 @@ export function GasTable({ wellstream }: { wellstream: WellstreamResponse }) {
       <tbody>
         {rows.map(({ label, value, unit, text }) => (
           <tr key={label}>
-            <th scope="row" className="font-normal">
+            <th scope="row" className="plain">
               {label} {unit && <Unit>{unit}</Unit>}
             </th>
             <td className="right">{text ?? <Figure value={value} digits={4} />}</td>

@@ -36,7 +36,7 @@ export function FieldFacts({ field }: { field: FieldView }) {
         <tbody>
           {facts.map(([label, value]) => (
             <tr key={label}>
-              <th scope="row" className="font-normal soft">
+              <th scope="row" className="plain soft">
                 {label}
               </th>
               <td className="wrap">{value}</td>

@@ -1,6 +1,6 @@
 "use client";
 
-import { useState } from "react";
+import { useState, type ReactNode } from "react";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import { errorWords, ProblemError } from "@/app/_client/request";
 import { useCan } from "@/app/_client/use-session";
@@ -70,22 +70,23 @@ export function FluidTab() {
     ...(can("fluidSample.create") ? [{ value: NEW, label: "A new sample" }] : []),
   ];
   return (
-    <Stack>
-      {options.length > 1 && (
-        <div className="w-72 max-w-full">
-          <Select
-            label="Sample"
-            value={current ?? NEW}
-            options={options}
-            onChange={(value) => setChosen(value)}
-          />
-        </div>
-      )}
+    <Stack close>
       <Sheet
         // Another sample, or the same one as somebody saved it, is another sheet.
         key={`${current ?? NEW} ${sample?.version ?? 0}`}
         sample={sample}
         test={test}
+        chooser={
+          options.length > 1 && (
+            <Select
+              className="w-72 max-w-full"
+              label="Sample"
+              value={current ?? NEW}
+              options={options}
+              onChange={(value) => setChosen(value)}
+            />
+          )
+        }
         onSaved={(saved) => setChosen(saved.id)}
       />
     </Stack>
@@ -95,10 +96,12 @@ export function FluidTab() {
 function Sheet({
   sample,
   test,
+  chooser,
   onSaved,
 }: {
   sample: FluidSampleView | null;
   test: SeparatorTest | null;
+  chooser: ReactNode;
   onSaved: (sample: FluidSampleView) => void;
 }) {
   const { reading: estimate, draft } = useReservoir();
@@ -171,24 +174,17 @@ function Sheet({
               </p>
             </Section>
           )}
-          {draft && wellstream && reading.test && (
-            <div>
-              <Button kind="primary" onClick={() => setUsing(true)}>
-                Use in the draft
-              </Button>
-              <UseSampleDialog
-                open={isUsing}
-                onClose={() => setUsing(false)}
-                test={reading.test}
-                sampleId={
-                  sample && isSameFluid(sample.separatorTest, reading.test) ? sample.id : null
-                }
-                yieldStbPerMmscf={wellstream.condensateYieldStbPerMmscf}
-              />
-            </div>
-          )}
         </Stack>
       </div>
+      {draft && wellstream && reading.test && (
+        <UseSampleDialog
+          open={isUsing}
+          onClose={() => setUsing(false)}
+          test={reading.test}
+          sampleId={sample && isSameFluid(sample.separatorTest, reading.test) ? sample.id : null}
+          yieldStbPerMmscf={wellstream.condensateYieldStbPerMmscf}
+        />
+      )}
     </>
   );
 }

@@ -51,7 +51,7 @@ export function InputsTab() {
             />
             <OtherWarnings />
           </section>
-          <Columns kind="equal">
+          <Columns>
             <Section
               title="Inputs that move together"
               note={

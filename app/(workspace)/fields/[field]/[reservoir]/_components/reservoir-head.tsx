@@ -91,14 +91,16 @@ function DraftActions() {
           Compare with r{before.revision}
         </LinkButton>
       )}
-      <Button
-        busy={run.isPending}
-        busyLabel={`Running ${shown.trials.toLocaleString("en-US")} trials…`}
-        disabled={draft?.reading.estimate === null || results.isFull}
-        onClick={() => run.mutate(undefined, fail("The run did not finish"))}
-      >
-        {results.isFull ? "Run in full" : `Run ${shown.trials.toLocaleString("en-US")} trials`}
-      </Button>
+      {!results.isFull && (
+        <Button
+          busy={run.isPending}
+          busyLabel={`Running ${shown.trials.toLocaleString("en-US")} trials…`}
+          disabled={draft?.reading.estimate === null}
+          onClick={() => run.mutate(undefined, fail("The run did not finish"))}
+        >
+          Run {shown.trials.toLocaleString("en-US")} trials
+        </Button>
+      )}
       <Button kind="primary" onClick={() => setSubmitting(true)}>
         Submit for review
       </Button>

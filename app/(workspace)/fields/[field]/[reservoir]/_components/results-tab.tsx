@@ -112,7 +112,7 @@ function DerivedTable() {
           const digits = fractionDigits([range.p90, range.p50, range.p10, range.mean]);
           return (
             <tr key={label}>
-              <th scope="row" className="wrap font-normal">
+              <th scope="row" className="wrap plain">
                 {label} {unit && <span className="unit">{unit}</span>}
               </th>
               <FigureCell value={range.p90} fraction={digits} />
@@ -172,7 +172,7 @@ function SamplingSection() {
             const { standardErrors } = quantity;
             return (
               <tr key={name}>
-                <th scope="row" className="font-normal">
+                <th scope="row" className="plain">
                   {label} <span className="unit">{resultUnit(name, resultBasis)}</span>
                 </th>
                 <FigureCell value={quantity.mean * factor} strong />
