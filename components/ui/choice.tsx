@@ -1,6 +1,9 @@
 "use client";
 
 import {
+  Description,
+  Field,
+  Label,
   Listbox,
   ListboxButton,
   ListboxOption,
@@ -13,7 +16,7 @@ import {
   MenuSection,
 } from "@headlessui/react";
 import Link from "next/link";
-import { useId, useRef, type KeyboardEvent, type ReactNode } from "react";
+import { useRef, type KeyboardEvent, type ReactNode } from "react";
 import { classNames } from "./class-names";
 import { Icon } from "./icon";
 
@@ -54,38 +57,23 @@ export function Select<Value extends string>({
   name,
   className,
 }: SelectProps<Value>) {
-  const id = useId();
   const chosen = options.find((option) => option.value === value);
   return (
-    <div className={classNames("field", className)}>
-      <span id={`${id}-label`} className={labelHidden ? "sr-only" : "field-label"}>
-        {label}
-      </span>
+    <Field className={classNames("field", className)} disabled={disabled}>
+      <Label className={labelHidden ? "sr-only" : "field-label"}>{label}</Label>
       <Listbox
         value={value}
-        disabled={disabled}
         name={name}
+        invalid={error !== undefined}
         onChange={(next) => next !== null && onChange(next)}
       >
-        <ListboxButton
-          id={`${id}-button`}
-          className="select-button"
-          aria-labelledby={`${id}-label ${id}-button`}
-          aria-describedby={
-            [error && `${id}-error`, hint && `${id}-hint`].filter(Boolean).join(" ") || undefined
-          }
-          data-invalid={error ? "" : undefined}
-        >
+        <ListboxButton className="select-button">
           <span className={chosen ? undefined : "text-ink-soft"}>
             {chosen?.label ?? placeholder}
           </span>
           <Icon name="chevron-down" size={9} />
         </ListboxButton>
-        <ListboxOptions
-          anchor={{ to: "bottom start", gap: 2 }}
-          className="panel"
-          aria-labelledby={`${id}-label`}
-        >
+        <ListboxOptions anchor={{ to: "bottom start", gap: 2 }} className="panel">
           {options.map((option) => (
             <ListboxOption
               key={option.value}
@@ -103,17 +91,13 @@ export function Select<Value extends string>({
         </ListboxOptions>
       </Listbox>
       {error && (
-        <p className="field-error" id={`${id}-error`}>
+        <Description className="field-error">
           <Icon name="warning" />
           {error}
-        </p>
+        </Description>
       )}
-      {hint && (
-        <p className="field-hint" id={`${id}-hint`}>
-          {hint}
-        </p>
-      )}
-    </div>
+      {hint && <Description className="field-hint">{hint}</Description>}
+    </Field>
   );
 }
 
