@@ -24,6 +24,9 @@ export const metadata: Metadata = {
 
 export const viewport: Viewport = { width: "device-width", initialScale: 1 };
 
+/** Every page depends on who asks and on what the book holds now, so none is rendered while building. */
+export const dynamic = "force-dynamic";
+
 /** Sets the theme before the first paint; a remembered choice beats the system's. */
 const setTheme = `try{var t=localStorage.getItem("theme");document.documentElement.dataset.theme=t==="dark"||t==="light"?t:matchMedia("(prefers-color-scheme: dark)").matches?"dark":"light"}catch(e){}`;
 
