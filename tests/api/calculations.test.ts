@@ -1,0 +1,232 @@
+import { describe, expect, it } from "vitest";
+import type { Problem } from "@/app/_server/problem";
+import {
+  distributionResponseSchema,
+  inPlaceResponseSchema,
+  simulationResponseSchema,
+  wellstreamResponseSchema,
+  zFactorResponseSchema,
+  type InPlaceResponse,
+  type SimulationResponse,
+  type WellstreamResponse,
+  type ZFactorResponse,
+} from "@/app/api/v1/calculations/schema";
+import { as, estimateInputs, separatorTest, withConstant } from "../factories";
+import { visitor } from "../support/api";
+
+const path = (name: string) => `/api/v1/calculations/${name}`;
+
+/** Two stages, all gas measured, condensate weight by Cragoe. */
+const measuredTest = separatorTest({
+  primarySeparator: {
+    pressurePsia: 514.696,
+    temperatureDegF: 80,
+    gasOilRatioScfPerStb: 12_000,
+    gasGravity: 0.68,
+  },
+  stockTankGas: { gasOilRatioScfPerStb: 450, gasGravity: 1.15 },
+  condensateApi: 56,
+  nitrogen: 0,
+  carbonDioxide: 0,
+  dewPointPsia: null,
+});
+
+async function ask<Body>(name: string, body: unknown): Promise<Body> {
+  const engineer = await as("engineer");
+  const answer = await engineer.post<Body>(path(name), body);
+  expect(answer).toMatchObject({ status: 200 });
+  return answer.body;
+}
+
+async function refused(name: string, body: unknown): Promise<Problem> {
+  const engineer = await as("engineer");
+  const answer = await engineer.post<Problem>(path(name), body);
+  expect(answer.status).toBe(422);
+  expect(answer.headers.get("content-type")).toBe("application/problem+json");
+  return answer.body;
+}
+
+describe("POST /api/v1/calculations/wellstream", () => {
+  it("recombines a two-stage test by the balance of moles and mass", async () => {
+    const body = await ask<WellstreamResponse>("wellstream", { separatorTest: measuredTest });
+    wellstreamResponseSchema.parse(body);
+    // Mole and mass balance worked out by hand with Vm = 379.4828 scf/lbmol and Cragoe's M = 6084 / (API - 5.9).
+    expect(body.wellstreamGravity).toBeCloseTo(0.914422, 5);
+    expect(body.wellstreamScfPerStb).toBeCloseTo(13275.781, 2);
+    expect(body.dryGasFraction).toBeCloseTo(0.937798, 5);
+    expect(body.atReservoir).toBeNull();
+  });
+
+  it("answers with a balance whose shares add up to one", async () => {
+    const vented = { ...measuredTest, stockTankGas: null };
+    for (const test of [measuredTest, vented]) {
+      const { balance } = await ask<WellstreamResponse>("wellstream", { separatorTest: test });
+      expect(balance.reduce((sum, { moleShare }) => sum + moleShare, 0)).toBeCloseTo(1, 12);
+    }
+  });
+
+  it("restates gas volumes of another base at 14.696 psia", async () => {
+    const louisiana = { ...measuredTest, basePressurePsia: 15.025 };
+    const body = await ask<WellstreamResponse>("wellstream", { separatorTest: louisiana });
+    expect(body.surfaceGasOilRatioScfPerStb).toBeCloseTo((12_450 * 15.025) / 14.696, 6);
+  });
+
+  it("gives the gas at reservoir conditions when they are stated", async () => {
+    const body = await ask<WellstreamResponse>("wellstream", {
+      separatorTest: measuredTest,
+      reservoir: { pressurePsia: 6500, temperatureDegF: 260 },
+    });
+    const { atReservoir } = body;
+    // Bg = (psc / Tsc) z T / p, in cf/scf
+    const expected = (0.0282795 * (atReservoir?.zFactor ?? 0) * 719.67) / 6500;
+    expect(atReservoir?.formationVolumeFactorCfPerScf).toBeCloseTo(expected, 7);
+  });
+
+  it("refuses a gas lighter than methane, at its field", async () => {
+    const problem = await refused("wellstream", {
+      separatorTest: {
+        ...measuredTest,
+        primarySeparator: { ...measuredTest.primarySeparator, gasGravity: 0.48 },
+      },
+    });
+    expect(problem.errors?.[0].pointer).toBe("#/separatorTest/primarySeparator/gasGravity");
+  });
+
+  it("names every field that is missing or of the wrong kind", async () => {
+    const problem = await refused("wellstream", {
+      separatorTest: { ...measuredTest, nitrogen: "2 %" },
+    });
+    expect(problem.errors?.map(({ pointer }) => pointer)).toEqual(["#/separatorTest/nitrogen"]);
+  });
+});
+
+describe("POST /api/v1/calculations/z-factor", () => {
+  it("agrees with a reading of the Standing-Katz chart to 1 %", async () => {
+    // A sweet gas of gravity 0.7 has pseudocriticals of 381.5 degR and 659.1 psia by Sutton (2007), so that this is
+    // the chart's point Tpr = 1.5, Ppr = 3.006, where z = 0.776.
+    const body = await ask<ZFactorResponse>("z-factor", {
+      gasGravity: 0.7,
+      temperatureDegF: 1.5 * (164.3 + 357.7 * 0.7 - 67.7 * 0.49) - 459.67,
+      pressurePsia: 3.006 * (744 - 125.4 * 0.7 + 5.9 * 0.49),
+    });
+    zFactorResponseSchema.parse(body);
+    expect(body.reducedTemperature).toBeCloseTo(1.5, 6);
+    expect(body.reducedPressure).toBeCloseTo(3.006, 6);
+    expect(Math.abs(body.zFactor / 0.776 - 1)).toBeLessThan(0.01);
+  });
+
+  it("warns where the correlation is poor", async () => {
+    const body = await ask<ZFactorResponse>("z-factor", {
+      gasGravity: 1.2,
+      temperatureDegF: 100,
+      pressurePsia: 3000,
+    });
+    expect(body.warnings.map(({ code }) => code)).toContain("z_low_reduced_temperature");
+  });
+
+  it("refuses a temperature below absolute zero, at its field", async () => {
+    const problem = await refused("z-factor", {
+      gasGravity: 0.7,
+      temperatureDegF: -500,
+      pressurePsia: 3000,
+    });
+    expect(problem.errors?.[0].pointer).toBe("#/temperatureDegF");
+  });
+});
+
+describe("POST /api/v1/calculations/in-place", () => {
+  const question = {
+    areaAcres: 2500,
+    netThicknessFt: 80,
+    porosity: 0.15,
+    waterSaturation: 0.25,
+    pressurePsia: 6500,
+    temperatureDegF: 260,
+    zFactor: 1.12,
+    separatorTest: measuredTest,
+  };
+
+  it("follows the volumetric chain from a separator test to barrels", async () => {
+    const body = await ask<InPlaceResponse>("in-place", question);
+    inPlaceResponseSchema.parse(body);
+    // G = 43,560 A h phi (1 - Sw) / Bg with Bg = 0.0282795 z T / p, worked out independently.
+    expect(body.wetGasInPlaceScf / 279_486_500_000).toBeCloseTo(1, 5);
+    expect(body.dryGasInPlaceScf / 262_101_900_000).toBeCloseTo(1, 5);
+    expect(body.condensateInPlaceStb / 21_052_360).toBeCloseTo(1, 5);
+  });
+
+  it("keeps dry gas and the vapour of the condensate equal to wet gas at any yield", async () => {
+    const { vapourEquivalentScfPerStb } = await ask<WellstreamResponse>("wellstream", {
+      separatorTest: measuredTest,
+    });
+    for (const condensateYieldStbPerMmscf of [20, 80, 250]) {
+      const body = await ask<InPlaceResponse>("in-place", {
+        ...question,
+        condensateYieldStbPerMmscf,
+      });
+      const sum = body.dryGasInPlaceScf + vapourEquivalentScfPerStb * body.condensateInPlaceStb;
+      expect(sum / body.wetGasInPlaceScf).toBeCloseTo(1, 12);
+    }
+  });
+
+  it("refuses a porosity above that of loose spheres, at its field", async () => {
+    const problem = await refused("in-place", { ...question, porosity: 0.6 });
+    expect(problem.errors?.[0].pointer).toBe("#/porosity");
+  });
+});
+
+describe("POST /api/v1/calculations/distribution", () => {
+  it("gives the closed form of a lognormal through P90 and P10", async () => {
+    const body = distributionResponseSchema.parse(
+      await ask("distribution", { distribution: { kind: "lognormalP90P10", p90: 50, p10: 500 } }),
+    );
+    // mu = (ln 50 + ln 500) / 2, sigma = ln 10 / 2.5631: median exp(mu), mean exp(mu + sigma2 / 2)
+    expect(body.range.p50).toBeCloseTo(158.113883, 5);
+    expect(body.range.mean).toBeCloseTo(236.710864, 5);
+    expect(body.standardDeviation).toBeCloseTo(263.726214, 5);
+    expect(body.curve.values).toHaveLength(80);
+  });
+
+  it("refuses a P10 below P90, at its field", async () => {
+    const problem = await refused("distribution", {
+      distribution: { kind: "normalP90P10", p90: 0.2, p10: 0.1 },
+    });
+    expect(problem.errors?.[0].pointer).toBe("#/distribution/p10");
+  });
+});
+
+describe("POST /api/v1/calculations/simulation", () => {
+  it("answers the same question with the same figures", async () => {
+    const question = { inputs: estimateInputs(), trials: 1000, seed: 7 };
+    const first = await ask<SimulationResponse>("simulation", question);
+    simulationResponseSchema.parse(first);
+    expect(await ask<SimulationResponse>("simulation", question)).toEqual(first);
+    const other = await ask<SimulationResponse>("simulation", { ...question, seed: 8 });
+    expect(other.results.wetGasInPlaceScf.mean).not.toBe(first.results.wetGasInPlaceScf.mean);
+  });
+
+  it("runs 2,000 trials unless asked otherwise", async () => {
+    const body = await ask<SimulationResponse>("simulation", { inputs: estimateInputs() });
+    expect(body.trials).toBe(2000);
+  });
+
+  it("refuses more trials than a preview may take", async () => {
+    const problem = await refused("simulation", { inputs: estimateInputs(), trials: 20_001 });
+    expect(problem.errors?.[0].pointer).toBe("#/trials");
+  });
+
+  it("refuses an impossible input, at its field", async () => {
+    const inputs = withConstant(estimateInputs(), "porosity", 0.6);
+    const problem = await refused("simulation", { inputs });
+    expect(problem.errors?.[0].pointer).toMatch(/^#\/inputs\/uncertain\/porosity/);
+  });
+});
+
+describe.each(["wellstream", "z-factor", "in-place", "distribution", "simulation"])(
+  "POST /api/v1/calculations/%s",
+  (name) => {
+    it("answers 401 to a visitor", async () => {
+      expect((await visitor().post(path(name), {})).status).toBe(401);
+    });
+  },
+);

@@ -1,0 +1,133 @@
+import { describe, expect, it } from "vitest";
+import {
+  conflictingParts,
+  inputDifferences,
+  isSameInputs,
+  mergeDrafts,
+} from "@/components/estimate/differences";
+import { readEstimate, readInput } from "@/components/estimate/estimate-reading";
+import {
+  emptyText,
+  textOfDistribution,
+  textOfInputs,
+  withCorrelation,
+} from "@/components/estimate/estimate-text";
+import { convertShape } from "@/components/estimate/shapes";
+import { readSheet, textOfTest } from "@/components/estimate/sheet-text";
+import { compileDistribution } from "@/analytics/uncertainty/distribution";
+import { buildInputs } from "../../analytics/volumetrics/estimate-inputs";
+
+describe("textOfInputs(inputs)", () => {
+  it("reads back as the same inputs, so that opening a draft changes nothing", () => {
+    const inputs = buildInputs();
+    const { estimate, impossible, incomplete } = readEstimate(textOfInputs(inputs));
+    expect({ impossible, incomplete }).toEqual({ impossible: [], incomplete: [] });
+    expect(estimate && isSameInputs(estimate, inputs)).toBe(true);
+  });
+});
+
+describe("readEstimate(text)", () => {
+  it("is not ready while anything is empty, and proposes no figure", () => {
+    const { estimate, incomplete, impossible } = readEstimate(
+      emptyText(12_000, buildInputs().fluid),
+    );
+    expect(estimate).toBeNull();
+    expect(incomplete).toHaveLength(10);
+    expect(impossible).toEqual([]);
+  });
+
+  it("puts the engine's refusal at the input it is about", () => {
+    const text = textOfInputs(buildInputs());
+    text.inputs.porosity = textOfDistribution({ kind: "constant", value: 0.6 });
+    const { estimate, impossible, inputs } = readEstimate(text);
+    expect(estimate).toBeNull();
+    expect(impossible).toEqual(["porosity"]);
+    const reasons = [inputs.porosity.problem, inputs.porosity.fields.value?.problem];
+    expect(reasons.join(" ")).toMatch(/porosity/i);
+  });
+});
+
+describe("readInput(name, text)", () => {
+  it("says at P10 that it must be above P90", () => {
+    const text = { ...textOfDistribution({ kind: "normalP90P10", p90: 0.1, p10: 0.2 }) };
+    text.fields.p10 = "0.05";
+    expect(readInput("porosity", text).fields.p10.problem).toMatch(/must be greater/);
+  });
+
+  it("takes a spread of temperatures as a difference, not as a temperature", () => {
+    const text = textOfDistribution({ kind: "normal", mean: 260, standardDeviation: 6 });
+    expect(readInput("temperatureDegF", text).distribution).toMatchObject({ standardDeviation: 6 });
+  });
+});
+
+describe("convertShape(quantile, to)", () => {
+  const quantile = compileDistribution({ kind: "lognormalP90P10", p90: 50, p10: 500 }).quantile;
+
+  it("keeps P90 and P10 where the new shape has them", () => {
+    expect(convertShape(quantile, "normalP90P10")).toEqual({ p90: 50, p10: 500 });
+    const { mu, sigma } = convertShape(quantile, "lognormal");
+    // mu = (ln 50 + ln 500) / 2, sigma = ln 10 / 2.5631
+    expect(mu).toBeCloseTo(5.0633, 4);
+    expect(sigma).toBeCloseTo(0.89836, 5);
+  });
+
+  it("puts the ends of a uniform so that 10 % lie below P90 and 10 % above P10", () => {
+    const { low, high } = convertShape(quantile, "uniform");
+    const range = compileDistribution({ kind: "uniform", low, high }).range;
+    expect(range.p90).toBeCloseTo(50, 0);
+    expect(range.p10).toBeCloseTo(500, 0);
+  });
+});
+
+describe("withCorrelation(pairs, a, b, rank)", () => {
+  it("keeps one entry a pair, whichever way round, and none for 0", () => {
+    const one = withCorrelation([], "porosity", "areaAcres", 0.3);
+    const two = withCorrelation(one, "areaAcres", "porosity", 0.5);
+    expect(two).toEqual([{ a: "areaAcres", b: "porosity", rank: 0.5 }]);
+    expect(withCorrelation(two, "porosity", "areaAcres", 0)).toEqual([]);
+  });
+});
+
+describe("inputDifferences(now, before)", () => {
+  it("finds what changed and by how much, and calls a reworded source the same", () => {
+    const before = buildInputs({ porosity: { kind: "constant", value: 0.1 } });
+    const now = buildInputs({ porosity: { kind: "constant", value: 0.12 } });
+    now.uncertain.areaAcres = { ...now.uncertain.areaAcres, source: "new map, same range" };
+    const changed = inputDifferences(now, before).filter(({ isSame }) => !isSame);
+    expect(changed.map(({ name }) => name)).toEqual(["porosity"]);
+    expect(changed[0].medianChange).toBeCloseTo(0.2, 12);
+  });
+});
+
+describe("mergeDrafts(mine, theirs, fromTheirs)", () => {
+  it("takes the parts chosen from theirs and leaves the rest mine", () => {
+    const base = buildInputs();
+    const mine = buildInputs({ porosity: { kind: "constant", value: 0.14 } });
+    const theirs = {
+      ...buildInputs({ waterSaturation: { kind: "constant", value: 0.3 } }),
+      depthFt: 9_000,
+    };
+    expect(conflictingParts(mine, theirs)).toEqual(["porosity", "waterSaturation", "depthFt"]);
+    const merged = mergeDrafts(mine, theirs, ["waterSaturation", "depthFt"]);
+    expect(merged.uncertain.porosity).toEqual(mine.uncertain.porosity);
+    expect(merged.uncertain.waterSaturation).toEqual(theirs.uncertain.waterSaturation);
+    expect(merged.depthFt).toBe(9_000);
+    expect(mine.uncertain.waterSaturation).toEqual(base.uncertain.waterSaturation);
+  });
+});
+
+describe("readSheet(sheet)", () => {
+  it("reads a stored separator test back as itself", () => {
+    const { fluid } = buildInputs({}, {});
+    const sour = { ...fluid, hydrogenSulphide: 0.03, carbonDioxide: 0.005 };
+    expect(readSheet(textOfTest(sour)).test).toEqual(sour);
+  });
+
+  it("asks for what is missing and leaves out the gas of a vented tank", () => {
+    const sheet = textOfTest(buildInputs().fluid);
+    const vented = readSheet({ ...sheet, tankMeasured: false });
+    expect(vented.test?.stockTankGas).toBeNull();
+    const fields = { ...sheet.fields, "primarySeparator.gasGravity": "" };
+    expect(readSheet({ ...sheet, fields }).incomplete).toEqual(["primarySeparator.gasGravity"]);
+  });
+});
