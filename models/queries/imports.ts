@@ -73,7 +73,10 @@ export async function listFieldsForImport(
   return Field.findAll({
     where: {
       [Op.or]: [
-        where(fn("lower", col("Field.name")), { [Op.in]: names.map((name) => name.toLowerCase()) }),
+        // A build shortens the class's name, which is the table's alias; so it is asked for, not written down.
+        where(fn("lower", col(`${Field.name}.name`)), {
+          [Op.in]: names.map((name) => name.toLowerCase()),
+        }),
         { slug: { [Op.in]: [...slugs] } },
       ],
     },
