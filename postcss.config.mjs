@@ -1,1 +1,4 @@
-export default { plugins: { tailwindcss: {}, autoprefixer: {} } };
+/** @type {import("postcss-load-config").Config} */
+const config = { plugins: { tailwindcss: {}, autoprefixer: {} } };
+
+export default config;

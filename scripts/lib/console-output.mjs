@@ -6,9 +6,13 @@ export function say(line = "") {
   process.stdout.write(line === "" ? "\n" : `  ${line}\n`);
 }
 
+/** How the step that is under way shows a detail; a step within it reports there. */
+let noteOfOuter = null;
+
 /**
  * Run a step that may take long: says what it does, shows that it is alive, and says how long it
- * took. On a terminal the line counts seconds in place; elsewhere a line is added every 15 s.
+ * took. On a terminal the line counts seconds in place; elsewhere a line is added every 15 s. A
+ * step within a step is a detail of the outer one.
  *
  * @template T
  * @param {string} title what is being done, as in "Installing packages"
@@ -16,6 +20,10 @@ export function say(line = "") {
  * @returns {Promise<T>}
  */
 export async function task(title, work) {
+  if (noteOfOuter !== null) {
+    noteOfOuter(title);
+    return work(noteOfOuter);
+  }
   const started = Date.now();
   const live = process.stdout.isTTY === true;
   let detail = "";
@@ -28,9 +36,10 @@ export async function task(title, work) {
   if (!live) say(`${title} …`);
   const timer = setInterval(draw, live ? 250 : 15_000);
   try {
-    const result = await work((text) => {
+    noteOfOuter = (text) => {
       detail = text.trim();
-    });
+    };
+    const result = await work(noteOfOuter);
     clearInterval(timer);
     if (live) process.stdout.write("\r\u001b[2K");
     say(`${title}: done in ${seconds(Date.now() - started)}`);
@@ -40,6 +49,8 @@ export async function task(title, work) {
     if (live) process.stdout.write("\r\u001b[2K");
     say(`${title}: failed after ${seconds(Date.now() - started)}`);
     throw error;
+  } finally {
+    noteOfOuter = null;
   }
 }
 

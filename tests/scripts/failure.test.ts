@@ -1,5 +1,5 @@
-import { describe, expect, it } from "vitest";
-import { failureText, seconds } from "@/scripts/lib/console-output.mjs";
+import { describe, expect, it, vi } from "vitest";
+import { failureText, seconds, task } from "@/scripts/lib/console-output.mjs";
 import { Failure, failureFromOutput, saysDiskIsFull } from "@/scripts/lib/failure.mjs";
 
 describe("failureFromOutput", () => {
@@ -50,5 +50,26 @@ describe("seconds", () => {
     [119_900, "2 min 0 s"],
   ])("writes %d ms as %s", (milliseconds, text) => {
     expect(seconds(milliseconds)).toBe(text);
+  });
+});
+
+describe("task", () => {
+  it("says when a step begins and ends, and keeps a step within it to its details", async () => {
+    const output = vi.spyOn(process.stdout, "write").mockReturnValue(true);
+    await task("Outer", () => task("Inner", async () => undefined));
+    const said = output.mock.calls.map(([text]) => String(text)).join("");
+    output.mockRestore();
+    expect(said).toMatch(/Outer …/);
+    expect(said).toMatch(/Outer: done in/);
+    expect(said).not.toMatch(/Inner: done/);
+  });
+
+  it("passes a failure on", async () => {
+    const output = vi.spyOn(process.stdout, "write").mockReturnValue(true);
+    const failing = task("Outer", async () => {
+      throw new Failure("It failed.");
+    });
+    await expect(failing).rejects.toThrow("It failed.");
+    output.mockRestore();
   });
 });
