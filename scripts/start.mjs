@@ -60,7 +60,7 @@ async function main() {
   );
 
   if (!(await installDependencies())) say("Packages are up to date");
-  const { env, standIns, mailPage } = await settings({ address });
+  const { env } = await settings({ address });
   const checked = await checkSettings(env);
   const isPrivate = !env.DATABASE_URL;
   if (isPrivate) env.DATABASE_URL = await startCluster(group, hadCluster);
@@ -73,7 +73,10 @@ async function main() {
   );
   if (!dev && !(await build())) say("The build is up to date");
 
-  await startProcesses(group, { env, standIns, host, port, address });
+  // Asked again: a build takes long enough for somebody to take a port that was free before it.
+  const { env: own, standIns, mailPage } = await settings({ address });
+  const running = { ...own, DATABASE_URL: env.DATABASE_URL };
+  await startProcesses(group, { env: running, standIns, host, port, address });
   await greet({ address, mailPage, demo });
 }
 
