@@ -62,7 +62,10 @@ function DifferenceRow({
     fromZero: false,
     pad: 0.14,
   });
-  const digits = fractionDigits([now.p90, now.p50, now.p10, before?.p50]);
+  const digits = fractionDigits([
+    ...[now.p90, now.p50, now.p10],
+    ...(before && !isSame ? [before.p90, before.p50, before.p10] : []),
+  ]);
   const shown = isSame ? undefined : before;
   return (
     <tr className={warning ? "flagged" : undefined}>

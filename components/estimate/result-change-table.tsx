@@ -34,7 +34,10 @@ export function ResultChangeTable({ groups }: { groups: readonly ResultGroup[] }
       </thead>
       <tbody>
         {rows.map(({ name, label, unit, tone, range, before }) => {
-          const digits = fractionDigits([range.p90, range.p50, range.p10, before?.p90]);
+          const digits = fractionDigits([
+            ...[range.p90, range.p50, range.p10],
+            ...(before ? [before.p90, before.p50, before.p10] : []),
+          ]);
           const scale = scaleFor([range.p90, range.p10, range.mean, before?.p90, before?.p10], {
             pad: 0.14,
             fromZero: false,

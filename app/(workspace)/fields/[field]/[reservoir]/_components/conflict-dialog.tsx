@@ -71,9 +71,7 @@ function Conflict({
       actions={
         <>
           <Button onClick={() => draft.resolveConflict(theirs.inputs)}>Take all of theirs</Button>
-          <Button onClick={() => mine && draft.resolveConflict(mine)} disabled={!mine}>
-            Keep all of mine
-          </Button>
+          <Button onClick={draft.keepMine}>Keep all of mine</Button>
           <Button
             kind="primary"
             disabled={!mine}
@@ -88,7 +86,7 @@ function Conflict({
     >
       {!mine ? (
         <Notice title="Yours has a figure to fill in or to correct.">
-          Take theirs, or close nothing and correct yours in the fields behind.
+          Keep yours and correct it, or take theirs.
         </Notice>
       ) : parts.length === 0 ? (
         <p>The two are the same; nothing has to be chosen.</p>

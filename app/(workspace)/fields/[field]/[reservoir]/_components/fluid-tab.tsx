@@ -119,6 +119,14 @@ function Sheet({
 
   return (
     <>
+      <div className="flex flex-wrap items-end justify-between gap-3">
+        {chooser || <h2>A first sample</h2>}
+        {draft && wellstream && reading.test && !query.error && (
+          <Button kind="primary" onClick={() => setUsing(true)}>
+            Use in the draft
+          </Button>
+        )}
+      </div>
       {wellstream && <FluidKeyFigures {...{ wellstream, dewPointPsia, reservoir }} />}
       <div className="fluid-columns">
         <Stack close>

@@ -199,6 +199,12 @@ export function useDraft(start: DraftStart) {
       },
       [theirs],
     ),
+    /** Keeps everything as it is typed, on top of what the other person saved. */
+    keepMine: useCallback(() => {
+      if (!theirs) return;
+      setBase(baseOf(theirs));
+      setTheirs(null);
+    }, [theirs]),
     /** Goes back to what the server has. */
     revert: useCallback(() => {
       dropBackup(reservoirId);
