@@ -48,6 +48,7 @@ describe("parseEnvironment", () => {
     ["SMTP_URL", "http://mail.quillmere.example", "smtp://"],
     ["MAIL_FROM", "nobody", "an e-mail address"],
     ["S3_BUCKET", "Not A Bucket", "a bucket's name"],
+    ["DATABASE_POOL_SIZE", "many", "a whole number from 1 to 200"],
     ["DEWLEDGER_DEMO", "true", "one of yes, no"],
     ["LOG_LEVEL", "loud", "one of fatal, error"],
   ])("refuses %s=%s and says what it must be", (name, value, words) => {
