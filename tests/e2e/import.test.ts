@@ -110,6 +110,8 @@ describe("the API guide", () => {
     await page.getByRole("button", { name: `Revoke Budget ${run}` }).click();
     expect(await page.locator("code").count()).toBe(0);
     await page.getByRole("dialog").getByRole("button", { name: "Revoke" }).click();
+    // The page behind an open dialog is hidden from roles, so the dialog has to be gone first.
+    await page.getByRole("dialog").waitFor({ state: "detached" });
     await page.getByRole("button", { name: `Revoke Budget ${run}` }).waitFor({ state: "detached" });
     expect((await ask()).status).toBe(401);
     expect(problems).toEqual([]);
