@@ -1,6 +1,7 @@
 import net from "node:net";
 import { describe, expect, it } from "vitest";
 import { anyFreePort, choosePort, isPortFree, portTakenFailure } from "@/scripts/lib/ports.mjs";
+import { portsApart } from "@/scripts/lib/remembered-ports.mjs";
 
 const range = { first: 5460, count: 10, key: "/home/ines/dewledger" };
 
@@ -34,6 +35,25 @@ describe("choosePort", () => {
   it("says which range is full", async () => {
     const full = choosePort({ ...range, remembered: null, isFree: async () => false });
     await expect(full).rejects.toThrow("No free port between 5460 and 5469");
+  });
+});
+
+describe("portsApart", () => {
+  const names = ["smtp", "mailPage", "storage"];
+  const isFree = async () => true;
+
+  it("gives every stand-in a port of its own, whatever the folder's path", async () => {
+    for (let clone = 0; clone < 500; clone += 1) {
+      const ports = await portsApart(names, { kept: {}, key: `/home/ines/${clone}`, isFree });
+      expect(new Set(Object.values(ports)).size).toBe(names.length);
+    }
+  });
+
+  it("parts two stand-ins that remember the same port", async () => {
+    const kept = { smtp: 5731, mailPage: 5787, storage: 5787 };
+    const ports = await portsApart(names, { kept, key: "/home/ines", isFree });
+    expect(ports.mailPage).toBe(5787);
+    expect(ports.storage).not.toBe(5787);
   });
 });
 
