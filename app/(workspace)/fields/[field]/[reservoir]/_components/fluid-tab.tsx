@@ -42,7 +42,7 @@ export function FluidTab() {
   const used = page.fluidSamples.find((sample) =>
     isSameFluid(sample.separatorTest, text?.fluid ?? null),
   );
-  const start = used?.id ?? (text?.fluid ? OF_ESTIMATE : (page.fluidSamples.at(-1)?.id ?? null));
+  const start = used?.id ?? (text?.fluid ? OF_ESTIMATE : (page.fluidSamples.at(0)?.id ?? null));
   const [chosen, setChosen] = useState<string | null>(null);
   const current = chosen ?? start;
   const sample = page.fluidSamples.find(({ id }) => id === current) ?? null;

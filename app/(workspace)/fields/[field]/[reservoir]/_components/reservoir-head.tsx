@@ -4,6 +4,7 @@ import { useRouter } from "next/navigation";
 import { useState } from "react";
 import { errorWords } from "@/app/_client/request";
 import { useCan } from "@/app/_client/use-session";
+import { isSameFluid } from "@/components/estimate/differences";
 import { Button, LinkButton } from "@/components/ui/button";
 import { formatFigure } from "@/components/ui/format";
 import { PageHead } from "@/components/ui/section";
@@ -61,8 +62,12 @@ function DraftActions() {
     return runDraft(target.id, saved?.version ?? draft?.base.version ?? target.version);
   });
   const create = useEstimateStep(place, () => {
-    if (!draft?.reading.estimate) throw new Error("Complete the inputs first.");
-    return createDraft(page.id, { inputs: draft.reading.estimate });
+    const inputs = draft?.reading.estimate;
+    if (!inputs) throw new Error("Complete the inputs first.");
+    const sample = page.fluidSamples.find(({ separatorTest }) =>
+      isSameFluid(separatorTest, inputs.fluid),
+    );
+    return createDraft(page.id, { inputs, fluidSampleId: sample?.id ?? null });
   });
   const fail = (title: string) => ({
     onError: (error: Error) => toast({ tone: "error", title, detail: errorWords(error) }),

@@ -94,7 +94,7 @@ function TypingProvider({ place, page, children }: ProviderProps) {
   const draft = useDraft({
     reservoirId: page.id,
     depthFt: page.depthFt,
-    fluid: page.fluidSamples.at(-1)?.separatorTest ?? null,
+    fluid: page.fluidSamples.at(0)?.separatorTest ?? null,
     open,
     onSaved: take,
   });
