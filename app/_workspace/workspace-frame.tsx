@@ -1,9 +1,10 @@
 "use client";
 
 import { signOut } from "next-auth/react";
-import type { ReactNode } from "react";
+import { useLayoutEffect, type ReactNode } from "react";
 import type { DeckChoice } from "@/components/layout/basis-strip";
 import type { NavItem, Person } from "@/components/layout/top-bar";
+import { applyTheme, rememberedTheme } from "@/components/layout/theme";
 import { WorkspaceShell } from "@/components/layout/workspace-shell";
 import { useSessionWatch } from "./use-session-watch";
 import { useWaitingCount } from "./use-waiting-count";
@@ -26,6 +27,8 @@ export function WorkspaceFrame({
   children,
 }: WorkspaceFrameProps) {
   useSessionWatch();
+  // A page that answers 403 is drawn anew in the browser, and with it the document's own attributes.
+  useLayoutEffect(() => applyTheme(rememberedTheme()), []);
   const waiting = useWaitingCount();
   return (
     <WorkspaceShell

@@ -92,7 +92,7 @@ export function DeckEditor({ deck, before, crumbs }: DeckEditorProps) {
       <PageHead
         title={deckName(deck)}
         crumbs={[...crumbs, { label: deckName(deck) }]}
-        lead="No page uses a draft. Publish it and it becomes the latest deck; after that it cannot change."
+        lead="No page uses a draft. Once it is published it cannot change. The latest deck is the published one with the latest as-of date."
         meta={
           <>
             <StateMark state="draft" />
@@ -198,7 +198,7 @@ export function DeckEditor({ deck, before, crumbs }: DeckEditorProps) {
         open={question === "publish"}
         onClose={() => setQuestion(null)}
         title={`Publish ${deckName(deck)}?`}
-        description={`It becomes the latest deck as of ${formatDate(base.asOfOn)}, and every page that uses the latest deck follows it. A published deck cannot be changed or taken back; a later version can replace it.`}
+        description={`Its prices are as of ${formatDate(base.asOfOn)}. If no published deck has a later date, every page that uses the latest deck follows it. A published deck cannot be changed or taken back; a later version can replace it.`}
         actions={
           <>
             <Button onClick={() => setQuestion(null)}>Cancel</Button>
