@@ -1,7 +1,7 @@
 import type { Metadata } from "next";
 import { requireActor } from "@/app/_server/session";
+import { LinkButton } from "@/components/ui/button";
 import { Columns, Page, PageHead, Section, Stack } from "@/components/ui/section";
-import { ApiTokens } from "./_components/api-tokens";
 import { PasswordForm } from "./_components/password-form";
 import { SignOutEverywhere } from "./_components/sign-out-everywhere";
 import { ThemeChoice } from "./_components/theme-choice";
@@ -39,10 +39,10 @@ export default async function ProfilePage() {
             <ThemeChoice />
           </Section>
           <Section
-            title="API tokens"
+            title="Programs"
             note="A program with a token does what you may do, under your name. It stops with your account."
           >
-            <ApiTokens />
+            <LinkButton href="/api-guide">Tokens, and how to use the API</LinkButton>
           </Section>
         </Stack>
       </Columns>
