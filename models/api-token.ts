@@ -31,5 +31,5 @@ ApiToken.init(
     revokedAt: DataTypes.DATE,
     createdAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
   },
-  { sequelize, tableName: "api_tokens" },
+  { sequelize, modelName: "ApiToken", tableName: "api_tokens" },
 );

@@ -39,5 +39,5 @@ AuditEvent.init(
     requestId: DataTypes.TEXT,
     at: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
   },
-  { sequelize, tableName: "audit_events" },
+  { sequelize, modelName: "AuditEvent", tableName: "audit_events" },
 );

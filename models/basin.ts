@@ -27,5 +27,5 @@ Basin.init(
     createdAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
     updatedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
   },
-  { sequelize, tableName: "basins" },
+  { sequelize, modelName: "Basin", tableName: "basins" },
 );

@@ -25,5 +25,5 @@ EstimateTrials.init(
     salesGasScf: { type: DataTypes.BLOB, allowNull: false },
     condensateRecoverableStb: { type: DataTypes.BLOB, allowNull: false },
   },
-  { sequelize, tableName: "estimate_trials" },
+  { sequelize, modelName: "EstimateTrials", tableName: "estimate_trials" },
 );

@@ -73,5 +73,5 @@ Estimate.init(
     createdAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
     updatedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
   },
-  { sequelize, tableName: "estimates" },
+  { sequelize, modelName: "Estimate", tableName: "estimates" },
 );

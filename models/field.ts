@@ -58,5 +58,5 @@ Field.init(
     createdAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
     updatedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
   },
-  { sequelize, tableName: "fields" },
+  { sequelize, modelName: "Field", tableName: "fields" },
 );

@@ -51,5 +51,5 @@ FluidSample.init(
     createdAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
     updatedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
   },
-  { sequelize, tableName: "fluid_samples" },
+  { sequelize, modelName: "FluidSample", tableName: "fluid_samples" },
 );

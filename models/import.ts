@@ -49,5 +49,5 @@ Import.init(
     createdAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
     updatedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
   },
-  { sequelize, tableName: "imports" },
+  { sequelize, modelName: "Import", tableName: "imports" },
 );

@@ -43,5 +43,5 @@ PriceDeckPrice.init(
     differential: numeric("differential"),
     unit: { type: DataTypes.TEXT, allowNull: false },
   },
-  { sequelize, tableName: "price_deck_prices" },
+  { sequelize, modelName: "PriceDeckPrice", tableName: "price_deck_prices" },
 );

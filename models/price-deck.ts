@@ -50,5 +50,5 @@ PriceDeck.init(
     createdAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
     updatedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
   },
-  { sequelize, tableName: "price_decks" },
+  { sequelize, modelName: "PriceDeck", tableName: "price_decks" },
 );

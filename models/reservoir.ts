@@ -40,5 +40,5 @@ Reservoir.init(
     createdAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
     updatedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
   },
-  { sequelize, tableName: "reservoirs" },
+  { sequelize, modelName: "Reservoir", tableName: "reservoirs" },
 );

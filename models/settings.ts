@@ -26,5 +26,5 @@ Settings.init(
     version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 1 },
     updatedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
   },
-  { sequelize, tableName: "settings" },
+  { sequelize, modelName: "Settings", tableName: "settings" },
 );

@@ -36,5 +36,5 @@ User.init(
     createdAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
     updatedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
   },
-  { sequelize, tableName: "users" },
+  { sequelize, modelName: "User", tableName: "users" },
 );

@@ -7,10 +7,15 @@ import { rollUp, type RollUpMember, type Totals, type TrialVector } from "./roll
 
 /** One reservoir with the stored trials of the revision that stands for it. */
 export interface LedgerMember {
-  /** the reservoir's, so that its draws stay the same when a revision or a neighbour changes */
+  /**
+   * The reservoir's address rather than a random id: it picks the draws, which then stay the same when a revision or a
+   * neighbour changes, and on every installation that holds the same book.
+   */
   id: string;
   fieldId: string;
   basinId: string;
+  /** the basin's address, for its draws */
+  basinSlug: string;
   /** PRMS class, or whatever else totals are wanted by */
   classId: string;
   vectors: Readonly<Record<VectorName, TrialVector>>;
@@ -151,10 +156,10 @@ function wholeOf(
 type Vectors = Record<VectorName, Float64Array>;
 
 function toRollUpMember(member: LedgerMember): RollUpMember {
-  const { id, basinId, fieldId, classId, vectors, interest, chance } = member;
+  const { id, basinSlug, fieldId, classId, vectors, interest, chance } = member;
   return {
     id,
-    group: basinId,
+    group: basinSlug,
     vectors,
     factors: Object.fromEntries(vectorNames.map((name) => [name, interest])),
     chance,
@@ -162,7 +167,7 @@ function toRollUpMember(member: LedgerMember): RollUpMember {
   };
 }
 
-/** Members by basin, basins in the order of their ids, so that sums are added in one order. */
+/** Members by basin, basins in the order of their addresses, so that sums are added in one order. */
 function byBasin(members: readonly LedgerMember[]): [string, LedgerMember[]][] {
   const basins = new Map<string, LedgerMember[]>();
   for (const member of members) {
@@ -170,7 +175,7 @@ function byBasin(members: readonly LedgerMember[]): [string, LedgerMember[]][] {
     if (known) known.push(member);
     else basins.set(member.basinId, [member]);
   }
-  return [...basins].sort(([a], [b]) => (a < b ? -1 : 1));
+  return [...basins].sort(([, [a]], [, [b]]) => (a.basinSlug < b.basinSlug ? -1 : 1));
 }
 
 function emptyVectors(trials: number): Vectors {

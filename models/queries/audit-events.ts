@@ -58,7 +58,7 @@ export async function* walkAuditEvents(
 ): AsyncGenerator<AuditEvent> {
   let below: WhereOptions<AuditEvent> = {};
   for (;;) {
-    const batch = await AuditEvent.findAll({
+    const batch: AuditEvent[] = await AuditEvent.findAll({
       where: { [Op.and]: [conditionsOf(filter), below] },
       include: withActor,
       order: newestFirst,
@@ -66,7 +66,7 @@ export async function* walkAuditEvents(
     });
     yield* batch;
     if (batch.length < batchSize) return;
-    const { at, id } = batch[batch.length - 1];
+    const { at, id }: AuditEvent = batch[batch.length - 1];
     below = { [Op.or]: [{ at: { [Op.lt]: at } }, { at, id: { [Op.lt]: id } }] };
   }
 }

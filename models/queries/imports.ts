@@ -73,8 +73,7 @@ export async function listFieldsForImport(
   return Field.findAll({
     where: {
       [Op.or]: [
-        // A build shortens the class's name, which is the table's alias; so it is asked for, not written down.
-        where(fn("lower", col(`${Field.name}.name`)), {
+        where(fn("lower", col("Field.name")), {
           [Op.in]: names.map((name) => name.toLowerCase()),
         }),
         { slug: { [Op.in]: [...slugs] } },

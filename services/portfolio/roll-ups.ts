@@ -36,7 +36,7 @@ export interface Book {
 }
 
 /** Changes when the same trials would give other totals; part of what a total is remembered by. */
-const ROLL_UP_VERSION = 1;
+const ROLL_UP_VERSION = 2;
 /** Fixed, so that a total moves only when something that went into it did. */
 const ROLL_UP_SEED = 2027;
 /** Revisions whose trials are read in one statement: 16 x 5 x 10,000 floats are 3 MB. */
@@ -140,9 +140,10 @@ async function loadMembers(
       const row = byEstimate.get(reservoir.estimateId);
       if (!row) throw new Error(`estimate ${reservoir.estimateId} has a summary but no trials`);
       members.push({
-        id: reservoir.id,
+        id: `${field.slug}/${reservoir.slug}`,
         fieldId: field.id,
         basinId: field.basinId,
+        basinSlug: field.basinSlug,
         classId: field.prmsClass,
         interest: interestOf(field, basis),
         chance: chanceOf(field, basis),

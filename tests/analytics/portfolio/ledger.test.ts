@@ -17,6 +17,7 @@ function member(values: Partial<LedgerMember> & { mean?: number; sd?: number }):
     id: "one",
     fieldId: "field-one",
     basinId: "basin",
+    basinSlug: "basin",
     classId: "reserves",
     interest: 1,
     chance: 1,
@@ -69,7 +70,10 @@ describe("computeLedger(members, options)", () => {
 
   it("keeps basins independent, so that their variances add up to the portfolio's", () => {
     const [one, two] = pair();
-    const ledger = computeLedger([one, { ...two, basinId: "other" }], options(0.9));
+    const ledger = computeLedger(
+      [one, { ...two, basinId: "other", basinSlug: "other" }],
+      options(0.9),
+    );
     const { basin, other } = ledger.basins;
     const sum = basin.condensateVariance + other.condensateVariance;
     expect(ledger.total.condensateVariance / sum).toBeCloseTo(1, 1);
@@ -101,7 +105,11 @@ describe("computeLedger(members, options)", () => {
 
   it("adds classes across basins", () => {
     const [one, two] = pair();
-    const members = [one, { ...two, basinId: "other" }, member({ id: "3", classId: "contingent" })];
+    const members = [
+      one,
+      { ...two, basinId: "other", basinSlug: "other" },
+      member({ id: "3", classId: "contingent" }),
+    ];
     const { classes } = computeLedger(members, options(0.2));
     expect(classes.reserves.ranges.salesGasScf.mean).toBeCloseTo(200, 6);
     expect(classes.contingent.ranges.salesGasScf.mean).toBeCloseTo(100, 6);
