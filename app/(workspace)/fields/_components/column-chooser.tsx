@@ -1,5 +1,6 @@
 "use client";
 
+import { useState } from "react";
 import {
   defaultRankingColumns,
   orderColumns,
@@ -17,10 +18,22 @@ export function ColumnChooser({
   chosen: readonly RankingColumnId[];
   onChange: (columns: RankingColumnId[]) => void;
 }) {
+  // The address changes in a transition; a box shows its tick at once.
+  const [shown, setShown] = useState(chosen);
+  const [known, setKnown] = useState(chosen);
+  if (chosen.join() !== known.join()) {
+    setKnown(chosen);
+    setShown(chosen);
+  }
+  function choose(columns: RankingColumnId[]) {
+    setShown(columns);
+    onChange(columns);
+  }
   const toggle = (id: RankingColumnId) =>
-    onChange(
-      orderColumns(chosen.includes(id) ? chosen.filter((other) => other !== id) : [...chosen, id]),
+    choose(
+      orderColumns(shown.includes(id) ? shown.filter((other) => other !== id) : [...shown, id]),
     );
+
   return (
     <div className="column-chooser no-print" id="ranking-columns" role="group" aria-label="Columns">
       {rankingColumnGroups.map(({ label, ids }) => (
@@ -28,7 +41,7 @@ export function ColumnChooser({
           <legend>{label}</legend>
           {ids.map((id) => (
             <label key={id} className="check">
-              <input type="checkbox" checked={chosen.includes(id)} onChange={() => toggle(id)} />
+              <input type="checkbox" checked={shown.includes(id)} onChange={() => toggle(id)} />
               {rankingColumn(id).label}
             </label>
           ))}
@@ -36,7 +49,7 @@ export function ColumnChooser({
       ))}
       <div className="column-chooser-foot">
         <p>The page’s link keeps the choice, and Export CSV writes these columns.</p>
-        <Button size="small" onClick={() => onChange([...defaultRankingColumns])}>
+        <Button size="small" onClick={() => choose([...defaultRankingColumns])}>
           Reset
         </Button>
       </div>

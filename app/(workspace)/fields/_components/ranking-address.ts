@@ -1,6 +1,6 @@
 "use client";
 
-import { usePathname, useRouter, useSearchParams } from "next/navigation";
+import { usePathname, useSearchParams } from "next/navigation";
 import { useCallback, useMemo } from "react";
 import type { z } from "zod";
 import {
@@ -64,7 +64,6 @@ function paramsOf(view: RankingView): URLSearchParams {
 
 /** The ranking's view and the way to change it: it lives in the address, so a link shows the same rows. */
 export function useRankingView() {
-  const router = useRouter();
   const pathname = usePathname();
   const search = useSearchParams();
   const { basis } = useBasis();
@@ -78,13 +77,16 @@ export function useRankingView() {
     },
     [basis],
   );
-  /** a change of what is shown begins at the first row again */
+  /**
+   * A change of what is shown begins at the first row again. The address changes in the browser alone: the page itself
+   * is the same, and nobody should wait for a server to render it again.
+   */
   const setView = useCallback(
     (change: Partial<RankingView>) => {
       const text = searchOf({ ...view, offset: 0, ...change }).toString();
-      router.replace(text ? `${pathname}?${text}` : pathname, { scroll: false });
+      window.history.replaceState(null, "", text ? `${pathname}?${text}` : pathname);
     },
-    [pathname, router, searchOf, view],
+    [pathname, searchOf, view],
   );
   const apiSearch = searchOf(view);
   apiSearch.delete("columns");

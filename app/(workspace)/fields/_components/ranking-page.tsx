@@ -72,9 +72,10 @@ function Actions({ state }: { state: RankingState }) {
           Export CSV
         </a>
       )}
-      {can("import.create") && (
-        <LinkButton kind="primary" icon="plus" href="/import">
-          Import reservoirs
+      {can("import.create") && <LinkButton href="/import">Import reservoirs</LinkButton>}
+      {can("field.create") && (
+        <LinkButton kind="primary" icon="plus" href="/fields/new">
+          Add field
         </LinkButton>
       )}
     </>
