@@ -108,7 +108,7 @@ describe("the inputs of a draft", () => {
     await field(page, "Water saturation, Most likely").fill("0.27");
 
     const dialog = page.getByRole("dialog", { name: "Somebody else saved this draft first" });
-    await dialog.waitFor();
+    await dialog.getByRole("table").waitFor();
     const temperature = dialog.getByRole("row", { name: /^Temperature/ });
     expect(await temperature.textContent()).toContain("251");
     await temperature.getByRole("radio", { name: "Theirs" }).click();
