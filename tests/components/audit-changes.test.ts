@@ -31,12 +31,12 @@ describe("changesOf", () => {
     expect(changesOf(event({ before: { note: "x" }, after: { note: null } }))[0].after).toBe("–");
   });
 
-  it("names nested values by their path, and reads a long list as its length", () => {
+  it("names nested values by their path after whole ones, and reads a long list as its length", () => {
     const prices = Array.from({ length: 9 }, () => ({ product: "condensate", benchmark: 69 }));
     const changes = changesOf(event({ after: { inputs: { netThicknessFt: 128 }, prices } }));
     expect(changes).toEqual([
-      { name: "inputs, net thickness ft", before: undefined, after: "128" },
       { name: "prices", before: undefined, after: "9 entries" },
+      { name: "inputs, net thickness ft", before: undefined, after: "128" },
     ]);
   });
 });

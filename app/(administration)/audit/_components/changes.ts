@@ -21,7 +21,7 @@ export function changesOf({ before, after }: AuditEventView): Change[] {
     .map((name) => ({ name: pathWords(name), before: was.get(name), after: is.get(name) }));
 }
 
-/** What tells most stands first; the rest keeps its order. */
+/** What tells most stands first, then whole values before parts of values. */
 const telling = ["name", "state", "role", "active", "note"];
 
 function weightOf(path: string): number {
