@@ -104,7 +104,7 @@ export function ConcentrationSection({
           {rest && (
             <tr>
               <FolioCell />
-              <td>{capital(numberWords(rest.fields))} others together</td>
+              <td className="wrap">{capital(numberWords(rest.fields))} others together</td>
               <td className="hide-phone" />
               <FigureCell value={rest.range.mean} />
               <MarkCell>
