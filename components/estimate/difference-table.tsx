@@ -17,7 +17,12 @@ export function DifferenceTable({
   warnings: readonly Warning[];
 }) {
   return (
-    <LedgerTable caption="Inputs against the approved revision" density="change" framed>
+    <LedgerTable
+      caption="Inputs against the approved revision"
+      density="change"
+      framed
+      className="stacked-rows"
+    >
       <thead>
         <tr>
           <FolioCell heading />
@@ -106,7 +111,7 @@ function DifferenceRow({
           />
         )}
       </td>
-      <td className={isSame ? "right soft" : "right strong"}>
+      <td className={isSame ? "stacked-aside right soft" : "stacked-aside right strong"}>
         {isSame
           ? "same"
           : medianChange === null

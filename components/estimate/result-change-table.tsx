@@ -15,7 +15,12 @@ export function ResultChangeTable({ groups }: { groups: readonly ResultGroup[] }
     })),
   );
   return (
-    <LedgerTable caption="Results against the approved revision" density="change" framed>
+    <LedgerTable
+      caption="Results against the approved revision"
+      density="change"
+      framed
+      className="stacked-rows"
+    >
       <thead>
         <tr>
           <th scope="col">Quantity</th>
@@ -66,7 +71,7 @@ export function ResultChangeTable({ groups }: { groups: readonly ResultGroup[] }
                   gridLines={false}
                 />
               </td>
-              <td className="right strong">
+              <td className="stacked-aside right strong">
                 {before ? formatPercent(range.mean / before.mean - 1, { signed: true }) : "new"}
               </td>
             </tr>

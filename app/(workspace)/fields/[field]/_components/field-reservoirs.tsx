@@ -72,7 +72,7 @@ export function FieldReservoirs({ file, onAdd }: { file: FieldFileView; onAdd: (
       title={titleOf(file, rows.filter(({ range }) => range).length)}
       note={`Condensate to the tank, ${unit}. ${resultBasis.words}.`}
     >
-      <LedgerTable caption="Reservoirs of the field" framed>
+      <LedgerTable caption="Reservoirs of the field" framed className="stacked-rows">
         <thead>
           <tr>
             <ColumnHeading>Reservoir</ColumnHeading>
@@ -101,7 +101,7 @@ export function FieldReservoirs({ file, onAdd }: { file: FieldFileView; onAdd: (
               <th scope="row" className="wrap">
                 <Link href={withBasis(`/fields/${file.field.slug}/${slug}`)}>{reservoirName}</Link>
               </th>
-              <td>
+              <td className="stacked-aside">
                 {chosen ? <StateMark state={chosen.state} revision={chosen.revision} /> : MISSING}
                 <OpenState revisions={revisions} chosen={chosen} />
               </td>

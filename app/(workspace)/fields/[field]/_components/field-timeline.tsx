@@ -41,7 +41,7 @@ export function FieldTimeline({ file }: { file: FieldFileView }) {
       title={`${capital(countOf(events.length, "revision"))} since ${formatDate(events.at(-1)?.at, "month")}`}
       note={`Condensate to the tank, ${unit}, each as it was run. ${resultBasis.words}.`}
     >
-      <LedgerTable caption="History of the field" framed>
+      <LedgerTable caption="History of the field" framed className="stacked-rows">
         <thead>
           <tr>
             <ColumnHeading>Date</ColumnHeading>
@@ -61,13 +61,13 @@ export function FieldTimeline({ file }: { file: FieldFileView }) {
         <tbody>
           {events.map(({ reservoir, revision, at, range }) => (
             <tr key={revision.estimateId}>
-              <td>{formatDate(at)}</td>
+              <td className="stacked-note">{formatDate(at)}</td>
               <th scope="row" className="wrap">
                 <Link href={withBasis(`/fields/${file.field.slug}/${reservoir.slug}/history`)}>
                   {reservoir.name}
                 </Link>
               </th>
-              <td>
+              <td className="stacked-aside">
                 <StateMark state={revision.state} revision={revision.revision} worded />
               </td>
               <td className="wrap hide-phone">
