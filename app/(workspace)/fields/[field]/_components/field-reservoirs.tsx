@@ -105,7 +105,7 @@ export function FieldReservoirs({ file, onAdd }: { file: FieldFileView; onAdd: (
                 {chosen ? <StateMark state={chosen.state} revision={chosen.revision} /> : MISSING}
                 <OpenState revisions={revisions} chosen={chosen} />
               </td>
-              <td className="right hide-phone">
+              <td className="stacked-aside right hide-phone">
                 {depthFt === null ? MISSING : `${depthFt.toLocaleString("en-US")} ft`}
               </td>
               {levels.map((level) => (

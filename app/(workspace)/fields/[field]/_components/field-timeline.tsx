@@ -41,7 +41,7 @@ export function FieldTimeline({ file }: { file: FieldFileView }) {
       title={`${capital(countOf(events.length, "revision"))} since ${formatDate(events.at(-1)?.at, "month")}`}
       note={`Condensate to the tank, ${unit}, each as it was run. ${resultBasis.words}.`}
     >
-      <LedgerTable caption="History of the field" framed className="stacked-rows">
+      <LedgerTable caption="History of the field" framed className="stacked-rows stacked-p50">
         <thead>
           <tr>
             <ColumnHeading>Date</ColumnHeading>
