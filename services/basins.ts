@@ -1,5 +1,5 @@
 import type { Basin } from "@/models/basin";
-import { createBasinRow, findBasin, findBasinBySlug, listAllBasins } from "@/models/queries/basins";
+import { createBasinRow, findBasin, listAllBasins } from "@/models/queries/basins";
 import { changesBetween, recordAudit } from "./audit";
 import { now } from "./clock";
 import { NotFoundError } from "./errors";
@@ -17,13 +17,6 @@ export interface NewBasin {
 export async function listBasins(actor: Actor): Promise<Basin[]> {
   authorise(actor, "basin.read");
   return listAllBasins();
-}
-
-export async function getBasinBySlug(actor: Actor, slug: string): Promise<Basin> {
-  authorise(actor, "basin.read");
-  const basin = await findBasinBySlug(slug);
-  if (!basin) throw new NotFoundError("basin");
-  return basin;
 }
 
 export async function createBasin(actor: Actor, input: NewBasin): Promise<Basin> {

@@ -11,7 +11,6 @@ import {
   findEstimateWithPeople,
   findLatestRevision,
   findOpenEstimate,
-  listEstimatesOfReservoir,
   listEstimatesPage,
   type EstimateFilter,
 } from "@/models/queries/estimates";
@@ -48,12 +47,6 @@ export async function listEstimates(
 ): Promise<Page<Estimate>> {
   authorise(actor, "estimate.read");
   return toPage(await listEstimatesPage(filter, page), page);
-}
-
-/** Every revision of a reservoir, newest first, without inputs and summary. */
-export async function listRevisions(actor: Actor, reservoirId: string): Promise<Estimate[]> {
-  authorise(actor, "estimate.read");
-  return listEstimatesOfReservoir(reservoirId);
 }
 
 /** One revision whole, with its people, sample, reservoir, field and basin. */

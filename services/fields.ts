@@ -1,19 +1,11 @@
 import type { Transaction } from "sequelize";
 import type { Field } from "@/models/field";
-import {
-  createFieldRow,
-  findField,
-  findFieldBySlug,
-  findFieldWithParents,
-  listFieldsPage,
-  type FieldFilter,
-} from "@/models/queries/fields";
+import { createFieldRow, findField, findFieldWithParents } from "@/models/queries/fields";
 import { findUser } from "@/models/queries/users";
 import { prmsSubClasses, type PrmsClass, type PrmsSubClass } from "@/models/vocabulary";
 import { changesBetween, recordAudit } from "./audit";
 import { now } from "./clock";
 import { InvalidInputError, NotFoundError } from "./errors";
-import { toPage, type Page, type PageRequest } from "./paging";
 import { authorise, type Actor } from "./policy";
 import { slugOf } from "./slugs";
 import { inTransaction } from "./transaction";
@@ -44,23 +36,6 @@ export type FieldPatch = Partial<NewField>;
 
 /** Attributes that turn volumes into the company's money; changing them is the planners' work. */
 const commercial = ["workingInterest", "netRevenueInterest", "chanceOfCommerciality"] as const;
-
-export async function listFields(
-  actor: Actor,
-  filter: FieldFilter,
-  page: PageRequest,
-): Promise<Page<Field>> {
-  authorise(actor, "field.read");
-  return toPage(await listFieldsPage(filter, page), page);
-}
-
-/** The field with its basin, responsible engineer and reservoirs. */
-export async function getFieldBySlug(actor: Actor, slug: string): Promise<Field> {
-  authorise(actor, "field.read");
-  const field = await findFieldBySlug(slug);
-  if (!field) throw new NotFoundError("field");
-  return field;
-}
 
 /** The field with its basin and responsible engineer. */
 export async function getField(actor: Actor, id: string): Promise<Field> {

@@ -3,7 +3,6 @@ import type { PriceDeck } from "@/models/price-deck";
 import {
   createPriceDeckRow,
   deletePriceDeck,
-  findCurrentPriceDeck,
   findLatestDeckVersion,
   findPriceDeck,
   findPriceDeckWithPrices,
@@ -61,12 +60,6 @@ export async function listPriceDecks(
 export async function getPriceDeck(actor: Actor, id: string): Promise<PriceDeck> {
   authorise(actor, "priceDeck.read");
   return reload(id);
-}
-
-/** The published deck with the latest as-of date, or null while none is published. */
-export async function findCurrentDeck(actor: Actor): Promise<PriceDeck | null> {
-  authorise(actor, "priceDeck.read");
-  return findCurrentPriceDeck();
 }
 
 async function reload(id: string, transaction?: Transaction): Promise<PriceDeck> {

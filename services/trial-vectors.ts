@@ -3,8 +3,6 @@ import {
   type TrialVectors,
   type VectorName,
 } from "@/analytics/volumetrics/results-schema";
-import { findTrials } from "@/models/queries/estimates";
-import { NotFoundError } from "./errors";
 
 /**
  * Trial vectors as columns of bytes: little-endian float32. Seven digits are far more than a volume deserves, and half
@@ -31,19 +29,6 @@ export function decodeVector(bytes: Buffer): Float32Array {
   bytes.copy(copy);
   if (!isLittleEndian) copy.swap32();
   return new Float32Array(copy.buffer, copy.byteOffset, copy.length / bytesPerValue);
-}
-
-/**
- * The stored trials of a revision; the same index in every vector is the same trial.
- *
- * @throws {NotFoundError} when the revision was never run
- */
-export async function readTrialVectors(
-  estimateId: string,
-): Promise<Record<VectorName, Float32Array>> {
-  const found = await findTrials(estimateId);
-  if (!found) throw new NotFoundError("set of trials");
-  return byName((name) => decodeVector(found[name]));
 }
 
 function byName<Value>(make: (name: VectorName) => Value): Record<VectorName, Value> {

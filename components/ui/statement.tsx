@@ -135,34 +135,3 @@ export function FilterWords({ name, value }: { name: string; value: string }) {
 
 /** The `buttonClassName` of a filter's menu. */
 export const filterClass = (active: boolean) => classNames("filter", active && "filter-on");
-
-export interface TraceStep {
-  /** "Estimate" */
-  kind: string;
-  /** a link to the thing */
-  thing: ReactNode;
-  /** what it gave, with its figure */
-  values?: { label: string; figure: ReactNode }[];
-  note?: ReactNode;
-}
-
-/** The road back from a figure to the file it rests on, step by step. */
-export function Trace({ steps }: { steps: readonly TraceStep[] }) {
-  return (
-    <ol className="trace">
-      {steps.map(({ kind, thing, values = [], note }, index) => (
-        <li key={index}>
-          <span className="trace-kind">{kind}</span>
-          <b>{thing}</b>
-          {values.map((value) => (
-            <dl key={value.label}>
-              <dt>{value.label}</dt>
-              <dd>{value.figure}</dd>
-            </dl>
-          ))}
-          {note && <p>{note}</p>}
-        </li>
-      ))}
-    </ol>
-  );
-}

@@ -10,10 +10,6 @@ export async function findBasin(id: string, options: Options = {}): Promise<Basi
   return Basin.findByPk(id, options);
 }
 
-export async function findBasinBySlug(slug: string, options: Options = {}): Promise<Basin | null> {
-  return Basin.findOne({ where: { slug }, ...options });
-}
-
 /** All of them, by name: a company has a handful. */
 export async function listAllBasins(): Promise<Basin[]> {
   return Basin.findAll({ order: [["name", "ASC"]] });

@@ -131,13 +131,6 @@ export async function createEstimateRow(
   return Estimate.create(values, options);
 }
 
-export async function findTrials(
-  estimateId: string,
-  options: { transaction?: Transaction } = {},
-): Promise<EstimateTrials | null> {
-  return EstimateTrials.findByPk(estimateId, options);
-}
-
 export async function replaceTrials(
   values: CreationAttributes<EstimateTrials>,
   options: { transaction: Transaction },

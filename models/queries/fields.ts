@@ -1,4 +1,4 @@
-import { Op, type CreationAttributes, type Transaction, type WhereOptions } from "sequelize";
+import { type CreationAttributes, type Transaction } from "sequelize";
 import { Basin, Field, Reservoir, User } from "../associations";
 
 interface Options {
@@ -31,33 +31,6 @@ export async function findFieldBySlug(slug: string, options: Options = {}): Prom
     include: [...parents, { model: Reservoir, as: "reservoirs" }],
     order: [[{ model: Reservoir, as: "reservoirs" }, "name", "ASC"]],
     ...options,
-  });
-}
-
-export interface FieldFilter {
-  basinId?: string;
-  /** part of the name, in any case */
-  search?: string;
-}
-
-export async function listFieldsPage(
-  filter: FieldFilter,
-  page: { limit: number; offset: number },
-): Promise<{ rows: Field[]; count: number }> {
-  const where: WhereOptions<Field> = {
-    ...(filter.basinId && { basinId: filter.basinId }),
-    ...(filter.search && {
-      name: {
-        [Op.iLike]: `%${filter.search.replace(/[\\%_]/g, (character) => `\\${character}`)}%`,
-      },
-    }),
-  };
-  return Field.findAndCountAll({
-    where,
-    include: parents,
-    order: [["name", "ASC"]],
-    distinct: true,
-    ...page,
   });
 }
 

@@ -1,7 +1,6 @@
 import { renderToStaticMarkup } from "react-dom/server";
 import { describe, expect, it } from "vitest";
 import { Bridge } from "@/components/charts/bridge";
-import { LinePlot } from "@/components/charts/line-plot";
 import { csvOf } from "@/components/ui/download";
 import { KeyFigures } from "@/components/ui/statement";
 import { ColumnHeading, FigureCell } from "@/components/ui/table";
@@ -44,33 +43,6 @@ describe("Bridge", () => {
       />,
     );
     expect(markup).not.toMatch(/NaN|Infinity|height="-/);
-  });
-});
-
-describe("LinePlot", () => {
-  const html = renderToStaticMarkup(
-    <LinePlot
-      label="Liquid against pressure"
-      xTitle="Pressure, psia"
-      yTitle="Liquid, % of pore volume"
-      lines={[
-        {
-          label: "CVD",
-          points: [
-            { x: 1000, y: 8 },
-            { x: 3000, y: 0 },
-          ],
-        },
-      ]}
-      zone={{ label: "critical saturation", axis: "y", from: 10, to: 20 }}
-      markers={[{ x: 3000, label: "dew point" }]}
-    />,
-  );
-
-  it("runs its x axis from the first to the last point and holds the zone on its y axis", () => {
-    expect(html).toContain('d="M0.00 ');
-    expect(html).toContain("L100.00 100.00");
-    expect(html).toContain("critical saturation");
   });
 });
 
