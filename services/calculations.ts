@@ -18,6 +18,7 @@ import { inPlace } from "@/analytics/volumetrics/in-place";
 import { checkInputs } from "@/analytics/volumetrics/check-inputs";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import type { SimulationSummary } from "@/analytics/volumetrics/results-schema";
+import { wellstreamRates, type MeteredRate } from "@/analytics/volumetrics/rates";
 import { runSimulation } from "./compute/pool";
 import { refuseImpossible } from "./errors";
 
@@ -39,8 +40,9 @@ export function calculateZFactor(question: GasQuestion): GasProperties {
 export function calculateWellstream(question: {
   separatorTest: SeparatorTest;
   reservoir: { pressurePsia: number; temperatureDegF: number } | null;
+  metered: MeteredRate | null;
 }) {
-  const { separatorTest: test, reservoir } = question;
+  const { separatorTest: test, reservoir, metered } = question;
   const wellstream = refuseImpossible("separatorTest", () => recombine(test));
   const { temperatureDegR, pressurePsia } = pseudocritical(wellstream.wellstreamGravity, test);
   const atReservoir =
@@ -56,6 +58,10 @@ export function calculateWellstream(question: {
     balance: balanceOf(test, wellstream),
     pseudocritical: { temperatureDegR, pressurePsia },
     atReservoir,
+    rates:
+      metered && atReservoir
+        ? wellstreamRates(metered, wellstream, atReservoir.formationVolumeFactorCfPerScf)
+        : null,
     warnings: [...wellstream.warnings, ...(atReservoir?.warnings ?? [])],
   };
 }

@@ -1,12 +1,17 @@
+import { z } from "zod";
 import { DomainError } from "../errors";
 import type { Wellstream } from "../fluid/wellstream";
 import { CUBIC_FEET_PER_BARREL } from "../units/conversions";
 
 /** Which stream was metered, at 14.696 psia and 60 degF; condensate in STB. */
-export type MeteredRate =
-  | { readonly stream: "primary-separator-gas"; readonly scfPerDay: number }
-  | { readonly stream: "surface-gas"; readonly scfPerDay: number }
-  | { readonly stream: "condensate"; readonly stbPerDay: number };
+export const meteredRateSchema = z.discriminatedUnion("stream", [
+  z
+    .object({ stream: z.literal("primary-separator-gas"), scfPerDay: z.number().nonnegative() })
+    .strict(),
+  z.object({ stream: z.literal("surface-gas"), scfPerDay: z.number().nonnegative() }).strict(),
+  z.object({ stream: z.literal("condensate"), stbPerDay: z.number().nonnegative() }).strict(),
+]);
+export type MeteredRate = z.infer<typeof meteredRateSchema>;
 
 export interface WellstreamRates {
   readonly surfaceGasScfPerDay: number;

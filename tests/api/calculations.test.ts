@@ -82,6 +82,31 @@ describe("POST /api/v1/calculations/wellstream", () => {
     expect(atReservoir?.formationVolumeFactorCfPerScf).toBeCloseTo(expected, 7);
   });
 
+  it("gives all streams and the voidage of a metered day", async () => {
+    const { rates, atReservoir } = await ask<WellstreamResponse>("wellstream", {
+      separatorTest: measuredTest,
+      reservoir: { pressurePsia: 6500, temperatureDegF: 260 },
+      metered: { stream: "primary-separator-gas", scfPerDay: 24e6 },
+    });
+    // 24 MMscf/d over 12,000 scf/STB is 2,000 STB/d; each barrel carries 12,450 scf of gas and 13,275.781 of wellstream.
+    expect(rates?.condensateStbPerDay).toBeCloseTo(2000, 9);
+    expect(rates?.surfaceGasScfPerDay).toBeCloseTo(24.9e6, 3);
+    expect(rates?.wetGasScfPerDay).toBeCloseTo(26_551_562, -1);
+    // 1 bbl = 9,702 cubic inches, so 1,728 / 9,702 barrels a cubic foot.
+    const voidage =
+      ((rates?.wetGasScfPerDay ?? 0) * (atReservoir?.formationVolumeFactorCfPerScf ?? 0) * 1728) /
+      9702;
+    expect(rates?.voidageRbPerDay).toBeCloseTo(voidage, 6);
+  });
+
+  it("asks for the reservoir's state when a rate is given", async () => {
+    const problem = await refused("wellstream", {
+      separatorTest: measuredTest,
+      metered: { stream: "condensate", stbPerDay: 100 },
+    });
+    expect(problem.errors?.map(({ pointer }) => pointer)).toEqual(["#/reservoir"]);
+  });
+
   it("refuses a gas lighter than methane, at its field", async () => {
     const problem = await refused("wellstream", {
       separatorTest: {

@@ -3,6 +3,7 @@ import { separatorTestSchema } from "@/analytics/fluid/separator-test-schema";
 import { distributionSchema } from "@/analytics/uncertainty/distribution-schema";
 import { estimateInputsSchema } from "@/analytics/volumetrics/inputs-schema";
 import { quantitySummarySchema, rangeSchema } from "@/analytics/volumetrics/results-schema";
+import { meteredRateSchema } from "@/analytics/volumetrics/rates";
 import { warningSchema } from "@/analytics/warnings";
 
 /** One line of a table that describes what goes into a request or comes out of it. */
@@ -19,6 +20,7 @@ export interface FieldRow {
 /** Shapes that several calculations use: described once, and named where they occur. */
 export const sharedShapes: Record<string, { title: string; schema: z.ZodType }> = {
   SeparatorTest: { title: "Separator test", schema: separatorTestSchema },
+  MeteredRate: { title: "Metered rate", schema: meteredRateSchema },
   Distribution: { title: "Distribution", schema: distributionSchema },
   EstimateInputs: { title: "Inputs of an estimate", schema: estimateInputsSchema },
   Range: { title: "Range", schema: rangeSchema },

@@ -42,6 +42,7 @@ export const zFactorExample: z.input<typeof zFactorRequestSchema> = {
 export const wellstreamExample: z.input<typeof wellstreamRequestSchema> = {
   separatorTest,
   reservoir: { pressurePsia: 6500, temperatureDegF: 260 },
+  metered: { stream: "primary-separator-gas", scfPerDay: 24e6 },
 };
 
 export const inPlaceExample: z.input<typeof inPlaceRequestSchema> = {

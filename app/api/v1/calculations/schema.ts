@@ -4,6 +4,7 @@ import { separatorTestSchema } from "@/analytics/fluid/separator-test-schema";
 import { distributionSchema } from "@/analytics/uncertainty/distribution-schema";
 import { estimateInputsSchema } from "@/analytics/volumetrics/inputs-schema";
 import { rangeSchema, simulationSummarySchema } from "@/analytics/volumetrics/results-schema";
+import { meteredRateSchema } from "@/analytics/volumetrics/rates";
 import { warningSchema } from "@/analytics/warnings";
 
 /**
@@ -62,8 +63,16 @@ export const wellstreamRequestSchema = z
       .nullable()
       .default(null)
       .describe("state for z and the formation volume factor; null leaves them out"),
+    metered: meteredRateSchema
+      .nullable()
+      .default(null)
+      .describe("one metered stream of a day, for all streams and the voidage; needs reservoir"),
   })
-  .strict();
+  .strict()
+  .refine(({ reservoir, metered }) => metered === null || reservoir !== null, {
+    path: ["reservoir"],
+    message: "is needed for the voidage of a metered rate",
+  });
 export type WellstreamRequest = z.infer<typeof wellstreamRequestSchema>;
 
 /** What comes out of one stock-tank barrel's wellstream, and where the moles of it go. */
@@ -105,6 +114,15 @@ export const wellstreamResponseSchema = z.object({
   ),
   pseudocritical: z.object({ temperatureDegR: z.number(), pressurePsia: z.number() }),
   atReservoir: gasPropertiesSchema.nullable(),
+  /** of the metered day; null when no rate was given */
+  rates: z
+    .object({
+      surfaceGasScfPerDay: z.number(),
+      condensateStbPerDay: z.number(),
+      wetGasScfPerDay: z.number(),
+      voidageRbPerDay: z.number(),
+    })
+    .nullable(),
   fluidType: z.enum(fluidTypes),
   warnings: z.array(warningSchema),
 });

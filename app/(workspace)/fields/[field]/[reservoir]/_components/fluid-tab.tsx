@@ -6,6 +6,7 @@ import { errorWords, ProblemError } from "@/app/_client/request";
 import { useCan } from "@/app/_client/use-session";
 import type { FluidSampleView } from "@/app/api/v1/fluid-samples/schema";
 import { isSameFluid } from "@/components/estimate/differences";
+import { DailyRates } from "@/components/estimate/daily-rates";
 import { FindingList } from "@/components/estimate/finding-list";
 import { SeparatorSheet } from "@/components/estimate/separator-sheet";
 import {
@@ -169,6 +170,7 @@ function Sheet({
               <Section title="The gas in numbers">
                 <GasTable wellstream={wellstream} />
               </Section>
+              <DailyRates wellstream={wellstream} />
             </>
           ) : reading.test && query.isFetching ? (
             <Skeleton lines={8} label="Recombining" />
