@@ -22,15 +22,19 @@ export interface HistogramProps {
 
 const category = "Share of trials";
 
+/** Tops of the axis whose quarters are whole per cents, so that the five ticks are exact. */
+const tops = [0.04, 0.08, 0.12, 0.16, 0.2, 0.28, 0.4, 0.6, 0.8];
+
 /** How the trials spread over equal steps: Tremor's bars in our type and colours. */
 export function Histogram({ label, bins, unit, tone, height = 220 }: HistogramProps) {
+  const highest = Math.max(...bins.map(({ share }) => share));
   return (
     <div className="histogram">
       <div className="mb-1 text-12 text-ink-soft">{category}</div>
       <div role="img" aria-label={label}>
         <BarChart
           data={bins.map(({ low, high, share }) => ({
-            middle: formatFigure((low + high) / 2),
+            middle: formatFigure((low + high) / 2, { digits: 2 }),
             span: `${formatFigure(low)} to ${formatFigure(high)} ${unit}`,
             [category]: share,
           }))}
@@ -38,6 +42,7 @@ export function Histogram({ label, bins, unit, tone, height = 220 }: HistogramPr
           categories={[category]}
           colors={[tone]}
           valueFormatter={(share) => formatPercent(share)}
+          maxValue={tops.find((top) => top >= highest) ?? 1}
           showLegend={false}
           showAnimation={false}
           startEndOnly={false}

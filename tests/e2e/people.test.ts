@@ -103,7 +103,7 @@ describe("the people page", () => {
       for (const path of ["/people", "/audit"]) {
         const { page } = await openPage(browser, { as });
         expect((await page.goto(path))?.status()).toBe(403);
-        await page.getByRole("heading", { name: "This page is for administrators" }).waitFor();
+        await page.getByRole("heading", { name: "This page is not for your role" }).waitFor();
       }
     }
   });

@@ -1,3 +1,4 @@
+import { rankedClasses } from "@/analytics/portfolio/ranking";
 import type { Statement } from "@/app/api/v1/portfolio/schema";
 import type { Basis } from "@/components/basis/basis";
 import { RangeMark, type Tone } from "@/components/charts/range-mark";
@@ -69,11 +70,21 @@ export function TotalsSection({
           `Changes are of the mean, from estimates revised since ${formatDate(year.since)}, at today’s interests and prices. `}
         {prices?.condensatePerStb != null &&
           `Values are undiscounted, at the deck’s flat price: ${reporting.currency}${prices.condensatePerStb.toFixed(2)} per STB of condensate${prices.gasPerMscf === null ? "" : `, ${reporting.currency}${prices.gasPerMscf.toFixed(2)} per Mscf of sales gas`}. `}
+        {basis.risk !== "risked" &&
+          classesIn(statement) > 1 &&
+          "Unrisked totals add reserves and resources of other classes as if every field came; the risked basis weighs each by its chance of commerciality. "}
         {basis.risk === "risked" &&
           "Risked: every trial is multiplied by the field’s chance of commerciality, so means are exact and ranges leave out the chance of nothing."}
       </p>
     </>
   );
+}
+
+/** How many PRMS classes the totals are made of. */
+function classesIn({ basins }: Statement): number {
+  return rankedClasses.filter((name) =>
+    basins.some(({ condensateMeanStbByClass: means }) => (means[name] ?? 0) > 0),
+  ).length;
 }
 
 function Change({ before, now }: { before: number | null; now: number }) {

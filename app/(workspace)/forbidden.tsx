@@ -1,0 +1,1 @@
+export { ForbiddenPage as default } from "@/app/_workspace/forbidden-page";
