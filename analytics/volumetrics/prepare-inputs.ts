@@ -1,6 +1,7 @@
 import { DomainError } from "../errors";
 import { recombine, type Wellstream } from "../fluid/wellstream";
 import { compileDistribution, type CompiledDistribution } from "../uncertainty/distribution";
+import type { Distribution } from "../uncertainty/distribution-schema";
 import { correlationBlocks, type CorrelationBlock } from "../uncertainty/rank-correlation";
 import { inputNames, type EstimateInputs, type InputName } from "./inputs-schema";
 import { usualRanges } from "./usual-ranges";
@@ -29,7 +30,7 @@ const NEGLIGIBLE_MASS = 1e-6;
 export function prepareInputs(inputs: EstimateInputs): PreparedInputs {
   return {
     distributions: columns(inputNames, (name) =>
-      within(`uncertain.${name}`, () => compileInput(inputs, name)),
+      within(`uncertain.${name}`, () => compileInput(name, inputs.uncertain[name].distribution)),
     ),
     blocks: correlationBlocks(inputNames, inputs.correlations, (name) => usualRanges[name].label),
     wellstream: within("fluid", () => recombine(inputs.fluid)),
@@ -50,8 +51,15 @@ function within<Result>(path: string, check: () => Result): Result {
   }
 }
 
-function compileInput(inputs: EstimateInputs, name: InputName): CompiledDistribution {
-  const { distribution } = inputs.uncertain[name];
+/**
+ * Compiles the distribution of one input, found possible for that input whatever the others are.
+ *
+ * @param distribution  in the unit that the input's name says
+ * @throws {DomainError} when its parameters make no distribution, or when it reaches further past the input's possible
+ *   range than a negligible chance; `details.input` is then `value`, `minimum` or `maximum`, and `details.value` the
+ *   impossible value or the end of the possible range
+ */
+export function compileInput(name: InputName, distribution: Distribution): CompiledDistribution {
   const compiled = compileDistribution(distribution);
   const { label, unit, possible, lowExcluded, reason, slip } = usualRanges[name];
   const [low, high] = possible;

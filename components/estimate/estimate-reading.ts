@@ -3,8 +3,13 @@ import {
   compileDistribution,
   type CompiledDistribution,
 } from "@/analytics/uncertainty/distribution";
-import { distributionSchema, type Distribution } from "@/analytics/uncertainty/distribution-schema";
+import {
+  distributionSchema,
+  type Distribution,
+  type DistributionKind,
+} from "@/analytics/uncertainty/distribution-schema";
 import { checkInputs } from "@/analytics/volumetrics/check-inputs";
+import { compileInput } from "@/analytics/volumetrics/prepare-inputs";
 import {
   inputNames,
   type EstimateInputs,
@@ -16,15 +21,24 @@ import { inputCatalogue, inputOfPath } from "./input-catalogue";
 import { readField, readPlain, type FieldReading } from "./quantities-of-inputs";
 import { shapeOf } from "./shapes";
 
+/** A bound that leaves out what cannot be, for a curve that reaches past it. */
+export interface CutOff {
+  key: "minimum" | "maximum";
+  value: number;
+}
+
 /** What the fields of one input read as. */
 export interface InputReading {
   /** `null` while something is missing or impossible */
   distribution: Distribution | null;
+  /** also of a curve that reaches past what is possible, so that its figures can be seen and reshaped */
   compiled: CompiledDistribution | null;
   /** by parameter key, and by `minimum` and `maximum` */
   fields: Record<string, FieldReading>;
   /** why the figures make no distribution, when that is no single field's fault */
   problem: string | null;
+  /** would make the input possible; `null` while it is, or while most of the curve is impossible */
+  cutOff: CutOff | null;
   isComplete: boolean;
 }
 
@@ -44,7 +58,7 @@ export interface EstimateReading {
 
 const EMPTY: FieldReading = { value: null, preview: null, problem: null };
 
-/** Reads the fields of one input: each by itself, then all of them as a distribution. */
+/** Reads the fields of one input: each by itself, then all of them as a distribution that the input can have. */
 export function readInput(name: InputName, text: InputText): InputReading {
   const { unit } = inputCatalogue[name];
   const fields: Record<string, FieldReading> = {};
@@ -62,12 +76,14 @@ export function readInput(name: InputName, text: InputText): InputReading {
   const isComplete = emptyFields(text).length === 0;
   const readable = Object.values(fields).every((field) => field.problem === null);
   if (!isComplete || !readable) {
-    return { distribution: null, compiled: null, fields, problem: null, isComplete };
+    const nothing = { distribution: null, compiled: null, problem: null, cutOff: null };
+    return { ...nothing, fields, isComplete };
   }
-  return { ...compileReading(text, fields), isComplete };
+  return { ...compileReading(name, text, fields), isComplete };
 }
 
 function compileReading(
+  name: InputName,
   text: InputText,
   fields: Record<string, FieldReading>,
 ): Omit<InputReading, "isComplete"> {
@@ -75,20 +91,47 @@ function compileReading(
     field.value === null ? [] : [[key, field.value] as const],
   );
   const distribution = distributionSchema.parse({ kind: text.kind, ...Object.fromEntries(values) });
+  let compiled: CompiledDistribution | null = null;
   try {
-    return { distribution, compiled: compileDistribution(distribution), fields, problem: null };
+    compiled = compileDistribution(distribution);
+    compileInput(name, distribution);
+    return { distribution, compiled, fields, problem: null, cutOff: null };
   } catch (error) {
     if (!(error instanceof DomainError)) throw error;
-    return { distribution: null, compiled: null, ...placeProblem(fields, error) };
+    return {
+      distribution: null,
+      compiled,
+      cutOff: compiled && cutOffOf(compiled, error),
+      ...placeProblem(fields, error, text.kind),
+    };
   }
 }
 
-/** Puts the reason at the field that it names, or above all of them. */
+/** A cut that leaves less than half of the curve would not be what the person meant: a slip of units, rather. */
+const MOST_CUT_OFF = 0.5;
+
+function cutOffOf(compiled: CompiledDistribution, error: DomainError): CutOff | null {
+  const { input: key, value } = error.details;
+  if ((key !== "minimum" && key !== "maximum") || value === undefined) return null;
+  const below = compiled.cdf(value);
+  const share = key === "minimum" ? below : 1 - below;
+  return share > MOST_CUT_OFF ? null : { key, value };
+}
+
+/**
+ * Puts the reason at the field that it names, or above all of them. A bound that nobody typed has no field on the
+ * screen: its reason goes to the low or high figure that reaches past it.
+ */
 function placeProblem(
   fields: Record<string, FieldReading>,
   error: DomainError,
+  kind: DistributionKind,
 ): Pick<InputReading, "fields" | "problem"> {
-  const key = error.details.input?.split(".").at(-1);
+  const named = error.details.input?.split(".").at(-1);
+  const isBound = named === "minimum" || named === "maximum";
+  const { parameters } = shapeOf(kind);
+  const end = named === "minimum" ? parameters.at(0) : parameters.at(-1);
+  const key = isBound && fields[named].value === null ? end?.key : named;
   if (key === undefined || !(key in fields)) return { fields, problem: error.message };
   return {
     fields: { ...fields, [key]: { ...fields[key], problem: error.message } },
@@ -122,7 +165,7 @@ export function readEstimate(text: EstimateText): EstimateReading {
     if (!(error instanceof DomainError)) throw error;
     const name = inputOfPath(error.details.input);
     if (name === null) return { ...partial, problem: error.message };
-    const placed = placeProblem(inputs[name].fields, error);
+    const placed = placeProblem(inputs[name].fields, error, text.inputs[name].kind);
     return {
       ...partial,
       impossible: [name],

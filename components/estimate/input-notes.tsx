@@ -2,6 +2,8 @@ import { formatFigure } from "@/components/ui/format";
 import { Button } from "@/components/ui/button";
 import { Notice } from "@/components/ui/status";
 import type { Warning } from "@/analytics/warnings";
+import type { CutOff } from "./estimate-reading";
+import { typedFigure } from "./quantities-of-inputs";
 import type { UnitSuspicion } from "./unit-suspicion";
 
 export interface InputNotesProps {
@@ -9,10 +11,14 @@ export interface InputNotesProps {
   unit: string;
   /** reasons of fields that cannot be read or cannot be */
   problems: string[];
+  /** offered with the reason that it would settle */
+  cutOff: CutOff | null;
   suspicion: UnitSuspicion | null;
   warnings: readonly Warning[];
   /** takes the figures of the suspected unit; absent where nothing can be changed */
   onConvert?: (values: Record<string, number>) => void;
+  /** sets the bound; absent where nothing can be changed */
+  onCutOff?: (cutOff: CutOff) => void;
 }
 
 const listed = (values: readonly string[]) =>
@@ -23,16 +29,31 @@ export function InputNotes({
   id,
   unit,
   problems,
+  cutOff,
   suspicion,
   warnings,
   onConvert,
+  onCutOff,
 }: InputNotesProps) {
   const converted = suspicion ? Object.values(suspicion.converted) : [];
   const withUnit = (text: string) => (unit ? `${text} ${unit}` : text);
   return (
     <div id={id} className="grid gap-1.5">
       {problems.map((problem) => (
-        <Notice key={problem} tone="error" title={problem} live={false} />
+        <Notice
+          key={problem}
+          tone="error"
+          title={problem}
+          live={false}
+          actions={
+            cutOff &&
+            onCutOff && (
+              <Button size="small" onClick={() => onCutOff(cutOff)}>
+                Cut off at {withUnit(typedFigure(cutOff.value))}
+              </Button>
+            )
+          }
+        />
       ))}
       {suspicion && (
         <Notice

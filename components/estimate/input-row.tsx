@@ -98,9 +98,13 @@ export function InputRow({ name, text, reading, warnings, onChange }: InputRowPr
               id={notesId}
               unit={about.unit}
               problems={problems}
+              cutOff={reading.cutOff}
               suspicion={suspicion}
               warnings={shown}
               onConvert={onChange && ((values) => onChange(withValues(text, values)))}
+              onCutOff={
+                onChange && (({ key, value }) => onChange({ ...text, [key]: typedFigure(value) }))
+              }
             />
           </td>
         </tr>

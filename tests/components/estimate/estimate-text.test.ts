@@ -60,6 +60,36 @@ describe("readInput(name, text)", () => {
   });
 });
 
+describe("readInput(name, text) of a figure that no reservoir can have", () => {
+  it("refuses it at once, at the figure, while the other inputs are still empty", () => {
+    const text = emptyText(12_000, null);
+    text.inputs.porosity = textOfDistribution({ kind: "normalP90P10", p90: 0.1, p10: 0.6 });
+    const { impossible, incomplete, inputs } = readEstimate(text);
+    expect(impossible).toEqual(["porosity"]);
+    expect(incomplete).toHaveLength(9);
+    expect(inputs.porosity.fields.p10.problem).toMatch(/above 0\.47/);
+    expect(inputs.porosity.fields.p90.problem).toBeNull();
+  });
+
+  it("offers to cut off a tail, and is content once it is", () => {
+    const text = textOfDistribution({ kind: "normalP90P10", p90: 0.08, p10: 0.24 });
+    const refused = readInput("porosity", text);
+    // The mean, 0.16, is 2.563 standard deviations of 0.0624 above 0: 0.52 % by the normal table.
+    expect(refused.fields.p90.problem).toContain("0.52 %");
+    expect(refused.cutOff).toEqual({ key: "minimum", value: 0 });
+    const cut = readInput("porosity", { ...text, minimum: "0" });
+    expect(cut).toMatchObject({ cutOff: null, problem: null });
+    expect(cut.distribution).toMatchObject({ minimum: 0 });
+  });
+
+  it("offers no cut where most of the curve is impossible: it is a slip of units", () => {
+    const text = textOfDistribution({ kind: "normalP90P10", p90: 12, p10: 18 });
+    const { fields, cutOff } = readInput("porosity", text);
+    expect(fields.p10.problem).toContain("Is it in per cent?");
+    expect(cutOff).toBeNull();
+  });
+});
+
 describe("convertShape(quantile, to)", () => {
   const quantile = compileDistribution({ kind: "lognormalP90P10", p90: 50, p10: 500 }).quantile;
 
