@@ -43,6 +43,8 @@ export const SCF_PER_SM3 =
 interface Unit {
   /** canonical = value x factor + offset */
   readonly factor: number;
+  /** 1 / factor where that is the whole number: dividing by it is exact (35 % is 0.35), multiplying is not */
+  readonly divisor?: number;
   readonly offset?: number;
   /** other spellings a person may type; case and spaces do not matter */
   readonly aliases?: readonly string[];
@@ -236,8 +238,8 @@ export const quantities = {
     minimum: 0,
     units: {
       fraction: { factor: 1, aliases: ["v/v"] },
-      "%": { factor: 0.01, aliases: ["percent", "mol %", "pu"] },
-      ppm: { factor: 1e-6, aliases: ["ppmv"] },
+      "%": { factor: 0.01, divisor: 100, aliases: ["percent", "mol %", "pu"] },
+      ppm: { factor: 1e-6, divisor: 1e6, aliases: ["ppmv"] },
     },
   },
 } as const satisfies Readonly<Record<string, Quantity>>;
@@ -286,8 +288,12 @@ export function toCanonical<Q extends QuantityName>(
   quantity: Q,
   unit: UnitSymbol<Q>,
 ): number {
-  const { factor, offset = 0 } = unitOf(quantity, unit);
-  return value * factor + offset;
+  return scaleToCanonical(value, unitOf(quantity, unit));
+}
+
+/** `toCanonical` for a unit that has been found already. */
+export function scaleToCanonical(value: number, { factor, divisor, offset = 0 }: Unit): number {
+  return (divisor === undefined ? value * factor : value / divisor) + offset;
 }
 
 /**

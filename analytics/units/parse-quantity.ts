@@ -2,7 +2,7 @@
  * Reads what a person types into a number field: a number, arithmetic ("12*640"), thousands separators and a unit
  * ("38 bar", "52 %"). What cannot be read is refused with a reason in words, to show under the field.
  */
-import { DEGR_AT_ZERO_DEGF, quantityOf, type QuantityName } from "./conversions";
+import { DEGR_AT_ZERO_DEGF, quantityOf, scaleToCanonical, type QuantityName } from "./conversions";
 
 export type ParsedQuantity =
   | {
@@ -211,7 +211,7 @@ export function parseQuantity(
       reason: (suffix ? null : explainLetters(trimmed, quantity)) ?? error.message,
     };
   }
-  const value = typed * unit.factor + (unit.offset ?? 0);
+  const value = scaleToCanonical(typed, unit);
   if (!Number.isFinite(value)) {
     return { ok: false, reason: "The result is too large to be a number." };
   }

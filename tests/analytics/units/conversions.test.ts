@@ -64,6 +64,14 @@ describe("toCanonical", () => {
     expect(degreesRankine(60)).toBeCloseTo(519.67, 12);
   });
 
+  it("takes every whole per cent to the nearest number there is to its hundredth", () => {
+    expect(toCanonical(35, "fraction", "%")).toBe(0.35);
+    for (let percent = 0; percent <= 100; percent += 1) {
+      expect(toCanonical(percent, "fraction", "%")).toBe(Number(`${percent}e-2`));
+      expect(toCanonical(percent, "fraction", "ppm")).toBe(Number(`${percent}e-6`));
+    }
+  });
+
   it("refuses a unit of another quantity", () => {
     const metre: string = "m";
     expect(() => toCanonical(1, "pressure" as QuantityName, metre as "psia")).toThrow(DomainError);
