@@ -3,6 +3,7 @@ import type { NextRequest } from "next/server";
 import type { z } from "zod";
 import { env } from "@/services/env";
 import { InvalidInputError } from "@/services/errors";
+import { inputWords } from "./input-words";
 import { RequestError } from "./request-errors";
 
 const largestBodyBytes = 2 * 1024 * 1024;
@@ -85,7 +86,7 @@ export function parsed<Schema extends z.ZodType>(
   value: unknown,
   where: "body" | "query",
 ): z.output<Schema> {
-  const result = schema.safeParse(value);
+  const result = schema.safeParse(value, { error: inputWords });
   if (result.success) return result.data;
   const problems = result.error.issues.map((issue) => ({
     pointer: `${where === "body" ? "#" : "?"}${pathOf(issue.path, where)}`,

@@ -216,6 +216,8 @@ describe("a request body", () => {
       "#/name",
       "#/rankCorrelation",
     ]);
+    const told = answer.body.errors?.find(({ pointer }) => pointer === "#/rankCorrelation");
+    expect(told?.detail).toMatch(/^must be (at most|less than) 1$/);
   });
 });
 
