@@ -28,6 +28,26 @@ const capital = (text: string) => text[0].toUpperCase() + text.slice(1);
 const labels = (names: readonly (keyof typeof inputCatalogue)[]) =>
   names.map((name) => inputCatalogue[name].label.toLowerCase()).join(", ");
 
+/** Why there are no results of what stands in the fields: "One input is impossible: porosity. …". */
+export function waitingWords({ impossible, incomplete, problem }: EstimateReading): string {
+  if (impossible.length > 0) {
+    const verb = impossible.length === 1 ? "input is" : "inputs are";
+    return `${capital(inWords(impossible.length))} ${verb} impossible: ${labels(impossible)}. Results appear when that is put right.`;
+  }
+  if (incomplete.length > 0) return "Results appear when every input is filled in.";
+  return problem === null
+    ? "Results appear when a fluid sample is entered."
+    : `${problem} Results appear when that is put right.`;
+}
+
+/**
+ * Warnings of a run with few trials, made while somebody types. That the trials are few is its nature, no question for a
+ * reviewer: submitting runs them all.
+ */
+export function previewWarnings(warnings: readonly Warning[]): Warning[] {
+  return warnings.filter(({ code }) => code !== "few_trials");
+}
+
 /** What stands between a draft and a reviewer, worked out from what is in the fields. */
 export function submitChecklist(draft: {
   text: EstimateText;

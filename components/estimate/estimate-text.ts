@@ -9,8 +9,9 @@ import {
   type EstimateInputs,
   type InputName,
 } from "@/analytics/volumetrics/inputs-schema";
+import { definedEnds } from "./input-catalogue";
 import { typedFigure } from "./quantities-of-inputs";
-import { parametersOf, shapeOf } from "./shapes";
+import { isEndless, parametersOf, shapeOf } from "./shapes";
 
 export interface InputText {
   kind: DistributionKind;
@@ -77,14 +78,29 @@ const firstShapes: Record<InputName, DistributionKind> = {
   salesGasFraction: "pert",
 };
 
-/** An estimate that nobody has typed anything into. No figure is proposed. */
+type BoundsText = Pick<InputText, "minimum" | "maximum">;
+
+/** Bounds that an input starts with in a shape: those it has by definition, where the shape has no ends of its own. */
+export function startingBounds(name: InputName, kind: DistributionKind): BoundsText {
+  const { minimum, maximum } = isEndless(kind) ? definedEnds(name) : {};
+  const written = (value: number | undefined) => (value === undefined ? "" : typedFigure(value));
+  return { minimum: written(minimum), maximum: written(maximum) };
+}
+
+/** The input in another shape, its figures as they are. Bounds that nobody has touched become those of the new shape. */
+export function withShape(name: InputName, text: InputText, kind: DistributionKind): InputText {
+  const { minimum, maximum } = startingBounds(name, text.kind);
+  const isUntouched = text.minimum === minimum && text.maximum === maximum;
+  return { ...text, kind, ...(isUntouched ? startingBounds(name, kind) : {}) };
+}
+
+/** An estimate that nobody has typed anything into. No figure is proposed but the ends that a fraction has. */
 export function emptyText(depthFt: number | null, fluid: SeparatorTest | null): EstimateText {
   return {
     inputs: mapInputs((name) => ({
       kind: firstShapes[name],
       fields: {},
-      minimum: "",
-      maximum: "",
+      ...startingBounds(name, firstShapes[name]),
       source: "",
     })),
     correlations: [],

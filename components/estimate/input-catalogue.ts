@@ -1,4 +1,5 @@
 import { inputNames, type InputName } from "@/analytics/volumetrics/inputs-schema";
+import { usualRanges } from "@/analytics/volumetrics/usual-ranges";
 
 /** What an input is called, and in what unit it is kept. Screens list inputs in the order of `inputGroups`. */
 export interface InputDescription {
@@ -57,6 +58,26 @@ export const inputGroups: { title: string; inputs: InputName[] }[] = [
     inputs: ["condensateYieldStbPerMmscf", "gasRecovery", "condensateRecovery", "salesGasFraction"],
   },
 ];
+
+/**
+ * Ends that an input has by definition, so that a curve without ends has to be cut off there: a share of the pores or of
+ * the gas, and a yield, which is never negative.
+ */
+export function definedEnds(name: InputName): { minimum?: number; maximum?: number } {
+  const [minimum, maximum] = usualRanges[name].possible;
+  switch (name) {
+    case "porosity":
+    case "waterSaturation":
+    case "gasRecovery":
+    case "condensateRecovery":
+    case "salesGasFraction":
+      return { minimum, maximum };
+    case "condensateYieldStbPerMmscf":
+      return { minimum };
+    default:
+      return {};
+  }
+}
 
 /** Number of the ledger line of an input, from 1, in the order in which the groups list them. */
 export function lineOf(name: InputName): number {

@@ -9,7 +9,7 @@ import { Menu } from "@/components/ui/choice";
 import { formatFigure, formatPercent, MISSING } from "@/components/ui/format";
 import { Icon } from "@/components/ui/icon";
 import type { InputReading } from "./estimate-reading";
-import type { InputText } from "./estimate-text";
+import { withShape, type InputText } from "./estimate-text";
 import { inputCatalogue, lineOf } from "./input-catalogue";
 import { InputNotes } from "./input-notes";
 import { typedFigure } from "./quantities-of-inputs";
@@ -252,7 +252,7 @@ function ShapeMenu({
           entries: shapes.map((shape) => ({
             label: shape.label,
             current: shape.kind === text.kind,
-            onSelect: () => onChange(reshaped(text, reading, shape.kind)),
+            onSelect: () => onChange(reshaped(name, text, reading, shape.kind)),
           })),
         },
         {
@@ -276,9 +276,14 @@ function ShapeMenu({
   );
 }
 
-function reshaped(text: InputText, reading: InputReading, kind: InputText["kind"]): InputText {
+function reshaped(
+  name: InputName,
+  text: InputText,
+  reading: InputReading,
+  kind: InputText["kind"],
+): InputText {
   if (kind === text.kind) return text;
-  const next = { ...text, kind };
+  const next = withShape(name, text, kind);
   return reading.compiled ? withValues(next, convertShape(reading.compiled.quantile, kind)) : next;
 }
 

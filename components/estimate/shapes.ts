@@ -74,6 +74,11 @@ export const shapes: Shape[] = [
   { kind: "constant", label: "Constant", parameters: [p("value", "best", "Value")] },
 ];
 
+/** Whether the curve of a shape reaches further than any figure that is typed. */
+export function isEndless(kind: DistributionKind): boolean {
+  return kind.startsWith("normal") || kind.startsWith("lognormal");
+}
+
 export function shapeOf(kind: DistributionKind): Shape {
   const shape = shapes.find((candidate) => candidate.kind === kind);
   if (!shape) throw new RangeError(`no such shape: ${kind}`);

@@ -8,9 +8,11 @@ import {
 import { readEstimate, readInput } from "@/components/estimate/estimate-reading";
 import {
   emptyText,
+  startingBounds,
   textOfDistribution,
   textOfInputs,
   withCorrelation,
+  withShape,
 } from "@/components/estimate/estimate-text";
 import { convertShape } from "@/components/estimate/shapes";
 import { readSheet, textOfTest } from "@/components/estimate/sheet-text";
@@ -90,6 +92,45 @@ describe("readInput(name, text) of a figure that no reservoir can have", () => {
   });
 });
 
+describe("startingBounds(name, kind)", () => {
+  it("cuts curves without ends off where a fraction or a yield ends", () => {
+    expect(startingBounds("waterSaturation", "normal")).toEqual({ minimum: "0", maximum: "1" });
+    expect(startingBounds("condensateYieldStbPerMmscf", "normalP90P10")).toEqual({
+      minimum: "0",
+      maximum: "",
+    });
+    const none = { minimum: "", maximum: "" };
+    expect(startingBounds("areaAcres", "lognormalP90P10")).toEqual(none);
+    expect(startingBounds("gasRecovery", "pert")).toEqual(none);
+  });
+
+  it("lets an ordinary porosity and water saturation be typed into a first estimate", () => {
+    const text = emptyText(12_000, null);
+    text.inputs.porosity.fields = { p90: "0.08", p10: "0.24" };
+    text.inputs.waterSaturation.fields = { p90: "0.20", p10: "0.35" };
+    const { impossible, incomplete } = readEstimate(text);
+    expect(impossible).toEqual([]);
+    expect(incomplete).toHaveLength(8);
+  });
+});
+
+describe("withShape(name, text, kind)", () => {
+  const { porosity } = emptyText(null, null).inputs;
+
+  it("brings the bounds of the new shape where nobody has touched them", () => {
+    const pert = withShape("porosity", porosity, "pert");
+    expect(pert).toMatchObject({ kind: "pert", minimum: "", maximum: "" });
+    expect(withShape("porosity", pert, "lognormal")).toMatchObject({ minimum: "0" });
+  });
+
+  it("keeps bounds that somebody typed or took away", () => {
+    const typed = { ...porosity, maximum: "0.3" };
+    expect(withShape("porosity", typed, "pert")).toMatchObject({ minimum: "0", maximum: "0.3" });
+    const without = { ...porosity, minimum: "", maximum: "" };
+    expect(withShape("porosity", without, "normal")).toMatchObject({ minimum: "", maximum: "" });
+  });
+});
+
 describe("convertShape(quantile, to)", () => {
   const quantile = compileDistribution({ kind: "lognormalP90P10", p90: 50, p10: 500 }).quantile;
 
@@ -153,10 +194,10 @@ describe("readSheet(sheet)", () => {
     expect(readSheet(textOfTest(sour)).test).toEqual(sour);
   });
 
-  it("asks for what is missing and leaves out the gas of a vented tank", () => {
+  it("asks for what is missing and leaves out the gas of a tank that was not measured", () => {
     const sheet = textOfTest(buildInputs().fluid);
-    const vented = readSheet({ ...sheet, tankMeasured: false });
-    expect(vented.test?.stockTankGas).toBeNull();
+    const unmeasured = readSheet({ ...sheet, tankMeasured: false });
+    expect(unmeasured.test?.stockTankGas).toBeNull();
     const fields = { ...sheet.fields, "primarySeparator.gasGravity": "" };
     expect(readSheet({ ...sheet, fields }).incomplete).toEqual(["primarySeparator.gasGravity"]);
   });

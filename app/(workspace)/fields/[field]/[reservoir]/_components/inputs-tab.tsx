@@ -1,5 +1,6 @@
 "use client";
 
+import { waitingWords } from "@/components/estimate/checklist";
 import { CorrelationGrid } from "@/components/estimate/correlation-grid";
 import { Drivers } from "@/components/estimate/drivers";
 import { ExceedanceSection } from "@/components/estimate/exceedance-section";
@@ -17,7 +18,7 @@ import { Revisions } from "./revisions";
 
 /** The engineer's main place: ranges at the left, what they come to at the right, as they are typed. */
 export function InputsTab() {
-  const { text, reading, draft, startFirst, results, warnings } = useReservoir();
+  const { text, reading, draft, startFirst, results, resultBasis, warnings } = useReservoir();
   if (!text || !reading) {
     return (
       <EmptyState
@@ -42,6 +43,9 @@ export function InputsTab() {
         <Stack>
           <section>
             <h2 className="sr-only">Inputs</h2>
+            {resultBasis.units === "metric" && (
+              <p className="mb-2 text-13 text-ink-soft">Inputs stay in field units.</p>
+            )}
             <InputTable
               text={text}
               reading={reading}
@@ -109,11 +113,15 @@ function OtherWarnings() {
 }
 
 function Exceedance() {
-  const { results, resultBasis, before, shown, place } = useReservoir();
+  const { results, resultBasis, before, shown, place, reading } = useReservoir();
   if (!results.summary) {
     return (
       <Section title="How much, and how sure">
-        <p className="text-ink-soft">The curve appears when every input is filled in.</p>
+        <p className="text-ink-soft">
+          {reading && reading.impossible.length > 0
+            ? "The curve appears when no input is impossible."
+            : "The curve appears when every input is filled in."}
+        </p>
       </Section>
     );
   }
@@ -130,7 +138,7 @@ function Exceedance() {
 
 /** Marks, drivers, the way to the reviewer and the revisions. */
 function LiveResults() {
-  const { results, resultBasis, before, draft, shown } = useReservoir();
+  const { results, resultBasis, before, draft, reading } = useReservoir();
   const { summary } = results;
   return (
     <>
@@ -145,7 +153,7 @@ function LiveResults() {
         <Skeleton lines={7} label="Working the results out" />
       ) : (
         <p className="text-13 text-ink-soft">
-          {shown ? "Not run yet." : "Results appear when every input is filled in."}
+          {reading && !reading.estimate ? waitingWords(reading) : "Not run yet."}
         </p>
       )}
       {summary && <Drivers summary={summary} basis={resultBasis} />}
@@ -156,7 +164,7 @@ function LiveResults() {
 }
 
 function RunWords() {
-  const { results, before, draft, resultBasis } = useReservoir();
+  const { results, before, draft, reading, resultBasis } = useReservoir();
   const { summary, isFull, isStale } = results;
   if (!summary) return null;
   const { p90 } = summary.results.condensateRecoverableStb;
@@ -170,7 +178,8 @@ function RunWords() {
         </span>
       </div>
       <p>
-        {isStale && draft ? "Catching up with what you typed. " : ""}
+        {isStale && draft && (reading?.estimate ? "Catching up with what you typed. " : "")}
+        {isStale && reading && !reading.estimate && `${waitingWords(reading)} `}
         P90 of condensate is known to within {(error * 100).toFixed(1)} % (one standard error).{" "}
         {resultBasis.words}.{before && ` Box behind a mark: approved r${before.revision}.`}
       </p>
