@@ -7,6 +7,7 @@ import { useCan } from "@/app/_client/use-session";
 import type { EstimateBodyView } from "@/app/api/v1/estimates/schema";
 import type { ReservoirPageView } from "@/app/api/v1/fields/file-schema";
 import { useBasis } from "@/components/basis/use-basis";
+import { previewWarnings } from "@/components/estimate/checklist";
 import { readEstimate, type EstimateReading } from "@/components/estimate/estimate-reading";
 import { textOfInputs, type EstimateText } from "@/components/estimate/estimate-text";
 import { resultBasisOf, type ResultBasis } from "@/components/estimate/result-rows";
@@ -113,7 +114,9 @@ function TypingProvider({ place, page, children }: ProviderProps) {
     text: draft.text,
     reading: draft.reading,
     // The trials notice more than the inputs alone do, but only once they belong to these inputs.
-    warnings: summary && !isStale ? summary.warnings : draft.reading.warnings,
+    warnings:
+      stored?.warnings ??
+      (live.summary && !isStale ? previewWarnings(live.summary.warnings) : draft.reading.warnings),
     results: { summary, isFull: stored !== null, isStale, error: stored ? null : live.error },
     before: page.approved,
     startFirst: null,
