@@ -162,7 +162,7 @@ function SheetCell({
   onChange,
 }: SeparatorSheetProps & { name: SheetFieldName }) {
   if (!isShown(sheet, name)) {
-    return <span className="block pr-2 text-right text-12 text-ink-soft">vented</span>;
+    return <span className="block pr-2 text-right text-12 text-ink-soft">not measured</span>;
   }
   if (!onChange) {
     return <span className="block pr-2 text-right">{sheet.fields[name] || MISSING}</span>;

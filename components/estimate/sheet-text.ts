@@ -73,7 +73,7 @@ export interface SheetReading {
 const emptyFields = () =>
   Object.fromEntries(sheetFieldNames.map((name) => [name, ""])) as Record<SheetFieldName, string>;
 
-/** A sheet to fill in: two stages, tank vented, at the usual base; no figure is proposed but the base and no impurities. */
+/** A sheet to fill in: two stages, tank not measured, at the usual base; no figure is proposed but the base and no impurities. */
 export function emptySheet(): SheetText {
   return {
     stages: 2,
