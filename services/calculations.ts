@@ -2,6 +2,8 @@
  * Calculations without a record behind them: previews on the screens, and questions that scripts ask. All are pure
  * analytics; what is impossible comes back as the place in the request and the reason.
  */
+import { DomainError } from "@/analytics/errors";
+import { acidGasWarnings } from "@/analytics/fluid/acid-gas";
 import { recombine, wellstreamGravityAtYield, yieldConstants } from "@/analytics/fluid/wellstream";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import { gasProperties, type GasProperties } from "@/analytics/gas/gas-properties";
@@ -16,11 +18,14 @@ import {
 } from "@/analytics/units/standard-conditions";
 import { inPlace } from "@/analytics/volumetrics/in-place";
 import { checkInputs } from "@/analytics/volumetrics/check-inputs";
-import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
+import { extremeConditionWarnings } from "@/analytics/volumetrics/extreme-conditions";
+import type { EstimateInputs, InputName } from "@/analytics/volumetrics/inputs-schema";
+import { compileInput } from "@/analytics/volumetrics/prepare-inputs";
 import type { SimulationSummary } from "@/analytics/volumetrics/results-schema";
 import { wellstreamRates, type MeteredRate } from "@/analytics/volumetrics/rates";
+import type { Warning } from "@/analytics/warnings";
 import { runSimulation } from "./compute/pool";
-import { refuseImpossible } from "./errors";
+import { InvalidInputError, refuseImpossible, toPointer } from "./errors";
 
 interface GasQuestion {
   gasGravity: number;
@@ -33,7 +38,11 @@ interface GasQuestion {
 
 /** z, formation volume factor, density and viscosity of a gas of known gravity. */
 export function calculateZFactor(question: GasQuestion): GasProperties {
-  return refuseImpossible("", () => gasProperties(question));
+  const { pressurePsia, temperatureDegF } = question;
+  refuseOutsidePossible("", { pressurePsia, temperatureDegF });
+  const properties = refuseImpossible("", () => gasProperties(question));
+  const warnings = [...properties.warnings, ...dangersOf(question, question)];
+  return { ...properties, warnings: warnings.map(about({ uncertain: "", fluid: "" })) };
 }
 
 /** A separator test's wellstream, its balance, and its gas at reservoir conditions when they are given. */
@@ -43,13 +52,21 @@ export function calculateWellstream(question: {
   metered: MeteredRate | null;
 }) {
   const { separatorTest: test, reservoir, metered } = question;
+  if (reservoir) refuseOutsidePossible("reservoir", reservoir);
   const wellstream = refuseImpossible("separatorTest", () => recombine(test));
   const { temperatureDegR, pressurePsia } = pseudocritical(wellstream.wellstreamGravity, test);
-  const atReservoir =
+  const properties =
     reservoir &&
     refuseImpossible("reservoir", () =>
       gasProperties({ ...test, ...reservoir, gasGravity: wellstream.wellstreamGravity }),
     );
+  const named = about({ uncertain: "reservoir", fluid: "separatorTest" });
+  const atReservoir = properties && {
+    ...properties,
+    warnings: [...properties.warnings, ...dangersOf(reservoir, test)].map(named),
+  };
+  // The reservoir's pressure says more about acid gas than the separator's.
+  const tested = reservoir ? withoutAcidGas(wellstream.warnings) : wellstream.warnings;
   return {
     ...wellstream,
     condensateMolecularWeightMethod:
@@ -62,7 +79,7 @@ export function calculateWellstream(question: {
       metered && atReservoir
         ? wellstreamRates(metered, wellstream, atReservoir.formationVolumeFactorCfPerScf)
         : null,
-    warnings: [...wellstream.warnings, ...(atReservoir?.warnings ?? [])],
+    warnings: [...tested.map(named), ...(atReservoir?.warnings ?? [])],
   };
 }
 
@@ -120,6 +137,10 @@ export function calculateInPlace(question: {
   condensateYieldStbPerMmscf: number | null;
 }) {
   const { separatorTest, zFactor, condensateYieldStbPerMmscf: typedYield, ...rock } = question;
+  refuseOutsidePossible("", {
+    ...rock,
+    ...(typedYield !== null && { condensateYieldStbPerMmscf: typedYield }),
+  });
   const tested = refuseImpossible("separatorTest", () => recombine(separatorTest));
   const condensateYieldStbPerMmscf = typedYield ?? tested.condensateYieldStbPerMmscf;
   const wellstreamGravity = wellstreamGravityAtYield(
@@ -138,7 +159,11 @@ export function calculateInPlace(question: {
     ...result,
     wellstreamGravity,
     condensateYieldStbPerMmscf,
-    warnings: [...tested.warnings, ...result.warnings],
+    warnings: [
+      ...withoutAcidGas(tested.warnings),
+      ...result.warnings,
+      ...dangersOf(rock, separatorTest),
+    ].map(about({ uncertain: "", fluid: "separatorTest" })),
   };
 }
 
@@ -171,4 +196,51 @@ export async function calculateSimulation(question: {
   refuseImpossible("inputs", () => checkInputs(inputs));
   const { summary } = await runSimulation(inputs, { trials, seed });
   return summary;
+}
+
+/**
+ * What an estimate refuses is refused here too, every value of it at once.
+ *
+ * @param under  the property of the request body that holds the values
+ */
+function refuseOutsidePossible(under: string, values: Partial<Record<InputName, number>>): void {
+  const problems = (Object.entries(values) as [InputName, number][]).flatMap(([name, value]) => {
+    try {
+      compileInput(name, { kind: "constant", value });
+      return [];
+    } catch (error) {
+      if (!(error instanceof DomainError)) throw error;
+      return [{ pointer: toPointer(name, under), detail: error.message }];
+    }
+  });
+  if (problems.length > 0) throw new InvalidInputError(problems);
+}
+
+/** Cautions that anybody who works at this state with this gas must hear, and corrosion. */
+function dangersOf(
+  state: { pressurePsia: number; temperatureDegF: number },
+  gas: { hydrogenSulphide: number; carbonDioxide: number },
+): Warning[] {
+  return [
+    ...extremeConditionWarnings(state, "The reservoir is at"),
+    ...acidGasWarnings(
+      gas.hydrogenSulphide,
+      gas.carbonDioxide,
+      state.pressurePsia,
+      "at reservoir pressure",
+    ),
+  ];
+}
+
+const withoutAcidGas = (warnings: readonly Warning[]) =>
+  warnings.filter(({ code }) => code !== "sour_gas" && code !== "corrosive_gas");
+
+/** Analytics names inputs as an estimate has them; this names them as the request at hand does. */
+function about(parts: { uncertain: string; fluid: string }): (warning: Warning) => Warning {
+  return ({ input, ...warning }) => {
+    const [part, ...rest] = (input ?? "").split(".");
+    const under = part === "uncertain" || part === "fluid" ? parts[part] : part;
+    const path = [under, ...rest].filter((name) => name !== "").join(".");
+    return path === "" ? warning : { ...warning, input: path };
+  };
 }

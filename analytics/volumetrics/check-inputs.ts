@@ -1,6 +1,7 @@
 import { acidGasWarnings } from "../fluid/acid-gas";
 import type { CompiledDistribution } from "../uncertainty/distribution";
 import type { Warning } from "../warnings";
+import { extremeConditionWarnings } from "./extreme-conditions";
 import { inputNames, type EstimateInputs, type InputName } from "./inputs-schema";
 import { prepareInputs, type PreparedInputs } from "./prepare-inputs";
 import { usualRanges } from "./usual-ranges";
@@ -24,7 +25,13 @@ export function warningsOf(inputs: EstimateInputs, prepared: PreparedInputs): Wa
     ...correlationWarnings(inputs, prepared),
     ...depthWarnings(inputs, prepared),
     ...recoveryWarnings(prepared),
-    ...extremeConditions(prepared),
+    ...extremeConditionWarnings(
+      {
+        pressurePsia: distributions.pressurePsia.range.p10,
+        temperatureDegF: distributions.temperatureDegF.range.p10,
+      },
+      "P10 is",
+    ),
     // The reservoir's pressure says more about acid gas than the separator's.
     ...wellstream.warnings.filter(({ code }) => code !== "sour_gas" && code !== "corrosive_gas"),
     ...acidGasWarnings(
@@ -148,29 +155,6 @@ function recoveryWarnings({ distributions }: PreparedInputs): Warning[] {
       message:
         `${at.toUpperCase()} of condensate recovery, ${figure(condensate[at])}, is above that of gas recovery, ` +
         `${figure(gas[at])}. By depletion condensate recovers less than gas; only cycling can turn that round.`,
-    },
-  ];
-}
-
-/** Where high-pressure, high-temperature practice begins, and where US offshore rules define it (30 CFR 250.804). */
-const HIGH = { pressurePsia: 10_000, temperatureDegF: 300 } as const;
-const DEFINED = { pressurePsia: 15_000, temperatureDegF: 350 } as const;
-
-function extremeConditions({ distributions }: PreparedInputs): Warning[] {
-  const pressure = distributions.pressurePsia.range.p10;
-  const temperature = distributions.temperatureDegF.range.p10;
-  if (pressure < HIGH.pressurePsia && temperature < HIGH.temperatureDegF) return [];
-  const defined = pressure > DEFINED.pressurePsia || temperature > DEFINED.temperatureDegF;
-  return [
-    {
-      code: "high_pressure_high_temperature",
-      severity: "caution",
-      input: pressure >= HIGH.pressurePsia ? "uncertain.pressurePsia" : "uncertain.temperatureDegF",
-      message:
-        `P10 is ${figure(pressure)} psia and ${figure(temperature)} °F: ` +
-        (defined
-          ? "a high-pressure, high-temperature reservoir (above 15,000 psia or 350 °F). Wells and equipment need that rating."
-          : "approaching high-pressure, high-temperature conditions (from 10,000 psia or 300 °F). Check the rating of wells and equipment."),
     },
   ];
 }
