@@ -1,5 +1,6 @@
 import type { Transaction } from "sequelize";
 import type { User } from "@/models/user";
+import { revokeTokensOfUser } from "@/models/queries/api-tokens";
 import {
   countOtherActiveAdministrators,
   countUsers,
@@ -92,15 +93,15 @@ export interface UserPatch {
   name?: string;
   role?: Role;
   active?: boolean;
-  /** a new password; it signs the person out everywhere */
+  /** a new password; it signs the person out everywhere and revokes their API tokens */
   password?: string;
-  /** end every session this person has */
+  /** end every session this person has, and revoke their API tokens */
   signOutEverywhere?: boolean;
 }
 
 /**
  * Change a person. A new role counts from their next request; making them inactive, or a new password, ends their
- * sessions.
+ * sessions and revokes their API tokens.
  *
  * @throws {ConflictError} when it would leave nobody to administer
  */
@@ -131,7 +132,7 @@ export async function updateUser(
     if (passwordHash !== null) user.passwordHash = passwordHash;
     const endsSessions =
       patch.signOutEverywhere === true || passwordHash !== null || changes.after.active === false;
-    if (endsSessions) user.sessionEpoch += 1;
+    const ended = endsSessions ? await endAccess(user, transaction) : {};
     await saveVersioned(user, transaction);
     await recordAudit(
       {
@@ -143,7 +144,7 @@ export async function updateUser(
         after: {
           ...changes.after,
           ...(passwordHash !== null && { password: "replaced" }),
-          ...(endsSessions && { sessions: "ended" }),
+          ...ended,
         },
       },
       transaction,
@@ -161,23 +162,44 @@ async function assertAnotherAdministrator(id: string, transaction: Transaction):
   }
 }
 
-/** End every session of one's own, on every device. */
+/**
+ * Shut every way in that was opened before now: sessions, and the API tokens that somebody may have made with them.
+ * The caller saves the person.
+ *
+ * @returns what the audit trail says of it
+ */
+async function endAccess(
+  user: User,
+  transaction: Transaction,
+): Promise<{ sessions: "ended"; apiTokensRevoked?: number }> {
+  user.sessionEpoch += 1;
+  const revoked = await revokeTokensOfUser(user.id, now(), { transaction });
+  return { sessions: "ended", ...(revoked > 0 && { apiTokensRevoked: revoked }) };
+}
+
+/** End every session of one's own, on every device, and revoke one's API tokens. */
 export async function signOutEverywhere(actor: Actor): Promise<void> {
   await inTransaction(async (transaction) => {
     const user = await findUser(actor.id, { transaction, lock: true });
     if (!user) throw new NotFoundError("person");
-    user.sessionEpoch += 1;
+    const ended = await endAccess(user, transaction);
     await user.save({ transaction });
     await recordAudit(
-      { actor, action: "user.signedOutEverywhere", entity: "user", entityId: user.id },
+      {
+        actor,
+        action: "user.signedOutEverywhere",
+        entity: "user",
+        entityId: user.id,
+        after: ended,
+      },
       transaction,
     );
   });
 }
 
 /**
- * Replace one's own password. It ends every session there is, the present one included: the person signs in again with
- * the new one. Wrong guesses at the present password count as failed attempts to sign in.
+ * Replace one's own password. It ends every session there is, the present one included, and revokes every API token: the
+ * person signs in again with the new one. Wrong guesses at the present password count as failed attempts to sign in.
  *
  * @param networkAddress  where the attempt comes from
  * @throws {InvalidInputError} when the present password is not right, or the new one is the same
@@ -209,7 +231,7 @@ export async function changeOwnPassword(
     const user = await findUser(actor.id, { transaction, lock: true });
     if (!user) throw new NotFoundError("person");
     user.passwordHash = passwordHash;
-    user.sessionEpoch += 1;
+    const ended = await endAccess(user, transaction);
     await saveVersioned(user, transaction);
     await recordAudit(
       {
@@ -217,7 +239,7 @@ export async function changeOwnPassword(
         action: "user.passwordChanged",
         entity: "user",
         entityId: user.id,
-        after: { password: "replaced", sessions: "ended" },
+        after: { password: "replaced", ...ended },
       },
       transaction,
     );

@@ -33,6 +33,19 @@ export async function createTokenRow(
   return ApiToken.create(values, options);
 }
 
+/** @returns how many there were to revoke */
+export async function revokeTokensOfUser(
+  userId: string,
+  at: Date,
+  options: { transaction: Transaction },
+): Promise<number> {
+  const [count] = await ApiToken.update(
+    { revokedAt: at },
+    { where: { userId, revokedAt: null }, ...options },
+  );
+  return count;
+}
+
 export async function recordTokenUse(id: string, at: Date): Promise<void> {
   await ApiToken.update({ lastUsedAt: at }, { where: { id } });
 }

@@ -171,6 +171,47 @@ describe("an API token", () => {
   });
 });
 
+describe("an API token of a person whose access is ended", () => {
+  async function buildBearer(owner: ApiClient) {
+    const body = { name: "budget script" };
+    const { token } = made(await owner.post<NewApiTokenView>("/api/v1/api-tokens", body));
+    const headers = { Authorization: `Bearer ${token}` };
+    return async () => (await visitor().get("/api/v1/session", { headers })).status;
+  }
+
+  it("is revoked when they change their password", async () => {
+    const { client } = await buildUser("engineer");
+    const status = await buildBearer(client);
+    expect(await status()).toBe(200);
+    const body = { currentPassword: password, password: "another-long-secret" };
+    expect((await client.post("/api/v1/session/password", body)).status).toBe(204);
+    expect(await status()).toBe(401);
+  });
+
+  it("is revoked when an administrator replaces the password or signs them out, and the audit trail says so", async () => {
+    for (const patch of [{ password: "another-long-secret" }, { signOutEverywhere: true }]) {
+      const { user, client } = await buildUser("engineer");
+      const status = await buildBearer(client);
+      const path = `/api/v1/users/${user.id}`;
+      made(await (await as("administrator")).patch(path, patch, ifMatch(user)));
+      expect(await status()).toBe(401);
+      const events = await queryRows<{ revoked: string }>(
+        `select after->>'apiTokensRevoked' as revoked from audit_events
+          where entity_id = $1 and action = 'user.updated'`,
+        [user.id],
+      );
+      expect(events).toEqual([{ revoked: "1" }]);
+    }
+  });
+
+  it("is revoked when they sign out everywhere", async () => {
+    const { client } = await buildUser("planner");
+    const status = await buildBearer(client);
+    expect((await client.delete("/api/v1/session")).status).toBe(204);
+    expect(await status()).toBe(401);
+  });
+});
+
 describe("a write with a cookie", () => {
   const write = async (headers: Record<string, string>) =>
     (await signIn("planner")).post("/api/v1/basins", { name: uniqueName("Basin") }, { headers });

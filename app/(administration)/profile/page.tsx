@@ -24,7 +24,10 @@ export default async function ProfilePage() {
       />
       <Columns kind="equal">
         <Stack>
-          <Section title="Password" note="Changing it signs you out on every other device.">
+          <Section
+            title="Password"
+            note="Changing it signs you out on every other device and revokes your API tokens."
+          >
             <PasswordForm email={email} />
           </Section>
           <Section

@@ -25,17 +25,17 @@ const words: Record<PersonQuestion, { title: string; text: string; action: strin
   },
   password: {
     title: "New password for",
-    text: "The old one stops working, and they are signed out on every device.",
+    text: "The old one stops working, they are signed out on every device, and their API tokens are revoked.",
     action: "Set it",
   },
   signOut: {
     title: "Sign out everywhere:",
-    text: "Every session of theirs ends with their next click. They can sign in again.",
+    text: "Every session of theirs ends with their next click, and their API tokens are revoked. They can sign in again.",
     action: "Sign them out",
   },
   deactivate: {
     title: "Make inactive:",
-    text: "They are signed out with their next click and cannot sign in. Their work and their name in the history stay.",
+    text: "They are signed out with their next click, cannot sign in, and their API tokens are revoked. Their work and their name in the history stay.",
     action: "Make inactive",
   },
   activate: {

@@ -54,7 +54,7 @@ export function PasswordForm({ email }: { email: string }) {
       {problem && <Notice tone="error" title={problem} />}
       {isDone && (
         <Notice tone="success" title="Your password is changed.">
-          Other devices are signed out.
+          Other devices are signed out and API tokens are revoked.
         </Notice>
       )}
       {/* Password managers look for whose password this is. */}

@@ -22,7 +22,7 @@ export function SignOutEverywhere() {
         open={isAsking}
         onClose={() => setIsAsking(false)}
         title="Sign out everywhere?"
-        description="Every session of yours ends, on this device too. API tokens go on working; revoke those you do not trust."
+        description="Every session of yours ends, on this device too, and every API token is revoked. Programs need new ones."
         actions={
           <>
             <Button onClick={() => setIsAsking(false)}>Cancel</Button>

@@ -8,7 +8,7 @@ export const GET = withRoute({
   handler: async ({ actor }) => presentSession(actor),
 });
 
-/** End every session of mine, on every device. */
+/** End every session of mine, on every device, and revoke my API tokens. */
 export const DELETE = withRoute({
   may: "session.read",
   handler: ({ actor }) => signOutEverywhere(actor),
