@@ -24,14 +24,14 @@ export async function runImportedEstimates({ importId }: { importId: string }): 
   const row = await findImport(importId);
   if (row?.state !== "applying") return;
   const report = importReportSchema.parse(row.report);
-  const actor = await actorOf(row.createdBy);
+  const { createdBy } = row;
   const ids = report.rows.flatMap(({ estimateId }) => (estimateId ? [estimateId] : []));
   const queue = ids.filter((id) => !(id in report.failedRuns));
   let done = ids.length - queue.length;
 
   async function work(): Promise<void> {
     for (let id = queue.shift(); id !== undefined; id = queue.shift()) {
-      const failure = await runOne(actor, id);
+      const failure = await runOne(createdBy, id);
       done += 1;
       if (failure !== null) report.failedRuns[id] = failure;
       await recordImportProgress(importId, {
@@ -46,18 +46,26 @@ export async function runImportedEstimates({ importId }: { importId: string }): 
   await recordImportProgress(importId, { progress: 1, state: "applied", updatedAt: now() });
 }
 
+/**
+ * The person as they are now. Read before each run, so that one who is made inactive while an import goes on writes
+ * nothing more.
+ */
 async function actorOf(userId: string): Promise<Actor> {
   const user = await findUser(userId);
-  if (!user) throw new NotFoundError("person");
+  if (!user?.active) {
+    throw new ForbiddenError(
+      "The person who brought this file in is no longer active, so nothing is run in their name.",
+    );
+  }
   return { id: user.id, name: user.name, email: user.email, role: user.role };
 }
 
 /** @returns why the estimate has no results, or `null` when it has them or somebody took it further meanwhile */
-async function runOne(actor: Actor, id: string): Promise<string | null> {
+async function runOne(userId: string, id: string): Promise<string | null> {
   const estimate = await findEstimate(id);
   if (!estimate || estimate.computedAt !== null) return null;
   try {
-    await runEstimate(actor, id, estimate.version);
+    await runEstimate(await actorOf(userId), id, estimate.version);
     return null;
   } catch (error) {
     if (error instanceof InvalidInputError) return error.problems[0].detail;
