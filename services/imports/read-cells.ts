@@ -1,8 +1,11 @@
 import { findColumn, fromEngineUnit, toEngineUnit, type Column } from "./columns";
-import type { Problem } from "./problem";
+import { echo, type Problem } from "./problem";
 import type { TableRow } from "./read-table";
 
 const PLAIN_NUMBER = /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d+)?$/i;
+
+/** More than any spreadsheet writes; the patterns below take long over a cell without end. */
+const LONGEST_FIGURE = 64;
 
 /**
  * A figure as typed. Whatever could be read in two ways is refused rather than guessed: 1,250 is a thousand and a
@@ -11,6 +14,7 @@ const PLAIN_NUMBER = /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d+)?$/i;
  * @returns the figure, or the reason why the cell is none
  */
 export function readNumber(cell: string): { value: number } | { reason: string } {
+  if (cell.length > LONGEST_FIGURE) return { reason: "Too long to be a figure." };
   const text = cell.replace(/^\u2212/, "-");
   if (PLAIN_NUMBER.test(text)) {
     const value = Number(text);
@@ -92,7 +96,7 @@ export class CellReader {
     if (/[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f]/.test(cell)) {
       this.refuse(name, "Holds a control character.");
     }
-    return cell.replace(/\s+/g, " ");
+    return cell.slice(0, maximum).replace(/\s+/g, " ");
   }
 
   /** A figure in the engine's unit; `null` when blank or wrong (reported when it is wrong, or needed). */
@@ -157,7 +161,7 @@ export class CellReader {
     return {
       line: this.row.line,
       column: name,
-      value: name === null || this.raw(name) === "" ? null : this.raw(name),
+      value: name === null || this.raw(name) === "" ? null : echo(this.raw(name)),
       reason,
     };
   }

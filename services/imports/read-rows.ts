@@ -1,5 +1,5 @@
 import { nameKey } from "./name-key";
-import type { Problem } from "./problem";
+import { echo, type Problem } from "./problem";
 import { readRow, type ReadRow, type ReservoirRow, type RowFieldData } from "./read-row";
 import type { Table } from "./read-table";
 
@@ -31,7 +31,7 @@ class EarlierRows {
     const at = (column: string, value: unknown, reason: string): Problem => ({
       line: row.line,
       column,
-      value: String(value),
+      value: echo(String(value)),
       reason,
     });
     const siblings = this.fields.get(nameKey(row.field)) ?? [];

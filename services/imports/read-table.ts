@@ -1,9 +1,14 @@
 import { parse, CsvError } from "csv-parse/sync";
 import { columns, findColumn, resolveUnit, unitsOf, type Column } from "./columns";
-import type { Problem } from "./problem";
+import { echo, firstProblems, type Problem } from "./problem";
 
 export const MAX_FILE_BYTES = 5 * 1024 * 1024;
 export const MAX_ROWS = 2000;
+export const MAX_COLUMNS = 300;
+export const MAX_HEADING_LENGTH = 200;
+
+/** Names longer than this are no slip of a column's name, and comparing them takes long. */
+const LONGEST_MISSPELT_NAME = 64;
 
 /** A row of figures as the person typed them, with the line of the file it begins on. */
 export interface TableRow {
@@ -70,6 +75,7 @@ function editDistance(a: string, b: string): number {
 }
 
 function nearestColumn(name: string): string | null {
+  if (name.length > LONGEST_MISSPELT_NAME) return null;
   const [best] = columns
     .map((column) => ({ name: column.name, distance: editDistance(name, column.name) }))
     .sort((a, b) => a.distance - b.distance);
@@ -79,7 +85,8 @@ function nearestColumn(name: string): string | null {
 const HOW_TO_SAVE = "Save the sheet as CSV (comma delimited) and choose that file.";
 
 function fileProblem(reason: string, at: Partial<Problem> = {}): Problem {
-  return { line: null, column: null, value: null, ...at, reason };
+  const { line = null, column = null, value = null } = at;
+  return { line, column: column && echo(column), value: value && echo(value), reason };
 }
 
 function refused(problems: Problem[]): Table {
@@ -89,7 +96,7 @@ function refused(problems: Problem[]): Table {
     units: {},
     rows: [],
     remarkLines: [],
-    problems,
+    problems: firstProblems(problems),
     warnings: [],
   };
 }
@@ -119,7 +126,25 @@ function readRecords(text: string, delimiter: string, firstLine: number): Record
   });
 }
 
+/** Whether the header could be one of ours at all; only then are its names compared. */
+function checkHeaderSize({ line, cells }: Record_): Problem | null {
+  if (cells.length > MAX_COLUMNS) {
+    return fileProblem(
+      `The header has ${cells.length} columns; up to ${MAX_COLUMNS} are read. Delete those that are not for the import.`,
+      { line },
+    );
+  }
+  const long = cells.find((cell) => cell.length > MAX_HEADING_LENGTH);
+  if (long === undefined) return null;
+  return fileProblem(
+    `A heading has ${long.length} characters; up to ${MAX_HEADING_LENGTH} are read. Is the first row the header?`,
+    { line, value: long },
+  );
+}
+
 function checkHeader(header: Record_): Problem[] {
+  const tooLarge = checkHeaderSize(header);
+  if (tooLarge) return [tooLarge];
   const problems: Problem[] = [];
   const seen = new Map<string, number>();
   header.cells.forEach((cell, index) => {
@@ -280,7 +305,7 @@ export function readTable(bytes: Uint8Array): Table {
             ),
           })),
     remarkLines: body.filter(isRemark).map((record) => record.line),
-    problems,
+    problems: firstProblems(problems),
     warnings:
       encoding === "windows-1252"
         ? [

@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { MAX_ROWS, readTable } from "@/services/imports/read-table";
+import { MAX_COLUMNS, MAX_ROWS, readTable } from "@/services/imports/read-table";
 import { templateCsv } from "@/services/imports/template";
 import { goodRow, sheet } from "../../support/import-sheet";
 
@@ -90,6 +90,39 @@ describe("readTable(bytes)", () => {
     const table = read(text);
     expect(table.rows).toEqual([]);
     expect(table.problems[0].reason).not.toBe("");
+  });
+
+  it("refuses a heading without end, at once and without repeating it", () => {
+    const start = performance.now();
+    const { problems } = read(sheet([goodRow()]).replace("area_low", "a".repeat(200_000)));
+    expect(performance.now() - start).toBeLessThan(1_000);
+    expect(problems).toEqual([
+      {
+        line: 1,
+        column: null,
+        value: `${"a".repeat(80)}…`,
+        reason: "A heading has 200000 characters; up to 200 are read. Is the first row the header?",
+      },
+    ]);
+  });
+
+  it("suggests no column for a name that is no slip of one", () => {
+    const [problem] = read(sheet([goodRow()]).replace("area_low", "a".repeat(200))).problems;
+    expect(problem.reason).toContain("Begin the heading with #");
+    expect(problem.column).toBe(`${"a".repeat(80)}…`);
+  });
+
+  it("refuses more columns than it reads", () => {
+    const { problems } = read(sheet([goodRow()]).replace("area_low", ",".repeat(MAX_COLUMNS)));
+    expect(problems).toHaveLength(1);
+    expect(problems[0].reason).toMatch(/^The header has 3\d\d columns; up to 300 are read/);
+  });
+
+  it("keeps the first hundred problems and counts the others", () => {
+    const wrong = Array.from({ length: 150 }, (_, index) => `own ${index}`).join(",");
+    const { problems } = read(sheet([goodRow()]).replace("area_low", wrong));
+    expect(problems).toHaveLength(101);
+    expect(problems.at(-1)).toMatchObject({ line: null, reason: "And 50 more." });
   });
 
   it("refuses more rows than it takes at a time", () => {
