@@ -22,6 +22,7 @@ export function readRange(reader: CellReader, range: RangeColumns): Distribution
   const low = reader.number(column("low"));
   const best = reader.number(column("best"));
   const high = reader.number(column("high"));
+  refuseImpossible(reader, range, { low, best, high });
   const word = reader.choice(column("shape"));
   if (reader.problems.length > refusedBefore) return null;
 
@@ -99,34 +100,71 @@ export function readRange(reader: CellReader, range: RangeColumns): Distribution
 /** Less than one trial in a million: the engine takes such a tail without being told where to end it. */
 const NEGLIGIBLE_MASS = 1e-6;
 
+/** Ending a range that loses more than this would move the percentiles the row gives; a project's choice. */
+const MOST_LOST_MASS = 0.05;
+
+/** Why a range does not go past this end; the reason of most inputs is about the upper one. */
+function whyEnded(range: RangeColumns, side: "below" | "above"): string {
+  const { label, possible, reason } = usualRanges[range.input];
+  return side === "below" && possible[0] === 0 ? `no ${label} is negative` : reason;
+}
+
 /**
- * A sheet has no columns for the ends of a normal or lognormal range, so one that reaches past what is possible ends
- * there, and the row says so. One that lies mostly outside is left as it is, for the engine to refuse with its reason.
+ * Refuses each figure that no reservoir can have, in its own column. A possible range that leaves out its lower end
+ * may still begin there, so that end itself is left to the engine.
+ */
+function refuseImpossible(
+  reader: CellReader,
+  range: RangeColumns,
+  figures: Record<"low" | "best" | "high", number | null>,
+): void {
+  const { label, possible, slip } = usualRanges[range.input];
+  for (const [suffix, value] of Object.entries(figures)) {
+    if (value === null || (value >= possible[0] && value <= possible[1])) continue;
+    const column = `${range.stem}_${suffix}`;
+    const why = whyEnded(range, value < possible[0] ? "below" : "above");
+    // The slip supposes that the figure was meant in the engine's unit; in another unit row 2 is what to look at.
+    const advice = Number(reader.raw(column)) === value ? slip : "Check the unit in row 2.";
+    reader.refuse(
+      column,
+      `The ${label} cannot be ${reader.inOwnUnit(column, value)}: ${why}. ${advice}`,
+    );
+  }
+}
+
+/**
+ * A sheet has no columns for the ends of a normal or lognormal range, so one whose tail reaches past what is possible
+ * ends there, and the row says so. One that would lose more than 5 % is refused: it would no longer have the
+ * percentiles that the row gives.
  */
 function withinPossible(
   reader: CellReader,
   range: RangeColumns,
   distribution: Distribution,
-): Distribution {
+): Distribution | null {
   const [low, high] = usualRanges[range.input].possible;
   const { cdf } = compileDistribution(distribution);
-  const outside = { minimum: cdf(low), maximum: 1 - cdf(high) };
-  if (outside.minimum + outside.maximum > 0.5) return distribution;
-  const ended = { ...distribution };
-  for (const [side, end] of [
-    ["minimum", low],
-    ["maximum", high],
-  ] as const) {
-    if (outside[side] <= NEGLIGIBLE_MASS) continue;
-    Object.assign(ended, { [side]: end });
-    const column = `${range.stem}_${side === "minimum" ? "low" : "high"}`;
-    const share = Number((100 * outside[side]).toPrecision(2));
-    reader.warn(
+  const tails = [
+    { bound: "minimum", suffix: "low", word: "below" as const, end: low, mass: cdf(low) },
+    { bound: "maximum", suffix: "high", word: "above" as const, end: high, mass: 1 - cdf(high) },
+  ]
+    .filter(({ mass }) => mass > NEGLIGIBLE_MASS)
+    .map((tail) => {
+      const column = `${range.stem}_${tail.suffix}`;
+      const share = Number((100 * tail.mass).toPrecision(2));
+      const past = `This range would go ${tail.word} ${reader.inOwnUnit(column, tail.end)} with a chance of ${share} %`;
+      return { ...tail, column, past };
+    });
+  if (tails.reduce((sum, { mass }) => sum + mass, 0) > MOST_LOST_MASS) {
+    const [{ column, past, word }] = tails.sort((a, b) => b.mass - a.mass);
+    reader.refuse(
       column,
-      `This range would go ${side === "minimum" ? "below" : "above"} ${reader.inOwnUnit(column, end)} with a chance of ${share} %; it ends there instead.`,
+      `${past}, but ${whyEnded(range, word)}. Bring low and high closer together, or choose pert or triangular, where they are the ends.`,
     );
+    return null;
   }
-  return ended;
+  for (const { column, past } of tails) reader.warn(column, `${past}; it ends there instead.`);
+  return { ...distribution, ...Object.fromEntries(tails.map(({ bound, end }) => [bound, end])) };
 }
 
 /** Two percentiles fix a normal or lognormal; a third figure must agree with them or it would be dropped unsaid. */

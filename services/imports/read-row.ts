@@ -1,6 +1,7 @@
 import { DomainError } from "@/analytics/errors";
 import { recombine } from "@/analytics/fluid/wellstream";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
+import { compileDistribution } from "@/analytics/uncertainty/distribution";
 import { checkInputs } from "@/analytics/volumetrics/check-inputs";
 import type { EstimateInputs, InputName } from "@/analytics/volumetrics/inputs-schema";
 import { usualRanges } from "@/analytics/volumetrics/usual-ranges";
@@ -174,6 +175,31 @@ function checkWithEngine(
   return null;
 }
 
+/** Warnings about P10, or about how far it lies from P90. */
+const ABOUT_HIGH: ReadonlySet<string> = new Set([
+  "wide_range",
+  "narrow_range",
+  "high_pressure_high_temperature",
+]);
+
+/** The column to look at for a warning: of a range, the filled cell that its percentile comes from. */
+function columnOfWarning(
+  reader: CellReader,
+  { code, input }: Warning,
+  uncertain: Uncertain,
+): string | null {
+  const name = inputOfPath(input);
+  const best = columnOfPath(input);
+  if (name === null || best === null) return best;
+  const { distribution } = uncertain[name];
+  if (distribution.kind === "constant") return best;
+  if (code === "unusual_value") {
+    const isLow = compileDistribution(distribution).range.p90 < usualRanges[name].usual[0];
+    return columnOfPath(`${name}.${isLow ? "low" : "high"}`);
+  }
+  return ABOUT_HIGH.has(code) || reader.isBlank(best) ? columnOfPath(`${name}.high`) : best;
+}
+
 /** A name that can stand in an address, as every name of the book must. */
 function readName(reader: CellReader, column: string): string {
   const name = reader.text(column, { needed: true, maximum: 100 });
@@ -224,7 +250,9 @@ export function readRow(tableRow: TableRow, units: Record<string, string>, today
   ) {
     return { kind: "bad", row: { line, basin, field, reservoir, problems: reader.problems } };
   }
-  for (const { input, message } of warnings) reader.warn(columnOfPath(input), message);
+  for (const warning of warnings) {
+    reader.warn(columnOfWarning(reader, warning, uncertain), warning.message);
+  }
   return {
     kind: "good",
     row: {

@@ -48,6 +48,26 @@ describe("readNumber(cell)", () => {
   });
 });
 
+describe("a very long cell", () => {
+  it.each([
+    ["digits", `${"1".repeat(200_000)}x`],
+    ["points", `${".".repeat(200_000)}1`],
+    ["blanks", `1${" ".repeat(200_000)}1`],
+  ])("of %s is refused as a figure without delay", (_, cell) => {
+    const start = performance.now();
+    expect(readNumber(cell)).toEqual({ reason: "Too long to be a figure." });
+    expect(performance.now() - start).toBeLessThan(100);
+  });
+
+  it("is cut where a problem or a name repeats it", () => {
+    const long = "x".repeat(50_000);
+    const [entry] = read([goodRow({ area_low: long, field: long })]);
+    expect(JSON.stringify(entry).length).toBeLessThan(2_000);
+    const problem = problemsOf({ area_low: long })[0];
+    expect(problem.value).toBe(`${"x".repeat(80)}…`);
+  });
+});
+
 describe("readRows(table, today)", () => {
   it("reads the shape that a column has by default, and a single best as a constant", () => {
     const { uncertain } = good({
@@ -134,7 +154,53 @@ describe("readRows(table, today)", () => {
       gas_recovery_best: "76",
       gas_recovery_high: "83",
     });
-    expect(columns).toEqual(["porosity_high", "gas_recovery_high"]);
+    expect(columns).toEqual([
+      "porosity_low",
+      "porosity_high",
+      "gas_recovery_low",
+      "gas_recovery_best",
+      "gas_recovery_high",
+    ]);
+  });
+
+  it("refuses a figure that no reservoir can have, though most of its range is possible", () => {
+    // Cubic packing of equal spheres leaves 1 - pi/6 = 47.6 % of the volume, the loosest there is.
+    const problems = problemsOf({ porosity_low: "0.3", porosity_high: "0.6" });
+    expect(problems).toMatchObject([{ line: 3, column: "porosity_high", value: "0.6" }]);
+    expect(problems[0].reason).toContain("cannot be 0.6: equal spheres");
+  });
+
+  it("names an impossible figure in its own unit, and asks about that unit", () => {
+    const problems = problemsOf(
+      { porosity_low: "30", porosity_high: "60" },
+      { porosity_low: "%", porosity_high: "%" },
+    );
+    expect(problems).toMatchObject([{ column: "porosity_high", value: "60" }]);
+    expect(problems[0].reason).toMatch(/cannot be 60 %.*Check the unit in row 2\./);
+  });
+
+  it("says of a figure below zero that none is negative", () => {
+    const [problem] = problemsOf({ porosity_low: "-0.1" });
+    expect(problem).toMatchObject({ column: "porosity_low", value: "-0.1" });
+    expect(problem.reason).toContain("no porosity is negative");
+  });
+
+  it("refuses a range of possible figures that would lose more than 5 % past what is possible", () => {
+    // mean 0.275, standard deviation 0.45 / (2 x 1.2816) = 0.1756: below 0 with a chance of 5.9 %
+    const problems = problemsOf({ water_saturation_low: "0.05", water_saturation_high: "0.5" });
+    expect(problems).toMatchObject([{ column: "water_saturation_low", value: "0.05" }]);
+    expect(problems[0].reason).toContain("below 0 with a chance of 5.9 %");
+  });
+
+  it.each([
+    ["low", { porosity_low: "0.02", porosity_high: "0.04" }, "porosity_low", "0.02"],
+    ["high", { porosity_low: "0.25", porosity_high: "0.35" }, "porosity_high", "0.35"],
+    ["wide", { porosity_low: "0.06", porosity_high: "0.2" }, "porosity_high", "0.2"],
+  ])("warns of an unusually %s range in a filled cell", (_, changes, column, value) => {
+    const { warnings } = good(changes as SheetRow);
+    const about = warnings.filter((warning) => warning.column?.startsWith("porosity"));
+    expect(about.at(-1)).toMatchObject({ line: 3, column, value });
+    expect(about.some((warning) => warning.column === "porosity_best")).toBe(false);
   });
 
   it.each([
