@@ -24,7 +24,7 @@ import { compileInput } from "@/analytics/volumetrics/prepare-inputs";
 import type { SimulationSummary } from "@/analytics/volumetrics/results-schema";
 import { wellstreamRates, type MeteredRate } from "@/analytics/volumetrics/rates";
 import type { Warning } from "@/analytics/warnings";
-import { runSimulation } from "./compute/pool";
+import { runSimulation, type ComputeOptions } from "./compute/pool";
 import { InvalidInputError, refuseImpossible, toPointer } from "./errors";
 
 interface GasQuestion {
@@ -186,15 +186,18 @@ export function calculateDistribution(question: { distribution: Distribution; po
 
 const finiteOrNull = (value: number) => (Number.isFinite(value) ? value : null);
 
-/** A simulation whose trials are not kept. Impossible inputs are refused before a thread is asked. */
-export async function calculateSimulation(question: {
-  inputs: EstimateInputs;
-  trials: number;
-  seed: number;
-}): Promise<SimulationSummary> {
+/**
+ * A simulation whose trials are not kept. Impossible inputs are refused before a thread is asked.
+ *
+ * @param options.signal  gives it up: a preview is abandoned with the next keystroke
+ */
+export async function calculateSimulation(
+  question: { inputs: EstimateInputs; trials: number; seed: number },
+  options: ComputeOptions = {},
+): Promise<SimulationSummary> {
   const { inputs, trials, seed } = question;
   refuseImpossible("inputs", () => checkInputs(inputs));
-  const { summary } = await runSimulation(inputs, { trials, seed });
+  const { summary } = await runSimulation(inputs, { trials, seed }, options);
   return summary;
 }
 

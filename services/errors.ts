@@ -75,6 +75,16 @@ export class TooManyRequestsError extends Error {
   }
 }
 
+/** More is being calculated than there is room for; it passes, and the same request may be sent again. */
+export class ServiceBusyError extends Error {
+  override readonly name = "ServiceBusyError";
+  readonly retryAfterSeconds = 5;
+
+  constructor() {
+    super("Too many calculations are waiting. Try again in a few seconds.");
+  }
+}
+
 /** `uncertain.porosity` of an engine message -> `#/inputs/uncertain/porosity` of the request it came in. */
 export function toPointer(path: string | undefined, under = ""): string {
   const parts = [under, path ?? ""].filter((part) => part !== "").join(".");

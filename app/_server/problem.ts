@@ -5,6 +5,7 @@ import {
   ForbiddenError,
   InvalidInputError,
   NotFoundError,
+  ServiceBusyError,
   StaleVersionError,
   TooManyRequestsError,
   toPointer,
@@ -47,6 +48,7 @@ const titles: Record<number, string> = {
   428: "Precondition Required",
   429: "Too Many Requests",
   500: "Internal Server Error",
+  503: "Service Unavailable",
 };
 
 const faultStatus: Record<RequestFault, number> = {
@@ -112,6 +114,9 @@ function describe(error: unknown, origin: Origin): Description {
   if (error instanceof TooManyRequestsError) {
     return { status: 429, code: "too_many_requests", detail: error.message };
   }
+  if (error instanceof ServiceBusyError) {
+    return { status: 503, code: "busy", detail: error.message };
+  }
   return {
     status: 500,
     code: "internal",
@@ -135,7 +140,7 @@ export function problemResponse(error: unknown, origin: Origin): Response {
     "x-request-id": origin.requestId,
   });
   if (description.status === 401) headers.set("www-authenticate", 'Bearer realm="Dewledger"');
-  if (error instanceof TooManyRequestsError) {
+  if (error instanceof TooManyRequestsError || error instanceof ServiceBusyError) {
     headers.set("retry-after", String(error.retryAfterSeconds));
   }
   return new Response(JSON.stringify(problem), { status: description.status, headers });

@@ -149,7 +149,9 @@ export function withRoute<
       response = await respond();
     } catch (error) {
       response = problemResponse(error, { instance, requestId, present });
-      if (response.status >= 500) requestLog.error({ err: error }, "request failed");
+      // Work that ends because its caller went away is no failure, and nobody reads the answer.
+      if (response.status >= 500 && !request.signal.aborted)
+        requestLog.error({ err: error }, "request failed");
     }
     requestLog.info(
       {

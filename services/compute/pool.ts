@@ -4,10 +4,13 @@ import path from "node:path";
 import { Piscina } from "piscina";
 import { ConvergenceError, DomainError } from "@/analytics/errors";
 import type { Ledger, LedgerMember, LedgerOptions } from "@/analytics/portfolio/ledger";
-import type { RollUp, RollUpMember, RollUpOptions } from "@/analytics/portfolio/roll-up";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import type { Simulation, SimulationOptions } from "@/analytics/volumetrics/simulate";
-import type { LedgerTask, Outcome, RollUpTask, SimulationTask } from "./worker";
+import { ServiceBusyError } from "../errors";
+import type { LedgerTask, Outcome, SimulationTask } from "./worker";
+
+/** Tasks that may wait for a thread. More would wait longer than anybody does, each with its inputs in memory. */
+export const MAXIMUM_QUEUE = 64;
 
 /** One pool a process, kept across hot reloads in development. */
 const holder = globalThis as typeof globalThis & { dewledgerComputePool?: Piscina };
@@ -23,6 +26,7 @@ function pool(): Piscina {
     minThreads: 1,
     maxThreads: Math.max(1, availableParallelism() - 1),
     idleTimeout: 60_000,
+    maxQueue: MAXIMUM_QUEUE,
   });
   return holder.dewledgerComputePool;
 }
@@ -32,10 +36,22 @@ export interface ComputeOptions {
   signal?: AbortSignal;
 }
 
+/** @throws {ServiceBusyError} when the queue is full */
+async function run<Value>(
+  name: "simulate" | "ledger",
+  task: SimulationTask | LedgerTask,
+  options: ComputeOptions & { transferList?: ArrayBuffer[] },
+): Promise<Value> {
+  const threads = pool();
+  if (threads.queueSize >= MAXIMUM_QUEUE) throw new ServiceBusyError();
+  return valueOf<Value>(await threads.run(task, { name, ...options }));
+}
+
 /**
  * `simulate` on a thread: the same bytes as on the calling one.
  *
  * @throws {DomainError} as `simulate`
+ * @throws {ServiceBusyError} when too many wait already
  */
 export async function runSimulation(
   inputs: EstimateInputs,
@@ -43,27 +59,14 @@ export async function runSimulation(
   { signal }: ComputeOptions = {},
 ): Promise<Simulation> {
   const task: SimulationTask = { inputs, options };
-  return valueOf<Simulation>(await pool().run(task, { name: "simulate", signal }));
-}
-
-/**
- * `rollUp` on a thread. The members' arrays are copied, so the caller may keep using them.
- *
- * @throws {DomainError} as `rollUp`
- */
-export async function runRollUp(
-  members: RollUpMember[],
-  options: RollUpOptions,
-  { signal }: ComputeOptions = {},
-): Promise<RollUp> {
-  const task: RollUpTask = { members, options };
-  return valueOf<RollUp>(await pool().run(task, { name: "rollUp", signal }));
+  return run<Simulation>("simulate", task, { signal });
 }
 
 /**
  * `computeLedger` on a thread. The members' arrays are handed over, not copied: the caller must not use them again.
  *
  * @throws {DomainError} as `computeLedger`
+ * @throws {ServiceBusyError} when too many wait already
  */
 export async function runLedger(
   members: LedgerMember[],
@@ -76,9 +79,7 @@ export async function runLedger(
       Object.values(vectors).map(({ buffer }) => buffer as ArrayBuffer),
     ),
   );
-  return valueOf<Ledger>(
-    await pool().run(task, { name: "ledger", signal, transferList: [...buffers] }),
-  );
+  return run<Ledger>("ledger", task, { signal, transferList: [...buffers] });
 }
 
 /** Ends the threads; for a process that is about to stop, and for tests. */

@@ -10,12 +10,6 @@ import {
   type LedgerMember,
   type LedgerOptions,
 } from "@/analytics/portfolio/ledger";
-import {
-  rollUp as rollUpMembers,
-  type RollUp,
-  type RollUpMember,
-  type RollUpOptions,
-} from "@/analytics/portfolio/roll-up";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import {
   DEFAULT_TRIALS,
@@ -28,11 +22,6 @@ import { createWorkspace, type SimulationWorkspace } from "@/analytics/volumetri
 export interface SimulationTask {
   inputs: EstimateInputs;
   options: Omit<SimulationOptions, "workspace">;
-}
-
-export interface RollUpTask {
-  members: RollUpMember[];
-  options: RollUpOptions;
 }
 
 export interface LedgerTask {
@@ -61,16 +50,6 @@ export function simulate({ inputs, options }: SimulationTask) {
       return simulateReservoir(inputs, { ...options, trials, workspace });
     },
     ({ vectors }) => Object.values(vectors).map(({ buffer }) => buffer as ArrayBuffer),
-  );
-}
-
-export function rollUp({ members, options }: RollUpTask) {
-  return settle<RollUp>(
-    () => rollUpMembers(members, options),
-    ({ total, groups }) =>
-      [total, ...Object.values(groups).flatMap((values) => Object.values(values))].flatMap(
-        ({ vectors }) => Object.values(vectors).map(({ buffer }) => buffer as ArrayBuffer),
-      ),
   );
 }
 

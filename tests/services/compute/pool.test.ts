@@ -2,9 +2,10 @@ import { execFileSync } from "node:child_process";
 import path from "node:path";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { DomainError } from "@/analytics/errors";
-import { rollUp, type RollUpMember } from "@/analytics/portfolio/roll-up";
+import { computeLedger, type LedgerMember } from "@/analytics/portfolio/ledger";
 import { simulate } from "@/analytics/volumetrics/simulate";
-import { closePool, runRollUp, runSimulation } from "@/services/compute/pool";
+import { closePool, MAXIMUM_QUEUE, runLedger, runSimulation } from "@/services/compute/pool";
+import { ServiceBusyError } from "@/services/errors";
 import { buildInputs } from "../../analytics/volumetrics/estimate-inputs";
 
 beforeAll(() => {
@@ -39,25 +40,37 @@ describe("runSimulation", () => {
       runSimulation(buildInputs(), { trials: 400_000, seed: 1 }, { signal }),
     ).rejects.toThrow(/abort/i);
   });
+
+  it("refuses what would wait behind a full queue, and goes on with the rest", async () => {
+    const inputs = buildInputs();
+    const asked = Array.from({ length: MAXIMUM_QUEUE + 40 }, () =>
+      runSimulation(inputs, { trials: 100, seed: 1 }),
+    );
+    const outcomes = await Promise.allSettled(asked);
+    const refused = outcomes.filter((outcome) => outcome.status === "rejected");
+    expect(refused.length).toBeGreaterThan(0);
+    expect(refused.every(({ reason }) => reason instanceof ServiceBusyError)).toBe(true);
+    expect(outcomes.length - refused.length).toBeGreaterThanOrEqual(MAXIMUM_QUEUE);
+    await expect(runSimulation(inputs, { trials: 100, seed: 1 })).resolves.toBeDefined();
+  });
 });
 
-describe("runRollUp", () => {
-  it("adds up on a thread and leaves the caller's arrays in place", async () => {
+describe("runLedger", () => {
+  it("adds up on a thread as the calling one would have", async () => {
     const { vectors } = simulate(buildInputs(), { trials: 300, seed: 1 });
-    const members: RollUpMember[] = ["a", "b"].map((id) => ({
-      id,
-      group: "basin",
-      vectors: { ...vectors },
-      factors: { condensate: 0.5 },
-      tags: { class: id },
-    }));
-    const options = {
-      quantities: { condensate: "condensateRecoverableStb" },
-      seed: 4,
-      dependence: 0.3,
-      groupBy: ["class"],
-    };
-    expect(await runRollUp(members, options)).toEqual(rollUp(members, options));
-    expect(vectors.condensateRecoverableStb).toHaveLength(300);
+    const buildMembers = (): LedgerMember[] =>
+      ["a", "b"].map((id) => ({
+        id,
+        fieldId: `field-${id}`,
+        basinId: "basin",
+        basinSlug: "basin",
+        classId: "reserves",
+        interest: 0.5,
+        chance: 1,
+        vectors: structuredClone(vectors),
+      }));
+    const options = { seed: 4, basinRankCorrelations: { basin: 0.3 } };
+    const expected = computeLedger(buildMembers(), options);
+    expect(await runLedger(buildMembers(), options)).toEqual(expected);
   });
 });

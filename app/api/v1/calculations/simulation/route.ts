@@ -16,5 +16,5 @@ import { simulationRequestSchema } from "../schema";
 export const POST = withRoute({
   may: "calculation.run",
   body: simulationRequestSchema,
-  handler: ({ body }) => calculateSimulation(body),
+  handler: ({ body, request }) => calculateSimulation(body, { signal: request.signal }),
 });
