@@ -67,7 +67,8 @@ export async function submitEstimate(
 /**
  * Make a submitted estimate the reservoir's approved one; the one before is superseded in the same moment.
  *
- * @param effectiveOn  the business date from which it counts, `YYYY-MM-DD`; today when not given
+ * @param input.effectiveOn  the business date from which it counts, `YYYY-MM-DD`; today when not given
+ * @throws {InvalidInputError} when that date is still to come, or before the approved estimate's own
  */
 export async function approveEstimate(
   actor: Actor,
@@ -82,6 +83,7 @@ export async function approveEstimate(
     assertPossible("estimate.approve", estimate);
 
     const previous = await findApprovedEstimateToSupersede(estimate.reservoirId, transaction);
+    if (input.effectiveOn !== undefined) assertInOrder(input.effectiveOn, previous);
     if (previous) {
       previous.state = "superseded";
       await saveVersioned(previous, transaction);
@@ -125,6 +127,19 @@ export async function approveEstimate(
     await tellAuthors(actor, approved, "approved", transaction);
     return approved;
   });
+}
+
+/** Dates of a reservoir's approved estimates follow one another, so that any past day has one estimate that counted. */
+function assertInOrder(effectiveOn: string, previous: Estimate | null): void {
+  const refuse = (detail: string) => {
+    throw new InvalidInputError([{ pointer: "#/effectiveOn", detail }]);
+  };
+  if (effectiveOn > today()) {
+    refuse("is still to come: approve on the day from which the estimate counts, or later");
+  }
+  if (previous?.effectiveOn && effectiveOn < previous.effectiveOn) {
+    refuse(`is before ${previous.effectiveOn}, from which the present approved estimate counts`);
+  }
 }
 
 /** Send a submitted estimate back. The note says what to do about it, so there must be one. */

@@ -262,6 +262,26 @@ describe("POST /api/v1/estimates/:id/approve", () => {
     expect(seen.body.can.approve).toBe(false);
   });
 
+  it("counts from the date given, and refuses one to come or before the predecessor's", async () => {
+    const reviewer = await as("reviewer");
+    const first = await buildSubmitted();
+    const approve = (estimate: EstimateView, effectiveOn: string) =>
+      reviewer.post<EstimateView>(
+        `${pathOf(estimate)}/approve`,
+        { effectiveOn },
+        ifMatch(estimate),
+      );
+    const early = await approve(first, "2999-01-01");
+    expect(early).toMatchObject({ status: 422, body: { errors: [{ pointer: "#/effectiveOn" }] } });
+    const approved = made(await approve(first, "2025-07-01"));
+    expect(approved.effectiveOn).toBe("2025-07-01");
+
+    const second = await buildSubmitted(approved.reservoirId);
+    const before = await approve(second, "2025-06-30");
+    expect(before).toMatchObject({ status: 422, body: { errors: [{ pointer: "#/effectiveOn" }] } });
+    expect((await approve(second, "2025-07-01")).status).toBe(200);
+  });
+
   it("answers 409 when it was approved already", async () => {
     const reviewer = await as("reviewer");
     const approved = await buildApproved();
