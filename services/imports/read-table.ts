@@ -6,6 +6,7 @@ export const MAX_FILE_BYTES = 5 * 1024 * 1024;
 export const MAX_ROWS = 2000;
 export const MAX_COLUMNS = 300;
 export const MAX_HEADING_LENGTH = 200;
+const MAX_CELLS = MAX_ROWS * MAX_COLUMNS;
 
 /** Names longer than this are no slip of a column's name, and comparing them takes long. */
 const LONGEST_MISSPELT_NAME = 64;
@@ -49,7 +50,8 @@ function decode(bytes: Uint8Array): { text: string; encoding: Table["encoding"] 
 function detectDelimiter(headerLine: string): Table["delimiter"] {
   const candidates = [",", ";", "\t"] as const;
   const score = (delimiter: string): number =>
-    headerLine.split(delimiter).filter((cell) => findColumn(normaliseName(cell))).length;
+    headerLine.split(delimiter, MAX_COLUMNS).filter((cell) => findColumn(normaliseName(cell)))
+      .length;
   return candidates.reduce((best, next) => (score(next) > score(best) ? next : best));
 }
 
@@ -126,14 +128,41 @@ function readRecords(text: string, delimiter: string, firstLine: number): Record
   });
 }
 
-/** Whether the header could be one of ours at all; only then are its names compared. */
-function checkHeaderSize({ line, cells }: Record_): Problem | null {
-  if (cells.length > MAX_COLUMNS) {
-    return fileProblem(
-      `The header has ${cells.length} columns; up to ${MAX_COLUMNS} are read. Delete those that are not for the import.`,
-      { line },
-    );
+/**
+ * Whether the text has more cells than a sheet can use. Separators are counted before any cell is read, because
+ * reading millions of empty cells would hold up everyone else for seconds.
+ */
+function checkSize(text: string, delimiter: string, firstLine: number): Problem | null {
+  let quoted = false;
+  let line = firstLine;
+  let inRecord = 1;
+  let total = 0;
+  for (const char of text) {
+    if (char === '"') quoted = !quoted;
+    else if (char === "\n") {
+      line += 1;
+      if (!quoted) inRecord = 1;
+    } else if (char === delimiter && !quoted) {
+      inRecord += 1;
+      total += 1;
+      if (inRecord > MAX_COLUMNS) {
+        return fileProblem(
+          `This row has more than ${MAX_COLUMNS} columns, which is the most that is read. Delete the columns that are not for the import.`,
+          { line },
+        );
+      }
+      if (total > MAX_CELLS) {
+        return fileProblem(
+          "The file has more cells than are read at a time. Delete its empty rows and columns, or split it.",
+        );
+      }
+    }
   }
+  return null;
+}
+
+/** A first row with a heading no column could have is no header; its names are not compared. */
+function longHeading({ line, cells }: Record_): Problem | null {
   const long = cells.find((cell) => cell.length > MAX_HEADING_LENGTH);
   if (long === undefined) return null;
   return fileProblem(
@@ -143,8 +172,8 @@ function checkHeaderSize({ line, cells }: Record_): Problem | null {
 }
 
 function checkHeader(header: Record_): Problem[] {
-  const tooLarge = checkHeaderSize(header);
-  if (tooLarge) return [tooLarge];
+  const tooLong = longHeading(header);
+  if (tooLong) return [tooLong];
   const problems: Problem[] = [];
   const seen = new Map<string, number>();
   header.cells.forEach((cell, index) => {
@@ -240,6 +269,8 @@ export function readTable(bytes: Uint8Array): Table {
   const firstLine = declared ? 2 : 1;
   if (declared) text = text.slice(declared[0].length);
   const delimiter = detectDelimiter(text.split(/\r\n|\n|\r/, 1)[0]);
+  const tooLarge = checkSize(text, delimiter, firstLine);
+  if (tooLarge) return refused([tooLarge]);
 
   let records: Record_[];
   try {
