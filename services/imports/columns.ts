@@ -350,7 +350,7 @@ export const columns: readonly Column[] = [
     "stock_tank_gor",
     "gasOilRatio",
     "optional",
-    "Stock tank vapour per stock-tank volume; blank when it was vented unmeasured, it is then estimated",
+    "Stock tank vapour per stock-tank volume; blank when it was not measured, it is then estimated",
     ["265", ""],
   ),
   number("stock_tank_gas_gravity", "gasGravity", "optional", "Stock tank vapour gravity", [
