@@ -3,7 +3,7 @@ import type { NextRequest } from "next/server";
 import type { z } from "zod";
 import { env } from "@/services/env";
 import { InvalidInputError } from "@/services/errors";
-import { inputWords } from "./input-words";
+import { inputWords } from "@/services/input-words";
 import { RequestError } from "./request-errors";
 
 const largestBodyBytes = 2 * 1024 * 1024;

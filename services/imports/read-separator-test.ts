@@ -1,6 +1,7 @@
 import { DomainError } from "@/analytics/errors";
 import { separatorTestSchema, type SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import { baseAtPressure, CANONICAL_BASE } from "@/analytics/units/standard-conditions";
+import { inputWords } from "../input-words";
 import { columnOfPath } from "./columns-of-paths";
 import type { CellReader } from "./read-cells";
 
@@ -84,7 +85,7 @@ export function readSeparatorTest(
     dewPointPsia: reader.number("dew_point"),
   };
   if (reader.problems.length > before) return null;
-  const parsed = separatorTestSchema.safeParse(draft);
+  const parsed = separatorTestSchema.safeParse(draft, { error: inputWords });
   if (parsed.success) return parsed.data;
   for (const issue of parsed.error.issues) {
     reader.refuse(columnOfPath(issue.path.join(".")), `${capitalised(issue.message)}.`);

@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { z } from "zod";
-import { inputWords } from "@/app/_server/input-words";
+import { inputWords } from "@/services/input-words";
 
 function wordsFor(schema: z.ZodType, value: unknown): string {
   const result = schema.safeParse(value, { error: inputWords });
