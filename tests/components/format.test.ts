@@ -1,7 +1,5 @@
 import { describe, expect, it } from "vitest";
 import {
-  chooseScale,
-  formatCompact,
   formatDate,
   formatFigure,
   formatFull,
@@ -81,26 +79,6 @@ describe("splitFigure", () => {
     expect(fractionDigits([5712, 45.23, 0.6264, null])).toBe(3);
     expect(fractionDigits([5712, 480])).toBe(0);
     expect(fractionDigits([])).toBe(0);
-  });
-});
-
-describe("chooseScale", () => {
-  it("takes one unit for a column from its largest value", () => {
-    expect(chooseScale([3.1e11, 2e8], "gasScf").unit).toBe("Bscf");
-    expect(chooseScale([2e8], "gasScf").unit).toBe("MMscf");
-    expect(chooseScale([1.43e8, 5e5], "condensateStb").unit).toBe("MMSTB");
-    expect(chooseScale([5.7e9], "money").unit).toBe("$ million");
-    expect(chooseScale([5.7e9], "money", { currency: "€" }).unit).toBe("€ million");
-  });
-
-  it("leaves Bscf for Tscf only from ten Tscf on", () => {
-    expect(formatCompact(9.9e12, "gasScf")).toEqual({ figure: "9,900", unit: "Bscf" });
-    expect(formatCompact(1.2e13, "gasScf")).toEqual({ figure: "12.0", unit: "Tscf" });
-  });
-
-  it("has a unit even where there is no value", () => {
-    expect(formatCompact(null, "condensateStb")).toEqual({ figure: "–", unit: "MMSTB" });
-    expect(formatCompact(0, "money")).toEqual({ figure: "0", unit: "$ million" });
   });
 });
 

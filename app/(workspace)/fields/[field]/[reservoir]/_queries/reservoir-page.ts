@@ -1,7 +1,6 @@
 "use client";
 
 import { useMutation, useQuery, useQueryClient } from "@tanstack/react-query";
-import { z } from "zod";
 import { request } from "@/app/_client/request";
 import { estimateSchema, type EstimateView } from "@/app/api/v1/estimates/schema";
 import { reservoirPageSchema, type ReservoirPageView } from "@/app/api/v1/fields/file-schema";
@@ -58,9 +57,6 @@ export const runDraft = (id: string, version: number) =>
 
 export const submitDraft = (id: string, version: number, note: string) =>
   post(`/api/v1/estimates/${id}/submit`, version, { note });
-
-export const discardDraft = (id: string, version: number) =>
-  request(`/api/v1/estimates/${id}`, { method: "DELETE", version, schema: z.undefined() });
 
 export const decide = (decision: "approve" | "return", id: string, version: number, note: string) =>
   post(`/api/v1/estimates/${id}/${decision}`, version, note === "" ? {} : { note });
