@@ -23,6 +23,13 @@ export function CompareTab() {
       </EmptyState>
     );
   }
+  if (shown?.state === "approved" && !draft) {
+    return (
+      <EmptyState title={`r${shown.revision} is the approved estimate`}>
+        Open revisions are compared with it here.
+      </EmptyState>
+    );
+  }
   const differences = inputDifferences(inputs, before?.inputs ?? null);
   const changed = differences.filter(({ isSame }) => !isSame);
   const fluidChanged = before !== null && !isSameFluid(inputs.fluid, before.inputs.fluid);
