@@ -1,7 +1,7 @@
 import { nameKey } from "./name-key";
 import { echo, type Problem } from "./problem";
 import { readRow, type ReadRow, type ReservoirRow, type RowFieldData } from "./read-row";
-import type { Table } from "./read-table";
+import type { Table, TableRow } from "./read-table";
 
 /** What two rows of one field may not disagree on, with the column that says it. */
 export const fieldDataColumns = {
@@ -60,6 +60,16 @@ class EarlierRows {
   }
 }
 
+/** One reason for a row whose cells do not stand under their headings, instead of one a cell. */
+function askew({ line, cells }: TableRow): ReadRow {
+  const reason =
+    "This row has more cells than the header, so its figures stand under the wrong headings. " +
+    "Is there a comma in a figure or a name? Leave it out, or put the cell in quotation marks.";
+  const { basin, field, reservoir } = cells;
+  const problems = [{ line, column: null, value: null, reason }];
+  return { kind: "bad", row: { line, basin, field, reservoir, problems } };
+}
+
 /** A field's data may stand in any of its rows: what a row leaves blank is taken from the others. */
 function shareFieldData(rows: readonly ReservoirRow[]): ReservoirRow[] {
   const shared = new Map<string, RowFieldData>();
@@ -93,7 +103,7 @@ export function readRows(table: Table, today: string): ReadRow[] {
   const earlier = new EarlierRows();
   const read = table.rows.map((tableRow): ReadRow => {
     const own = readRow(tableRow, table.units, today);
-    if (own.kind === "bad") return own;
+    if (own.kind === "bad") return tableRow.surplusCells > 0 ? askew(tableRow) : own;
     const problems = earlier.conflicts(own.row);
     if (problems.length > 0) {
       const { line, basin, field, reservoir } = own.row;

@@ -16,6 +16,8 @@ export interface TableRow {
   line: number;
   /** by column name, trimmed; a column that the file does not have is "" */
   cells: Record<string, string>;
+  /** cells to the right of the last heading: in a row that does not read well, the sign of a split cell */
+  surplusCells: number;
 }
 
 export interface Table {
@@ -328,6 +330,7 @@ export function readTable(bytes: Uint8Array): Table {
         ? []
         : rows.map((record) => ({
             line: record.line,
+            surplusCells: Math.max(0, record.cells.length - header.cells.length),
             cells: Object.fromEntries(
               columns.map((column) => {
                 const index = present.find((entry) => entry.column === column)?.index;

@@ -23,6 +23,17 @@ function problemsOf(changes: SheetRow, units: SheetRow = {}) {
 
 const columnsOf = (changes: SheetRow) => problemsOf(changes).map(({ column }) => column);
 
+describe("a row with more cells than the header", () => {
+  it("is refused for that reason alone, not once for every cell that stands askew", () => {
+    const text = sheet([goodRow({ area_low: "SPLIT" })]).replace("SPLIT", "1,520");
+    const [entry] = readRows(readTable(new TextEncoder().encode(text)), TODAY);
+    const problems = entry.kind === "bad" ? entry.row.problems : [];
+    expect(problems).toHaveLength(1);
+    expect(problems[0]).toMatchObject({ line: 3, column: null });
+    expect(problems[0].reason).toContain("more cells than the header");
+  });
+});
+
 describe("readNumber(cell)", () => {
   it.each([
     ["12.5", 12.5],
