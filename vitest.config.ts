@@ -15,6 +15,7 @@ export default defineConfig({
         resolve: { alias },
         test: {
           name: "unit",
+          setupFiles: ["tests/support/property-seed.ts"],
           include: ["tests/{analytics,components,policy,services,scripts}/**/*.test.{ts,tsx}"],
           environment: "node",
         },

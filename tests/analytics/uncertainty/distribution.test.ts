@@ -177,7 +177,9 @@ describe("compileDistribution", () => {
       fc.property(anyDistribution, probability, probability, (definition, p, q) => {
         const { quantile, cdf } = compileDistribution(definition);
         expect(cdf(quantile(p))).toBeCloseTo(p, 8);
-        if (p < q) expect(quantile(p)).toBeLessThanOrEqual(quantile(q));
+        // Two chances a rounding apart may come out in either order of their last digits.
+        const rounding = 1e-12 * Math.abs(quantile(q));
+        if (p < q) expect(quantile(p)).toBeLessThanOrEqual(quantile(q) + rounding);
       }),
     );
   });
