@@ -1,5 +1,6 @@
 import { DomainError } from "../errors";
 import { createOrderWorkspace, type OrderWorkspace } from "../numerics/order-statistics";
+import { normalScoreCorrelation } from "../uncertainty/rank-correlation";
 import { rangeOfSample, summariseSample, type SampleSummary } from "../uncertainty/summary";
 import { vectorNames, type Range, type VectorName } from "../volumetrics/results-schema";
 import { rankTrials, type RankSpread } from "./rank-trials";
@@ -70,7 +71,7 @@ export function scoreCorrelation(rankCorrelation: number): number {
       { input: "rankCorrelation", value: rankCorrelation },
     );
   }
-  return 2 * Math.sin((Math.PI * rankCorrelation) / 6);
+  return normalScoreCorrelation(rankCorrelation);
 }
 
 /**

@@ -41,7 +41,7 @@ export function correlationBlocks<Name extends string>(
     known.set(keyOf(pair.a, pair.b), pair.rank);
   }
   const between = (a: Name, b: Name) =>
-    a === b ? 1 : scoreCorrelation(known.get(keyOf(a, b)) ?? 0);
+    a === b ? 1 : normalScoreCorrelation(known.get(keyOf(a, b)) ?? 0);
   return components(order, pairs).map((names) => {
     const n = names.length;
     const target = Float64Array.from({ length: n * n }, (_, i) =>
@@ -57,7 +57,8 @@ function keyOf(a: string, b: string): string {
   return a < b ? `${a}|${b}` : `${b}|${a}`;
 }
 
-function scoreCorrelation(rank: number): number {
+/** The correlation of normal scores that gives two normal-copula variables a rank correlation: 2 sin(pi r / 6), -1 to 1. */
+export function normalScoreCorrelation(rank: number): number {
   return 2 * Math.sin((Math.PI / 6) * rank);
 }
 
