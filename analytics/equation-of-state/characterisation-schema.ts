@@ -1,0 +1,51 @@
+import { z } from "zod";
+
+/**
+ * How heptanes plus becomes components of the equation of state. `single` keeps it whole; `gamma` splits it by the
+ * three-parameter gamma distribution into `fractions` pseudocomponents.
+ */
+export const heavySplitSchema = z.discriminatedUnion("kind", [
+  z.object({ kind: z.literal("single") }).strict(),
+  z
+    .object({
+      kind: z.literal("gamma"),
+      fractions: z.number().int().min(2).max(5),
+      /** shape of the distribution, 0.5 to 2.5; 1 is exponential */
+      shape: z.number().min(0.5).max(2.5).default(1),
+    })
+    .strict(),
+]);
+export type HeavySplit = z.infer<typeof heavySplitSchema>;
+
+/** What a regression may move, and nothing else. Factors multiply the heavy fractions' properties; 1 is untouched. */
+export const tunableNames = [
+  "heavyCriticalTemperatureFactor",
+  "heavyCriticalPressureFactor",
+  "heavyAcentricFactorFactor",
+  "methaneHeavyInteractionFactor",
+  "heavyVolumeShiftFactor",
+] as const;
+export const tunableNameSchema = z.enum(tunableNames);
+export type TunableName = z.infer<typeof tunableNameSchema>;
+
+export const adjustmentsSchema = z.record(tunableNameSchema, z.number());
+export type Adjustments = z.infer<typeof adjustmentsSchema>;
+
+export const untouched: Adjustments = {
+  heavyCriticalTemperatureFactor: 1,
+  heavyCriticalPressureFactor: 1,
+  heavyAcentricFactorFactor: 1,
+  methaneHeavyInteractionFactor: 1,
+  heavyVolumeShiftFactor: 1,
+};
+
+/** A whole characterisation: with the adjustments all at 1 it is untuned, and marked so wherever it goes. */
+export const characterisationSchema = z
+  .object({
+    split: heavySplitSchema,
+    /** correlation of the heavy fractions' critical properties */
+    criticals: z.enum(["keslerLee", "twu"]),
+    adjustments: adjustmentsSchema,
+  })
+  .strict();
+export type Characterisation = z.infer<typeof characterisationSchema>;
