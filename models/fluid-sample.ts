@@ -6,6 +6,7 @@ import {
   type InferCreationAttributes,
   type NonAttribute,
 } from "sequelize";
+import { noStudy, type SampleStudy } from "@/analytics/fluid/sample-study-schema";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import { sequelize } from "./sequelize";
 import type { Reservoir } from "./reservoir";
@@ -26,6 +27,7 @@ export class FluidSample extends Model<
   declare wellstreamGravity: number;
   declare hydrogenSulphide: number;
   declare dewPointPsia: CreationOptional<number | null>;
+  declare study: CreationOptional<SampleStudy>;
   declare version: CreationOptional<number>;
   declare createdAt: CreationOptional<Date>;
   declare updatedAt: CreationOptional<Date>;
@@ -47,6 +49,7 @@ FluidSample.init(
     wellstreamGravity: { type: DataTypes.DOUBLE, allowNull: false },
     hydrogenSulphide: { type: DataTypes.DOUBLE, allowNull: false },
     dewPointPsia: DataTypes.DOUBLE,
+    study: { type: DataTypes.JSONB, allowNull: false, defaultValue: noStudy },
     version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 1 },
     createdAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
     updatedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },

@@ -1,3 +1,5 @@
+import { isDeepStrictEqual } from "node:util";
+import { noStudy, type SampleStudy } from "@/analytics/fluid/sample-study-schema";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import { recombine } from "@/analytics/fluid/wellstream";
 import type { FluidSample } from "@/models/fluid-sample";
@@ -7,6 +9,7 @@ import { changesBetween, recordAudit } from "./audit";
 import { now, today } from "./clock";
 import { InvalidInputError, NotFoundError, refuseImpossible } from "./errors";
 import { authorise, type Actor } from "./policy";
+import { assertPossibleStudy, studyAfter } from "./sample-studies";
 import { inTransaction } from "./transaction";
 import { assertVersion, saveVersioned } from "./versions";
 
@@ -17,6 +20,8 @@ export interface NewFluidSample {
   sampledOn: string;
   laboratory?: string;
   separatorTest: SeparatorTest;
+  /** what else the laboratory found, and what was made of it; nothing else unless given */
+  study?: SampleStudy;
 }
 
 /**
@@ -53,12 +58,15 @@ export async function getFluidSample(actor: Actor, id: string): Promise<FluidSam
 export async function createFluidSample(actor: Actor, input: NewFluidSample): Promise<FluidSample> {
   authorise(actor, "fluidSample.create");
   assertNotAhead(input.sampledOn);
+  const study = input.study ?? noStudy;
+  assertPossibleStudy(study);
   const values = {
     reservoirId: input.reservoirId,
     name: input.name.trim(),
     sampledOn: input.sampledOn,
     laboratory: input.laboratory ?? "",
     ...keyFigures(input.separatorTest),
+    study,
   };
   return inTransaction(async (transaction) => {
     if (!(await findReservoir(input.reservoirId, { transaction }))) {
@@ -94,14 +102,24 @@ export async function updateFluidSample(
 ): Promise<FluidSample> {
   authorise(actor, "fluidSample.update");
   assertNotAhead(patch.sampledOn);
-  const { separatorTest, ...plain } = patch;
+  const { separatorTest, study, ...plain } = patch;
+  if (study) assertPossibleStudy(study);
   return inTransaction(async (transaction) => {
     const sample = await findFluidSample(id, { transaction, lock: true });
     if (!sample) throw new NotFoundError("fluid sample");
     assertVersion(sample, expectedVersion);
     const changes = changesBetween<Omit<NewFluidSample, "reservoirId">>(
       sample.get({ plain: true }),
-      { ...plain, name: patch.name?.trim(), separatorTest },
+      {
+        ...plain,
+        name: patch.name?.trim(),
+        separatorTest,
+        study: studyAfter(sample.study, {
+          study,
+          changesSeparatorTest:
+            separatorTest !== undefined && !isDeepStrictEqual(separatorTest, sample.separatorTest),
+        }),
+      },
     );
     sample.set({ ...changes.after, ...(separatorTest && keyFigures(separatorTest)) });
     await saveVersioned(sample, transaction);

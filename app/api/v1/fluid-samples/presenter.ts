@@ -15,6 +15,7 @@ export function presentFluidSample(sample: FluidSample): FluidSampleView {
     wellstreamGravity: sample.wellstreamGravity,
     hydrogenSulphide: sample.hydrogenSulphide,
     dewPointPsia: sample.dewPointPsia,
+    study: sample.study,
     version: sample.version,
   };
 }

@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { sampleStudySchema } from "@/analytics/fluid/sample-study-schema";
 import { separatorTestSchema } from "@/analytics/fluid/separator-test-schema";
 import { dateSchema, nameSchema } from "../common-schema";
 
@@ -9,6 +10,8 @@ export const newFluidSampleSchema = z
     sampledOn: dateSchema,
     laboratory: z.string().trim().max(200).optional(),
     separatorTest: separatorTestSchema,
+    /** composition, depletion table and equation of state; a sample without them has only its separator test */
+    study: sampleStudySchema.optional(),
   })
   .strict();
 export type NewFluidSampleRequest = z.infer<typeof newFluidSampleSchema>;
@@ -33,6 +36,7 @@ export const fluidSampleSchema = z.object({
   /** mole fraction of the wellstream */
   hydrogenSulphide: z.number(),
   dewPointPsia: z.number().nullable(),
+  study: sampleStudySchema,
   version: z.number().int(),
 });
 export type FluidSampleView = z.infer<typeof fluidSampleSchema>;
