@@ -109,6 +109,7 @@ export function estimateInputs(values: Partial<EstimateInputs> = {}): EstimateIn
     correlations: [],
     fluid: separatorTest(),
     depthFt: 11_200,
+    recoveryPlan: null,
     ...values,
   };
 }

@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { separatorTestSchema } from "../fluid/separator-test-schema";
+import { recoveryPlanSchema } from "../recovery/recovery-plan-schema";
 import { distributionSchema } from "../uncertainty/distribution-schema";
 
 /** The ten uncertain inputs of an estimate, in the order in which screens list them and trials store them. */
@@ -47,6 +48,11 @@ export const estimateInputsSchema = z
     fluid: separatorTestSchema,
     /** depth of the reservoir, ft subsea or below mudline; only for warnings about gradients */
     depthFt: z.number().positive().nullable(),
+    /**
+     * how recoveries follow from the fluid; with one, the gas and condensate recovery of every trial are worked out and
+     * the two inputs of those names, with their correlations, are not looked at. Inputs stored before plans have none
+     */
+    recoveryPlan: recoveryPlanSchema.nullable().default(null),
   })
   .strict();
 

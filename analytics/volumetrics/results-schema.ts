@@ -1,6 +1,8 @@
 import { z } from "zod";
 import { warningSchema } from "../warnings";
-import { inputNameSchema } from "./inputs-schema";
+import { recoveryRoutes } from "../recovery/recovery-curve-schema";
+import { planInputNames, producingConcepts } from "../recovery/recovery-plan-schema";
+import { inputNames, inputNameSchema } from "./inputs-schema";
 
 /** Quantities stored trial by trial with a revision. Gas in scf at 14.696 psia and 60 degF, condensate in STB. */
 export const vectorNames = [
@@ -28,6 +30,14 @@ export const derivedNames = [
 ] as const;
 export type DerivedName = (typeof derivedNames)[number];
 
+/** Recoveries as fractions of dry gas and condensate in place: sampled without a recovery plan, worked out with one. */
+export const recoveryNames = ["gasRecovery", "condensateRecovery"] as const;
+export type RecoveryName = (typeof recoveryNames)[number];
+
+/** What a result can be driven by: the sampled inputs, and those of a recovery plan. */
+export const driverNames = [...inputNames, ...planInputNames] as const;
+export type DriverName = (typeof driverNames)[number];
+
 /** P90 is the low case: 90 % of trials are at least this. Quantiles use the R-7 method (Hyndman and Fan 1996). */
 export const rangeSchema = z.object({
   p90: z.number(),
@@ -52,7 +62,7 @@ export type QuantitySummary = z.infer<typeof quantitySummarySchema>;
 
 /** What one input does to one result. */
 export const driverSchema = z.object({
-  input: inputNameSchema,
+  input: z.enum(driverNames),
   /** Spearman rank correlation of the input with the result over the trials */
   rankCorrelation: z.number(),
   /** squared rank correlation over the sum of them; 0 for a constant. Shares of correlated inputs overlap */
@@ -62,14 +72,60 @@ export const driverSchema = z.object({
 });
 export type Driver = z.infer<typeof driverSchema>;
 
+/** In order of time. `cycling` counts gas net of fuel and of what was bought or put back, so it can be below zero. */
+export const recoveryPhaseNames = [
+  "aboveDewPoint",
+  "belowDewPoint",
+  "cycling",
+  "blowdown",
+] as const;
+export type RecoveryPhaseName = (typeof recoveryPhaseNames)[number];
+
+/** What a recovery plan did over the trials. Shares are mean volumes over the mean volume in place. */
+export const recoverySummarySchema = z.object({
+  concept: z.enum(producingConcepts),
+  route: z.enum(recoveryRoutes),
+  /** percentiles of the plan's inputs as sampled; those that the concept does not use are left out */
+  inputs: z.partialRecord(z.enum(planInputNames), rangeSchema),
+  /** of the condensate in place; they add up to 1 */
+  shares: z.object({ toTank: z.number(), leftInRock: z.number(), leftInGas: z.number() }),
+  /** they add up to the recoveries; phases that do not happen are left out */
+  phases: z.array(
+    z.object({
+      name: z.enum(recoveryPhaseNames),
+      condensateShare: z.number(),
+      gasShare: z.number(),
+    }),
+  ),
+  /** mean volumes; null without cycling */
+  gasBalance: z
+    .object({
+      injectedScf: z.number(),
+      producedWhileCyclingScf: z.number(),
+      fuelScf: z.number(),
+      makeUpScf: z.number(),
+      /** mean reservoir pressure when injection ends, psia */
+      pressureAtEndPsia: z.number(),
+    })
+    .nullable(),
+  /** share of the trials whose initial pressure is below the curve's dew point */
+  saturatedShare: z.number(),
+});
+export type RecoverySummary = z.infer<typeof recoverySummarySchema>;
+
 export const simulationSummarySchema = z.object({
   engineVersion: z.string(),
   seed: z.number().int(),
   trials: z.number().int(),
-  /** percentiles of the sampled inputs (after truncation), so a screen can show what was actually sampled */
+  /**
+   * percentiles of the sampled inputs (after truncation), so a screen can show what was actually sampled. With a
+   * recovery plan, the two recoveries are those that were worked out
+   */
   inputs: z.record(inputNameSchema, rangeSchema),
   results: z.record(z.enum(resultNames), quantitySummarySchema),
-  derived: z.record(z.enum(derivedNames), rangeSchema),
+  derived: z
+    .record(z.enum(derivedNames), rangeSchema)
+    .and(z.partialRecord(z.enum(recoveryNames), rangeSchema)),
   /** ranked by share of the spread, largest first */
   drivers: z.object({
     wetGasInPlaceScf: z.array(driverSchema),
@@ -77,6 +133,8 @@ export const simulationSummarySchema = z.object({
   }),
   /** the results with every input at its P50 */
   deterministic: z.record(z.enum(resultNames), z.number()),
+  /** null without a recovery plan; summaries stored before plans lack it */
+  recovery: recoverySummarySchema.nullable().default(null),
   warnings: z.array(warningSchema),
 });
 export type SimulationSummary = z.infer<typeof simulationSummarySchema>;

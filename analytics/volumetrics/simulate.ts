@@ -89,6 +89,7 @@ export function simulate(inputs: EstimateInputs, options: SimulationOptions): Si
         ),
       },
       deterministic: columns(resultNames, (name) => swings[name][0]),
+      recovery: null,
       warnings: [...warningsOf(inputs, prepared), ...resultWarnings(results)],
     },
     vectors: columns(vectorNames, (name) => workspace.outputs[name].slice(0, trials)),

@@ -2,7 +2,7 @@ import type { SimulationSummary } from "@/analytics/volumetrics/results-schema";
 import { Tornado } from "@/components/charts/tornado";
 import { Section } from "@/components/ui/section";
 import { driverFinding } from "./findings";
-import { inputCatalogue } from "./input-catalogue";
+import { driverCatalogue } from "./input-catalogue";
 import { resultFactor, resultUnit, type ResultBasis } from "./result-rows";
 
 /** Inputs that make less than this of the spread are left out of the drawing. */
@@ -35,7 +35,7 @@ export function Drivers({
         drivers={drivers
           .filter(({ shareOfSpread }) => shareOfSpread >= LEAST_SHARE)
           .map(({ input, swing, shareOfSpread }) => ({
-            name: inputCatalogue[input].label,
+            name: driverCatalogue[input].label,
             atP90: swing.atP90 * factor,
             atP10: swing.atP10 * factor,
             share: shareOfSpread,

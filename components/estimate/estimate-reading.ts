@@ -158,6 +158,7 @@ export function readEstimate(text: EstimateText): EstimateReading {
     correlations: text.correlations.map((pair) => ({ ...pair })),
     fluid: text.fluid,
     depthFt: text.depthFt,
+    recoveryPlan: null,
   };
   try {
     return { ...partial, estimate, warnings: checkInputs(estimate) };

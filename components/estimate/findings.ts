@@ -1,10 +1,9 @@
 /** What a chart or a table shows, in a sentence with the figures in it. Nothing here is said that was not computed. */
-import type { InputName } from "@/analytics/volumetrics/inputs-schema";
-import type { Driver, Range } from "@/analytics/volumetrics/results-schema";
+import type { Driver, DriverName, Range } from "@/analytics/volumetrics/results-schema";
 import { formatFigure, formatPercent } from "@/components/ui/format";
-import { inputCatalogue } from "./input-catalogue";
+import { driverCatalogue } from "./input-catalogue";
 
-const named = (name: InputName) => inputCatalogue[name].label;
+const named = (name: DriverName) => driverCatalogue[name].label;
 const lower = (text: string) => text[0].toLowerCase() + text.slice(1);
 
 /** "Net thickness and area make 92 % of the spread", or one input alone when it makes most of it. */

@@ -1,4 +1,5 @@
 import { inputNames, type InputName } from "@/analytics/volumetrics/inputs-schema";
+import type { DriverName } from "@/analytics/volumetrics/results-schema";
 import { usualRanges } from "@/analytics/volumetrics/usual-ranges";
 
 /** What an input is called, and in what unit it is kept. Screens list inputs in the order of `inputGroups`. */
@@ -47,6 +48,35 @@ export const inputCatalogue: Record<InputName, InputDescription> = {
     short: "Sales gas",
     unit: "",
     unitWords: "left after fuel and shrinkage",
+  },
+};
+
+/** What can drive a result: the inputs, and those of a recovery plan. */
+export const driverCatalogue: Record<DriverName, InputDescription> = {
+  ...inputCatalogue,
+  abandonmentPressurePsia: {
+    label: "Abandonment pressure",
+    short: "Abandonment",
+    unit: "psia",
+    unitWords: "psia",
+  },
+  condensateCurveFactor: {
+    label: "Condensate curve factor",
+    short: "Curve factor",
+    unit: "",
+    unitWords: "times the curve's condensate recovery",
+  },
+  sweepEfficiency: {
+    label: "Sweep efficiency",
+    short: "Sweep",
+    unit: "",
+    unitWords: "fraction of the gas pore volume",
+  },
+  displacementEfficiency: {
+    label: "Displacement efficiency",
+    short: "Displacement",
+    unit: "",
+    unitWords: "fraction of the swept vapour's condensate",
   },
 };
 

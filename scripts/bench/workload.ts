@@ -100,5 +100,6 @@ function makeInputs(id: string): EstimateInputs {
       dewPointPsia: null,
     },
     depthFt: depth,
+    recoveryPlan: null,
   };
 }

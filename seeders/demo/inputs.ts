@@ -160,5 +160,6 @@ export function inputsOf(
     ],
     fluid: test,
     depthFt: reservoir.depthFt,
+    recoveryPlan: null,
   };
 }

@@ -162,6 +162,7 @@ function checkWithEngine(
         correlations: [],
         fluid,
         depthFt,
+        recoveryPlan: null,
       });
       return reader.problems.length > before ? null : warnings;
     } catch (error) {
@@ -263,7 +264,14 @@ export function readRow(tableRow: TableRow, units: Record<string, string>, today
       fieldData,
       depthFt,
       sample: { name: sampleName, sampledOn, laboratory, separatorTest },
-      inputs: { schemaVersion: 1, uncertain, correlations: [], fluid: separatorTest, depthFt },
+      inputs: {
+        schemaVersion: 1,
+        uncertain,
+        correlations: [],
+        fluid: separatorTest,
+        depthFt,
+        recoveryPlan: null,
+      },
       note,
       warnings: reader.warnings,
     },

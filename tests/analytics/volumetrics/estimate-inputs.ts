@@ -48,6 +48,7 @@ export function buildInputs(
       dewPointPsia: 5200,
     },
     depthFt: 12500,
+    recoveryPlan: null,
     ...changes,
   };
 }
