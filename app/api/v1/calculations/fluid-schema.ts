@@ -418,6 +418,8 @@ export const labSheetResponseSchema = z.object({
       line: z.number().int(),
       column: z.number().int().nullable(),
       value: z.string(),
+      /** where the figure belongs in what was read, such as `depletion.rows.3.gasZ`; absent when it has no place */
+      place: z.string().nullable().optional(),
       /** why it was not read, and what was done: a cell left empty, a row left out */
       message: z.string(),
     }),
