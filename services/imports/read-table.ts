@@ -1,4 +1,5 @@
-import { parse, CsvError } from "csv-parse/sync";
+import { CsvError } from "csv-parse/sync";
+import { readRecords, type CsvRecord } from "../csv-records";
 import { columns, findColumn, resolveUnit, unitsOf, type Column } from "./columns";
 import { echo, firstProblems, type Problem } from "./problem";
 
@@ -105,31 +106,6 @@ function refused(problems: Problem[]): Table {
   };
 }
 
-interface Record_ {
-  line: number;
-  cells: string[];
-}
-
-/** Records with the line each begins on; a quoted cell may hold line breaks, so records and lines differ. */
-function readRecords(text: string, delimiter: string, firstLine: number): Record_[] {
-  const parsed: unknown = parse(text, {
-    delimiter,
-    info: true,
-    relax_column_count: true,
-    record_delimiter: ["\r\n", "\n", "\r"],
-    skip_empty_lines: false,
-  });
-  const records = parsed as { record: string[]; info: { lines: number } }[];
-  // `info.lines` counts the lines up to the end of the record, so each begins where the one before ended.
-  let previousEnd = 0;
-  return records.map(({ record }) => {
-    const breaks = record.reduce((sum, cell) => sum + (cell.match(/\r\n|\n|\r/g)?.length ?? 0), 0);
-    const line = firstLine + previousEnd;
-    previousEnd += 1 + breaks;
-    return { line, cells: record.map((cell) => cell.trim()) };
-  });
-}
-
 /**
  * Whether the text has more cells than a sheet can use. Separators are counted before any cell is read, because
  * reading millions of empty cells would hold up everyone else for seconds.
@@ -164,7 +140,7 @@ function checkSize(text: string, delimiter: string, firstLine: number): Problem 
 }
 
 /** A first row with a heading no column could have is no header; its names are not compared. */
-function longHeading({ line, cells }: Record_): Problem | null {
+function longHeading({ line, cells }: CsvRecord): Problem | null {
   const long = cells.find((cell) => cell.length > MAX_HEADING_LENGTH);
   if (long === undefined) return null;
   return fileProblem(
@@ -173,7 +149,7 @@ function longHeading({ line, cells }: Record_): Problem | null {
   );
 }
 
-function checkHeader(header: Record_): Problem[] {
+function checkHeader(header: CsvRecord): Problem[] {
   const tooLong = longHeading(header);
   if (tooLong) return [tooLong];
   const problems: Problem[] = [];
@@ -222,8 +198,8 @@ function unitProblem(column: Column, line: number, cell: string): Problem {
 
 function readUnits(
   present: { column: Column; index: number }[],
-  unitsRecord: Record_,
-  rows: Record_[],
+  unitsRecord: CsvRecord,
+  rows: CsvRecord[],
 ): { units: Record<string, string>; problems: Problem[] } {
   const units: Record<string, string> = {};
   const problems: Problem[] = [];
@@ -274,7 +250,7 @@ export function readTable(bytes: Uint8Array): Table {
   const tooLarge = checkSize(text, delimiter, firstLine);
   if (tooLarge) return refused([tooLarge]);
 
-  let records: Record_[];
+  let records: CsvRecord[];
   try {
     records = readRecords(text, delimiter, firstLine);
   } catch (error) {
@@ -303,7 +279,7 @@ export function readTable(bytes: Uint8Array): Table {
     const column = findColumn(normaliseName(cell));
     return column ? [{ column, index }] : [];
   });
-  const isRemark = (record: Record_): boolean => record.cells[0]?.startsWith("#") ?? false;
+  const isRemark = (record: CsvRecord): boolean => record.cells[0]?.startsWith("#") ?? false;
   const rows = body.filter((record) => !isRemark(record));
   if (rows.length > MAX_ROWS) {
     return refused([
