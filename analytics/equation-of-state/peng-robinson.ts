@@ -253,6 +253,17 @@ export class PengRobinson {
     return volume;
   }
 
+  /**
+   * Translated volume of a liquid at any temperature and pressure, ft3/lbmol: its smallest root, whether it would boil
+   * there or not. Leaves the equation at that temperature.
+   */
+  liquidVolume(x: Float64Array, pressurePsia: number, temperatureDegR: number): number {
+    this.setTemperature(temperatureDegR);
+    const state = createPhaseState(this.count);
+    this.evaluate(x, pressurePsia, "liquid", state);
+    return this.molarVolume(x, pressurePsia, state.z);
+  }
+
   /** d ln phi along any change dA, dB, dS of the attraction and the co-volume at constant composition. */
   private alongState(
     pressurePsia: number,
