@@ -1,8 +1,9 @@
+import { readComposition } from "@/analytics/composition/read-sheet";
 import type { SampleStudy } from "@/analytics/fluid/sample-study-schema";
-import { InvalidInputError, type InputProblem } from "./errors";
+import { InvalidInputError, refuseImpossible, type InputProblem } from "./errors";
 
 /**
- * Refuse a study whose parts cannot belong together. What a depletion table says about itself is judged by its checks,
+ * Refuse a study whose parts cannot belong together, or a composition that no fluid can have. What a depletion table says about itself is judged by its checks,
  * not here: a flawed table is kept as the laboratory wrote it, with its findings beside it.
  *
  * @throws {InvalidInputError} with pointers under `#/study`
@@ -28,6 +29,8 @@ export function assertPossibleStudy(study: SampleStudy): void {
     });
   }
   if (problems.length > 0) throw new InvalidInputError(problems);
+  const { composition } = study;
+  if (composition) refuseImpossible("study.composition", () => readComposition(composition));
 }
 
 /**
