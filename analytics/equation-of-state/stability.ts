@@ -91,7 +91,7 @@ export class StabilityTest {
     return this.gas.distance < UNSTABLE || this.liquid.distance < UNSTABLE;
   }
 
-  /** One trial, with `feed` evaluated before. */
+  /** One trial from Wilson's K-values, with `feed` evaluated before. */
   search(z: Float64Array, pressurePsia: number, start: TrialStart): TrialPhase {
     const phase = start === "gas" ? this.gas : this.liquid;
     const { lnRatio } = phase;
@@ -102,17 +102,36 @@ export class StabilityTest {
       this.evaluate(z, pressurePsia, lnRatio);
       for (let j = 0; j < n; j += 1) lnRatio[j] = this.feed.lnPhi[j] - this.trial.lnPhi[j];
     }
+    return this.follow(z, pressurePsia, phase);
+  }
+
+  /** A trial from its own last stationary point, with `feed` evaluated before at a pressure near by. */
+  follow(z: Float64Array, pressurePsia: number, phase: TrialPhase): TrialPhase {
+    const { lnRatio } = phase;
     this.descend(z, pressurePsia, lnRatio);
-    let distance = 1 - this.total;
     let farthest = 0;
-    for (let i = 0; i < n; i += 1) {
+    for (let i = 0; i < z.length; i += 1) {
       if (z[i] > 0) farthest = Math.max(farthest, Math.abs(lnRatio[i]));
     }
     phase.trivial = farthest < TRIVIAL;
-    if (phase.trivial) distance = 0;
-    phase.distance = distance;
+    phase.distance = phase.trivial ? 0 : 1 - this.total;
     phase.z = this.trial.z;
     return phase;
+  }
+
+  /**
+   * Slope of a trial's distance against ln p: sum W_i (d ln phi_i(W) - d ln phi_i(z)) / d ln p, for the trial and feed
+   * evaluated last. The stationary point's own movement does not count.
+   */
+  distanceSlope(z: Float64Array, pressurePsia: number): number {
+    const { feed, trial, x, total } = this;
+    this.equation.differentiateByState(z, pressurePsia, feed);
+    this.equation.differentiateByState(x, pressurePsia, trial);
+    let slope = 0;
+    for (let i = 0; i < x.length; i += 1) {
+      slope += total * x[i] * (trial.byLnPressure[i] - feed.byLnPressure[i]);
+    }
+    return slope;
   }
 
   /** Fills the residuals at W = z exp(lnRatio). @returns tm(W) */

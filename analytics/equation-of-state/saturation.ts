@@ -1,0 +1,211 @@
+/** Dew and bubble points at a temperature. */
+import { ConvergenceError, DomainError } from "../errors";
+import { normaliseFeed } from "./flash";
+import type { Mixture } from "./mixture";
+import { PengRobinson } from "./peng-robinson";
+import { StabilityTest, type TrialPhase } from "./stability";
+
+export type SaturationKind = "dewPoint" | "bubblePoint";
+
+export interface SaturationPoint {
+  readonly pressurePsia: number;
+  /** a denser phase appears at a dew point, a lighter one at a bubble point */
+  readonly kind: SaturationKind;
+  /** mole fractions of the first drop or bubble */
+  readonly incipient: Float64Array;
+}
+
+export interface SaturationPressures {
+  /** the highest pressure at which a second phase appears; null above the cricondentherm */
+  readonly upper: SaturationPoint | null;
+  /** psia; below it everything is gas. Null above the cricondentherm */
+  readonly lower: number | null;
+}
+
+/** Where the search starts, psia. */
+const HIGHEST_PSIA = 20_000;
+/** A fluid that shows no second phase from the top down to here shows none in a reservoir, psia. */
+const LOWEST_PSIA = 10;
+const LN_STEP = 0.16;
+const LN_TOLERANCE = 1e-10;
+const MAXIMUM_ITERATIONS = 100;
+const UNSTABLE = -1e-11;
+
+/**
+ * Upper and lower saturation pressure of a fluid at a temperature, by the tangent-plane test: the upper one is the
+ * highest pressure at which the fluid is unstable. From the top down in steps of 15 %, with a closer look where the
+ * distance to the tangent plane only comes near zero (close to the cricondentherm, where the two-phase range is
+ * narrow), then Newton's method on that distance inside the bracket, to 1e-10 of the pressure.
+ *
+ * @param z  mole fractions
+ * @throws {DomainError} for a feed or temperature that cannot be, and for a fluid in two phases even at 20,000 psia
+ * @throws {ConvergenceError} when the stability test does not settle
+ * @see M. L. Michelsen, Fluid Phase Equilib. 9 (1982) 1-19; 23 (1985) 181-192
+ */
+export function saturationPressures(
+  mixture: Mixture,
+  z: Float64Array,
+  temperatureDegR: number,
+): SaturationPressures {
+  const feed = new Float64Array(mixture.names.length);
+  normaliseFeed(z, feed);
+  const equation = new PengRobinson(mixture);
+  equation.setTemperature(temperatureDegR);
+  const search = new Search(equation, feed);
+  const upper = search.upper();
+  return { upper, lower: upper && search.lower(upper.pressurePsia) };
+}
+
+class Search {
+  private readonly stability: StabilityTest;
+
+  constructor(
+    private readonly equation: PengRobinson,
+    private readonly z: Float64Array,
+  ) {
+    this.stability = new StabilityTest(equation);
+  }
+
+  upper(): SaturationPoint | null {
+    let above = Math.log(HIGHEST_PSIA);
+    let farther = Infinity;
+    let distance = this.distance(above);
+    if (distance < UNSTABLE) {
+      throw new DomainError(`The fluid is in two phases even at ${HIGHEST_PSIA} psia`, {
+        input: "moleFractions",
+        value: HIGHEST_PSIA,
+      });
+    }
+    for (let lnP = above - LN_STEP; lnP > Math.log(LOWEST_PSIA); lnP -= LN_STEP) {
+      const next = this.distance(lnP);
+      if (next < UNSTABLE) return this.pointBetween(lnP, above);
+      if (distance < farther && distance < next) {
+        const unstable = this.lookBetween(lnP, lnP + 2 * LN_STEP);
+        if (unstable !== null) return this.pointBetween(unstable, lnP + 2 * LN_STEP);
+      }
+      farther = distance;
+      distance = next;
+      above = lnP;
+    }
+    return null;
+  }
+
+  /** The pressure below which all is gas. Above it a liquid trial must be below the tangent plane. */
+  lower(upperPsia: number): number {
+    const { mixture, temperatureDegR } = this.equation;
+    let resistance = 0;
+    for (let i = 0; i < this.z.length; i += 1) {
+      const lnVapourPressure =
+        Math.log(mixture.criticalPressurePsia[i]) +
+        5.373 *
+          (1 + mixture.acentricFactor[i]) *
+          (1 - mixture.criticalTemperatureDegR[i] / temperatureDegR);
+      resistance += this.z[i] * Math.exp(-lnVapourPressure);
+    }
+    const top = Math.log(upperPsia);
+    let stable = Math.min(-Math.log(resistance), top - 1e-3);
+    while (this.distance(stable) < UNSTABLE) stable -= Math.LN2;
+    let unstable = stable;
+    for (let step = Math.min(0.1, (top - stable) / 8); this.distance(unstable) >= UNSTABLE; ) {
+      stable = unstable;
+      unstable += step;
+      if (unstable >= top) throw this.failure(upperPsia);
+    }
+    return Math.exp(this.root(unstable, stable).lnP);
+  }
+
+  /** Lowest distance of both trials; Infinity when both end at the feed. */
+  private distance(lnP: number): number {
+    const pressurePsia = Math.exp(lnP);
+    this.stability.isUnstable(this.z, pressurePsia);
+    const phase = this.nearest();
+    return phase ? phase.distance : Infinity;
+  }
+
+  private nearest(): TrialPhase | null {
+    const { gas, liquid } = this.stability;
+    if (gas.trivial) return liquid.trivial ? null : liquid;
+    return liquid.trivial || gas.distance < liquid.distance ? gas : liquid;
+  }
+
+  /** Golden section for a pressure with a negative distance. @returns its logarithm, or null when there is none */
+  private lookBetween(low: number, high: number): number | null {
+    const section = (Math.sqrt(5) - 1) / 2;
+    let [a, b] = [low, high];
+    let c = b - section * (b - a);
+    let d = a + section * (b - a);
+    let atC = this.distance(c);
+    let atD = this.distance(d);
+    for (let i = 0; i < 24 && b - a > 1e-6; i += 1) {
+      if (atC < UNSTABLE) return c;
+      if (atD < UNSTABLE) return d;
+      if (atC < atD) {
+        [b, d, atD] = [d, c, atC];
+        c = b - section * (b - a);
+        atC = this.distance(c);
+      } else {
+        [a, c, atC] = [c, d, atD];
+        d = a + section * (b - a);
+        atD = this.distance(d);
+      }
+    }
+    return null;
+  }
+
+  private pointBetween(unstable: number, stable: number): SaturationPoint {
+    const { equation, stability, z } = this;
+    const { lnP, phase } = this.root(unstable, stable);
+    const pressurePsia = Math.exp(lnP);
+    const incipient = z.map((fraction, i) => fraction * Math.exp(phase.lnRatio[i]));
+    const total = incipient.reduce((sum, fraction) => sum + fraction, 0);
+    for (let i = 0; i < incipient.length; i += 1) incipient[i] /= total;
+    const density = (x: Float64Array, zFactor: number) =>
+      x.reduce((sum, fraction, i) => sum + fraction * equation.mixture.molecularWeight[i], 0) /
+      equation.molarVolume(x, pressurePsia, zFactor);
+    const isDenser = density(incipient, phase.z) > density(z, stability.feed.z);
+    return { pressurePsia, kind: isDenser ? "dewPoint" : "bubblePoint", incipient };
+  }
+
+  /**
+   * ln p at which the distance of the trial that is unstable is zero: Newton's method, with bisection when a step
+   * leaves the bracket or the trial is lost to the feed. Ends on the unstable side, so that the trial phase is there.
+   */
+  private root(unstable: number, stable: number): { lnP: number; phase: TrialPhase } {
+    const { equation, stability, z } = this;
+    let inside = unstable;
+    let outside = stable;
+    this.distance(inside);
+    const phase = this.nearest();
+    if (!phase) throw this.failure(Math.exp(inside));
+    const kept = phase.lnRatio.slice();
+    let lnP = inside;
+    for (let iteration = 0; iteration < MAXIMUM_ITERATIONS; iteration += 1) {
+      const pressurePsia = Math.exp(lnP);
+      equation.evaluate(z, pressurePsia, "stable", stability.feed);
+      phase.lnRatio.set(kept);
+      stability.follow(z, pressurePsia, phase);
+      let next = NaN;
+      if (!phase.trivial) {
+        kept.set(phase.lnRatio);
+        next = lnP - phase.distance / stability.distanceSlope(z, pressurePsia);
+        if (Math.abs(next - lnP) < LN_TOLERANCE) return { lnP: next, phase };
+      }
+      if (!phase.trivial && phase.distance < 0) inside = lnP;
+      else outside = lnP;
+      const isBetween = (next - inside) * (next - outside) < 0;
+      lnP = isBetween ? next : 0.5 * (inside + outside);
+      if (Math.abs(outside - inside) < LN_TOLERANCE) {
+        phase.lnRatio.set(kept);
+        return { lnP: inside, phase };
+      }
+    }
+    throw this.failure(Math.exp(lnP));
+  }
+
+  private failure(pressurePsia: number): ConvergenceError {
+    return new ConvergenceError("The saturation pressure did not converge", {
+      pressurePsia,
+      temperatureDegR: this.equation.temperatureDegR,
+    });
+  }
+}
