@@ -257,7 +257,7 @@ function alignPlus(
     const finer = other.components.filter(
       ({ carbonNumber }) => carbonNumber !== null && from !== null && carbonNumber >= from,
     );
-    if (!isPlus(component) || finer.length === 0 || (finer.length === 1 && isPlus(finer[0]!))) {
+    if (!isPlus(component) || finer.length === 0 || (finer.length === 1 && isPlus(finer[0]))) {
       return component;
     }
     const nearest = finer.reduce((best, candidate) =>
@@ -269,7 +269,7 @@ function alignPlus(
       input: `${role}.plus`,
       message:
         `${component.name} of the ${role} is reported whole, while the other stream goes on to ` +
-        `${finer[finer.length - 1]!.name}. It counts as ${nearest.name}, the fraction nearest to it by molecular weight.`,
+        `${finer[finer.length - 1].name}. It counts as ${nearest.name}, the fraction nearest to it by molecular weight.`,
     });
     return { ...component, name: nearest.name, carbonNumber: nearest.carbonNumber };
   });
@@ -282,11 +282,11 @@ function mergeByName(parts: readonly StreamComponent[]): StreamComponent[] {
   const byName = new Map<string, StreamComponent[]>();
   for (const part of parts) byName.set(part.name, [...(byName.get(part.name) ?? []), part]);
   const merged = [...byName.values()].map(([first, ...rest]): StreamComponent => {
-    const lump = lumpFractions(heavyComponents([first!, ...rest]));
-    if (lump) return { ...first!, ...lump };
+    const lump = lumpFractions(heavyComponents([first, ...rest]));
+    if (lump) return { ...first, ...lump };
     return rest.reduce<StreamComponent>(
       (sum, { moleFraction }) => ({ ...sum, moleFraction: sum.moleFraction + moleFraction }),
-      first!,
+      first,
     );
   });
   const rank = ({ light, carbonNumber, name }: StreamComponent) =>

@@ -42,16 +42,16 @@ export function gaussLaguerre(count: number, shape: number): Quadrature {
   const polynomials = (x: number, degree: number) => {
     const values = [1, x - shape];
     for (let k = 1; k < degree; k += 1) {
-      values.push((x - 2 * k - shape) * values[k]! - k * (k + shape - 1) * values[k - 1]!);
+      values.push((x - 2 * k - shape) * values[k] - k * (k + shape - 1) * values[k - 1]);
     }
     return values;
   };
   // the roots of each degree lie strictly between those of the one before (and its ends)
   let nodes = [shape];
   for (let degree = 2; degree <= count; degree += 1) {
-    const value = (x: number) => polynomials(x, degree)[degree]!;
+    const value = (x: number) => polynomials(x, degree)[degree];
     const ends = [0, ...nodes, 4 * degree + 2 * shape + 10];
-    nodes = ends.slice(1).map((high, index) => bisect(value, ends[index]!, high));
+    nodes = ends.slice(1).map((high, index) => bisect(value, ends[index], high));
   }
   const weights = nodes.map((x) => {
     let norm = 1;
@@ -112,7 +112,7 @@ export function gammaSplit(whole: HeptanesPlus, fractions: number, shape: number
   const molecularWeights = nodes.map((node) => smallest + scale * node);
   const factor = gravityFactor(whole, molecularWeights, weights);
   return molecularWeights.map((molecularWeight, index) => ({
-    moleFraction: whole.moleFraction * weights[index]!,
+    moleFraction: whole.moleFraction * weights[index],
     molecularWeight,
     specificGravity: gravityByWeight(molecularWeight, factor),
   }));
@@ -129,7 +129,7 @@ function gravityFactor(
 ): number {
   const volumeError = (factor: number) =>
     molecularWeights.reduce(
-      (sum, weight, index) => sum + (weights[index]! * weight) / gravityByWeight(weight, factor),
+      (sum, weight, index) => sum + (weights[index] * weight) / gravityByWeight(weight, factor),
       0,
     ) -
     molecularWeight / specificGravity;
@@ -177,8 +177,8 @@ export function lumpMeasured(measured: readonly HeavyComponent[], groups: number
     const begins = new Array<number>(n + 1).fill(0);
     for (let end = k + 1; end <= n; end += 1) {
       for (let begin = k; begin < end; begin += 1) {
-        const cost = best[k - 1]![begin]! + spread(begin, end);
-        if (cost < costs[end]!) {
+        const cost = best[k - 1][begin] + spread(begin, end);
+        if (cost < costs[end]) {
           costs[end] = cost;
           begins[end] = begin;
         }
@@ -189,7 +189,7 @@ export function lumpMeasured(measured: readonly HeavyComponent[], groups: number
   }
   const lumps: HeptanesPlus[] = [];
   for (let k = groups - 1, end = n; k >= 0; k -= 1) {
-    const begin = k === 0 ? 0 : cut[k]![end]!;
+    const begin = k === 0 ? 0 : cut[k][end];
     lumps.unshift(lump(begin, end));
     end = begin;
   }

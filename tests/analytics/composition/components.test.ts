@@ -32,7 +32,7 @@ describe("lightConstants", () => {
   it("puts heavier paraffins at higher critical temperatures and lower critical pressures", () => {
     const paraffins = ["C2", "C3", "nC4", "nC5", "C6"] as const;
     paraffins.slice(1).forEach((name, index) => {
-      const lighter = lightConstants[paraffins[index]!];
+      const lighter = lightConstants[paraffins[index]];
       expect(lightConstants[name].criticalTemperatureDegR).toBeGreaterThan(
         lighter.criticalTemperatureDegR,
       );

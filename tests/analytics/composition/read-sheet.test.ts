@@ -6,7 +6,7 @@ import { lightComponents, type ReportedStream } from "@/analytics/composition/co
 import { lumpFractions } from "@/analytics/composition/heptanes-plus";
 import { readComposition, readStream } from "@/analytics/composition/read-sheet";
 import { DomainError } from "@/analytics/errors";
-import { thirdComparativeStream } from "../third-comparative";
+import { studyReported } from "../depletion/third-comparative-study";
 
 const refusal = (act: () => unknown): DomainError => {
   try {
@@ -20,8 +20,8 @@ const refusal = (act: () => unknown): DomainError => {
 
 const drySheet: ReportedStream = { light: { C1: 95, C2: 5 }, carbonNumbers: [], plus: null };
 const withPlus = (change: Partial<NonNullable<ReportedStream["plus"]>>): ReportedStream => ({
-  ...thirdComparativeStream,
-  plus: { ...thirdComparativeStream.plus!, ...change },
+  ...studyReported,
+  plus: { ...studyReported.plus!, ...change },
 });
 
 describe("readStream", () => {
@@ -29,17 +29,17 @@ describe("readStream", () => {
     const { normalised, stream } = readStream({ ...drySheet, light: { C1: 90, C2: 9 } });
     expect(normalised.factor).toBeCloseTo(1.010101, 6);
     expect(normalised.reportedTotalMolePercent).toBeCloseTo(99, 12);
-    expect(stream.components[0]!.moleFraction).toBeCloseTo(90 / 99, 12);
+    expect(stream.components[0].moleFraction).toBeCloseTo(90 / 99, 12);
   });
 
   it("leaves a sheet that adds up alone", () => {
-    expect(readStream(thirdComparativeStream).normalised.factor).toBe(1);
-    expect(readStream(thirdComparativeStream).warnings).toEqual([]);
+    expect(readStream(studyReported).normalised.factor).toBe(1);
+    expect(readStream(studyReported).warnings).toEqual([]);
   });
 
   it("finds the gravity of the third comparative solution project's fluid", () => {
     // sum of y M by hand with the molecular weights of GPA 2145, over 28.9647
-    const { stream } = readStream(thirdComparativeStream);
+    const { stream } = readStream(studyReported);
     expect(stream.molecularWeight).toBeCloseTo(32.613, 3);
     expect(stream.gravity).toBeCloseTo(1.12596, 4);
     expect(stream.heptanesPlus).toEqual({
@@ -53,7 +53,7 @@ describe("readStream", () => {
     const off = (C1: number) => ({ ...drySheet, light: { C1, C2: 5 } });
     expect(readStream(off(94.5)).warnings).toEqual([]);
     expect(readStream(off(93.5)).warnings[0]).toMatchObject({ code: "sum_not_100" });
-    expect(readStream(off(97)).warnings[0]!.message).toContain("102 %");
+    expect(readStream(off(97)).warnings[0].message).toContain("102 %");
     expect(refusal(() => readStream(off(89.9))).details).toMatchObject({ input: "stream" });
     expect(
       refusal(() => readStream({ ...drySheet, light: { C1: 99, C2: 6.1 } })).message,
@@ -107,7 +107,7 @@ describe("readStream", () => {
   it("cautions about hydrogen sulphide", () => {
     const { warnings } = readStream({ ...drySheet, light: { C1: 93, C2: 5, H2S: 2 } });
     expect(warnings).toMatchObject([{ code: "sour_gas", severity: "caution" }]);
-    expect(warnings[0]!.message).toContain("20,000 ppm");
+    expect(warnings[0].message).toContain("20,000 ppm");
   });
 
   it("refuses gaps, doubles and a plus fraction that does not follow on", () => {

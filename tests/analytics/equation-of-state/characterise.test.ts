@@ -9,9 +9,9 @@ import {
 import { characterisationWarnings, characterise } from "@/analytics/equation-of-state/characterise";
 import { keslerLee } from "@/analytics/equation-of-state/heavy-fractions";
 import { volumeShiftAtSixtyDegF } from "@/analytics/equation-of-state/volume-shift";
-import { thirdComparativeStream } from "../third-comparative";
+import { studyReported } from "../depletion/third-comparative-study";
 
-const { stream } = readStream(thirdComparativeStream);
+const { stream } = readStream(studyReported);
 const untuned: Characterisation = {
   split: { kind: "single" },
   criticals: "keslerLee",
@@ -23,7 +23,7 @@ const gamma = (fractions: number): Characterisation => ({
 });
 
 const extended: ReportedStream = {
-  ...thirdComparativeStream,
+  ...studyReported,
   carbonNumbers: [
     // single carbon numbers of the same fluid: Kenyon and Behie (1987), from memory
     { carbonNumber: 7, molePercent: 1.44 },
@@ -79,7 +79,7 @@ describe("characterise", () => {
     let [moles, mass] = [0, 0];
     moleFractions.forEach((value, index) => {
       moles += value;
-      mass += value * mixture.molecularWeight[index]!;
+      mass += value * mixture.molecularWeight[index];
     });
     expect(moles).toBeCloseTo(1, 12);
     expect(mass).toBeCloseTo(reading.molecularWeight, 9);
@@ -126,14 +126,15 @@ describe("characterise", () => {
       },
     }).mixture;
     const { mixture } = characterise(stream, untuned);
-    expect(
-      adjusted.criticalTemperatureDegR[10]! / mixture.criticalTemperatureDegR[10]!,
-    ).toBeCloseTo(1.1, 12);
-    expect(adjusted.criticalPressurePsia[10]! / mixture.criticalPressurePsia[10]!).toBeCloseTo(
+    expect(adjusted.criticalTemperatureDegR[10] / mixture.criticalTemperatureDegR[10]).toBeCloseTo(
+      1.1,
+      12,
+    );
+    expect(adjusted.criticalPressurePsia[10] / mixture.criticalPressurePsia[10]).toBeCloseTo(
       0.9,
       12,
     );
-    expect(adjusted.acentricFactor[10]! / mixture.acentricFactor[10]!).toBeCloseTo(1.05, 12);
+    expect(adjusted.acentricFactor[10] / mixture.acentricFactor[10]).toBeCloseTo(1.05, 12);
     expect(adjusted.interactions[2 * 11 + 10]).toBeCloseTo(2 * (0.14 * 0.774 - 0.0688), 12);
     expect(adjusted.criticalTemperatureDegR.slice(0, 10)).toEqual(
       mixture.criticalTemperatureDegR.slice(0, 10),

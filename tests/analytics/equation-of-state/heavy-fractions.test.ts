@@ -45,8 +45,8 @@ describe("keslerLee", () => {
       (tb) => keslerLee(tb, 0.87).acentricFactor,
     );
     values.slice(1).forEach((value, index) => {
-      expect(value - values[index]!).toBeGreaterThan(0);
-      expect(value - values[index]!).toBeLessThan(0.06);
+      expect(value - values[index]).toBeGreaterThan(0);
+      expect(value - values[index]).toBeLessThan(0.06);
     });
   });
 });

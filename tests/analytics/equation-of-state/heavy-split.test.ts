@@ -12,7 +12,7 @@ import {
 
 const expectAll = (actual: readonly number[], expected: readonly number[], digits: number) => {
   expect(actual).toHaveLength(expected.length);
-  actual.forEach((value, index) => expect(value).toBeCloseTo(expected[index]!, digits));
+  actual.forEach((value, index) => expect(value).toBeCloseTo(expected[index], digits));
 };
 
 describe("gaussLaguerre", () => {
@@ -45,7 +45,7 @@ describe("gaussLaguerre", () => {
           const { nodes, weights } = gaussLaguerre(count, shape);
           let moment = 1;
           for (let k = 0; k < 2 * count; k += 1) {
-            const sum = nodes.reduce((total, x, index) => total + weights[index]! * x ** k, 0);
+            const sum = nodes.reduce((total, x, index) => total + weights[index] * x ** k, 0);
             expect(sum / moment).toBeCloseTo(1, 10);
             moment *= shape + k;
           }
@@ -86,8 +86,8 @@ describe("gammaSplit", () => {
           expect(lump.molecularWeight / molecularWeight).toBeCloseTo(1, 10);
           expect(lump.specificGravity / specificGravity).toBeCloseTo(1, 10);
           fractions.slice(1).forEach((fraction, index) => {
-            expect(fraction.molecularWeight).toBeGreaterThan(fractions[index]!.molecularWeight);
-            expect(fraction.specificGravity).toBeGreaterThan(fractions[index]!.specificGravity);
+            expect(fraction.molecularWeight).toBeGreaterThan(fractions[index].molecularWeight);
+            expect(fraction.specificGravity).toBeGreaterThan(fractions[index].specificGravity);
           });
         },
       ),
@@ -127,7 +127,7 @@ describe("lumpMeasured", () => {
       expect(after.molecularWeight).toBeCloseTo(before.molecularWeight, 9);
       expect(after.specificGravity).toBeCloseTo(before.specificGravity, 12);
       lumps.slice(1).forEach((lump, index) => {
-        expect(lump.molecularWeight).toBeGreaterThan(lumps[index]!.molecularWeight);
+        expect(lump.molecularWeight).toBeGreaterThan(lumps[index].molecularWeight);
       });
     }
   });
@@ -137,9 +137,9 @@ describe("lumpMeasured", () => {
       const mass = rows.map((row) => row.moleFraction * row.molecularWeight);
       const total = mass.reduce((a, b) => a + b, 0);
       const mean =
-        rows.reduce((sum, row, i) => sum + mass[i]! * Math.log(row.molecularWeight), 0) / total;
+        rows.reduce((sum, row, i) => sum + mass[i] * Math.log(row.molecularWeight), 0) / total;
       return rows.reduce(
-        (sum, row, i) => sum + mass[i]! * (Math.log(row.molecularWeight) - mean) ** 2,
+        (sum, row, i) => sum + mass[i] * (Math.log(row.molecularWeight) - mean) ** 2,
         0,
       );
     };
