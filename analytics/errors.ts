@@ -14,6 +14,23 @@ export class DomainError extends Error {
   }
 }
 
+/**
+ * Runs a check of a part; the errors it throws name their input from the whole's point of view: `minimum` of the part
+ * `uncertain.porosity` becomes `uncertain.porosity.minimum`.
+ */
+export function underPath<Result>(path: string, check: () => Result): Result {
+  try {
+    return check();
+  } catch (error) {
+    if (!(error instanceof DomainError)) throw error;
+    const { input } = error.details;
+    throw new DomainError(error.message, {
+      ...error.details,
+      input: input ? `${path}.${input}` : path,
+    });
+  }
+}
+
 /** An iteration that did not reach its tolerance. The caller never receives the last iterate as if it were an answer. */
 export class ConvergenceError extends Error {
   override readonly name = "ConvergenceError";

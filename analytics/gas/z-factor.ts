@@ -63,6 +63,22 @@ export function zAtReducedDensity(reducedDensity: number, reducedTemperature: nu
   );
 }
 
+/**
+ * z from p/z, of which it is an explicit function: rho = 0.27 (p / z) / (Ppc Tpr).
+ *
+ * @param reducedPressureOverZ  (p / z) / Ppc
+ * @example zAtReducedPressureOverZ(3 / zFactor(3, 1.5), 1.5) // => 0.776128, which is zFactor(3, 1.5)
+ */
+export function zAtReducedPressureOverZ(
+  reducedPressureOverZ: number,
+  reducedTemperature: number,
+): number {
+  return zAtReducedDensity(
+    (CRITICAL_Z * reducedPressureOverZ) / reducedTemperature,
+    reducedTemperature,
+  );
+}
+
 interface Sample {
   value: number;
   slope: number;

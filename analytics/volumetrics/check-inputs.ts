@@ -1,9 +1,15 @@
 import { acidGasWarnings } from "../fluid/acid-gas";
+import { wellstreamGravityAtYield, yieldConstants } from "../fluid/wellstream";
+import { pseudocritical } from "../gas/pseudocritical";
+import { zFactor } from "../gas/z-factor";
+import type { CompiledPlan } from "../recovery/compile-plan";
+import { planWarnings, type PlanSurroundings } from "../recovery/plan-warnings";
 import type { CompiledDistribution } from "../uncertainty/distribution";
+import { degreesRankine } from "../units/conversions";
 import type { Warning } from "../warnings";
 import { extremeConditionWarnings } from "./extreme-conditions";
-import { inputNames, type EstimateInputs, type InputName } from "./inputs-schema";
-import { prepareInputs, type PreparedInputs } from "./prepare-inputs";
+import type { EstimateInputs, InputName } from "./inputs-schema";
+import { isRecovery, prepareInputs, type PreparedInputs } from "./prepare-inputs";
 import { usualRanges } from "./usual-ranges";
 import { stateWarnings } from "./state-warnings";
 
@@ -19,12 +25,14 @@ export function checkInputs(inputs: EstimateInputs): Warning[] {
 
 /** The same for inputs that have been prepared already. */
 export function warningsOf(inputs: EstimateInputs, prepared: PreparedInputs): Warning[] {
-  const { distributions, wellstream } = prepared;
+  const { distributions, inputNames, wellstream, plan } = prepared;
   return [
     ...inputNames.flatMap((name) => inputWarnings(name, distributions[name])),
     ...correlationWarnings(inputs, prepared),
     ...depthWarnings(inputs, prepared),
-    ...recoveryWarnings(prepared),
+    ...(plan
+      ? planWarnings(plan, surroundingsOf(inputs, prepared, plan))
+      : recoveryWarnings(prepared)),
     ...extremeConditionWarnings(
       {
         pressurePsia: distributions.pressurePsia.range.p10,
@@ -85,8 +93,20 @@ function inputWarnings(name: InputName, compiled: CompiledDistribution): Warning
   return warnings;
 }
 
-function correlationWarnings(inputs: EstimateInputs, { distributions }: PreparedInputs): Warning[] {
+function correlationWarnings(
+  inputs: EstimateInputs,
+  { distributions, plan }: PreparedInputs,
+): Warning[] {
   return inputs.correlations.flatMap(({ a, b, rank }) => {
+    const replaced = plan && [a, b].find(isRecovery);
+    if (replaced) {
+      return {
+        code: "correlation_without_effect",
+        severity: "warning",
+        input: "correlations",
+        message: `The ${usualRanges[replaced].label} follows from the recovery plan, so its correlation has no effect.`,
+      };
+    }
     const fixed = [a, b].find((name) => distributions[name].definition.kind === "constant");
     if (!fixed || rank === 0) return [];
     return {
@@ -140,6 +160,30 @@ function depthWarnings({ depthFt }: EstimateInputs, { distributions }: PreparedI
     );
   }
   return warnings;
+}
+
+/** What the plan is judged against, at P50. */
+function surroundingsOf(
+  { fluid }: EstimateInputs,
+  { distributions, wellstream }: PreparedInputs,
+  { plan }: CompiledPlan,
+): PlanSurroundings {
+  const { pressurePsia, temperatureDegF, waterSaturation, condensateYieldStbPerMmscf } =
+    distributions;
+  const assumedYield = condensateYieldStbPerMmscf.range.p50;
+  const gravity = wellstreamGravityAtYield(assumedYield, yieldConstants(wellstream));
+  const critical = pseudocritical(gravity, fluid);
+  return {
+    pressure: pressurePsia,
+    temperatureDegF: temperatureDegF.range.p50,
+    waterSaturation: waterSaturation.range.p50,
+    condensateYieldStbPerMmscf: assumedYield,
+    dewPointPsia: fluid.dewPointPsia,
+    zAtDewPoint: zFactor(
+      plan.curve.dewPointPsia / critical.pressurePsia,
+      degreesRankine(temperatureDegF.range.p50) / critical.temperatureDegR,
+    ),
+  };
 }
 
 function recoveryWarnings({ distributions }: PreparedInputs): Warning[] {

@@ -1,5 +1,10 @@
 import { DomainError } from "../errors";
 import { rankByCounting } from "../numerics/order-statistics";
+import { recoveryWarnings } from "../recovery/plan-warnings";
+import { planInputNames } from "../recovery/recovery-plan-schema";
+import { refusals, summariseRecovery, type RefusalName } from "../recovery/recovery-totals";
+import { createRecoveryColumns } from "../recovery/trial-recovery";
+import type { CompiledDistribution } from "../uncertainty/distribution";
 import { rankDrivers, swingColumns } from "../uncertainty/drivers";
 import { spearman } from "../uncertainty/rank-correlation";
 import { rangeOfSample, summariseSample } from "../uncertainty/summary";
@@ -9,18 +14,26 @@ import { inputNames, type EstimateInputs } from "./inputs-schema";
 import { prepareInputs, type PreparedInputs } from "./prepare-inputs";
 import {
   derivedNames,
+  recoveryNames,
   resultNames,
   vectorNames,
   type DerivedName,
   type Driver,
+  type DriverName,
   type QuantitySummary,
   type ResultName,
   type SimulationSummary,
   type TrialVectors,
 } from "./results-schema";
-import { sampleInputs } from "./sample-inputs";
-import { evaluateTrials, fluidConstants, type FluidConstants, type TrialColumns } from "./trials";
-import { columns, createWorkspace, type SimulationWorkspace } from "./workspace";
+import { sampleInputs, samplePlanInputs } from "./sample-inputs";
+import {
+  evaluateTrials,
+  fluidConstants,
+  type EvaluatedTrials,
+  type FluidConstants,
+  type TrialColumns,
+} from "./trials";
+import { columns, createWorkspace, planWorkspace, type SimulationWorkspace } from "./workspace";
 
 /** Changes whenever the same inputs and seed would give other numbers. Stored with every result. */
 export const ENGINE_VERSION = "1.0.0";
@@ -62,23 +75,38 @@ export function simulate(inputs: EstimateInputs, options: SimulationOptions): Si
   const fluid = fluidConstants(prepared.wellstream, inputs.fluid);
 
   const sampled = sampleInputs(prepared.distributions, prepared.blocks, seed, workspace);
-  const impossible = evaluateTrials(fluid, workspace.inputs, trials, workspace, workspace.outputs);
-  if (impossible > 0) throw impossibleTrials(impossible, trials);
+  const sampledByPlan = prepared.plan && samplePlanInputs(prepared.plan, seed, workspace);
+  const plan = prepared.plan && { compiled: prepared.plan, ...planWorkspace(workspace) };
+  const evaluated = evaluateTrials(
+    fluid,
+    workspace.inputs,
+    plan,
+    trials,
+    workspace,
+    workspace.outputs,
+  );
+  refuseImpossible(evaluated, trials);
 
   const swings = evaluateSwings(prepared, fluid);
   const results = columns(resultNames, (name) =>
     summariseSample(workspace.outputs[name], trials, workspace.counting),
+  );
+  const recoveries = columns(recoveryNames, (name) =>
+    plan ? rangeOfSample(plan.columns[name], trials, workspace.counting) : sampled[name],
   );
   return {
     summary: {
       engineVersion: ENGINE_VERSION,
       seed,
       trials,
-      inputs: sampled,
+      inputs: { ...sampled, ...recoveries },
       results,
-      derived: columns(derivedNames, (name) =>
-        rangeOfSample(workspace.outputs[name], trials, workspace.counting),
-      ),
+      derived: {
+        ...columns(derivedNames, (name) =>
+          rangeOfSample(workspace.outputs[name], trials, workspace.counting),
+        ),
+        ...recoveries,
+      },
       drivers: {
         wetGasInPlaceScf: driversOf("wetGasInPlaceScf", swings, prepared, workspace),
         condensateRecoverableStb: driversOf(
@@ -89,8 +117,15 @@ export function simulate(inputs: EstimateInputs, options: SimulationOptions): Si
         ),
       },
       deterministic: columns(resultNames, (name) => swings[name][0]),
-      recovery: null,
-      warnings: [...warningsOf(inputs, prepared), ...resultWarnings(results)],
+      recovery:
+        plan && evaluated.recovery
+          ? summariseRecovery(plan.compiled, evaluated.recovery, sampledByPlan ?? {})
+          : null,
+      warnings: [
+        ...warningsOf(inputs, prepared),
+        ...(plan ? recoveryWarnings(plan.compiled, recoveries) : []),
+        ...resultWarnings(results),
+      ],
     },
     vectors: columns(vectorNames, (name) => workspace.outputs[name].slice(0, trials)),
   };
@@ -111,46 +146,84 @@ function checkOptions(trials: number, seed: number, workspace: SimulationWorkspa
   }
 }
 
-function impossibleTrials(count: number, trials: number): DomainError {
-  return new DomainError(
-    `${count} of ${trials} trials have no possible result: their pressure, temperature and gravity lie where the ` +
-      "z factor has no value. Narrow the ranges of pressure, temperature or condensate yield.",
-    { input: "uncertain", value: count, trials },
-  );
+function refuseImpossible({ impossible, recovery }: EvaluatedTrials, trials: number): void {
+  if (impossible > 0) {
+    throw new DomainError(
+      `${impossible} of ${trials} trials have no possible result: their pressure, temperature and gravity lie where the ` +
+        "z factor has no value. Narrow the ranges of pressure, temperature or condensate yield.",
+      { input: "uncertain", value: impossible, trials },
+    );
+  }
+  const [refusal] = Object.entries(recovery?.refused ?? {}).sort(([, a], [, b]) => b - a);
+  if (!refusal) return;
+  const [name, count] = refusal;
+  const { input, message } = refusals[name as RefusalName];
+  throw new DomainError(`${count} of ${trials} trials ${message}`, { input, value: count, trials });
+}
+
+/** A driver's name with its distribution and, over the trials, its ranks. */
+interface DriverInput {
+  readonly name: DriverName;
+  readonly distribution: CompiledDistribution;
+  readonly ranks: (workspace: SimulationWorkspace) => Uint32Array;
+}
+
+/** The sampled inputs that count, then those of the plan. */
+function driverInputs({ inputNames: names, distributions, plan }: PreparedInputs): DriverInput[] {
+  const ofPlan = (plan?.inputNames ?? []).flatMap((name): DriverInput[] => {
+    const distribution = plan?.distributions[name];
+    if (!distribution) return [];
+    return [
+      { name, distribution, ranks: (workspace) => planWorkspace(workspace).inputRanks[name] },
+    ];
+  });
+  return [
+    ...names.map((name) => ({
+      name,
+      distribution: distributions[name],
+      ranks: ({ inputRanks }: SimulationWorkspace) => inputRanks[name],
+    })),
+    ...ofPlan,
+  ];
 }
 
 /** Results with every input at P50 (row 0), and with one at a time at P90 and P10. */
 function evaluateSwings(
-  { distributions }: PreparedInputs,
+  prepared: PreparedInputs,
   fluid: FluidConstants,
 ): TrialColumns<ResultName | DerivedName> {
-  const cases = swingColumns(inputNames.map((name) => distributions[name].range));
+  const drivers = driverInputs(prepared);
+  const cases = swingColumns(drivers.map(({ distribution }) => distribution.range));
   const rows = cases[0].length;
   const row = () => new Float64Array(rows);
+  const column = (name: DriverName) =>
+    cases[drivers.findIndex((driver) => driver.name === name)] ?? row();
   const outputs = columns([...resultNames, ...derivedNames], row);
-  const inputs = columns(inputNames, (name) => cases[inputNames.indexOf(name)]);
   const scratch = { reducedPressure: row(), reducedTemperature: row() };
-  const impossible = evaluateTrials(fluid, inputs, rows, scratch, outputs);
-  if (impossible > 0) throw impossibleTrials(impossible, rows);
+  const plan = prepared.plan && {
+    compiled: prepared.plan,
+    inputs: columns(planInputNames, column),
+    columns: createRecoveryColumns(rows),
+  };
+  const inputs = columns(inputNames, column);
+  refuseImpossible(evaluateTrials(fluid, inputs, plan, rows, scratch, outputs), rows);
   return outputs;
 }
 
 function driversOf(
   result: ResultName,
   swings: TrialColumns<ResultName | DerivedName>,
-  { distributions }: PreparedInputs,
+  prepared: PreparedInputs,
   workspace: SimulationWorkspace,
 ): Driver[] {
-  const { outputs, counting, resultRanks, order, inputRanks, trials } = workspace;
+  const { outputs, counting, resultRanks, order, trials } = workspace;
   rankByCounting(outputs[result], trials, counting, resultRanks, order);
   return rankDrivers(
-    inputNames.map((input, i) => ({
-      input,
+    driverInputs(prepared).map(({ name, distribution, ranks }, i) => ({
+      input: name,
       // The ranks of a constant are an arbitrary order, not a rank.
       rankCorrelation:
-        distributions[input].standardDeviation === 0
-          ? 0
-          : spearman(inputRanks[input], resultRanks, trials),
+        distribution.standardDeviation === 0 ? 0 : spearman(ranks(workspace), resultRanks, trials),
       swing: { atP90: swings[result][1 + 2 * i], atP10: swings[result][2 + 2 * i] },
     })),
   );

@@ -13,9 +13,14 @@ import {
   pseudocriticalTemperatureDegR,
   type Impurities,
   type PseudocriticalConstants,
+  type Pseudocriticals,
 } from "../gas/pseudocritical";
+import type { CompiledPlan } from "../recovery/compile-plan";
+import type { PlanInputName } from "../recovery/recovery-plan-schema";
+import type { RecoveryTotals } from "../recovery/recovery-totals";
+import { fillRecoveries, type RecoveryColumns } from "../recovery/trial-recovery";
 import type { InputName } from "./inputs-schema";
-import type { DerivedName, ResultName } from "./results-schema";
+import type { DerivedName, RecoveryName, ResultName } from "./results-schema";
 import { fillZFactors } from "./trial-z";
 
 /** What stays the same in every trial of one reservoir. */
@@ -40,6 +45,20 @@ export interface TrialScratch {
   readonly reducedTemperature: Float64Array;
 }
 
+/** A recovery plan with the columns that its trials need. */
+export interface TrialPlan {
+  readonly compiled: CompiledPlan;
+  readonly inputs: TrialColumns<PlanInputName>;
+  readonly columns: RecoveryColumns;
+}
+
+export interface EvaluatedTrials {
+  /** trials with no possible volume in place (their values are not finite) */
+  readonly impossible: number;
+  /** null without a plan */
+  readonly recovery: RecoveryTotals | null;
+}
+
 /**
  * Wet gas, dry gas and condensate of every trial, from its ten inputs.
  *
@@ -53,21 +72,42 @@ export interface TrialScratch {
  * so that dry + Veq x condensate = G. With Veq the vapour equivalent and m the mass of a barrel (gravity x scf).
  * The equations are those of `inPlace`, which this agrees with to rounding and 1e-8 in z.
  *
+ * Recoveries are the sampled ones, or those of the plan.
+ *
  * @param inputs  sampled columns, units as their names say
  * @param count   number of trials
  * @param out     overwritten
- * @returns       the number of trials with no possible result (their values are not finite)
  */
 export function evaluateTrials(
   fluid: FluidConstants,
   inputs: TrialColumns<InputName>,
+  plan: TrialPlan | null,
   count: number,
   scratch: TrialScratch,
   out: TrialColumns<ResultName | DerivedName>,
-): number {
+): EvaluatedTrials {
   fillFluid(fluid, inputs, count, scratch, out);
   fillZFactors(scratch.reducedPressure, scratch.reducedTemperature, count, out.zFactor);
-  return fillVolumes(inputs, count, out);
+  const impossible = fillInPlace(inputs, count, out);
+  const recovery =
+    plan &&
+    fillRecoveries(
+      plan.compiled,
+      { ...scratch, ...inputs, ...out, plan: plan.inputs, injectedGas: injectedGas(fluid) },
+      count,
+      plan.columns,
+    );
+  fillRecoverable(inputs, plan ? plan.columns : inputs, count, out);
+  return { impossible, recovery };
+}
+
+/** What goes back into the reservoir is the separators' gas. */
+function injectedGas({ pseudocritical, yield: constants }: FluidConstants): Pseudocriticals {
+  const gravity = wellstreamGravityAtYield(0, constants);
+  return {
+    temperatureDegR: pseudocriticalTemperatureDegR(gravity, pseudocritical),
+    pressurePsia: pseudocriticalPressurePsia(gravity, pseudocritical),
+  };
 }
 
 function fillFluid(
@@ -95,18 +135,16 @@ function fillFluid(
   }
 }
 
-function fillVolumes(
+function fillInPlace(
   inputs: TrialColumns<InputName>,
   count: number,
   out: TrialColumns<ResultName | DerivedName>,
 ): number {
   const { areaAcres, netThicknessFt, porosity, waterSaturation } = inputs;
-  const { pressurePsia, temperatureDegF } = inputs;
-  const { condensateYieldStbPerMmscf, gasRecovery, condensateRecovery, salesGasFraction } = inputs;
+  const { pressurePsia, temperatureDegF, condensateYieldStbPerMmscf } = inputs;
   const { zFactor, dryGasFraction, gasFormationVolumeFactorCfPerScf } = out;
   const { wetGasPerAcreFootScf, condensatePerAcreFootStb } = out;
   const { wetGasInPlaceScf, dryGasInPlaceScf, condensateInPlaceStb } = out;
-  const { salesGasScf, condensateRecoverableStb, condensateLeftStb } = out;
   const { volumeFactorCfPerScf } = CANONICAL_CONSTANTS;
   let impossible = 0;
   for (let trial = 0; trial < count; trial += 1) {
@@ -121,21 +159,31 @@ function fillVolumes(
     const wet = areaAcres[trial] * netThicknessFt[trial] * wetPerAcreFoot;
     const dry = wet * dryFraction;
     const condensate = wet * stbPerScf;
-    const recoverable = condensate * condensateRecovery[trial];
-    const sales = dry * gasRecovery[trial] * salesGasFraction[trial];
     gasFormationVolumeFactorCfPerScf[trial] = formationVolumeFactor;
     wetGasPerAcreFootScf[trial] = wetPerAcreFoot;
     condensatePerAcreFootStb[trial] = wetPerAcreFoot * stbPerScf;
     wetGasInPlaceScf[trial] = wet;
     dryGasInPlaceScf[trial] = dry;
     condensateInPlaceStb[trial] = condensate;
-    salesGasScf[trial] = sales;
-    condensateRecoverableStb[trial] = recoverable;
-    condensateLeftStb[trial] = condensate - recoverable;
     // One comparison catches NaN, infinity and a negative volume in any factor.
-    if (!(wet >= 0 && dry + condensate + sales < Infinity && recoverable >= 0 && sales >= 0)) {
-      impossible += 1;
-    }
+    if (!(wet >= 0 && condensate >= 0 && dry + condensate < Infinity)) impossible += 1;
   }
   return impossible;
+}
+
+function fillRecoverable(
+  { salesGasFraction }: TrialColumns<InputName>,
+  { gasRecovery, condensateRecovery }: Readonly<Record<RecoveryName, Float64Array>>,
+  count: number,
+  out: TrialColumns<ResultName | DerivedName>,
+): void {
+  const { dryGasInPlaceScf, condensateInPlaceStb } = out;
+  const { salesGasScf, condensateRecoverableStb, condensateLeftStb } = out;
+  for (let trial = 0; trial < count; trial += 1) {
+    const condensate = condensateInPlaceStb[trial];
+    const recoverable = condensate * condensateRecovery[trial];
+    salesGasScf[trial] = dryGasInPlaceScf[trial] * gasRecovery[trial] * salesGasFraction[trial];
+    condensateRecoverableStb[trial] = recoverable;
+    condensateLeftStb[trial] = condensate - recoverable;
+  }
 }

@@ -1,22 +1,14 @@
+import type { PossibleRange } from "../uncertainty/possible-range";
 import type { InputName } from "./inputs-schema";
 
 /** What a reservoir engineer expects of an input, and what no reservoir can have. Units as the input's name says. */
-export interface UsualRange {
-  /** as in "the porosity" */
-  label: string;
-  unit: string;
+export interface UsualRange extends PossibleRange {
   /** outside: a question */
   usual: readonly [low: number, high: number];
-  /** outside: refused. Infinity where nature sets no end */
-  possible: readonly [low: number, high: number];
-  /** the possible range does not include its lower end */
-  lowExcluded: boolean;
   /** usual P10/P90 ratio; null where a ratio says nothing */
   ratio: readonly [low: number, high: number] | null;
   /** why the possible range ends where it does */
   reason: string;
-  /** a slip of units that gives values like this, asked about when a value is unusually low or impossible */
-  slip: string;
 }
 
 /**

@@ -1,5 +1,7 @@
 import { DomainError } from "../errors";
 import { createOrderWorkspace } from "../numerics/order-statistics";
+import { planInputNames, type PlanInputName } from "../recovery/recovery-plan-schema";
+import { createRecoveryColumns, type RecoveryColumns } from "../recovery/trial-recovery";
 import { normalScores, type RankWorkspace } from "../uncertainty/rank-correlation";
 import { inputNames, type InputName } from "./inputs-schema";
 import { derivedNames, resultNames, type DerivedName, type ResultName } from "./results-schema";
@@ -21,6 +23,25 @@ export interface SimulationWorkspace extends RankWorkspace, TrialScratch {
   readonly inputRanks: Record<InputName, Uint32Array>;
   readonly inputs: TrialColumns<InputName>;
   readonly outputs: TrialColumns<ResultName | DerivedName>;
+  /** made by `planWorkspace` on the first run with a recovery plan */
+  plan: PlanWorkspace | null;
+}
+
+/** What trials with a recovery plan need besides. */
+export interface PlanWorkspace {
+  readonly inputs: TrialColumns<PlanInputName>;
+  readonly inputRanks: Record<PlanInputName, Uint32Array>;
+  readonly columns: RecoveryColumns;
+}
+
+export function planWorkspace(workspace: SimulationWorkspace): PlanWorkspace {
+  const { trials } = workspace;
+  workspace.plan ??= {
+    inputs: columns(planInputNames, () => new Float64Array(trials)),
+    inputRanks: columns(planInputNames, () => new Uint32Array(trials)),
+    columns: createRecoveryColumns(trials),
+  };
+  return workspace.plan;
 }
 
 /** @throws {DomainError} when the number of trials is not a whole number from 100 to 1,000,000 */
@@ -49,6 +70,7 @@ export function createWorkspace(trials: number): SimulationWorkspace {
     inputRanks: columns(inputNames, integers),
     inputs: columns(inputNames, numbers),
     outputs: columns([...resultNames, ...derivedNames], numbers),
+    plan: null,
   };
 }
 
