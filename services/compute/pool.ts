@@ -7,6 +7,7 @@ import type { Ledger, LedgerMember, LedgerOptions } from "@/analytics/portfolio/
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import type { Simulation, SimulationOptions } from "@/analytics/volumetrics/simulate";
 import { ServiceBusyError } from "../errors";
+import type { FluidAnswer, FluidQuestion, FluidTask, FluidTaskName } from "../fluids/tasks";
 import type { LedgerTask, Outcome, SimulationTask } from "./worker";
 
 /** Tasks that may wait for a thread. More would wait longer than anybody does, each with its inputs in memory. */
@@ -38,8 +39,8 @@ export interface ComputeOptions {
 
 /** @throws {ServiceBusyError} when the queue is full */
 async function run<Value>(
-  name: "simulate" | "ledger",
-  task: SimulationTask | LedgerTask,
+  name: "simulate" | "ledger" | "fluid",
+  task: SimulationTask | LedgerTask | FluidTask,
   options: ComputeOptions & { transferList?: ArrayBuffer[] },
 ): Promise<Value> {
   const threads = pool();
@@ -80,6 +81,22 @@ export async function runLedger(
     ),
   );
   return run<Ledger>("ledger", task, { signal, transferList: [...buffers] });
+}
+
+/**
+ * One of the calculations on fluids, on a thread.
+ *
+ * @throws {DomainError} with a path into the question
+ * @throws {ConvergenceError} as the calculation
+ * @throws {ServiceBusyError} when too many wait already
+ */
+export async function runOnFluid<Name extends FluidTaskName>(
+  name: Name,
+  question: FluidQuestion<Name>,
+  { signal }: ComputeOptions = {},
+): Promise<FluidAnswer<Name>> {
+  const task: FluidTask<Name> = { name, question };
+  return run<FluidAnswer<Name>>("fluid", task as FluidTask, { signal });
 }
 
 /** Ends the threads; for a process that is about to stop, and for tests. */

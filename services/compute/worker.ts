@@ -18,6 +18,7 @@ import {
   type SimulationOptions,
 } from "@/analytics/volumetrics/simulate";
 import { createWorkspace, type SimulationWorkspace } from "@/analytics/volumetrics/workspace";
+import { fluidTasks, type FluidAnswer, type FluidTask, type FluidTaskName } from "../fluids/tasks";
 
 export interface SimulationTask {
   inputs: EstimateInputs;
@@ -57,6 +58,15 @@ export function simulate({ inputs, options }: SimulationTask) {
 export function ledger({ members, options }: LedgerTask) {
   return settle<Ledger>(
     () => computeLedger(members, options),
+    () => [],
+  );
+}
+
+/** Any of the calculations on fluids, by its name. */
+export function fluid<Name extends FluidTaskName>({ name, question }: FluidTask<Name>) {
+  const calculate = fluidTasks[name] as (asked: typeof question) => FluidAnswer<Name>;
+  return settle(
+    () => calculate(question),
     () => [],
   );
 }

@@ -1,0 +1,21 @@
+import { describeDepletion } from "./depletion";
+import { proposeTuning } from "./tuning";
+
+/**
+ * Calculations on fluids that are heavy enough for a thread: each takes one plain question and gives one plain answer.
+ * Adding one here is all it takes to run it on the pool.
+ */
+export const fluidTasks = {
+  depletion: describeDepletion,
+  tuning: proposeTuning,
+};
+
+export type FluidTasks = typeof fluidTasks;
+export type FluidTaskName = keyof FluidTasks;
+export type FluidQuestion<Name extends FluidTaskName> = Parameters<FluidTasks[Name]>[0];
+export type FluidAnswer<Name extends FluidTaskName> = ReturnType<FluidTasks[Name]>;
+
+export interface FluidTask<Name extends FluidTaskName = FluidTaskName> {
+  name: Name;
+  question: FluidQuestion<Name>;
+}

@@ -1,0 +1,39 @@
+import type { CompositionSheet } from "@/analytics/composition/composition-schema";
+import { readComposition } from "@/analytics/composition/read-sheet";
+import type { DepletionTable } from "@/analytics/depletion/depletion-table-schema";
+import { tune, type Fit } from "@/analytics/depletion/tune";
+import { underPath } from "@/analytics/errors";
+import type {
+  Characterisation,
+  TunableName,
+} from "@/analytics/equation-of-state/characterisation-schema";
+import { warningsUnder } from "./warnings-under";
+
+export interface TuningQuestion {
+  sheet: CompositionSheet;
+  characterisation: Characterisation;
+  table: DepletionTable;
+  tunables: TunableName[];
+}
+
+/**
+ * Adjustments that bring the equation of state to a laboratory's dew point and depletion: a proposal with its fit before
+ * and after. Nothing is applied.
+ *
+ * @throws {DomainError} with a path into the question
+ * @throws {ConvergenceError}
+ */
+export function proposeTuning({ sheet, ...problem }: TuningQuestion) {
+  const { stream, warnings } = underPath("sheet", () => readComposition(sheet));
+  const { before, after, changes, ...proposal } = tune({ ...problem, stream });
+  return {
+    characterisation: proposal.characterisation,
+    before: plainFit(before),
+    after: plainFit(after),
+    changes: [...changes],
+    iterations: proposal.iterations,
+    warnings: [...warningsUnder("sheet", warnings), ...proposal.warnings],
+  };
+}
+
+const plainFit = ({ rows, ...fit }: Fit) => ({ ...fit, rows: [...rows] });
