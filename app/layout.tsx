@@ -13,6 +13,7 @@ import "./styles/shell.css";
 import "./styles/sign-in.css";
 import "./styles/estimate.css";
 import "./styles/lists.css";
+import "./styles/recovery.css";
 import "./globals.css";
 
 export const metadata: Metadata = {

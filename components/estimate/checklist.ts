@@ -1,8 +1,9 @@
-import { inputNames } from "@/analytics/volumetrics/inputs-schema";
+import type { DriverName } from "@/analytics/volumetrics/results-schema";
 import type { Warning } from "@/analytics/warnings";
 import type { EstimateReading } from "./estimate-reading";
-import type { EstimateText } from "./estimate-text";
-import { inputCatalogue } from "./input-catalogue";
+import { inputText, type EstimateText } from "./estimate-text";
+import { driverCatalogue, listedInputs } from "./input-catalogue";
+import { conceptLabels, routeLabels, isWeakRoute } from "./plan-words";
 
 export interface ChecklistItem {
   /** done; to be explained; to be done before it can be submitted */
@@ -22,19 +23,24 @@ const numbers = [
   "eight",
   "nine",
   "ten",
+  "eleven",
+  "twelve",
 ];
 const inWords = (count: number) => numbers[count] ?? String(count);
 const capital = (text: string) => text[0].toUpperCase() + text.slice(1);
-const labels = (names: readonly (keyof typeof inputCatalogue)[]) =>
-  names.map((name) => inputCatalogue[name].label.toLowerCase()).join(", ");
+const labels = (names: readonly DriverName[]) =>
+  names.map((name) => driverCatalogue[name].label.toLowerCase()).join(", ");
 
 /** Why there are no results of what stands in the fields: "One input is impossible: porosity. …". */
-export function waitingWords({ impossible, incomplete, problem }: EstimateReading): string {
+export function waitingWords({ impossible, incomplete, plan, problem }: EstimateReading): string {
   if (impossible.length > 0) {
     const verb = impossible.length === 1 ? "input is" : "inputs are";
     return `${capital(inWords(impossible.length))} ${verb} impossible: ${labels(impossible)}. Results appear when that is put right.`;
   }
   if (incomplete.length > 0) return "Results appear when every input is filled in.";
+  if (plan && plan.open.length > 0) {
+    return "Results appear when every figure of the recovery plan is filled in and possible.";
+  }
   return problem === null
     ? "Results appear when a fluid sample is entered."
     : `${problem} Results appear when that is put right.`;
@@ -61,7 +67,8 @@ export function submitChecklist(draft: {
   return [
     inputsItem(draft.reading),
     fluidItem(draft.text, draft.sampleName),
-    sourcesItem(draft.text),
+    ...planItems(draft.text),
+    sourcesItem(draft.text, draft.reading),
     ...(draft.reading.estimate ? [warningsItem(draft.warnings), runItem(draft.trials)] : []),
   ];
 }
@@ -70,7 +77,8 @@ export function submitChecklist(draft: {
 export const canSubmit = (items: readonly ChecklistItem[]) =>
   items.every(({ tone }) => tone !== "open");
 
-function inputsItem({ incomplete, impossible, problem }: EstimateReading): ChecklistItem {
+function inputsItem({ incomplete, impossible, plan, problem }: EstimateReading): ChecklistItem {
+  const all = listedInputs(plan && plan.used).length;
   if (impossible.length > 0) {
     return {
       tone: "open",
@@ -81,11 +89,14 @@ function inputsItem({ incomplete, impossible, problem }: EstimateReading): Check
     const which = incomplete.length <= 4 ? `: ${labels(incomplete)}` : "";
     return {
       tone: "open",
-      text: `${capital(inWords(incomplete.length))} of ${inWords(inputNames.length)} inputs to fill in${which}`,
+      text: `${capital(inWords(incomplete.length))} of ${inWords(all)} inputs to fill in${which}`,
     };
   }
   if (problem !== null) return { tone: "open", text: problem };
-  return { tone: "done", text: "Ten inputs complete, no impossible value" };
+  if (plan && plan.open.length > 0) {
+    return { tone: "open", text: "A figure of the recovery plan to fill in or to correct" };
+  }
+  return { tone: "done", text: `${capital(inWords(all))} inputs complete, no impossible value` };
 }
 
 function fluidItem(text: EstimateText, sampleName: string | null): ChecklistItem {
@@ -95,8 +106,25 @@ function fluidItem(text: EstimateText, sampleName: string | null): ChecklistItem
     : { tone: "done", text: `Fluid sample ${sampleName}` };
 }
 
-function sourcesItem(text: EstimateText): ChecklistItem {
-  const missing = inputNames.filter((name) => text.inputs[name].source.trim() === "");
+/** What recoveries rest on, when a plan works them out; a weak route is for the reviewer to weigh. */
+function planItems({ plan, usesPlan }: EstimateText): ChecklistItem[] {
+  if (!plan || !usesPlan) return [];
+  const { route } = plan.curve;
+  return [
+    {
+      tone: isWeakRoute(route) ? "warning" : "done",
+      text:
+        `Recoveries worked out for ${conceptLabels[plan.concept].toLowerCase()}: ` +
+        `${routeLabels[route].toLowerCase()}${isWeakRoute(route) ? ", no measured depletion behind it" : ""}`,
+    },
+  ];
+}
+
+function sourcesItem(text: EstimateText, { plan }: EstimateReading): ChecklistItem {
+  const missing = listedInputs(plan && plan.used).filter((name) => {
+    const input = inputText(text, name);
+    return input !== null && input.source.trim() === "";
+  });
   if (missing.length === 0) return { tone: "done", text: "Every input says where it comes from" };
   const which = missing.length <= 3 ? `: ${labels(missing)}` : "";
   return {

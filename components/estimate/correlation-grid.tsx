@@ -6,15 +6,17 @@ import { correlationOf, type Correlation } from "./estimate-text";
 import { inputCatalogue } from "./input-catalogue";
 
 export interface CorrelationGridProps {
+  /** inputs that are sampled, in their order */
+  names?: readonly InputName[];
   pairs: readonly Correlation[];
   /** absent: the grid is read, not typed */
   onChange?: (a: InputName, b: InputName, rank: number) => void;
 }
 
 /** Pairs below the diagonal, so that each stands once. */
-export function CorrelationGrid({ pairs, onChange }: CorrelationGridProps) {
-  const rows = inputNames.slice(1);
-  const columns = inputNames.slice(0, -1);
+export function CorrelationGrid({ names = inputNames, pairs, onChange }: CorrelationGridProps) {
+  const rows = names.slice(1);
+  const columns = names.slice(0, -1);
   return (
     <div className="table-scroll" role="region" aria-label="Rank correlations" tabIndex={0}>
       <table className="correlation-grid">

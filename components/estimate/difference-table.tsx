@@ -6,7 +6,7 @@ import { Icon } from "@/components/ui/icon";
 import { FigureCell, FolioCell, LedgerTable } from "@/components/ui/table";
 import { Unit } from "@/components/ui/text";
 import type { InputDifference } from "./differences";
-import { inputCatalogue, inputOfPath, lineOf } from "./input-catalogue";
+import { driverCatalogue, inputOfPath } from "./input-catalogue";
 
 /** Inputs before over now; each row scales itself. */
 export function DifferenceTable({
@@ -41,9 +41,10 @@ export function DifferenceTable({
         </tr>
       </thead>
       <tbody>
-        {differences.map((difference) => (
+        {differences.map((difference, index) => (
           <DifferenceRow
             key={difference.name}
+            line={index + 1}
             difference={difference}
             warning={warnings.find(({ input }) => inputOfPath(input) === difference.name)}
           />
@@ -54,14 +55,16 @@ export function DifferenceTable({
 }
 
 function DifferenceRow({
+  line,
   difference,
   warning,
 }: {
+  line: number;
   difference: InputDifference;
   warning: Warning | undefined;
 }) {
   const { name, now, before, medianChange, shapeChanged, isSame, source } = difference;
-  const about = inputCatalogue[name];
+  const about = driverCatalogue[name];
   const scale = scaleFor([now.p90, now.p10, before?.p90, before?.p10], {
     kind: "linear",
     fromZero: false,
@@ -74,8 +77,8 @@ function DifferenceRow({
   const shown = isSame ? undefined : before;
   return (
     <tr className={warning ? "flagged" : undefined}>
-      <td className="folio">{lineOf(name)}</td>
-      <th scope="row" className={isSame ? "wrap plain soft" : "wrap"}>
+      <td className="folio">{line}</td>
+      <th scope="row" className={isSame || difference.isWorkedOut ? "wrap plain soft" : "wrap"}>
         {about.label} {about.unit && <Unit>{about.unit}</Unit>}
         <small className="block font-normal text-ink-soft">
           {warning ? (

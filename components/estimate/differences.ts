@@ -1,22 +1,46 @@
+import { MISSING } from "@/components/ui/format";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import { compileDistribution } from "@/analytics/uncertainty/distribution";
 import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
+import type { RecoveryPlan } from "@/analytics/recovery/recovery-plan-schema";
 import {
   inputNames,
   type EstimateInputs,
   type InputName,
 } from "@/analytics/volumetrics/inputs-schema";
+import {
+  recoveryNames,
+  type DriverName,
+  type SimulationSummary,
+} from "@/analytics/volumetrics/results-schema";
+import { isWorkedOut } from "./estimate-text";
+import { listedInputs, planInputsOf } from "./input-catalogue";
+import {
+  conceptLabels,
+  criticalInWords,
+  curveInWords,
+  cyclingInWords,
+  waterInWords,
+} from "./plan-words";
+
+interface Percentiles {
+  p90: number;
+  p50: number;
+  p10: number;
+}
 
 export interface InputDifference {
-  name: InputName;
-  before: { p90: number; p50: number; p10: number } | null;
-  now: { p90: number; p50: number; p10: number };
+  name: DriverName;
+  before: Percentiles | null;
+  now: Percentiles;
   /** change of P50 over the P50 before; `null` without one */
   medianChange: number | null;
   /** the shape changed, whatever the percentiles did */
   shapeChanged: boolean;
   isSame: boolean;
   source: string;
+  /** a plan worked it out rather than a person typing it */
+  isWorkedOut: boolean;
 }
 
 /**
@@ -29,9 +53,10 @@ export function inputDifferences(
   now: EstimateInputs,
   before: EstimateInputs | null,
 ): InputDifference[] {
-  return inputNames.map((name) => {
-    const current = now.uncertain[name].distribution;
-    const previous = before?.uncertain[name].distribution ?? null;
+  return listedOf(now).map((name) => {
+    const { distribution: current, source } = inputOf(now, name) ?? missing(name);
+    const isListed = before !== null && listedOf(before).includes(name);
+    const previous = isListed ? (inputOf(before, name)?.distribution ?? null) : null;
     const range = compileDistribution(current).range;
     const beforeRange = previous && compileDistribution(previous).range;
     return {
@@ -41,9 +66,111 @@ export function inputDifferences(
       medianChange: beforeRange && beforeRange.p50 !== 0 ? range.p50 / beforeRange.p50 - 1 : null,
       shapeChanged: previous !== null && previous.kind !== current.kind,
       isSame: previous !== null && isSameDistribution(current, previous),
-      source: now.uncertain[name].source,
+      source,
+      isWorkedOut: false,
     };
   });
+}
+
+const planInputsIn = ({ recoveryPlan }: EstimateInputs) =>
+  recoveryPlan && planInputsOf(recoveryPlan.concept);
+
+/** Inputs that an estimate samples, in the order in which they are listed. */
+const listedOf = (inputs: EstimateInputs) => listedInputs(planInputsIn(inputs));
+
+function inputOf({ uncertain, recoveryPlan: plan }: EstimateInputs, name: DriverName) {
+  switch (name) {
+    case "abandonmentPressurePsia":
+    case "condensateCurveFactor":
+      return plan?.[name];
+    case "sweepEfficiency":
+    case "displacementEfficiency":
+      return plan?.cycling?.[name];
+    default:
+      return uncertain[name];
+  }
+}
+
+function missing(name: DriverName): never {
+  throw new RangeError(`${name} is listed, but the recovery plan has none`);
+}
+
+/**
+ * The two recoveries as the trials had them, where a plan worked out either of the two revisions'. Without a run on both
+ * sides there is nothing to set side by side.
+ */
+export function recoveryDifferences(
+  now: { inputs: EstimateInputs; summary: SimulationSummary | null },
+  before: { inputs: EstimateInputs; summary: SimulationSummary | null } | null,
+): InputDifference[] {
+  const { summary } = now;
+  if (!summary || (!now.inputs.recoveryPlan && !before?.inputs.recoveryPlan)) return [];
+  return recoveryNames.map((name) => {
+    const range = summary.inputs[name];
+    const previous = before?.summary?.inputs[name] ?? null;
+    return {
+      name,
+      now: range,
+      before: previous,
+      medianChange: previous && previous.p50 !== 0 ? range.p50 / previous.p50 - 1 : null,
+      shapeChanged: false,
+      isSame: previous !== null && sortedJson(previous) === sortedJson(range),
+      source: now.inputs.recoveryPlan ? "Worked out by the recovery plan" : "Typed by hand",
+      isWorkedOut: true,
+    };
+  });
+}
+
+/** One part of how recoveries come about, in words. */
+export interface PlanDifference {
+  label: string;
+  before: string;
+  now: string;
+}
+
+const planParts: { label: string; words: (plan: RecoveryPlan) => string }[] = [
+  { label: "Concept", words: ({ concept }) => conceptLabels[concept] },
+  { label: "Depletion curve", words: curveInWords },
+  { label: "Critical saturation", words: criticalInWords },
+  { label: "Water", words: waterInWords },
+  { label: "Injection", words: cyclingInWords },
+];
+
+/** What differs between two ways to recoveries; empty when nothing does, whatever their uncertain inputs do. */
+export function planDifferences(
+  now: RecoveryPlan | null,
+  before: RecoveryPlan | null,
+): PlanDifference[] {
+  const words = (plan: RecoveryPlan | null) => (plan ? "Worked out by a plan" : "Typed by hand");
+  if (now === null || before === null) {
+    if (now === before) return [];
+    const one = now ?? before;
+    return [
+      { label: "Recoveries", before: words(before), now: words(now) },
+      ...planParts
+        .map(({ label, words: part }) => ({
+          label,
+          before: before ? part(before) : MISSING,
+          now: now ? part(now) : MISSING,
+        }))
+        .filter(({ label }) => label !== "Injection" || one?.cycling !== null),
+    ];
+  }
+  const parts = planParts
+    .map(({ label, words: part }) => ({ label, before: part(before), now: part(now) }))
+    .filter((part) => part.before !== part.now);
+  const isNewCurve = sortedJson(now.curve) !== sortedJson(before.curve);
+  const saysSo = parts.some(({ label }) => label === "Depletion curve");
+  return isNewCurve && !saysSo
+    ? [
+        ...parts,
+        {
+          label: "Depletion curve",
+          before: curveInWords(before),
+          now: `${curveInWords(now)}, with other figures on the way`,
+        },
+      ]
+    : parts;
 }
 
 export function isSameDistribution(a: Distribution, b: Distribution): boolean {
@@ -60,17 +187,21 @@ export function isSameInputs(a: EstimateInputs, b: EstimateInputs): boolean {
 }
 
 /** What differs between two versions of the same draft, as parts that a person can choose one by one. */
-export type DraftPart = InputName | "correlations" | "fluid" | "depthFt";
+export type DraftPart = InputName | "correlations" | "fluid" | "depthFt" | "recoveryPlan";
 
 /**
  * Parts in which my unsaved draft and the saved one of somebody else differ, when both began from the same version.
  * Sources count here: somebody typed them.
  */
 export function conflictingParts(mine: EstimateInputs, theirs: EstimateInputs): DraftPart[] {
+  // A recovery that a plan works out on both sides is nobody's typing.
+  const bothPlanned = mine.recoveryPlan !== null && theirs.recoveryPlan !== null;
   const inputs = inputNames.filter(
-    (name) => sortedJson(mine.uncertain[name]) !== sortedJson(theirs.uncertain[name]),
+    (name) =>
+      !(bothPlanned && isWorkedOut(name)) &&
+      sortedJson(mine.uncertain[name]) !== sortedJson(theirs.uncertain[name]),
   );
-  const others = (["correlations", "fluid", "depthFt"] as const).filter(
+  const others = (["correlations", "fluid", "depthFt", "recoveryPlan"] as const).filter(
     (part) => sortedJson(mine[part]) !== sortedJson(theirs[part]),
   );
   return [...inputs, ...others];
@@ -88,6 +219,7 @@ export function mergeDrafts(
   }
   if (fromTheirs.includes("correlations")) merged.correlations = theirs.correlations;
   if (fromTheirs.includes("fluid")) merged.fluid = theirs.fluid;
+  if (fromTheirs.includes("recoveryPlan")) merged.recoveryPlan = theirs.recoveryPlan;
   if (fromTheirs.includes("depthFt")) merged.depthFt = theirs.depthFt;
   return merged;
 }

@@ -1,171 +1,75 @@
 import { DomainError } from "@/analytics/errors";
-import {
-  compileDistribution,
-  type CompiledDistribution,
-} from "@/analytics/uncertainty/distribution";
-import {
-  distributionSchema,
-  type Distribution,
-  type DistributionKind,
-} from "@/analytics/uncertainty/distribution-schema";
 import { checkInputs } from "@/analytics/volumetrics/check-inputs";
-import { compileInput } from "@/analytics/volumetrics/prepare-inputs";
 import {
   inputNames,
   type EstimateInputs,
   type InputName,
 } from "@/analytics/volumetrics/inputs-schema";
+import type { DriverName } from "@/analytics/volumetrics/results-schema";
 import type { Warning } from "@/analytics/warnings";
-import { emptyFields, mapInputs, type EstimateText, type InputText } from "./estimate-text";
-import { inputCatalogue, inputOfPath } from "./input-catalogue";
-import { readField, readPlain, type FieldReading } from "./quantities-of-inputs";
-import { shapeOf } from "./shapes";
-
-/** A bound that leaves out what cannot be, for a curve that reaches past it. */
-export interface CutOff {
-  key: "minimum" | "maximum";
-  value: number;
-}
-
-/** What the fields of one input read as. */
-export interface InputReading {
-  /** `null` while something is missing or impossible */
-  distribution: Distribution | null;
-  /** also of a curve that reaches past what is possible, so that its figures can be seen and reshaped */
-  compiled: CompiledDistribution | null;
-  /** by parameter key, and by `minimum` and `maximum` */
-  fields: Record<string, FieldReading>;
-  /** why the figures make no distribution, when that is no single field's fault */
-  problem: string | null;
-  /** would make the input possible; `null` while it is, or while most of the curve is impossible */
-  cutOff: CutOff | null;
-  isComplete: boolean;
-}
+import { isWorkedOut, mapInputs, NOT_TYPED, type EstimateText } from "./estimate-text";
+import { inputOfPath } from "./input-catalogue";
+import { placeProblem, readInput, type InputReading } from "./input-reading";
+import { readPlan, type PlanReading } from "./plan-reading";
 
 /** What all fields read as. */
 export interface EstimateReading {
   inputs: Record<InputName, InputReading>;
+  /** of the plan in use; `null` where recoveries are typed */
+  plan: PlanReading | null;
   /** ready for the engine; `null` while anything is missing or impossible */
   estimate: EstimateInputs | null;
-  /** names of inputs with a field to fill in */
-  incomplete: InputName[];
+  /** names of inputs with a field to fill in; recoveries that a plan works out are not among them */
+  incomplete: DriverName[];
   /** names of inputs with an impossible figure */
-  impossible: InputName[];
+  impossible: DriverName[];
   /** what is impossible about the whole, such as correlations that contradict each other */
   problem: string | null;
   warnings: Warning[];
 }
 
-const EMPTY: FieldReading = { value: null, preview: null, problem: null };
-
-/** Reads the fields of one input: each by itself, then all of them as a distribution that the input can have. */
-export function readInput(name: InputName, text: InputText): InputReading {
-  const { unit } = inputCatalogue[name];
-  const fields: Record<string, FieldReading> = {};
-  for (const { key, inUnit } of shapeOf(text.kind).parameters) {
-    fields[key] = readField(text.fields[key] ?? "", name, inUnit, unit);
-  }
-  const bounded = text.kind !== "constant";
-  fields.minimum = bounded ? readField(text.minimum, name, true, unit) : EMPTY;
-  fields.maximum = bounded ? readField(text.maximum, name, true, unit) : EMPTY;
-  if (name === "temperatureDegF" && text.kind === "normal") {
-    // A spread of temperatures has no zero to convert.
-    fields.standardDeviation = readPlain(text.fields.standardDeviation ?? "");
-  }
-
-  const isComplete = emptyFields(text).length === 0;
-  const readable = Object.values(fields).every((field) => field.problem === null);
-  if (!isComplete || !readable) {
-    const nothing = { distribution: null, compiled: null, problem: null, cutOff: null };
-    return { ...nothing, fields, isComplete };
-  }
-  return { ...compileReading(name, text, fields), isComplete };
-}
-
-function compileReading(
-  name: InputName,
-  text: InputText,
-  fields: Record<string, FieldReading>,
-): Omit<InputReading, "isComplete"> {
-  const values = Object.entries(fields).flatMap(([key, field]) =>
-    field.value === null ? [] : [[key, field.value] as const],
-  );
-  const distribution = distributionSchema.parse({ kind: text.kind, ...Object.fromEntries(values) });
-  let compiled: CompiledDistribution | null = null;
-  try {
-    compiled = compileDistribution(distribution);
-    compileInput(name, distribution);
-    return { distribution, compiled, fields, problem: null, cutOff: null };
-  } catch (error) {
-    if (!(error instanceof DomainError)) throw error;
-    return {
-      distribution: null,
-      compiled,
-      cutOff: compiled && cutOffOf(compiled, error),
-      ...placeProblem(fields, error, text.kind),
-    };
-  }
-}
-
-/** A cut that leaves less than half of the curve would not be what the person meant: a slip of units, rather. */
-const MOST_CUT_OFF = 0.5;
-
-function cutOffOf(compiled: CompiledDistribution, error: DomainError): CutOff | null {
-  const { input: key, value } = error.details;
-  if ((key !== "minimum" && key !== "maximum") || value === undefined) return null;
-  const below = compiled.cdf(value);
-  const share = key === "minimum" ? below : 1 - below;
-  return share > MOST_CUT_OFF ? null : { key, value };
-}
-
-/**
- * Puts the reason at the field that it names, or above all of them. A bound that nobody typed has no field on the
- * screen: its reason goes to the low or high figure that reaches past it.
- */
-function placeProblem(
-  fields: Record<string, FieldReading>,
-  error: DomainError,
-  kind: DistributionKind,
-): Pick<InputReading, "fields" | "problem"> {
-  const named = error.details.input?.split(".").at(-1);
-  const isBound = named === "minimum" || named === "maximum";
-  const { parameters } = shapeOf(kind);
-  const end = named === "minimum" ? parameters.at(0) : parameters.at(-1);
-  const key = isBound && fields[named].value === null ? end?.key : named;
-  if (key === undefined || !(key in fields)) return { fields, problem: error.message };
-  return {
-    fields: { ...fields, [key]: { ...fields[key], problem: error.message } },
-    problem: null,
-  };
-}
-
 /** Reads everything, and asks the engine what it thinks of it. */
 export function readEstimate(text: EstimateText): EstimateReading {
   const inputs = mapInputs((name) => readInput(name, text.inputs[name]));
-  const incomplete = inputNames.filter((name) => !inputs[name].isComplete);
-  const impossible = inputNames.filter(
+  const plan = text.usesPlan && text.plan ? readPlan(text.plan) : null;
+  const counted = inputNames.filter((name) => plan === null || !isWorkedOut(name));
+  const incomplete: DriverName[] = counted.filter((name) => !inputs[name].isComplete);
+  const impossible: DriverName[] = counted.filter(
     (name) => inputs[name].isComplete && inputs[name].distribution === null,
   );
-  const partial = { inputs, incomplete, impossible, estimate: null, problem: null, warnings: [] };
-  if (incomplete.length > 0 || impossible.length > 0 || text.fluid === null) return partial;
+  if (plan) {
+    incomplete.push(...plan.incomplete);
+    impossible.push(...plan.impossible);
+  }
+  const partial = {
+    inputs,
+    plan,
+    incomplete,
+    impossible,
+    estimate: null,
+    problem: plan?.problem ?? null,
+    warnings: [],
+  };
+  const isOpen = incomplete.length > 0 || impossible.length > 0 || (plan && !plan.plan);
+  if (isOpen || text.fluid === null) return partial;
 
   const estimate: EstimateInputs = {
     schemaVersion: 1,
     uncertain: mapInputs((name) => ({
-      distribution: inputs[name].distribution as Distribution,
+      distribution: inputs[name].distribution ?? NOT_TYPED,
       source: text.inputs[name].source.trim(),
     })),
     correlations: text.correlations.map((pair) => ({ ...pair })),
     fluid: text.fluid,
     depthFt: text.depthFt,
-    recoveryPlan: null,
+    recoveryPlan: plan?.plan ?? null,
   };
   try {
     return { ...partial, estimate, warnings: checkInputs(estimate) };
   } catch (error) {
     if (!(error instanceof DomainError)) throw error;
-    const name = inputOfPath(error.details.input);
-    if (name === null) return { ...partial, problem: error.message };
+    const name = inputNames.find((candidate) => candidate === inputOfPath(error.details.input));
+    if (!name) return { ...partial, problem: error.message };
     const placed = placeProblem(inputs[name].fields, error, text.inputs[name].kind);
     return {
       ...partial,

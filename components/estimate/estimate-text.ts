@@ -3,24 +3,16 @@
  * what is kept in the browser, so that a half-typed figure survives a reload.
  */
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
+import { planInputNames, type PlanInputName } from "@/analytics/recovery/recovery-plan-schema";
 import type { Distribution, DistributionKind } from "@/analytics/uncertainty/distribution-schema";
 import {
   inputNames,
   type EstimateInputs,
   type InputName,
 } from "@/analytics/volumetrics/inputs-schema";
-import { definedEnds } from "./input-catalogue";
-import { typedFigure } from "./quantities-of-inputs";
-import { isEndless, parametersOf, shapeOf } from "./shapes";
-
-export interface InputText {
-  kind: DistributionKind;
-  /** by parameter key; keys of other shapes are kept, so that trying a shape loses nothing */
-  fields: Record<string, string>;
-  minimum: string;
-  maximum: string;
-  source: string;
-}
+import type { DriverName } from "@/analytics/volumetrics/results-schema";
+import { startingBounds, textOfDistribution, type InputText } from "./input-text";
+import { textOfPlan, type PlanText } from "./plan-text";
 
 export interface Correlation {
   a: InputName;
@@ -33,34 +25,45 @@ export interface EstimateText {
   correlations: Correlation[];
   fluid: SeparatorTest | null;
   depthFt: number | null;
+  /** kept while recoveries are typed by hand, so that going back to it loses nothing */
+  plan: PlanText | null;
+  /** whether recoveries are worked out by the plan rather than typed */
+  usesPlan: boolean;
 }
 
-/** Text of one distribution, with the source beside it. */
-export function textOfDistribution(distribution: Distribution, source = ""): InputText {
-  const bound = (key: "minimum" | "maximum") =>
-    key in distribution && typeof distribution[key as keyof Distribution] === "number"
-      ? typedFigure(Number(distribution[key as keyof Distribution]))
-      : "";
-  return {
-    kind: distribution.kind,
-    fields: Object.fromEntries(
-      Object.entries(parametersOf(distribution)).map(([key, value]) => [key, typedFigure(value)]),
-    ),
-    minimum: bound("minimum"),
-    maximum: bound("maximum"),
-    source,
-  };
-}
+/**
+ * Stands in a stored estimate for a recovery that nobody typed because its plan works it out: nothing looks at it, and
+ * it reads as an empty field.
+ */
+export const NOT_TYPED: Distribution = { kind: "constant", value: 0 };
+
+const isNotTyped = ({ recoveryPlan, uncertain }: EstimateInputs, name: InputName) => {
+  const { distribution } = uncertain[name];
+  return (
+    recoveryPlan !== null &&
+    isWorkedOut(name) &&
+    distribution.kind === "constant" &&
+    distribution.value === 0
+  );
+};
+
+/** Whether a recovery plan takes the place of an input. */
+export const isWorkedOut = (name: InputName) =>
+  name === "gasRecovery" || name === "condensateRecovery";
 
 /** Text of a stored estimate. Reading it back gives the same inputs. */
 export function textOfInputs(inputs: EstimateInputs): EstimateText {
   return {
     inputs: mapInputs((name) =>
-      textOfDistribution(inputs.uncertain[name].distribution, inputs.uncertain[name].source),
+      isNotTyped(inputs, name)
+        ? emptyInput(name)
+        : textOfDistribution(inputs.uncertain[name].distribution, inputs.uncertain[name].source),
     ),
     correlations: inputs.correlations.map((pair) => ({ ...pair })),
     fluid: inputs.fluid,
     depthFt: inputs.depthFt,
+    plan: inputs.recoveryPlan && textOfPlan(inputs.recoveryPlan),
+    usesPlan: inputs.recoveryPlan !== null,
   };
 }
 
@@ -78,36 +81,38 @@ const firstShapes: Record<InputName, DistributionKind> = {
   salesGasFraction: "pert",
 };
 
-type BoundsText = Pick<InputText, "minimum" | "maximum">;
-
-/** Bounds that an input starts with in a shape: those it has by definition, where the shape has no ends of its own. */
-export function startingBounds(name: InputName, kind: DistributionKind): BoundsText {
-  const { minimum, maximum } = isEndless(kind) ? definedEnds(name) : {};
-  const written = (value: number | undefined) => (value === undefined ? "" : typedFigure(value));
-  return { minimum: written(minimum), maximum: written(maximum) };
-}
-
-/** The input in another shape, its figures as they are. Bounds that nobody has touched become those of the new shape. */
-export function withShape(name: InputName, text: InputText, kind: DistributionKind): InputText {
-  const { minimum, maximum } = startingBounds(name, text.kind);
-  const isUntouched = text.minimum === minimum && text.maximum === maximum;
-  return { ...text, kind, ...(isUntouched ? startingBounds(name, kind) : {}) };
-}
+const emptyInput = (name: InputName): InputText => ({
+  kind: firstShapes[name],
+  fields: {},
+  ...startingBounds(name, firstShapes[name]),
+  source: "",
+});
 
 /** An estimate that nobody has typed anything into. No figure is proposed but the ends that a fraction has. */
 export function emptyText(depthFt: number | null, fluid: SeparatorTest | null): EstimateText {
   return {
-    inputs: mapInputs((name) => ({
-      kind: firstShapes[name],
-      fields: {},
-      ...startingBounds(name, firstShapes[name]),
-      source: "",
-    })),
+    inputs: mapInputs(emptyInput),
     correlations: [],
     fluid,
     depthFt,
+    plan: null,
+    usesPlan: false,
   };
 }
+
+/** Sets one uncertain input, of the estimate or of its recovery plan. */
+export function withInput(text: EstimateText, name: DriverName, input: InputText): EstimateText {
+  if (!isPlanInput(name)) return { ...text, inputs: { ...text.inputs, [name]: input } };
+  const { plan } = text;
+  return plan ? { ...text, plan: { ...plan, inputs: { ...plan.inputs, [name]: input } } } : text;
+}
+
+const isPlanInput = (name: DriverName): name is PlanInputName =>
+  planInputNames.some((planName) => planName === name);
+
+/** What stands in the fields of one uncertain input; `null` for one of a plan that is not there. */
+export const inputText = (text: EstimateText, name: DriverName): InputText | null =>
+  isPlanInput(name) ? (text.plan?.inputs[name] ?? null) : text.inputs[name];
 
 /** Sets the rank correlation of a pair; 0 takes the pair out. */
 export function withCorrelation(
@@ -126,13 +131,6 @@ export function correlationOf(pairs: readonly Correlation[], a: InputName, b: In
 
 const isPair = (pair: Correlation, a: InputName, b: InputName) =>
   (pair.a === a && pair.b === b) || (pair.a === b && pair.b === a);
-
-/** Keys of the fields that a shape shows and that are still empty. */
-export function emptyFields(text: InputText): string[] {
-  return shapeOf(text.kind)
-    .parameters.map(({ key }) => key)
-    .filter((key) => (text.fields[key] ?? "").trim() === "");
-}
 
 export function mapInputs<Value>(make: (name: InputName) => Value): Record<InputName, Value> {
   return Object.fromEntries(inputNames.map((name) => [name, make(name)])) as Record<

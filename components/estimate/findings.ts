@@ -61,6 +61,8 @@ export function differenceFinding(changed: number, total: number, revision: numb
     "Eight",
     "Nine",
     "Ten",
+    "Eleven",
+    "Twelve",
   ];
   if (changed === total) return `All inputs differ from r${revision}`;
   return `${words[changed] ?? changed} of ${(words[total] ?? String(total)).toLowerCase()} inputs ${changed === 1 ? "differs" : "differ"} from r${revision}`;

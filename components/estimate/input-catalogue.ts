@@ -1,5 +1,10 @@
 import { inputNames, type InputName } from "@/analytics/volumetrics/inputs-schema";
 import type { DriverName } from "@/analytics/volumetrics/results-schema";
+import {
+  planInputNames,
+  type PlanInputName,
+  type ProducingConcept,
+} from "@/analytics/recovery/recovery-plan-schema";
 import { usualRanges } from "@/analytics/volumetrics/usual-ranges";
 
 /** What an input is called, and in what unit it is kept. Screens list inputs in the order of `inputGroups`. */
@@ -80,7 +85,7 @@ export const driverCatalogue: Record<DriverName, InputDescription> = {
   },
 };
 
-export const inputGroups: { title: string; inputs: InputName[] }[] = [
+const groups: { title: string; inputs: InputName[] }[] = [
   { title: "Rock", inputs: ["areaAcres", "netThicknessFt", "porosity", "waterSaturation"] },
   { title: "Reservoir conditions", inputs: ["pressurePsia", "temperatureDegF"] },
   {
@@ -90,33 +95,66 @@ export const inputGroups: { title: string; inputs: InputName[] }[] = [
 ];
 
 /**
- * Ends that an input has by definition, so that a curve without ends has to be cut off there: a share of the pores or of
- * the gas, and a yield, which is never negative.
+ * Groups of the ledger with their inputs.
+ *
+ * @param planInputs  of a recovery plan in use: they stand where the two recoveries would; `null` without a plan
  */
-export function definedEnds(name: InputName): { minimum?: number; maximum?: number } {
-  const [minimum, maximum] = usualRanges[name].possible;
+export function inputGroups(
+  planInputs: readonly PlanInputName[] | null,
+): { title: string; inputs: DriverName[] }[] {
+  return groups.map(({ title, inputs }) => ({
+    title,
+    inputs: inputs.flatMap((name): DriverName[] =>
+      planInputs === null
+        ? [name]
+        : name === "gasRecovery"
+          ? [...planInputs]
+          : name === "condensateRecovery"
+            ? []
+            : [name],
+    ),
+  }));
+}
+
+/** Every input in the order of the ledger, as `inputGroups`. */
+export const listedInputs = (planInputs: readonly PlanInputName[] | null): DriverName[] =>
+  inputGroups(planInputs).flatMap(({ inputs }) => inputs);
+
+/** Inputs of a plan that a way of producing uses. */
+export const planInputsOf = (concept: ProducingConcept): readonly PlanInputName[] =>
+  concept === "cycling" ? planInputNames : planInputNames.slice(0, 2);
+
+/**
+ * Ends that an input has by definition, so that a curve without ends has to be cut off there: a share of the pores or of
+ * the gas, and a yield or a factor, which is never negative.
+ */
+export function definedEnds(name: DriverName): { minimum?: number; maximum?: number } {
   switch (name) {
     case "porosity":
     case "waterSaturation":
     case "gasRecovery":
     case "condensateRecovery":
-    case "salesGasFraction":
+    case "salesGasFraction": {
+      const [minimum, maximum] = usualRanges[name].possible;
       return { minimum, maximum };
+    }
+    case "sweepEfficiency":
+    case "displacementEfficiency":
+      return { minimum: 0, maximum: 1 };
     case "condensateYieldStbPerMmscf":
-      return { minimum };
+      return { minimum: usualRanges[name].possible[0] };
+    case "condensateCurveFactor":
+      return { minimum: 0 };
     default:
       return {};
   }
 }
 
-/** Number of the ledger line of an input, from 1, in the order in which the groups list them. */
-export function lineOf(name: InputName): number {
-  return inputGroups.flatMap((group) => group.inputs).indexOf(name) + 1;
-}
-
 /** An input's name, when a path such as `uncertain.porosity.distribution.low` is about one; `null` otherwise. */
-export function inputOfPath(path: string | undefined): InputName | null {
+export function inputOfPath(path: string | undefined): DriverName | null {
   if (!path) return null;
   const parts = path.split(/[./]/);
-  return inputNames.find((name) => parts.includes(name)) ?? null;
+  if (parts.includes("fluid")) return null;
+  const names: readonly DriverName[] = parts.includes("recoveryPlan") ? planInputNames : inputNames;
+  return names.find((name) => parts.includes(name)) ?? null;
 }

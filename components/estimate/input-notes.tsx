@@ -2,7 +2,7 @@ import { formatFigure } from "@/components/ui/format";
 import { Button } from "@/components/ui/button";
 import { Notice } from "@/components/ui/status";
 import type { Warning } from "@/analytics/warnings";
-import type { CutOff } from "./estimate-reading";
+import type { CutOff } from "./input-reading";
 import { typedFigure } from "./quantities-of-inputs";
 import type { UnitSuspicion } from "./unit-suspicion";
 

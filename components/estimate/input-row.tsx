@@ -1,24 +1,34 @@
 "use client";
 
 import { densityCurve } from "@/analytics/uncertainty/distribution";
-import { usualRanges } from "@/analytics/volumetrics/usual-ranges";
-import type { InputName } from "@/analytics/volumetrics/inputs-schema";
+import type { DriverName } from "@/analytics/volumetrics/results-schema";
 import type { Warning } from "@/analytics/warnings";
 import { DensityCurve } from "@/components/charts/density-curve";
 import { Menu } from "@/components/ui/choice";
 import { formatFigure, formatPercent, MISSING } from "@/components/ui/format";
 import { Icon } from "@/components/ui/icon";
-import type { InputReading } from "./estimate-reading";
-import { withShape, type InputText } from "./estimate-text";
-import { inputCatalogue, lineOf } from "./input-catalogue";
+import { driverCatalogue } from "./input-catalogue";
 import { InputNotes } from "./input-notes";
+import type { InputReading } from "./input-reading";
+import { withShape, type InputText } from "./input-text";
 import { typedFigure } from "./quantities-of-inputs";
 import { QuantityInput } from "./quantity-input";
 import { convertShape, shapeOf, shapes, type Slot } from "./shapes";
 import { suspectUnit, type UnitSuspicion } from "./unit-suspicion";
 
+/** What is usual for an input, and what is possible. */
+export interface ExpectedRange {
+  usual: readonly [low: number, high: number];
+  possible: readonly [low: number, high: number];
+  /** usual P10/P90 ratio; `null` where a ratio says nothing */
+  ratio?: readonly [low: number, high: number] | null;
+}
+
 export interface InputRowProps {
-  name: InputName;
+  name: DriverName;
+  /** number of the ledger line */
+  line: number;
+  expected: ExpectedRange;
   text: InputText;
   reading: InputReading;
   warnings: readonly Warning[];
@@ -34,11 +44,18 @@ const percentileOf = { low: "p90", best: "p50", high: "p10" } as const;
 const columnName = { low: "P90", best: "P50", high: "P10" } as const;
 
 /** One line of the input table, and under it what there is to say about the line. */
-export function InputRow({ name, text, reading, warnings, onChange }: InputRowProps) {
-  const about = inputCatalogue[name];
-  const usual = usualRanges[name];
+export function InputRow({
+  name,
+  line,
+  expected,
+  text,
+  reading,
+  warnings,
+  onChange,
+}: InputRowProps) {
+  const about = driverCatalogue[name];
   const notesId = `notes-${name}`;
-  const suspicion = onChange ? suspicionOf(name, text, reading) : null;
+  const suspicion = onChange ? suspicionOf(name, expected, text, reading) : null;
   const problems = [
     ...new Set(
       [reading.problem, ...Object.values(reading.fields).map((field) => field.problem)].filter(
@@ -57,7 +74,7 @@ export function InputRow({ name, text, reading, warnings, onChange }: InputRowPr
   return (
     <>
       <tr data-followed={hasNotes || hasBounds || undefined}>
-        <td className="folio">{lineOf(name)}</td>
+        <td className="folio">{line}</td>
         <th scope="row">
           {about.label}
           <small>{about.unitWords}</small>
@@ -70,13 +87,13 @@ export function InputRow({ name, text, reading, warnings, onChange }: InputRowPr
           />
         ))}
         <td className="curve">
-          <Curve name={name} reading={reading} flagged={isFlagged} />
+          <Curve {...{ name, expected, reading }} flagged={isFlagged} />
         </td>
         <td className="hint">
           <span className="hint-line">
-            <ShapeMenu {...{ name, text, reading, onChange }} />
+            <ShapeMenu {...{ name, expected, text, reading, onChange }} />
             <span className="text-ink-soft">
-              Usual {formatUsual(usual.usual[0])} to {formatUsual(usual.usual[1])}
+              Usual {typedFigure(expected.usual[0])} to {typedFigure(expected.usual[1])}
             </span>
           </span>
           <SourceLine label={about.label} text={text} onChange={onChange} />
@@ -113,8 +130,6 @@ export function InputRow({ name, text, reading, warnings, onChange }: InputRowPr
   );
 }
 
-const formatUsual = (value: number) => typedFigure(value);
-
 function withValues(text: InputText, values: Record<string, number>): InputText {
   const typed = Object.entries(values).map(([key, value]) => [key, typedFigure(value)]);
   return { ...text, fields: { ...text.fields, ...Object.fromEntries(typed) } };
@@ -122,7 +137,8 @@ function withValues(text: InputText, values: Record<string, number>): InputText 
 
 /** Only shapes whose figures are values of the input can be in another unit as a whole. */
 function suspicionOf(
-  name: InputName,
+  name: DriverName,
+  { usual, ratio }: ExpectedRange,
   text: InputText,
   reading: InputReading,
 ): UnitSuspicion | null {
@@ -133,7 +149,6 @@ function suspicionOf(
     return value === null ? [] : [{ key, value }];
   });
   if (values.length < parameters.length) return null;
-  const { usual, ratio } = usualRanges[name];
   return suspectUnit(name, values, {
     low: usual[0],
     high: usual[1],
@@ -142,7 +157,7 @@ function suspicionOf(
 }
 
 interface CellProps {
-  name: InputName;
+  name: DriverName;
   slot: Slot;
   text: InputText;
   reading: InputReading;
@@ -154,7 +169,7 @@ interface CellProps {
 
 /** A parameter to type, or the percentile that follows from the others. */
 function SlotCell({ name, slot, text, reading, suspicion, flagged, notesId, onChange }: CellProps) {
-  const about = inputCatalogue[name];
+  const about = driverCatalogue[name];
   const parameter = shapeOf(text.kind).parameters.find((candidate) => candidate.slot === slot);
   const percentile = reading.compiled?.range[percentileOf[slot]];
   if (!parameter || !onChange) {
@@ -200,10 +215,12 @@ function SlotCell({ name, slot, text, reading, suspicion, flagged, notesId, onCh
 
 function Curve({
   name,
+  expected,
   reading,
   flagged,
 }: {
-  name: InputName;
+  name: DriverName;
+  expected: ExpectedRange;
   reading: InputReading;
   flagged: boolean;
 }) {
@@ -213,11 +230,11 @@ function Curve({
   }
   if (distribution.kind === "constant") return <span className="text-ink-soft">One value</span>;
   const { x, density } = densityCurve(distribution);
-  const [low, high] = usualRanges[name].usual;
+  const [low, high] = expected.usual;
   return (
     <DensityCurve
-      name={inputCatalogue[name].label}
-      unit={inputCatalogue[name].unit || undefined}
+      name={driverCatalogue[name].label}
+      unit={driverCatalogue[name].unit || undefined}
       points={x.map((value, index) => ({ x: value, density: density[index] }))}
       range={compiled.range}
       usual={{ low, high }}
@@ -228,14 +245,14 @@ function Curve({
 
 function ShapeMenu({
   name,
+  expected: { possible },
   text,
   reading,
   onChange,
-}: Pick<CellProps, "name" | "text" | "reading" | "onChange">) {
+}: Pick<CellProps, "name" | "text" | "reading" | "onChange"> & { expected: ExpectedRange }) {
   const current = shapeOf(text.kind);
   if (!onChange) return <b>{current.label}</b>;
   const isBounded = text.minimum !== "" || text.maximum !== "";
-  const { possible } = usualRanges[name];
   return (
     <Menu
       button={
@@ -244,7 +261,7 @@ function ShapeMenu({
           <Icon name="chevron-down" size={9} />
         </>
       }
-      label={`Shape of ${inputCatalogue[name].label}: ${current.label}`}
+      label={`Shape of ${driverCatalogue[name].label}: ${current.label}`}
       buttonClassName="shape-button"
       groups={[
         {
@@ -277,7 +294,7 @@ function ShapeMenu({
 }
 
 function reshaped(
-  name: InputName,
+  name: DriverName,
   text: InputText,
   reading: InputReading,
   kind: InputText["kind"],
@@ -294,7 +311,7 @@ function Bounds({
   notesId,
   onChange,
 }: Pick<CellProps, "name" | "text" | "reading" | "notesId" | "onChange">) {
-  const { label, unit } = inputCatalogue[name];
+  const { label, unit } = driverCatalogue[name];
   if (!onChange) {
     return (
       <p className="bounds">

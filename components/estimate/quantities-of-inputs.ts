@@ -1,8 +1,8 @@
 import { canonicalUnit, quantityOf, type QuantityName } from "@/analytics/units/conversions";
 import { parseQuantity, type ParsedQuantity } from "@/analytics/units/parse-quantity";
-import type { InputName } from "@/analytics/volumetrics/inputs-schema";
+import type { DriverName } from "@/analytics/volumetrics/results-schema";
 
-export const quantityOfInput: Record<InputName, QuantityName> = {
+export const quantityOfInput: Record<DriverName, QuantityName> = {
   areaAcres: "area",
   netThicknessFt: "length",
   porosity: "fraction",
@@ -13,6 +13,10 @@ export const quantityOfInput: Record<InputName, QuantityName> = {
   gasRecovery: "fraction",
   condensateRecovery: "fraction",
   salesGasFraction: "fraction",
+  abandonmentPressurePsia: "pressure",
+  condensateCurveFactor: "fraction",
+  sweepEfficiency: "fraction",
+  displacementEfficiency: "fraction",
 };
 
 export interface FieldReading {
@@ -42,7 +46,7 @@ export function typedFigure(value: number): string {
  */
 export function readField(
   text: string,
-  name: InputName,
+  name: DriverName,
   inUnit: boolean,
   unit: string,
 ): FieldReading {

@@ -5,6 +5,8 @@ import { Segmented } from "@/components/ui/choice";
 import { MISSING } from "@/components/ui/format";
 import { Notice } from "@/components/ui/status";
 import { Unit } from "@/components/ui/text";
+import { EntryGrid } from "@/components/fluid/entry-grid";
+import type { Cells } from "@/components/fluid/grid-paste";
 import { QuantityInput } from "./quantity-input";
 import {
   isShown,
@@ -19,6 +21,8 @@ export interface SeparatorSheetProps {
   reading: SheetReading;
   /** what the engine says about a field */
   problems: Partial<Record<SheetFieldName, string>>;
+  /** what a laboratory's file said at a field and why it was not read */
+  remarks?: Cells;
   /** absent: the sheet is read, not typed */
   onChange?: (sheet: SheetText) => void;
 }
@@ -75,12 +79,27 @@ const singleRows: { name: SheetFieldName; label: string; unit: string }[] = [
 ];
 
 /** The separator test as the laboratory's sheet has it: stages side by side, then the liquid and the impurities. */
-export function SeparatorSheet({ sheet, reading, problems, onChange }: SeparatorSheetProps) {
+export function SeparatorSheet({
+  sheet,
+  reading,
+  problems,
+  remarks = {},
+  onChange,
+}: SeparatorSheetProps) {
   const hasSecond = sheet.stages === 3;
   const columns = hasSecond ? 3 : 2;
   const cell = (name: SheetFieldName) => (
-    <SheetCell {...{ name, sheet, reading, problems, onChange }} />
+    <SheetCell {...{ name, sheet, reading, problems, remarks, onChange }} />
   );
+  const shown = (name: SheetFieldName | null) =>
+    name !== null && isShown(sheet, name) ? name : null;
+  const grid = [
+    ...stageRows.map(({ cells: [first, second, tank] }) =>
+      (hasSecond ? [first, second, tank] : [first, tank]).map(shown),
+    ),
+    // The liquid's figures stand under the stock tank's.
+    ...singleRows.map(({ name }) => (hasSecond ? [null, null, name] : [null, name])),
+  ];
   return (
     <div className="grid gap-3">
       {onChange && (
@@ -110,46 +129,53 @@ export function SeparatorSheet({ sheet, reading, problems, onChange }: Separator
           />
         </div>
       )}
-      <table className="ledger-table separator-sheet">
-        <caption className="sr-only">Separator test</caption>
-        <thead>
-          <tr>
-            <td />
-            <th scope="col" className="right">
-              {hasSecond ? "Separator 1" : "Separator"}
-            </th>
-            {hasSecond && (
+      <EntryGrid
+        grid={grid}
+        onFill={
+          onChange && ((changes) => onChange({ ...sheet, fields: { ...sheet.fields, ...changes } }))
+        }
+      >
+        <table className="ledger-table separator-sheet">
+          <caption className="sr-only">Separator test</caption>
+          <thead>
+            <tr>
+              <td />
               <th scope="col" className="right">
-                Separator 2
+                {hasSecond ? "Separator 1" : "Separator"}
               </th>
-            )}
-            <th scope="col" className="right">
-              Stock tank
-            </th>
-          </tr>
-        </thead>
-        <tbody>
-          {stageRows.map(({ label, unit, cells: [first, second, tank] }) => (
-            <tr key={label}>
-              <th scope="row">
-                {label} <Unit>{unit}</Unit>
+              {hasSecond && (
+                <th scope="col" className="right">
+                  Separator 2
+                </th>
+              )}
+              <th scope="col" className="right">
+                Stock tank
               </th>
-              <td className="entry">{cell(first)}</td>
-              {hasSecond && <td className="entry">{second && cell(second)}</td>}
-              <td className="entry">{tank && cell(tank)}</td>
             </tr>
-          ))}
-          {singleRows.map(({ name, label, unit }) => (
-            <tr key={name}>
-              <th scope="row" colSpan={columns}>
-                {label} <Unit>{unit}</Unit>
-              </th>
-              <td className="entry">{cell(name)}</td>
-            </tr>
-          ))}
-        </tbody>
-      </table>
-      <SheetProblems {...{ sheet, reading, problems }} />
+          </thead>
+          <tbody>
+            {stageRows.map(({ label, unit, cells: [first, second, tank] }) => (
+              <tr key={label}>
+                <th scope="row">
+                  {label} <Unit>{unit}</Unit>
+                </th>
+                <td className="entry">{cell(first)}</td>
+                {hasSecond && <td className="entry">{second && cell(second)}</td>}
+                <td className="entry">{tank && cell(tank)}</td>
+              </tr>
+            ))}
+            {singleRows.map(({ name, label, unit }) => (
+              <tr key={name}>
+                <th scope="row" colSpan={columns}>
+                  {label} <Unit>{unit}</Unit>
+                </th>
+                <td className="entry">{cell(name)}</td>
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      </EntryGrid>
+      <SheetProblems {...{ sheet, reading, problems, remarks }} />
     </div>
   );
 }
@@ -159,6 +185,7 @@ function SheetCell({
   sheet,
   reading,
   problems,
+  remarks = {},
   onChange,
 }: SeparatorSheetProps & { name: SheetFieldName }) {
   if (!isShown(sheet, name)) {
@@ -169,13 +196,16 @@ function SheetCell({
   }
   const own = reading.fields[name];
   return (
-    <QuantityInput
-      label={sheetFields[name].label}
-      value={sheet.fields[name]}
-      reading={{ ...own, problem: own.problem ?? problems[name] ?? null }}
-      describedBy="sheet-problems"
-      onChange={(text) => onChange({ ...sheet, fields: { ...sheet.fields, [name]: text } })}
-    />
+    <span data-place={name} className="block">
+      <QuantityInput
+        label={sheetFields[name].label}
+        value={sheet.fields[name]}
+        reading={{ ...own, problem: own.problem ?? problems[name] ?? null }}
+        flagged={remarks[name] !== undefined}
+        describedBy="sheet-problems"
+        onChange={(text) => onChange({ ...sheet, fields: { ...sheet.fields, [name]: text } })}
+      />
+    </span>
   );
 }
 
@@ -184,15 +214,25 @@ function SheetProblems({
   sheet,
   reading,
   problems,
-}: Pick<SeparatorSheetProps, "sheet" | "reading" | "problems">) {
+  remarks = {},
+}: Pick<SeparatorSheetProps, "sheet" | "reading" | "problems" | "remarks">) {
   const names = (Object.keys(sheetFields) as SheetFieldName[]).filter(
-    (name) => isShown(sheet, name) && (reading.fields[name].problem ?? problems[name]),
+    (name) =>
+      isShown(sheet, name) && (reading.fields[name].problem ?? problems[name] ?? remarks[name]),
   );
+  const isWrong = (name: SheetFieldName) =>
+    (reading.fields[name].problem ?? problems[name]) !== undefined &&
+    (reading.fields[name].problem ?? problems[name]) !== null;
   return (
     <div id="sheet-problems" className="grid gap-1.5 empty:hidden">
       {names.map((name) => (
-        <Notice key={name} tone="error" live={false} title={`${sheetFields[name].label}.`}>
-          {reading.fields[name].problem ?? problems[name]}
+        <Notice
+          key={name}
+          tone={isWrong(name) ? "error" : "warning"}
+          live={false}
+          title={`${sheetFields[name].label}.`}
+        >
+          {remarks[name]} {reading.fields[name].problem ?? problems[name]}
         </Notice>
       ))}
     </div>

@@ -1,5 +1,5 @@
 import { toCanonical } from "@/analytics/units/conversions";
-import type { InputName } from "@/analytics/volumetrics/inputs-schema";
+import type { DriverName } from "@/analytics/volumetrics/results-schema";
 
 /** A unit that people type by habit where another is asked for. */
 interface OtherUnit {
@@ -9,7 +9,13 @@ interface OtherUnit {
   toCanonical: (value: number) => number;
 }
 
-const otherUnits: Partial<Record<InputName, OtherUnit[]>> = {
+const perCent: OtherUnit[] = [{ words: "per cent", symbol: "%", toCanonical: (v) => v / 100 }];
+const pressures: OtherUnit[] = [
+  { words: "bar", symbol: "bar", toCanonical: (v) => toCanonical(v, "pressure", "bar") },
+  { words: "megapascals", symbol: "MPa", toCanonical: (v) => toCanonical(v, "pressure", "MPa") },
+];
+
+const otherUnits: Partial<Record<DriverName, OtherUnit[]>> = {
   areaAcres: [
     {
       words: "square kilometres",
@@ -21,12 +27,9 @@ const otherUnits: Partial<Record<InputName, OtherUnit[]>> = {
   netThicknessFt: [
     { words: "metres", symbol: "m", toCanonical: (v) => toCanonical(v, "length", "m") },
   ],
-  porosity: [{ words: "per cent", symbol: "%", toCanonical: (v) => v / 100 }],
-  waterSaturation: [{ words: "per cent", symbol: "%", toCanonical: (v) => v / 100 }],
-  pressurePsia: [
-    { words: "bar", symbol: "bar", toCanonical: (v) => toCanonical(v, "pressure", "bar") },
-    { words: "megapascals", symbol: "MPa", toCanonical: (v) => toCanonical(v, "pressure", "MPa") },
-  ],
+  porosity: perCent,
+  waterSaturation: perCent,
+  pressurePsia: pressures,
   temperatureDegF: [
     {
       words: "degrees Celsius",
@@ -34,9 +37,13 @@ const otherUnits: Partial<Record<InputName, OtherUnit[]>> = {
       toCanonical: (v) => toCanonical(v, "temperature", "degC"),
     },
   ],
-  gasRecovery: [{ words: "per cent", symbol: "%", toCanonical: (v) => v / 100 }],
-  condensateRecovery: [{ words: "per cent", symbol: "%", toCanonical: (v) => v / 100 }],
-  salesGasFraction: [{ words: "per cent", symbol: "%", toCanonical: (v) => v / 100 }],
+  gasRecovery: perCent,
+  condensateRecovery: perCent,
+  salesGasFraction: perCent,
+  abandonmentPressurePsia: pressures,
+  condensateCurveFactor: perCent,
+  sweepEfficiency: perCent,
+  displacementEfficiency: perCent,
 };
 
 export interface TypedValue {
@@ -74,7 +81,7 @@ const tidy = (value: number) => Number(value.toPrecision(3));
  * @param values  low to high, as typed
  */
 export function suspectUnit(
-  name: InputName,
+  name: DriverName,
   values: readonly TypedValue[],
   usual: Usual,
 ): UnitSuspicion | null {

@@ -1,7 +1,8 @@
 import { describe, expect, it } from "vitest";
 import { previewWarnings, waitingWords } from "@/components/estimate/checklist";
 import { readEstimate } from "@/components/estimate/estimate-reading";
-import { emptyText, textOfDistribution, textOfInputs } from "@/components/estimate/estimate-text";
+import { emptyText, textOfInputs } from "@/components/estimate/estimate-text";
+import { textOfDistribution } from "@/components/estimate/input-text";
 import { buildInputs } from "../../analytics/volumetrics/estimate-inputs";
 
 describe("waitingWords(reading)", () => {

@@ -5,15 +5,10 @@ import {
   isSameInputs,
   mergeDrafts,
 } from "@/components/estimate/differences";
-import { readEstimate, readInput } from "@/components/estimate/estimate-reading";
-import {
-  emptyText,
-  startingBounds,
-  textOfDistribution,
-  textOfInputs,
-  withCorrelation,
-  withShape,
-} from "@/components/estimate/estimate-text";
+import { readEstimate } from "@/components/estimate/estimate-reading";
+import { emptyText, textOfInputs, withCorrelation } from "@/components/estimate/estimate-text";
+import { readInput } from "@/components/estimate/input-reading";
+import { startingBounds, textOfDistribution, withShape } from "@/components/estimate/input-text";
 import { convertShape } from "@/components/estimate/shapes";
 import { readSheet, textOfTest } from "@/components/estimate/sheet-text";
 import { compileDistribution } from "@/analytics/uncertainty/distribution";

@@ -1,11 +1,16 @@
 "use client";
 
 import { differenceFinding } from "@/components/estimate/findings";
-import { inputDifferences, isSameFluid } from "@/components/estimate/differences";
+import {
+  inputDifferences,
+  isSameFluid,
+  recoveryDifferences,
+} from "@/components/estimate/differences";
 import { DifferenceTable } from "@/components/estimate/difference-table";
 import { ExceedanceSection } from "@/components/estimate/exceedance-section";
 import { FindingList } from "@/components/estimate/finding-list";
 import { resultGroups } from "@/components/estimate/result-rows";
+import { PlanDifferenceTable } from "@/components/estimate/plan-difference-table";
 import { ResultChangeTable } from "@/components/estimate/result-change-table";
 import { Columns, Section, Stack } from "@/components/ui/section";
 import { EmptyState } from "@/components/ui/status";
@@ -45,7 +50,17 @@ export function CompareTab() {
           }
           note={`${before ? `Box: approved r${before.revision}. Line: ${label}. Each input on its own scale.` : "Each input on its own scale."}${fluidChanged ? " The separator test is another one." : ""}`}
         >
-          <DifferenceTable differences={differences} warnings={warnings} />
+          <DifferenceTable
+            differences={[
+              ...differences,
+              ...recoveryDifferences({ inputs, summary: results.summary }, before),
+            ]}
+            warnings={warnings}
+          />
+          <PlanDifferenceTable
+            now={inputs.recoveryPlan}
+            before={before && { plan: before.inputs.recoveryPlan, revision: before.revision }}
+          />
         </Section>
         {results.summary && (
           <Section

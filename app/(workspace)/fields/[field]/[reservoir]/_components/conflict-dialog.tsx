@@ -5,6 +5,7 @@ import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import { compileDistribution } from "@/analytics/uncertainty/distribution";
 import { conflictingParts, mergeDrafts, type DraftPart } from "@/components/estimate/differences";
 import { inputCatalogue } from "@/components/estimate/input-catalogue";
+import { planInWords } from "@/components/estimate/plan-words";
 import { shapeOf } from "@/components/estimate/shapes";
 import { Button } from "@/components/ui/button";
 import { Segmented } from "@/components/ui/choice";
@@ -17,6 +18,7 @@ const otherParts = {
   correlations: "Inputs that move together",
   fluid: "Separator test",
   depthFt: "Depth",
+  recoveryPlan: "Recovery plan",
 };
 
 const nameOf = (part: DraftPart) =>
@@ -29,6 +31,9 @@ function wordsOf(inputs: EstimateInputs, part: DraftPart): string {
   if (part === "fluid") return `${formatFigure(inputs.fluid.condensateApi)} °API`;
   if (part === "correlations") {
     return inputs.correlations.length === 1 ? "1 pair" : `${inputs.correlations.length} pairs`;
+  }
+  if (part === "recoveryPlan") {
+    return inputs.recoveryPlan ? planInWords(inputs.recoveryPlan) : "recoveries typed by hand";
   }
   const { distribution, source } = inputs.uncertain[part];
   const { p90, p50, p10 } = compileDistribution(distribution).range;

@@ -1,10 +1,13 @@
 "use client";
 
+import { inputNames } from "@/analytics/volumetrics/inputs-schema";
 import { waitingWords } from "@/components/estimate/checklist";
 import { CorrelationGrid } from "@/components/estimate/correlation-grid";
 import { Drivers } from "@/components/estimate/drivers";
+import { isWorkedOut } from "@/components/estimate/estimate-text";
 import { ExceedanceSection } from "@/components/estimate/exceedance-section";
 import { FindingList } from "@/components/estimate/finding-list";
+import { inputOfPath } from "@/components/estimate/input-catalogue";
 import { InputTable } from "@/components/estimate/input-table";
 import { resultGroups } from "@/components/estimate/result-rows";
 import { ResultTable } from "@/components/estimate/result-table";
@@ -18,7 +21,8 @@ import { Revisions } from "./revisions";
 
 /** The engineer's main place: ranges at the left, what they come to at the right, as they are typed. */
 export function InputsTab() {
-  const { text, reading, draft, startFirst, results, resultBasis, warnings } = useReservoir();
+  const context = useReservoir();
+  const { text, reading, draft, startFirst, results, resultBasis, warnings, place } = context;
   if (!text || !reading) {
     return (
       <EmptyState
@@ -50,8 +54,10 @@ export function InputsTab() {
               text={text}
               reading={reading}
               warnings={warnings}
-              zFactor={results.summary?.derived.zFactor ?? null}
+              summary={results.summary}
+              fluidHref={context.withBasis(`/fields/${place.field}/${place.reservoir}/fluid`)}
               onChange={draft?.setInput}
+              planChanges={draft && { onPlan: draft.setPlan, onUse: draft.setUsesPlan }}
             />
             <OtherWarnings />
           </section>
@@ -64,7 +70,11 @@ export function InputsTab() {
                   : "Rank correlation. Hatched: they move against each other."
               }
             >
-              <CorrelationGrid pairs={text.correlations} onChange={draft?.setCorrelation} />
+              <CorrelationGrid
+                names={inputNames.filter((name) => !reading.plan || !isWorkedOut(name))}
+                pairs={text.correlations}
+                onChange={draft?.setCorrelation}
+              />
             </Section>
             <Exceedance />
           </Columns>
@@ -81,7 +91,7 @@ export function InputsTab() {
 /** Warnings that are about no single input: the fluid, the correlations, the depth. */
 function OtherWarnings() {
   const { warnings, place, withBasis, text } = useReservoir();
-  const others = warnings.filter((warning) => !warning.input?.startsWith("uncertain."));
+  const others = warnings.filter((warning) => inputOfPath(warning.input) === null);
   if (others.length === 0 && text?.fluid) return null;
   const fluidHref = withBasis(`/fields/${place.field}/${place.reservoir}/fluid`);
   return (

@@ -3,7 +3,7 @@
 import { useState } from "react";
 import { useRouter } from "next/navigation";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
-import { textOfDistribution } from "@/components/estimate/estimate-text";
+import { textOfDistribution } from "@/components/estimate/input-text";
 import { readQuantity } from "@/components/estimate/quantities-of-inputs";
 import { Button } from "@/components/ui/button";
 import { Dialog } from "@/components/ui/dialog";

@@ -18,7 +18,10 @@ export function readBackup(reservoirId: string): Backup | null {
   try {
     const kept = localStorage.getItem(keyOf(reservoirId));
     const backup = kept === null ? null : (JSON.parse(kept) as Partial<Backup>);
-    return backup?.text?.inputs ? (backup as Backup) : null;
+    if (!backup?.text?.inputs) return null;
+    // Work of before there were recovery plans has none.
+    const text = { ...backup.text, plan: backup.text.plan ?? null };
+    return { ...(backup as Backup), text: { ...text, usesPlan: text.usesPlan ?? false } };
   } catch {
     // Storage that is closed to us, or holds something else, is no backup.
     return null;

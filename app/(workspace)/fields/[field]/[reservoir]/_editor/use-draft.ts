@@ -2,6 +2,7 @@
 
 import { useCallback, useEffect, useMemo, useRef, useState } from "react";
 import type { EstimateInputs, InputName } from "@/analytics/volumetrics/inputs-schema";
+import type { DriverName } from "@/analytics/volumetrics/results-schema";
 import { errorWords, ProblemError } from "@/app/_client/request";
 import { estimateSchema, type EstimateView } from "@/app/api/v1/estimates/schema";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
@@ -11,9 +12,11 @@ import {
   emptyText,
   textOfInputs,
   withCorrelation,
+  withInput,
   type EstimateText,
-  type InputText,
 } from "@/components/estimate/estimate-text";
+import type { InputText } from "@/components/estimate/input-text";
+import type { PlanText } from "@/components/estimate/plan-text";
 import { saveDraft } from "../_queries/reservoir-page";
 import { dropBackup, readBackup, writeBackup, type Backup } from "./draft-backup";
 
@@ -166,8 +169,17 @@ export function useDraft(start: DraftStart) {
     saveState: saveStateOf({ isSaved, theirs, progress, canSave: isReady }),
     save,
     setInput: useCallback(
-      (name: InputName, input: InputText) =>
-        change((now) => ({ ...now, inputs: { ...now.inputs, [name]: input } })),
+      (name: DriverName, input: InputText) => change((now) => withInput(now, name, input)),
+      [change],
+    ),
+    /** Puts a recovery plan in, and into use. */
+    setPlan: useCallback(
+      (plan: PlanText) => change((now) => ({ ...now, plan, usesPlan: true })),
+      [change],
+    ),
+    /** Turns between the plan and recoveries typed by hand; both keep their figures. */
+    setUsesPlan: useCallback(
+      (usesPlan: boolean) => change((now) => ({ ...now, usesPlan: usesPlan && now.plan !== null })),
       [change],
     ),
     setCorrelation: useCallback(

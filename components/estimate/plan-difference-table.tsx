@@ -1,0 +1,53 @@
+import { LedgerTable } from "@/components/ui/table";
+import type { RecoveryPlan } from "@/analytics/recovery/recovery-plan-schema";
+import { RouteFlag } from "./route-flag";
+import { planInWords } from "./plan-words";
+import { planDifferences } from "./differences";
+
+/** How recoveries came about and how they do now, in words; a plan that stands as it stood is told in a line. */
+export function PlanDifferenceTable({
+  now,
+  before,
+}: {
+  now: RecoveryPlan | null;
+  before: { plan: RecoveryPlan | null; revision: number } | null;
+}) {
+  const differences = before ? planDifferences(now, before.plan) : [];
+  if (differences.length === 0 || before === null) {
+    return now ? (
+      <div className="mt-6 grid gap-1.5">
+        <h3>How recoveries come about{before ? ` is as in r${before.revision}` : ""}</h3>
+        <p className="text-13 text-ink-soft">{planInWords(now)}.</p>
+        <p>
+          <RouteFlag route={now.curve.route} />
+        </p>
+      </div>
+    ) : null;
+  }
+  return (
+    <div className="mt-6 grid gap-2">
+      <h3>How recoveries come about has changed</h3>
+      <LedgerTable caption="The recovery plan against the approved revision">
+        <thead>
+          <tr>
+            <th scope="col">Part</th>
+            <th scope="col">r{before.revision}</th>
+            <th scope="col">Now</th>
+          </tr>
+        </thead>
+        <tbody>
+          {differences.map((part) => (
+            <tr key={part.label}>
+              <th scope="row">{part.label}</th>
+              <td className="wrap soft">{part.before}</td>
+              <td className="wrap">{part.now}</td>
+            </tr>
+          ))}
+        </tbody>
+      </LedgerTable>
+      <p>
+        <RouteFlag route={now?.curve.route} />
+      </p>
+    </div>
+  );
+}
