@@ -1,4 +1,5 @@
 /** Calculations on threads, so that a request never waits for somebody else's simulation. */
+import fs from "node:fs";
 import { availableParallelism } from "node:os";
 import path from "node:path";
 import { Piscina } from "piscina";
@@ -13,23 +14,36 @@ import type { LedgerTask, Outcome, SimulationTask } from "./worker";
 /** Tasks that may wait for a thread. More would wait longer than anybody does, each with its inputs in memory. */
 export const MAXIMUM_QUEUE = 64;
 
+const program = path.join(
+  /* turbopackIgnore: true */ process.cwd(),
+  "dist",
+  "workers",
+  "compute.mjs",
+);
+
+interface OpenPool {
+  threads: Piscina;
+  /** when its program was bundled; one that was bundled again since replaces it, without a restart */
+  bundledAt: number;
+}
+
 /** One pool a process, kept across hot reloads in development. */
-const holder = globalThis as typeof globalThis & { dewledgerComputePool?: Piscina };
+const holder = globalThis as typeof globalThis & { dewledgerCompute?: OpenPool };
 
 function pool(): Piscina {
-  holder.dewledgerComputePool ??= new Piscina({
-    filename: path.join(
-      /* turbopackIgnore: true */ process.cwd(),
-      "dist",
-      "workers",
-      "compute.mjs",
-    ),
-    minThreads: 1,
-    maxThreads: Math.max(1, availableParallelism() - 1),
-    idleTimeout: 60_000,
-    maxQueue: MAXIMUM_QUEUE,
-  });
-  return holder.dewledgerComputePool;
+  const bundledAt = fs.statSync(program).mtimeMs;
+  if (holder.dewledgerCompute?.bundledAt !== bundledAt) {
+    void holder.dewledgerCompute?.threads.close();
+    const threads = new Piscina({
+      filename: program,
+      minThreads: 1,
+      maxThreads: Math.max(1, availableParallelism() - 1),
+      idleTimeout: 60_000,
+      maxQueue: MAXIMUM_QUEUE,
+    });
+    holder.dewledgerCompute = { threads, bundledAt };
+  }
+  return holder.dewledgerCompute.threads;
 }
 
 export interface ComputeOptions {
@@ -101,9 +115,9 @@ export async function runOnFluid<Name extends FluidTaskName>(
 
 /** Ends the threads; for a process that is about to stop, and for tests. */
 export async function closePool(): Promise<void> {
-  const open = holder.dewledgerComputePool;
-  holder.dewledgerComputePool = undefined;
-  await open?.destroy();
+  const open = holder.dewledgerCompute;
+  holder.dewledgerCompute = undefined;
+  await open?.threads.destroy();
 }
 
 function valueOf<Value>(outcome: Outcome<Value>): Value {
