@@ -1,7 +1,7 @@
 /** From a stream to the components of the equation of state. */
 import { lightConstants } from "../composition/components";
 import { heavyComponents } from "../composition/heptanes-plus";
-import type { HeptanesPlus, Stream } from "../composition/stream";
+import type { HeptanesPlus, Stream, StreamComponent } from "../composition/stream";
 import { DomainError } from "../errors";
 import type { Warning } from "../warnings";
 import { binaryInteraction, type Interacting } from "./binary-interactions";
@@ -76,7 +76,7 @@ export function characterise(stream: Stream, characterisation: Characterisation)
   const components = [
     ...light,
     ...fractions.map((fraction, index) =>
-      heavyComponent(fraction, fractions.length === 1 ? "C7+" : `F${index + 1}`, characterisation),
+      heavyComponent(fraction, heavyName(index, fractions.length), characterisation),
     ),
   ];
   const n = components.length;
@@ -103,6 +103,42 @@ export function characterise(stream: Stream, characterisation: Characterisation)
     firstHeavy: light.length,
   };
 }
+
+/**
+ * Gas or liquid of a flash with its components named again, for what works on compositions: heating values, plant
+ * liquids, tables.
+ *
+ * @param moleFractions  in the order of the mixture that `characterise` made of the same stream
+ * @throws {DomainError} when there are more or fewer of them than components
+ * @example heatingValue(namedComponents(stream, characterisation, train.surfaceGasMoleFractions))
+ */
+export function namedComponents(
+  stream: Stream,
+  characterisation: Pick<Characterisation, "split">,
+  moleFractions: ArrayLike<number>,
+): StreamComponent[] {
+  const light = stream.components.filter((component) => component.light !== null);
+  const fractions = heavyFractions(stream, characterisation);
+  if (moleFractions.length !== light.length + fractions.length) {
+    throw new DomainError(
+      `${moleFractions.length} mole fractions do not belong to ${light.length + fractions.length} components`,
+      { input: "moleFractions", value: moleFractions.length },
+    );
+  }
+  return [
+    ...light.map((component, index) => ({ ...component, moleFraction: moleFractions[index] })),
+    ...fractions.map(({ molecularWeight, specificGravity }, index) => ({
+      name: heavyName(index, fractions.length),
+      light: null,
+      carbonNumber: 7,
+      moleFraction: moleFractions[light.length + index],
+      molecularWeight,
+      specificGravity,
+    })),
+  ];
+}
+
+const heavyName = (index: number, count: number) => (count === 1 ? "C7+" : `F${index + 1}`);
 
 function assertAdjustments(adjustments: Adjustments): void {
   for (const name of tunableNames) {

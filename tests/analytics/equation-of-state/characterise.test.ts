@@ -6,7 +6,11 @@ import {
   untouched,
   type Characterisation,
 } from "@/analytics/equation-of-state/characterisation-schema";
-import { characterisationWarnings, characterise } from "@/analytics/equation-of-state/characterise";
+import {
+  characterisationWarnings,
+  characterise,
+  namedComponents,
+} from "@/analytics/equation-of-state/characterise";
 import { keslerLee } from "@/analytics/equation-of-state/heavy-fractions";
 import { volumeShiftAtSixtyDegF } from "@/analytics/equation-of-state/volume-shift";
 import { studyReported } from "../depletion/third-comparative-study";
@@ -162,6 +166,22 @@ describe("characterise", () => {
     const { mixture, firstHeavy } = characterise(dry, gamma(3));
     expect(mixture.names).toEqual(["C1", "C2"]);
     expect(firstHeavy).toBe(2);
+  });
+});
+
+describe("namedComponents", () => {
+  it("gives a flash its names and properties back", () => {
+    const { mixture, moleFractions } = characterise(stream, gamma(3));
+    const named = namedComponents(stream, gamma(3), moleFractions);
+    expect(named.map(({ name }) => name)).toEqual(mixture.names);
+    expect(named.map(({ molecularWeight }) => molecularWeight)).toEqual([
+      ...mixture.molecularWeight,
+    ]);
+    expect(named.map(({ moleFraction }) => moleFraction)).toEqual([...moleFractions]);
+  });
+
+  it("refuses mole fractions of another mixture", () => {
+    expect(() => namedComponents(stream, gamma(3), [0.5, 0.5])).toThrow(DomainError);
   });
 });
 
