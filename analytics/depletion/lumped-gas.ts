@@ -8,6 +8,8 @@ export type BalanceComponent = (typeof balanceComponents)[number];
 export const HEPTANES_PLUS = balanceComponents.length - 1;
 
 export interface LumpedGas {
+  /** as it was before heptanes plus became one */
+  readonly stream: Stream;
   /** in the order of `balanceComponents`; adds up to 1 */
   readonly moleFractions: Float64Array;
   /** lb/lbmol, in the same order; 0 where the component is absent */
@@ -26,7 +28,7 @@ export function lumpStream(stream: Stream): LumpedGas {
     if (component.light !== null) molecularWeights[index] = component.molecularWeight;
   }
   molecularWeights[HEPTANES_PLUS] = stream.heptanesPlus?.molecularWeight ?? 0;
-  return { moleFractions, molecularWeights, heptanesPlus: stream.heptanesPlus };
+  return { stream, moleFractions, molecularWeights, heptanesPlus: stream.heptanesPlus };
 }
 
 /** Sum of a stream as it was reported, mole per cent. */
