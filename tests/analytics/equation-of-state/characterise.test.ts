@@ -12,6 +12,7 @@ import {
   namedComponents,
 } from "@/analytics/equation-of-state/characterise";
 import { keslerLee } from "@/analytics/equation-of-state/heavy-fractions";
+import { saturationPressures } from "@/analytics/equation-of-state/saturation";
 import { volumeShiftAtSixtyDegF } from "@/analytics/equation-of-state/volume-shift";
 import { studyReported } from "../depletion/third-comparative-study";
 
@@ -65,6 +66,18 @@ describe("characterise", () => {
     expect(mixture.criticalPressurePsia[10]).toBeCloseTo(343.692, 2);
     expect(mixture.acentricFactor[10]).toBeCloseTo(0.46117, 5);
     expect(moleFractions.reduce((sum, value) => sum + value, 0)).toBeCloseTo(1, 12);
+  });
+
+  it.each([
+    // dew point of this fluid at 200 degF by a separate Peng-Robinson implementation in Python with the same
+    // correlations, psig; the laboratory found 3,428
+    ["keslerLee", 3516],
+    ["twu", 3427],
+  ] as const)("leads with %s to a dew point of %d psig", (criticals, dewPointPsig) => {
+    const { mixture, moleFractions } = characterise(stream, { ...untuned, criticals });
+    const { upper } = saturationPressures(mixture, moleFractions, 659.67);
+    expect(upper?.kind).toBe("dewPoint");
+    expect(Math.abs(upper!.pressurePsia - 14.696 - dewPointPsig)).toBeLessThan(1);
   });
 
   it("splits heptanes plus by the gamma distribution", () => {
