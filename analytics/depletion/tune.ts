@@ -43,11 +43,10 @@ export interface FitRow {
 }
 
 export interface Fit {
-  /** null when this characterisation has no dew point at the study's temperature */
-  readonly dewPointPsia: number | null;
+  readonly dewPointPsia: number;
   /** one for every row of the study */
   readonly rows: readonly FitRow[];
-  /** sum of squares that was minimised; Infinity when there is no dew point */
+  /** sum of squares that was minimised */
   readonly objective: number;
   /** mean absolute, over the rows with a measured liquid below the dew point; null when there is none */
   readonly averageLiquidErrorPoints: number | null;
@@ -106,21 +105,6 @@ function withAdjustments(
   return { ...characterisation, adjustments };
 }
 
-/** The depletion at the study's own pressures; null when this characterisation has none. */
-function deplete(
-  stream: Stream,
-  characterisation: Characterisation,
-  table: DepletionTable,
-  pressures: readonly number[],
-): SimulatedDepletion | null {
-  try {
-    return depleteCell(characterise(stream, characterisation), table.temperatureDegF, pressures);
-  } catch (error) {
-    if (error instanceof DomainError || error instanceof ConvergenceError) return null;
-    throw error;
-  }
-}
-
 /**
  * A figure of a simulated depletion at one of the study's pressures. Above the simulated dew point there is no liquid,
  * and the gas that would have to be put back counts as produced below nothing, so that the figure has no kink there.
@@ -152,22 +136,10 @@ function residualsOf(
 }
 
 function fitOf(
-  simulated: SimulatedDepletion | null,
+  simulated: SimulatedDepletion,
   table: DepletionTable,
   targets: readonly Target[],
 ): Fit {
-  if (simulated === null) {
-    return {
-      dewPointPsia: null,
-      rows: table.rows.map(({ pressurePsia }) => ({
-        pressurePsia,
-        liquidPercent: null,
-        cumulativeProducedMolePercent: null,
-      })),
-      objective: Infinity,
-      averageLiquidErrorPoints: null,
-    };
-  }
   const isBelow = (pressurePsia: number) =>
     simulated.steps.some((step) => step.pressurePsia === pressurePsia);
   const liquids = targets.filter(({ column }) => column === "liquidPercent");
@@ -221,7 +193,7 @@ function warningsOf(
   figures: number,
 ): Warning[] {
   const warnings: Warning[] = [];
-  const dewPoint = after.dewPointPsia!;
+  const dewPoint = after.dewPointPsia;
   if (Math.abs(dewPoint / table.dewPointPsia - 1) > DEW_POINT_MISS) {
     warnings.push({
       code: "dew_point_missed",
@@ -310,23 +282,26 @@ export function tune(problem: TuningProblem): Tuning {
     });
   }
   const simulate = (point: readonly number[]) =>
-    deplete(stream, withAdjustments(characterisation, tunables, point), table, pressures);
+    depleteCell(
+      characterise(stream, withAdjustments(characterisation, tunables, point)),
+      table.temperatureDegF,
+      pressures,
+    );
 
   const start = tunables.map((name) => characterisation.adjustments[name]);
-  // Once without the net, so that what is wrong at the start is said in its own words.
-  const atStart = depleteCell(
-    characterise(stream, characterisation),
-    table.temperatureDegF,
-    pressures,
-  );
-  const before = fitOf(atStart, table, targets);
+  const before = fitOf(simulate(start), table, targets);
   const fit = fitLeastSquares({
     start,
     lowest: tunables.map((name) => tuningBounds[name].lowest),
     highest: tunables.map((name) => tuningBounds[name].highest),
     residuals: (point) => {
-      const simulated = simulate(point);
-      return simulated === null ? null : residualsOf(simulated, table, targets);
+      try {
+        return residualsOf(simulate(point), table, targets);
+      } catch (error) {
+        // On the way the fluid may lose its dew point; the search turns back there.
+        if (error instanceof DomainError || error instanceof ConvergenceError) return null;
+        throw error;
+      }
     },
     onProgress,
   });
