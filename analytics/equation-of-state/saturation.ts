@@ -4,6 +4,7 @@ import { normaliseFeed } from "./flash";
 import type { Mixture } from "./mixture";
 import { PengRobinson } from "./peng-robinson";
 import { StabilityTest, type TrialPhase } from "./stability";
+import { fillWilson } from "./wilson";
 
 export type SaturationKind = "dewPoint" | "bubblePoint";
 
@@ -52,8 +53,10 @@ export function saturationPressures(
   const equation = new PengRobinson(mixture);
   equation.setTemperature(temperatureDegR);
   const search = new Search(equation, feed);
-  const upper = search.upper();
-  return { upper, lower: upper && search.lower(upper.pressurePsia) };
+  const found = search.upper();
+  return found
+    ? { upper: found.point, lower: search.lower(found.lnUnstable) }
+    : { upper: null, lower: null };
 }
 
 class Search {
@@ -66,7 +69,8 @@ class Search {
     this.stability = new StabilityTest(equation);
   }
 
-  upper(): SaturationPoint | null {
+  /** The upper point, and a pressure below it with two phases. */
+  upper(): { point: SaturationPoint; lnUnstable: number } | null {
     let above = Math.log(HIGHEST_PSIA);
     let farther = Infinity;
     let distance = this.distance(above);
@@ -78,10 +82,13 @@ class Search {
     }
     for (let lnP = above - LN_STEP; lnP > Math.log(LOWEST_PSIA); lnP -= LN_STEP) {
       const next = this.distance(lnP);
-      if (next < UNSTABLE) return this.pointBetween(lnP, above);
+      if (next < UNSTABLE) return { point: this.pointBetween(lnP, above), lnUnstable: lnP };
       if (distance < farther && distance < next) {
         const unstable = this.lookBetween(lnP, lnP + 2 * LN_STEP);
-        if (unstable !== null) return this.pointBetween(unstable, lnP + 2 * LN_STEP);
+        if (unstable !== null) {
+          const point = this.pointBetween(unstable, lnP + 2 * LN_STEP);
+          return { point, lnUnstable: unstable };
+        }
       }
       farther = distance;
       distance = next;
@@ -90,27 +97,20 @@ class Search {
     return null;
   }
 
-  /** The pressure below which all is gas. Above it a liquid trial must be below the tangent plane. */
-  lower(upperPsia: number): number {
+  /** The pressure below which all is gas: up from where it is, by Raoult's law, to the first two phases. */
+  lower(lnUnstable: number): number {
     const { mixture, temperatureDegR } = this.equation;
-    let resistance = 0;
-    for (let i = 0; i < this.z.length; i += 1) {
-      const lnVapourPressure =
-        Math.log(mixture.criticalPressurePsia[i]) +
-        5.373 *
-          (1 + mixture.acentricFactor[i]) *
-          (1 - mixture.criticalTemperatureDegR[i] / temperatureDegR);
-      resistance += this.z[i] * Math.exp(-lnVapourPressure);
-    }
-    const top = Math.log(upperPsia);
-    let stable = Math.min(-Math.log(resistance), top - 1e-3);
+    const lnK = new Float64Array(this.z.length);
+    fillWilson(mixture, 1, temperatureDegR, lnK);
+    const resistance = this.z.reduce((sum, share, i) => sum + share * Math.exp(-lnK[i]), 0);
+    let stable = Math.min(-Math.log(resistance), lnUnstable);
     while (this.distance(stable) < UNSTABLE) stable -= Math.LN2;
     let unstable = stable;
-    for (let step = Math.min(0.1, (top - stable) / 8); this.distance(unstable) >= UNSTABLE; ) {
+    const step = Math.min(0.1, (lnUnstable - stable) / 8);
+    do {
       stable = unstable;
-      unstable += step;
-      if (unstable >= top) throw this.failure(upperPsia);
-    }
+      unstable = Math.min(unstable + step, lnUnstable);
+    } while (unstable < lnUnstable && this.distance(unstable) >= UNSTABLE);
     return Math.exp(this.root(unstable, stable).lnP);
   }
 
