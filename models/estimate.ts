@@ -53,13 +53,27 @@ Estimate.init(
     reservoirId: { type: DataTypes.UUID, allowNull: false },
     revision: { type: DataTypes.INTEGER, allowNull: false },
     state: { type: DataTypes.TEXT, allowNull: false },
-    inputs: { type: DataTypes.JSONB, allowNull: false },
+    inputs: {
+      type: DataTypes.JSONB,
+      allowNull: false,
+      /** Inputs that were stored before recovery plans have none, and read as such. */
+      get(this: Estimate) {
+        const inputs = this.getDataValue("inputs") as EstimateInputs | undefined;
+        return inputs && { ...inputs, recoveryPlan: inputs.recoveryPlan ?? null };
+      },
+    },
     schemaVersion: { type: DataTypes.INTEGER, allowNull: false },
     fluidSampleId: DataTypes.UUID,
     seed: { type: DataTypes.INTEGER, allowNull: false },
     trials: { type: DataTypes.INTEGER, allowNull: false },
     engineVersion: DataTypes.TEXT,
-    summary: DataTypes.JSONB,
+    summary: {
+      type: DataTypes.JSONB,
+      get(this: Estimate) {
+        const summary = this.getDataValue("summary");
+        return summary && { ...summary, recovery: summary.recovery ?? null };
+      },
+    },
     computedAt: DataTypes.DATE,
     note: { type: DataTypes.TEXT, allowNull: false, defaultValue: "" },
     createdBy: { type: DataTypes.UUID, allowNull: false },

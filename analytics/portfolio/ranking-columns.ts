@@ -1,3 +1,4 @@
+import type { RecoveryRoute } from "../recovery/recovery-curve-schema";
 import type { ReportingUnits } from "../units/reporting-units";
 import type { Range } from "../volumetrics/results-schema";
 import { rankedClasses, type LedgerQuantity, type RankedField, type SortValue } from "./ranking";
@@ -28,6 +29,7 @@ export const rankingColumnIds = [
   "dryGasInPlaceMean",
   "wetGasInPlaceMean",
   "rankRange",
+  "recoveryRoute",
 ] as const;
 export type RankingColumnId = (typeof rankingColumnIds)[number];
 
@@ -106,6 +108,19 @@ export function estimateWords(field: RankedField): string {
       )
       .map(({ reservoirName, state, revision }) => `${place(reservoirName)}${state} r${revision}`),
   ].join("; ");
+}
+
+const recoveryWords: Record<RecoveryRoute, string> = {
+  laboratory: "laboratory depletion",
+  tunedEquationOfState: "tuned equation of state",
+  untunedEquationOfState: "untuned equation of state",
+  correlation: "correlation",
+};
+
+/** Where the recoveries come from: of several reservoirs the least trusted. */
+function recoveryWordsOf({ chosen, recoveryRoute }: RankedField): string | null {
+  if (recoveryRoute !== null) return recoveryWords[recoveryRoute];
+  return chosen.length === 0 ? null : "entered";
 }
 
 /** The oldest approval among the revisions that stand for the field: how old its figures may be. */
@@ -229,6 +244,7 @@ const columns: Record<RankingSortId, RankingColumn> = {
     kind: "ranks",
     value: ({ rankRange }) => (rankRange ? (rankRange.low + rankRange.high) / 2 : null),
   },
+  recoveryRoute: text("recoveryRoute", "Recovery from", recoveryWordsOf),
 };
 
 export const rankingColumn = (id: RankingSortId): RankingColumn => columns[id];
@@ -271,7 +287,7 @@ export const rankingColumnGroups: readonly { label: string; ids: readonly Rankin
       "rankRange",
     ],
   },
-  { label: "Status", ids: ["estimate", "effectiveOn", "engineer"] },
+  { label: "Status", ids: ["estimate", "recoveryRoute", "effectiveOn", "engineer"] },
 ];
 
 /** Unit of a column for people; empty where a column has none. */

@@ -1,3 +1,5 @@
+import type { RecoveryRoute } from "../recovery/recovery-curve-schema";
+import type { ProducingConcept } from "../recovery/recovery-plan-schema";
 import { vectorNames, type Range, type VectorName } from "../volumetrics/results-schema";
 
 /** What a ranking knows of every field: the stored volumes, and what they are worth at one flat realised price. */
@@ -20,6 +22,9 @@ export interface ChosenEstimate {
   engineVersion: string | null;
   seed: number;
   trials: number;
+  /** where its recoveries come from, and how it is produced; null when recoveries were entered */
+  recoveryRoute: RecoveryRoute | null;
+  producingConcept: ProducingConcept | null;
 }
 
 /** A revision that is being worked on or decided. */
@@ -59,6 +64,8 @@ export interface RankedField {
   hydrogenSulphide: number | null;
   /** codes of the engine's cautions (people can get hurt), each once */
   cautions: string[];
+  /** the least trusted route among the revisions that stand for the field; null when all recoveries were entered */
+  recoveryRoute: RecoveryRoute | null;
   chosen: ChosenEstimate[];
   /** reservoirs that are not in the figures, and not counted as zero */
   leftOut: LeftOut[];

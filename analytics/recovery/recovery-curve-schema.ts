@@ -12,6 +12,15 @@ export const recoveryRoutes = [
 ] as const;
 export type RecoveryRoute = (typeof recoveryRoutes)[number];
 
+/** The route that decides how far a figure from several of them can be trusted; null when there is none among them. */
+export function leastTrusted(routes: readonly (RecoveryRoute | null)[]): RecoveryRoute | null {
+  return [...recoveryRoutes].reverse().find((route) => routes.includes(route)) ?? null;
+}
+
+/** Whether a recovery has no measured depletion behind it, and is marked wherever it goes. */
+export const isUnmeasured = (route: RecoveryRoute | null): boolean =>
+  route === "untunedEquationOfState" || route === "correlation";
+
 const share = z.number().min(0).max(1);
 
 /** State of the depletion at one pressure, per unit of the fluid at the dew point. */

@@ -1,4 +1,6 @@
 import { QueryTypes } from "sequelize";
+import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
+import type { ProducingConcept } from "@/analytics/recovery/recovery-plan-schema";
 import type { VectorName } from "@/analytics/volumetrics/results-schema";
 import { EstimateTrials } from "../associations";
 import { sequelize } from "../sequelize";
@@ -40,6 +42,9 @@ export interface PortfolioReservoirRow {
   effectiveOn: string | null;
   computedAt: Date | null;
   hydrogenSulphide: number | null;
+  /** of the chosen revision; null when its recoveries were entered */
+  recoveryRoute: RecoveryRoute | null;
+  producingConcept: ProducingConcept | null;
   /** codes of warnings with severity `caution`, of the chosen revision */
   cautionCodes: string[];
   /** mean recoverable condensate of the chosen and of the open revision, STB, gross */
@@ -92,6 +97,8 @@ export async function listPortfolioReservoirs(
             chosen.engine_version as "engineVersion", chosen.effective_on::text as "effectiveOn",
             chosen.computed_at as "computedAt",
             (chosen.inputs #>> '{fluid,hydrogenSulphide}')::double precision as "hydrogenSulphide",
+            chosen.inputs #>> '{recoveryPlan,curve,route}' as "recoveryRoute",
+            chosen.inputs #>> '{recoveryPlan,concept}' as "producingConcept",
             coalesce(array(select distinct jsonb_path_query(
               chosen.summary, '$.warnings[*] ? (@.severity == "caution").code') #>> '{}'),
               '{}') as "cautionCodes",

@@ -1,4 +1,5 @@
 import { QueryTypes } from "sequelize";
+import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import type { Range } from "@/analytics/volumetrics/results-schema";
 import { sequelize } from "../sequelize";
 
@@ -24,6 +25,8 @@ export interface ReviewQueueRow {
   /** recoverable condensate [STB], gross, unrisked */
   condensateRecoverableStb: Range;
   warnings: number;
+  /** null when recoveries were entered */
+  recoveryRoute: RecoveryRoute | null;
   /** of the revision that stands now; null for a reservoir without one */
   approvedRevision: number | null;
   approvedCondensateRecoverableStb: Range | null;
@@ -49,6 +52,7 @@ export async function listReviewQueueRows(): Promise<ReviewQueueRow[]> {
             f.net_revenue_interest as "netRevenueInterest",
             ${rangeOf("e")} as "condensateRecoverableStb",
             coalesce(jsonb_array_length(e.summary -> 'warnings'), 0) as "warnings",
+            e.inputs #>> '{recoveryPlan,curve,route}' as "recoveryRoute",
             approved.revision as "approvedRevision",
             case when approved.id is not null then ${rangeOf("approved")} end
               as "approvedCondensateRecoverableStb"

@@ -1,4 +1,5 @@
 import { QueryTypes } from "sequelize";
+import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import type { Range } from "@/analytics/volumetrics/results-schema";
 import { sequelize } from "../sequelize";
 import type { EstimateState } from "../vocabulary";
@@ -17,6 +18,8 @@ export interface RevisionRangeRow {
   decidedAt: Date | null;
   /** YYYY-MM-DD; null until approved */
   effectiveOn: string | null;
+  /** null when recoveries were entered */
+  recoveryRoute: RecoveryRoute | null;
   condensateRecoverableStb: Range | null;
   salesGasScf: Range | null;
   wetGasInPlaceScf: Range | null;
@@ -39,6 +42,7 @@ export async function listRevisionRanges(
             creator.name as "creatorName", decider.name as "deciderName",
             e.created_at as "createdAt", e.submitted_at as "submittedAt", e.decided_at as "decidedAt",
             e.effective_on::text as "effectiveOn",
+            e.inputs #>> '{recoveryPlan,curve,route}' as "recoveryRoute",
             ${["condensateRecoverableStb", "salesGasScf", "wetGasInPlaceScf"].map(rangeOf).join(",")}
        from estimates e
        join users creator on creator.id = e.created_by

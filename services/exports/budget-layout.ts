@@ -227,4 +227,19 @@ export const budgetLayout: readonly BudgetColumn[] = [
   about("engine_versions", "", "versions of the calculation behind the figures", ({ chosen }) =>
     [...new Set(chosen.flatMap(({ engineVersion }) => engineVersion ?? []))].sort().join(SEPARATOR),
   ),
+  about(
+    "recovery_route",
+    "",
+    "where the recoveries of the revisions counted come from: laboratory, tunedEquationOfState, untunedEquationOfState, correlation or entered, the least trusted when there are several. untunedEquationOfState and correlation have no measured depletion behind them",
+    ({ chosen, recoveryRoute }) => recoveryRoute ?? (chosen.length > 0 ? "entered" : null),
+  ),
+  about(
+    "producing_concept",
+    "",
+    "how the revisions counted are produced: depletion, compression or cycling, each once; empty where recoveries were entered",
+    ({ chosen }) =>
+      [...new Set(chosen.flatMap(({ producingConcept }) => producingConcept ?? []))]
+        .sort()
+        .join(SEPARATOR),
+  ),
 ];

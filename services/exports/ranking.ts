@@ -18,7 +18,8 @@ export interface RankingExportRequest extends RankingRequest {
 
 /**
  * The ranking as it is shown: the same rows in the same order, the same columns in the same units, all digits, then the
- * total trial by trial and the arithmetic sum, each named in `row_kind`. The last columns carry the basis.
+ * total trial by trial and the arithmetic sum, each named in `row_kind`. The last columns carry the basis and, whatever
+ * columns are shown, where each field's recoveries come from.
  */
 export async function exportRanking(
   actor: Actor,
@@ -38,7 +39,9 @@ function rankingFile(
   units: ReportingUnits,
   { basis, columns: ids }: RankingExportRequest,
 ): CsvFile {
-  const columns = ids.map(rankingColumn);
+  // It stands at the end in any case, so that no figure leaves without its mark.
+  const columns = ids.filter((id) => id !== "recoveryRoute").map(rankingColumn);
+  const routeOf = (row: RankedField) => rankingColumn("recoveryRoute").value(row);
   const basisColumns = basisCells(basis, prices, units);
   const basisNames = Object.keys(basisColumns);
   const basisValues = Object.values(basisColumns);
@@ -48,12 +51,12 @@ function rankingFile(
   function* lines(): Generator<CsvCell[]> {
     for (const row of rows) {
       const cells = columns.flatMap((column) => cellsOf(column, row, units));
-      yield ["field", row.rank, row.name, ...cells, ...basisValues];
+      yield ["field", row.rank, row.name, ...cells, ...basisValues, routeOf(row)];
     }
     if (totals === null) return;
     const count = `${totals.fields} fields`;
-    yield ["total_trial_by_trial", null, count, ...sumCells("trialByTrial"), ...basisValues];
-    yield ["arithmetic_sum", null, count, ...sumCells("arithmeticSum"), ...basisValues];
+    yield ["total_trial_by_trial", null, count, ...sumCells("trialByTrial"), ...basisValues, null];
+    yield ["arithmetic_sum", null, count, ...sumCells("arithmeticSum"), ...basisValues, null];
   }
 
   return {
@@ -63,6 +66,7 @@ function rankingFile(
       "field",
       ...columns.flatMap((column) => namesOf(column, units)),
       ...basisNames,
+      "recovery_route",
     ],
     rows: { [Symbol.iterator]: lines },
     byteOrderMark: true,

@@ -1,6 +1,7 @@
 import type { Ledger } from "@/analytics/portfolio/ledger";
 import { spreadOf } from "@/analytics/portfolio/ranking-columns";
 import type { RankedField } from "@/analytics/portfolio/ranking";
+import { isUnmeasured, type RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import type { PortfolioFieldRow, PortfolioReservoirRow } from "@/models/queries/portfolio";
 import type { PortfolioBasis } from "./basis";
 import type { RankedBook } from "./ranking";
@@ -31,7 +32,7 @@ export type Attention =
       changeStb: number | null;
     })
   | (At & {
-      /** a range that is wide where it matters, or a place where people can get hurt, or both */
+      /** a range that is wide where it matters, a place where people can get hurt, or a recovery that nobody measured */
       kind: "field";
       /** P10 over P90; null when it is not remarkable */
       spread: number | null;
@@ -40,6 +41,8 @@ export type Attention =
       samples: number;
       cautions: string[];
       hydrogenSulphide: number | null;
+      /** a recovery without a measured depletion behind it, where it matters; null when it is not remarkable */
+      recoveryRoute: RecoveryRoute | null;
     })
   | { kind: "no_estimate"; names: string[] }
   | { kind: "basin"; name: string; shareOfVariance: number; rankCorrelation: number }
@@ -71,7 +74,8 @@ export function attentionOf(
     const share = shareOf(field);
     const known = spreadOf(field);
     const isWide = known !== null && known >= WIDE_SPREAD && share >= MATERIAL_SHARE;
-    if (!isWide && field.cautions.length === 0) return [];
+    const isWeak = isUnmeasured(field.recoveryRoute) && share >= MATERIAL_SHARE;
+    if (!isWide && !isWeak && field.cautions.length === 0) return [];
     const { name, slug, cautions, hydrogenSulphide } = field;
     const samples = book.reservoirs
       .filter(({ fieldId }) => fieldId === field.id)
@@ -86,6 +90,7 @@ export function attentionOf(
         samples,
         cautions,
         hydrogenSulphide,
+        recoveryRoute: isWeak ? field.recoveryRoute : null,
       },
     ];
   });

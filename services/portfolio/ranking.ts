@@ -11,6 +11,7 @@ import {
   type SortDirection,
 } from "@/analytics/portfolio/ranking";
 import { rankingColumn, type RankingSortId } from "@/analytics/portfolio/ranking-columns";
+import { leastTrusted } from "@/analytics/recovery/recovery-curve-schema";
 import { vectorNames } from "@/analytics/volumetrics/results-schema";
 import type { PortfolioFieldRow, PortfolioReservoirRow } from "@/models/queries/portfolio";
 import { authorise, type Actor } from "../policy";
@@ -214,6 +215,7 @@ function describeField(
         ? null
         : Math.max(...counted.map(({ hydrogenSulphide }) => hydrogenSulphide ?? 0)),
     cautions: [...new Set(counted.flatMap(({ cautionCodes }) => cautionCodes))].sort(),
+    recoveryRoute: leastTrusted(counted.map(({ recoveryRoute }) => recoveryRoute)),
     chosen: counted.map(toChosen),
     leftOut: reservoirs.filter((reservoir) => !counted.includes(reservoir)).map(toLeftOut),
     open: reservoirs.flatMap(toOpen),
@@ -250,6 +252,8 @@ function toChosen(reservoir: PortfolioReservoirRow): RankedField["chosen"][numbe
     engineVersion: reservoir.engineVersion,
     seed,
     trials,
+    recoveryRoute: reservoir.recoveryRoute,
+    producingConcept: reservoir.producingConcept,
   };
 }
 

@@ -39,6 +39,8 @@ function field(values: Partial<RankedField> = {}): RankedField {
         engineVersion: "1.0.0",
         seed: 1,
         trials: 10_000,
+        recoveryRoute: null,
+        producingConcept: null,
       },
     ],
     leftOut: [],

@@ -1,6 +1,7 @@
 "use client";
 
 import Link from "next/link";
+import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import type { AttentionView, Statement } from "@/app/api/v1/portfolio/schema";
 import { useBasis } from "@/components/basis/use-basis";
 import {
@@ -57,6 +58,11 @@ function changeWords(barrels: number, { liquid, reporting }: Words): string {
 const cautionAsides: Record<string, string> = {
   sour_gas: "Sour",
   high_pressure_high_temperature: "HPHT",
+};
+
+const recoverySources: Partial<Record<RecoveryRoute, string>> = {
+  correlation: "a correlation",
+  untunedEquationOfState: "an untuned equation of state",
 };
 
 function cautionWords(code: string, hydrogenSulphide: number | null): string {
@@ -118,14 +124,18 @@ function findingOf(item: AttentionView, words: Words): Finding {
         item.spread !== null &&
         `P10 is ${formatFigure(item.spread, { digits: 2 })} times P90, on ${formatPercent(item.share)} of the liquid; ${sampleWords(item.samples)}.`;
       const cautions = item.cautions.map((code) => cautionWords(code, item.hydrogenSulphide));
+      const weak =
+        item.recoveryRoute !== null &&
+        `Its recovery comes from ${recoverySources[item.recoveryRoute] ?? "no measurement"}, on ${formatPercent(item.share)} of the liquid; no measured depletion stands behind it.`;
       const asides = [
+        ...(item.recoveryRoute === null ? [] : ["Not measured"]),
         ...(item.spread === null ? [] : ["Wide range"]),
         ...item.cautions.map((code) => cautionAsides[code] ?? "Caution"),
       ];
       return {
         tone: "warning",
         title: link(`/fields/${item.fieldSlug}`, item.name),
-        detail: [wide, ...cautions].filter(Boolean).join(" "),
+        detail: [wide, weak, ...cautions].filter(Boolean).join(" "),
         aside: asides.map((aside) => (
           <span key={aside} className="block">
             {aside}

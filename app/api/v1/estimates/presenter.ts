@@ -40,7 +40,8 @@ export function presentEstimateRow(estimate: Estimate, actor: Actor): EstimateRo
 /** @param estimate  loaded whole, with its people */
 export function presentEstimateBody(estimate: Estimate, actor: Actor): EstimateBodyView {
   const { inputs, summary } = estimate;
-  return { ...presentEstimateRow(estimate, actor), inputs, summary };
+  const recoveryRoute = inputs.recoveryPlan?.curve.route ?? null;
+  return { ...presentEstimateRow(estimate, actor), recoveryRoute, inputs, summary };
 }
 
 /** @param estimate  loaded with its people and place */

@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { recoveryRoutes } from "@/analytics/recovery/recovery-curve-schema";
 import { estimateInputsSchema } from "@/analytics/volumetrics/inputs-schema";
 import { simulationSummarySchema } from "@/analytics/volumetrics/results-schema";
 import { estimateStates } from "@/models/vocabulary";
@@ -82,6 +83,8 @@ export type EstimateListItemView = z.infer<typeof estimateListItemSchema>;
 
 /** A revision with what it was computed from and what came out; `summary` is null until it is run as it stands. */
 export const estimateBodySchema = estimateRowSchema.extend({
+  /** where the recoveries come from; null when they were entered */
+  recoveryRoute: z.enum(recoveryRoutes).nullable(),
   inputs: estimateInputsSchema,
   summary: simulationSummarySchema.nullable(),
 });

@@ -19,6 +19,7 @@ function presentRevisionRange(row: RevisionRangeRow): RevisionRangeView {
     submittedAt: presentMoment(row.submittedAt),
     decidedAt: presentMoment(row.decidedAt),
     effectiveOn: row.effectiveOn,
+    recoveryRoute: row.recoveryRoute,
     condensateRecoverableStb: row.condensateRecoverableStb,
     salesGasScf: row.salesGasScf,
     wetGasInPlaceScf: row.wetGasInPlaceScf,

@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { recoveryRoutes } from "@/analytics/recovery/recovery-curve-schema";
 import { rangeSchema } from "@/analytics/volumetrics/results-schema";
 import { estimateStates } from "@/models/vocabulary";
 import { dateSchema, momentSchema } from "../common-schema";
@@ -24,6 +25,8 @@ export const revisionRangeSchema = z.object({
   submittedAt: momentSchema.nullable(),
   decidedAt: momentSchema.nullable(),
   effectiveOn: dateSchema.nullable(),
+  /** null when recoveries were entered */
+  recoveryRoute: z.enum(recoveryRoutes).nullable(),
   condensateRecoverableStb: rangeSchema.nullable(),
   salesGasScf: rangeSchema.nullable(),
   wetGasInPlaceScf: rangeSchema.nullable(),

@@ -5,6 +5,8 @@ import {
   orderColumns,
   rankingColumnIds,
 } from "@/analytics/portfolio/ranking-columns";
+import { recoveryRoutes } from "@/analytics/recovery/recovery-curve-schema";
+import { producingConcepts } from "@/analytics/recovery/recovery-plan-schema";
 import { rangeSchema } from "@/analytics/volumetrics/results-schema";
 import { basisSchema } from "@/components/basis/basis";
 
@@ -106,6 +108,8 @@ export const rankedFieldSchema = z.object({
   condensateYieldStbPerMmscf: z.number().nullable(),
   hydrogenSulphide: z.number().nullable(),
   cautions: z.array(z.string()),
+  /** the least trusted route among the revisions in `chosen`; null when all recoveries were entered */
+  recoveryRoute: z.enum(recoveryRoutes).nullable(),
   chosen: z.array(
     z.object({
       estimateId: z.uuid(),
@@ -117,6 +121,9 @@ export const rankedFieldSchema = z.object({
       engineVersion: z.string().nullable(),
       seed: z.number(),
       trials: z.number(),
+      /** null when recoveries were entered */
+      recoveryRoute: z.enum(recoveryRoutes).nullable(),
+      producingConcept: z.enum(producingConcepts).nullable(),
     }),
   ),
   leftOut: z.array(

@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { rankedClasses } from "@/analytics/portfolio/ranking";
+import { recoveryRoutes } from "@/analytics/recovery/recovery-curve-schema";
 import {
   chosenPricesSchema,
   groupTotalSchema,
@@ -28,6 +29,8 @@ export const attentionSchema = z.discriminatedUnion("kind", [
     samples: z.number(),
     cautions: z.array(z.string()),
     hydrogenSulphide: z.number().nullable(),
+    /** only where the recovery has no measured depletion behind it and the field matters */
+    recoveryRoute: z.enum(recoveryRoutes).nullable(),
   }),
   z.object({ kind: z.literal("no_estimate"), names: z.array(z.string()) }),
   z.object({

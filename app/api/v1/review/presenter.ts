@@ -42,6 +42,7 @@ function presentItem(row: ReviewQueueRow, factor: number, actor: Actor): ReviewI
             condensate: scaleRange(row.approvedCondensateRecoverableStb, factor),
           },
     warnings: row.warnings,
+    recoveryRoute: row.recoveryRoute,
     canDecide: row.state === "submitted" && can(actor, "estimate.approve", row),
   };
 }

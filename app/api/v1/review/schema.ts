@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { recoveryRoutes } from "@/analytics/recovery/recovery-curve-schema";
 import { rangeSchema } from "@/analytics/volumetrics/results-schema";
 import { basisSchema } from "@/components/basis/basis";
 import { momentSchema, personSchema } from "../common-schema";
@@ -30,6 +31,8 @@ export const reviewItemSchema = z.object({
   approved: z.object({ revision: z.number().int(), condensate: rangeSchema }).nullable(),
   /** warnings of the checks on its inputs and results */
   warnings: z.number().int(),
+  /** where its recoveries come from; null when they were entered */
+  recoveryRoute: z.enum(recoveryRoutes).nullable(),
   /** whether the person asking may approve or return it: reviewers, but not of their own work */
   canDecide: z.boolean(),
 });
