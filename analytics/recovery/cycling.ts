@@ -62,16 +62,20 @@ export function createCyclingOutcome(): CyclingOutcome {
 
 const middle = createContents();
 const final = createContents();
+const average = createContents();
+const contentNames = Object.keys(average) as (keyof Contents)[];
 
 /**
  * Dry-gas cycling from one state of a reservoir, then blowdown to abandonment. With E = Es Ed, contents at the start
- * (c), half-way through the decline of pressure (m; the same as c when pressure is maintained) and at abandonment (a):
+ * (c), on average while gas is displaced (m; the same as c when pressure is maintained, else over equal steps of moles
+ * down to the end of injection, by Simpson's rule) and at abandonment (a):
  *
  *     condensate = produced(c) + E [produced(m) - produced(c) + in gas(m)] + (1 - E) [produced(a) - produced(c)]
  *     sales gas  = the same of surface gas - fuel - injected gas left at abandonment
  *
- * Only condensate in the gas phase is displaced; liquid that has dropped out in the swept part stays (no
- * revaporisation: on the safe side). What is not displaced, swept or not, depletes by the curve.
+ * Only condensate in the gas phase is displaced; liquid that has dropped out in the swept part stays. Dry gas would take
+ * some of it up again, so this is on the safe side, and by much when the pressure declines below the dew point. What is
+ * not displaced, swept or not, depletes by the curve.
  *
  * Gas balance, in shares of the dry gas in place. The injected volume V is counted in hydrocarbon pore volumes at the
  * pressure at which injection begins:
@@ -113,7 +117,8 @@ export function cycle(
     const left = start.wellstreamLeft - lost;
     contentsAtLeft(curve, reservoir, one, left, final);
     contentsAtLeft(curve, reservoir, one, start.wellstreamLeft - lost / 2, middle);
-    swept = middle;
+    fillAverage(start, middle, final);
+    swept = average;
     into.pressureAtEndPsia = final.pressurePsia;
   }
   const fuel = fuelFraction * produced;
@@ -143,6 +148,12 @@ export function cycle(
     injectedPoreVolumes < displaced * start.gasSaturation || produced < displaced * start.gasInGas,
     into.pressureAtEndPsia > abandoned.pressurePsia,
   );
+}
+
+function fillAverage(first: Contents, second: Contents, third: Contents): void {
+  for (const name of contentNames) {
+    average[name] = (first[name] + 4 * second[name] + third[name]) / 6;
+  }
 }
 
 function refusalOf(

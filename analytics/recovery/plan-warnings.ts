@@ -196,6 +196,16 @@ function cyclingWarnings(
       ),
     );
   }
+  if (cycling.pressure === "declining") {
+    warnings.push(
+      warn(
+        "cycling_declines",
+        "cycling.pressure",
+        "The pressure declines while gas goes back. Liquid that drops out meanwhile is counted as lost, although dry gas " +
+          "takes some of it up again: the recovery is on the low side.",
+      ),
+    );
+  }
   if (cycling.pressurePsia > pressure.range.p90) {
     warnings.push(
       warn(
