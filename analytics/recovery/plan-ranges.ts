@@ -23,8 +23,8 @@ export function planRanges({
       possible: [lowest, curve.dewPointPsia],
       lowExcluded: false,
       reason: [
-        `the depletion curve ends at ${lowest} psia`,
-        `the fluid's dew point is ${curve.dewPointPsia} psia and recovery is worked out for abandonment below it`,
+        `the depletion curve ends at ${figure(lowest)} psia`,
+        `the fluid's dew point is ${figure(curve.dewPointPsia)} psia and recovery is worked out for abandonment below it`,
       ],
       slip: "Raise it, or extend the depletion study to lower pressures.",
     },
@@ -57,3 +57,5 @@ export function planRanges({
     },
   };
 }
+
+const figure = (value: number) => Number(value.toPrecision(6));

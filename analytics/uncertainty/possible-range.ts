@@ -54,12 +54,13 @@ export function compilePossible(
   if (below + above > NEGLIGIBLE_MASS) {
     const tooLow = below > above;
     const bound = tooLow ? low : high;
+    const shown = Number(bound.toPrecision(6));
     const advice =
       below + above > 0.5
         ? slip
-        : `Give it a ${tooLow ? "minimum" : "maximum"} of ${bound} or a narrower range.`;
+        : `Give it a ${tooLow ? "minimum" : "maximum"} of ${shown} or a narrower range.`;
     throw new DomainError(
-      `As described, the ${label} would be ${tooLow ? "below" : "above"} ${bound} ${unit} with a chance of ` +
+      `As described, the ${label} would be ${tooLow ? "below" : "above"} ${shown} ${unit} with a chance of ` +
         `${percent(tooLow ? below : above)}, but ${because(tooLow)}. ${advice}`,
       { input: tooLow ? "minimum" : "maximum", value: bound },
     );
