@@ -7,7 +7,7 @@ import { DensityCurve } from "@/components/charts/density-curve";
 import { Menu } from "@/components/ui/choice";
 import { formatFigure, formatPercent, MISSING } from "@/components/ui/format";
 import { Icon } from "@/components/ui/icon";
-import { driverCatalogue } from "./input-catalogue";
+import { driverCatalogue, type InputDescription } from "./input-catalogue";
 import { InputNotes } from "./input-notes";
 import type { InputReading } from "./input-reading";
 import { withShape, type InputText } from "./input-text";
@@ -28,6 +28,8 @@ export interface InputRowProps {
   name: DriverName;
   /** number of the ledger line */
   line: number;
+  /** tells rows of the same input apart: whose abandonment pressure it is */
+  of?: string;
   expected: ExpectedRange;
   text: InputText;
   reading: InputReading;
@@ -47,14 +49,15 @@ const columnName = { low: "P90", best: "P50", high: "P10" } as const;
 export function InputRow({
   name,
   line,
+  of,
   expected,
   text,
   reading,
   warnings,
   onChange,
 }: InputRowProps) {
-  const about = driverCatalogue[name];
-  const notesId = `notes-${name}`;
+  const about = describe(name, of);
+  const notesId = `notes-${name}${of ? `-${of}` : ""}`.replace(/\W+/g, "-");
   const suspicion = onChange ? suspicionOf(name, expected, text, reading) : null;
   const problems = [
     ...new Set(
@@ -82,16 +85,16 @@ export function InputRow({
         {slots.map((slot) => (
           <SlotCell
             key={slot}
-            {...{ name, slot, text, reading, suspicion, notesId, onChange }}
+            {...{ about, name, slot, text, reading, suspicion, notesId, onChange }}
             flagged={isFlagged && suspicion === null}
           />
         ))}
         <td className="curve">
-          <Curve {...{ name, expected, reading }} flagged={isFlagged} />
+          <Curve {...{ about, expected, reading }} flagged={isFlagged} />
         </td>
         <td className="hint">
           <span className="hint-line">
-            <ShapeMenu {...{ name, expected, text, reading, onChange }} />
+            <ShapeMenu {...{ about, name, expected, text, reading, onChange }} />
             <span className="text-ink-soft">
               Usual {typedFigure(expected.usual[0])} to {typedFigure(expected.usual[1])}
             </span>
@@ -103,7 +106,7 @@ export function InputRow({
         <tr className="follow" data-followed={hasNotes || undefined}>
           <td className="folio" />
           <td colSpan={6}>
-            <Bounds {...{ name, text, reading, notesId, onChange }} />
+            <Bounds {...{ about, text, reading, notesId, onChange }} />
           </td>
         </tr>
       )}
@@ -129,6 +132,11 @@ export function InputRow({
     </>
   );
 }
+
+const describe = (name: DriverName, of: string | undefined): InputDescription => {
+  const about = driverCatalogue[name];
+  return of ? { ...about, label: `${about.label}, ${of}` } : about;
+};
 
 function withValues(text: InputText, values: Record<string, number>): InputText {
   const typed = Object.entries(values).map(([key, value]) => [key, typedFigure(value)]);
@@ -157,6 +165,7 @@ function suspicionOf(
 }
 
 interface CellProps {
+  about: InputDescription;
   name: DriverName;
   slot: Slot;
   text: InputText;
@@ -168,8 +177,16 @@ interface CellProps {
 }
 
 /** A parameter to type, or the percentile that follows from the others. */
-function SlotCell({ name, slot, text, reading, suspicion, flagged, notesId, onChange }: CellProps) {
-  const about = driverCatalogue[name];
+function SlotCell({
+  about,
+  slot,
+  text,
+  reading,
+  suspicion,
+  flagged,
+  notesId,
+  onChange,
+}: CellProps) {
   const parameter = shapeOf(text.kind).parameters.find((candidate) => candidate.slot === slot);
   const percentile = reading.compiled?.range[percentileOf[slot]];
   if (!parameter || !onChange) {
@@ -214,12 +231,12 @@ function SlotCell({ name, slot, text, reading, suspicion, flagged, notesId, onCh
 }
 
 function Curve({
-  name,
+  about,
   expected,
   reading,
   flagged,
 }: {
-  name: DriverName;
+  about: InputDescription;
   expected: ExpectedRange;
   reading: InputReading;
   flagged: boolean;
@@ -233,8 +250,8 @@ function Curve({
   const [low, high] = expected.usual;
   return (
     <DensityCurve
-      name={driverCatalogue[name].label}
-      unit={driverCatalogue[name].unit || undefined}
+      name={about.label}
+      unit={about.unit || undefined}
       points={x.map((value, index) => ({ x: value, density: density[index] }))}
       range={compiled.range}
       usual={{ low, high }}
@@ -244,12 +261,15 @@ function Curve({
 }
 
 function ShapeMenu({
+  about,
   name,
   expected: { possible },
   text,
   reading,
   onChange,
-}: Pick<CellProps, "name" | "text" | "reading" | "onChange"> & { expected: ExpectedRange }) {
+}: Pick<CellProps, "about" | "name" | "text" | "reading" | "onChange"> & {
+  expected: ExpectedRange;
+}) {
   const current = shapeOf(text.kind);
   if (!onChange) return <b>{current.label}</b>;
   const isBounded = text.minimum !== "" || text.maximum !== "";
@@ -261,7 +281,7 @@ function ShapeMenu({
           <Icon name="chevron-down" size={9} />
         </>
       }
-      label={`Shape of ${driverCatalogue[name].label}: ${current.label}`}
+      label={`Shape of ${about.label}: ${current.label}`}
       buttonClassName="shape-button"
       groups={[
         {
@@ -305,13 +325,12 @@ function reshaped(
 }
 
 function Bounds({
-  name,
+  about: { label, unit },
   text,
   reading,
   notesId,
   onChange,
-}: Pick<CellProps, "name" | "text" | "reading" | "notesId" | "onChange">) {
-  const { label, unit } = driverCatalogue[name];
+}: Pick<CellProps, "about" | "text" | "reading" | "notesId" | "onChange">) {
   if (!onChange) {
     return (
       <p className="bounds">

@@ -1,8 +1,47 @@
 "use client";
 
+import { useState } from "react";
 import type { CompositionSheet } from "@/analytics/composition/composition-schema";
 import type { Characterisation } from "@/analytics/equation-of-state/characterisation-schema";
-import type { AvailableCurve } from "@/components/fluid/available-curves";
+import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
+import {
+  producingConcepts,
+  type ProducingConcept,
+} from "@/analytics/recovery/recovery-plan-schema";
+import { errorWords } from "@/app/_client/request";
+import { ChartFrame } from "@/components/charts/chart-frame";
+import { readEstimate } from "@/components/estimate/estimate-reading";
+import { FindingList } from "@/components/estimate/finding-list";
+import { readPlan } from "@/components/estimate/plan-reading";
+import type { PlanText } from "@/components/estimate/plan-text";
+import { conceptLabels, isWeakRoute, shortConcepts } from "@/components/estimate/plan-words";
+import { resultFactor, resultUnit } from "@/components/estimate/result-rows";
+import { RouteFlag } from "@/components/estimate/route-flag";
+import { routeWords, type AvailableCurve } from "@/components/fluid/available-curves";
+import { AssumptionTable, type ConceptTexts } from "@/components/recovery/assumption-table";
+import {
+  conceptText,
+  editsOfPlan,
+  isEdited,
+  noEdits,
+  withEdit,
+  type ConceptStart,
+} from "@/components/recovery/concept-assumptions";
+import { ConceptBars } from "@/components/recovery/concept-bars";
+import { conceptFinding } from "@/components/recovery/concept-findings";
+import { conceptData, ConceptTable } from "@/components/recovery/concept-table";
+import { warningsByConcept } from "@/components/recovery/concept-warnings";
+import { GasBalance, PhaseTable } from "@/components/recovery/phase-table";
+import { Button } from "@/components/ui/button";
+import { Select } from "@/components/ui/choice";
+import { Disclosure } from "@/components/ui/dialog";
+import { formatFigure } from "@/components/ui/format";
+import { Section, Stack } from "@/components/ui/section";
+import { Notice, Skeleton } from "@/components/ui/status";
+import { useReservoir } from "../_editor/reservoir-context";
+import { useConcepts } from "../_queries/recovery";
+import { NearWellSection } from "./near-well-section";
+import { UsePlanDialog } from "./use-plan-dialog";
 
 export interface ConceptComparisonProps {
   /** depletion curves of the sample, most trusted first, as `availableCurves` gives them; may be empty */
@@ -17,6 +56,230 @@ export interface ConceptComparisonProps {
  * Where the liquid goes by depletion, with compression and by cycling, and the way into the draft. Needs a
  * `ReservoirProvider` above it; takes the estimate's inputs, seed, basis and draft from there.
  */
-export function ConceptComparison({ curves }: ConceptComparisonProps) {
-  return curves.length === 0 ? null : <section aria-label="Ways of producing" />;
+export function ConceptComparison({ curves, fluid, sampleName }: ConceptComparisonProps) {
+  const { text } = useReservoir();
+  if (curves.length === 0) return null;
+  if (!text) {
+    return (
+      <Section title="Where the liquid goes">
+        <p className="text-13 text-ink-soft">Appears when an estimate is begun.</p>
+      </Section>
+    );
+  }
+  return <Comparison curves={curves} fluid={fluid} sampleName={sampleName} text={text} />;
+}
+
+function Comparison({
+  curves,
+  fluid,
+  sampleName,
+  text,
+}: ConceptComparisonProps & { text: NonNullable<ReturnType<typeof useReservoir>["text"]> }) {
+  const { place, shown, draft, reading, resultBasis } = useReservoir();
+  const planned = text.usesPlan ? text.plan : null;
+  const [route, setRoute] = useState<RecoveryRoute | null>(planned?.curve.route ?? null);
+  const [edits, setEdits] = useState(() => (planned ? editsOfPlan(planned) : noEdits));
+  const [using, setUsing] = useState<ProducingConcept | null>(null);
+  const chosen = curves.find((candidate) => candidate.route === route) ?? curves[0];
+
+  const pressure = reading?.inputs.pressurePsia.compiled?.range;
+  const start: ConceptStart = {
+    curve: chosen.curve,
+    sampleName,
+    pressurePsia: pressure ?? null,
+    depthFt: text.depthFt,
+  };
+  const texts = Object.fromEntries(
+    producingConcepts.map((concept) => {
+      const typed = conceptText(concept, start, edits);
+      return [concept, { text: typed, reading: readPlan(typed) }];
+    }),
+  ) as ConceptTexts;
+  // Recoveries are worked out here, so those that are typed, or not typed yet, do not matter.
+  const estimate = readEstimate({ ...text, plan: texts.depletion.text, usesPlan: true });
+  const results = useConcepts(
+    estimate.estimate,
+    {
+      depletion: texts.depletion.reading.plan,
+      compression: texts.compression.reading.plan,
+      cycling: texts.cycling.reading.plan,
+    },
+    shown?.seed ?? 1,
+  );
+  const { concepts } = results;
+  const factor = resultFactor("condensateRecoverableStb", resultBasis);
+  const unit = resultUnit("condensateRecoverableStb", resultBasis);
+  const inPlace = concepts[0]?.condensateInPlaceStb.mean;
+  const cycling = concepts.find(({ gasBalance }) => gasBalance !== null);
+  const unread = producingConcepts.filter((concept) => !texts[concept].reading.plan);
+  const findings = warningsByConcept(concepts);
+  const change = (now: PlanText, next: PlanText) =>
+    setEdits((current) => withEdit(current, now, next));
+
+  return (
+    <Stack close>
+      <ChartFrame
+        title={conceptFinding(concepts, factor, unit)}
+        note={
+          inPlace === undefined
+            ? "Condensate in place, by where it ends up."
+            : `Condensate in place ${formatFigure(inPlace * factor)} ${unit}, ${resultBasis.words.toLowerCase()}. Heading and bars: means over 4,000 trials. Mark: P90 to P10 of the share that reaches the tank.`
+        }
+        fileName={`${place.field}-${place.reservoir}-concepts`}
+        data={conceptData(concepts, resultBasis)}
+      >
+        {concepts.length > 0 ? (
+          <ConceptBars
+            concepts={concepts}
+            isStale={results.isStale}
+            action={
+              draft
+                ? (concept) => (
+                    <UseLink
+                      concept={concept}
+                      isUsed={planned?.concept === concept}
+                      isPossible={texts[concept].reading.plan !== null}
+                      onUse={() => setUsing(concept)}
+                    />
+                  )
+                : undefined
+            }
+          />
+        ) : results.isPending ? (
+          <Skeleton lines={5} label="Setting the concepts side by side" />
+        ) : (
+          <p className="text-13 text-ink-soft">
+            {estimate.estimate
+              ? "Nothing could be worked out; the assumptions below say why."
+              : "Appears when every input of the estimate is filled in and possible. Recoveries are not needed."}
+          </p>
+        )}
+      </ChartFrame>
+      {concepts.length > 0 && <ConceptTable concepts={concepts} basis={resultBasis} />}
+      {results.errors.map(({ concept, error }) => (
+        <Notice
+          key={concept}
+          tone="error"
+          live={false}
+          title={`${conceptLabels[concept]} could not be worked out.`}
+        >
+          {errorWords(error)}
+        </Notice>
+      ))}
+      {unread.length > 0 && (
+        <Notice
+          title={`${unread.map((concept) => shortConcepts[concept]).join(", ")}: an assumption has to be filled in or corrected.`}
+          live={false}
+        />
+      )}
+      <CurveChoice curves={curves} chosen={chosen} onChange={setRoute} />
+      <Disclosure label="Assumptions of the concepts">
+        <div className="assumptions">
+          <p className="text-13 text-ink-soft">
+            Figures to start from are common practice without a source; put the field’s own in their
+            place. What changes here changes the comparison, and the draft only when a concept is
+            used.{" "}
+            {isEdited(edits) && (
+              <Button size="small" onClick={() => setEdits(noEdits)}>
+                Start from common practice again
+              </Button>
+            )}
+          </p>
+          <AssumptionTable texts={texts} onChange={change} />
+        </div>
+      </Disclosure>
+      {concepts.length > 0 && (
+        <Section
+          level={3}
+          title="What is recovered when"
+          note="Condensate of each phase, per cent of what is in place, and gas under it; means over the trials. While cycling, gas counts net of what is put back, burnt and bought."
+        >
+          <PhaseTable concepts={concepts} />
+          {cycling?.gasBalance && (
+            <div className="mt-4">
+              <GasBalance balance={cycling.gasBalance} basis={resultBasis} />
+            </div>
+          )}
+        </Section>
+      )}
+      {findings.length > 0 && (
+        <Section level={3} title="What a reviewer will ask about the concepts">
+          <FindingList findings={findings} />
+        </Section>
+      )}
+      {fluid && pressure && (
+        <NearWellSection
+          fluid={fluid}
+          temperatureDegF={chosen.curve.temperatureDegF}
+          dewPointPsia={chosen.curve.dewPointPsia}
+          initialPsia={pressure.p50}
+        />
+      )}
+      {using && texts[using].reading.plan && (
+        <UsePlanDialog
+          plan={texts[using].reading.plan}
+          view={concepts.find(({ concept }) => concept === using) ?? null}
+          onClose={() => setUsing(null)}
+        />
+      )}
+    </Stack>
+  );
+}
+
+function UseLink({
+  concept,
+  isUsed,
+  isPossible,
+  onUse,
+}: {
+  concept: ProducingConcept;
+  isUsed: boolean;
+  isPossible: boolean;
+  onUse: () => void;
+}) {
+  return (
+    <span className="use-concept">
+      {isUsed && <small>In the draft</small>}
+      <button
+        type="button"
+        className="link-button"
+        disabled={!isPossible}
+        aria-label={`Use ${conceptLabels[concept].toLowerCase()} in the draft`}
+        onClick={onUse}
+      >
+        {isUsed ? "Use again" : "Use in the draft"}
+      </button>
+    </span>
+  );
+}
+
+/** Which depletion the concepts follow, with what it rests on. */
+function CurveChoice({
+  curves,
+  chosen,
+  onChange,
+}: {
+  curves: readonly AvailableCurve[];
+  chosen: AvailableCurve;
+  onChange: (route: RecoveryRoute) => void;
+}) {
+  const words = routeWords[chosen.route];
+  return (
+    <div className="flex flex-wrap items-end gap-x-4 gap-y-2">
+      {curves.length > 1 && (
+        <Select
+          className="w-64 max-w-full"
+          label="Depletion curve"
+          value={chosen.route}
+          options={curves.map(({ route, label }) => ({ value: route, label }))}
+          onChange={onChange}
+        />
+      )}
+      <p className="max-w-prose text-13 text-ink-soft">
+        {curves.length === 1 && <b className="text-ink">{words.label}. </b>}
+        {words.note}
+      </p>
+      {isWeakRoute(chosen.route) && <RouteFlag route={chosen.route} />}
+    </div>
+  );
 }
