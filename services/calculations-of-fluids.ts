@@ -15,6 +15,10 @@ export function calculateComposition(question: CompositionQuestion) {
 
 /** What to try when an iteration does not converge, by the calculation that was asked for. */
 const advice: Record<FluidTaskName, string> = {
+  equationOfState:
+    "Try another split of heptanes plus or other adjustments, or a temperature farther from the critical point.",
+  recovery:
+    "Try narrower ranges of pressure, or a depletion curve that goes down to a lower pressure.",
   depletion:
     "Try another split of heptanes plus, or separator stages that lie closer to common ones.",
   tuning:

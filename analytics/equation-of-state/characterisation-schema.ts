@@ -49,3 +49,7 @@ export const characterisationSchema = z
   })
   .strict();
 export type Characterisation = z.infer<typeof characterisationSchema>;
+
+/** Whether anything was moved to meet a laboratory's figures. */
+export const isTuned = ({ adjustments }: Pick<Characterisation, "adjustments">): boolean =>
+  tunableNames.some((name) => adjustments[name] !== 1);

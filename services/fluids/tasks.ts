@@ -1,4 +1,6 @@
 import { describeDepletion } from "./depletion";
+import { describePhases } from "./equation-of-state";
+import { compareRecoveries } from "./recovery";
 import { proposeTuning } from "./tuning";
 
 /**
@@ -8,6 +10,8 @@ import { proposeTuning } from "./tuning";
 export const fluidTasks = {
   depletion: describeDepletion,
   tuning: proposeTuning,
+  equationOfState: describePhases,
+  recovery: compareRecoveries,
 };
 
 export type FluidTasks = typeof fluidTasks;

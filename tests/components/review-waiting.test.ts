@@ -21,6 +21,7 @@ const item = (submittedAt: string, approvedMean: number | null = null): ReviewIt
   condensate: range(3),
   approved: approvedMean === null ? null : { revision: 1, condensate: range(approvedMean) },
   warnings: 0,
+  recoveryRoute: null,
   canDecide: true,
 });
 

@@ -28,6 +28,7 @@ function field(values: Partial<RankedField> = {}): RankedField {
     condensateYieldStbPerMmscf: 223,
     hydrogenSulphide: 0.034,
     cautions: [],
+    recoveryRoute: null,
     chosen: [
       {
         estimateId: "1",

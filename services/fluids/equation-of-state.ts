@@ -1,0 +1,219 @@
+import type { CompositionSheet, SeparatorStage } from "@/analytics/composition/composition-schema";
+import type { Stream } from "@/analytics/composition/stream";
+import { recoveryCurveOfSimulation } from "@/analytics/depletion/recovery-curve";
+import { depleteCell, tableOfSimulation } from "@/analytics/depletion/simulate-depletion";
+import { ConvergenceError } from "@/analytics/errors";
+import { namedComponents } from "@/analytics/equation-of-state/characterise";
+import {
+  isTuned,
+  type Characterisation,
+} from "@/analytics/equation-of-state/characterisation-schema";
+import { phaseEnvelope } from "@/analytics/equation-of-state/envelope";
+import type { Characterised } from "@/analytics/equation-of-state/mixture";
+import {
+  saturationPressures,
+  type SaturationPressures,
+} from "@/analytics/equation-of-state/saturation";
+import { flashTrain, type SeparatorTrain } from "@/analytics/equation-of-state/separator-train";
+import { heatingValue } from "@/analytics/gas/heating-value";
+import { plantLiquids } from "@/analytics/gas/plant-liquids";
+import { degreesRankine } from "@/analytics/units/conversions";
+import type { Warning } from "@/analytics/warnings";
+import { characteriseSheet } from "./characterised-sheet";
+
+export interface EquationOfStateQuestion {
+  sheet: CompositionSheet;
+  characterisation: Characterisation;
+  temperatureDegF: number;
+  measuredDewPointPsia: number | null;
+  stages: SeparatorStage[];
+  /** null chooses steps from the dew point down */
+  depletionPressuresPsia: number[] | null;
+}
+
+/** Shares of liquid by volume for which the diagram has lines. */
+const QUALITY_LINES = [0.05, 0.1, 0.2, 0.3];
+
+/**
+ * Phase behaviour, separators and simulated depletion of a fluid by the equation of state.
+ *
+ * @throws {DomainError} with a path into the question
+ * @throws {ConvergenceError}
+ */
+export function describePhases(question: EquationOfStateQuestion) {
+  const { sheet, characterisation, temperatureDegF, measuredDewPointPsia, stages } = question;
+  const { stream, characterised, warnings } = characteriseSheet(sheet, characterisation);
+  const { mixture, moleFractions } = characterised;
+  const saturation = saturationPressures(mixture, moleFractions, degreesRankine(temperatureDegF));
+  const { upper, lower } = saturation;
+  const train = flashTrain(mixture, moleFractions, stages);
+  const traced = envelopeOf(characterised);
+  const simulated = depletionOf(question, characterised, saturation);
+  return {
+    components: mixture.names.map((name, index) => ({
+      name,
+      moleFraction: moleFractions[index],
+      molecularWeight: mixture.molecularWeight[index],
+      criticalTemperatureDegR: mixture.criticalTemperatureDegR[index],
+      criticalPressurePsia: mixture.criticalPressurePsia[index],
+      acentricFactor: mixture.acentricFactor[index],
+    })),
+    isTuned: isTuned(characterisation),
+    saturation: {
+      upperPsia: upper?.pressurePsia ?? null,
+      kind: upper?.kind ?? ("none" as const),
+      lowerDewPointPsia: lower,
+      measuredPsia: measuredDewPointPsia,
+      mismatchPsia:
+        upper && measuredDewPointPsia !== null ? upper.pressurePsia - measuredDewPointPsia : null,
+    },
+    envelope: traced.envelope,
+    train: presentTrain(train, stream, characterisation),
+    depletion: simulated.depletion,
+    curve: simulated.curve,
+    warnings: [
+      ...warnings,
+      ...saturationWarnings(question, saturation),
+      ...traced.warnings,
+      ...simulated.warnings,
+    ],
+  };
+}
+
+/** The diagram is drawn beside the figures; where it cannot be traced, they stand all the same, and it is said. */
+function envelopeOf({ mixture, moleFractions }: Characterised) {
+  try {
+    const envelope = phaseEnvelope(mixture, moleFractions, {
+      liquidVolumeFractions: QUALITY_LINES,
+    });
+    return {
+      envelope: {
+        bubble: [...envelope.bubble],
+        dew: [...envelope.dew],
+        critical: envelope.critical,
+        cricondentherm: envelope.cricondentherm,
+        cricondenbar: envelope.cricondenbar,
+        quality: envelope.quality.map(({ liquidVolumeFraction, points }) => ({
+          liquidVolumeFraction,
+          points: [...points],
+        })),
+      },
+      warnings: [],
+    };
+  } catch (error) {
+    if (!(error instanceof ConvergenceError)) throw error;
+    const nothing = { critical: null, cricondentherm: null, cricondenbar: null };
+    return {
+      envelope: { bubble: [], dew: [], ...nothing, quality: [] },
+      warnings: [
+        notConverged(
+          "envelope_not_traced",
+          "characterisation",
+          `The phase envelope could not be traced: ${error.message}`,
+        ),
+      ],
+    };
+  }
+}
+
+/** A depletion begins at a dew point; a fluid without one has no depletion, which the warnings say. */
+function depletionOf(
+  { characterisation, temperatureDegF, stages, depletionPressuresPsia }: EquationOfStateQuestion,
+  characterised: Characterised,
+  { upper }: SaturationPressures,
+) {
+  const none = { depletion: null, curve: null };
+  if (upper?.kind !== "dewPoint") return { ...none, warnings: [] };
+  try {
+    const cell = depleteCell(characterised, temperatureDegF, depletionPressuresPsia);
+    const route = isTuned(characterisation) ? "tunedEquationOfState" : "untunedEquationOfState";
+    return {
+      depletion: tableOfSimulation(characterised, cell),
+      curve: recoveryCurveOfSimulation(characterised, cell, stages, route),
+      warnings: [],
+    };
+  } catch (error) {
+    if (!(error instanceof ConvergenceError)) throw error;
+    return {
+      ...none,
+      warnings: [
+        notConverged(
+          "depletion_not_simulated",
+          "characterisation",
+          `The depletion could not be simulated: ${error.message}`,
+        ),
+      ],
+    };
+  }
+}
+
+const notConverged = (code: string, input: string, message: string): Warning => ({
+  code,
+  severity: "warning",
+  input,
+  message: `${message.replace(/\.?$/, ".")} The other figures stand. Try another split of heptanes plus.`,
+});
+
+function saturationWarnings(
+  { temperatureDegF, measuredDewPointPsia, characterisation }: EquationOfStateQuestion,
+  { upper }: SaturationPressures,
+): Warning[] {
+  const at = { severity: "warning" as const, input: "temperatureDegF" };
+  if (!upper) {
+    return [
+      {
+        ...at,
+        code: "above_cricondentherm",
+        message: `At ${temperatureDegF} °F the fluid is above its cricondentherm: it stays a gas at every pressure, and drops no liquid in the reservoir.`,
+      },
+    ];
+  }
+  if (upper.kind === "bubblePoint") {
+    return [
+      {
+        ...at,
+        code: "fluid_is_oil",
+        message: `By the equation of state the fluid is an oil at ${temperatureDegF} °F, with a bubble point of ${Math.round(upper.pressurePsia)} psia. A depletion below a dew point does not apply.`,
+      },
+    ];
+  }
+  if (isTuned(characterisation)) return [];
+  return [
+    {
+      code: "untuned_equation_of_state",
+      severity: "warning",
+      input: "characterisation.adjustments",
+      message:
+        measuredDewPointPsia === null
+          ? "The equation of state is not tuned, and no measured dew point stands beside its own. Dropout and recovery from it are an indication."
+          : `The equation of state is not tuned: its dew point is ${Math.round(Math.abs(upper.pressurePsia - measuredDewPointPsia))} psi ${upper.pressurePsia < measuredDewPointPsia ? "below" : "above"} the measured one. Dropout and recovery from it are an indication.`,
+    },
+  ];
+}
+
+function presentTrain(train: SeparatorTrain, stream: Stream, characterisation: Characterisation) {
+  const gas = namedComponents(stream, characterisation, train.surfaceGasMoleFractions);
+  return {
+    stages: train.stages.map(
+      ({ pressurePsia, temperatureDegF, gasScfPerStb, gasGravity, liquidVolumeFactor }) => ({
+        pressurePsia,
+        temperatureDegF,
+        gasScfPerStb,
+        gasGravity,
+        liquidVolumeFactor,
+      }),
+    ),
+    condensateApi: train.condensateApi,
+    condensateMolecularWeight: train.condensateMolecularWeight,
+    totalGasScfPerStb: train.totalGasScfPerStb,
+    condensateYieldStbPerMmscf: train.condensateYieldStbPerMmscf,
+    condensateYieldStbPerMmscfWellstream: train.condensateYieldStbPerMmscfWellstream,
+    surfaceGas: {
+      gravity: train.surfaceGasGravity,
+      components: gas.map(({ name, moleFraction }) => ({ name, moleFraction })),
+      heatingValue: heatingValue(gas),
+      plantLiquids: plantLiquids(gas),
+    },
+    separatorTest: train.separatorTest,
+  };
+}
