@@ -40,6 +40,7 @@ export function WorkspaceFrame({
           entries: [
             { label: "Profile", href: "/profile" },
             { label: "API and tokens", href: "/api-guide" },
+            { label: "Methods and sources", href: "/methods" },
             { label: "Sign out", onSelect: () => void signOut({ callbackUrl: "/sign-in" }) },
           ],
         },

@@ -1,6 +1,7 @@
+import Link from "next/link";
 import type { ReactNode } from "react";
 
-/** The product's caution, and what made the numbers: "Engine 1.0.0, 16,384 trials". */
+/** The product's caution, where the methods are explained, and what made the numbers: "Engine 1.0.0". */
 export function Footer({ provenance }: { provenance?: ReactNode }) {
   return (
     <footer className="footer">
@@ -8,7 +9,10 @@ export function Footer({ provenance }: { provenance?: ReactNode }) {
         Planning estimate, not a reserves report. Have a qualified reserves evaluator review before
         disclosure.
       </p>
-      {provenance && <p>{provenance}</p>}
+      <p>
+        <Link href="/methods">Methods and sources</Link>
+        {provenance && <> · {provenance}</>}
+      </p>
     </footer>
   );
 }
