@@ -52,6 +52,7 @@ const psia = (value: number) => `${formatFigure(value, { digits: 4 })} psia`;
 export function planInWords(plan: RecoveryPlan): string {
   const range = ({ distribution }: RecoveryPlan["abandonmentPressurePsia"]) => {
     const { p90, p50, p10 } = compileDistribution(distribution).range;
+    if (p90 === p10) return formatFigure(p50);
     return [p90, p50, p10].map((value) => formatFigure(value)).join(" / ");
   };
   return [
