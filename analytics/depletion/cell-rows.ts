@@ -1,7 +1,7 @@
 /** The rows of a depletion table that a balance can follow, and where it has to stop. */
 import { readProducedGas } from "./check-produced-gas";
 import type { DepletionTable } from "./depletion-table-schema";
-import { rowName } from "./findings";
+import { asReported, rowName } from "./findings";
 import type { CellConditions, CellRow } from "./material-balance";
 
 export interface CellRows {
@@ -36,7 +36,11 @@ export function cellRows(table: DepletionTable): CellRows {
     );
   }
   if (!(dewPointZ > 0)) {
-    return stopped(0, "gasZ", `a gas z at the dew point of ${dewPointZ} is impossible.`);
+    return stopped(
+      0,
+      "gasZ",
+      `a gas z at the dew point of ${asReported(dewPointZ)} is impossible.`,
+    );
   }
   let producedBefore = 0;
   let pressureBefore = table.dewPointPsia;
@@ -60,16 +64,16 @@ export function cellRows(table: DepletionTable): CellRows {
       return stopped(
         row,
         "cumulativeProducedMolePercent",
-        `${name} has an impossible cumulative production of ${cumulativeProducedMolePercent} %.`,
+        `${name} has an impossible cumulative production of ${asReported(cumulativeProducedMolePercent)} %.`,
       );
     }
     if (gasZ === null) return stopped(row, "gasZ", `${name} gives no gas z.`);
-    if (!(gasZ > 0)) return stopped(row, "gasZ", `${name} has a gas z of ${gasZ}.`);
+    if (!(gasZ > 0)) return stopped(row, "gasZ", `${name} has a gas z of ${asReported(gasZ)}.`);
     if (liquidPercent === null) {
       return stopped(row, "liquidPercent", `${name} gives no liquid percentage.`);
     }
     if (!(liquidPercent >= 0 && liquidPercent < 100)) {
-      return stopped(row, "liquidPercent", `${name} has ${liquidPercent} % liquid.`);
+      return stopped(row, "liquidPercent", `${name} has ${asReported(liquidPercent)} % liquid.`);
     }
     const read = readProducedGas(table, row);
     if (read === null) {

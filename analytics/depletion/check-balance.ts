@@ -4,7 +4,7 @@ import type { CellRows } from "./cell-rows";
 import { componentColumn } from "./check-produced-gas";
 import type { DepletionTable } from "./depletion-table-schema";
 import type { Finding } from "./finding-schema";
-import { CheckReport, rowAtStart, rowName } from "./findings";
+import { asReported, CheckReport, rowAtStart, rowName } from "./findings";
 import { hoffmannLine, OUTLIER_LOG_RATIO, type HoffmannLine } from "./hoffmann";
 import { balanceCell, type CellState } from "./material-balance";
 import { twoPhaseZFromMoles } from "./two-phase-z";
@@ -71,7 +71,7 @@ export function checkTwoPhaseZ(table: DepletionTable): Finding[] {
     furthest = Math.max(furthest, off);
     if (off <= Z_ROUNDING) return;
     const message =
-      `${rowAtStart(table, row)} reports a two-phase z of ${twoPhaseZ}; ${produced} % produced makes it ` +
+      `${rowAtStart(table, row)} reports a two-phase z of ${asReported(twoPhaseZ)}; ${asReported(produced)} % produced makes it ` +
       `${fromMoles.toFixed(4)}. Either figure may be wrong.`;
     if (off > Z_WRONG) report.fail(message, { row, column });
     else report.warn(message, { row, column });

@@ -20,7 +20,9 @@ const WRONG_TOTAL = 1;
 const SAME_COMPOSITION = 0.05;
 const OTHER_COMPOSITION = 0.5;
 /** How far heptanes plus of the gas may rise again at low pressure, share of its minimum. Common practice, no source. */
-const REVAPORISATION = 0.35;
+const REVAPORISATION = 0.5;
+/** Below this liquid may come back into the gas until it is richer than the wellstream, psia. */
+const REVAPORISING_PSIA = 1000;
 
 /** The produced gas of a row with heptanes plus as one, or why it cannot be read; `null` when none was reported. */
 export function readProducedGas(
@@ -137,7 +139,8 @@ export function checkHeptanesPlusTrend(table: DepletionTable, wellstream: Lumped
   let lowest = Infinity;
   let before: { row: number; value: number } | null = null;
   for (const { row, value } of series) {
-    if (row > 0 && value > initial + SAME_COMPOSITION) {
+    const isLow = table.rows[row].pressurePsia < REVAPORISING_PSIA;
+    if (row > 0 && !isLow && value > initial + SAME_COMPOSITION) {
       report.fail(
         `The gas of ${rowName(table, row)} has ${value.toFixed(2)} % heptanes plus, more than the ${initial.toFixed(2)} % ` +
           "of the wellstream. Gas below the dew point is leaner.",

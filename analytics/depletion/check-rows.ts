@@ -1,12 +1,14 @@
 /** Checks of a depletion table that need nothing but its own columns: order, first row, ranges and turning points. */
 import type { DepletionTable } from "./depletion-table-schema";
 import type { Finding } from "./finding-schema";
-import { CheckReport, psia, rowName, rowAtStart } from "./findings";
+import { asReported, CheckReport, psia, rowName, rowAtStart } from "./findings";
 
 /** A pressure may be off the dew point by its rounding, psi. */
 const SAME_PRESSURE_PSI = 0.5;
 /** Last digit of a reported liquid percentage. */
 const LIQUID_DIGIT = 0.1;
+/** More liquid than this, per cent of the cell, only drops out near the critical point. Common practice, no source. */
+const NEAR_CRITICAL_LIQUID = 25;
 /** Last digit of a reported z. */
 const Z_DIGIT = 0.001;
 
@@ -52,13 +54,13 @@ export function checkFirstRow(table: DepletionTable): Finding[] {
   }
   if (first.cumulativeProducedMolePercent !== null && first.cumulativeProducedMolePercent !== 0) {
     report.fail(
-      `${first.cumulativeProducedMolePercent} % of the fluid is already produced in the first row; at the dew point nothing is.`,
+      `${asReported(first.cumulativeProducedMolePercent)} % of the fluid is already produced in the first row; at the dew point nothing is.`,
       at("cumulativeProducedMolePercent"),
     );
   }
   if (first.liquidPercent !== null && first.liquidPercent !== 0) {
     report.fail(
-      `The first row has ${first.liquidPercent} % liquid; at the dew point there is none yet.`,
+      `The first row has ${asReported(first.liquidPercent)} % liquid; at the dew point there is none yet.`,
       at("liquidPercent"),
     );
   }
@@ -77,15 +79,18 @@ export function checkProduced(table: DepletionTable): Finding[] {
     if (value === null) return;
     counted += 1;
     if (!(value >= 0 && value <= 100)) {
-      report.fail(`${rowAtStart(table, row)} has ${value} % produced; it lies between 0 and 100.`, {
-        row,
-        column,
-      });
+      report.fail(
+        `${rowAtStart(table, row)} has ${asReported(value)} % produced; it lies between 0 and 100.`,
+        {
+          row,
+          column,
+        },
+      );
       return;
     }
     if (before && value < before.value) {
       report.fail(
-        `${rowAtStart(table, row)} has ${value} % produced, less than the ${before.value} % of ${rowName(table, before.row)}. ` +
+        `${rowAtStart(table, row)} has ${asReported(value)} % produced, less than the ${asReported(before.value)} % of ${rowName(table, before.row)}. ` +
           "What has been produced does not go back.",
         { row, column },
       );
@@ -98,32 +103,28 @@ export function checkProduced(table: DepletionTable): Finding[] {
   return report.conclude(`${counted} figures, each at least the one before, none above 100 %.`);
 }
 
-/** Rows at which a series turns back after having changed direction once, beyond its rounding. */
-function secondTurns(
-  series: readonly { row: number; value: number }[],
-  digit: number,
-  firstDirection: 1 | -1,
-): number[] {
+interface Reading {
+  readonly row: number;
+  readonly value: number;
+}
+
+/** Readings at which a series turns back after having changed direction once, beyond its rounding. */
+function secondTurns(series: readonly Reading[], digit: number, firstDirection: 1 | -1): Reading[] {
   let extreme = -Infinity;
   let turned = false;
   let trough = Infinity;
-  const turns: number[] = [];
-  for (const { row, value } of series) {
+  return series.filter(({ value }) => {
     const along = firstDirection * value;
     if (!turned) {
-      if (along >= extreme) extreme = along;
-      else if (along < extreme - digit) {
-        turned = true;
-        trough = along;
-      }
-    } else if (along > trough + digit) {
-      turns.push(row);
-      trough = along;
-    } else {
-      trough = Math.min(trough, along);
+      extreme = Math.max(extreme, along);
+      turned = along < extreme - digit;
+      if (turned) trough = along;
+      return false;
     }
-  }
-  return turns;
+    const turnsBack = along > trough + digit;
+    trough = turnsBack ? along : Math.min(trough, along);
+    return turnsBack;
+  });
 }
 
 /** Liquid lies between 0 and 100 %, rises to one maximum and then falls. */
@@ -137,10 +138,13 @@ export function checkLiquidCurve(table: DepletionTable): Finding[] {
   table.rows.forEach(({ liquidPercent: value }, row) => {
     if (value === null) return;
     if (!(value >= 0 && value < 100)) {
-      report.fail(`${rowAtStart(table, row)} has ${value} % liquid; it lies between 0 and 100.`, {
-        row,
-        column,
-      });
+      report.fail(
+        `${rowAtStart(table, row)} has ${asReported(value)} % liquid; it lies between 0 and 100.`,
+        {
+          row,
+          column,
+        },
+      );
       return;
     }
     series.push({ row, value });
@@ -149,20 +153,23 @@ export function checkLiquidCurve(table: DepletionTable): Finding[] {
     report.missing("fewer than three rows give a liquid percentage.", { column });
     return report.findings;
   }
-  for (const row of secondTurns(series, LIQUID_DIGIT, 1)) {
+  for (const { row, value } of secondTurns(series, LIQUID_DIGIT, 1)) {
     report.warn(
-      `Liquid rises again to ${table.rows[row].liquidPercent} % in ${rowName(table, row)} after it had begun to fall. ` +
+      `Liquid rises again to ${asReported(value)} % in ${rowName(table, row)} after it had begun to fall. ` +
         "Retrograde liquid has one maximum; look at this figure and the one before.",
       { row, column },
     );
   }
   const top = series.reduce((most, point) => (point.value > most.value ? point : most));
   return report.conclude(
-    `The most liquid is ${top.value} % in ${rowName(table, top.row)}; it rises before and falls after.`,
+    `The most liquid is ${asReported(top.value)} % in ${rowName(table, top.row)}; it rises before and falls after.`,
   );
 }
 
-/** The gas z is plausible and has one minimum. */
+/**
+ * The gas z is plausible and has one minimum. A fluid that drops much liquid at once is near its critical point, where
+ * its gas changes so much that z may turn twice.
+ */
 export function checkGasZ(table: DepletionTable): Finding[] {
   const report = new CheckReport({ code: "gas_z_curve", title: "Gas z falls once, then rises" });
   const column = "gasZ";
@@ -171,7 +178,7 @@ export function checkGasZ(table: DepletionTable): Finding[] {
     if (value === null) return;
     if (!(value > 0.3 && value < 2)) {
       report.fail(
-        `${rowAtStart(table, row)} has a gas z of ${value}. Reservoir gases lie between about 0.6 and 1.8.`,
+        `${rowAtStart(table, row)} has a gas z of ${asReported(value)}. Reservoir gases lie between about 0.6 and 1.8.`,
         { row, column },
       );
       return;
@@ -182,12 +189,18 @@ export function checkGasZ(table: DepletionTable): Finding[] {
     report.missing("fewer than three rows give a gas z.", { column });
     return report.findings;
   }
-  for (const row of secondTurns(series, Z_DIGIT, -1)) {
+  const mostLiquid = Math.max(...table.rows.map(({ liquidPercent }) => liquidPercent ?? 0));
+  const turns = mostLiquid > NEAR_CRITICAL_LIQUID ? [] : secondTurns(series, Z_DIGIT, -1);
+  for (const { row, value } of turns) {
     report.warn(
-      `The gas z falls again to ${table.rows[row].gasZ} in ${rowName(table, row)} after it had begun to rise. ` +
+      `The gas z falls again to ${asReported(value)} in ${rowName(table, row)} after it had begun to rise. ` +
         "Along a depletion it has one minimum.",
       { row, column },
     );
   }
-  return report.conclude(`${series.length} figures with one minimum at most.`);
+  return report.conclude(
+    mostLiquid > NEAR_CRITICAL_LIQUID
+      ? `${series.length} plausible figures. With ${mostLiquid.toFixed(1)} % liquid the fluid is near-critical, and its z may turn twice.`
+      : `${series.length} figures with one minimum at most.`,
+  );
 }

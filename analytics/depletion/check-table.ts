@@ -10,6 +10,7 @@ import {
   hoffmannLines,
   placedStates,
 } from "./check-balance";
+import { checkGasZAgainstComposition } from "./check-gas-z";
 import {
   checkDewPointComposition,
   checkHeptanesPlusTrend,
@@ -52,6 +53,7 @@ export function checkTable(table: DepletionTable, stream: Stream): Finding[] {
     ...checkDewPointComposition(table, wellstream),
     ...checkLiquidCurve(table),
     ...checkGasZ(table),
+    ...checkGasZAgainstComposition(table, stream),
     ...checkTwoPhaseZ(table),
     ...checkClosure(table, followed, states),
     ...checkComponents(table, states),

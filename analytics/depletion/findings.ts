@@ -17,6 +17,11 @@ export function psia(pressurePsia: number): string {
   return `${pressurePsia.toLocaleString("en-GB", { maximumFractionDigits: 1 })} psia`;
 }
 
+/** A figure of the table in six digits, which is more than a laboratory gives and less than a simulation. */
+export function asReported(value: number): string {
+  return String(Number(value.toPrecision(6)));
+}
+
 /** A row as the findings name it, counted from one: `row 4 (1,814.7 psia)`. */
 export function rowName(table: DepletionTable, row: number): string {
   return `row ${row + 1} (${psia(table.rows[row].pressurePsia)})`;

@@ -30,6 +30,8 @@ export const tuningBounds: Readonly<
  * produced wellstream weigh by what a laboratory repeats. Common practice, no source.
  */
 const ONE_UNIT = { dewPointRelative: 0.001, liquidPoints: 1, producedPoints: 0.5 };
+/** Of the sum of squares: a thirtieth of a unit in one figure. */
+const NEGLIGIBLE_IMPROVEMENT = 1e-3;
 /** Below this a cell is blown down rather than depleted step by step, psia. */
 const BLOWDOWN_PSIA = 100;
 const DEW_POINT_MISS = 0.01;
@@ -303,6 +305,7 @@ export function tune(problem: TuningProblem): Tuning {
         throw error;
       }
     },
+    negligibleImprovement: NEGLIGIBLE_IMPROVEMENT,
     onProgress,
   });
   if (!(fit.objective < before.objective)) {

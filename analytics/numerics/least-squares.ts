@@ -9,6 +9,8 @@ export interface LeastSquaresProblem {
   /** residuals at a point within the bounds; null where they cannot be had, which the search then avoids */
   readonly residuals: (point: readonly number[]) => Float64Array | null;
   readonly maximumIterations?: number;
+  /** an improvement of the sum of squares that is not worth going on for; none by default */
+  readonly negligibleImprovement?: number;
   /** called after every improvement */
   readonly onProgress?: (progress: LeastSquaresProgress) => void;
 }
@@ -32,7 +34,7 @@ const FIRST_DAMPING = 1e-2;
 /** enough for the normal equations to have Cholesky factors whatever their rank */
 const LEAST_DAMPING = 1e-6;
 const LARGEST_DAMPING = 1e9;
-/** The search ends when two improvements in a row are each below this, relative. */
+/** The search ends when two improvements in a row are each below this, relative, or negligible. */
 const SMALL_IMPROVEMENT = 1e-4;
 const DEFAULT_ITERATIONS = 60;
 
@@ -51,7 +53,8 @@ const sumOfSquares = (values: Float64Array) =>
  *   (1999), section 5.5, on projection
  */
 export function fitLeastSquares(problem: LeastSquaresProblem): LeastSquaresFit {
-  const { start, lowest, highest, maximumIterations = DEFAULT_ITERATIONS, onProgress } = problem;
+  const { start, lowest, highest, onProgress } = problem;
+  const { maximumIterations = DEFAULT_ITERATIONS, negligibleImprovement = 0 } = problem;
   start.forEach((value, i) => {
     if (!(value >= lowest[i] && value <= highest[i])) {
       throw new DomainError(
@@ -89,11 +92,11 @@ export function fitLeastSquares(problem: LeastSquaresProblem): LeastSquaresFit {
     if (improved === null) {
       return { point, residuals, startObjective, objective, iterations: iteration };
     }
-    const gain = 1 - improved.objective / objective;
+    const enough = Math.max(SMALL_IMPROVEMENT * objective, negligibleImprovement);
+    small = objective - improved.objective < enough ? small + 1 : 0;
     ({ point, residuals, objective } = improved);
     damping = Math.max(damping / 5, LEAST_DAMPING);
     onProgress?.({ iteration, objective });
-    small = gain < SMALL_IMPROVEMENT ? small + 1 : 0;
     if (small === 2 || objective === 0) {
       return { point, residuals, startObjective, objective, iterations: iteration };
     }

@@ -15,7 +15,7 @@ describe("checkTable", () => {
     const findings = checkTable(studyTable(), studyStream);
     expect(findings.filter(({ severity }) => severity !== "passed")).toEqual([]);
     expect(new Set(findings.map(({ code }) => code)).size).toBe(findings.length);
-    expect(findings.length).toBeGreaterThanOrEqual(14);
+    expect(findings.length).toBeGreaterThanOrEqual(15);
     for (const { title, message, row, column } of findings) {
       expect(title).not.toBe("");
       expect(message).toMatch(/\d/);

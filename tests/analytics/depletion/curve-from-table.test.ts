@@ -2,7 +2,6 @@ import { describe, expect, it } from "vitest";
 import { recoveryCurveOfTable } from "@/analytics/depletion/curve-from-table";
 import { recoveryCurveOfSimulation } from "@/analytics/depletion/recovery-curve";
 import { depleteCell, simulateDepletion } from "@/analytics/depletion/simulate-depletion";
-import { readDepletionStudy } from "@/analytics/depletion/study";
 import { stagesAtPressure } from "@/analytics/depletion/surface-products";
 import { characterise } from "@/analytics/equation-of-state/characterise";
 import {
@@ -205,31 +204,5 @@ describe("recoveryCurveOfSimulation", () => {
         0.001,
       );
     });
-  });
-});
-
-describe("readDepletionStudy", () => {
-  const study = readDepletionStudy({
-    table: studyTable(),
-    stream: studyStream,
-    stages: studyStages(3442.7),
-    characterisation,
-  });
-
-  it("sets computed two-phase z, barrels and heptanes plus beside every row", () => {
-    expect(study.rows).toHaveLength(6);
-    expect(study.rows[0]).toMatchObject({ condensateStb: 0, surfaceGasMscf: 0 });
-    expect(study.rows[3].computedTwoPhaseZ).toBeCloseTo(0.7301, 4);
-    expect(study.rows[3].heptanesPlusMolePercent).toBe(1.46);
-    const yields = study.rows.map(({ producingYieldStbPerMmscf }) => producingYieldStbPerMmscf!);
-    expect(yields[0]).toBeGreaterThan(140);
-    expect(yields[4]).toBeLessThan(40);
-  });
-
-  it("has five Hoffmann lines, a curve, and findings of every check", () => {
-    expect(study.hoffmann).toHaveLength(5);
-    expect(study.curve!.points).toHaveLength(6);
-    expect(study.findings.map(({ code }) => code)).toContain("recovery_curve");
-    expect(study.warnings).toEqual([]);
   });
 });
