@@ -11,6 +11,27 @@ import { studyReported, studyStream } from "../depletion/third-comparative-study
 /** laboratory dew point of that fluid at 200 degF, psia: Kenyon and Behie (1987), from memory */
 const MEASURED = 3443;
 
+/**
+ * North Sea gas condensate NS-1 at 280 degF, laboratory dew point 6,764.7 psia: C. H. Whitson, S. B. Torp, J. Pet.
+ * Technol. 35 (March 1983) 610-620, from memory; the sheet adds up to 100.00.
+ */
+const northSea = readStream({
+  light: {
+    CO2: 2.37,
+    N2: 0.31,
+    C1: 73.19,
+    C2: 7.8,
+    C3: 3.55,
+    iC4: 0.71,
+    nC4: 1.45,
+    iC5: 0.64,
+    nC5: 0.68,
+    C6: 1.09,
+  },
+  carbonNumbers: [],
+  plus: { carbonNumber: 7, molePercent: 8.21, molecularWeight: 184, specificGravity: 0.816 },
+}).stream;
+
 describe("nemethKennedy", () => {
   it("answers its example", () => {
     // Nemeth and Kennedy (1967): coefficients of the paper, value computed separately in Python
@@ -21,6 +42,15 @@ describe("nemethKennedy", () => {
     const { dewPointPsia, statedErrorFraction, warnings } = nemethKennedy(studyStream, 200);
     expect(Math.abs(dewPointPsia / MEASURED - 1)).toBeLessThan(statedErrorFraction);
     expect(warnings).toEqual([]);
+  });
+});
+
+describe("dew points of a second fluid", () => {
+  it.each([
+    ["Nemeth and Kennedy", nemethKennedy, 0.01],
+    ["Elsharkawy", elsharkawy, 0.04],
+  ] as const)("lie near the laboratory's by %s", (_, correlation, tolerance) => {
+    expect(Math.abs(correlation(northSea, 280).dewPointPsia / 6764.7 - 1)).toBeLessThan(tolerance);
   });
 });
 

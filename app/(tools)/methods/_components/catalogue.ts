@@ -116,7 +116,7 @@ const compositions: MethodGroup = {
       source: "L. K. Nemeth, H. T. Kennedy, SPE J. 7 (June 1967) 99–104",
       range: "40–320 °F, 1,270–10,790 psia, heptanes plus of 106–235 lb/lbmol. Warns outside.",
       error: stated(
-        "7.4 % on average over 579 points. On the third comparative solution project 3,484 psia against 3,443 measured.",
+        "7.4 % on average over 579 points. Two published fluids: 3,484 psia against 3,443 measured, 6,806 against 6,765.",
       ),
       usedIn: "Fluid, beside a measured or computed dew point",
     },
@@ -126,7 +126,7 @@ const compositions: MethodGroup = {
       source: "A. M. Elsharkawy, Fluid Phase Equilibria 193 (2002) 147–165",
       range: "Warns outside the range of Nemeth and Kennedy; its own could not be confirmed.",
       error: stated(
-        "7.7 % on average over some 340 points (from memory). On the same fluid 3,773 psia.",
+        "7.7 % on average over some 340 points (from memory). The same two fluids: 3,773 and 6,552 psia.",
       ),
       usedIn: "Fluid, beside the first",
     },
@@ -221,7 +221,7 @@ const equationOfState: MethodGroup = {
         "D. Y. Peng, D. B. Robinson, Ind. Eng. Chem. Fundam. 15 (1976) 59–64 and GPA RR-28 (1978); volume translation after A. Peneloux, E. Rauzy, R. Freze (1982)",
       range: "Hydrocarbons, N₂, CO₂, H₂S. No water.",
       error: measured(
-        "Untuned on the third comparative solution project: dew point 3,516 psig (Kesler–Lee) or 3,427 (Twu) with heptanes plus whole, 3,840 in three fractions, against 3,428 measured; most liquid about 30 % of the cell against 20 %.",
+        "Untuned on the third comparative solution project: dew point 3,516 psig (Kesler–Lee) or 3,427 (Twu) with heptanes plus whole, 3,840 in three fractions, against 3,428 measured; most liquid about 30 % of the cell against 20 %. On a heavier North Sea fluid 6,200 psia in three fractions against 6,765.",
       ),
       usedIn: "Fluid, phase behaviour and separators",
     },
