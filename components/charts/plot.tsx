@@ -139,7 +139,7 @@ export function PlotDot({
 }: {
   x: number;
   y: number;
-  shape?: "full" | "open" | "diamond" | "square";
+  shape?: "full" | "open" | "diamond" | "square" | "small";
 }) {
   return (
     <span

@@ -255,13 +255,12 @@ export function readCompositionText(text: CompositionText): CompositionReading {
 /**
  * `#/sheet/stream/carbonNumbers/2/molePercent` -> `stream.carbonNumbers.9`: the place that the server means.
  *
- * @param under  the request's own name of the sheet
+ * @param under  the request's own name of the sheet; a pointer may leave it out
  */
-export function placeOfPointer(pointer: string, under: string): string | null {
-  const parts = pointer.replace(/^#\//, "").split("/");
-  if (parts[0] !== under) return null;
+export function placeOfPointer(pointer: string, under: string): string {
+  const parts = pointer.replace(/^#?\//, "").split("/");
   return parts
-    .slice(1)
+    .slice(parts[0] === under ? 1 : 0)
     .join(".")
     .replace(
       /carbonNumbers\.(\d+)(\.\w+)?$/,

@@ -3,67 +3,84 @@
 import { useState } from "react";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import { errorWords, ProblemError } from "@/app/_client/request";
-import type { FluidSampleView } from "@/app/api/v1/fluid-samples/schema";
+import { fluidSampleSchema, type FluidSampleView } from "@/app/api/v1/fluid-samples/schema";
+import { SampleConflict } from "@/components/fluid/sample-conflict";
+import { textOfSample, type StoredSample } from "@/components/fluid/sample-text";
 import { Button } from "@/components/ui/button";
 import { TextField } from "@/components/ui/field";
 import { Section } from "@/components/ui/section";
 import { Notice } from "@/components/ui/status";
 import { useToast } from "@/components/ui/toast";
 import { useReservoir } from "../_editor/reservoir-context";
+import type { SampleDraft } from "../_editor/use-sample";
 import { useSaveSample } from "../_queries/fluid";
 
-/** Keeps the sheet under a name, so that estimates can refer to it. */
+/** Keeps the sheets under a name, so that estimates can refer to them. */
 export function SampleForm({
   sample,
+  draft,
   test,
   onSaved,
 }: {
   sample: FluidSampleView | null;
-  /** `null` while the sheet is not complete or not possible */
+  draft: SampleDraft;
+  /** measured or computed; `null` while there is none */
   test: SeparatorTest | null;
   onSaved: (sample: FluidSampleView) => void;
 }) {
   const { page, place } = useReservoir();
   const toast = useToast();
-  const [name, setName] = useState(sample?.name ?? "");
-  const [sampledOn, setSampledOn] = useState(sample?.sampledOn ?? "");
-  const [laboratory, setLaboratory] = useState(sample?.laboratory ?? "");
   const save = useSaveSample(place);
+  const [theirs, setTheirs] = useState<FluidSampleView | null>(null);
+  const { text, reading } = draft;
   const at = (pointer: string) =>
     save.error instanceof ProblemError
       ? save.error.errors.find((problem) => problem.pointer === pointer)?.detail
       : undefined;
   const isOnForm = at("#/name") !== undefined || at("#/sampledOn") !== undefined;
+  const mine: StoredSample | null =
+    test && reading.study
+      ? {
+          name: text.name.trim(),
+          sampledOn: text.sampledOn,
+          laboratory: text.laboratory.trim(),
+          separatorTest: test,
+          study: reading.study,
+        }
+      : null;
 
   function handleSave(id: string | null) {
-    if (!test) return;
+    if (!mine) return;
     save.mutate(
       {
         id,
-        version: id === null ? undefined : sample?.version,
+        version: id === null ? undefined : (draft.version ?? undefined),
         reservoirId: page.id,
-        name: name.trim(),
-        sampledOn,
-        laboratory: laboratory.trim(),
-        separatorTest: test,
+        ...mine,
       },
       {
         onSuccess: (saved) => {
+          draft.forget();
           toast({
             title: `Sample ${saved.name} is saved`,
             detail: "Estimates keep the copy they were made with.",
           });
           onSaved(saved);
         },
+        onError: (error) => setTheirs(currentOf(error)),
       },
     );
   }
 
-  const isReady = test !== null && name.trim() !== "" && sampledOn !== "";
+  const unfinished = [
+    ...reading.unfinished,
+    ...(reading.unfinished.length === 0 && !test ? ["the separator test"] : []),
+  ];
+  const isReady = mine !== null && mine.name !== "" && mine.sampledOn !== "";
   return (
-    <Section title={sample ? `Sample ${sample.name}` : "Keep it as a sample"} level={3}>
+    <Section title={sample ? `Sample ${sample.name}` : "Keep it as a sample"}>
       <form
-        className="grid gap-3"
+        className="grid max-w-3xl gap-3"
         onSubmit={(event) => {
           event.preventDefault();
           if (isReady) handleSave(sample?.id ?? null);
@@ -76,40 +93,65 @@ export function SampleForm({
             required
             maxLength={120}
             error={at("#/name")}
-            value={name}
-            onChange={(event) => setName(event.target.value)}
+            value={text.name}
+            onChange={(event) => draft.change({ name: event.target.value })}
           />
           <TextField
             label="Sampled on"
             type="date"
             required
             error={at("#/sampledOn")}
-            value={sampledOn}
-            onChange={(event) => setSampledOn(event.target.value)}
+            value={text.sampledOn}
+            onChange={(event) => draft.change({ sampledOn: event.target.value })}
           />
           <TextField
             label="Laboratory"
             maxLength={200}
-            value={laboratory}
-            onChange={(event) => setLaboratory(event.target.value)}
+            value={text.laboratory}
+            onChange={(event) => draft.change({ laboratory: event.target.value })}
           />
         </div>
-        {save.error && !isOnForm && (
+        {unfinished.length > 0 && (
+          <p className="text-13 text-ink-soft">
+            To be completed or corrected first: {unfinished.join(", ")}. Until then it is kept in
+            this tab.
+          </p>
+        )}
+        {save.error && !isOnForm && !theirs && (
           <Notice tone="error" title="The sample was not saved.">
-            {errorWords(save.error)} The sheet above is kept.
+            {errorWords(save.error)} What was typed is kept.
           </Notice>
         )}
         <div className="flex flex-wrap gap-2">
           <Button type="submit" busy={save.isPending} busyLabel="Saving…" disabled={!isReady}>
             {sample ? "Save changes" : "Save the sample"}
           </Button>
-          {sample && name.trim() !== sample.name && (
+          {sample && text.name.trim() !== sample.name && (
             <Button disabled={!isReady} onClick={() => handleSave(null)}>
               Save as another sample
             </Button>
           )}
         </div>
       </form>
+      {theirs && mine && (
+        <SampleConflict
+          mine={mine}
+          theirs={theirs}
+          onClose={() => setTheirs(null)}
+          onResolve={(merged) => {
+            draft.rebase(textOfSample(theirs), theirs.version, textOfSample(merged));
+            setTheirs(null);
+            save.reset();
+          }}
+        />
+      )}
     </Section>
   );
+}
+
+/** The other person's version, when that is why saving was refused. */
+function currentOf(error: Error): FluidSampleView | null {
+  if (!(error instanceof ProblemError) || error.status !== 412) return null;
+  const current = fluidSampleSchema.safeParse(error.current);
+  return current.success ? current.data : null;
 }

@@ -1,6 +1,7 @@
 "use client";
 
 import { keepPreviousData, useMutation, useQuery, useQueryClient } from "@tanstack/react-query";
+import type { SampleStudy } from "@/analytics/fluid/sample-study-schema";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import { request } from "@/app/_client/request";
 import { wellstreamResponseSchema } from "@/app/api/v1/calculations/schema";
@@ -41,6 +42,7 @@ export interface SampleChange {
   sampledOn: string;
   laboratory: string;
   separatorTest: SeparatorTest;
+  study: SampleStudy;
 }
 
 /** Saves a sample, new or changed, and reads the page anew. */

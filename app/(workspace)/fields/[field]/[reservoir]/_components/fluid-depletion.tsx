@@ -1,0 +1,208 @@
+"use client";
+
+import { useState } from "react";
+import { DailyRates } from "@/components/estimate/daily-rates";
+import { BalanceTable, GasTable } from "@/components/estimate/wellstream-view";
+import { CriticalBandFields } from "@/components/fluid/critical-band-fields";
+import { DepletionPanels } from "@/components/fluid/depletion-panels";
+import { DepletionSheet } from "@/components/fluid/depletion-sheet";
+import { emptyDepletion } from "@/components/fluid/depletion-text";
+import { GasCompositionChart } from "@/components/fluid/gas-composition-chart";
+import { HoffmannPlot } from "@/components/fluid/hoffmann-plot";
+import { Button } from "@/components/ui/button";
+import { Segmented } from "@/components/ui/choice";
+import { formatPercent } from "@/components/ui/format";
+import { Columns, Section, Stack } from "@/components/ui/section";
+import { Skeleton } from "@/components/ui/status";
+import { keep } from "./fluid-entry";
+import type { FluidPartProps } from "./fluid-sample";
+
+interface DepletionProps extends FluidPartProps {
+  abandonment: number | null;
+  onAbandon: (pressurePsia: number) => void;
+}
+
+/** What drops out, what is produced, and the laboratory's table that says so. */
+export function FluidDepletion(props: DepletionProps) {
+  const { study, place } = props;
+  const { depletion, equationOfState } = study;
+  const measuredGas = study.table?.rows.some(({ producedGas }) => producedGas !== null) ?? false;
+  const gasTable = measuredGas ? study.table : (equationOfState.data?.depletion ?? null);
+  const wellstream = study.wellstream.data ?? null;
+  return (
+    <div id="depletion">
+      <Stack close>
+        <Columns>
+          <Panels {...props} />
+          {gasTable && (
+            <GasCompositionChart
+              table={gasTable}
+              source={
+                measuredGas ? "laboratory" : equationOfState.data?.isTuned ? "tuned" : "untuned"
+              }
+              fileName={`${place}-produced-gas`}
+            />
+          )}
+        </Columns>
+        <TableSection {...props} />
+        <Columns kind="equal">
+          {depletion.data && depletion.data.hoffmann.length > 0 && (
+            <HoffmannPlot steps={depletion.data.hoffmann} fileName={`${place}-hoffmann`} />
+          )}
+          {wellstream && (
+            <Section
+              title={`Surface gas is ${formatPercent(wellstream.dryGasFraction, { decimals: 1 })} of the wellstream`}
+              note="Moles that come with one stock-tank barrel, as gas at 14.696 psia and 60 °F"
+            >
+              <BalanceTable wellstream={wellstream} />
+            </Section>
+          )}
+          {wellstream && (
+            <Section title="The gas in numbers">
+              <GasTable wellstream={wellstream} />
+            </Section>
+          )}
+          {wellstream && <DailyRates wellstream={wellstream} />}
+        </Columns>
+      </Stack>
+    </div>
+  );
+}
+
+function Panels({
+  study,
+  reservoir,
+  place,
+  abandonment,
+  onAbandon,
+  criticalBand,
+  setCriticalBand,
+}: DepletionProps) {
+  const { curves, table } = study;
+  const [route, setRoute] = useState<string | null>(null);
+  const curve = curves.find((candidate) => candidate.route === route) ?? curves.at(0);
+  if (!curve) {
+    return (
+      <Section title="Depletion">
+        {study.equationOfState.isFetching || study.depletion.isFetching ? (
+          <Skeleton lines={8} label="Working out the depletion" />
+        ) : (
+          <p className="text-13 text-ink-soft">
+            Appears with a composition, its separators and the reservoir temperature; a depletion
+            table of the laboratory makes it a measurement.
+          </p>
+        )}
+      </Section>
+    );
+  }
+  const { points, dewPointPsia } = curve.curve;
+  const lowest = Math.ceil(points[points.length - 1].pressurePsia);
+  // A fifth of the dew point is only where the line begins; it is there to be moved.
+  const start = Math.round(dewPointPsia / 50) * 10;
+  const at = Math.min(Math.floor(dewPointPsia), Math.max(lowest, abandonment ?? start));
+  return (
+    <div className={study.depletion.isStale || study.equationOfState.isStale ? "stale" : undefined}>
+      <DepletionPanels
+        curve={curve}
+        others={curves.filter((other) => other !== curve)}
+        measured={
+          table?.rows.filter(({ pressurePsia }) => pressurePsia <= table.dewPointPsia) ?? []
+        }
+        initialPressurePsia={reservoir?.pressurePsia ?? null}
+        criticalBand={criticalBand}
+        abandonmentPressurePsia={at}
+        onAbandon={onAbandon}
+        fileName={`${place}-depletion`}
+      />
+      <div className="mt-3 flex flex-wrap items-end gap-x-6 gap-y-2">
+        {curves.length > 1 && (
+          <div className="field">
+            <span className="field-label">Figures from</span>
+            <Segmented
+              label="Figures from"
+              value={curve.route}
+              options={curves.map(({ route: value, label }) => ({ value, label }))}
+              onChange={setRoute}
+            />
+          </div>
+        )}
+        <CriticalBandFields band={criticalBand} onChange={setCriticalBand} />
+      </div>
+    </div>
+  );
+}
+
+function TableSection({ draft, study, mayType, reservoir, remarks, setRemarks }: DepletionProps) {
+  const { text, reading } = draft;
+  const findings = study.depletion.data?.findings ?? [];
+  if (!text.depletion || !reading.depletion) {
+    if (!mayType) return null;
+    return (
+      <Section title="Depletion table">
+        <div className="flex flex-wrap items-center gap-3">
+          <Button
+            onClick={() =>
+              draft.change({
+                depletion: emptyDepletion(
+                  reservoir?.temperatureDegF ?? null,
+                  reading.separator.fields.dewPointPsia.value,
+                ),
+              })
+            }
+          >
+            Enter a depletion table
+          </Button>
+          <p className="text-13 text-ink-soft">
+            A constant-volume depletion of the laboratory: pressures, liquid, moles produced, z and
+            the produced gas.
+          </p>
+        </div>
+      </Section>
+    );
+  }
+  const { depletion } = text;
+  const worst = findings.filter(({ severity }) => severity !== "passed");
+  return (
+    <Section
+      title="Depletion table"
+      note={
+        findings.length > 0
+          ? worst.length === 0
+            ? `${findings.length} checks passed.`
+            : `${worst.length} of ${findings.length} checks ask for a look: they stand under “Does the sample hold together?”.`
+          : "Constant volume, pressures from the dew point down. Empty cells: not reported."
+      }
+      tools={
+        mayType && (
+          <button type="button" onClick={() => draft.change({ depletion: null })}>
+            Take the table out
+          </button>
+        )
+      }
+    >
+      <DepletionSheet
+        text={depletion}
+        reading={reading.depletion}
+        state={{ problems: study.problems.depletion, remarks: remarks.depletion }}
+        flaggedRows={
+          new Set(
+            worst.flatMap(({ row }) =>
+              row === null ? [] : [reading.depletion?.rowsOfTable[row] ?? row],
+            ),
+          )
+        }
+        onChange={
+          mayType
+            ? (next) => {
+                draft.change({ depletion: next });
+                setRemarks({
+                  ...remarks,
+                  depletion: keep(remarks.depletion, depletion.cells, next.cells),
+                });
+              }
+            : undefined
+        }
+      />
+    </Section>
+  );
+}

@@ -1,0 +1,294 @@
+"use client";
+
+import { ChartFrame, type ChartCell } from "@/components/charts/chart-frame";
+import { Plot, PlotDot, PlotLabel } from "@/components/charts/plot";
+import { linePath, positionOn, ticksOf, type Scale } from "@/components/charts/scale";
+import { Figure } from "@/components/ui/figure";
+import { formatFigure, MISSING } from "@/components/ui/format";
+import { Flag, Unit } from "@/components/ui/text";
+import { AbandonmentLine } from "./abandonment-line";
+import type { AvailableCurve } from "./available-curves";
+import { curveAt, gainPer100Psi, mostLiquid, revaporised } from "./curve-reading";
+import { roundScale, yTicksOf } from "./plot-scale";
+
+export interface DepletionPanelsProps {
+  /** what the read-outs stand on */
+  curve: AvailableCurve;
+  /** drawn thin beside it */
+  others: readonly AvailableCurve[];
+  /** measured liquid, per cent of the cell; drawn as squares */
+  measured: readonly { pressurePsia: number; liquidPercent: number | null }[];
+  initialPressurePsia: number | null;
+  /** liquid below this stays where it is, per cent of pore space */
+  criticalBand: { low: number; high: number };
+  abandonmentPressurePsia: number;
+  onAbandon: (pressurePsia: number) => void;
+  fileName: string;
+}
+
+const LEFT = 46;
+const psia = (value: number) => formatFigure(value, { digits: 4 });
+
+/** Liquid in the pores over the producing yield, on one pressure axis, with the end of production drawn through both. */
+export function DepletionPanels(props: DepletionPanelsProps) {
+  const { curve, measured, fileName, initialPressurePsia } = props;
+  const { points } = curve.curve;
+  const most = mostLiquid(curve.curve);
+  const back = revaporised(curve.curve);
+  const leastYield = Math.min(...points.map((point) => point.producingYieldStbPerMmscf));
+  const isUntuned = curve.route === "untunedEquationOfState";
+  const hasLiquid = most.liquidSaturation > 0;
+  const lead = isUntuned ? "Untuned: liquid" : "Liquid";
+  return (
+    <div className="depletion-panels">
+      <ChartFrame
+        title={
+          hasLiquid
+            ? `${lead} takes up to ${formatFigure(most.liquidSaturation * 100)} % of the pores; the yield falls from ${formatFigure(points[0].producingYieldStbPerMmscf)} to ${formatFigure(leastYield)} STB/MMscf`
+            : `The yield falls from ${formatFigure(points[0].producingYieldStbPerMmscf)} to ${formatFigure(leastYield)} STB/MMscf`
+        }
+        note={
+          <>
+            {isUntuned && <Flag icon="warning">Untuned</Flag>} {curve.note}{" "}
+            {measured.length > 0 && "Squares: measured by the laboratory. "}
+            {back !== null &&
+              `Below ${psia(most.pressurePsia)} psia ${formatFigure(back * 100, { digits: 2 })} points of it turn to vapour again. `}
+            Shaded: critical saturation; liquid below it stays in the rock. Drag the line, or use
+            the arrow keys.
+          </>
+        }
+        fileName={fileName}
+        data={{
+          columns: [
+            { label: "Pressure", unit: "psia" },
+            { label: "Liquid in the pores", unit: "%" },
+            { label: "Measured liquid", unit: "%" },
+            { label: "Producing yield", unit: "STB/MMscf" },
+            { label: "Condensate produced", unit: "% of that at the dew point" },
+            { label: "Gas produced", unit: "% of that at the dew point" },
+            { label: "Condensate left in the gas", unit: "% of that at the dew point" },
+          ],
+          rows: points.map((point): ChartCell[] => [
+            point.pressurePsia,
+            point.liquidSaturation * 100,
+            measured.find(({ pressurePsia }) => Math.abs(pressurePsia - point.pressurePsia) < 0.5)
+              ?.liquidPercent ?? null,
+            point.producingYieldStbPerMmscf,
+            point.condensateProduced * 100,
+            point.gasProduced * 100,
+            point.condensateInGas * 100,
+          ]),
+        }}
+      >
+        <Panels {...props} />
+      </ChartFrame>
+      <ReadOuts {...props} />
+      {initialPressurePsia !== null && initialPressurePsia < curve.curve.dewPointPsia && (
+        <p className="mt-2 text-12 text-ink-soft">
+          Initial pressure {psia(initialPressurePsia)} psia lies below the dew point{" "}
+          {psia(curve.curve.dewPointPsia)}: the figures count from the dew point.
+        </p>
+      )}
+    </div>
+  );
+}
+
+function Panels({
+  curve,
+  others,
+  measured,
+  initialPressurePsia,
+  criticalBand,
+  abandonmentPressurePsia,
+  onAbandon,
+}: DepletionPanelsProps) {
+  const { points, dewPointPsia } = curve.curve;
+  const x = roundScale([0, Math.max(dewPointPsia * 1.06, initialPressurePsia ?? 0)], { count: 6 });
+  const liquid = roundScale(
+    [
+      ...[curve, ...others].flatMap((shown) =>
+        shown.curve.points.map((point) => point.liquidSaturation * 100),
+      ),
+      ...measured.map(({ liquidPercent }) => liquidPercent ?? 0),
+      criticalBand.high * 1.15,
+    ],
+    { count: 4, least: 5 },
+  );
+  const yields = roundScale(
+    [curve, ...others].flatMap((shown) =>
+      shown.curve.points.map((point) => point.producingYieldStbPerMmscf),
+    ),
+    { count: 4 },
+  );
+  const state = curveAt(curve.curve, abandonmentPressurePsia);
+  const dewX = positionOn(x, dewPointPsia);
+  const most = mostLiquid(curve.curve);
+  const draw = (of: AvailableCurve, y: Scale, read: (point: (typeof points)[number]) => number) =>
+    linePath([
+      [100, 100 - positionOn(y, read(of.curve.points[0]))],
+      ...of.curve.points.map(
+        (point) => [positionOn(x, point.pressurePsia), 100 - positionOn(y, read(point))] as const,
+      ),
+    ]);
+  const look = (of: AvailableCurve, isMain: boolean) =>
+    [
+      isMain ? "line" : "line-soft line-thin",
+      of.route === "untunedEquationOfState" && "line-dashed",
+    ]
+      .filter(Boolean)
+      .join(" ");
+  const saturation = (point: (typeof points)[number]) => point.liquidSaturation * 100;
+  const producing = (point: (typeof points)[number]) => point.producingYieldStbPerMmscf;
+  const bandTop = 100 - positionOn(liquid, criticalBand.high);
+  const bandBottom = 100 - positionOn(liquid, criticalBand.low);
+  const mostAt = {
+    x: positionOn(x, most.pressurePsia),
+    y: 100 - positionOn(liquid, most.liquidSaturation * 100),
+  };
+  const dewRule = (
+    <line className="line-soft line-thin line-dashed" x1={dewX} x2={dewX} y1="0" y2="100" />
+  );
+
+  return (
+    <div className="panels-and-line">
+      <Plot
+        label={`Liquid in the pores against pressure, largest ${formatFigure(most.liquidSaturation * 100)} % at ${psia(most.pressurePsia)} psia; dew point ${psia(dewPointPsia)} psia; critical saturation ${formatFigure(criticalBand.low, { digits: 2 })} to ${formatFigure(criticalBand.high, { digits: 2 })} %.`}
+        height={180}
+        left={LEFT}
+        tone="rock"
+        yTitle="Liquid in the pores, % of pore space"
+        yTicks={yTicksOf(liquid, 4, " %")}
+        shapes={
+          <>
+            <rect className="area" x="0" width="100" y={bandTop} height={bandBottom - bandTop} />
+            {others.map((other) => (
+              <path
+                key={other.route}
+                className={look(other, false)}
+                d={draw(other, liquid, saturation)}
+              />
+            ))}
+            <path className={look(curve, true)} d={draw(curve, liquid, saturation)} />
+            {dewRule}
+          </>
+        }
+      >
+        <PlotLabel x={4} y={(bandTop + bandBottom) / 2} anchor="start" soft>
+          Critical saturation
+        </PlotLabel>
+        <PlotLabel x={dewX} y={7} anchor={dewX > 80 ? "end" : "start"} dx={dewX > 80 ? -6 : 6} soft>
+          Dew point {psia(dewPointPsia)}
+        </PlotLabel>
+        {measured.map(
+          ({ pressurePsia, liquidPercent }) =>
+            liquidPercent !== null && (
+              <PlotDot
+                key={pressurePsia}
+                x={positionOn(x, pressurePsia)}
+                y={100 - positionOn(liquid, liquidPercent)}
+                shape="square"
+              />
+            ),
+        )}
+        {most.liquidSaturation > 0 && (
+          <PlotLabel {...mostAt} anchor="above" dy={-7} toned>
+            <b>Most liquid</b> {formatFigure(most.liquidSaturation * 100)} % at{" "}
+            {psia(most.pressurePsia)} psia
+          </PlotLabel>
+        )}
+      </Plot>
+      <Plot
+        label={`Produced condensate yield against pressure, ${formatFigure(points[0].producingYieldStbPerMmscf)} at the dew point, ${formatFigure(points[points.length - 1].producingYieldStbPerMmscf)} at ${psia(points[points.length - 1].pressurePsia)} psia.`}
+        height={150}
+        left={LEFT}
+        tone="condensate"
+        yTitle="Produced yield, STB/MMscf of surface gas"
+        xTitle="Reservoir pressure, psia"
+        yTicks={yTicksOf(yields, 4)}
+        xTicks={ticksOf(x, 6)}
+        shapes={
+          <>
+            {others.map((other) => (
+              <path
+                key={other.route}
+                className={look(other, false)}
+                d={draw(other, yields, producing)}
+              />
+            ))}
+            <path className={look(curve, true)} d={draw(curve, yields, producing)} />
+            {dewRule}
+          </>
+        }
+      >
+        <PlotLabel
+          x={(dewX + 100) / 2}
+          y={100 - positionOn(yields, points[0].producingYieldStbPerMmscf)}
+          dy={13}
+          toned
+        >
+          <b>{formatFigure(points[0].producingYieldStbPerMmscf)}</b>
+        </PlotLabel>
+      </Plot>
+      <AbandonmentLine
+        pressurePsia={abandonmentPressurePsia}
+        scale={x}
+        left={LEFT}
+        lowest={Math.ceil(points[points.length - 1].pressurePsia)}
+        highest={Math.floor(dewPointPsia)}
+        describe={
+          state
+            ? `${formatFigure(state.condensateProduced * 100)} % of the condensate at the dew point reaches the tank, liquid in the pores ${formatFigure(state.liquidSaturation * 100)} %`
+            : ""
+        }
+        onChange={onAbandon}
+      />
+    </div>
+  );
+}
+
+/** What abandoning at the line brings. */
+function ReadOuts({ curve, abandonmentPressurePsia }: DepletionPanelsProps) {
+  const state = curveAt(curve.curve, abandonmentPressurePsia);
+  const gain = gainPer100Psi(curve.curve, abandonmentPressurePsia);
+  const figures = [
+    {
+      label: "Liquid in the pores",
+      value: state && state.liquidSaturation * 100,
+      unit: "%",
+    },
+    {
+      label: "Yield at that pressure",
+      value: state && state.producingYieldStbPerMmscf,
+      unit: "STB/MMscf",
+    },
+    {
+      label: "Condensate to the tank",
+      value: state && state.condensateProduced * 100,
+      unit: "% of that at the dew point",
+    },
+    {
+      label: "Left in the rock",
+      value: state && (1 - state.condensateProduced - state.condensateInGas) * 100,
+      unit: "%",
+    },
+    {
+      label: "Per 100 psi lower",
+      value: gain && gain * 100,
+      unit: "points",
+      signed: true,
+    },
+  ];
+  return (
+    <dl className="read-outs" aria-live="polite">
+      {figures.map(({ label, value, unit, signed }) => (
+        <div key={label}>
+          <dt>{label}</dt>
+          <dd>
+            {value === null ? MISSING : <Figure value={value} signed={signed} />}{" "}
+            <Unit>{unit}</Unit>
+          </dd>
+        </div>
+      ))}
+    </dl>
+  );
+}

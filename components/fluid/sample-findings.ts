@@ -1,0 +1,145 @@
+import type {
+  CompositionResponse,
+  DepletionResponse,
+  EquationOfStateResponse,
+} from "@/app/api/v1/calculations/fluid-schema";
+import type { WellstreamResponse } from "@/app/api/v1/calculations/schema";
+import type { SampleStudy } from "@/analytics/fluid/sample-study-schema";
+import type { Finding } from "@/components/estimate/finding-list";
+import { formatFigure } from "@/components/ui/format";
+import type { AvailableCurve } from "./available-curves";
+import { mostLiquid } from "./curve-reading";
+
+/** Two roads to one gravity may differ by this much before somebody should look; common practice, no source. */
+const GRAVITY_TOLERANCE = 0.02;
+/** A computed dew point this far from the measured one is a miss worth naming, psi. */
+const DEW_POINT_TOLERANCE_PSI = 50;
+/** Dew points of two sheets of one sample agree to this share. */
+const SAME_DEW_POINT = 0.005;
+
+export interface SampleEvidence {
+  wellstream: WellstreamResponse | null;
+  composition: CompositionResponse | null;
+  equationOfState: EquationOfStateResponse | null;
+  depletion: DepletionResponse | null;
+  curve: AvailableCurve | null;
+  tuning: SampleStudy["tuning"];
+  /** of the separator sheet, and of the depletion table */
+  dewPoints: { test: number | null; table: number | null };
+  /** per cent of pore space */
+  criticalBand: { low: number; high: number };
+}
+
+const tones = { passed: "done", warning: "warning", failed: "caution" } as const;
+
+/** What the parts of a sample say about each other, as far as they exist. */
+export function sampleFindings(evidence: SampleEvidence): Finding[] {
+  return [
+    ...gravities(evidence),
+    ...dewPoints(evidence),
+    ...tuningAge(evidence),
+    ...yields(evidence),
+    ...(evidence.depletion?.findings ?? []).map(
+      ({ severity, title, message }): Finding => ({
+        tone: tones[severity],
+        title,
+        text: message,
+      }),
+    ),
+    ...band(evidence),
+    ...[
+      ...(evidence.composition?.warnings ?? []),
+      ...(evidence.equationOfState?.warnings ?? []),
+      ...(evidence.depletion?.warnings ?? []),
+    ]
+      .filter(
+        ({ message }, index, all) => all.findIndex((other) => other.message === message) === index,
+      )
+      .map(
+        ({ severity, message }): Finding => ({
+          tone: severity === "caution" ? "caution" : "warning",
+          text: message,
+        }),
+      ),
+  ];
+}
+
+function gravities({ wellstream, composition }: SampleEvidence): Finding[] {
+  if (!wellstream || !composition) return [];
+  const [test, sheet] = [wellstream.wellstreamGravity, composition.gravity];
+  const apart = Math.abs(sheet - test) / test;
+  return [
+    {
+      tone: apart <= GRAVITY_TOLERANCE ? "done" : "warning",
+      title: "Two roads to one gravity",
+      text: `Separator test ${formatFigure(test, { digits: 4 })}, composition ${formatFigure(sheet, { digits: 4 })}: apart by ${formatFigure(apart * 100, { digits: 2 })} %.`,
+    },
+  ];
+}
+
+function dewPoints({ equationOfState, dewPoints: { test, table } }: SampleEvidence): Finding[] {
+  const findings: Finding[] = [];
+  if (test !== null && table !== null && Math.abs(test - table) / table > SAME_DEW_POINT) {
+    findings.push({
+      tone: "warning",
+      title: "Two dew points",
+      text: `The separator sheet says ${formatFigure(test, { digits: 4 })} psia, the depletion table ${formatFigure(table, { digits: 4 })} psia. The table’s is used.`,
+    });
+  }
+  const mismatch = equationOfState?.saturation.mismatchPsia ?? null;
+  if (equationOfState && mismatch !== null) {
+    findings.push({
+      tone: Math.abs(mismatch) <= DEW_POINT_TOLERANCE_PSI ? "done" : "warning",
+      title: equationOfState.isTuned
+        ? "Dew point of the tuned equation of state"
+        : "Dew point of the untuned equation of state",
+      text: `${formatFigure(equationOfState.saturation.upperPsia, { digits: 4 })} psia: ${formatFigure(Math.abs(mismatch))} psi ${mismatch > 0 ? "above" : "below"} the measured one.`,
+    });
+  }
+  return findings;
+}
+
+function tuningAge({ tuning, dewPoints: { test, table } }: SampleEvidence): Finding[] {
+  const measured = table ?? test;
+  if (!tuning || measured === null || Math.abs(tuning.measuredDewPointPsia - measured) < 0.5) {
+    return [];
+  }
+  return [
+    {
+      tone: "warning",
+      title: "Tuned to another dew point",
+      text: `The fit was made to ${formatFigure(tuning.measuredDewPointPsia, { digits: 4 })} psia; the sheet now says ${formatFigure(measured, { digits: 4 })} psia. Run the tuning again.`,
+    },
+  ];
+}
+
+function yields({ wellstream, equationOfState }: SampleEvidence): Finding[] {
+  if (!wellstream || !equationOfState) return [];
+  const measured = wellstream.condensateYieldStbPerMmscf;
+  const computed = equationOfState.train.condensateYieldStbPerMmscf;
+  const apart = Math.abs(computed - measured) / measured;
+  return [
+    {
+      tone: apart <= 0.05 ? "done" : "warning",
+      title: "Separator test against flash",
+      text: `Measured ${formatFigure(measured)} STB/MMscf, flashed ${formatFigure(computed)}: apart by ${formatFigure(apart * 100, { digits: 2 })} %.`,
+    },
+  ];
+}
+
+function band({ curve, criticalBand }: SampleEvidence): Finding[] {
+  if (!curve) return [];
+  const most = mostLiquid(curve.curve);
+  const percent = most.liquidSaturation * 100;
+  if (percent <= criticalBand.low) return [];
+  const isOver = percent > criticalBand.high;
+  return [
+    {
+      tone: "warning",
+      title: isOver
+        ? "Dropout passes the critical saturation"
+        : "Dropout reaches into the critical band",
+      text: `${formatFigure(percent)} % at ${formatFigure(most.pressurePsia, { digits: 4 })} psia, band ${formatFigure(criticalBand.low, { digits: 2 })} to ${formatFigure(criticalBand.high, { digits: 2 })} %: ${isOver ? "some" : "some perhaps"} of it may flow, while these figures leave all of it in the rock.`,
+    },
+  ];
+}
