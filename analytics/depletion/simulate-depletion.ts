@@ -4,7 +4,7 @@ import { DomainError } from "../errors";
 import { Flasher } from "../equation-of-state/flash";
 import type { Characterised } from "../equation-of-state/mixture";
 import { PengRobinson } from "../equation-of-state/peng-robinson";
-import { saturationPressures } from "../equation-of-state/saturation";
+import { upperSaturation } from "../equation-of-state/saturation";
 import { gasViscosityCp } from "../gas/viscosity";
 import { CUBIC_FEET_PER_BARREL, degreesRankine, GAS_CONSTANT } from "../units/conversions";
 import {
@@ -57,7 +57,7 @@ export function defaultPressuresPsia(dewPointPsia: number): number[] {
 }
 
 function upperDewPoint({ mixture, moleFractions }: Characterised, temperatureDegF: number): number {
-  const { upper } = saturationPressures(mixture, moleFractions, degreesRankine(temperatureDegF));
+  const upper = upperSaturation(mixture, moleFractions, degreesRankine(temperatureDegF));
   if (upper === null) {
     throw new DomainError(
       `The fluid has no dew point at ${temperatureDegF} °F: it stays a gas at every pressure, and drops no liquid in the reservoir`,

@@ -29,6 +29,8 @@ const HIGHEST_PSIA = 20_000;
 const LOWEST_PSIA = 10;
 const LN_STEP = 0.16;
 const LN_TOLERANCE = 1e-10;
+/** How far outside a saturation pressure the fluid is looked at again. */
+const LN_CLEARANCE = 1e-7;
 const MAXIMUM_ITERATIONS = 100;
 const UNSTABLE = -1e-11;
 
@@ -48,15 +50,33 @@ export function saturationPressures(
   z: Float64Array,
   temperatureDegR: number,
 ): SaturationPressures {
-  const feed = new Float64Array(mixture.names.length);
-  normaliseFeed(z, feed);
-  const equation = new PengRobinson(mixture);
-  equation.setTemperature(temperatureDegR);
-  const search = new Search(equation, feed);
+  const search = searchOf(mixture, z, temperatureDegR);
   const found = search.upper();
   return found
     ? { upper: found.point, lower: search.lower(found.lnUnstable) }
     : { upper: null, lower: null };
+}
+
+/**
+ * The upper one of `saturationPressures` by itself, for those who have no use for the lower: with very heavy ends that
+ * lies at pressures where nothing converges.
+ *
+ * @throws {DomainError | ConvergenceError} as `saturationPressures`
+ */
+export function upperSaturation(
+  mixture: Mixture,
+  z: Float64Array,
+  temperatureDegR: number,
+): SaturationPoint | null {
+  return searchOf(mixture, z, temperatureDegR).upper()?.point ?? null;
+}
+
+function searchOf(mixture: Mixture, z: Float64Array, temperatureDegR: number): Search {
+  const feed = new Float64Array(mixture.names.length);
+  normaliseFeed(z, feed);
+  const equation = new PengRobinson(mixture);
+  equation.setTemperature(temperatureDegR);
+  return new Search(equation, feed);
 }
 
 class Search {
@@ -154,23 +174,35 @@ class Search {
 
   private pointBetween(unstable: number, stable: number): SaturationPoint {
     const { equation, stability, z } = this;
-    const { lnP, phase } = this.root(unstable, stable);
+    const { lnP, lnRatio } = this.root(unstable, stable);
     const pressurePsia = Math.exp(lnP);
-    const incipient = z.map((fraction, i) => fraction * Math.exp(phase.lnRatio[i]));
+    const incipient = z.map((fraction, i) => fraction * Math.exp(lnRatio[i]));
     const total = incipient.reduce((sum, fraction) => sum + fraction, 0);
     for (let i = 0; i < incipient.length; i += 1) incipient[i] /= total;
-    const density = (x: Float64Array, zFactor: number) =>
-      x.reduce((sum, fraction, i) => sum + fraction * equation.mixture.molecularWeight[i], 0) /
-      equation.molarVolume(x, pressurePsia, zFactor);
-    const isDenser = density(incipient, phase.z) > density(z, stability.feed.z);
+    const density = (x: Float64Array) => {
+      equation.evaluate(x, pressurePsia, "stable", stability.feed);
+      const mass = x.reduce(
+        (sum, share, i) => sum + share * equation.mixture.molecularWeight[i],
+        0,
+      );
+      return mass / equation.molarVolume(x, pressurePsia, stability.feed.z);
+    };
+    const isDenser = density(incipient) > density(z);
     return { pressurePsia, kind: isDenser ? "dewPoint" : "bubblePoint", incipient };
   }
 
   /**
    * ln p at which the distance of the trial that is unstable is zero: Newton's method, with bisection when a step
-   * leaves the bracket or the trial is lost to the feed. Ends on the unstable side, so that the trial phase is there.
+   * leaves the bracket or the trial is lost to the feed.
    */
-  private root(unstable: number, stable: number): { lnP: number; phase: TrialPhase } {
+  private root(unstable: number, stable: number): { lnP: number; lnRatio: Float64Array } {
+    const found = this.rootOfNearest(unstable, stable);
+    // Next to the critical point both trials are unstable, and the other one may be so farther out.
+    const outward = found.lnP + Math.sign(stable - unstable) * LN_CLEARANCE;
+    return this.distance(outward) < UNSTABLE ? this.root(outward, stable) : found;
+  }
+
+  private rootOfNearest(unstable: number, stable: number): { lnP: number; lnRatio: Float64Array } {
     const { equation, stability, z } = this;
     let inside = unstable;
     let outside = stable;
@@ -188,15 +220,14 @@ class Search {
       if (!phase.trivial) {
         kept.set(phase.lnRatio);
         next = lnP - phase.distance / stability.distanceSlope(z, pressurePsia);
-        if (Math.abs(next - lnP) < LN_TOLERANCE) return { lnP: next, phase };
+        if (Math.abs(next - lnP) < LN_TOLERANCE) return { lnP: next, lnRatio: kept };
       }
       if (!phase.trivial && phase.distance < 0) inside = lnP;
       else outside = lnP;
       const isBetween = (next - inside) * (next - outside) < 0;
       lnP = isBetween ? next : 0.5 * (inside + outside);
       if (Math.abs(outside - inside) < LN_TOLERANCE) {
-        phase.lnRatio.set(kept);
-        return { lnP: inside, phase };
+        return { lnP: inside, lnRatio: kept };
       }
     }
     throw this.failure(Math.exp(lnP));

@@ -1,5 +1,6 @@
 import fc from "fast-check";
 import { describe, expect, it } from "vitest";
+import { readStream } from "@/analytics/composition/read-sheet";
 import { checkTable } from "@/analytics/depletion/check-table";
 import { depletionTableSchema } from "@/analytics/depletion/depletion-table-schema";
 import {
@@ -160,6 +161,38 @@ describe("depleteCell", () => {
       ),
       { numRuns: 40 },
     );
+  });
+
+  it("depletes a gas with an end so heavy that its lower dew point is next to vacuum", () => {
+    const { stream } = readStream({
+      light: {
+        H2S: 3.52,
+        CO2: 3.95,
+        N2: 1.91,
+        C1: 72.09,
+        C2: 7.13,
+        C3: 4.46,
+        iC4: 0.66,
+        nC4: 2.21,
+        iC5: 0.8,
+        nC5: 0.49,
+        C6: 0.58,
+      },
+      carbonNumbers: [],
+      plus: {
+        carbonNumber: 7,
+        molePercent: 2.2,
+        molecularWeight: 161.2,
+        specificGravity: 0.779,
+      },
+    });
+    const fluid = characterise(stream, {
+      ...whole,
+      split: { kind: "gamma", fractions: 5, shape: 0.769 },
+    });
+    const { steps } = depleteCell(fluid, 152.3, null);
+    expect(steps).toHaveLength(13);
+    expect(Math.max(...steps.map(({ liquidFraction }) => liquidFraction))).toBeGreaterThan(0.02);
   });
 
   it("refuses a temperature at which there is no dew point, and says what the fluid is", () => {
