@@ -83,7 +83,7 @@ describe("depleteCell", () => {
       [9.6102, 24.8624, 41.6471, 59.0913, 73.5629],
       0.001,
     ],
-    // 0.2 %: the density of water behind the volume shift differs in the fifth digit
+    // 0.2 %: its figures are printed to four digits, from the correlations on
     [
       "untuned whole",
       depleteCell(characterise(studyStream, whole), 200, pressures(reference.untunedWhole)),
