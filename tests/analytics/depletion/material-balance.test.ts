@@ -3,7 +3,7 @@ import { describe, expect, it } from "vitest";
 import { cellRows } from "@/analytics/depletion/cell-rows";
 import { lumpStream } from "@/analytics/depletion/lumped-gas";
 import { balanceCell } from "@/analytics/depletion/material-balance";
-import { rayesTwoPhaseZ, twoPhaseZFromMoles } from "@/analytics/depletion/two-phase-z";
+import { twoPhaseZFromMoles } from "@/analytics/depletion/two-phase-z";
 import { DomainError } from "@/analytics/errors";
 import { studyStream, studyTable } from "./third-comparative-study";
 
@@ -36,22 +36,6 @@ describe("twoPhaseZFromMoles", () => {
     [1000, 0.1, 3442.7, 0],
   ])("refuses %d psia, %d produced, a dew point of %d psia with z %d", (p, n, pd, zd) => {
     expect(() => twoPhaseZFromMoles(p, n, { pressurePsia: pd, gasZ: zd })).toThrow(DomainError);
-  });
-});
-
-describe("rayesTwoPhaseZ", () => {
-  it("answers its example", () => {
-    expect(rayesTwoPhaseZ(5, 1.5)).toBeCloseTo(0.821552, 6);
-  });
-
-  it.each([
-    [0.6, 1.5],
-    [21, 1.5],
-    [5, 1.05],
-    [5, 2.2],
-    [NaN, 1.5],
-  ])("refuses a reduced state of %d and %d, outside the data of its authors", (p, t) => {
-    expect(() => rayesTwoPhaseZ(p, t)).toThrow(DomainError);
   });
 });
 
