@@ -90,7 +90,7 @@ const compositions: MethodGroup = {
       source: "Arithmetic",
       range:
         "Totals of 95 to 105 %; warns beyond 99 to 101 %. Negative figures, gaps in carbon numbers and impossible heptanes plus are refused with the cell.",
-      error: exact("Exact."),
+      error: exact("The sheet's own."),
       usedIn: "Fluid, calculations on compositions",
     },
     {
@@ -483,7 +483,7 @@ const portfolio: MethodGroup = {
       gives: "Figures times the chance of commerciality.",
       source: "Expectation, trial by trial",
       range: "The mean is exact; the chance of nothing is not in the range, and screens say so.",
-      error: exact("Exact for the mean."),
+      error: exact("The mean is exact."),
       usedIn: "Portfolio, fields, when the basis is risked",
     },
     {
@@ -491,7 +491,7 @@ const portfolio: MethodGroup = {
       gives: "What a field's recoverable condensate would fetch.",
       source: "Volume times the deck's realised price",
       range: "Flat, real, undiscounted, before cost and tax.",
-      error: exact("Exact on its deck."),
+      error: exact("That of the deck and of the volumes."),
       usedIn: "Fields, portfolio, exports",
     },
   ],
@@ -508,7 +508,7 @@ const conditions: MethodGroup = {
       source:
         "ISO 13443; exact factors of the international yard and pound (1959) and the SI (2019)",
       range: "14.65, 14.696, 14.73, 15.025 psia at 60 °F; 101.325 kPa at 15 °C.",
-      error: exact("Exact."),
+      error: exact("Exact factors."),
       usedIn: "Everywhere",
     },
     {

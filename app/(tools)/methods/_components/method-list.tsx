@@ -3,10 +3,10 @@ import type { EvidenceKind, Method, MethodGroup } from "./catalogue";
 
 /** How an error is known, before what it is. */
 const evidenceWords: Record<EvidenceKind, string> = {
-  exact: "Exact",
-  stated: "As published",
-  measured: "Measured",
-  unknown: "Not known",
+  exact: "none of its own",
+  stated: "as published",
+  measured: "as measured",
+  unknown: "not known",
 };
 
 /** One group of methods: names at the left, what there is to know of each beside them. */
@@ -33,7 +33,7 @@ function MethodEntry({ method }: { method: Method }) {
       <dl className="grid grid-cols-1 gap-x-8 gap-y-2 sm:grid-cols-2">
         <Fact term="Source">{source}</Fact>
         <Fact term="Valid">{range}</Fact>
-        <Fact term={`Error: ${evidenceWords[error.kind].toLowerCase()}`}>{error.text}</Fact>
+        <Fact term={`Error: ${evidenceWords[error.kind]}`}>{error.text}</Fact>
         <Fact term="Used in">{usedIn}</Fact>
       </dl>
     </article>
