@@ -51,6 +51,8 @@ const GAS_LIQUID_RATIO: Range = {
   usual: [2_500, 200_000],
   possible: [200, 10_000_000],
 };
+/** hexanes without heptanes plus from which something is missing: common practice, no source */
+const NOTICEABLE_HEXANES_PERCENT = 0.2;
 /** Watson factor of heptanes plus by M and specific gravity; aromatic below, beyond pure paraffins above */
 const USUAL_WATSON = [11, 12.9] as const;
 
@@ -125,7 +127,11 @@ export function checkPlausibility(
       { input: lightPath, value: nonHydrocarbons },
     );
   }
-  if (!stream.heptanesPlus) return warnings;
+  if (!stream.heptanesPlus) {
+    return role === "wellstream"
+      ? [...warnings, ...missingHeptanesPlus(stream, plusPath)]
+      : warnings;
+  }
   warnings.push(...checkPlusEnd(heavyComponents(stream.components), plusPath));
   const { molecularWeight, specificGravity, moleFraction } = stream.heptanesPlus;
   warnings.push(
@@ -155,6 +161,22 @@ export function checkPlausibility(
     });
   }
   return warnings;
+}
+
+/** A wellstream does not end at the hexanes: what is heavier was left out, or is hidden in them. */
+function missingHeptanesPlus({ components }: Stream, input: string): Warning[] {
+  const hexanes = 100 * (components.find(({ name }) => name === "C6")?.moleFraction ?? 0);
+  if (!(hexanes > NOTICEABLE_HEXANES_PERCENT)) return [];
+  return [
+    {
+      code: "heptanes_plus_missing",
+      severity: "warning",
+      input,
+      message:
+        `The wellstream holds ${Number(hexanes.toPrecision(3))} mol % hexanes and no heptanes plus. If the sheet ends ` +
+        "at C6+, dew point and yield will be too low; ask for heptanes plus with its molecular weight and gravity.",
+    },
+  ];
 }
 
 /** A plus fraction beyond C7+ is heavier and denser than the carbon number before it. */

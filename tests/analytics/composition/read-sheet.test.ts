@@ -104,6 +104,14 @@ describe("readStream", () => {
     expect(readStream(oil, "liquid", "liquid").warnings).toEqual([]);
   });
 
+  it("asks for heptanes plus where a wellstream ends at the hexanes", () => {
+    const light = { C1: 95, C2: 4, C6: 1 };
+    expect(readStream({ ...drySheet, light }).warnings).toMatchObject([
+      { code: "heptanes_plus_missing", input: "stream.plus" },
+    ]);
+    expect(readStream({ ...drySheet, light }, "gas", "gas").warnings).toEqual([]);
+  });
+
   it("cautions about hydrogen sulphide", () => {
     const { warnings } = readStream({ ...drySheet, light: { C1: 93, C2: 5, H2S: 2 } });
     expect(warnings).toMatchObject([{ code: "sour_gas", severity: "caution" }]);
