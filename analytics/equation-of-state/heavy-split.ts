@@ -8,6 +8,8 @@ import { ConvergenceError, DomainError } from "../errors";
 const SOREIDE = { base: 0.2855, origin: 66, exponent: 0.13 } as const;
 /** Least distance of the mean molecular weight from the smallest one of the distribution, lb/lbmol. */
 const LEAST_SPREAD = 4;
+/** Beyond it no correlation says anything about a fraction, lb/lbmol. */
+const LARGEST_MOLECULAR_WEIGHT = 2000;
 
 /**
  * Smallest molecular weight of the gamma distribution that goes with its shape.
@@ -92,7 +94,8 @@ function bisect(value: (x: number) => number, from: number, to: number): number 
  * @param whole      its mole fraction, molecular weight and specific gravity
  * @param fractions  2 to 5
  * @param shape      0.5 to 2.5; condensates have 0.5 to 1.5
- * @throws {DomainError} when the molecular weight leaves no room above the smallest one
+ * @throws {DomainError} when the molecular weight leaves no room above the smallest one, or a fraction would be heavier
+ *   than 2,000
  * @throws {ConvergenceError} when no distribution of specific gravity has this bulk value
  * @example gammaSplit({ moleFraction: 0.0659, molecularWeight: 140, specificGravity: 0.774 }, 3, 1)
  *   // => moleFraction 0.046861, 0.018354, 0.000685
@@ -110,6 +113,14 @@ export function gammaSplit(whole: HeptanesPlus, fractions: number, shape: number
   const scale = (whole.molecularWeight - smallest) / shape;
   const { nodes, weights } = gaussLaguerre(fractions, shape);
   const molecularWeights = nodes.map((node) => smallest + scale * node);
+  const heaviest = molecularWeights[fractions - 1];
+  if (!(heaviest <= LARGEST_MOLECULAR_WEIGHT)) {
+    throw new DomainError(
+      `${fractions} fractions of this shape put the heaviest at a molecular weight of ${Math.round(heaviest)}, where ` +
+        "nothing is known of its properties. Take fewer fractions, or raise the shape.",
+      { input: "characterisation.split", value: heaviest },
+    );
+  }
   const factor = gravityFactor(whole, molecularWeights, weights);
   return molecularWeights.map((molecularWeight, index) => ({
     moleFraction: whole.moleFraction * weights[index],
