@@ -73,7 +73,7 @@ describe("gammaSplit", () => {
       fc.property(
         fc.integer({ min: 2, max: 5 }),
         fc.double({ min: 0.5, max: 2.5, noNaN: true }),
-        fc.double({ min: 105, max: 200, noNaN: true }),
+        fc.double({ min: 105, max: 170, noNaN: true }),
         fc.double({ min: 0.72, max: 0.86, noNaN: true }),
         (count, shape, molecularWeight, specificGravity) => {
           const fractions = gammaSplit(
