@@ -1,7 +1,7 @@
 import { LedgerTable } from "@/components/ui/table";
 import type { RecoveryPlan } from "@/analytics/recovery/recovery-plan-schema";
 import { RouteFlag } from "./route-flag";
-import { planInWords } from "./plan-words";
+import { isWeakRoute, planInWords } from "./plan-words";
 import { planDifferences } from "./differences";
 
 /** How recoveries came about and how they do now, in words; a plan that stands as it stood is told in a line. */

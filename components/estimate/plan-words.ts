@@ -34,6 +34,14 @@ export const routeLabels: Record<RecoveryRoute, string> = {
 export const isWeakRoute = (route: RecoveryRoute) =>
   route === "untunedEquationOfState" || route === "correlation";
 
+/** The word that goes with a figure of a weak route; `null` for the others, and without a plan. */
+export const routeMark = (route: RecoveryRoute | null | undefined): string | null =>
+  route === "correlation"
+    ? "from a correlation"
+    : route === "untunedEquationOfState"
+      ? "from an untuned equation of state"
+      : null;
+
 export const phaseLabels: Record<RecoveryPhaseName, string> = {
   aboveDewPoint: "Above the dew point",
   belowDewPoint: "Below the dew point",

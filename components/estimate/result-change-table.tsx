@@ -38,7 +38,7 @@ export function ResultChangeTable({ groups }: { groups: readonly ResultGroup[] }
         </tr>
       </thead>
       <tbody>
-        {rows.map(({ name, label, unit, tone, range, before }) => {
+        {rows.map(({ name, label, unit, tone, range, before, mark }) => {
           const digits = fractionDigits([
             ...[range.p90, range.p50, range.p10],
             ...(before ? [before.p90, before.p50, before.p10] : []),
@@ -51,6 +51,7 @@ export function ResultChangeTable({ groups }: { groups: readonly ResultGroup[] }
             <tr key={name}>
               <th scope="row" className="wrap">
                 {label} <Unit>{unit}</Unit>
+                {mark && <small className="result-mark">{mark}</small>}
               </th>
               {(["p90", "p50", "p10"] as const).map((level) => (
                 <FigureCell

@@ -4,6 +4,7 @@ import type { Range, ResultName, SimulationSummary } from "@/analytics/volumetri
 import type { Basis } from "@/components/basis/basis";
 import type { Tone } from "@/components/charts/range-mark";
 import { formatPercent } from "@/components/ui/format";
+import { routeMark } from "./plan-words";
 
 /** What a table of results is shown in. */
 export interface ResultBasis {
@@ -40,6 +41,8 @@ export interface ResultRow {
   tone: Tone;
   range: Range;
   before: Range | null;
+  /** what the figure rests on, where no measured depletion stands behind it: "from a correlation" */
+  mark: string | null;
 }
 
 export interface ResultGroup {
@@ -69,6 +72,13 @@ const layout = [
   },
 ] as const;
 
+/** Results that a recovery is part of. */
+const recovered: ReadonlySet<ResultName> = new Set([
+  "salesGasScf",
+  "condensateRecoverableStb",
+  "condensateLeftStb",
+]);
+
 /** Results in the units of the basis, beside what they were. */
 export function resultGroups(
   summary: SimulationSummary,
@@ -87,6 +97,7 @@ export function resultGroups(
         tone,
         range: scaled(summary.results[name], factor),
         before: before && scaled(before.results[name], factor),
+        mark: recovered.has(name) ? routeMark(summary.recovery?.route) : null,
       })),
     };
   });

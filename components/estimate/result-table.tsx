@@ -54,9 +54,12 @@ export function ResultTable({ caption, groups, isStale = false }: ResultTablePro
                   <RangeScale scale={scale} ticks={3} />
                 </th>
               </tr>
-              {rows.map(({ name, label, tone, range, before }) => (
+              {rows.map(({ name, label, tone, range, before, mark }) => (
                 <tr key={name}>
-                  <th scope="row">{label}</th>
+                  <th scope="row">
+                    {label}
+                    {mark && <small className="result-mark">{mark}</small>}
+                  </th>
                   {(["p90", "p50", "p10"] as const).map((level) => (
                     <td key={level} className={level === "p50" ? "right strong" : "right"}>
                       <Figure value={range[level]} fraction={digits} />

@@ -11,7 +11,10 @@ type Phased = Pick<ConceptView, "concept" | "phases">;
 export function PhaseTable({ concepts }: { concepts: readonly Phased[] }) {
   const names = [...new Set(concepts.flatMap(({ phases }) => phases.map(({ name }) => name)))];
   return (
-    <LedgerTable caption="What is recovered when, per cent of what is in place">
+    <LedgerTable
+      caption="What is recovered when, per cent of what is in place"
+      className="phase-table"
+    >
       <thead>
         <tr>
           <th scope="col">Phase</th>

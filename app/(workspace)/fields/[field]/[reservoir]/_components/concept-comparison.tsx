@@ -237,6 +237,7 @@ function UseLink({
   isPossible: boolean;
   onUse: () => void;
 }) {
+  const words = isUsed ? "Use again" : "Use in the draft";
   return (
     <span className="use-concept">
       {isUsed && <small>In the draft</small>}
@@ -244,10 +245,10 @@ function UseLink({
         type="button"
         className="link-button"
         disabled={!isPossible}
-        aria-label={`Use ${conceptLabels[concept].toLowerCase()} in the draft`}
+        aria-label={`${words}: ${conceptLabels[concept].toLowerCase()}`}
         onClick={onUse}
       >
-        {isUsed ? "Use again" : "Use in the draft"}
+        {words}
       </button>
     </span>
   );

@@ -30,6 +30,20 @@ export function derivedRows(summary: SimulationSummary, basis: ResultBasis): Der
       unit: condensateYield.unit,
       range: scaled(derived.condensateYieldStbPerMmscfWellstream, condensateYield.factor),
     },
+    ...(summary.recovery
+      ? [
+          {
+            label: "Gas recovery, worked out",
+            unit: "of dry gas in place",
+            range: summary.inputs.gasRecovery,
+          },
+          {
+            label: "Condensate recovery, worked out",
+            unit: "of condensate in place",
+            range: summary.inputs.condensateRecovery,
+          },
+        ]
+      : []),
     {
       label: "Wet gas per rock",
       unit: "Mscf/acre-ft",

@@ -5,6 +5,7 @@ import { useState } from "react";
 import { errorWords } from "@/app/_client/request";
 import { useCan } from "@/app/_client/use-session";
 import { isSameFluid } from "@/components/estimate/differences";
+import { RouteFlag } from "@/components/estimate/route-flag";
 import { Button, LinkButton } from "@/components/ui/button";
 import { formatFigure } from "@/components/ui/format";
 import { PageHead } from "@/components/ui/section";
@@ -17,7 +18,7 @@ import { SubmitDialog } from "./submit-dialog";
 
 /** Where we are, how the revision stands, and what can be done with it. */
 export function ReservoirHead() {
-  const { page, shown, draft, text, withBasis } = useReservoir();
+  const { page, shown, draft, text, results, withBasis } = useReservoir();
   const { field } = page;
   const hydrogenSulphide = (text?.fluid ?? shown?.inputs.fluid)?.hydrogenSulphide ?? 0;
   const depthFt = text?.depthFt ?? page.depthFt;
@@ -43,6 +44,7 @@ export function ReservoirHead() {
               Sour, {formatFigure(hydrogenSulphide * 100, { digits: 2 })} % H<sub>2</sub>S
             </Flag>
           )}
+          <RouteFlag route={results.summary?.recovery?.route} />
           {draft && <SaveWords state={draft.saveState} />}
         </>
       }

@@ -4,12 +4,15 @@ import type { ResultName } from "@/analytics/volumetrics/results-schema";
 import { Drivers } from "@/components/estimate/drivers";
 import { ExceedanceSection } from "@/components/estimate/exceedance-section";
 import { HistogramSection } from "@/components/estimate/histogram-section";
+import { conceptLabels, routeLabels } from "@/components/estimate/plan-words";
 import { resultGroups, resultFactor, resultUnit } from "@/components/estimate/result-rows";
 import { ResultTable } from "@/components/estimate/result-table";
+import { PlaceBar, PlaceKey } from "@/components/recovery/concept-bars";
+import { GasBalance, PhaseTable } from "@/components/recovery/phase-table";
 import { Columns, Section, Stack } from "@/components/ui/section";
 import { EmptyState, Skeleton } from "@/components/ui/status";
 import { LedgerTable, FigureCell } from "@/components/ui/table";
-import { formatDate, fractionDigits } from "@/components/ui/format";
+import { formatDate, formatPercent, fractionDigits } from "@/components/ui/format";
 import { useReservoir } from "../_editor/reservoir-context";
 import { derivedRows } from "./derived-rows";
 
@@ -87,6 +90,7 @@ export function ResultsTab() {
           place={placeName}
         />
       </Columns>
+      <RecoverySection />
       <SamplingSection />
     </Stack>
   );
@@ -124,6 +128,36 @@ function DerivedTable() {
         })}
       </tbody>
     </LedgerTable>
+  );
+}
+
+/** Where the condensate ends up and what is recovered when, for a revision whose recoveries a plan worked out. */
+function RecoverySection() {
+  const { results, resultBasis } = useReservoir();
+  const recovery = results.summary?.recovery;
+  if (!recovery) return null;
+  const { shares, concept } = recovery;
+  return (
+    <Columns kind="equal">
+      <Section
+        title={`${formatPercent(shares.leftInRock)} of the condensate stays in the rock`}
+        note={`${conceptLabels[concept]}, ${routeLabels[recovery.route].toLowerCase()}. Means over the trials, of the condensate in place.`}
+      >
+        <PlaceKey />
+        <PlaceBar name={conceptLabels[concept]} shares={shares} />
+        {recovery.gasBalance && (
+          <div className="mt-4">
+            <GasBalance balance={recovery.gasBalance} basis={resultBasis} />
+          </div>
+        )}
+      </Section>
+      <Section
+        title={`${formatPercent(shares.toTank)} reaches the tank`}
+        note="Condensate of each phase, per cent of what is in place, and gas under it."
+      >
+        <PhaseTable concepts={[recovery]} />
+      </Section>
+    </Columns>
   );
 }
 

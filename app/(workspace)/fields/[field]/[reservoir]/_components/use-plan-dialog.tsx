@@ -3,7 +3,7 @@
 import { useRouter } from "next/navigation";
 import type { RecoveryPlan } from "@/analytics/recovery/recovery-plan-schema";
 import { textOfPlan } from "@/components/estimate/plan-text";
-import { conceptLabels, planInWords } from "@/components/estimate/plan-words";
+import { conceptLabels, isWeakRoute, planInWords } from "@/components/estimate/plan-words";
 import { RouteFlag } from "@/components/estimate/route-flag";
 import type { ConceptView } from "@/components/recovery/concept-findings";
 import { Button } from "@/components/ui/button";
@@ -58,7 +58,7 @@ export function UsePlanDialog({
         </>
       }
     >
-      <div className="grid gap-3 text-13">
+      <div className="mt-3 grid gap-3 text-13">
         <p>{planInWords(plan)}.</p>
         {view && (
           <p>
@@ -68,9 +68,11 @@ export function UsePlanDialog({
             {formatPercent(view.gasRecovery.p10, { decimals: 1 })}.
           </p>
         )}
-        <p>
-          <RouteFlag route={plan.curve.route} />
-        </p>
+        {isWeakRoute(plan.curve.route) && (
+          <p>
+            <RouteFlag route={plan.curve.route} />
+          </p>
+        )}
         <p className="text-ink-soft">
           {text?.usesPlan && text.plan
             ? `It takes the place of the plan for ${conceptLabels[text.plan.concept].toLowerCase()}.`
