@@ -19,7 +19,12 @@ export interface CurvePoint {
 }
 
 const TOLERANCE = 1e-10;
-const MAXIMUM_ITERATIONS = 8;
+/**
+ * The step before the last must have been below this: next to the critical point small residuals alone leave pressure
+ * and temperature open.
+ */
+const SMALL_STEP = 1e-5;
+const MAXIMUM_ITERATIONS = 9;
 /** A correction larger than this means a prediction too far from the curve. */
 const LARGEST_CORRECTION = 1;
 
@@ -45,21 +50,21 @@ export class CurveTracer {
     const n = system.size;
     const at = guess.slice();
     at[held] = value;
+    let lastStep = Infinity;
     for (this.iterations = 1; this.iterations <= MAXIMUM_ITERATIONS; this.iterations += 1) {
       if (!this.fill(at, held)) return null;
       residual[n - 1] = 0;
       const error = residual.reduce((largest, r) => Math.max(largest, Math.abs(r)), 0);
       if (!(error < Infinity)) return null;
-      if (error < TOLERANCE) {
+      if (error < TOLERANCE && lastStep < SMALL_STEP) {
         const tangent = new Float64Array(n);
         tangent[n - 1] = 1;
         return solveLinear(jacobian, tangent, n) ? { at, tangent } : null;
       }
       if (!solveLinear(jacobian, residual, n)) return null;
-      for (let i = 0; i < n; i += 1) {
-        if (!(Math.abs(residual[i]) < LARGEST_CORRECTION)) return null;
-        at[i] -= residual[i];
-      }
+      lastStep = residual.reduce((largest, step) => Math.max(largest, Math.abs(step)), 0);
+      if (!(lastStep < LARGEST_CORRECTION)) return null;
+      for (let i = 0; i < n; i += 1) at[i] -= residual[i];
     }
     return null;
   }

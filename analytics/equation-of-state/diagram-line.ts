@@ -42,16 +42,19 @@ export class DiagramLine {
     return Math.exp(point.at[this.components + 1]);
   }
 
-  /** Beyond the limits of the diagram. */
-  isOutside(point: CurvePoint): boolean {
+  /** Beyond the limits of the diagram, and on its way out: a line may begin in the cold and come in. */
+  isLeaving(point: CurvePoint, last: CurvePoint): boolean {
     const pressure = this.pressure(point);
+    const temperature = this.temperature(point);
     return (
-      pressure < LOWEST_PSIA || pressure > HIGHEST_PSIA || this.temperature(point) < LOWEST_DEGR
+      (pressure < LOWEST_PSIA && pressure < this.pressure(last)) ||
+      (pressure > HIGHEST_PSIA && pressure > this.pressure(last)) ||
+      (temperature < LOWEST_DEGR && temperature < this.temperature(last))
     );
   }
 
   /** Follows the line up from its first point, until `ends` or until no step converges. */
-  follow(first: CurvePoint, ends: (point: CurvePoint) => boolean): void {
+  follow(first: CurvePoint, ends: (point: CurvePoint, last: CurvePoint) => boolean): void {
     const { points } = this;
     points.push(first);
     // A first step along ln p, up.
@@ -69,7 +72,7 @@ export class DiagramLine {
         continue;
       }
       points.push(next);
-      if (ends(next)) return;
+      if (ends(next, last)) return;
       const turn = steepest(next);
       // The same way along the curve, counted in the unknown that is held next.
       const way =

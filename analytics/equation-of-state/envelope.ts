@@ -26,7 +26,7 @@ export interface PhaseEnvelope {
   readonly cricondenbar: EnvelopePoint | null;
   readonly quality: readonly {
     readonly liquidVolumeFraction: number;
-    /** from low pressure to the critical point */
+    /** from low pressure to the critical point, or to a limit of the diagram */
     readonly points: readonly EnvelopePoint[];
   }[];
 }
@@ -42,7 +42,7 @@ const NEAR_CRITICAL = 0.1;
 /**
  * The phase envelope of a fluid by continuation, from the dew line at 14.696 psia around the cricondentherm, through
  * the critical point and down the bubble line, until 14.696 psia, -100 degF or 20,000 psia. Extremes are solved for,
- * not read off the points. Lines of equal liquid share run from 14.696 psia to the critical point.
+ * not read off the points. Lines of equal liquid share run from 14.696 psia (or -100 degF) to the critical point.
  *
  * A second liquid at low temperature is not looked for.
  *
@@ -69,7 +69,7 @@ export function phaseEnvelope(
   const feed = new Float64Array(n);
   normaliseFeed(z, feed);
   const line = new DiagramLine(boundarySystem(flasher.equation, feed), n);
-  line.follow(beginDewLine(flasher, feed, line), (point) => line.isOutside(point));
+  line.follow(beginDewLine(flasher, feed, line), (point, last) => line.isLeaving(point, last));
   const { points } = line;
   const place = (at: Float64Array): EnvelopePoint => ({
     temperatureDegF: Math.exp(at[n]) - DEGR_AT_ZERO_DEGF,
@@ -90,9 +90,9 @@ export function phaseEnvelope(
     cricondenbar: placeOrNull(highest(line, n + 1)),
     quality: liquidVolumeFractions.map((liquidVolumeFraction) => ({
       liquidVolumeFraction,
-      points: criticalAt
-        ? qualityLine(flasher, feed, liquidVolumeFraction, criticalAt).map(place)
-        : [],
+      points: qualityLine(flasher, feed, liquidVolumeFraction, points[0].at[n], criticalAt).map(
+        place,
+      ),
     })),
   };
 }
@@ -204,31 +204,31 @@ function highest(line: DiagramLine, index: number): Float64Array | null {
   return from.at;
 }
 
-/** One line of equal liquid share, the critical point last. */
+/** One line of equal liquid share; the critical point last, where it gets there. */
 function qualityLine(
   flasher: Flasher,
   z: Float64Array,
   liquidVolumeFraction: number,
-  critical: Float64Array,
+  lnWarm: number,
+  critical: Float64Array | null,
 ): Float64Array[] {
   const n = z.length;
   const line = new DiagramLine(qualitySystem(flasher.equation, z, liquidVolumeFraction), n);
-  const { guess, held } = beginQualityLine(flasher, z, liquidVolumeFraction, critical[n]);
+  const { guess, held } = beginQualityLine(flasher, z, liquidVolumeFraction, lnWarm);
   const first = line.tracer.correct(guess, held, guess[held]);
   if (!first) {
     throw new ConvergenceError("A line of equal liquid share could not be begun", {
       liquidVolumeFraction,
     });
   }
-  line.follow(first, (point) => {
-    const largest = point.at.subarray(0, n).reduce((most, lnK) => Math.max(most, Math.abs(lnK)), 0);
-    return largest < NEAR_CRITICAL || isAcross(first, point, n) || line.isOutside(point);
-  });
-  const last = line.points[line.points.length - 1];
-  const points = (isAcross(first, last, n) ? line.points.slice(0, -1) : line.points).map(
-    ({ at }) => at,
-  );
-  return [...points, critical];
+  const isNearCritical = (point: CurvePoint) =>
+    isAcross(first, point, n) ||
+    point.at.subarray(0, n).every((lnK, i) => z[i] === 0 || Math.abs(lnK) < NEAR_CRITICAL);
+  line.follow(first, (point, last) => isNearCritical(point) || line.isLeaving(point, last));
+  const points = line.points.filter((point) => !isAcross(first, point, n)).map(({ at }) => at);
+  return critical && isNearCritical(line.points[line.points.length - 1])
+    ? [...points, critical]
+    : points;
 }
 
 /**
@@ -239,7 +239,7 @@ function beginQualityLine(
   flasher: Flasher,
   z: Float64Array,
   liquidVolumeFraction: number,
-  lnCriticalTemperature: number,
+  lnWarm: number,
 ): { guess: Float64Array; held: number } {
   const n = z.length;
   const { split } = flasher;
@@ -257,7 +257,7 @@ function beginQualityLine(
   const alongPressure = share(lnCold, lnLow) < liquidVolumeFraction;
   let [less, more] = alongPressure
     ? [lnLow, Math.log(HIGHEST_PSIA)]
-    : [Math.max(lnCriticalTemperature, lnCold) + 0.7, lnCold];
+    : [Math.max(lnWarm, lnCold), lnCold];
   for (let i = 0; i < 40; i += 1) {
     const middle = 0.5 * (less + more);
     const value = alongPressure ? share(lnCold, middle) : share(middle, lnLow);

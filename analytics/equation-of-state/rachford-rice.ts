@@ -53,22 +53,24 @@ export function vapourFraction(
   for (let iteration = 0; iteration < MAXIMUM_ITERATIONS; iteration += 1) {
     let value = 0;
     let slope = 0;
+    let size = 0;
     for (let i = 0; i < n; i += 1) {
       const excess = k[i] - 1;
       const share = excess / (1 + v * excess);
       const term = z[i] * share;
       value += term;
+      size += Math.abs(term);
       slope -= term * share;
     }
-    if (value === 0) return v;
+    if (Math.abs(value) <= 2e-16 * size) return v;
     if (value > 0) low = v;
     else high = v;
     const fromLow = v - lowPole;
     const fromHigh = highPole - v;
     const straightSlope = slope * fromLow * fromHigh + value * (fromHigh - fromLow);
     let next = v - (value * fromLow * fromHigh) / straightSlope;
-    // A step within the rounding of the bounds is the end, not a reason to halve.
-    if (Math.abs(next - v) <= 4e-16 * Math.max(1e-3, Math.abs(v))) return v;
+    // A step within rounding is the end, not a reason to halve.
+    if (Math.abs(next - v) <= 1e-16 * Math.max(1, Math.abs(v))) return v;
     if (!(next > low && next < high)) next = 0.5 * (low + high);
     if (next === low || next === high) return v;
     v = next;

@@ -32,7 +32,7 @@ const LN_TOLERANCE = 1e-10;
 /** How far outside a saturation pressure the fluid is looked at again. */
 const LN_CLEARANCE = 1e-7;
 const MAXIMUM_ITERATIONS = 100;
-const UNSTABLE = -1e-11;
+const UNSTABLE = -1e-13;
 
 /**
  * Upper and lower saturation pressure of a fluid at a temperature, by the tangent-plane test: the upper one is the

@@ -7,6 +7,9 @@ import { vapourFraction } from "./rachford-rice";
 export const FUGACITY_TOLERANCE = 1e-10;
 /** What rounding may leave of it where K-values are near 1 and both phases hardly differ. */
 const ROUNDING_TOLERANCE = 1e-9;
+/** Where all ln K are below this, small residuals alone leave the phases open, so the step must be small, too. */
+const NEAR_CRITICAL = 1;
+const SMALL_STEP = 1e-8;
 const FIRST_SUBSTITUTIONS = 3;
 const SUBSTITUTIONS_PER_ROUND = 5;
 const MAXIMUM_ROUNDS = 60;
@@ -148,12 +151,14 @@ export class TwoPhaseSplit {
     const { lnK, held, step } = this;
     for (;;) {
       const before = this.residual;
-      if (before < FUGACITY_TOLERANCE) return true;
-      if (!this.fillStep(z, pressurePsia)) return false;
+      const isEquilibrium = before < FUGACITY_TOLERANCE;
+      if (isEquilibrium && !this.isNearCritical(z)) return true;
+      if (!this.fillStep(z, pressurePsia)) return isEquilibrium;
       let largest = 0;
       for (let i = 0; i < z.length; i += 1) {
         if (z[i] > 0) largest = Math.max(largest, Math.abs(step[i]));
       }
+      if (isEquilibrium && largest < SMALL_STEP) return true;
       if (!(largest < LARGEST_STEP)) return false;
       held.set(lnK);
       const heldFraction = this.vapourFraction;
@@ -205,6 +210,10 @@ export class TwoPhaseSplit {
     }
     step.set(error);
     return solveLinear(jacobian, step, n);
+  }
+
+  private isNearCritical(z: Float64Array): boolean {
+    return this.lnK.every((value, i) => z[i] === 0 || Math.abs(value) < NEAR_CRITICAL);
   }
 
   private isTrivial(z: Float64Array): boolean {

@@ -6,6 +6,8 @@ import { fillWilson } from "./wilson";
 
 /** Largest residual of ln W + ln phi(W) - ln z - ln phi(z), weighted by sqrt W, at a stationary point. */
 const TOLERANCE = 1e-10;
+/** What counts where rounding stalls the descent next to the critical point; tm is off by the square of it. */
+const STALLED_TOLERANCE = 1e-7;
 const SUBSTITUTIONS = 6;
 const MAXIMUM_NEWTON = 200;
 /** Added to the Hessian's diagonal, whose entries are about 1, when a step fails; more and more of it. */
@@ -56,7 +58,7 @@ export class StabilityTest {
   private readonly held: Float64Array;
   private total = 1;
 
-  constructor(private readonly equation: PengRobinson) {
+  constructor(readonly equation: PengRobinson) {
     const n = equation.count;
     const vector = () => new Float64Array(n);
     const trialPhase = (): TrialPhase => ({
@@ -108,13 +110,14 @@ export class StabilityTest {
   /** A trial from its own last stationary point, with `feed` evaluated before at a pressure near by. */
   follow(z: Float64Array, pressurePsia: number, phase: TrialPhase): TrialPhase {
     const { lnRatio } = phase;
-    this.descend(z, pressurePsia, lnRatio);
+    // tm is stationary, so it is better known than 1 - sum W, which equals it only at the very end.
+    const distance = this.descend(z, pressurePsia, lnRatio);
     let farthest = 0;
     for (let i = 0; i < z.length; i += 1) {
       if (z[i] > 0) farthest = Math.max(farthest, Math.abs(lnRatio[i]));
     }
     phase.trivial = farthest < TRIVIAL;
-    phase.distance = phase.trivial ? 0 : 1 - this.total;
+    phase.distance = phase.trivial ? 0 : distance;
     phase.z = this.trial.z;
     return phase;
   }
@@ -154,14 +157,14 @@ export class StabilityTest {
     return tm;
   }
 
-  /** Newton's method from `lnRatio`, in 2 sqrt W, shifted until tm falls. */
-  private descend(z: Float64Array, pressurePsia: number, lnRatio: Float64Array): void {
+  /** Newton's method from `lnRatio`, in 2 sqrt W, shifted until tm falls. @returns tm */
+  private descend(z: Float64Array, pressurePsia: number, lnRatio: Float64Array): number {
     const { residual, gradient, step, held } = this;
     let tm = this.evaluate(z, pressurePsia, lnRatio);
     let shift = 0;
     for (let iteration = 0; ; iteration += 1) {
       const error = this.fillGradient();
-      if (error < TOLERANCE || (iteration === MAXIMUM_NEWTON && error < 100 * TOLERANCE)) break;
+      if (error < TOLERANCE || (iteration === MAXIMUM_NEWTON && error < STALLED_TOLERANCE)) break;
       if (iteration === MAXIMUM_NEWTON) throw this.failure(pressurePsia, error);
       this.fillHessian(pressurePsia);
       held.set(lnRatio);
@@ -183,6 +186,7 @@ export class StabilityTest {
       shift = shift > LEAST_SHIFT ? shift / 10 : 0;
     }
     for (let i = 0; i < z.length; i += 1) lnRatio[i] -= residual[i];
+    return tm;
   }
 
   /** @returns the largest entry */
