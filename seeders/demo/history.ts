@@ -3,6 +3,7 @@
  * ranges of that day differed, as a factor on both ends. Later revisions converge on the current ranges, the way
  * appraisal does.
  */
+import type { ProducingConcept } from "@/analytics/recovery/recovery-plan-schema";
 import type { InputName } from "@/analytics/volumetrics/inputs-schema";
 
 export type DemoState = "superseded" | "approved" | "returned" | "submitted" | "draft";
@@ -14,6 +15,8 @@ export interface DemoRevision {
   factors: Partial<Record<InputName, number>>;
   /** a factor on the distance of both ends from their middle: above 1 was less certain */
   spread?: number;
+  /** another way of producing than the approved one, where recoveries follow from the fluid */
+  concept?: ProducingConcept;
   note: string;
   decision?: { on: string; note: string };
 }

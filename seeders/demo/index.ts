@@ -21,6 +21,7 @@ import { revisionsOf, type DemoRevision } from "./history";
 import { inputsOf, separatorTestOf } from "./inputs";
 import { demoPassword, demoPeople } from "./people";
 import { demoDeckName, demoDecks } from "./price-decks";
+import { planOf, recoveryOf, studyOf } from "./recovery-plans";
 import { demoReservoirs, type DemoReservoir } from "./reservoirs";
 
 type People = Record<Role, Actor>;
@@ -124,14 +125,20 @@ async function createReservoirWithHistory(
       sampledOn: demo.fluid.sampledOn,
       laboratory: demo.fluid.laboratory,
       separatorTest: test,
+      study: studyOf(demo, test),
     }),
   );
-  for (const revision of revisions) {
+  const recovery = await recoveryOf(demo, test);
+  const firstApproved = revisions.findIndex(({ state }) => state === "approved");
+  for (const [number, revision] of revisions.entries()) {
+    // Earlier revisions had recoveries by analogy; the study came with the approved one.
+    const followsFluid = firstApproved !== -1 && number >= firstApproved;
+    const plan = recovery && followsFluid ? planOf(recovery, revision.concept) : null;
     const hasSample = revision.on >= demo.fluid.sampledOn;
     await createRevision(
       reservoir.id,
       hasSample ? sample.id : null,
-      inputsOf(demo, test, revision),
+      inputsOf(demo, test, revision, plan),
       revision,
       people,
     );

@@ -1,5 +1,6 @@
 import { recombine } from "@/analytics/fluid/wellstream";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
+import type { RecoveryPlan } from "@/analytics/recovery/recovery-plan-schema";
 import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
 import type { EstimateInputs, InputName } from "@/analytics/volumetrics/inputs-schema";
 import type { DemoRevision } from "./history";
@@ -95,6 +96,7 @@ export function inputsOf(
   reservoir: DemoReservoir,
   test: SeparatorTest,
   revision: DemoRevision,
+  recoveryPlan: RecoveryPlan | null,
 ): EstimateInputs {
   const { fluid } = reservoir;
   const yieldNow = recombine(test).condensateYieldStbPerMmscf;
@@ -156,10 +158,13 @@ export function inputsOf(
     correlations: [
       { a: "porosity", b: "waterSaturation", rank: -0.5 },
       { a: "areaAcres", b: "netThicknessFt", rank: 0.2 },
-      { a: "gasRecovery", b: "condensateRecovery", rank: 0.6 },
+      // A plan works both recoveries out of one curve.
+      ...(recoveryPlan
+        ? []
+        : [{ a: "gasRecovery" as const, b: "condensateRecovery" as const, rank: 0.6 }]),
     ],
     fluid: test,
     depthFt: reservoir.depthFt,
-    recoveryPlan: null,
+    recoveryPlan,
   };
 }
