@@ -14,6 +14,8 @@ const FIRST_SUBSTITUTIONS = 3;
 const SUBSTITUTIONS_PER_ROUND = 5;
 const MAXIMUM_ROUNDS = 60;
 const LARGEST_STEP = 3;
+/** Newton steps that may pass before one brings the fugacities closer. */
+const PATIENCE = 15;
 /** Phases whose ln K are all below this are the same phase. */
 const TRIVIAL = 1e-6;
 
@@ -75,7 +77,7 @@ export class TwoPhaseSplit {
     let substitutions = FIRST_SUBSTITUTIONS;
     for (let round = 0; round < MAXIMUM_ROUNDS; round += 1) {
       if (!this.substitute(z, pressurePsia, substitutions)) return this.lostOrTrivial(z);
-      if (this.newton(z, pressurePsia)) return this.isTrivial(z) ? "trivial" : "two";
+      if (this.newton(z, pressurePsia, round > 0)) return this.isTrivial(z) ? "trivial" : "two";
       substitutions = SUBSTITUTIONS_PER_ROUND;
     }
     return this.residual < ROUNDING_TOLERANCE && !this.isTrivial(z) ? "two" : "lost";
@@ -146,30 +148,41 @@ export class TwoPhaseSplit {
     return residual < Infinity;
   }
 
-  /** Newton's method from an evaluated state. @returns true at equilibrium; false with the last good state evaluated */
-  private newton(z: Float64Array, pressurePsia: number): boolean {
+  /**
+   * Newton's method from an evaluated state. Each step must bring the fugacities closer, but when patient: next to the
+   * critical point the way to equilibrium leads over larger residuals.
+   *
+   * @returns true at equilibrium; false with the state it began from, or the last good one, evaluated
+   */
+  private newton(z: Float64Array, pressurePsia: number, isPatient: boolean): boolean {
     const { lnK, held, step } = this;
-    for (;;) {
-      const before = this.residual;
-      const isEquilibrium = before < FUGACITY_TOLERANCE;
+    held.set(lnK);
+    let heldFraction = this.vapourFraction;
+    let heldResidual = this.residual;
+    for (let pass = 0; !isPatient || pass < PATIENCE; pass += 1) {
+      const isEquilibrium = this.residual < FUGACITY_TOLERANCE;
       if (isEquilibrium && !this.isNearCritical(z)) return true;
-      if (!this.fillStep(z, pressurePsia)) return isEquilibrium;
+      if (!this.fillStep(z, pressurePsia)) break;
       let largest = 0;
       for (let i = 0; i < z.length; i += 1) {
         if (z[i] > 0) largest = Math.max(largest, Math.abs(step[i]));
       }
       if (isEquilibrium && largest < SMALL_STEP) return true;
-      if (!(largest < LARGEST_STEP)) return false;
-      held.set(lnK);
-      const heldFraction = this.vapourFraction;
+      if (!(largest < LARGEST_STEP)) break;
       for (let i = 0; i < z.length; i += 1) lnK[i] -= step[i];
-      if (this.evaluate(z, pressurePsia) && this.residual < 0.7 * before) continue;
-      if (this.residual < ROUNDING_TOLERANCE) return true;
-      lnK.set(held);
-      this.vapourFraction = heldFraction;
-      this.evaluate(z, pressurePsia);
-      return before < ROUNDING_TOLERANCE;
+      if (!this.evaluate(z, pressurePsia)) break;
+      if (this.residual < 0.7 * heldResidual) {
+        held.set(lnK);
+        heldFraction = this.vapourFraction;
+        heldResidual = this.residual;
+      } else if (this.residual < ROUNDING_TOLERANCE && heldResidual < ROUNDING_TOLERANCE) {
+        return true;
+      } else if (!isPatient) break;
     }
+    lnK.set(held);
+    this.vapourFraction = heldFraction;
+    this.evaluate(z, pressurePsia);
+    return this.residual < ROUNDING_TOLERANCE;
   }
 
   /**
