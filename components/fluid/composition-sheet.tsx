@@ -22,6 +22,7 @@ import {
   type StreamName,
 } from "./composition-text";
 import { EntryCell, EntryGrid, EntryProblems, type EntryState } from "./entry-grid";
+import { psia } from "./words";
 import { ShareBar } from "./share-bar";
 
 export interface CompositionSheetProps {
@@ -79,7 +80,12 @@ export function CompositionSheet({
   }));
   const conditions = text.kind === "separatorStreams" ? streamConditionNames : [];
   const columns = 2 + streams.length;
-  const largest = Math.max(...Object.values(reading.fields).map(({ value }) => value ?? 0), 1e-9);
+  const largest = Math.max(
+    ...rows.flatMap(({ places }) =>
+      places.map((place) => (place === null ? 0 : (reading.fields[place]?.value ?? 0))),
+    ),
+    1e-9,
+  );
   const named = (place: string, words: string, stream: StreamName) => ({
     place,
     label: streams.length > 1 ? `${streamLabels[stream]}, ${words}` : words,
@@ -300,7 +306,7 @@ export function CompositionFacts({
     { label: "Wellstream gravity", value: computed.gravity, unit: "air = 1" },
     zFactors &&
       reservoir && {
-        label: `z at ${formatFigure(reservoir.pressurePsia, { digits: 4 })} psia, ${formatFigure(reservoir.temperatureDegF)} °F`,
+        label: `z at ${psia(reservoir.pressurePsia)} psia, ${formatFigure(reservoir.temperatureDegF)} °F`,
         value: zFactors.fromComposition,
         unit: "",
         digits: 4,

@@ -8,8 +8,16 @@ import { formatFigure, MISSING } from "@/components/ui/format";
 import { Flag, Unit } from "@/components/ui/text";
 import { AbandonmentLine } from "./abandonment-line";
 import type { AvailableCurve } from "./available-curves";
-import { curveAt, gainPer100Psi, mostLiquid, revaporised } from "./curve-reading";
+import {
+  fineStates,
+  gainPer100Psi,
+  mostLiquid,
+  revaporised,
+  stateAt,
+  type CurveState,
+} from "./curve-reading";
 import { roundScale, yTicksOf } from "./plot-scale";
+import { psia } from "./words";
 
 export interface DepletionPanelsProps {
   /** what the read-outs stand on */
@@ -19,6 +27,8 @@ export interface DepletionPanelsProps {
   /** measured liquid, per cent of the cell; drawn as squares */
   measured: readonly { pressurePsia: number; liquidPercent: number | null }[];
   initialPressurePsia: number | null;
+  /** produced above the dew point, share of what is in place at first; `null` while unknown */
+  producedBefore: number | null;
   /** liquid below this stays where it is, per cent of pore space */
   criticalBand: { low: number; high: number };
   abandonmentPressurePsia: number;
@@ -27,7 +37,6 @@ export interface DepletionPanelsProps {
 }
 
 const LEFT = 46;
-const psia = (value: number) => formatFigure(value, { digits: 4 });
 
 /** Liquid in the pores over the producing yield, on one pressure axis, with the end of production drawn through both. */
 export function DepletionPanels(props: DepletionPanelsProps) {
@@ -51,6 +60,8 @@ export function DepletionPanels(props: DepletionPanelsProps) {
           <>
             {isUntuned && <Flag icon="warning">Untuned</Flag>} {curve.note}{" "}
             {measured.length > 0 && "Squares: measured by the laboratory. "}
+            {props.others.length > 0 &&
+              `Thin: ${props.others.map(({ label }) => label.toLowerCase()).join(", ")}. `}
             {back !== null &&
               `Below ${psia(most.pressurePsia)} psia ${formatFigure(back * 100, { digits: 2 })} points of it turn to vapour again. `}
             Shaded: critical saturation; liquid below it stays in the rock. Drag the line, or use
@@ -98,10 +109,12 @@ function Panels({
   others,
   measured,
   initialPressurePsia,
+  producedBefore,
   criticalBand,
   abandonmentPressurePsia,
   onAbandon,
 }: DepletionPanelsProps) {
+  const before = producedBefore ?? 0;
   const { points, dewPointPsia } = curve.curve;
   const x = roundScale([0, Math.max(dewPointPsia * 1.06, initialPressurePsia ?? 0)], { count: 6 });
   const liquid = roundScale(
@@ -120,16 +133,17 @@ function Panels({
     ),
     { count: 4 },
   );
-  const state = curveAt(curve.curve, abandonmentPressurePsia);
+  const states = fineStates(curve.curve);
+  const state = stateAt(states, abandonmentPressurePsia);
   const dewX = positionOn(x, dewPointPsia);
   const most = mostLiquid(curve.curve);
-  const draw = (of: AvailableCurve, y: Scale, read: (point: (typeof points)[number]) => number) =>
-    linePath([
-      [100, 100 - positionOn(y, read(of.curve.points[0]))],
-      ...of.curve.points.map(
-        (point) => [positionOn(x, point.pressurePsia), 100 - positionOn(y, read(point))] as const,
-      ),
+  const draw = (of: AvailableCurve, y: Scale, read: (state: CurveState) => number) => {
+    const line = of === curve ? states : fineStates(of.curve);
+    return linePath([
+      ...line.map((at) => [positionOn(x, at.pressurePsia), 100 - positionOn(y, read(at))] as const),
+      [100, 100 - positionOn(y, read(line[line.length - 1]))],
     ]);
+  };
   const look = (of: AvailableCurve, isMain: boolean) =>
     [
       isMain ? "line" : "line-soft line-thin",
@@ -137,8 +151,8 @@ function Panels({
     ]
       .filter(Boolean)
       .join(" ");
-  const saturation = (point: (typeof points)[number]) => point.liquidSaturation * 100;
-  const producing = (point: (typeof points)[number]) => point.producingYieldStbPerMmscf;
+  const saturation = (at: CurveState) => at.liquidSaturation * 100;
+  const producing = (at: CurveState) => at.producingYieldStbPerMmscf;
   const bandTop = 100 - positionOn(liquid, criticalBand.high);
   const bandBottom = 100 - positionOn(liquid, criticalBand.low);
   const mostAt = {
@@ -173,8 +187,9 @@ function Panels({
           </>
         }
       >
-        <PlotLabel x={4} y={(bandTop + bandBottom) / 2} anchor="start" soft>
-          Critical saturation
+        <PlotLabel x={45} y={bandBottom} dy={10} soft>
+          Critical saturation, {formatFigure(criticalBand.low, { decimals: 0 })} to{" "}
+          {formatFigure(criticalBand.high, { decimals: 0 })} %
         </PlotLabel>
         <PlotLabel x={dewX} y={7} anchor={dewX > 80 ? "end" : "start"} dx={dewX > 80 ? -6 : 6} soft>
           Dew point {psia(dewPointPsia)}
@@ -237,7 +252,7 @@ function Panels({
         highest={Math.floor(dewPointPsia)}
         describe={
           state
-            ? `${formatFigure(state.condensateProduced * 100)} % of the condensate at the dew point reaches the tank, liquid in the pores ${formatFigure(state.liquidSaturation * 100)} %`
+            ? `${formatFigure((before + (1 - before) * state.condensateProduced) * 100)} % of the condensate reaches the tank, liquid in the pores ${formatFigure(state.liquidSaturation * 100)} %`
             : ""
         }
         onChange={onAbandon}
@@ -247,9 +262,12 @@ function Panels({
 }
 
 /** What abandoning at the line brings. */
-function ReadOuts({ curve, abandonmentPressurePsia }: DepletionPanelsProps) {
-  const state = curveAt(curve.curve, abandonmentPressurePsia);
-  const gain = gainPer100Psi(curve.curve, abandonmentPressurePsia);
+function ReadOuts({ curve, abandonmentPressurePsia, producedBefore }: DepletionPanelsProps) {
+  const states = fineStates(curve.curve);
+  const state = stateAt(states, abandonmentPressurePsia);
+  const gain = gainPer100Psi(states, abandonmentPressurePsia);
+  const before = producedBefore ?? 0;
+  const inPlace = producedBefore === null ? "% of that at the dew point" : "% of in place";
   const figures = [
     {
       label: "Liquid in the pores",
@@ -263,17 +281,17 @@ function ReadOuts({ curve, abandonmentPressurePsia }: DepletionPanelsProps) {
     },
     {
       label: "Condensate to the tank",
-      value: state && state.condensateProduced * 100,
-      unit: "% of that at the dew point",
+      value: state && (before + (1 - before) * state.condensateProduced) * 100,
+      unit: inPlace,
     },
     {
       label: "Left in the rock",
-      value: state && (1 - state.condensateProduced - state.condensateInGas) * 100,
+      value: state && (1 - before) * (1 - state.condensateProduced - state.condensateInGas) * 100,
       unit: "%",
     },
     {
       label: "Per 100 psi lower",
-      value: gain && gain * 100,
+      value: gain && (1 - before) * gain * 100,
       unit: "points",
       signed: true,
     },

@@ -24,8 +24,8 @@ export interface DepletionSheetProps {
   text: DepletionText;
   reading: DepletionReading;
   state: Pick<EntryState, "problems" | "remarks">;
-  /** rows that a finding is about */
-  flaggedRows: ReadonlySet<number>;
+  /** cells that a check is about */
+  flags: ReadonlySet<string>;
   /** absent: the table is read, not typed */
   onChange?: (text: DepletionText) => void;
 }
@@ -36,17 +36,12 @@ const plusOptions = Array.from({ length: 30 }, (_, index) => ({
 }));
 
 /** A constant-volume depletion as the laboratory's table has it; figures and produced gas one after the other. */
-export function DepletionSheet({
-  text,
-  reading,
-  state,
-  flaggedRows,
-  onChange,
-}: DepletionSheetProps) {
+export function DepletionSheet({ text, reading, state, flags, onChange }: DepletionSheetProps) {
   const [part, setPart] = useState<"figures" | "gas">("figures");
   const [isTurned, setTurned] = useState(false);
   const entry: EntryState = {
     ...state,
+    flags,
     cells: text.cells,
     fields: reading.fields,
     onChange: onChange && ((changes) => onChange(withCells(text, changes))),
@@ -117,7 +112,6 @@ export function DepletionSheet({
                 <DepletionRow
                   key={row}
                   {...{ row, part, text, entry }}
-                  isFlagged={flaggedRows.has(row)}
                   onRemove={onChange && (() => onChange(withoutRow(text, row)))}
                 />
               ))}
@@ -179,14 +173,12 @@ function DepletionRow({
   part,
   text,
   entry,
-  isFlagged,
   onRemove,
 }: {
   row: number;
   part: "figures" | "gas";
   text: DepletionText;
   entry: EntryState;
-  isFlagged: boolean;
   onRemove?: () => void;
 }) {
   const pressure = { place: `rows.${row}.pressurePsia`, label: `Step ${row + 1}, pressure` };
@@ -202,7 +194,7 @@ function DepletionRow({
         }));
   return (
     <>
-      <tr className={isFlagged ? "flagged" : undefined}>
+      <tr>
         <th scope="row" className="entry">
           <EntryCell {...pressure} state={entry} />
         </th>

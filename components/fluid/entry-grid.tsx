@@ -15,6 +15,8 @@ export interface EntryState {
   problems: Cells;
   /** what a laboratory's file said there and why it was not read, by place */
   remarks: Cells;
+  /** places that a check is about */
+  flags?: ReadonlySet<string>;
   /** absent: the grid is read, not typed */
   onChange?: (changes: Cells) => void;
 }
@@ -107,7 +109,7 @@ export function EntryCell({
         label={label}
         value={text}
         reading={{ ...(state.fields[place] ?? UNREAD), problem: problemAt(state, place) }}
-        flagged={state.remarks[place] !== undefined}
+        flagged={state.remarks[place] !== undefined || state.flags?.has(place)}
         describedBy={`about-${place}`}
         onChange={(value) => onChange({ [place]: value })}
       />

@@ -9,6 +9,7 @@ import { formatFigure, MISSING } from "@/components/ui/format";
 import { Unit } from "@/components/ui/text";
 import type { AvailableCurve } from "./available-curves";
 import { mostLiquid } from "./curve-reading";
+import { psia } from "./words";
 
 export interface FluidFiguresProps {
   wellstream: WellstreamResponse | null;
@@ -86,7 +87,7 @@ export function FluidFigures(props: FluidFiguresProps) {
       value: most && most.liquidSaturation * 100,
       unit: most ? "%" : "",
       note: most
-        ? `at ${formatFigure(most.pressurePsia, { digits: 4 })} psia; ${curve?.label.toLowerCase()}`
+        ? `at ${psia(most.pressurePsia)} psia; ${curve?.label.toLowerCase()}`
         : "needs a composition or a depletion table",
     },
     {
@@ -112,7 +113,7 @@ export function FluidFigures(props: FluidFiguresProps) {
         composition?.fluidType.label ??
         (wellstream ? fluidTypeLabels[wellstream.fluidType] : MISSING),
       note: composition
-        ? `${composition.fluidType.rule} ${composition.fluidType.source}`
+        ? `${composition.fluidType.rule}; ${composition.fluidType.source}`
         : wellstream
           ? "from the separator test"
           : "",
@@ -123,7 +124,7 @@ export function FluidFigures(props: FluidFiguresProps) {
       {figures.map(({ name, value, text, unit, note, digits }) => (
         <div key={name}>
           <dt>{name}</dt>
-          <dd>
+          <dd data-words={text === undefined ? undefined : ""}>
             {text ??
               (value === null || value === undefined ? (
                 MISSING

@@ -7,6 +7,7 @@ import { ComponentSymbol } from "./component-label";
 import { toneOfComponent } from "./component-names";
 import { gasGroups, producedGasOf } from "./lump-gas";
 import { roundScale, spread, yTicksOf } from "./plot-scale";
+import { psia } from "./words";
 
 export interface GasCompositionChartProps {
   table: DepletionTable;
@@ -30,7 +31,7 @@ export function GasCompositionChart({ table, source, fileName }: GasCompositionC
   const leanestAt = steps[heavy.indexOf(leanest)].pressurePsia;
   return (
     <ChartFrame
-      title={`Heptanes plus in the produced gas: ${formatFigure(heavy[0])} mol % at first, ${formatFigure(leanest)} at ${formatFigure(leanestAt, { digits: 4 })} psia`}
+      title={`Heptanes plus in the produced gas: ${formatFigure(heavy[0])} mol % at first, ${formatFigure(leanest)} at ${psia(leanestAt)} psia`}
       note={`${sourceWords[source]}; butanes and pentanes taken together. Log scale.`}
       fileName={fileName}
       data={{

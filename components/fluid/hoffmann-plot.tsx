@@ -5,6 +5,7 @@ import { linePath, positionOn, ticksOf } from "@/components/charts/scale";
 import { formatFigure } from "@/components/ui/format";
 import { ComponentSymbol } from "./component-label";
 import { roundScale, yTicksOf } from "./plot-scale";
+import { psia } from "./words";
 
 type Step = DepletionResponse["hoffmann"][number];
 
@@ -16,7 +17,7 @@ export function HoffmannPlot({ steps, fileName }: { steps: readonly Step[]; file
   if (steps.length === 0) return null;
   const worst = steps.reduce((least, step) => (step.rSquared < least.rSquared ? step : least));
   const isStraight = worst.rSquared >= STRAIGHT;
-  const at = `${formatFigure(worst.pressurePsia, { digits: 4 })} psia`;
+  const at = `${psia(worst.pressurePsia)} psia`;
   const squared = formatFigure(worst.rSquared, { digits: 4 });
   return (
     <ChartFrame
@@ -66,7 +67,7 @@ function HoffmannLines({ steps, worst }: { steps: readonly Step[]; worst: Step }
   ];
   return (
     <Plot
-      label={`Hoffmann plot of ${steps.length} steps; the least straight is at ${formatFigure(worst.pressurePsia, { digits: 4 })} psia with r² ${formatFigure(worst.rSquared, { digits: 4 })}.`}
+      label={`Hoffmann plot of ${steps.length} steps; the least straight is at ${psia(worst.pressurePsia)} psia with r² ${formatFigure(worst.rSquared, { digits: 4 })}.`}
       height={300}
       left={40}
       tone="condensate"

@@ -5,6 +5,7 @@ import { Plot, PlotDot, PlotLabel } from "@/components/charts/plot";
 import { linePath, positionOn, ticksOf, type Scale } from "@/components/charts/scale";
 import { formatFigure } from "@/components/ui/format";
 import { Flag } from "@/components/ui/text";
+import { psia } from "./words";
 import { clippedLine, roundScale, yTicksOf } from "./plot-scale";
 
 type Envelope = EquationOfStateResponse["envelope"];
@@ -18,8 +19,6 @@ export interface PhaseEnvelopeProps {
   stages: readonly SeparatorStage[];
   fileName: string;
 }
-
-const psia = (value: number) => formatFigure(value, { digits: 4 });
 
 /** "Liquid starts to drop out 1,474 psi below initial pressure", from the measured dew point where there is one. */
 export function envelopeFinding(
@@ -66,7 +65,7 @@ export function PhaseEnvelope(props: PhaseEnvelopeProps) {
             </>
           )}{" "}
           {mismatch !== null &&
-            `Computed dew point ${psia(saturation.upperPsia ?? 0)} psia, measured ${psia(saturation.measuredPsia ?? 0)}: ${formatFigure(mismatch, { signed: true, digits: 3 })} psi. `}
+            `Computed dew point ${psia(saturation.upperPsia)} psia, measured ${psia(saturation.measuredPsia)}: ${formatFigure(mismatch, { signed: true, digits: 3 })} psi. `}
           What stays in the rock follows the black line, what is produced the blue one; between
           reservoir and separator it is not computed.
         </>
@@ -105,7 +104,7 @@ function rowsOf(
     ...line("Bubble points", envelope.bubble),
     ...line("Dew points", envelope.dew),
     ...envelope.quality.flatMap(({ liquidVolumeFraction, points }) =>
-      line(`${formatFigure(liquidVolumeFraction * 100, { digits: 2 })} % liquid`, points),
+      line(`${formatFigure(liquidVolumeFraction * 100, { decimals: 0 })} % liquid`, points),
     ),
   ];
 }
@@ -165,7 +164,7 @@ function EnvelopePlot({
       xTicks={ticksOf(x, 6)}
       shapes={
         <>
-          {outline.length > 2 && <path className="area" opacity={0.6} d={`${draw(outline)}Z`} />}
+          {outline.length > 2 && <path className="area" opacity={0.6} d={draw(closed(outline))} />}
           {envelope.quality.map(({ liquidVolumeFraction, points }) => (
             <path
               key={liquidVolumeFraction}
@@ -264,6 +263,12 @@ function DewPointMarks({
 }) {
   const { measuredPsia, upperPsia, kind } = saturation;
   const name = kind === "bubblePoint" ? "Bubble point" : "Dew point";
+  // Two labels a line apart, where their points are nearer than that [% of the height].
+  const apart =
+    measuredPsia === null || upperPsia === null
+      ? Infinity
+      : place(0, upperPsia).y - place(0, measuredPsia).y;
+  const besideMeasured = Math.abs(apart) < 4 ? (apart >= 0 ? 16 : -16) : 0;
   return (
     <>
       {measuredPsia !== null && (
@@ -275,8 +280,8 @@ function DewPointMarks({
         <Mark
           {...place(temperatureDegF, upperPsia)}
           shape="open"
-          anchor={measuredPsia === null ? "start" : "end"}
-          dy={measuredPsia === null ? 0 : 12}
+          anchor="start"
+          dy={besideMeasured}
           toned
         >
           {measuredPsia === null && <b>{name} </b>}
@@ -321,23 +326,32 @@ function Mark({
   );
 }
 
-/** Each line's share of liquid, in the middle of it. */
+/** Each line's share of liquid, where it reaches farthest to the right: there the lines lie apart. */
 function QualityLabels({ quality, x, y }: { quality: Envelope["quality"]; x: Scale; y: Scale }) {
   return quality.map(({ liquidVolumeFraction, points }) => {
-    const middle = points[Math.floor(points.length * 0.45)];
-    if (!middle) return null;
+    if (points.length === 0) return null;
+    const tip = points.reduce((far, point) =>
+      point.temperatureDegF > far.temperatureDegF ? point : far,
+    );
     const at = {
-      x: positionOn(x, middle.temperatureDegF),
-      y: 100 - positionOn(y, middle.pressurePsia),
+      x: positionOn(x, tip.temperatureDegF),
+      y: 100 - positionOn(y, tip.pressurePsia),
     };
     if (at.x < 5 || at.x > 95 || at.y < 5 || at.y > 95) return null;
     return (
       <PlotLabel key={liquidVolumeFraction} {...at} soft>
-        {formatFigure(liquidVolumeFraction * 100, { digits: 2 })} %
+        {formatFigure(liquidVolumeFraction * 100, { decimals: 0 })} %
       </PlotLabel>
     );
   });
 }
+
+/** The outline down to the axis at both ends, where the lines leave the picture or were not followed further. */
+const closed = (outline: readonly EnvelopePoint[]): EnvelopePoint[] => [
+  { ...outline[0], pressurePsia: 0 },
+  ...outline,
+  { ...outline[outline.length - 1], pressurePsia: 0 },
+];
 
 /** Bubble points by rising temperature, then the dew line onward from where they meet. */
 function outlineOf({ bubble, dew }: Envelope): EnvelopePoint[] {

@@ -9,6 +9,7 @@ import type { Finding } from "@/components/estimate/finding-list";
 import { formatFigure } from "@/components/ui/format";
 import type { AvailableCurve } from "./available-curves";
 import { mostLiquid } from "./curve-reading";
+import { psia } from "./words";
 
 /** Two roads to one gravity may differ by this much before somebody should look; common practice, no source. */
 const GRAVITY_TOLERANCE = 0.02;
@@ -39,13 +40,7 @@ export function sampleFindings(evidence: SampleEvidence): Finding[] {
     ...dewPoints(evidence),
     ...tuningAge(evidence),
     ...yields(evidence),
-    ...(evidence.depletion?.findings ?? []).map(
-      ({ severity, title, message }): Finding => ({
-        tone: tones[severity],
-        title,
-        text: message,
-      }),
-    ),
+    ...tableChecks(evidence),
     ...band(evidence),
     ...[
       ...(evidence.composition?.warnings ?? []),
@@ -62,6 +57,27 @@ export function sampleFindings(evidence: SampleEvidence): Finding[] {
         }),
       ),
   ];
+}
+
+/** Checks of the depletion table; one that fails in several rows is one finding. */
+function tableChecks({ depletion }: SampleEvidence): Finding[] {
+  const found = depletion?.findings ?? [];
+  const isFirst = (index: number) =>
+    found.findIndex(
+      ({ code, severity }) => code === found[index].code && severity === found[index].severity,
+    ) === index;
+  return found.flatMap(({ code, severity, title, message }, index): Finding[] => {
+    if (!isFirst(index)) return [];
+    const more =
+      found.filter((other) => other.code === code && other.severity === severity).length - 1;
+    return [
+      {
+        tone: tones[severity],
+        title,
+        text: more === 0 ? message : `${message} And ${more} more of the kind.`,
+      },
+    ];
+  });
 }
 
 function gravities({ wellstream, composition }: SampleEvidence): Finding[] {
@@ -83,7 +99,7 @@ function dewPoints({ equationOfState, dewPoints: { test, table } }: SampleEviden
     findings.push({
       tone: "warning",
       title: "Two dew points",
-      text: `The separator sheet says ${formatFigure(test, { digits: 4 })} psia, the depletion table ${formatFigure(table, { digits: 4 })} psia. The table’s is used.`,
+      text: `The separator sheet says ${psia(test)} psia, the depletion table ${psia(table)} psia. The table’s is used.`,
     });
   }
   const mismatch = equationOfState?.saturation.mismatchPsia ?? null;
@@ -93,7 +109,7 @@ function dewPoints({ equationOfState, dewPoints: { test, table } }: SampleEviden
       title: equationOfState.isTuned
         ? "Dew point of the tuned equation of state"
         : "Dew point of the untuned equation of state",
-      text: `${formatFigure(equationOfState.saturation.upperPsia, { digits: 4 })} psia: ${formatFigure(Math.abs(mismatch))} psi ${mismatch > 0 ? "above" : "below"} the measured one.`,
+      text: `${psia(equationOfState.saturation.upperPsia)} psia: ${formatFigure(Math.abs(mismatch))} psi ${mismatch > 0 ? "above" : "below"} the measured one.`,
     });
   }
   return findings;
@@ -108,7 +124,7 @@ function tuningAge({ tuning, dewPoints: { test, table } }: SampleEvidence): Find
     {
       tone: "warning",
       title: "Tuned to another dew point",
-      text: `The fit was made to ${formatFigure(tuning.measuredDewPointPsia, { digits: 4 })} psia; the sheet now says ${formatFigure(measured, { digits: 4 })} psia. Run the tuning again.`,
+      text: `The fit was made to ${psia(tuning.measuredDewPointPsia)} psia; the sheet now says ${psia(measured)} psia. Run the tuning again.`,
     },
   ];
 }
@@ -139,7 +155,7 @@ function band({ curve, criticalBand }: SampleEvidence): Finding[] {
       title: isOver
         ? "Dropout passes the critical saturation"
         : "Dropout reaches into the critical band",
-      text: `${formatFigure(percent)} % at ${formatFigure(most.pressurePsia, { digits: 4 })} psia, band ${formatFigure(criticalBand.low, { digits: 2 })} to ${formatFigure(criticalBand.high, { digits: 2 })} %: ${isOver ? "some" : "some perhaps"} of it may flow, while these figures leave all of it in the rock.`,
+      text: `${formatFigure(percent)} % at ${psia(most.pressurePsia)} psia, band ${formatFigure(criticalBand.low, { digits: 2 })} to ${formatFigure(criticalBand.high, { digits: 2 })} %: ${isOver ? "some" : "some perhaps"} of it may flow, while these figures leave all of it in the rock.`,
     },
   ];
 }

@@ -4,6 +4,7 @@ import { Plot, PlotDot, PlotLabel } from "@/components/charts/plot";
 import { linePath, positionOn, ticksOf } from "@/components/charts/scale";
 import { formatFigure } from "@/components/ui/format";
 import { roundScale, yTicksOf } from "./plot-scale";
+import { psia } from "./words";
 
 export interface TuningChartProps {
   result: Pick<TuningResponse, "before" | "after">;
@@ -48,7 +49,7 @@ export function TuningChart({ result, measured }: TuningChartProps) {
       level={3}
       title={
         after.averageLiquidErrorPoints === null
-          ? `Dew point ${formatFigure(after.dewPointPsia, { digits: 4 })} psia after the fit`
+          ? `Dew point ${psia(after.dewPointPsia)} psia after the fit`
           : `Dropout misses the laboratory by ${error(after)} points on average, before by ${error(before)}`
       }
       note="Squares: measured. Dashed: before. Firm: after."
@@ -69,7 +70,7 @@ export function TuningChart({ result, measured }: TuningChartProps) {
       }}
     >
       <Plot
-        label={`Dropout before and after tuning. Dew point measured ${formatFigure(measured.dewPointPsia, { digits: 4 })}, before ${formatFigure(before.dewPointPsia, { digits: 4 })}, after ${formatFigure(after.dewPointPsia, { digits: 4 })} psia.`}
+        label={`Dropout before and after tuning. Dew point measured ${psia(measured.dewPointPsia)}, before ${psia(before.dewPointPsia)}, after ${psia(after.dewPointPsia)} psia.`}
         height={200}
         left={46}
         tone="rock"

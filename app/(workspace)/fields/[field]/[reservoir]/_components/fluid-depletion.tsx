@@ -1,6 +1,5 @@
 "use client";
 
-import { useState } from "react";
 import { DailyRates } from "@/components/estimate/daily-rates";
 import { BalanceTable, GasTable } from "@/components/estimate/wellstream-view";
 import { CriticalBandFields } from "@/components/fluid/critical-band-fields";
@@ -8,18 +7,20 @@ import { DepletionPanels } from "@/components/fluid/depletion-panels";
 import { DepletionSheet } from "@/components/fluid/depletion-sheet";
 import { emptyDepletion } from "@/components/fluid/depletion-text";
 import { GasCompositionChart } from "@/components/fluid/gas-composition-chart";
+import { producedBeforeDewPoint } from "@/components/fluid/above-dew-point";
 import { HoffmannPlot } from "@/components/fluid/hoffmann-plot";
 import { Button } from "@/components/ui/button";
 import { Segmented } from "@/components/ui/choice";
 import { formatPercent } from "@/components/ui/format";
 import { Columns, Section, Stack } from "@/components/ui/section";
 import { Skeleton } from "@/components/ui/status";
+import { ConceptComparison } from "./concept-comparison";
 import { keep } from "./fluid-entry";
 import type { FluidPartProps } from "./fluid-sample";
 
 interface DepletionProps extends FluidPartProps {
-  abandonment: number | null;
-  onAbandon: (pressurePsia: number) => void;
+  /** the saved sample's name */
+  sampleName: string | null;
 }
 
 /** What drops out, what is produced, and the laboratory's table that says so. */
@@ -32,18 +33,19 @@ export function FluidDepletion(props: DepletionProps) {
   return (
     <div id="depletion">
       <Stack close>
-        <Columns>
-          <Panels {...props} />
-          {gasTable && (
-            <GasCompositionChart
-              table={gasTable}
-              source={
-                measuredGas ? "laboratory" : equationOfState.data?.isTuned ? "tuned" : "untuned"
-              }
-              fileName={`${place}-produced-gas`}
-            />
-          )}
-        </Columns>
+        <ConceptComparison
+          curves={study.curves}
+          fluid={
+            study.sheet && {
+              sheet: study.sheet,
+              characterisation: props.draft.reading.characterisation,
+            }
+          }
+          sampleName={props.sampleName}
+          route={props.curve?.route}
+          criticalBand={props.criticalBand}
+          beside={<Panels {...props} />}
+        />
         <TableSection {...props} />
         <Columns kind="equal">
           {depletion.data && depletion.data.hoffmann.length > 0 && (
@@ -73,15 +75,15 @@ function Panels({
   study,
   reservoir,
   place,
+  curve,
+  setRoute,
   abandonment,
   onAbandon,
   criticalBand,
   setCriticalBand,
 }: DepletionProps) {
   const { curves, table } = study;
-  const [route, setRoute] = useState<string | null>(null);
-  const curve = curves.find((candidate) => candidate.route === route) ?? curves.at(0);
-  if (!curve) {
+  if (!curve || abandonment === null) {
     return (
       <Section title="Depletion">
         {study.equationOfState.isFetching || study.depletion.isFetching ? (
@@ -95,11 +97,6 @@ function Panels({
       </Section>
     );
   }
-  const { points, dewPointPsia } = curve.curve;
-  const lowest = Math.ceil(points[points.length - 1].pressurePsia);
-  // A fifth of the dew point is only where the line begins; it is there to be moved.
-  const start = Math.round(dewPointPsia / 50) * 10;
-  const at = Math.min(Math.floor(dewPointPsia), Math.max(lowest, abandonment ?? start));
   return (
     <div className={study.depletion.isStale || study.equationOfState.isStale ? "stale" : undefined}>
       <DepletionPanels
@@ -110,7 +107,12 @@ function Panels({
         }
         initialPressurePsia={reservoir?.pressurePsia ?? null}
         criticalBand={criticalBand}
-        abandonmentPressurePsia={at}
+        producedBefore={producedBeforeDewPoint(
+          study.wellstream.data?.pseudocritical ?? null,
+          reservoir,
+          curve.curve.dewPointPsia,
+        )}
+        abandonmentPressurePsia={abandonment}
         onAbandon={onAbandon}
         fileName={`${place}-depletion`}
       />
@@ -184,10 +186,12 @@ function TableSection({ draft, study, mayType, reservoir, remarks, setRemarks }:
         text={depletion}
         reading={reading.depletion}
         state={{ problems: study.problems.depletion, remarks: remarks.depletion }}
-        flaggedRows={
+        flags={
           new Set(
-            worst.flatMap(({ row }) =>
-              row === null ? [] : [reading.depletion?.rowsOfTable[row] ?? row],
+            worst.flatMap(({ row, column }) =>
+              row === null || column === null
+                ? []
+                : [`rows.${reading.depletion?.rowsOfTable[row] ?? row}.${column}`],
             ),
           )
         }

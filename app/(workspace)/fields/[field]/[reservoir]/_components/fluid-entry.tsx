@@ -14,6 +14,7 @@ import { CompositionFacts, CompositionSheet } from "@/components/fluid/compositi
 import { sampleFindings } from "@/components/fluid/sample-findings";
 import { WellstreamTable } from "@/components/fluid/wellstream-table";
 import { Segmented } from "@/components/ui/choice";
+import { Disclosure } from "@/components/ui/dialog";
 import { formatFigure } from "@/components/ui/format";
 import { Section, Stack } from "@/components/ui/section";
 import type { FluidPartProps } from "./fluid-sample";
@@ -105,7 +106,7 @@ export function keep(
       );
 }
 
-function ChecksSection({ draft, study, reservoir, criticalBand }: FluidPartProps) {
+function ChecksSection({ draft, study, reservoir, criticalBand, curve }: FluidPartProps) {
   const { text, reading } = draft;
   const wellstream = study.wellstream.data ?? null;
   const isMeasured = text.origin === "measured";
@@ -115,7 +116,7 @@ function ChecksSection({ draft, study, reservoir, criticalBand }: FluidPartProps
       composition: study.composition.data,
       equationOfState: study.equationOfState.data,
       depletion: study.depletion.data,
-      curve: study.curves.at(0) ?? null,
+      curve,
       tuning: text.tuning,
       dewPoints: {
         test: reading.separator.fields.dewPointPsia.value,
@@ -128,9 +129,18 @@ function ChecksSection({ draft, study, reservoir, criticalBand }: FluidPartProps
       : []),
   ];
   if (findings.length === 0) return null;
+  const passed = findings.filter(({ tone }) => tone === "done");
   return (
     <Section id="checks" title="Does the sample hold together?">
-      <FindingList findings={findings} />
+      <FindingList findings={findings.filter(({ tone }) => tone !== "done")} />
+      {passed.length > 0 && (
+        <Disclosure
+          label={passed.length === 1 ? "One check passed" : `${passed.length} checks passed`}
+          defaultOpen={passed.length === findings.length}
+        >
+          <FindingList findings={passed} />
+        </Disclosure>
+      )}
     </Section>
   );
 }

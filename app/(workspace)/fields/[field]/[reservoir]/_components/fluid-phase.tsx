@@ -12,7 +12,7 @@ import type { FluidPartProps } from "./fluid-sample";
 import { FluidTuning } from "./fluid-tuning";
 
 /** The phase envelope with what it is computed from: separators, split of the heavy end, tuning. */
-export function FluidPhase(props: FluidPartProps & { abandonmentPressurePsia: number | null }) {
+export function FluidPhase(props: FluidPartProps) {
   const { study, reservoir, place } = props;
   const { equationOfState } = study;
   return (
@@ -24,7 +24,7 @@ export function FluidPhase(props: FluidPartProps & { abandonmentPressurePsia: nu
               result={equationOfState.data}
               temperatureDegF={study.temperatureDegF}
               initialPressurePsia={reservoir?.pressurePsia ?? null}
-              abandonmentPressurePsia={props.abandonmentPressurePsia}
+              abandonmentPressurePsia={props.abandonment}
               stages={props.draft.reading.stages}
               fileName={`${place}-phase-envelope`}
             />

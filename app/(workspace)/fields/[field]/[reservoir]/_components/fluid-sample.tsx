@@ -5,6 +5,8 @@ import { errorWords } from "@/app/_client/request";
 import { useCan } from "@/app/_client/use-session";
 import type { FluidSampleView } from "@/app/api/v1/fluid-samples/schema";
 import { isSameFluid } from "@/components/estimate/differences";
+import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
+import type { AvailableCurve } from "@/components/fluid/available-curves";
 import { FluidFigures } from "@/components/fluid/fluid-figures";
 import { noRemarks, type SheetRemarks } from "@/components/fluid/take-lab-sheet";
 import { Button } from "@/components/ui/button";
@@ -42,13 +44,15 @@ export function FluidSample({
   const mayType = can(sample ? "fluidSample.update" : "fluidSample.create");
   const [isUsing, setUsing] = useState(false);
   const [remarks, setRemarks] = useState<SheetRemarks>(noRemarks);
-  const [abandonment, setAbandonment] = useState<number | null>(null);
+  const [route, setRoute] = useState<RecoveryRoute | null>(null);
+  const [typedAbandonment, setAbandonment] = useState<number | null>(null);
   const [criticalBand, setCriticalBand] = useState(usualCriticalBand);
   const { text, reading } = draft;
   const reservoir = stateOf(estimate);
   const study = useFluidStudy(text, reading, reservoir);
   const wellstream = study.wellstream.data ?? null;
-  const curve = study.curves.at(0) ?? null;
+  const curve =
+    study.curves.find((candidate) => candidate.route === route) ?? study.curves.at(0) ?? null;
   const place = `${page.field.slug}-${page.slug}`;
   const isReady = wellstream !== null && study.test !== null && !study.wellstream.error;
   const shared = {
@@ -61,6 +65,10 @@ export function FluidSample({
     setRemarks,
     criticalBand,
     setCriticalBand,
+    curve,
+    setRoute,
+    abandonment: curve && abandonmentOn(curve, typedAbandonment),
+    onAbandon: setAbandonment,
   };
 
   return (
@@ -103,9 +111,9 @@ export function FluidSample({
       <Failures study={study} />
       <div className="fluid-top">
         <FluidEntry {...shared} />
-        <FluidPhase {...shared} abandonmentPressurePsia={abandonment} />
+        <FluidPhase {...shared} />
       </div>
-      <FluidDepletion {...shared} abandonment={abandonment} onAbandon={setAbandonment} />
+      <FluidDepletion {...shared} sampleName={sample?.name ?? null} />
       {mayType && (
         <div id="keep">
           <SampleForm
@@ -142,6 +150,21 @@ export interface FluidPartProps {
   /** per cent of pore space */
   criticalBand: { low: number; high: number };
   setCriticalBand: (band: { low: number; high: number }) => void;
+  /** what figures stand on; `null` while there is none */
+  curve: AvailableCurve | null;
+  setRoute: (route: RecoveryRoute) => void;
+  /** psia, on the curve; `null` without one */
+  abandonment: number | null;
+  onAbandon: (pressurePsia: number) => void;
+}
+
+/** Where the line of abandonment stands: where it was put, as far as the curve is known there. */
+function abandonmentOn({ curve }: AvailableCurve, wanted: number | null): number {
+  const { points, dewPointPsia } = curve;
+  const lowest = Math.ceil(points[points.length - 1].pressurePsia);
+  // A fifth of the dew point is only where the line begins; it is there to be moved.
+  const start = Math.round(dewPointPsia / 50) * 10;
+  return Math.min(Math.floor(dewPointPsia), Math.max(lowest, wanted ?? start));
 }
 
 /** Calculations that gave no answer for a reason that belongs to no field. */
