@@ -18,9 +18,11 @@ export function PlanDifferenceTable({
       <div className="mt-6 grid gap-1.5">
         <h3>How recoveries come about{before ? ` is as in r${before.revision}` : ""}</h3>
         <p className="text-13 text-ink-soft">{planInWords(now)}.</p>
-        <p>
-          <RouteFlag route={now.curve.route} />
-        </p>
+        {isWeakRoute(now.curve.route) && (
+          <p>
+            <RouteFlag route={now.curve.route} />
+          </p>
+        )}
       </div>
     ) : null;
   }
@@ -45,9 +47,11 @@ export function PlanDifferenceTable({
           ))}
         </tbody>
       </LedgerTable>
-      <p>
-        <RouteFlag route={now?.curve.route} />
-      </p>
+      {now && isWeakRoute(now.curve.route) && (
+        <p>
+          <RouteFlag route={now.curve.route} />
+        </p>
+      )}
     </div>
   );
 }

@@ -20,26 +20,21 @@ const about: Record<PlanFieldName, { label: string; unit?: string; hint?: string
 export interface PlanFieldsProps {
   text: PlanText;
   reading: PlanReading;
-  /** those of the concept's own, those that all concepts share, or both */
-  part?: "own" | "shared" | "all";
+  /** those of the concept alone, the water that all concepts share, or all */
+  part?: "own" | "water" | "all";
   /** absent: the figures are read, not typed */
   onChange?: (text: PlanText) => void;
 }
 
-const shared: readonly PlanFieldName[] = [
-  "criticalLow",
-  "criticalHigh",
-  "invadedFraction",
-  "trappedGasSaturation",
-];
+const parts: Record<"own" | "water", readonly PlanFieldName[]> = {
+  own: ["cyclingPressurePsia", "injectedPoreVolumes", "fuelFraction"],
+  water: ["invadedFraction", "trappedGasSaturation"],
+};
 
 /** Single figures of a plan: the band of critical saturation, the water, and how gas is injected. */
 export function PlanFields({ text, reading, part = "all", onChange }: PlanFieldsProps) {
   if (!onChange) return <PlanSettings reading={reading} />;
-  const isShared = (name: PlanFieldName) => shared.includes(name);
-  const shown = shownFields(text).filter(
-    (name) => part === "all" || isShared(name) === (part === "shared"),
-  );
+  const shown = shownFields(text).filter((name) => part === "all" || parts[part].includes(name));
   const field = (name: PlanFieldName) =>
     shown.includes(name) && (
       <NumberField
@@ -56,7 +51,7 @@ export function PlanFields({ text, reading, part = "all", onChange }: PlanFields
         }
       />
     );
-  const hasCycling = part !== "shared" && text.concept === "cycling";
+  const hasCycling = part !== "water" && text.concept === "cycling";
   return (
     <div className="plan-fields">
       {field("criticalLow")}

@@ -22,10 +22,10 @@ interface Line {
   of?: string;
 }
 
-const groups: { title: string; part: "shared" | "own"; lines: Line[] }[] = [
+const groups: { title: string; part: "water" | "own"; lines: Line[] }[] = [
   {
     title: "All concepts",
-    part: "shared",
+    part: "water",
     lines: [{ name: "condensateCurveFactor", concept: "depletion" }],
   },
   {
@@ -75,7 +75,7 @@ export function AssumptionTable({
         </thead>
         <tbody>
           {groups.map((group) => {
-            const { concept } = group.part === "shared" ? group.lines[0] : lines[lines.length - 1];
+            const { concept } = group.part === "water" ? group.lines[0] : lines[lines.length - 1];
             const { text, reading } = texts[concept];
             return [
               <GroupRow key={group.title} columns={7}>

@@ -20,6 +20,8 @@ export interface ConceptStart {
   /** of the estimate; `null` while it is not known */
   pressurePsia: { p90: number; p50: number } | null;
   depthFt: number | null;
+  /** liquid below it does not flow; fractions of pore space */
+  criticalSaturation: { low: number; high: number };
 }
 
 /** What was typed over the figures to start from. Only the abandonment pressure is each concept's own. */
@@ -114,7 +116,7 @@ export function startingPlan(concept: ProducingConcept, start: ConceptStart): Re
       distribution: { kind: "pert", low: 1 - spread, mode: 1, high: 1 + spread },
       source: `${sample}${routeLabels[curve.route].toLowerCase()} curve; ± ${percent} % is common practice, no source`,
     },
-    criticalSaturation: { low: 0.1, high: 0.2 },
+    criticalSaturation: start.criticalSaturation,
     waterDrive: { kind: "none" },
     cycling:
       concept === "cycling"
@@ -184,7 +186,10 @@ export function withEdit(edits: ConceptEdits, now: PlanText, next: PlanText): Co
   };
 }
 
-/** A plan of the draft as edits, so that the comparison begins with what the draft has. */
+/**
+ * A plan of the draft as edits, so that the comparison begins with what the draft has. Its band of critical saturation is
+ * not among them: the comparison takes the one that is set at the curve.
+ */
 export function editsOfPlan(plan: PlanText): ConceptEdits {
   const used = plan.concept === "cycling" ? planInputNames : (["condensateCurveFactor"] as const);
   return {
@@ -194,7 +199,11 @@ export function editsOfPlan(plan: PlanText): ConceptEdits {
         .filter((name) => name !== "abandonmentPressurePsia")
         .map((name) => [name, plan.inputs[name]]),
     ),
-    fields: Object.fromEntries(Object.entries(plan.fields).filter(([, value]) => value !== "")),
+    fields: Object.fromEntries(
+      Object.entries(plan.fields).filter(
+        ([name, value]) => value !== "" && name !== "criticalLow" && name !== "criticalHigh",
+      ),
+    ),
     waterDrive: plan.waterDrive,
     ...(plan.concept === "cycling" && { pressure: plan.pressure }),
   };

@@ -23,6 +23,7 @@ const start: ConceptStart = {
   sampleName: "A/1",
   pressurePsia: { p90: 6_300, p50: 6_500 },
   depthFt: 12_500,
+  criticalSaturation: { low: 0.1, high: 0.2 },
 };
 
 describe("startingPlan(concept, start)", () => {
@@ -78,7 +79,7 @@ describe("withEdit(edits, now, next)", () => {
     const edits = withEdit(noEdits, now, {
       ...now,
       inputs: { ...now.inputs, abandonmentPressurePsia: typed, condensateCurveFactor: factor },
-      fields: { ...now.fields, criticalHigh: "0.25" },
+      fields: { ...now.fields, invadedFraction: "0.25" },
     });
     expect(isEdited(noEdits)).toBe(false);
     expect(isEdited(edits)).toBe(true);
@@ -88,7 +89,7 @@ describe("withEdit(edits, now, next)", () => {
     expect(compression.inputs.abandonmentPressurePsia).toBe(typed);
     expect(depletion.inputs.abandonmentPressurePsia).not.toBe(typed);
     expect(depletion.inputs.condensateCurveFactor).toBe(factor);
-    expect(depletion.fields.criticalHigh).toBe("0.25");
+    expect(depletion.fields.invadedFraction).toBe("0.25");
   });
 
   it("follows another curve with what nobody has changed", () => {

@@ -8,6 +8,7 @@ import {
   type RankingColumnId,
 } from "@/analytics/portfolio/ranking-columns";
 import type { RankingRow } from "@/app/api/v1/fields/ranking-schema";
+import { RouteFlag } from "@/components/estimate/route-flag";
 import { capital, type Reporting } from "@/components/portfolio/reporting";
 import { formatDate, MISSING } from "@/components/ui/format";
 import { FigureCell } from "@/components/ui/table";
@@ -41,7 +42,7 @@ const flagWords: Record<string, string> = {
   high_pressure_high_temperature: "HPHT",
 };
 
-/** The field's name, linked, with the engine's cautions. */
+/** The field's name, linked, with the engine's cautions and a word for recoveries that nobody measured. */
 export function NameCell({ row, href }: { row: RankingRow; href: string }) {
   return (
     <th scope="row" className="stack-name">
@@ -49,6 +50,7 @@ export function NameCell({ row, href }: { row: RankingRow; href: string }) {
       {row.cautions.map((code) => (
         <Flag key={code}>{flagWords[code] ?? "Caution"}</Flag>
       ))}
+      <RouteFlag route={row.recoveryRoute} short />
     </th>
   );
 }

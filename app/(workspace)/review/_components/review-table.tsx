@@ -5,6 +5,7 @@ import type { ReviewItemView } from "@/app/api/v1/review/schema";
 import { useBasis } from "@/components/basis/use-basis";
 import { RangeMark, RangeScale } from "@/components/charts/range-mark";
 import { scaleFor } from "@/components/charts/scale";
+import { RouteFlag } from "@/components/estimate/route-flag";
 import { formatDate, formatPercent, fractionDigits } from "@/components/ui/format";
 import { ColumnHeading, FigureCell, LedgerTable, MarkCell } from "@/components/ui/table";
 import { Flag, StateMark, Unit } from "@/components/ui/text";
@@ -134,7 +135,8 @@ function ReviewRow({ item, unit, scale, now, p50Digits, meanDigits }: ReviewRowP
           </Flag>
         ) : (
           <span className="soft">no warnings</span>
-        )}
+        )}{" "}
+        <RouteFlag route={item.recoveryRoute} short />
       </td>
     </tr>
   );

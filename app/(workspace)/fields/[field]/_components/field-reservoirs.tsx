@@ -7,6 +7,7 @@ import { useBasis } from "@/components/basis/use-basis";
 import { RangeMark, RangeScale } from "@/components/charts/range-mark";
 import { scaleFor } from "@/components/charts/scale";
 import { resultBasisOf, resultFactor, resultUnit, scaled } from "@/components/estimate/result-rows";
+import { RouteFlag } from "@/components/estimate/route-flag";
 import { countOf, capital } from "@/components/portfolio/reporting";
 import { Button } from "@/components/ui/button";
 import { fractionDigits, MISSING } from "@/components/ui/format";
@@ -99,7 +100,8 @@ export function FieldReservoirs({ file, onAdd }: { file: FieldFileView; onAdd: (
           {rows.map(({ id, slug, name: reservoirName, depthFt, chosen, range, revisions }) => (
             <tr key={id}>
               <th scope="row" className="wrap">
-                <Link href={withBasis(`/fields/${file.field.slug}/${slug}`)}>{reservoirName}</Link>
+                <Link href={withBasis(`/fields/${file.field.slug}/${slug}`)}>{reservoirName}</Link>{" "}
+                <RouteFlag route={chosen?.recoveryRoute} short />
               </th>
               <td className="stacked-aside">
                 {chosen ? <StateMark state={chosen.state} revision={chosen.revision} /> : MISSING}

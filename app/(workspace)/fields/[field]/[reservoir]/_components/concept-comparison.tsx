@@ -1,6 +1,6 @@
 "use client";
 
-import { useState } from "react";
+import { useState, type ReactNode } from "react";
 import type { CompositionSheet } from "@/analytics/composition/composition-schema";
 import type { Characterisation } from "@/analytics/equation-of-state/characterisation-schema";
 import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
@@ -11,10 +11,11 @@ import {
 import { errorWords } from "@/app/_client/request";
 import { ChartFrame } from "@/components/charts/chart-frame";
 import { readEstimate } from "@/components/estimate/estimate-reading";
+import type { EstimateText } from "@/components/estimate/estimate-text";
 import { FindingList } from "@/components/estimate/finding-list";
 import { readPlan } from "@/components/estimate/plan-reading";
 import type { PlanText } from "@/components/estimate/plan-text";
-import { conceptLabels, isWeakRoute, shortConcepts } from "@/components/estimate/plan-words";
+import { conceptLabels, shortConcepts } from "@/components/estimate/plan-words";
 import { resultFactor, resultUnit } from "@/components/estimate/result-rows";
 import { RouteFlag } from "@/components/estimate/route-flag";
 import { routeWords, type AvailableCurve } from "@/components/fluid/available-curves";
@@ -33,10 +34,9 @@ import { conceptData, ConceptTable } from "@/components/recovery/concept-table";
 import { warningsByConcept } from "@/components/recovery/concept-warnings";
 import { GasBalance, PhaseTable } from "@/components/recovery/phase-table";
 import { Button } from "@/components/ui/button";
-import { Select } from "@/components/ui/choice";
 import { Disclosure } from "@/components/ui/dialog";
 import { formatFigure } from "@/components/ui/format";
-import { Section, Stack } from "@/components/ui/section";
+import { Columns, Section, Stack } from "@/components/ui/section";
 import { Notice, Skeleton } from "@/components/ui/status";
 import { useReservoir } from "../_editor/reservoir-context";
 import { useConcepts } from "../_queries/recovery";
@@ -50,44 +50,55 @@ export interface ConceptComparisonProps {
   fluid: { sheet: CompositionSheet; characterisation: Characterisation } | null;
   /** named in the sources of a plan that is put into the draft; `null` for a sample that was not saved */
   sampleName: string | null;
+  /** the curve that the page's figures stand on; absent: the most trusted */
+  route?: RecoveryRoute | null;
+  /** per cent of pore space, as set at the curve */
+  criticalBand: { low: number; high: number };
+  /** stands beside the bars on a wide screen */
+  beside: ReactNode;
 }
 
 /**
  * Where the liquid goes by depletion, with compression and by cycling, and the way into the draft. Needs a
  * `ReservoirProvider` above it; takes the estimate's inputs, seed, basis and draft from there.
  */
-export function ConceptComparison({ curves, fluid, sampleName }: ConceptComparisonProps) {
+export function ConceptComparison(props: ConceptComparisonProps) {
   const { text } = useReservoir();
-  if (curves.length === 0) return null;
-  if (!text) {
-    return (
+  const chosen = props.curves.find(({ route }) => route === props.route) ?? props.curves[0];
+  if (chosen && text) return <Comparison {...props} chosen={chosen} text={text} />;
+  return (
+    <Columns>
+      {props.beside}
       <Section title="Where the liquid goes">
-        <p className="text-13 text-ink-soft">Appears when an estimate is begun.</p>
+        <p className="text-13 text-ink-soft">
+          {text
+            ? "Depletion, compression and cycling stand side by side here as soon as there is a depletion curve."
+            : "Appears when an estimate is begun."}
+        </p>
       </Section>
-    );
-  }
-  return <Comparison curves={curves} fluid={fluid} sampleName={sampleName} text={text} />;
+    </Columns>
+  );
 }
 
 function Comparison({
-  curves,
+  chosen,
   fluid,
   sampleName,
+  criticalBand,
+  beside,
   text,
-}: ConceptComparisonProps & { text: NonNullable<ReturnType<typeof useReservoir>["text"]> }) {
+}: ConceptComparisonProps & { chosen: AvailableCurve; text: EstimateText }) {
   const { place, shown, draft, reading, resultBasis } = useReservoir();
   const planned = text.usesPlan ? text.plan : null;
-  const [route, setRoute] = useState<RecoveryRoute | null>(planned?.curve.route ?? null);
   const [edits, setEdits] = useState(() => (planned ? editsOfPlan(planned) : noEdits));
   const [using, setUsing] = useState<ProducingConcept | null>(null);
-  const chosen = curves.find((candidate) => candidate.route === route) ?? curves[0];
-
   const pressure = reading?.inputs.pressurePsia.compiled?.range;
   const start: ConceptStart = {
     curve: chosen.curve,
     sampleName,
     pressurePsia: pressure ?? null,
     depthFt: text.depthFt,
+    criticalSaturation: { low: criticalBand.low / 100, high: criticalBand.high / 100 },
   };
   const texts = Object.fromEntries(
     producingConcepts.map((concept) => {
@@ -118,61 +129,69 @@ function Comparison({
 
   return (
     <Stack close>
-      <ChartFrame
-        title={conceptFinding(concepts, factor, unit)}
-        note={
-          inPlace === undefined
-            ? "Condensate in place, by where it ends up."
-            : `Condensate in place ${formatFigure(inPlace * factor)} ${unit}, ${resultBasis.words.toLowerCase()}. Heading and bars: means over 4,000 trials. Mark: P90 to P10 of the share that reaches the tank.`
-        }
-        fileName={`${place.field}-${place.reservoir}-concepts`}
-        data={conceptData(concepts, resultBasis)}
-      >
-        {concepts.length > 0 ? (
-          <ConceptBars
-            concepts={concepts}
-            isStale={results.isStale}
-            action={
-              draft
-                ? (concept) => (
-                    <UseLink
-                      concept={concept}
-                      isUsed={planned?.concept === concept}
-                      isPossible={texts[concept].reading.plan !== null}
-                      onUse={() => setUsing(concept)}
-                    />
-                  )
-                : undefined
+      <Columns>
+        {beside}
+        <Stack close>
+          <ChartFrame
+            title={conceptFinding(concepts, factor, unit)}
+            note={
+              inPlace === undefined
+                ? "Condensate in place, by where it ends up."
+                : `Condensate in place ${formatFigure(inPlace * factor)} ${unit}, ${resultBasis.words.toLowerCase()}. Heading and bars: means over 4,000 trials. Mark: P90 to P10 of the share that reaches the tank.`
             }
-          />
-        ) : results.isPending ? (
-          <Skeleton lines={5} label="Setting the concepts side by side" />
-        ) : (
+            fileName={`${place.field}-${place.reservoir}-concepts`}
+            data={conceptData(concepts, resultBasis)}
+          >
+            {concepts.length > 0 ? (
+              <ConceptBars
+                concepts={concepts}
+                isStale={results.isStale}
+                action={
+                  draft
+                    ? (concept) => (
+                        <UseLink
+                          concept={concept}
+                          isUsed={planned?.concept === concept}
+                          isPossible={texts[concept].reading.plan !== null}
+                          onUse={() => setUsing(concept)}
+                        />
+                      )
+                    : undefined
+                }
+              />
+            ) : results.isPending ? (
+              <Skeleton lines={5} label="Setting the concepts side by side" />
+            ) : (
+              <p className="text-13 text-ink-soft">
+                {estimate.estimate
+                  ? "Nothing could be worked out; the assumptions below say why."
+                  : "Appears when every input of the estimate is filled in and possible. Recoveries are not needed."}
+              </p>
+            )}
+          </ChartFrame>
+          {concepts.length > 0 && <ConceptTable concepts={concepts} basis={resultBasis} />}
+          {results.errors.map(({ concept, error }) => (
+            <Notice
+              key={concept}
+              tone="error"
+              live={false}
+              title={`${conceptLabels[concept]} could not be worked out.`}
+            >
+              {errorWords(error)}
+            </Notice>
+          ))}
+          {unread.length > 0 && (
+            <Notice
+              title={`${unread.map((concept) => shortConcepts[concept]).join(", ")}: an assumption has to be filled in or corrected.`}
+              live={false}
+            />
+          )}
           <p className="text-13 text-ink-soft">
-            {estimate.estimate
-              ? "Nothing could be worked out; the assumptions below say why."
-              : "Appears when every input of the estimate is filled in and possible. Recoveries are not needed."}
+            <b className="text-ink">{chosen.label}.</b> {routeWords[chosen.route].note}{" "}
+            <RouteFlag route={chosen.route} />
           </p>
-        )}
-      </ChartFrame>
-      {concepts.length > 0 && <ConceptTable concepts={concepts} basis={resultBasis} />}
-      {results.errors.map(({ concept, error }) => (
-        <Notice
-          key={concept}
-          tone="error"
-          live={false}
-          title={`${conceptLabels[concept]} could not be worked out.`}
-        >
-          {errorWords(error)}
-        </Notice>
-      ))}
-      {unread.length > 0 && (
-        <Notice
-          title={`${unread.map((concept) => shortConcepts[concept]).join(", ")}: an assumption has to be filled in or corrected.`}
-          live={false}
-        />
-      )}
-      <CurveChoice curves={curves} chosen={chosen} onChange={setRoute} />
+        </Stack>
+      </Columns>
       <Disclosure label="Assumptions of the concepts">
         <div className="assumptions">
           <p className="text-13 text-ink-soft">
@@ -251,36 +270,5 @@ function UseLink({
         {words}
       </button>
     </span>
-  );
-}
-
-/** Which depletion the concepts follow, with what it rests on. */
-function CurveChoice({
-  curves,
-  chosen,
-  onChange,
-}: {
-  curves: readonly AvailableCurve[];
-  chosen: AvailableCurve;
-  onChange: (route: RecoveryRoute) => void;
-}) {
-  const words = routeWords[chosen.route];
-  return (
-    <div className="flex flex-wrap items-end gap-x-4 gap-y-2">
-      {curves.length > 1 && (
-        <Select
-          className="w-64 max-w-full"
-          label="Depletion curve"
-          value={chosen.route}
-          options={curves.map(({ route, label }) => ({ value: route, label }))}
-          onChange={onChange}
-        />
-      )}
-      <p className="max-w-prose text-13 text-ink-soft">
-        {curves.length === 1 && <b className="text-ink">{words.label}. </b>}
-        {words.note}
-      </p>
-      {isWeakRoute(chosen.route) && <RouteFlag route={chosen.route} />}
-    </div>
   );
 }
