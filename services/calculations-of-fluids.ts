@@ -17,6 +17,8 @@ export function calculateComposition(question: CompositionQuestion) {
 const advice: Record<FluidTaskName, string> = {
   equationOfState:
     "Try another split of heptanes plus or other adjustments, or a temperature farther from the critical point.",
+  nearWell:
+    "Try a flowing pressure farther from the reservoir's, or another split of heptanes plus.",
   recovery:
     "Try narrower ranges of pressure, or a depletion curve that goes down to a lower pressure.",
   depletion:

@@ -8,7 +8,7 @@ import {
   isTuned,
   type Characterisation,
 } from "@/analytics/equation-of-state/characterisation-schema";
-import { phaseEnvelope } from "@/analytics/equation-of-state/envelope";
+import { phaseEnvelope, type PhaseEnvelope } from "@/analytics/equation-of-state/envelope";
 import type { Characterised } from "@/analytics/equation-of-state/mixture";
 import {
   saturationPressures,
@@ -80,41 +80,41 @@ export function describePhases(question: EquationOfStateQuestion) {
   };
 }
 
-/** The diagram is drawn beside the figures; where it cannot be traced, they stand all the same, and it is said. */
+/** The diagram is drawn beside the figures; what of it cannot be traced is left out, and said. */
 function envelopeOf({ mixture, moleFractions }: Characterised) {
+  const trace = (liquidVolumeFractions: number[]) =>
+    presentEnvelope(phaseEnvelope(mixture, moleFractions, { liquidVolumeFractions }));
   try {
-    const envelope = phaseEnvelope(mixture, moleFractions, {
-      liquidVolumeFractions: QUALITY_LINES,
-    });
+    return { envelope: trace(QUALITY_LINES), warnings: [] };
+  } catch (error) {
+    if (!(error instanceof ConvergenceError)) throw error;
+  }
+  try {
+    const message = "The lines of equal liquid share could not be traced.";
     return {
-      envelope: {
-        bubble: [...envelope.bubble],
-        dew: [...envelope.dew],
-        critical: envelope.critical,
-        cricondentherm: envelope.cricondentherm,
-        cricondenbar: envelope.cricondenbar,
-        quality: envelope.quality.map(({ liquidVolumeFraction, points }) => ({
-          liquidVolumeFraction,
-          points: [...points],
-        })),
-      },
-      warnings: [],
+      envelope: trace([]),
+      warnings: [notConverged("quality_lines_not_traced", "characterisation", message)],
     };
   } catch (error) {
     if (!(error instanceof ConvergenceError)) throw error;
     const nothing = { critical: null, cricondentherm: null, cricondenbar: null };
+    const message = `The phase envelope could not be traced: ${error.message}`;
     return {
       envelope: { bubble: [], dew: [], ...nothing, quality: [] },
-      warnings: [
-        notConverged(
-          "envelope_not_traced",
-          "characterisation",
-          `The phase envelope could not be traced: ${error.message}`,
-        ),
-      ],
+      warnings: [notConverged("envelope_not_traced", "characterisation", message)],
     };
   }
 }
+
+const presentEnvelope = ({ bubble, dew, quality, ...extremes }: PhaseEnvelope) => ({
+  ...extremes,
+  bubble: [...bubble],
+  dew: [...dew],
+  quality: quality.map(({ liquidVolumeFraction, points }) => ({
+    liquidVolumeFraction,
+    points: [...points],
+  })),
+});
 
 /** A depletion begins at a dew point; a fluid without one has no depletion, which the warnings say. */
 function depletionOf(

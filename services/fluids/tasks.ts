@@ -1,5 +1,6 @@
 import { describeDepletion } from "./depletion";
 import { describePhases } from "./equation-of-state";
+import { describeNearWell } from "./near-well";
 import { compareRecoveries } from "./recovery";
 import { proposeTuning } from "./tuning";
 
@@ -12,6 +13,7 @@ export const fluidTasks = {
   tuning: proposeTuning,
   equationOfState: describePhases,
   recovery: compareRecoveries,
+  nearWell: describeNearWell,
 };
 
 export type FluidTasks = typeof fluidTasks;

@@ -13,8 +13,8 @@ import { unitSymbols, type UnitKind } from "./units";
 export const LAB_SHEET_TEMPLATE_NAME = "dewledger-laboratory-sheet.csv";
 
 /** An invented rich gas condensate. Mole per cent by component, the plus fraction last. */
-const wellstream = [0, 1.9, 0.6, 74.2, 8.1, 4.2, 0.85, 1.55, 0.7, 0.65, 0.95, 6.3];
-const plus = { molecularWeight: 158, specificGravity: 0.792 };
+const wellstream = [0, 1.7, 1.1, 74.74, 8.15, 4.25, 0.85, 1.56, 0.67, 0.64, 0.89, 5.45];
+const plus = { molecularWeight: 169, specificGravity: 0.802 };
 
 const labelOf = <Key extends string>(list: readonly Named<Key>[], key: Key) =>
   list.find((named) => named.key === key)?.label ?? key;
@@ -66,8 +66,8 @@ export function labSheetTemplate(): string {
       "Pressures may also run across: then the first row holds them, and each row below one quantity.",
     ),
     ["depletion"],
-    [withUnit(labelOf(depletionLines, "temperatureDegF"), "degF"), 255],
-    [withUnit(labelOf(depletionLines, "dewPointPsia"), "psia"), 5215],
+    [withUnit(labelOf(depletionLines, "temperatureDegF"), "degF"), 220],
+    [withUnit(labelOf(depletionLines, "dewPointPsia"), "psia"), 4350],
     depletionHeader(names),
     ...depletionExample,
     [""],
@@ -83,15 +83,15 @@ export function labSheetTemplate(): string {
       withUnit(labelOf(stageColumns, "gasOilRatio"), "scf/STB"),
       labelOf(stageColumns, "gasGravity"),
     ],
-    ["separator", 600, 85, 8850, 0.712],
-    ["stock tank", 0, 60, 410, 1.18],
+    ["separator", 475, 79, 8738, 0.703],
+    ["stock tank", 0, 60, 270, 1.143],
     [withUnit(separator("basePressurePsia"), "psia"), 14.696],
-    [withUnit(separator("condensateApi"), "degAPI"), 56.5],
-    [withUnit(separator("condensateMolecularWeight"), "lb/lbmol"), 128],
-    [withUnit(separator("nitrogen"), "mol %"), 0.6],
-    [withUnit(separator("carbonDioxide"), "mol %"), 1.9],
+    [withUnit(separator("condensateApi"), "degAPI"), 52.7],
+    [withUnit(separator("condensateMolecularWeight"), "lb/lbmol"), 141],
+    [withUnit(separator("nitrogen"), "mol %"), 1.1],
+    [withUnit(separator("carbonDioxide"), "mol %"), 1.7],
     [withUnit(separator("hydrogenSulphide"), "mol %"), 0],
-    [withUnit(separator("dewPointPsia"), "psia"), 5215],
+    [withUnit(separator("dewPointPsia"), "psia"), 4350],
   ];
   return stringify(rows, { record_delimiter: "\r\n" });
 }
@@ -119,25 +119,33 @@ function depletionHeader(names: readonly string[]): string[] {
 
 /** Pressure, liquid, produced, gas z, two-phase z, viscosity, twelve components, weight and gravity of C7+. */
 const depletionExample: number[][] = [
-  [5215, 0, 0, 1.012, 1.012, 0.0442, ...wellstream, plus.molecularWeight, plus.specificGravity],
+  [4350, 0, 0, 0.942, 0.942, 0.0361, ...wellstream, plus.molecularWeight, plus.specificGravity],
   [
-    ...[4200, 9.8, 11.4, 0.931, 0.909, 0.0343],
-    ...[0, 1.93, 0.63, 76.26, 8.12, 4.12, 0.82, 1.48, 0.65, 0.6, 0.85, 4.54, 142, 0.779],
+    ...[4014.7, 7.6, 5.22, 0.913, 0.918, 0.0315],
+    ...[0, 1.71, 1.13, 75.8, 8.12, 4.18, 0.83, 1.51, 0.64, 0.61, 0.84, 4.63, 159, 0.795],
   ],
   [
-    ...[3200, 15.6, 26.9, 0.889, 0.838, 0.0264],
-    ...[0, 1.95, 0.65, 77.72, 8.16, 4.05, 0.79, 1.41, 0.61, 0.56, 0.76, 3.34, 130, 0.768],
+    ...[3514.7, 12, 14.04, 0.882, 0.886, 0.0266],
+    ...[0, 1.72, 1.15, 77, 8.11, 4.11, 0.8, 1.46, 0.61, 0.58, 0.77, 3.69, 148, 0.785],
   ],
   [
-    ...[2200, 17.4, 46.1, 0.878, 0.785, 0.0202],
-    ...[0, 1.97, 0.65, 78.56, 8.25, 4.03, 0.77, 1.37, 0.57, 0.52, 0.68, 2.63, 121, 0.759],
+    ...[2914.7, 13.6, 26.2, 0.861, 0.856, 0.0223],
+    ...[0, 1.74, 1.17, 78.05, 8.12, 4.06, 0.78, 1.41, 0.58, 0.54, 0.7, 2.85, 137, 0.775],
   ],
   [
-    ...[1200, 16.5, 68.2, 0.904, 0.729, 0.0161],
-    ...[0, 1.98, 0.64, 78.58, 8.46, 4.15, 0.79, 1.41, 0.57, 0.52, 0.66, 2.24, 115, 0.753],
+    ...[2314.7, 13.5, 39.86, 0.856, 0.834, 0.0191],
+    ...[0, 1.75, 1.18, 78.75, 8.18, 4.05, 0.77, 1.38, 0.55, 0.51, 0.63, 2.25, 128, 0.767],
   ],
   [
-    ...[600, 14.9, 81.7, 0.942, 0.634, 0.0142],
-    ...[0, 1.98, 0.62, 77.4, 8.84, 4.5, 0.88, 1.59, 0.65, 0.59, 0.73, 2.22, 112, 0.75],
+    ...[1714.7, 12.7, 54.56, 0.867, 0.817, 0.0167],
+    ...[0, 1.77, 1.18, 79.08, 8.28, 4.09, 0.77, 1.37, 0.54, 0.5, 0.58, 1.84, 122, 0.76],
+  ],
+  [
+    ...[1214.7, 11.7, 67.15, 0.889, 0.801, 0.0152],
+    ...[0, 1.79, 1.16, 78.9, 8.44, 4.21, 0.79, 1.42, 0.55, 0.5, 0.57, 1.67, 119, 0.756],
+  ],
+  [
+    ...[714.7, 10.5, 79.63, 0.922, 0.76, 0.014],
+    ...[0, 1.8, 1.13, 77.88, 8.67, 4.49, 0.87, 1.57, 0.61, 0.57, 0.63, 1.78, 117, 0.754],
   ],
 ];

@@ -31,10 +31,11 @@ describe("labSheetTemplate", () => {
     const read = readLabSheet(labSheetTemplate());
     labSheetResponseSchema.parse(read);
     expect(read.problems).toEqual([]);
-    expect(streamOf(read).plus).toMatchObject({ carbonNumber: 7, molePercent: 6.3 });
-    expect(rowsOf(read)).toHaveLength(6);
+    expect(streamOf(read).plus).toMatchObject({ carbonNumber: 7, molePercent: 5.45 });
+    expect(rowsOf(read)).toHaveLength(8);
     expect(read.stages).toHaveLength(2);
-    expect(read.separatorTest).toMatchObject({ condensateApi: 56.5, nitrogen: 0.006 });
+    expect(read.separatorTest).toMatchObject({ condensateApi: 52.7 });
+    expect(read.separatorTest?.nitrogen).toBeCloseTo(0.011, 12);
   });
 });
 
