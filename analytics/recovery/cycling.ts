@@ -73,17 +73,21 @@ const contentNames = Object.keys(average) as (keyof Contents)[];
  *     condensate = produced(c) + E [produced(m) - produced(c) + in gas(m)] + (1 - E) [produced(a) - produced(c)]
  *     sales gas  = the same of surface gas - fuel - injected gas left at abandonment
  *
- * Only condensate in the gas phase is displaced; liquid that has dropped out in the swept part stays. Dry gas would take
- * some of it up again, so this is on the safe side, and by much when the pressure declines below the dew point. What is
- * not displaced, swept or not, depletes by the curve.
+ * Only condensate in the gas phase is displaced. Of the liquid that has dropped out in the swept part, injected gas
+ * takes up
+ *
+ *     r min(E in rock(m), I in gas(m) / gas in gas(m))
+ *
+ * no more than there is, and no more than saturates it; with r = 0 it stays, which is on the safe side and by much when
+ * the pressure declines below the dew point. What is not displaced, swept or not, depletes by the curve.
  *
  * Gas balance, in shares of the dry gas in place. The injected volume V is counted in hydrocarbon pore volumes at the
  * pressure at which injection begins:
  *
  *     injected I = V (pc / z inj) / (pi / zi) / fg
  *     maintained: produced = E gas in gas(c) + I (V - E Sg) / V       make-up = what the produced gas less fuel lacks
- *     declining:  produced = I / (1 - fuel), no make-up; moles left = moles at start - fuel - condensate displaced,
- *                 which gives the pressure at the end by p / z with two-phase z
+ *     declining:  produced = I / (1 - fuel), no make-up; moles left = moles at start - fuel - condensate displaced
+ *                 and taken up, which gives the pressure at the end by p / z with two-phase z
  *
  * @param start        contents when injection begins; `abandoned` at the end of depletion. Both unchanged
  * @param into         overwritten
@@ -93,31 +97,37 @@ const contentNames = Object.keys(average) as (keyof Contents)[];
 export function cycle(
   curve: FineCurve,
   reservoir: Reservoir,
-  { pressure, injectedPoreVolumes, fuelFraction }: Cycling,
+  cycling: Cycling,
   one: CyclingCase,
   start: Contents,
   abandoned: Contents,
   into: CyclingOutcome,
 ): void {
   const { displaced, dryGasFraction } = one;
+  const { pressure, injectedPoreVolumes, fuelFraction, revaporisation = 0 } = cycling;
   const densityAtStart = one.injectedDensityAtStart / dryGasFraction;
   const injected = injectedPoreVolumes * densityAtStart;
   let produced: number;
   let swept = start;
+  let takenUp: number;
   if (pressure === "maintained") {
     produced =
       displaced * start.gasInGas +
       (injectedPoreVolumes - displaced * start.gasSaturation) * densityAtStart;
+    takenUp = revaporisation * liquidTakenUp(displaced, injected, swept);
     into.pressureAtEndPsia = start.pressurePsia;
   } else {
     produced = injected / (1 - fuelFraction);
-    const lost =
-      dryGasFraction * fuelFraction * produced +
-      (1 - dryGasFraction) * displaced * start.condensateInGas;
-    const left = start.wellstreamLeft - lost;
-    contentsAtLeft(curve, reservoir, one, left, final);
-    contentsAtLeft(curve, reservoir, one, start.wellstreamLeft - lost / 2, middle);
-    fillAverage(start, middle, final);
+    const gasLost = dryGasFraction * fuelFraction * produced;
+    const liquidLost = displaced * start.condensateInGas;
+    fillDecline(curve, reservoir, one, start, gasLost + (1 - dryGasFraction) * liquidLost);
+    takenUp = revaporisation * liquidTakenUp(displaced, injected, average);
+    if (takenUp > 0) {
+      // Once more with what was taken up: it is a few hundredths of the moles lost.
+      const allLost = gasLost + (1 - dryGasFraction) * (liquidLost + takenUp);
+      fillDecline(curve, reservoir, one, start, allLost);
+      takenUp = revaporisation * liquidTakenUp(displaced, injected, average);
+    }
     swept = average;
     into.pressureAtEndPsia = final.pressurePsia;
   }
@@ -137,17 +147,39 @@ export function cycle(
   into.fuel = fuel;
   into.makeUp = makeUp;
   into.condensateWhileCycling =
-    displaced * (swept.condensateProduced - start.condensateProduced + swept.condensateInGas);
+    displaced * (swept.condensateProduced - start.condensateProduced + swept.condensateInGas) +
+    takenUp;
   into.condensateInBlowdown = rest * (abandoned.condensateProduced - start.condensateProduced);
   into.gasWhileCycling = produced - fuel - injected;
   into.gasInBlowdown = gas - into.gasWhileCycling;
-  into.condensateInRock = displaced * swept.condensateInRock + rest * abandoned.condensateInRock;
+  into.condensateInRock =
+    displaced * swept.condensateInRock - takenUp + rest * abandoned.condensateInRock;
   into.condensateInGas = rest * abandoned.condensateInGas;
   into.refusal = refusalOf(
     start.gasProduced + gas,
     injectedPoreVolumes < displaced * start.gasSaturation || produced < displaced * start.gasInGas,
     into.pressureAtEndPsia > abandoned.pressurePsia,
   );
+}
+
+/** No more than there is, and no more than saturates the injected gas. */
+function liquidTakenUp(displaced: number, injected: number, swept: Contents): number {
+  if (!(swept.gasInGas > 0)) return 0;
+  const held = (injected * swept.condensateInGas) / swept.gasInGas;
+  return Math.min(displaced * swept.condensateInRock, held);
+}
+
+/** Contents half-way and at the end of a loss of moles, and on average on the way. */
+function fillDecline(
+  curve: FineCurve,
+  reservoir: Reservoir,
+  one: CyclingCase,
+  start: Contents,
+  lost: number,
+): void {
+  contentsAtLeft(curve, reservoir, one, start.wellstreamLeft - lost / 2, middle);
+  contentsAtLeft(curve, reservoir, one, start.wellstreamLeft - lost, final);
+  fillAverage(start, middle, final);
 }
 
 function fillAverage(first: Contents, second: Contents, third: Contents): void {

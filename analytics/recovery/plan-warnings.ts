@@ -4,6 +4,7 @@ import type { Warning } from "../warnings";
 import { planPaths, type CompiledPlan } from "./compile-plan";
 import { planRanges } from "./plan-ranges";
 import type { RecoveryRoute } from "./recovery-curve-schema";
+import type { Cycling } from "./recovery-plan-schema";
 
 /** What a plan is judged against: the estimate it belongs to. */
 export interface PlanSurroundings {
@@ -23,6 +24,7 @@ const YIELD_TOLERANCE = 0.25;
 const DEW_POINT_TOLERANCE = 0.02;
 const Z_TOLERANCE = 0.05;
 const USUAL_FUEL = 0.15;
+const USUAL_REVAPORISATION = 0.7;
 /** Chances below this are not worth a sentence. */
 const RARE = 0.01;
 
@@ -196,16 +198,7 @@ function cyclingWarnings(
       ),
     );
   }
-  if (cycling.pressure === "declining") {
-    warnings.push(
-      warn(
-        "cycling_declines",
-        "cycling.pressure",
-        "The pressure declines while gas goes back. Liquid that drops out meanwhile is counted as lost, although dry gas " +
-          "takes some of it up again: the recovery is on the low side.",
-      ),
-    );
-  }
+  warnings.push(...revaporisationWarnings(cycling));
   if (cycling.pressurePsia > pressure.range.p90) {
     warnings.push(
       warn(
@@ -227,6 +220,28 @@ function cyclingWarnings(
     );
   }
   return warnings;
+}
+
+function revaporisationWarnings({ pressure, revaporisation = 0 }: Cycling): Warning[] {
+  if (revaporisation > USUAL_REVAPORISATION) {
+    return [
+      warn(
+        "unusual_value",
+        "cycling.revaporisation",
+        `Injected gas is taken to pick up ${percent(revaporisation)} of the liquid it could; above ` +
+          `${percent(USUAL_REVAPORISATION)} there is hardly any delay or bypassing. Has a simulation shown it?`,
+      ),
+    ];
+  }
+  if (pressure === "maintained" || revaporisation > 0) return [];
+  return [
+    warn(
+      "cycling_declines",
+      "cycling.pressure",
+      "The pressure declines while gas goes back. Liquid that drops out meanwhile is counted as lost, although dry gas " +
+        "takes some of it up again: the recovery is on the low side.",
+    ),
+  ];
 }
 
 /** Questions about recoveries that have been worked out. */

@@ -40,6 +40,11 @@ export const cyclingSchema = z
     injectedPoreVolumes: z.number().positive().max(5),
     /** share of produced surface gas used as fuel or lost before injection */
     fuelFraction: z.number().min(0).max(0.5),
+    /**
+     * how near injected gas comes to taking up all the liquid it could of what has dropped out in the swept part: 0, on
+     * the safe side, unless given; 1 is a simulator without any delay
+     */
+    revaporisation: z.number().min(0).max(1).optional(),
   })
   .strict();
 export type Cycling = z.infer<typeof cyclingSchema>;
