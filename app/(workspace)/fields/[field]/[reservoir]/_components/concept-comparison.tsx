@@ -54,6 +54,8 @@ export interface ConceptComparisonProps {
   route?: RecoveryRoute | null;
   /** per cent of pore space, as set at the curve */
   criticalBand: { low: number; high: number };
+  /** why there is no curve, where that is known */
+  noCurveReason: string | null;
   /** stands beside the bars on a wide screen */
   beside: ReactNode;
 }
@@ -72,7 +74,7 @@ export function ConceptComparison(props: ConceptComparisonProps) {
       <Section title="Where the liquid goes">
         <p className="text-13 text-ink-soft">
           {text
-            ? "Depletion, compression and cycling stand side by side here as soon as there is a depletion curve."
+            ? `Depletion, compression and cycling stand side by side here as soon as there is a depletion curve. ${props.noCurveReason ?? ""}`
             : "Appears when an estimate is begun."}
         </p>
       </Section>

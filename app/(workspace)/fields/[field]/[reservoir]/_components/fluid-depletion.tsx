@@ -44,10 +44,20 @@ export function FluidDepletion(props: DepletionProps) {
           sampleName={props.sampleName}
           route={props.curve?.route}
           criticalBand={props.criticalBand}
+          noCurveReason={study.noCurveReason}
           beside={<Panels {...props} />}
         />
         <TableSection {...props} />
         <Columns kind="equal">
+          {gasTable && (
+            <GasCompositionChart
+              table={gasTable}
+              source={
+                measuredGas ? "laboratory" : equationOfState.data?.isTuned ? "tuned" : "untuned"
+              }
+              fileName={`${place}-produced-gas`}
+            />
+          )}
           {depletion.data && depletion.data.hoffmann.length > 0 && (
             <HoffmannPlot steps={depletion.data.hoffmann} fileName={`${place}-hoffmann`} />
           )}

@@ -4,6 +4,7 @@ import { useMemo } from "react";
 import { availableCurves } from "@/components/fluid/available-curves";
 import { placeOfPointer } from "@/components/fluid/composition-text";
 import type { Cells } from "@/components/fluid/grid-paste";
+import { screeningCurve } from "@/components/fluid/screening-curve";
 import type { SampleReading, SampleText } from "@/components/fluid/sample-text";
 import { useWellstream } from "../_queries/fluid";
 import {
@@ -56,9 +57,14 @@ export function useFluidStudy(
   const test =
     text.origin === "measured" ? typedTest : (equationOfState.data?.train.separatorTest ?? null);
   const wellstream = useWellstream(test, reservoir);
+  // Only for want of a composition: with one, the equation of state is the better guess.
+  const screening = useMemo(
+    () => screeningCurve(sheet ? null : test, temperatureDegF, measuredDewPointPsia),
+    [sheet, test, temperatureDegF, measuredDewPointPsia],
+  );
   const curves = useMemo(
-    () => availableCurves([depletion.data?.curve, equationOfState.data?.curve]),
-    [depletion.data, equationOfState.data],
+    () => availableCurves([depletion.data?.curve, equationOfState.data?.curve, screening.curve]),
+    [depletion.data, equationOfState.data, screening],
   );
   const problems = useMemo(
     () => ({
@@ -93,6 +99,8 @@ export function useFluidStudy(
     depletion,
     wellstream,
     curves,
+    /** why a fluid without a composition has no curve; `null` when it has one, or has nothing to begin with */
+    noCurveReason: screening.reason,
     problems,
   };
 }
