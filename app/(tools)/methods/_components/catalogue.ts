@@ -374,8 +374,11 @@ const recovery: MethodGroup = {
         "Condensate displaced by dry gas, then depletion of the rest, with fuel and make-up gas.",
       source:
         "C. H. Whitson, M. R. Brule, SPE Monograph 20 (2000), ch. 8; one sweep and one displacement efficiency: common practice, no source",
-      range: "No revaporisation of liquid that has dropped out: on the safe side.",
-      error: unknown("As good as the sweep. Use a simulation study before spending money."),
+      range:
+        "Liquid that has dropped out stays, on the safe side, unless the plan lets injected gas take it up.",
+      error: measured(
+        "With 0.6 swept, 0.9 displaced and complete uptake 0.67 against 0.665 of an open simulation of the third comparative study; without uptake 0.42. As good as the sweep: use a simulation study before spending money.",
+      ),
       usedIn: "Estimates with a recovery plan, concepts side by side",
     },
     {
