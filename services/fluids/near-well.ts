@@ -1,5 +1,9 @@
 import type { CompositionSheet } from "@/analytics/composition/composition-schema";
-import type { Characterisation } from "@/analytics/equation-of-state/characterisation-schema";
+import {
+  untouched,
+  type Characterisation,
+} from "@/analytics/equation-of-state/characterisation-schema";
+import { characterise } from "@/analytics/equation-of-state/characterise";
 import { nearWell, type NearWellConditions } from "@/analytics/recovery/near-well";
 import { characteriseSheet } from "./characterised-sheet";
 
@@ -15,7 +19,12 @@ export interface NearWellQuestion extends NearWellConditions {
  * @throws {ConvergenceError}
  */
 export function describeNearWell({ sheet, characterisation, ...conditions }: NearWellQuestion) {
-  const { characterised, warnings } = characteriseSheet(sheet, characterisation);
-  const { productivityRatio, points, ...well } = nearWell(characterised, conditions);
+  const { stream, characterised, warnings } = characteriseSheet(sheet, characterisation);
+  const before = characterise(stream, { ...characterisation, adjustments: untouched });
+  const { productivityRatio, points, ...well } = nearWell(
+    characterised,
+    conditions,
+    before.mixture,
+  );
   return { productivityRatio, points, warnings: [...warnings, ...well.warnings] };
 }
