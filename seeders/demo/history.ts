@@ -165,7 +165,8 @@ const openRevisions: Record<string, DemoRevision> = {
   "Fenwhistle / Whistle sand": {
     on: "2026-11-26",
     state: "draft",
-    factors: { gasRecovery: 1.03 },
+    factors: {},
+    concept: "compression",
     note: "Compression brought forward; recovery under study.",
   },
 };

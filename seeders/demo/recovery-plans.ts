@@ -4,9 +4,9 @@ import {
   untouched,
   type Characterisation,
 } from "@/analytics/equation-of-state/characterisation-schema";
-import type { SampleStudy } from "@/analytics/fluid/sample-study-schema";
-import { noStudy } from "@/analytics/fluid/sample-study-schema";
+import { noStudy, type SampleStudy } from "@/analytics/fluid/sample-study-schema";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
+import { correlationCurve } from "@/analytics/recovery/correlation-curve";
 import type { RecoveryCurve, RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import type {
   Cycling,
@@ -99,6 +99,21 @@ const demoPlans: Readonly<Record<string, DemoPlan>> = {
     concept: "depletion",
     abandonmentPsia: { depletion: [950, 1200, 1600] },
   },
+  "Ravelsand / Ravel bar": {
+    route: "correlation",
+    concept: "depletion",
+    abandonmentPsia: { depletion: [900, 1150, 1500] },
+  },
+  "Candlewyke / Wyke sand": {
+    route: "correlation",
+    concept: "depletion",
+    abandonmentPsia: { depletion: [950, 1200, 1600] },
+  },
+  "Fenwhistle / Whistle sand": {
+    route: "correlation",
+    concept: "depletion",
+    abandonmentPsia: { depletion: [1100, 1400, 1800], compression: [560, 700, 900] },
+  },
   "Merrin Spit / Spit sand": {
     route: "untunedEquationOfState",
     concept: "depletion",
@@ -167,8 +182,13 @@ export async function recoveryOf(
   test: SeparatorTest,
 ): Promise<DemoRecovery | null> {
   const plan = demoPlans[keyOf(demo)];
+  if (!plan) return null;
+  if (plan.route === "correlation") {
+    const state = { temperatureDegF: temperatureOf(demo), dewPointPsia: null };
+    return { plan, curve: correlationCurve(test, state).curve };
+  }
   const study = demoStudies[keyOf(demo)];
-  if (!plan || !study) return null;
+  if (!study) throw new Error(`the demo has no study of ${keyOf(demo)}`);
   const question = {
     sheet: study.composition,
     stages: stagesOf(test),
@@ -192,11 +212,14 @@ async function laboratoryCurve(question: Question & { table: DepletionTable }) {
   return (await calculateOnFluid("depletion", question)).curve;
 }
 
-async function simulatedCurve(question: Question, { temperatureDegF, fluid }: DemoReservoir) {
+const temperatureOf = ({ temperatureDegF: [low, high] }: DemoReservoir) =>
+  Math.round((low + high) / 2);
+
+async function simulatedCurve(question: Question, demo: DemoReservoir) {
   const { curve } = await calculateOnFluid("equationOfState", {
     ...question,
-    temperatureDegF: Math.round((temperatureDegF[0] + temperatureDegF[1]) / 2),
-    measuredDewPointPsia: fluid.dewPointPsia,
+    temperatureDegF: temperatureOf(demo),
+    measuredDewPointPsia: demo.fluid.dewPointPsia,
     depletionPressuresPsia: null,
   });
   return curve;
