@@ -113,3 +113,10 @@ export class DiagramLine {
     return -Math.sign(from) * Math.max(CRITICAL_GAP, Math.abs(value));
   }
 }
+
+/** The ln K of two points point opposite ways: the critical point lies between. */
+export function isAcross(one: CurvePoint, other: CurvePoint, components: number): boolean {
+  let product = 0;
+  for (let i = 0; i < components; i += 1) product += one.at[i] * other.at[i];
+  return product < 0;
+}

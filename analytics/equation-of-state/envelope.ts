@@ -2,11 +2,12 @@
 import { ConvergenceError, DomainError } from "../errors";
 import { DEGR_AT_ZERO_DEGF } from "../units/conversions";
 import { hermite, steepest, type CurvePoint } from "./curve-tracer";
-import { DiagramLine, HIGHEST_PSIA, LOWEST_DEGR, LOWEST_PSIA } from "./diagram-line";
+import { DiagramLine, LOWEST_PSIA, isAcross } from "./diagram-line";
 import { Flasher, normaliseFeed } from "./flash";
 import type { Mixture } from "./mixture";
 import { createPhaseState } from "./peng-robinson";
-import { boundarySystem, qualitySystem } from "./saturation-curve";
+import { qualityLine } from "./quality-line";
+import { boundarySystem } from "./saturation-curve";
 import { fillWilson } from "./wilson";
 
 export interface EnvelopePoint {
@@ -26,7 +27,7 @@ export interface PhaseEnvelope {
   readonly cricondenbar: EnvelopePoint | null;
   readonly quality: readonly {
     readonly liquidVolumeFraction: number;
-    /** from low pressure to the critical point, or to a limit of the diagram */
+    /** from low pressure to the critical point, or to a limit of the diagram; empty where it has none of the line */
     readonly points: readonly EnvelopePoint[];
   }[];
 }
@@ -36,15 +37,12 @@ export interface EnvelopeOptions {
   readonly liquidVolumeFractions?: readonly number[];
 }
 
-/** A line of equal liquid share ends where its ln K are all below this: at the critical point. */
-const NEAR_CRITICAL = 0.1;
-
 /**
  * The phase envelope of a fluid by continuation, from the dew line at 14.696 psia around the cricondentherm, through
  * the critical point and down the bubble line, until 14.696 psia, -100 degF or 20,000 psia. Extremes are solved for,
  * not read off the points. Lines of equal liquid share run from 14.696 psia (or -100 degF) to the critical point.
  *
- * A second liquid at low temperature is not looked for.
+ * A second liquid at low temperature is not looked for. A pure component has a critical point and no lines.
  *
  * @param z  mole fractions
  * @throws {DomainError} for a feed that cannot be
@@ -68,6 +66,8 @@ export function phaseEnvelope(
   const n = mixture.names.length;
   const feed = new Float64Array(n);
   normaliseFeed(z, feed);
+  const present = [...feed.keys()].filter((i) => feed[i] > 0);
+  if (present.length === 1) return ofPureComponent(mixture, present[0], liquidVolumeFractions);
   const line = new DiagramLine(boundarySystem(flasher.equation, feed), n);
   line.follow(beginDewLine(flasher, feed, line), (point, last) => line.isLeaving(point, last));
   const { points } = line;
@@ -97,11 +97,27 @@ export function phaseEnvelope(
   };
 }
 
-/** The ln K of two points point opposite ways: the critical point lies between. */
-function isAcross(one: CurvePoint, other: CurvePoint, components: number): boolean {
-  let product = 0;
-  for (let i = 0; i < components; i += 1) product += one.at[i] * other.at[i];
-  return product < 0;
+/** A pure component boils at one pressure: both lines are one, inside which there is no area. */
+function ofPureComponent(
+  { criticalTemperatureDegR, criticalPressurePsia }: Mixture,
+  index: number,
+  liquidVolumeFractions: readonly number[],
+): PhaseEnvelope {
+  const critical = {
+    temperatureDegF: criticalTemperatureDegR[index] - DEGR_AT_ZERO_DEGF,
+    pressurePsia: criticalPressurePsia[index],
+  };
+  return {
+    dew: [],
+    bubble: [],
+    critical,
+    cricondentherm: critical,
+    cricondenbar: critical,
+    quality: liquidVolumeFractions.map((liquidVolumeFraction) => ({
+      liquidVolumeFraction,
+      points: [],
+    })),
+  };
 }
 
 /** The component whose ln K changes most between two points. */
@@ -202,77 +218,4 @@ function highest(line: DiagramLine, index: number): Float64Array | null {
     else from = middle;
   }
   return from.at;
-}
-
-/** One line of equal liquid share; the critical point last, where it gets there. */
-function qualityLine(
-  flasher: Flasher,
-  z: Float64Array,
-  liquidVolumeFraction: number,
-  lnWarm: number,
-  critical: Float64Array | null,
-): Float64Array[] {
-  const n = z.length;
-  const line = new DiagramLine(qualitySystem(flasher.equation, z, liquidVolumeFraction), n);
-  const { guess, held } = beginQualityLine(flasher, z, liquidVolumeFraction, lnWarm);
-  const first = line.tracer.correct(guess, held, guess[held]);
-  if (!first) {
-    throw new ConvergenceError("A line of equal liquid share could not be begun", {
-      liquidVolumeFraction,
-    });
-  }
-  const isNearCritical = (point: CurvePoint) =>
-    isAcross(first, point, n) ||
-    point.at.subarray(0, n).every((lnK, i) => z[i] === 0 || Math.abs(lnK) < NEAR_CRITICAL);
-  line.follow(first, (point, last) => isNearCritical(point) || line.isLeaving(point, last));
-  const points = line.points.filter((point) => !isAcross(first, point, n)).map(({ at }) => at);
-  return critical && isNearCritical(line.points[line.points.length - 1])
-    ? [...points, critical]
-    : points;
-}
-
-/**
- * A first point: at 14.696 psia the temperature, or at -100 degF the pressure, at which the liquid has its share.
- * Between them the share rises with pressure and falls with temperature.
- */
-function beginQualityLine(
-  flasher: Flasher,
-  z: Float64Array,
-  liquidVolumeFraction: number,
-  lnWarm: number,
-): { guess: Float64Array; held: number } {
-  const n = z.length;
-  const { split } = flasher;
-  const share = (lnT: number, lnP: number) => {
-    const { liquid, vapour, vapourFraction } = flasher.flash(z, {
-      temperatureDegR: Math.exp(lnT),
-      pressurePsia: Math.exp(lnP),
-    });
-    const liquidVolume = liquid ? (1 - vapourFraction) * liquid.molarVolumeFt3PerLbmol : 0;
-    const gasVolume = vapour ? vapourFraction * vapour.molarVolumeFt3PerLbmol : 0;
-    return liquidVolume / (liquidVolume + gasVolume);
-  };
-  const lnLow = Math.log(LOWEST_PSIA);
-  const lnCold = Math.log(LOWEST_DEGR);
-  const alongPressure = share(lnCold, lnLow) < liquidVolumeFraction;
-  let [less, more] = alongPressure
-    ? [lnLow, Math.log(HIGHEST_PSIA)]
-    : [Math.max(lnWarm, lnCold), lnCold];
-  for (let i = 0; i < 40; i += 1) {
-    const middle = 0.5 * (less + more);
-    const value = alongPressure ? share(lnCold, middle) : share(middle, lnLow);
-    if (value < liquidVolumeFraction) less = middle;
-    else more = middle;
-    if (Math.abs(value - liquidVolumeFraction) < 1e-3 * liquidVolumeFraction) {
-      less = middle;
-      break;
-    }
-  }
-  const lnT = alongPressure ? lnCold : less;
-  const lnP = alongPressure ? less : lnLow;
-  share(lnT, lnP);
-  const guess = new Float64Array(n + 3);
-  guess.set(split.lnK);
-  guess.set([lnT, lnP, split.vapourFraction], n);
-  return { guess, held: alongPressure ? n : n + 1 };
 }

@@ -38,7 +38,8 @@ const UNSTABLE = -1e-13;
  * Upper and lower saturation pressure of a fluid at a temperature, by the tangent-plane test: the upper one is the
  * highest pressure at which the fluid is unstable. From the top down in steps of 15 %, with a closer look where the
  * distance to the tangent plane only comes near zero (close to the cricondentherm, where the two-phase range is
- * narrow), then Newton's method on that distance inside the bracket, to 1e-10 of the pressure.
+ * narrow), then Newton's method on that distance inside the bracket, to 1e-10 of the pressure. A pure component has no
+ * two-phase range, and gets null; so does a liquid that boils below 10 psia.
  *
  * @param z  mole fractions
  * @throws {DomainError} for a feed or temperature that cannot be, and for a fluid in two phases even at 20,000 psia

@@ -5,7 +5,7 @@ import { flash } from "@/analytics/equation-of-state/flash";
 import { PengRobinson, createPhaseState } from "@/analytics/equation-of-state/peng-robinson";
 import { saturationPressures } from "@/analytics/equation-of-state/saturation";
 import { feedMixture, randomFeeds } from "@/scripts/bench/random-feeds";
-import { degR, feeds, mixture, subset } from "./reference-mixture";
+import { degR, feeds, mixture, pure, subset } from "./reference-mixture";
 
 /** Rich enough to have its critical point inside the diagram. */
 const rich = feeds.gas.map((z, i) => 0.85 * z + 0.15 * feeds.oil[i]);
@@ -130,6 +130,23 @@ describe("phaseEnvelope", () => {
         last.temperatureDegF < -85 || last.pressurePsia < 18 || last.pressurePsia > 16_000;
       expect(isAtLimit).toBe(true);
     }
+  });
+
+  it("has no lines for a pure component, whose critical point is the only extreme", () => {
+    const { dew, bubble, critical, cricondentherm } = phaseEnvelope(pure("C3"), Float64Array.of(1));
+    expect([...dew, ...bubble]).toEqual([]);
+    // Lemmon and others (2009), from memory: 369.89 K, 4.2512 MPa
+    expect(critical!.temperatureDegF).toBeCloseTo(369.89 * 1.8 - 459.67, 6);
+    expect(critical!.pressurePsia).toBeCloseTo(616.58, 1);
+    expect(cricondentherm).toEqual(critical);
+  });
+
+  it("leaves out a line of liquid that a dry gas never has in the diagram", () => {
+    const dry = phaseEnvelope(subset([2, 3]), Float64Array.of(0.5, 0.5), {
+      liquidVolumeFractions: [0.1],
+    });
+    expect(dry.quality).toEqual([{ liquidVolumeFraction: 0.1, points: [] }]);
+    expect(dry.cricondentherm!.temperatureDegF).toBeLessThan(-100);
   });
 
   it("refuses a share of liquid that is none", () => {
