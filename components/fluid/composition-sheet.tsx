@@ -93,7 +93,7 @@ export function CompositionSheet({
   const plusWord = streams.map((name) => `C${text.plusFrom[name]}+`);
 
   return (
-    <div className="grid gap-3">
+    <div className="grid grid-cols-1 gap-3">
       {onChange && <SheetKind text={text} onChange={onChange} />}
       <EntryGrid
         grid={[

@@ -51,7 +51,7 @@ export function DepletionSheet({ text, reading, state, flags, onChange }: Deplet
     { place: "dewPointPsia", label: "Dew point", unit: "psia" },
   ];
   return (
-    <div className="grid gap-3">
+    <div className="grid grid-cols-1 gap-3">
       <div className="flex flex-wrap items-end gap-x-5 gap-y-2">
         {scalars.map(({ place, label, unit }) => (
           <NumberField

@@ -125,7 +125,7 @@ export function LabFileDialog({
         </>
       }
     >
-      <div className="grid gap-4">
+      <div className="grid grid-cols-1 gap-4">
         {read.read.length > 0 && (
           <div>
             <h3>How it was read</h3>
@@ -137,7 +137,7 @@ export function LabFileDialog({
           </div>
         )}
         {problems.length > 0 && (
-          <div className="grid gap-2">
+          <div className="grid grid-cols-1 gap-2">
             <Notice
               title={
                 problems.length === 1

@@ -45,7 +45,7 @@ export function StagesSheet({ text, stages, train, state, hasTest, onChange }: S
   };
   const columns = train ? 5 : 3;
   return (
-    <div className="grid gap-3">
+    <div className="grid grid-cols-1 gap-3">
       {onChange && hasTest && (
         <Checkbox
           label="The separators of the test"

@@ -100,8 +100,8 @@ export function TuningDialog({
         </>
       }
     >
-      <div className="grid gap-4">
-        <div role="group" aria-labelledby={group} className="grid gap-1.5">
+      <div className="grid grid-cols-1 gap-4">
+        <div role="group" aria-labelledby={group} className="grid grid-cols-1 gap-1.5">
           <span id={group} className="field-label">
             What may move
           </span>
@@ -176,7 +176,7 @@ function Outcome({
   ];
   const bound = changes.filter(({ atBound }) => atBound);
   return (
-    <div className="grid gap-4">
+    <div className="grid grid-cols-1 gap-4">
       <div className="tuning-outcome">
         <table className="ledger-table">
           <caption className="sr-only">The fit before and after</caption>

@@ -46,7 +46,7 @@ function SeparatorSection({ draft, study, mayType, remarks, setRemarks }: FluidP
           : "Gas volumes per stock-tank barrel, at the base of the sheet. Other units and arithmetic are read: “38 bar”, “12*640”. Cells can be pasted from a spreadsheet."
       }
     >
-      <div className="grid gap-3">
+      <div className="grid grid-cols-1 gap-3">
         {mayType && (reading.composition.sheet !== null || isComputed) && (
           <Segmented
             label="Where the separator test comes from"
@@ -173,7 +173,7 @@ function CompositionSection({
           : "Mol % as the laboratory reported it; the rest appears when it is filled in."
       }
     >
-      <div className="grid gap-4">
+      <div className="grid grid-cols-1 gap-4">
         <CompositionSheet
           text={text.composition}
           reading={composition}

@@ -32,7 +32,7 @@ export function FluidLabFile({
   }
 
   return (
-    <div className="grid gap-2">
+    <div className="grid grid-cols-1 gap-2">
       <LabFileDrop
         busy={reading.isPending}
         onFile={(fileName, text) => {

@@ -70,7 +70,7 @@ function EquationOfStateSection({ draft, study, mayType, remarks }: FluidPartPro
           : "How the heavy end is described, and the separators that streams are flashed through."
       }
     >
-      <div className="grid gap-4">
+      <div className="grid grid-cols-1 gap-4">
         <EquationOfStateSettings
           value={characterisation}
           onChange={
