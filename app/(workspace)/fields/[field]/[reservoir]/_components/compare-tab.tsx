@@ -13,7 +13,7 @@ import { resultGroups } from "@/components/estimate/result-rows";
 import { PlanDifferenceTable } from "@/components/estimate/plan-difference-table";
 import { ResultChangeTable } from "@/components/estimate/result-change-table";
 import { Columns, Section, Stack } from "@/components/ui/section";
-import { EmptyState } from "@/components/ui/status";
+import { EmptyState, Skeleton } from "@/components/ui/status";
 import { useReservoir } from "../_editor/reservoir-context";
 import { DecisionPanel } from "./decision-panel";
 
@@ -62,6 +62,9 @@ export function CompareTab() {
             before={before && { plan: before.inputs.recoveryPlan, revision: before.revision }}
           />
         </Section>
+        {!results.summary && draft?.reading.estimate && (
+          <Skeleton lines={7} label="Working the results out" />
+        )}
         {results.summary && (
           <Section
             title={before ? "What it does to the results" : "Results"}
