@@ -55,6 +55,7 @@ export function createPhaseState(count: number): PhaseState {
  *     m = 0.37464 + 1.54226 w - 0.26992 w2                      w <= 0.491
  *     m = 0.379642 + 1.48503 w - 0.164423 w2 + 0.016666 w3      w > 0.491
  *
+ * @example alphaSlope(0.1521) // => 0.602973
  * @see D.-Y. Peng, D. B. Robinson, Ind. Eng. Chem. Fundam. 15 (1976) 59-64 and GPA Research Report RR-28 (1978)
  */
 export function alphaSlope(acentricFactor: number): number {

@@ -19,6 +19,8 @@ const MAXIMUM_ITERATIONS = 100;
  * @param start    a vapour fraction to start from; NaN when there is none
  * @returns        V; NaN when no K-value is above 1 or none is below, so that there is no window
  * @throws {ConvergenceError} when the iteration does not settle
+ * @example vapourFraction(Float64Array.of(0.6, 0.4), Float64Array.of(Math.log(3), Math.log(0.2)), new Float64Array(2), NaN)
+ *   // => 0.55
  * @see C. H. Whitson, M. L. Michelsen, Fluid Phase Equilib. 53 (1989) 51-71
  * @see H. H. Rachford, J. D. Rice, J. Pet. Technol. 4 (Oct. 1952) 19
  */

@@ -26,7 +26,7 @@ export interface SaturationPressures {
 /** Where the search starts, psia. */
 const HIGHEST_PSIA = 20_000;
 /** A fluid that shows no second phase from the top down to here shows none in a reservoir, psia. */
-const LOWEST_PSIA = 10;
+const LOWEST_PSIA = 0.01;
 const LN_STEP = 0.16;
 const LN_TOLERANCE = 1e-10;
 /** How far outside a saturation pressure the fluid is looked at again. */
@@ -39,7 +39,7 @@ const UNSTABLE = -1e-13;
  * highest pressure at which the fluid is unstable. From the top down in steps of 15 %, with a closer look where the
  * distance to the tangent plane only comes near zero (close to the cricondentherm, where the two-phase range is
  * narrow), then Newton's method on that distance inside the bracket, to 1e-10 of the pressure. A pure component has no
- * two-phase range, and gets null; so does a liquid that boils below 10 psia.
+ * two-phase range, and gets null; so does a liquid that boils below 0.01 psia.
  *
  * @param z  mole fractions
  * @throws {DomainError} for a feed or temperature that cannot be, and for a fluid in two phases even at 20,000 psia

@@ -2,7 +2,7 @@
 import type { SeparatorStage } from "../composition/composition-schema";
 import { DomainError } from "../errors";
 import type { SeparatorTest } from "../fluid/separator-test-schema";
-import { CUBIC_FEET_PER_BARREL, DEGR_AT_ZERO_DEGF } from "../units/conversions";
+import { CUBIC_FEET_PER_BARREL, DEGR_AT_ZERO_DEGF, degreesRankine } from "../units/conversions";
 import {
   AIR_MOLECULAR_WEIGHT,
   CANONICAL_BASE,
@@ -134,7 +134,7 @@ export function separate(
     }
     const { vapour, liquid, vapourFraction } = flasher.flash(feed, {
       pressurePsia,
-      temperatureDegR: temperatureDegF + DEGR_AT_ZERO_DEGF,
+      temperatureDegR: degreesRankine(temperatureDegF),
     });
     const leaving = moles * vapourFraction;
     moles = liquid ? moles * (1 - vapourFraction) : 0;

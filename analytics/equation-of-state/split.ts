@@ -4,7 +4,7 @@ import { createPhaseState, type PengRobinson, type PhaseState } from "./peng-rob
 import { vapourFraction } from "./rachford-rice";
 
 /** Largest |ln f_liquid - ln f_gas| of a component that counts as equilibrium. */
-export const FUGACITY_TOLERANCE = 1e-10;
+const FUGACITY_TOLERANCE = 1e-10;
 /** What rounding may leave of it where K-values are near 1 and both phases hardly differ. */
 const ROUNDING_TOLERANCE = 1e-9;
 /** Where all ln K are below this, small residuals alone leave the phases open, so the step must be small, too. */

@@ -1,8 +1,9 @@
 /** The mixture and feeds of phase_equilibrium.py, the same numbers that the separate implementation ran on. */
 import type { Mixture } from "@/analytics/equation-of-state/mixture";
+import { degreesRankine } from "@/analytics/units/conversions";
 import reference from "../../fixtures/phase-equilibrium.json";
 
-export { reference };
+export { reference, degreesRankine as degR };
 
 export const mixture: Mixture = {
   names: reference.mixture.names,
@@ -43,5 +44,3 @@ export function subset(indices: readonly number[]): Mixture {
     ),
   };
 }
-
-export const degR = (degF: number) => degF + 459.67;
