@@ -6,7 +6,7 @@ import { componentOf } from "./component-names";
 import { compositionColumns, compositionLines, findNamed, type StreamName } from "./layout";
 import { bare, hasFigures, isFigure, isUnitsRow, type SheetReader } from "./sheet-reader";
 import { readLabel } from "./sheet-text";
-import { componentAt, figure, StreamAmounts } from "./streams";
+import { componentAt, figure, placeOfComponent, StreamAmounts } from "./streams";
 import { findUnit, isUnit, type SheetUnit } from "./units";
 
 const POUNDS_PER_CUBIC_FOOT_OF_WATER = WATER_POUNDS_PER_BARREL / CUBIC_FEET_PER_BARREL;
@@ -15,6 +15,13 @@ const streamWords: Record<StreamName, string> = {
   wellstream: "the wellstream",
   gas: "the separator gas",
   liquid: "the separator liquid",
+};
+
+/** Where each stream stands in the sheet that is read. */
+const placesOf: Record<StreamName, string> = {
+  wellstream: "composition.stream",
+  gas: "composition.gas",
+  liquid: "composition.liquid",
 };
 
 type ColumnKey = (typeof compositionColumns)[number]["key"];
@@ -48,6 +55,8 @@ export class CompositionReader {
     const line = component ? null : findNamed(compositionLines, label.name);
     if (!hasFigures(record)) {
       if (isUnitsRow(record)) this.takeUnits(record);
+      // A component whose only figure cannot be read is a fault to be named, not a line to be passed over.
+      else if (component && this.columns) this.takeComponent(record, label.name, this.columns);
       else if (!component && !line) this.takeHeader(record);
       return;
     }
@@ -113,7 +122,8 @@ export class CompositionReader {
         ? inOwnColumns
         : streams.slice(0, 1).map((column) => ({ ...column, index: only }));
     for (const { key: stream, index } of places) {
-      const value = this.reader.figure(record, index, unit, "Left out.");
+      const place = `${placesOf[stream as StreamName]}.plus.${property}`;
+      const value = this.reader.figure(record, index, unit, "Left out.", place);
       if (value === null) continue;
       this.amountsOf(stream as StreamName).properties[property] =
         key === "plusDensity" ? value / POUNDS_PER_CUBIC_FOOT_OF_WATER : value;
@@ -125,7 +135,8 @@ export class CompositionReader {
     if (!component) return;
     for (const { key, index, unit } of columns) {
       if (isStream(key)) {
-        const value = this.reader.figure(record, index, plainUnit, "Left out.");
+        const place = `${placesOf[key]}.${placeOfComponent(component)}`;
+        const value = this.reader.figure(record, index, plainUnit, "Left out.", place);
         if (value !== null) this.amountsOf(key).add(component, { record, index, value });
       } else if (component.kind === "plus") {
         const value = this.reader.figure(record, index, unit ?? plainUnit, "Left out.");

@@ -18,7 +18,7 @@ import {
   type SheetReader,
 } from "./sheet-reader";
 import { readLabel } from "./sheet-text";
-import { componentAt, figure, StreamAmounts } from "./streams";
+import { componentAt, figure, placeOfComponent, StreamAmounts } from "./streams";
 import { findUnit, isUnit, type SheetUnit } from "./units";
 
 const MOST_ROWS = 40;
@@ -198,7 +198,8 @@ export class DepletionReader {
 
   private put(step: Step, column: Column, record: CsvRecord, index: number): void {
     const unit = column.kind === "value" ? column.unit : plainUnit;
-    const value = this.reader.figure(record, index, unit);
+    const place = `depletion.rows.${this.steps.indexOf(step)}.${placeOf(column)}`;
+    const value = this.reader.figure(record, index, unit, undefined, place);
     if (value === null) return;
     if (column.kind === "value") step.values[column.named.key] = value;
     else if (column.kind === "plus") step.gas.properties[column.property] = value;
@@ -315,6 +316,13 @@ export class DepletionReader {
       `Depletion table of ${rows.length} pressures${what === "" ? "" : `: ${what}`}.`,
     );
   }
+}
+
+/** Where a column's figure belongs in a row of the table. */
+function placeOf(column: Column): string {
+  if (column.kind === "value") return column.named.key;
+  if (column.kind === "plus") return `producedGas.plus.${column.property}`;
+  return `producedGas.${placeOfComponent(column.component)}`;
 }
 
 const reportedColumns: readonly DepletionColumn[] = [

@@ -49,28 +49,41 @@ export class SheetReader {
       : [...this.found, problemAt(1, null, "", `And ${this.unlisted} more.`)];
   }
 
-  problem(line: number, index: number | null, value: string, message: string): void {
+  problem(
+    line: number,
+    index: number | null,
+    value: string,
+    message: string,
+    place?: string,
+  ): void {
     if (this.found.length >= MOST_PROBLEMS) this.unlisted += 1;
-    else this.found.push(problemAt(line, index === null ? null : index + 1, value, message));
+    else this.found.push(problemAt(line, index === null ? null : index + 1, value, message, place));
   }
 
   /**
    * The figure of a cell in the first unit of its kind, or null when the cell is empty or cannot be read; the latter is
    * a problem.
    *
-   * @param done  what happens instead, as the end of the message: "left empty"
+   * @param done   what happens instead, as the end of the message: "left empty"
+   * @param place  where the figure belongs in what is read, so that a screen can mark its cell
    */
-  figure(record: CsvRecord, index: number, unit: SheetUnit, done = "Left empty."): number | null {
+  figure(
+    record: CsvRecord,
+    index: number,
+    unit: SheetUnit,
+    done = "Left empty.",
+    place?: string,
+  ): number | null {
     const cell = record.cells[index];
     if (isEmptyCell(cell)) return null;
     const read = readNumber(cell);
     if ("reason" in read) {
-      this.problem(record.line, index, cell, `${reasonOf(cell, read.reason)} ${done}`);
+      this.problem(record.line, index, cell, `${reasonOf(cell, read.reason)} ${done}`, place);
       return null;
     }
     const value = unit.convert(read.value);
     if (Number.isFinite(value)) return value;
-    this.problem(record.line, index, cell, `Not a possible figure. ${done}`);
+    this.problem(record.line, index, cell, `Not a possible figure. ${done}`, place);
     return null;
   }
 

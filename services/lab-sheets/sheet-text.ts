@@ -17,6 +17,8 @@ export interface LabProblem {
   /** what stood there, cut to what a person needs to find it */
   value: string;
   message: string;
+  /** where the figure belongs in what was read, such as `depletion.rows.3.gasZ`; absent when it has no place */
+  place?: string;
 }
 
 export interface SheetText {
@@ -32,9 +34,10 @@ export function problemAt(
   column: number | null,
   value: string,
   message: string,
+  place?: string,
 ): LabProblem {
   const shown = value.length > LONGEST_ECHO ? `${value.slice(0, LONGEST_ECHO)}…` : value;
-  return { line, column, value: shown, message };
+  return { line, column, value: shown, message, ...(place !== undefined && { place }) };
 }
 
 const nothing = (message: string, line = 1, value = ""): SheetText => ({

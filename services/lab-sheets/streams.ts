@@ -19,6 +19,14 @@ export interface PlusProperties {
   specificGravity: number | null;
 }
 
+/** Where a component's amount belongs in a reported stream: a single carbon number under its own number. */
+export function placeOfComponent(component: NamedComponent): string {
+  if (component.kind === "light") return `light.${component.name}`;
+  return component.kind === "carbonNumber"
+    ? `carbonNumbers.${component.carbonNumber}`
+    : "plus.molePercent";
+}
+
 /**
  * The amounts of one stream, gathered cell by cell; whether they are per cent or fractions is known when all are there.
  */

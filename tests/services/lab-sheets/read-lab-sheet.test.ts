@@ -331,6 +331,28 @@ describe("readLabSheet: the file", () => {
     expect(read.read[0]).toContain("no heading");
   });
 
+  it("says where a figure that it cannot read belongs, so that a screen can mark its cell", () => {
+    const read = sheet(
+      "composition",
+      "component,mol %",
+      "C1,9o",
+      "C7+,10",
+      "molecular weight of C7+,150",
+      "specific gravity of C7+,0.79",
+      "depletion",
+      "temperature [degF],250",
+      "dew point [psia],5000",
+      "pressure [psia],liquid [%],C1 [mol %],C8 [mol %],C9+ [mol %]",
+      "5000,0,90,2,1",
+      "4000,tr,90,2?,1",
+    );
+    expect(read.problems.map(({ value, place }) => [value, place]).filter(([, at]) => at)).toEqual([
+      ["9o", "composition.stream.light.C1"],
+      ["tr", "depletion.rows.1.liquidPercent"],
+      ["2?", "depletion.rows.1.producedGas.carbonNumbers.8"],
+    ]);
+  });
+
   it.each([
     ["a million commas", ",".repeat(1_000_000)],
     ["a million empty lines", "\n".repeat(1_000_000)],

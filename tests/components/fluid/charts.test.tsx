@@ -1,0 +1,153 @@
+import { renderToStaticMarkup } from "react-dom/server";
+import { describe, expect, it } from "vitest";
+import { DepletionPanels } from "@/components/fluid/depletion-panels";
+import { routeWords } from "@/components/fluid/available-curves";
+import { clippedLine, roundScale, spread } from "@/components/fluid/plot-scale";
+import { envelopeFinding, PhaseEnvelope } from "@/components/fluid/phase-envelope";
+import { partAndPlace, takeLabSheet } from "@/components/fluid/take-lab-sheet";
+import { newSampleText } from "@/components/fluid/sample-text";
+import { equationOfState, labSheet } from "./fixtures";
+
+describe("envelopeFinding(result, initialPressure)", () => {
+  const saturation = {
+    upperPsia: 4310,
+    kind: "dewPoint" as const,
+    lowerDewPointPsia: null,
+    measuredPsia: null,
+    mismatchPsia: null,
+  };
+
+  it("goes by the measured dew point where there is one", () => {
+    const measured = { ...saturation, measuredPsia: 4424, mismatchPsia: -114 };
+    expect(envelopeFinding({ saturation: measured, isTuned: false }, 5898)).toBe(
+      "Liquid starts to drop out 1,470 psi below initial pressure",
+    );
+  });
+
+  it("never states an untuned figure as fact", () => {
+    expect(envelopeFinding({ saturation, isTuned: false }, 5898)).toMatch(/^Untuned, not fitted: /);
+    expect(envelopeFinding({ saturation, isTuned: true }, 4000)).toBe(
+      "Initial pressure lies 310 psi below the dew point",
+    );
+  });
+
+  it("says when nothing drops out", () => {
+    expect(
+      envelopeFinding({ saturation: { ...saturation, upperPsia: null }, isTuned: true }, 5000),
+    ).toBe("No liquid drops out at reservoir temperature");
+  });
+});
+
+describe("PhaseEnvelope", () => {
+  const draw = (isTuned: boolean) =>
+    renderToStaticMarkup(
+      <PhaseEnvelope
+        result={{ ...equationOfState, isTuned }}
+        temperatureDegF={255}
+        initialPressurePsia={5900}
+        abandonmentPressurePsia={1000}
+        stages={[
+          { pressurePsia: 615, temperatureDegF: 85 },
+          { pressurePsia: 14.696, temperatureDegF: 60 },
+        ]}
+        fileName="envelope"
+      />,
+    );
+
+  it("dashes an untuned envelope and says so in words, and draws a tuned one firm", () => {
+    expect(draw(false)).toContain("Untuned");
+    expect(draw(false)).toMatch(/class="line line-dashed" d="M/);
+    expect(draw(true)).not.toContain("Untuned");
+    expect(draw(true)).not.toMatch(/class="line line-dashed"/);
+  });
+
+  it("sets the computed dew point beside the measured one with the difference", () => {
+    const html = draw(false);
+    expect(html).toContain("Computed dew point 5,201 psia, measured 5,215: \u221214.0 psi");
+    expect(html).not.toMatch(/NaN|Infinity/);
+  });
+});
+
+describe("DepletionPanels", () => {
+  const curve = {
+    route: "untunedEquationOfState" as const,
+    ...routeWords.untunedEquationOfState,
+    curve: equationOfState.curve!,
+  };
+  const html = renderToStaticMarkup(
+    <DepletionPanels
+      curve={curve}
+      others={[]}
+      measured={[{ pressurePsia: 3000, liquidPercent: 14 }]}
+      initialPressurePsia={5900}
+      producedBefore={0.1}
+      criticalBand={{ low: 10, high: 20 }}
+      abandonmentPressurePsia={1000}
+      onAbandon={() => undefined}
+      fileName="depletion"
+    />,
+  );
+
+  it("is a slider between the lowest pressure of the curve and its dew point", () => {
+    expect(html).toMatch(
+      /role="slider"[^>]*aria-valuemin="1000" aria-valuemax="5215" aria-valuenow="1000"/,
+    );
+  });
+
+  it("counts what came above the dew point into what reaches the tank", () => {
+    // 0.1 + 0.9 x 0.29
+    expect(html).toMatch(/Condensate to the tank<\/dt><dd><span[^>]*><span>36<\/span>\.1/);
+  });
+
+  it("marks an untuned curve in its heading and by dashes", () => {
+    expect(html).toContain("Untuned: liquid takes up to 20.0 % of the pores");
+    expect(html).toMatch(/class="line line-dashed"/);
+  });
+});
+
+describe("takeLabSheet(read, now)", () => {
+  it("puts a cell that could not be read back where it is to be put right", () => {
+    const { change, remarks } = takeLabSheet(labSheet, newSampleText(null));
+    expect(change.depletion?.cells["rows.1.gasZ"]).toBe("0.9e1?");
+    expect(remarks.depletion["rows.1.gasZ"]).toBe(
+      "Line 31 of the file has \u201c0.9e1?\u201d. This is not a number. Left empty.",
+    );
+    expect(change.composition?.cells["stream.light.C1"]).toBe("90");
+    expect(change).not.toHaveProperty("separator");
+  });
+
+  it("knows which sheet a place is in", () => {
+    expect(partAndPlace("depletion.rows.3.gasZ")).toEqual({
+      part: "depletion",
+      place: "rows.3.gasZ",
+    });
+    expect(partAndPlace("elsewhere.x")).toBeNull();
+  });
+});
+
+describe("plot scales", () => {
+  it("ends on round figures", () => {
+    expect(roundScale([0, 5898], { count: 6 }).domain).toEqual([0, 6000]);
+    expect(roundScale([-93, 415], { fromZero: false }).domain).toEqual([-200, 600]);
+  });
+
+  it("cuts a line at the edge of the picture", () => {
+    expect(
+      clippedLine([
+        [-10, 0],
+        [10, 20],
+        [30, 40],
+      ]),
+    ).toEqual([
+      [0, 10],
+      [10, 20],
+      [30, 40],
+    ]);
+  });
+
+  it("moves labels apart and keeps their order", () => {
+    const [a, b, c] = spread([50, 51, 90], 6);
+    expect(b - a).toBeCloseTo(6, 6);
+    expect(c).toBe(90);
+  });
+});
