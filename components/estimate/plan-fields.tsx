@@ -15,6 +15,10 @@ const about: Record<PlanFieldName, { label: string; unit?: string; hint?: string
   cyclingPressurePsia: { label: "Injection begins at", unit: "psia" },
   injectedPoreVolumes: { label: "Pore volumes injected", hint: "Usual 0.5 to 1.5" },
   fuelFraction: { label: "Fuel and losses", hint: "fraction of produced gas" },
+  revaporisation: {
+    label: "Liquid taken up by injected gas",
+    hint: "fraction of what it can hold; empty is none, on the safe side",
+  },
 };
 
 export interface PlanFieldsProps {
@@ -27,7 +31,7 @@ export interface PlanFieldsProps {
 }
 
 const parts: Record<"own" | "water", readonly PlanFieldName[]> = {
-  own: ["cyclingPressurePsia", "injectedPoreVolumes", "fuelFraction"],
+  own: ["cyclingPressurePsia", "injectedPoreVolumes", "fuelFraction", "revaporisation"],
   water: ["invadedFraction", "trappedGasSaturation"],
 };
 
@@ -90,6 +94,7 @@ export function PlanFields({ text, reading, part = "all", onChange }: PlanFields
       {field("cyclingPressurePsia")}
       {field("injectedPoreVolumes")}
       {field("fuelFraction")}
+      {field("revaporisation")}
       {reading.problem && (
         <p className="field-error basis-full">
           <Icon name="warning" />

@@ -9,7 +9,14 @@ import {
 import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
 import { planInputsOf } from "./input-catalogue";
 import { placeProblem, readDistribution, type InputReading } from "./input-reading";
-import { hasInflux, shownFields, type PlanFieldName, type PlanText } from "./plan-text";
+import {
+  hasInflux,
+  optionalPlanFields,
+  planFieldNames,
+  shownFields,
+  type PlanFieldName,
+  type PlanText,
+} from "./plan-text";
 import { readPlain, readQuantity, type FieldReading } from "./quantities-of-inputs";
 
 /** What the fields of a recovery plan read as. */
@@ -40,6 +47,7 @@ const fieldPaths: Record<PlanFieldName, string> = {
   cyclingPressurePsia: "cycling.pressurePsia",
   injectedPoreVolumes: "cycling.injectedPoreVolumes",
   fuelFraction: "cycling.fuelFraction",
+  revaporisation: "cycling.revaporisation",
 };
 
 /** Ends of a single figure, in its own unit; the engine's schema has the same. */
@@ -51,6 +59,7 @@ const possible: Record<PlanFieldName, readonly [number, number]> = {
   cyclingPressurePsia: [0, Infinity],
   injectedPoreVolumes: [0, 5],
   fuelFraction: [0, 0.5],
+  revaporisation: [0, 1],
 };
 
 function readPlanField(name: PlanFieldName, text: string): FieldReading {
@@ -77,18 +86,16 @@ export function readPlan(text: PlanText): PlanReading {
   const used = planInputsOf(text.concept);
   const inputs = mapPlanInputs((name) => readDistribution(name, text.inputs[name], ranges[name]));
   const fields = Object.fromEntries(
-    Object.entries(text.fields).map(([name, typed]) => [
-      name,
-      readPlanField(name as PlanFieldName, typed),
-    ]),
+    // Work that this browser kept from before a figure was added has no text for it.
+    planFieldNames.map((name) => [name, readPlanField(name, text.fields[name] ?? "")]),
   ) as PlanReading["fields"];
   const incomplete = used.filter((name) => !inputs[name].isComplete);
   const impossible = used.filter(
     (name) => inputs[name].isComplete && inputs[name].distribution === null,
   );
-  const open = shownFields(text).filter(
-    (name) => fields[name].value === null || fields[name].problem !== null,
-  );
+  const isMissing = (name: PlanFieldName) =>
+    fields[name].value === null && !optionalPlanFields.includes(name);
+  const open = shownFields(text).filter((name) => isMissing(name) || fields[name].problem !== null);
   const partial = { inputs, used, fields, incomplete, impossible, open, problem: null, plan: null };
   if (incomplete.length > 0 || impossible.length > 0 || open.length > 0) return partial;
   const plan = planOf(text, partial);
@@ -138,6 +145,9 @@ function planOf(text: PlanText, { inputs, fields }: Pick<PlanReading, "inputs" |
             displacementEfficiency: input("displacementEfficiency"),
             injectedPoreVolumes: value("injectedPoreVolumes"),
             fuelFraction: value("fuelFraction"),
+            ...(fields.revaporisation.value === null
+              ? {}
+              : { revaporisation: fields.revaporisation.value }),
           }
         : null,
   };

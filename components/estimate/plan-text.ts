@@ -17,8 +17,12 @@ export const planFieldNames = [
   "cyclingPressurePsia",
   "injectedPoreVolumes",
   "fuelFraction",
+  "revaporisation",
 ] as const;
 export type PlanFieldName = (typeof planFieldNames)[number];
+
+/** May stay empty: the plan then leaves it out, and the engine takes the safe side. */
+export const optionalPlanFields: readonly PlanFieldName[] = ["revaporisation"];
 
 /** What stands in the fields of a recovery plan. What its concept does not use is kept, so that trying one loses nothing. */
 export interface PlanText {
@@ -63,6 +67,7 @@ export function textOfPlan(plan: RecoveryPlan): PlanText {
       cyclingPressurePsia: written(cycling?.pressurePsia),
       injectedPoreVolumes: written(cycling?.injectedPoreVolumes),
       fuelFraction: written(cycling?.fuelFraction),
+      revaporisation: written(cycling?.revaporisation),
     },
     waterDrive: waterDrive.kind,
     pressure: cycling?.pressure ?? "maintained",
@@ -81,7 +86,7 @@ export function shownFields(text: Pick<PlanText, "concept" | "waterDrive">): Pla
     "criticalHigh",
     ...(hasInflux(text) ? (["invadedFraction", "trappedGasSaturation"] as const) : []),
     ...(concept === "cycling"
-      ? (["cyclingPressurePsia", "injectedPoreVolumes", "fuelFraction"] as const)
+      ? (["cyclingPressurePsia", "injectedPoreVolumes", "fuelFraction", "revaporisation"] as const)
       : []),
   ];
 }

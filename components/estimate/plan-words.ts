@@ -101,6 +101,9 @@ export function cyclingInWords({ cycling }: RecoveryPlan): string {
   if (cycling === null) return "No injection";
   return (
     `${formatFigure(cycling.injectedPoreVolumes)} pore volumes from ${psia(cycling.pressurePsia)}; ` +
-    `${pressureLabels[cycling.pressure].toLowerCase()}; ${formatPercent(cycling.fuelFraction, { decimals: 1 })} fuel`
+    `${pressureLabels[cycling.pressure].toLowerCase()}; ${formatPercent(cycling.fuelFraction, { decimals: 1 })} fuel` +
+    (cycling.revaporisation
+      ? `; injected gas takes up ${formatPercent(cycling.revaporisation)} of the liquid it can`
+      : "")
   );
 }

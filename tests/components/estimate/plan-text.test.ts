@@ -61,7 +61,11 @@ describe("textOfPlan(plan)", () => {
       ...depletion,
       waterDrive: { kind: "influx", invadedFraction: 0.3, trappedGasSaturation: 0.25 },
     };
-    for (const plan of [depletion, cycling, influx]) {
+    const takingUp: RecoveryPlan = {
+      ...cycling,
+      cycling: cycling.cycling && { ...cycling.cycling, revaporisation: 0.4 },
+    };
+    for (const plan of [depletion, cycling, influx, takingUp]) {
       expect(readPlan(textOfPlan(plan)).plan).toEqual(plan);
     }
   });
