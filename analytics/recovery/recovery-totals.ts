@@ -3,6 +3,12 @@ import type { CompiledPlan } from "./compile-plan";
 
 /** Why a trial can have no recovery, with what to do about it. */
 export const refusals = {
+  noState: {
+    input: "uncertain",
+    message:
+      "have no z factor at the dew point: pressure, temperature and gravity lie where it has no value. Narrow the " +
+      "ranges of temperature or condensate yield.",
+  },
   abandonmentAboveInitial: {
     input: "recoveryPlan.abandonmentPressurePsia",
     message: "are abandoned above their initial pressure. Narrow one of the two ranges.",

@@ -241,8 +241,9 @@ function fillCycled(
 function refusalOfDepletion(
   { pressurePsia, plan }: RecoveryTrials,
   t: number,
-): "abandonmentAboveInitial" | "condensateAboveAll" | null {
+): "abandonmentAboveInitial" | "condensateAboveAll" | "noState" | null {
   if (!(plan.abandonmentPressurePsia[t] <= pressurePsia[t])) return "abandonmentAboveInitial";
+  if (Number.isNaN(abandoned.condensateProduced)) return "noState";
   return abandoned.condensateProduced <= 1 ? null : "condensateAboveAll";
 }
 
