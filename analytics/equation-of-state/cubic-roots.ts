@@ -38,8 +38,10 @@ export function cubicRoots(a: number, b: number, roots: CubicRoots): void {
       atInflection * atInflection <= (4 / 27) * s2 * s2 * s2 ? (2 / Math.sqrt(3)) * s : reach + s;
   }
   const outer = halley(inflection + side * reach, c2, c1, c0);
-  const p = c2 + outer;
+  // What is left of the cubic, z2 + p z + q: a large root is divided out from the constant term up, a small one from
+  // the leading term down, or the small roots of a dilute gas would drown in the rounding of the large one.
   const q = outer === 0 ? c1 : -c0 / outer;
+  const p = side > 0 ? (q - c1) / outer : c2 + outer;
   const discriminant = p * p - 4 * q;
   let low = outer;
   let high = outer;

@@ -12,7 +12,7 @@ import {
 export const LOWEST_PSIA = 14.696;
 export const HIGHEST_PSIA = 20_000;
 /** Where a line going to low temperature ends: -100 degF, below anything a reservoir or a separator sees. */
-export const LOWEST_DEGR = 360;
+export const LOWEST_DEGR = 330;
 const MAXIMUM_POINTS = 400;
 /** Largest changes from one point to the next, for a smooth line. */
 const LARGEST_LN_K = 0.8;

@@ -271,12 +271,13 @@ describe("cubicRoots", () => {
   });
 
   it("keeps every digit of a dilute liquid's root", () => {
-    // z of a liquid at low pressure is p v / (R T) with v between b and a few b
     const roots = { low: NaN, high: NaN };
-    cubicRoots(2e-9, 1e-10, roots);
-    expect(roots.high).toBeCloseTo(1, 8);
-    expect(roots.low / 1e-10).toBeGreaterThan(1);
-    expect(roots.low / 1e-10).toBeLessThan(2);
+    for (const b of [1e-6, 1e-10, 1e-14]) {
+      cubicRoots(12 * b, b, roots);
+      // -u2 + (12 - 2) u - (12 - 1) = 0 in the limit, of which the smaller root is 5 - sqrt 14
+      expect(roots.low / b / (5 - Math.sqrt(14))).toBeCloseTo(1, 5);
+      expect(roots.high).toBeCloseTo(1, 4);
+    }
   });
 });
 
