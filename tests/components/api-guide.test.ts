@@ -1,14 +1,18 @@
 import { describe, expect, it } from "vitest";
 import { describeSchema, sharedShapes } from "@/app/(tools)/api-guide/_components/describe-schema";
 import { calculations } from "@/app/(tools)/api-guide/_components/examples";
+import { fluidCalculations } from "@/app/(tools)/api-guide/_components/fluid-examples";
 
 describe("examples of the API guide", () => {
-  it.each(calculations.map(({ name, request, example }) => ({ name, request, example })))(
-    "$name is a request that the route takes",
-    ({ request, example }) => {
-      expect(request.safeParse(example).error).toBeUndefined();
-    },
-  );
+  it.each(
+    [...calculations, ...fluidCalculations].map(({ name, request, example }) => ({
+      name,
+      request,
+      example,
+    })),
+  )("$name is a request that the route takes", ({ request, example }) => {
+    expect(request.safeParse(example).error).toBeUndefined();
+  });
 });
 
 describe("describeSchema(schema, io)", () => {
@@ -32,6 +36,12 @@ describe("describeSchema(schema, io)", () => {
     const rows = request("wellstream");
     expect(rows.find(({ path }) => path === "separatorTest")?.shape).toBe("SeparatorTest");
     expect(rows.some(({ path }) => path.startsWith("separatorTest."))).toBe(false);
+  });
+
+  it("calls a number that may be missing a number or null", () => {
+    const rows = describeSchema(sharedShapes.DepletionTable.schema, "input");
+    expect(rows.find(({ path }) => path === "rows[].liquidPercent")?.type).toBe("number or null");
+    expect(rows.filter(({ type }) => type === "any")).toEqual([]);
   });
 
   it("lists every alternative of a choice by its kind", () => {

@@ -6,6 +6,7 @@ import { can } from "@/services/policy";
 import { CalculationGuide } from "./_components/calculation-guide";
 import { calculations } from "./_components/examples";
 import { FileAddresses } from "./_components/file-addresses";
+import { fluidCalculations } from "./_components/fluid-examples";
 import { SharedShapes } from "./_components/shared-shapes";
 import { TokenSection } from "./_components/token-section";
 import { exampleAnswers } from "./_server/answers";
@@ -25,7 +26,7 @@ export default async function ApiGuidePage() {
       <Stack>
         <TokenSection />
         <FileAddresses origin={origin} mayImport={can(actor, "import.create")} />
-        {calculations.map((calculation) => (
+        {[...calculations, ...fluidCalculations].map((calculation) => (
           <CalculationGuide
             key={calculation.name}
             calculation={calculation}

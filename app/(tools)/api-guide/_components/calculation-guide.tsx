@@ -1,8 +1,9 @@
 import { Disclosure } from "@/components/ui/dialog";
 import { Section } from "@/components/ui/section";
+import type { Calculation } from "./calculation";
 import { CodeBlock } from "./code-block";
 import { describeSchema } from "./describe-schema";
-import type { Calculation } from "./examples";
+
 import { ShapeTable } from "./shape-table";
 
 /** A single-quoted word of a POSIX shell. */

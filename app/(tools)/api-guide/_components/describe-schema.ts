@@ -1,5 +1,14 @@
 import { z } from "zod";
+import {
+  compositionSheetSchema,
+  reportedStreamSchema,
+  separatorStagesSchema,
+} from "@/analytics/composition/composition-schema";
+import { depletionTableSchema } from "@/analytics/depletion/depletion-table-schema";
+import { characterisationSchema } from "@/analytics/equation-of-state/characterisation-schema";
 import { separatorTestSchema } from "@/analytics/fluid/separator-test-schema";
+import { recoveryCurveSchema } from "@/analytics/recovery/recovery-curve-schema";
+import { recoveryPlanSchema } from "@/analytics/recovery/recovery-plan-schema";
 import { distributionSchema } from "@/analytics/uncertainty/distribution-schema";
 import { estimateInputsSchema } from "@/analytics/volumetrics/inputs-schema";
 import { quantitySummarySchema, rangeSchema } from "@/analytics/volumetrics/results-schema";
@@ -23,6 +32,13 @@ export const sharedShapes: Record<string, { title: string; schema: z.ZodType }> 
   MeteredRate: { title: "Metered rate", schema: meteredRateSchema },
   Distribution: { title: "Distribution", schema: distributionSchema },
   EstimateInputs: { title: "Inputs of an estimate", schema: estimateInputsSchema },
+  CompositionSheet: { title: "Composition sheet", schema: compositionSheetSchema },
+  ReportedStream: { title: "Reported stream", schema: reportedStreamSchema },
+  SeparatorStages: { title: "Separator stages", schema: separatorStagesSchema },
+  Characterisation: { title: "Characterisation", schema: characterisationSchema },
+  DepletionTable: { title: "Depletion table", schema: depletionTableSchema },
+  RecoveryCurve: { title: "Recovery curve", schema: recoveryCurveSchema },
+  RecoveryPlan: { title: "Recovery plan", schema: recoveryPlanSchema },
   Range: { title: "Range", schema: rangeSchema },
   QuantitySummary: { title: "Summary of a quantity", schema: quantitySummarySchema },
   Warning: { title: "Warning", schema: warningSchema },
@@ -62,6 +78,12 @@ function withoutNull(schema: Json): { inner: Json; nullable: boolean } {
       inner: { ...inner, description: schema.description ?? inner.description },
       nullable: true,
     };
+  }
+  // a plain type or null comes as a list of types
+  const types: unknown = schema.type;
+  if (Array.isArray(types) && types.length === 2 && types.includes("null")) {
+    const type = types.find((name) => name !== "null") as Json["type"];
+    return { inner: { ...schema, type }, nullable: true };
   }
   return { inner: schema, nullable: false };
 }

@@ -11,6 +11,7 @@ import {
   zFactorRequestSchema,
   zFactorResponseSchema,
 } from "@/app/api/v1/calculations/schema";
+import type { Calculation } from "./calculation";
 
 /** Requests of the guide: typed by the schemas they document, and sent through them by the tests. */
 
@@ -85,16 +86,6 @@ export const simulationExample: z.input<typeof simulationRequestSchema> = {
   trials: 2000,
   seed: 1,
 };
-
-export interface Calculation {
-  name: string;
-  title: string;
-  /** what it is for, in a sentence */
-  purpose: string;
-  request: z.ZodType;
-  response: z.ZodType;
-  example: unknown;
-}
 
 /** The stateless calculations, in the order in which an estimate needs them. */
 export const calculations: readonly Calculation[] = [

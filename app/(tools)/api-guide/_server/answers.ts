@@ -1,5 +1,14 @@
 import "server-only";
 import {
+  compositionRequestSchema,
+  depletionRequestSchema,
+  equationOfStateRequestSchema,
+  labSheetRequestSchema,
+  nearWellRequestSchema,
+  recoveryRequestSchema,
+  tuningRequestSchema,
+} from "@/app/api/v1/calculations/fluid-schema";
+import {
   distributionRequestSchema,
   inPlaceRequestSchema,
   simulationRequestSchema,
@@ -13,6 +22,8 @@ import {
   calculateWellstream,
   calculateZFactor,
 } from "@/services/calculations";
+import { calculateComposition, calculateOnFluid } from "@/services/calculations-of-fluids";
+import { readLabSheet } from "@/services/lab-sheets/read-lab-sheet";
 import {
   distributionExample,
   inPlaceExample,
@@ -20,6 +31,15 @@ import {
   wellstreamExample,
   zFactorExample,
 } from "../_components/examples";
+import {
+  compositionExample,
+  depletionExample,
+  equationOfStateExample,
+  labSheetExample,
+  nearWellExample,
+  recoveryExample,
+  tuningExample,
+} from "../_components/fluid-examples";
 
 const LIST_ENTRIES_SHOWN = 3;
 
@@ -32,6 +52,25 @@ function abridged(value: unknown): unknown {
   }
   if (typeof value !== "object" || value === null) return value;
   return Object.fromEntries(Object.entries(value).map(([key, part]) => [key, abridged(part)]));
+}
+
+async function calculateFluids(): Promise<Record<string, unknown>> {
+  const [equationOfState, depletion, tuning, recovery, nearWell] = await Promise.all([
+    calculateOnFluid("equationOfState", equationOfStateRequestSchema.parse(equationOfStateExample)),
+    calculateOnFluid("depletion", depletionRequestSchema.parse(depletionExample)),
+    calculateOnFluid("tuning", tuningRequestSchema.parse(tuningExample)),
+    calculateOnFluid("recovery", recoveryRequestSchema.parse(recoveryExample)),
+    calculateOnFluid("nearWell", nearWellRequestSchema.parse(nearWellExample)),
+  ]);
+  return {
+    "lab-sheet": readLabSheet(labSheetRequestSchema.parse(labSheetExample).text),
+    composition: calculateComposition(compositionRequestSchema.parse(compositionExample)),
+    "equation-of-state": equationOfState,
+    depletion,
+    tuning,
+    recovery,
+    "near-well": nearWell,
+  };
 }
 
 async function calculate(): Promise<Record<string, unknown>> {
@@ -49,6 +88,7 @@ async function calculate(): Promise<Record<string, unknown>> {
       results: { condensateRecoverableStb: results.condensateRecoverableStb },
       drivers: { condensateRecoverableStb: drivers.condensateRecoverableStb.slice(0, 1) },
     },
+    ...(await calculateFluids()),
   };
 }
 
