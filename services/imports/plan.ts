@@ -178,7 +178,10 @@ const unitLabels: Record<string, string> = {
   fraction: "fraction",
 };
 
-/** What the file leaves blank stays as the book has it: depth, sources, and correlations, which no sheet can give. */
+/**
+ * What the file leaves blank stays as the book has it: depth, sources, and correlations and recovery plans, which no
+ * sheet can give.
+ */
 function withBook(row: ReservoirRow, latest: EstimateInputs | null, depthFt: number | null) {
   if (!latest) return { ...row.inputs, depthFt };
   const uncertain = { ...row.inputs.uncertain };
@@ -186,7 +189,9 @@ function withBook(row: ReservoirRow, latest: EstimateInputs | null, depthFt: num
     const source = uncertain[input].source || latest.uncertain[input].source;
     uncertain[input] = { ...uncertain[input], source };
   }
-  return { ...row.inputs, uncertain, correlations: latest.correlations, depthFt };
+  const { correlations } = latest;
+  const recoveryPlan = latest.recoveryPlan ?? null;
+  return { ...row.inputs, uncertain, correlations, depthFt, recoveryPlan };
 }
 
 function inputChanges(before: EstimateInputs, after: EstimateInputs): Change[] {
@@ -216,6 +221,25 @@ function fluidChange(before: SeparatorTest, after: SeparatorTest): Change {
   const described = (test: SeparatorTest): string =>
     `${figure(Number(recombine(test).condensateYieldStbPerMmscf.toPrecision(4)))} STB/MMscf, ${figure(test.condensateApi)} °API`;
   return { what: "Separator test", before: described(before), after: described(after) };
+}
+
+/** Recoveries that a plan works out of the fluid do not follow the file; whoever changed them there should know. */
+function unusedRecoveries(row: ReservoirRow, latest: EstimateInputs | null): Problem[] {
+  const plan = latest?.recoveryPlan;
+  if (!latest || !plan) return [];
+  return (["gas_recovery", "condensate_recovery"] as const).flatMap((stem) => {
+    const input = stem === "gas_recovery" ? "gasRecovery" : "condensateRecovery";
+    const { distribution } = row.inputs.uncertain[input];
+    if (isSame(distribution, latest.uncertain[input].distribution)) return [];
+    return [
+      {
+        line: row.line,
+        column: `${stem}_best`,
+        value: null,
+        reason: `The book works the recoveries out of the fluid (${plan.concept}); this range is kept but not used. Take the plan away on the reservoir's page to enter recoveries.`,
+      },
+    ];
+  });
 }
 
 /** Differences of the field's own data, and which of them this person may make. */
@@ -359,7 +383,11 @@ export function planRow(row: ReservoirRow, book: Book, may: Permissions): RowPla
     estimate,
     fieldChanges: compared.apply,
     changes,
-    warnings: [...row.warnings, ...compared.warnings],
+    warnings: [
+      ...row.warnings,
+      ...compared.warnings,
+      ...unusedRecoveries(row, latest?.inputs ?? null),
+    ],
   };
 }
 

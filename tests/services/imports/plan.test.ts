@@ -120,6 +120,55 @@ describe("planRow(row, book, may)", () => {
     expect(planRow(rowOf({ depth: "" }), book, engineer)).toMatchObject({ action: "unchanged" });
   });
 
+  it("keeps a recovery plan, and says that recoveries of the sheet are not used beside it", () => {
+    const { inputs } = rowOf();
+    const uncertain = (value: number) => ({
+      distribution: { kind: "constant" as const, value },
+      source: "",
+    });
+    const point = {
+      wellstreamProduced: 0,
+      gasProduced: 0,
+      condensateProduced: 0,
+      condensateInGas: 1,
+      liquidSaturation: 0,
+      gasZ: 0.9,
+      twoPhaseZ: 0.9,
+      producingYieldStbPerMmscf: 80,
+    };
+    const recoveryPlan = {
+      concept: "depletion" as const,
+      curve: {
+        route: "laboratory" as const,
+        temperatureDegF: 240,
+        dewPointPsia: 4000,
+        points: [
+          { ...point, pressurePsia: 4000 },
+          { ...point, pressurePsia: 700 },
+        ],
+      },
+      abandonmentPressurePsia: uncertain(1000),
+      condensateCurveFactor: uncertain(1),
+      criticalSaturation: { low: 0.1, high: 0.2 },
+      waterDrive: { kind: "none" as const },
+      cycling: null,
+    };
+    const book = bookWith({ inputs: { ...inputs, recoveryPlan } });
+    const same = planRow(rowOf(), book, engineer);
+    expect(same.action).toBe("unchanged");
+    expect(same.warnings.map(({ column }) => column)).not.toContain("gas_recovery_best");
+    const wider = planRow(rowOf({ area_high: "4000" }), book, engineer);
+    expect(wider).toMatchObject({ action: "revise", inputs: { recoveryPlan } });
+    const recovery = planRow(rowOf({ gas_recovery_best: "0.7" }), book, engineer);
+    expect(recovery).toMatchObject({ inputs: { recoveryPlan } });
+    expect(recovery.warnings).toContainEqual(
+      expect.objectContaining({
+        column: "gas_recovery_best",
+        reason: expect.stringMatching(/not used/),
+      }),
+    );
+  });
+
   it("reports a commercial difference, and makes it only where the role may", () => {
     const row = rowOf({ working_interest: "0.5" });
     expect(planRow(row, bookWith(), engineer)).toMatchObject({
