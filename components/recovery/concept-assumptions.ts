@@ -28,6 +28,8 @@ export interface ConceptStart {
 export interface ConceptEdits {
   abandonment: Partial<Record<ProducingConcept, InputText>>;
   inputs: Partial<Record<PlanInputName, InputText>>;
+  /** a curve factor belongs to the kind of curve that it was typed for */
+  factorRoute?: RecoveryRoute;
   fields: Partial<Record<PlanFieldName, string>>;
   waterDrive?: RecoveryPlan["waterDrive"]["kind"];
   pressure?: Cycling["pressure"];
@@ -145,11 +147,14 @@ export function conceptText(
   edits: ConceptEdits,
 ): PlanText {
   const text = textOfPlan(startingPlan(concept, start));
+  const { condensateCurveFactor, ...others } = edits.inputs;
   return {
     ...text,
     inputs: {
       ...text.inputs,
-      ...edits.inputs,
+      ...others,
+      ...(condensateCurveFactor &&
+        edits.factorRoute === start.curve.route && { condensateCurveFactor }),
       abandonmentPressurePsia: edits.abandonment[concept] ?? text.inputs.abandonmentPressurePsia,
     },
     fields: { ...text.fields, ...startingInflux, ...edits.fields },
@@ -175,6 +180,7 @@ export function withEdit(edits: ConceptEdits, now: PlanText, next: PlanText): Co
   }
   const abandonment = next.inputs.abandonmentPressurePsia;
   return {
+    factorRoute: inputs.condensateCurveFactor && next.curve.route,
     abandonment:
       abandonment === now.inputs.abandonmentPressurePsia
         ? edits.abandonment
@@ -193,6 +199,7 @@ export function withEdit(edits: ConceptEdits, now: PlanText, next: PlanText): Co
 export function editsOfPlan(plan: PlanText): ConceptEdits {
   const used = plan.concept === "cycling" ? planInputNames : (["condensateCurveFactor"] as const);
   return {
+    factorRoute: plan.curve.route,
     abandonment: { [plan.concept]: plan.inputs.abandonmentPressurePsia },
     inputs: Object.fromEntries(
       used

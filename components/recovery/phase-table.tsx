@@ -1,4 +1,4 @@
-import { conceptLabels, phaseLabels } from "@/components/estimate/plan-words";
+import { phaseLabels, shortConcepts } from "@/components/estimate/plan-words";
 import { resultFactor, resultUnit, type ResultBasis } from "@/components/estimate/result-rows";
 import { formatFigure, formatPercent } from "@/components/ui/format";
 import { LedgerTable } from "@/components/ui/table";
@@ -20,7 +20,7 @@ export function PhaseTable({ concepts }: { concepts: readonly Phased[] }) {
           <th scope="col">Phase</th>
           {concepts.map(({ concept }) => (
             <th key={concept} scope="col" className="right">
-              {conceptLabels[concept]}
+              {shortConcepts[concept]}
             </th>
           ))}
         </tr>
