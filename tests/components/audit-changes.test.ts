@@ -31,6 +31,13 @@ describe("changesOf", () => {
     expect(changesOf(event({ before: { note: "x" }, after: { note: null } }))[0].after).toBe("–");
   });
 
+  it("says that a long list changed when its length did not", () => {
+    const rows = (liquidPercent: number) =>
+      Array.from({ length: 8 }, () => ({ pressurePsia: 4000, liquidPercent }));
+    const changes = changesOf(event({ before: { rows: rows(9) }, after: { rows: rows(4) } }));
+    expect(changes).toEqual([{ name: "rows", before: "8 entries", after: "8 entries, changed" }]);
+  });
+
   it("names nested values by their path after whole ones, and reads a long list as its length", () => {
     const prices = Array.from({ length: 9 }, () => ({ product: "condensate", benchmark: 69 }));
     const changes = changesOf(event({ after: { inputs: { netThicknessFt: 128 }, prices } }));

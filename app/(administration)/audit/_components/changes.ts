@@ -16,9 +16,14 @@ export function changesOf({ before, after }: AuditEventView): Change[] {
   const was = flatten(before);
   const is = flatten(after);
   return [...new Set([...was.keys(), ...is.keys()])]
-    .filter((name) => was.get(name) !== is.get(name))
+    .filter((name) => JSON.stringify(was.get(name)) !== JSON.stringify(is.get(name)))
     .sort((a, b) => weightOf(a) - weightOf(b))
-    .map((name) => ({ name: pathWords(name), before: was.get(name), after: is.get(name) }));
+    .map((name) => {
+      const [old, next] = [was.get(name), is.get(name)].map(wordsOf);
+      // Two long lists of one length read alike, and differ.
+      const differs = old !== undefined && old === next ? `${next}, changed` : next;
+      return { name: pathWords(name), before: old, after: differs };
+    });
 }
 
 /** What tells most stands first, then whole values before parts of values. */
@@ -29,14 +34,16 @@ function weightOf(path: string): number {
   return place < 0 ? telling.length + path.split(".").length : place;
 }
 
-function flatten(record: Record<string, unknown> | null): Map<string, string> {
-  const values = new Map<string, string>();
+const wordsOf = (value: unknown) => (value === undefined ? undefined : valueWords(value));
+
+function flatten(record: Record<string, unknown> | null): Map<string, unknown> {
+  const values = new Map<string, unknown>();
   const walk = (value: unknown, path: string, depth: number) => {
     if (typeof value === "object" && value !== null && !Array.isArray(value) && depth < 4) {
       for (const [key, part] of Object.entries(value)) {
         walk(part, path === "" ? key : `${path}.${key}`, depth + 1);
       }
-    } else if (path !== "") values.set(path, valueWords(value));
+    } else if (path !== "") values.set(path, value);
   };
   walk(record, "", 0);
   return values;
