@@ -204,10 +204,10 @@ describe("cycle", () => {
   });
 });
 
-describe("cycling of the third comparative study, as published for an open simulator", () => {
+describe("cycling of the third comparative study, as published with an open data set", () => {
   /**
-   * OPM/opm-tests, SPE3CASE1 (Open Database Licence 1.0, copyright 2015 Statoil): 22.73 Bscf of gas and 3.797 MMSTB in
-   * place; 6.2 MMscf/d produced and 4.7 put back for ten years, then blown down for five. Published recoveries of
+   * Open simulation data set of the third comparative solution project (Open Database Licence 1.0, copyright 2015
+   * Statoil): 22.73 Bscf of gas and 3.797 MMSTB in place; 6.2 MMscf/d produced and 4.7 put back for ten years, then blown down for five. Published recoveries of
    * condensate: 0.574 after ten years, 0.665 after fifteen; by depletion alone 0.22 to 0.29.
    *
    * The curve is a tank balance of that data set's black-oil properties, done apart in Python: gas and condensate
