@@ -206,7 +206,13 @@ function Panels({
             ),
         )}
         {most.liquidSaturation > 0 && (
-          <PlotLabel {...mostAt} anchor="above" dy={-7} toned>
+          <PlotLabel
+            {...mostAt}
+            anchor={mostAt.x > 55 ? "end" : "above"}
+            dx={mostAt.x > 55 ? -10 : 0}
+            dy={-7}
+            toned
+          >
             <b>Most liquid</b> {formatFigure(most.liquidSaturation * 100)} % at{" "}
             {psia(most.pressurePsia)} psia
           </PlotLabel>

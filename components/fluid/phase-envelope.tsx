@@ -237,7 +237,7 @@ function EnvelopePlot({
           <Mark
             key={index}
             {...place(stage.temperatureDegF, stage.pressurePsia)}
-            anchor={index === stages.length - 1 ? "end" : index % 2 === 0 ? "start" : "end"}
+            anchor={index === stages.length - 1 ? "end" : "start"}
             dy={index === stages.length - 1 ? -8 : 0}
             toned
           >
@@ -353,15 +353,20 @@ const closed = (outline: readonly EnvelopePoint[]): EnvelopePoint[] => [
   { ...outline[outline.length - 1], pressurePsia: 0 },
 ];
 
-/** Bubble points by rising temperature, then the dew line onward from where they meet. */
+/** Bubble and dew line as one, put together where their ends are nearest to each other. */
 function outlineOf({ bubble, dew }: Envelope): EnvelopePoint[] {
   if (bubble.length === 0) return dew;
   if (dew.length === 0) return bubble;
-  const top = bubble[bubble.length - 1];
-  const far = (point: EnvelopePoint) =>
-    Math.abs(point.temperatureDegF - top.temperatureDegF) / 100 +
-    Math.abs(point.pressurePsia - top.pressurePsia) / 1000;
-  return [...bubble, ...(far(dew[0]) <= far(dew[dew.length - 1]) ? dew : dew.toReversed())];
+  const gap = (from: EnvelopePoint, to: EnvelopePoint) =>
+    Math.abs(from.temperatureDegF - to.temperatureDegF) / 100 +
+    Math.abs(from.pressurePsia - to.pressurePsia) / 1000;
+  const ways = [bubble, bubble.toReversed()].flatMap((first) =>
+    [dew, dew.toReversed()].map((second) => ({
+      line: [...first, ...second],
+      gap: gap(first[first.length - 1], second[0]),
+    })),
+  );
+  return ways.reduce((best, way) => (way.gap < best.gap ? way : best)).line;
 }
 
 function describe(

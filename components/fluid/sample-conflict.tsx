@@ -16,16 +16,22 @@ import type { StoredSample } from "./sample-text";
 export function SampleConflict({
   mine,
   theirs,
+  opened,
   onResolve,
   onClose,
 }: {
   mine: StoredSample;
   theirs: StoredSample;
+  /** as it stood before either of us began: what I left alone is theirs unless I say otherwise */
+  opened: StoredSample;
   onResolve: (merged: StoredSample) => void;
   onClose: () => void;
 }) {
-  const [fromTheirs, setFromTheirs] = useState<readonly SamplePart[]>([]);
   const parts = differingParts(mine, theirs);
+  const [fromTheirs, setFromTheirs] = useState<readonly SamplePart[]>(() => {
+    const touched = differingParts(mine, opened);
+    return parts.filter((part) => !touched.includes(part));
+  });
   return (
     <Dialog
       open

@@ -48,7 +48,10 @@ export function sampleFindings(evidence: SampleEvidence): Finding[] {
       ...(evidence.depletion?.warnings ?? []),
     ]
       .filter(
-        ({ message }, index, all) => all.findIndex((other) => other.message === message) === index,
+        ({ code, message }, index, all) =>
+          // The separator test's own findings say it already.
+          !evidence.wellstream?.warnings.some((told) => told.code === code) &&
+          all.findIndex((other) => other.message === message) === index,
       )
       .map(
         ({ severity, message }): Finding => ({

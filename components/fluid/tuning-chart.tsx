@@ -90,7 +90,7 @@ export function TuningChart({ result, measured }: TuningChartProps) {
           return <PlotDot key={point[0]} x={left} y={top} shape="square" />;
         })}
         <PlotDot x={markX} y={markY} shape="diamond" />
-        <PlotLabel x={markX} y={markY} anchor="middle" dy={-14} soft>
+        <PlotLabel x={markX} y={markY} anchor={markX > 75 ? "end" : "start"} dy={-44} soft>
           Measured dew point
         </PlotLabel>
       </Plot>

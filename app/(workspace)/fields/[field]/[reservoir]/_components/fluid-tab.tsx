@@ -10,6 +10,7 @@ import { Select } from "@/components/ui/choice";
 import { formatDate } from "@/components/ui/format";
 import { EmptyState } from "@/components/ui/status";
 import { useReservoir } from "../_editor/reservoir-context";
+import { readChosenSample, writeChosenSample } from "../_editor/sample-backup";
 import { useSample } from "../_editor/use-sample";
 import { FluidSample } from "./fluid-sample";
 
@@ -25,8 +26,14 @@ export function FluidTab() {
     isSameFluid(sample.separatorTest, text?.fluid ?? null),
   );
   const start = used?.id ?? (text?.fluid ? OF_ESTIMATE : (page.fluidSamples.at(0)?.id ?? null));
-  const [chosen, setChosen] = useState<string | null>(null);
-  const current = chosen ?? start;
+  const [chosen, setChosen] = useState(() => readChosenSample(page.id));
+  const isThere =
+    chosen === NEW
+      ? can("fluidSample.create")
+      : chosen === OF_ESTIMATE
+        ? text?.fluid !== undefined && !used
+        : page.fluidSamples.some(({ id }) => id === chosen);
+  const current = isThere ? chosen : start;
   const sample = page.fluidSamples.find(({ id }) => id === current) ?? null;
 
   if (current === null && !can("fluidSample.create")) {
@@ -35,6 +42,10 @@ export function FluidTab() {
         An engineer enters the laboratory’s study here: separator test, composition, depletion.
       </EmptyState>
     );
+  }
+  function choose(sheet: string) {
+    setChosen(sheet);
+    writeChosenSample(page.id, sheet);
   }
   const options = [
     ...page.fluidSamples.map(({ id, name, sampledOn, laboratory }) => ({
@@ -59,11 +70,11 @@ export function FluidTab() {
             label="Sample"
             value={current ?? NEW}
             options={options}
-            onChange={setChosen}
+            onChange={choose}
           />
         )
       }
-      onSaved={(saved) => setChosen(saved.id)}
+      onSaved={(saved) => choose(saved.id)}
     />
   );
 }

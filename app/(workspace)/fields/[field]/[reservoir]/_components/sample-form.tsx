@@ -137,6 +137,7 @@ export function SampleForm({
         <SampleConflict
           mine={mine}
           theirs={theirs}
+          opened={sample ?? mine}
           onClose={() => setTheirs(null)}
           onResolve={(merged) => {
             draft.rebase(textOfSample(theirs), theirs.version, textOfSample(merged));

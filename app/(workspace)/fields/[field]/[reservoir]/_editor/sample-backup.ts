@@ -44,3 +44,22 @@ export function dropSampleBackup(sheet: string): void {
     // Nothing was kept where nothing can be.
   }
 }
+
+const chosenKey = (reservoirId: string) => `dewledger.sample-chosen.${reservoirId}`;
+
+/** The sheet that was last looked at in this tab; `null` when none was chosen. */
+export function readChosenSample(reservoirId: string): string | null {
+  try {
+    return sessionStorage.getItem(chosenKey(reservoirId));
+  } catch {
+    return null;
+  }
+}
+
+export function writeChosenSample(reservoirId: string, chosen: string): void {
+  try {
+    sessionStorage.setItem(chosenKey(reservoirId), chosen);
+  } catch {
+    // The page opens with the estimate's own sample next time.
+  }
+}
