@@ -96,8 +96,9 @@ describe("a fluid sample", () => {
     const { page, context, problems } = await openPage(browser, { as: "executive", width: 390 });
     await page.goto(addressOf(draft));
     await page.getByText("Condensate yield", { exact: true }).waitFor();
-    expect(await page.getByRole("textbox").count()).toBe(0);
-    expect(await page.locator('input[type="file"]').count()).toBe(0);
+    await page.getByRole("table", { name: "Separator test" }).waitFor();
+    expect(await field(page, "First separator, pressure").count()).toBe(0);
+    expect(await page.locator('input[type="file"], form').count()).toBe(0);
     expect(await page.evaluate(() => document.documentElement.scrollWidth - innerWidth)).toBe(0);
     expect(problems).toEqual([]);
     await context.close();
