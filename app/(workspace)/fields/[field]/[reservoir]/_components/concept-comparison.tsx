@@ -209,33 +209,37 @@ function Comparison({
           <AssumptionTable texts={texts} onChange={change} />
         </div>
       </Disclosure>
-      {concepts.length > 0 && (
-        <Section
-          level={3}
-          title="What is recovered when"
-          note="Condensate of each phase, per cent of what is in place, and gas under it; means over the trials. While cycling, gas counts net of what is put back, burnt and bought."
-        >
-          <PhaseTable concepts={concepts} />
-          {cycling?.gasBalance && (
-            <div className="mt-4">
-              <GasBalance balance={cycling.gasBalance} basis={resultBasis} />
-            </div>
+      <Columns kind="equal">
+        {concepts.length > 0 && (
+          <Section
+            level={3}
+            title="What is recovered when"
+            note="Condensate of each phase, per cent of what is in place, and gas under it; means over the trials. While cycling, gas counts net of what is put back, burnt and bought."
+          >
+            <PhaseTable concepts={concepts} />
+            {cycling?.gasBalance && (
+              <div className="mt-4">
+                <GasBalance balance={cycling.gasBalance} basis={resultBasis} />
+              </div>
+            )}
+          </Section>
+        )}
+        <Stack close>
+          {findings.length > 0 && (
+            <Section level={3} title="What a reviewer will ask about the concepts">
+              <FindingList findings={findings} />
+            </Section>
           )}
-        </Section>
-      )}
-      {findings.length > 0 && (
-        <Section level={3} title="What a reviewer will ask about the concepts">
-          <FindingList findings={findings} />
-        </Section>
-      )}
-      {fluid && pressure && (
-        <NearWellSection
-          fluid={fluid}
-          temperatureDegF={chosen.curve.temperatureDegF}
-          dewPointPsia={chosen.curve.dewPointPsia}
-          initialPsia={pressure.p50}
-        />
-      )}
+          {fluid && pressure && (
+            <NearWellSection
+              fluid={fluid}
+              temperatureDegF={chosen.curve.temperatureDegF}
+              dewPointPsia={chosen.curve.dewPointPsia}
+              initialPsia={pressure.p50}
+            />
+          )}
+        </Stack>
+      </Columns>
       {using && texts[using].reading.plan && (
         <UsePlanDialog
           plan={texts[using].reading.plan}

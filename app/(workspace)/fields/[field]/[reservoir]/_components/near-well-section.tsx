@@ -85,7 +85,7 @@ function NearWell({ fluid, temperatureDegF, dewPointPsia, initialPsia }: NearWel
       {!result && query.isFetching && <Skeleton lines={4} label="Integrating the pseudopressure" />}
       {result && (
         <div className="grid gap-3" data-stale={query.isPlaceholderData || undefined}>
-          <h4>
+          <h4 className="font-semibold">
             About {formatPercent(result.productivityRatio)} of the rate without liquid is left at
             this drawdown
           </h4>
@@ -102,8 +102,9 @@ function NearWell({ fluid, temperatureDegF, dewPointPsia, initialPsia }: NearWel
               </tr>
             </thead>
             <tbody>
-              {result.points.map((point) => (
-                <tr key={point.pressurePsia}>
+              {result.points.map((point, index) => (
+                // The dew point stands twice: on either side of it the gas is another.
+                <tr key={index}>
                   <th scope="row" className="plain right">
                     {formatFigure(point.pressurePsia, { decimals: 0 })}
                   </th>
