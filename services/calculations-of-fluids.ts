@@ -6,11 +6,17 @@ import { ConvergenceError, DomainError } from "@/analytics/errors";
 import { runOnFluid, type ComputeOptions } from "./compute/pool";
 import { InvalidInputError, refuseImpossible, toPointer } from "./errors";
 import { describeComposition, type CompositionQuestion } from "./fluids/composition";
+import { describeMaterialBalance, type MaterialBalanceQuestion } from "./fluids/material-balance";
 import type { FluidAnswer, FluidQuestion, FluidTaskName } from "./fluids/tasks";
 
 /** A composition sheet normalised, with what follows from it without an equation of state. */
 export function calculateComposition(question: CompositionQuestion) {
   return refuseImpossible("", () => describeComposition(question));
+}
+
+/** Gas and condensate in place from pressures and production. */
+export function calculateMaterialBalance(question: MaterialBalanceQuestion) {
+  return refuseImpossible("", () => describeMaterialBalance(question));
 }
 
 /** What to try when an iteration does not converge, by the calculation that was asked for. */

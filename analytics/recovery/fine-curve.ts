@@ -43,7 +43,7 @@ export interface FineCurve {
  *   the first point is not the untouched dew point, or more is accounted for than there is
  */
 export function fineCurve(curve: RecoveryCurve): FineCurve {
-  curve.points.forEach((point, i) => checkPoint(curve, point, i));
+  checkCurve(curve);
   const points = [...curve.points].reverse();
   const pressures = points.map(({ pressurePsia }) => pressurePsia);
   const initialYield = curve.points[0].producingYieldStbPerMmscf;
@@ -63,6 +63,11 @@ export function fineCurve(curve: RecoveryCurve): FineCurve {
     gasPhaseShare: column((point) => gasPhaseShareOf(point, initialYield)),
     liquidSaturation: column((point) => point.liquidSaturation),
   };
+}
+
+/** @throws {DomainError} as `fineCurve` */
+export function checkCurve(curve: RecoveryCurve): void {
+  curve.points.forEach((point, i) => checkPoint(curve, point, i));
 }
 
 function checkPoint({ dewPointPsia, points }: RecoveryCurve, point: RecoveryPoint, i: number) {
