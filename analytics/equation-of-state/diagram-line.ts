@@ -11,7 +11,7 @@ import {
 /** Where the dew line begins and the bubble line ends, psia. */
 export const LOWEST_PSIA = 14.696;
 export const HIGHEST_PSIA = 20_000;
-/** Where a line going to low temperature ends: -100 degF, below anything a reservoir or a separator sees. */
+/** Where a line going to low temperature ends: -130 degF, below anything a reservoir or a separator sees. */
 export const LOWEST_DEGR = 330;
 const MAXIMUM_POINTS = 400;
 /** Largest changes from one point to the next, for a smooth line. */

@@ -38,9 +38,15 @@ export interface EnvelopeOptions {
 }
 
 /**
+ * A line that cannot be followed farther with all ln K below this has come to the critical point: a few fluids change
+ * so fast beyond it that no step across is found.
+ */
+const AT_CRITICAL = 0.05;
+
+/**
  * The phase envelope of a fluid by continuation, from the dew line at 14.696 psia around the cricondentherm, through
- * the critical point and down the bubble line, until 14.696 psia, -100 degF or 20,000 psia. Extremes are solved for,
- * not read off the points. Lines of equal liquid share run from 14.696 psia (or -100 degF) to the critical point.
+ * the critical point and down the bubble line, until 14.696 psia, -130 degF or 20,000 psia. Extremes are solved for,
+ * not read off the points. Lines of equal liquid share run from 14.696 psia (or -130 degF) to the critical point.
  *
  * A second liquid at low temperature is not looked for. A pure component has a critical point and no lines.
  *
@@ -76,15 +82,20 @@ export function phaseEnvelope(
     pressurePsia: Math.exp(at[n + 1]),
   });
   const crossing = points.findIndex((point, i) => i > 0 && isAcross(points[i - 1], point, n));
+  const end = points[points.length - 1].at;
   const criticalAt =
-    crossing < 0 ? null : criticalBetween(line, points[crossing - 1], points[crossing], n);
+    crossing >= 0
+      ? criticalBetween(line, points[crossing - 1], points[crossing], n)
+      : present.every((i) => Math.abs(end[i]) < AT_CRITICAL)
+        ? end
+        : null;
   const placeOrNull = (at: Float64Array | null) => at && place(at);
   const critical = placeOrNull(criticalAt);
-  const dew = points.slice(0, critical ? crossing : undefined).map(({ at }) => place(at));
-  const bubble = critical ? points.slice(crossing).map(({ at }) => place(at)) : [];
+  const dew = points.slice(0, crossing >= 0 ? crossing : undefined).map(({ at }) => place(at));
+  const bubble = crossing >= 0 ? points.slice(crossing).map(({ at }) => place(at)) : [];
   return {
     dew: critical ? [...dew, critical] : dew,
-    bubble: critical ? [critical, ...bubble] : bubble,
+    bubble: critical && bubble.length > 0 ? [critical, ...bubble] : [],
     critical,
     cricondentherm: placeOrNull(highest(line, n)),
     cricondenbar: placeOrNull(highest(line, n + 1)),

@@ -11,7 +11,7 @@ const LN_PRESSURE_STEP = 0.1;
 const FIRST_TOLERANCE = 1e-3;
 
 /**
- * One line of equal liquid share, as unknowns of the tracer: ln K_i, ln T, ln p, V. From 14.696 psia, or from -100 degF
+ * One line of equal liquid share, as unknowns of the tracer: ln K_i, ln T, ln p, V. From 14.696 psia, or from -130 degF
  * where the share is reached below that at 14.696 psia, to the critical point, which comes last where the line gets
  * there.
  *
@@ -40,7 +40,7 @@ export function qualityLine(
     : points;
 }
 
-/** At 14.696 psia the temperature, or at -100 degF the first pressure, at which the liquid has its share. */
+/** At 14.696 psia the temperature, or at -130 degF the first pressure, at which the liquid has its share. */
 function firstPoint(
   flasher: Flasher,
   z: Float64Array,

@@ -72,7 +72,7 @@ describe("phaseEnvelope", () => {
     const lean = phaseEnvelope(mixture, feeds.gas, { liquidVolumeFractions: [0.02] });
     expect(lean.critical).toBeNull();
     expect(lean.bubble).toEqual([]);
-    expect(lean.dew[lean.dew.length - 1].temperatureDegF).toBeLessThan(-99);
+    expect(lean.dew[lean.dew.length - 1].temperatureDegF).toBeLessThan(-129);
     expect(lean.quality[0].points.length).toBeGreaterThan(20);
   });
 
@@ -107,7 +107,7 @@ describe("phaseEnvelope", () => {
         });
         const liquid = (1 - found.vapourFraction) * found.liquid!.molarVolumeFt3PerLbmol;
         const gas = found.vapourFraction * found.vapour!.molarVolumeFt3PerLbmol;
-        expect(liquid / (liquid + gas)).toBeCloseTo(liquidVolumeFraction, 5);
+        expect(liquid / (liquid + gas)).toBeCloseTo(liquidVolumeFraction, 4);
       }
     }
   });
