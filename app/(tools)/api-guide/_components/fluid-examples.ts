@@ -15,6 +15,10 @@ import {
   tuningRequestSchema,
   tuningResponseSchema,
 } from "@/app/api/v1/calculations/fluid-schema";
+import {
+  materialBalanceRequestSchema,
+  materialBalanceResponseSchema,
+} from "@/app/api/v1/calculations/material-balance-schema";
 import type { Calculation } from "./calculation";
 import { simulationExample } from "./examples";
 
@@ -257,6 +261,39 @@ export const nearWellExample: z.input<typeof nearWellRequestSchema> = {
   },
 };
 
+/** The same fluid out of about 100 Bscf of wellstream, begun above its dew point. */
+export const materialBalanceExample: z.input<typeof materialBalanceRequestSchema> = {
+  records: [
+    { pressurePsia: 6500, surfaceGasScf: 0, condensateStb: 0 },
+    { pressurePsia: 5900, surfaceGasScf: 3.4e9, condensateStb: 410_000 },
+    { pressurePsia: 5200, surfaceGasScf: 8.0e9, condensateStb: 980_000 },
+    { pressurePsia: 4500, surfaceGasScf: 14.7e9, condensateStb: 1_650_000 },
+    { pressurePsia: 3900, surfaceGasScf: 22.3e9, condensateStb: 2_210_000 },
+    { pressurePsia: 3200, surfaceGasScf: 33.3e9, condensateStb: 2_710_000 },
+    { pressurePsia: 2600, surfaceGasScf: 42.8e9, condensateStb: 3_140_000 },
+  ],
+  separatorTest: {
+    basePressurePsia: 14.696,
+    primarySeparator: {
+      pressurePsia: 614.7,
+      temperatureDegF: 85,
+      gasOilRatioScfPerStb: 7800,
+      gasGravity: 0.72,
+    },
+    secondSeparator: null,
+    stockTankGas: { gasOilRatioScfPerStb: 420, gasGravity: 1.12 },
+    condensateApi: 55,
+    condensateMolecularWeight: 128,
+    nitrogen: 0.006,
+    carbonDioxide: 0.019,
+    hydrogenSulphide: 0,
+    dewPointPsia: 4808,
+  },
+  temperatureDegF: 255,
+  curve,
+  depthFt: 13_800,
+};
+
 export const labSheetExample: z.input<typeof labSheetRequestSchema> = {
   fileName: "study.csv",
   text: "composition\ncomponent,mol %\nC1,90\nC2,10\n",
@@ -313,6 +350,15 @@ export const fluidCalculations: readonly Calculation[] = [
     request: recoveryRequestSchema,
     response: recoveryResponseSchema,
     example: recoveryExample,
+  },
+  {
+    name: "material-balance",
+    title: "Gas in place from pressures",
+    purpose:
+      "The straight line of p/z against the wellstream produced, with the two-phase z of a depletion curve below the dew point, and what the gas's own z would have given.",
+    request: materialBalanceRequestSchema,
+    response: materialBalanceResponseSchema,
+    example: materialBalanceExample,
   },
   {
     name: "near-well",

@@ -8,6 +8,7 @@ import {
   recoveryRequestSchema,
   tuningRequestSchema,
 } from "@/app/api/v1/calculations/fluid-schema";
+import { materialBalanceRequestSchema } from "@/app/api/v1/calculations/material-balance-schema";
 import {
   distributionRequestSchema,
   inPlaceRequestSchema,
@@ -22,7 +23,11 @@ import {
   calculateWellstream,
   calculateZFactor,
 } from "@/services/calculations";
-import { calculateComposition, calculateOnFluid } from "@/services/calculations-of-fluids";
+import {
+  calculateComposition,
+  calculateMaterialBalance,
+  calculateOnFluid,
+} from "@/services/calculations-of-fluids";
 import { readLabSheet } from "@/services/lab-sheets/read-lab-sheet";
 import {
   distributionExample,
@@ -36,6 +41,7 @@ import {
   depletionExample,
   equationOfStateExample,
   labSheetExample,
+  materialBalanceExample,
   nearWellExample,
   recoveryExample,
   tuningExample,
@@ -69,6 +75,9 @@ async function calculateFluids(): Promise<Record<string, unknown>> {
     depletion,
     tuning,
     recovery,
+    "material-balance": calculateMaterialBalance(
+      materialBalanceRequestSchema.parse(materialBalanceExample),
+    ),
     "near-well": nearWell,
   };
 }

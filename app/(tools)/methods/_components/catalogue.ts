@@ -403,6 +403,18 @@ const recovery: MethodGroup = {
       usedIn: "Estimates, marked as a correlation",
     },
     {
+      name: "Gas in place from pressures",
+      gives: "Wellstream, dry gas and condensate in place from reservoir pressures and production.",
+      source:
+        "Straight line of p/z against the wellstream produced, with two-phase z below the dew point: J. Hagoort, Fundamentals of Gas Reservoir Engineering (1988), ch. 10; abnormal pressure after R. J. Hammerlindl, SPE 3479 (1971); both from memory",
+      range:
+        "Three pressures or more of a closed reservoir; no influx of water, no expansion of rock. Warns of few points, of p/z fallen by less than 10 %, of a line that bends (all common practice, no source) and above 0.5 psi/ft.",
+      error: measured(
+        "Third comparative solution project: its published surface products give the gas in place within 0.5 %; with the gas's own z it comes out more than 3 % short.",
+      ),
+      usedIn: "Fluid, calculation “material-balance”",
+    },
+    {
       name: "Near-well condensate",
       gives: "Rate with a bank of liquid over the rate of gas alone.",
       source:
