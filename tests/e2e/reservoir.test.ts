@@ -123,6 +123,52 @@ describe("the inputs of a draft", () => {
   });
 });
 
+describe("the recoveries of a draft", () => {
+  it("are worked out by a concept of the fluid, typed on, marked, and taken back by hand", async () => {
+    const draft = await buildDraft();
+    const { page, context, problems } = await openPage(browser, { as: "engineer" });
+    await page.goto(`${addressOf(draft)}/fluid`);
+    // No composition: the correlation screens the fluid, and every figure of it is marked.
+    await page.getByRole("heading", { name: /^Cycling brings .* more to the tank/ }).waitFor();
+    await page.getByRole("button", { name: "Use in the draft: depletion", exact: true }).click();
+    const dialog = page.getByRole("dialog");
+    await dialog.getByText("Recovery from a correlation").waitFor();
+    await dialog.getByRole("button", { name: "Use this concept" }).click();
+
+    await page.getByText("Recoveries are worked out: depletion").waitFor();
+    await saved(page);
+    const patched = () =>
+      page.waitForResponse((response) => response.request().method() === "PATCH");
+    const typed = patched();
+    await field(page, "Abandonment pressure, Most likely").fill("70 bar");
+    await page.getByText("= 1,015 psia").waitFor();
+    expect(await field(page, "Gas recovery, Most likely").count()).toBe(0);
+    await typed;
+    await saved(page);
+    const engineer = await as("engineer");
+    const path = `/api/v1/estimates/${draft.id}`;
+    const planned = made(await engineer.get<EstimateView>(path)).inputs;
+    expect(planned.recoveryPlan).toMatchObject({
+      concept: "depletion",
+      curve: { route: "correlation" },
+      abandonmentPressurePsia: { distribution: { kind: "pert" } },
+    });
+
+    await page.goto(`${addressOf(draft)}/compare`);
+    await page.getByRole("heading", { name: "How recoveries come about" }).waitFor();
+    expect(await axeViolations(page)).toEqual([]);
+
+    await page.goto(addressOf(draft));
+    const taken = patched();
+    await page.getByRole("button", { name: "Enter recoveries by hand instead" }).click();
+    expect(await field(page, "Gas recovery, Most likely").inputValue()).toBe("0.7");
+    await taken;
+    expect(made(await engineer.get<EstimateView>(path)).inputs.recoveryPlan).toBeNull();
+    expect(problems).toEqual([]);
+    await context.close();
+  });
+});
+
 describe("an estimate on its way", () => {
   it("is submitted by an engineer, who is offered no decision, and approved by a reviewer", async () => {
     const draft = await buildDraft();
