@@ -78,8 +78,8 @@ export interface CorrelationCurve {
  *
  * @param test   figures of the surface; with the dew point unless it is given
  * @param state  `dewPointPsia` null takes the sheet's
- * @throws {DomainError} when no dew point is known, it is below 1,000 psia, or the correlation gives no recovery or one
- *   above the gas's
+ * @throws {DomainError} when no dew point is known, it is below 1,000 psia, or the correlation gives no recovery, one
+ *   above the gas's, or more gas than there is
  */
 export function correlationCurve(
   test: SeparatorTest,
@@ -121,7 +121,7 @@ export function correlationCurve(
         : initialYield,
     });
   }
-  refuseAboveGas(points[points.length - 1]);
+  refuseImpossible(points[points.length - 1]);
   return {
     curve: { route: "correlation", temperatureDegF, dewPointPsia, points },
     warnings: [
@@ -190,7 +190,14 @@ function condensateRecovery(
   );
 }
 
-function refuseAboveGas({ condensateProduced, gasProduced }: RecoveryPoint): void {
+function refuseImpossible({ condensateProduced, gasProduced }: RecoveryPoint): void {
+  if (gasProduced > 1) {
+    throw new DomainError(
+      `The correlation gives ${(100 * gasProduced).toFixed(1)} % of the gas at 500 psig, more than there is: below the ` +
+        "dew point it counts the liquid's moles as produced. The fluid is too rich for it.",
+      { input: "fluid", value: gasProduced },
+    );
+  }
   if (condensateProduced <= gasProduced) return;
   throw new DomainError(
     `The correlation gives ${Math.round(100 * condensateProduced)} % of the condensate and ` +

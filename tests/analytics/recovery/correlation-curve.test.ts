@@ -107,6 +107,12 @@ describe("correlationCurve", () => {
       "gives no recovery for",
     ],
     [
+      "a very rich gas",
+      { primarySeparator: { ...sheet.primarySeparator, gasOilRatioScfPerStb: 3_300 } },
+      6_000,
+      "The fluid is too rich for it",
+    ],
+    [
       "a lean gas",
       { primarySeparator: { ...sheet.primarySeparator, gasOilRatioScfPerStb: 60_000 } },
       null,
