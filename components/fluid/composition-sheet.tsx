@@ -79,7 +79,8 @@ export function CompositionSheet({
     places: streams.map((stream) => `${stream}.plus.${name}`),
   }));
   const conditions = text.kind === "separatorStreams" ? streamConditionNames : [];
-  const columns = 2 + streams.length;
+  const hasBars = streams.length === 1;
+  const columns = (hasBars ? 2 : 1) + streams.length;
   const largest = Math.max(
     ...rows.flatMap(({ places }) =>
       places.map((place) => (place === null ? 0 : (reading.fields[place]?.value ?? 0))),
@@ -103,17 +104,20 @@ export function CompositionSheet({
         ]}
         onFill={state.onChange}
       >
-        <table className="ledger-table entry-table composition-table">
+        <table
+          className="ledger-table entry-table composition-table"
+          data-streams={hasBars ? undefined : ""}
+        >
           <caption className="sr-only">Composition as reported</caption>
           <thead>
             <tr>
               <th scope="col">Component</th>
               {streams.map((name) => (
                 <th key={name} scope="col" className="right">
-                  {streams.length > 1 ? streamLabels[name] : "Mol %"}
+                  {hasBars ? "Mol %" : streamLabels[name]}
                 </th>
               ))}
-              <td />
+              {hasBars && <td />}
             </tr>
           </thead>
           <tbody>
@@ -131,7 +135,7 @@ export function CompositionSheet({
                     ? (reading.fields[places[0] ?? ""]?.value ?? 0) / largest
                     : null
                 }
-                {...{ columns, state }}
+                {...{ hasBars, columns, state }}
               />
             ))}
             <tr className="total">
@@ -141,7 +145,7 @@ export function CompositionSheet({
                   {reading.isEmpty ? "–" : formatFigure(reading.totals[name], { decimals: 2 })}
                 </td>
               ))}
-              <td />
+              {hasBars && <td />}
             </tr>
             {plusRows.map(({ label, places }) => (
               <RowOfFractions
@@ -155,7 +159,7 @@ export function CompositionSheet({
                   named(place, `${plusWord[index]} ${label}`, streams[index]),
                 )}
                 share={null}
-                {...{ columns, state }}
+                {...{ hasBars, columns, state }}
               />
             ))}
             {conditions.map((name) => (
@@ -168,7 +172,7 @@ export function CompositionSheet({
                 }
                 places={[{ place: name, label: streamConditions[name].label }, null]}
                 share={null}
-                {...{ columns, state }}
+                {...{ hasBars, columns, state }}
               />
             ))}
           </tbody>
@@ -184,6 +188,7 @@ function RowOfFractions({
   heading,
   places,
   share,
+  hasBars,
   columns,
   state,
 }: {
@@ -192,13 +197,14 @@ function RowOfFractions({
   places: readonly ({ place: string; label: string } | null)[];
   /** of the longest bar; `null`: no bar */
   share: number | null;
+  hasBars: boolean;
   columns: number;
   state: EntryState;
 }) {
   return (
     <>
       <tr>
-        <th scope="row" className="plain">
+        <th scope="row" className={symbol ? "plain" : "plain wrap"}>
           {symbol ? <ComponentLabel symbol={symbol} /> : heading}
         </th>
         {places.map((cell, index) => (
@@ -206,9 +212,11 @@ function RowOfFractions({
             {cell && <EntryCell {...cell} state={state} />}
           </td>
         ))}
-        <td className="bar-cell">
-          {share !== null && symbol && <ShareBar symbol={symbol} share={share} />}
-        </td>
+        {hasBars && (
+          <td className="bar-cell">
+            {share !== null && symbol && <ShareBar symbol={symbol} share={share} />}
+          </td>
+        )}
       </tr>
       <EntryProblems
         places={places.filter((cell) => cell !== null)}

@@ -1,5 +1,6 @@
 "use client";
 
+import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import { ChartFrame, type ChartCell } from "@/components/charts/chart-frame";
 import { Plot, PlotDot, PlotLabel } from "@/components/charts/plot";
 import { linePath, positionOn, ticksOf, type Scale } from "@/components/charts/scale";
@@ -38,6 +39,12 @@ export interface DepletionPanelsProps {
 
 const LEFT = 46;
 
+/** Curves that no measured depletion stands behind: said in words, and drawn dashed. */
+const doubts: Partial<Record<RecoveryRoute, string>> = {
+  untunedEquationOfState: "Untuned",
+  correlation: "By correlation",
+};
+
 /** Liquid in the pores over the producing yield, on one pressure axis, with the end of production drawn through both. */
 export function DepletionPanels(props: DepletionPanelsProps) {
   const { curve, measured, fileName, initialPressurePsia } = props;
@@ -45,9 +52,9 @@ export function DepletionPanels(props: DepletionPanelsProps) {
   const most = mostLiquid(curve.curve);
   const back = revaporised(curve.curve);
   const leastYield = Math.min(...points.map((point) => point.producingYieldStbPerMmscf));
-  const isUntuned = curve.route === "untunedEquationOfState";
+  const doubt = doubts[curve.route];
   const hasLiquid = most.liquidSaturation > 0;
-  const lead = isUntuned ? "Untuned: liquid" : "Liquid";
+  const lead = doubt ? `${doubt}: liquid` : "Liquid";
   return (
     <div className="depletion-panels">
       <ChartFrame
@@ -58,7 +65,7 @@ export function DepletionPanels(props: DepletionPanelsProps) {
         }
         note={
           <>
-            {isUntuned && <Flag icon="warning">Untuned</Flag>} {curve.note}{" "}
+            {doubt && <Flag icon="warning">{doubt}</Flag>} {curve.note}{" "}
             {measured.length > 0 && "Squares: measured by the laboratory. "}
             {props.others.length > 0 &&
               `Thin: ${props.others.map(({ label }) => label.toLowerCase()).join(", ")}. `}
@@ -145,10 +152,7 @@ function Panels({
     ]);
   };
   const look = (of: AvailableCurve, isMain: boolean) =>
-    [
-      isMain ? "line" : "line-soft line-thin",
-      of.route === "untunedEquationOfState" && "line-dashed",
-    ]
+    [isMain ? "line" : "line-soft line-thin", doubts[of.route] && "line-dashed"]
       .filter(Boolean)
       .join(" ");
   const saturation = (at: CurveState) => at.liquidSaturation * 100;
