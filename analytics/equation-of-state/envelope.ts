@@ -16,7 +16,7 @@ export interface EnvelopePoint {
 }
 
 export interface PhaseEnvelope {
-  /** from the critical point to low temperature; empty when there is no critical point */
+  /** from the critical point to low temperature; empty when the line does not pass the critical point */
   readonly bubble: readonly EnvelopePoint[];
   /** from low pressure to the critical point */
   readonly dew: readonly EnvelopePoint[];
