@@ -1,7 +1,7 @@
 import { depleteCell, defaultPressuresPsia } from "../depletion/simulate-depletion";
 import { Flasher } from "../equation-of-state/flash";
 import type { Characterised, Mixture } from "../equation-of-state/mixture";
-import { saturationPressures } from "../equation-of-state/saturation";
+import { upperSaturation } from "../equation-of-state/saturation";
 import { DomainError } from "../errors";
 import { gasViscosityCp, gasViscosityWarnings } from "../gas/viscosity";
 import { degreesRankine, GAS_CONSTANT } from "../units/conversions";
@@ -171,7 +171,7 @@ function producedStream(
   { temperatureDegF, reservoirPressurePsia }: NearWellConditions,
 ): { stream: Float64Array; dewPointPsia: number } {
   const { mixture, moleFractions } = characterised;
-  const { upper } = saturationPressures(mixture, moleFractions, degreesRankine(temperatureDegF));
+  const upper = upperSaturation(mixture, moleFractions, degreesRankine(temperatureDegF));
   if (!upper) {
     return { stream: moleFractions, dewPointPsia: 0 };
   }

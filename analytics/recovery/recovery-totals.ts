@@ -6,8 +6,8 @@ export const refusals = {
   noState: {
     input: "uncertain",
     message:
-      "have no z factor at the dew point: pressure, temperature and gravity lie where it has no value. Narrow the " +
-      "ranges of temperature or condensate yield.",
+      "have no z factor at the dew point, or none of the gas at injection: pressure, temperature and gravity lie where " +
+      "it has no value. Narrow the ranges of temperature or condensate yield.",
   },
   abandonmentAboveInitial: {
     input: "recoveryPlan.abandonmentPressurePsia",

@@ -205,8 +205,11 @@ function fillCycled(
     one.reducedTemperature = trials.reducedTemperature[t];
     cycle(curve, reservoir, cycling, one, start, abandoned, cycled);
 
+    const { injectedDensityAtStart, injectedDensityAtEnd } = one;
+    const hasStates = start.wellstreamLeft + injectedDensityAtStart + injectedDensityAtEnd > 0;
     const refusal =
       refusalOfDepletion(trials, t) ??
+      (hasStates ? null : "noState") ??
       (abandonment < beginsAt ? null : "abandonmentAboveCycling") ??
       cycled.refusal;
     if (refusal) refuse(totals, refusal);
