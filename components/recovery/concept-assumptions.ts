@@ -44,12 +44,12 @@ export const isEdited = ({ abandonment, inputs, fields, waterDrive, pressure }: 
 
 const COMMON = "Common practice, no source";
 
-/** Half-width of the curve factor by how the curve was found. Common practice, no source. */
+/** Half-width of the curve factor by how the curve was found, no narrower with less trust. Common practice, no source. */
 const curveUncertainty: Record<RecoveryRoute, number> = {
   laboratory: 0.1,
   tunedEquationOfState: 0.15,
   untunedEquationOfState: 0.4,
-  correlation: 0.25,
+  correlation: 0.4,
 };
 
 /** Abandonment without compression: 100 psi for every 1,000 ft. Common practice, no source. */

@@ -126,7 +126,7 @@ const curveFactors: Record<RecoveryRoute, [p90: number, p10: number, source: str
   laboratory: [0.94, 1.06, "Repeatability of the depletion study"],
   tunedEquationOfState: [0.9, 1.1, "Fit of the tuned equation of state"],
   untunedEquationOfState: [0.75, 1.25, "Untuned equation of state against analogues"],
-  correlation: [0.85, 1.15, "Stated error of the correlation"],
+  correlation: [0.75, 1.25, "Correlation of surface figures against analogues"],
 };
 
 const keyOf = ({ field, name }: Pick<DemoReservoir, "field" | "name">) => `${field} / ${name}`;
