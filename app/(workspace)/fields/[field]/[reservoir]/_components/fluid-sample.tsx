@@ -21,6 +21,7 @@ import { FluidDepletion } from "./fluid-depletion";
 import { FluidEntry } from "./fluid-entry";
 import { FluidLabFile } from "./fluid-lab-file";
 import { FluidPhase } from "./fluid-phase";
+import { PressureOverZSection } from "./pressure-over-z-section";
 import { SampleForm } from "./sample-form";
 import { UseSampleDialog } from "./use-sample-dialog";
 
@@ -30,11 +31,14 @@ const usualCriticalBand = { low: 10, high: 20 };
 /** One fluid sample: its sheets, and everything that follows from them. */
 export function FluidSample({
   sample,
+  isNewer,
   draft,
   chooser,
   onSaved,
 }: {
   sample: FluidSampleView | null;
+  /** the estimate was made with an earlier version of its separator test */
+  isNewer: boolean;
   draft: SampleDraft;
   chooser: ReactNode;
   onSaved: (sample: FluidSampleView) => void;
@@ -91,6 +95,20 @@ export function FluidSample({
           )}
         </div>
       </div>
+      {isNewer && (
+        <Notice
+          title="The estimate was made with an earlier separator test of this sample."
+          actions={
+            estimateDraft && isReady && !draft.isChanged ? (
+              <Button size="small" onClick={() => setUsing(true)}>
+                Update the draft
+              </Button>
+            ) : undefined
+          }
+        >
+          It keeps that copy until the newer one is put into a draft.
+        </Notice>
+      )}
       {mayType && <FluidLabFile draft={draft} onTaken={setRemarks} />}
       <nav className="fluid-anchors" aria-label="Parts of the sample">
         <a href="#sheets">Sheets</a>
@@ -114,6 +132,7 @@ export function FluidSample({
         <FluidPhase {...shared} />
       </div>
       <FluidDepletion {...shared} sampleName={sample?.name ?? null} />
+      <PressureOverZSection {...shared} />
       {mayType && (
         <div id="keep">
           <SampleForm
@@ -128,8 +147,10 @@ export function FluidSample({
         <UseSampleDialog
           open={isUsing}
           onClose={() => setUsing(false)}
-          test={study.test}
-          sampleId={sample && isSameFluid(sample.separatorTest, study.test) ? sample.id : null}
+          // The saved sheet itself, to the last digit: a draft that differs from it would lose its sample.
+          {...(sample && isSameFluid(sample.separatorTest, study.test)
+            ? { test: sample.separatorTest, sampleId: sample.id }
+            : { test: study.test, sampleId: null })}
           yieldStbPerMmscf={wellstream.condensateYieldStbPerMmscf}
         />
       )}
