@@ -21,6 +21,8 @@ export function calculateMaterialBalance(question: MaterialBalanceQuestion) {
 
 /** What to try when an iteration does not converge, by the calculation that was asked for. */
 const advice: Record<FluidTaskName, string> = {
+  // Reading iterates nothing; a thread has one answer for every task.
+  labSheet: "Try the sheet in parts.",
   equationOfState:
     "Try another split of heptanes plus or other adjustments, or a temperature farther from the critical point.",
   nearWell:

@@ -7,8 +7,8 @@ import { classNames } from "@/components/ui/class-names";
 import { Dialog } from "@/components/ui/dialog";
 import { Notice } from "@/components/ui/status";
 
-/** The server takes a million characters. */
-const LARGEST_FILE = 1_000_000;
+/** The server takes so many characters. */
+const LARGEST_FILE = 200_000;
 
 export interface LabFileProps {
   busy: boolean;
@@ -28,7 +28,9 @@ export function LabFileDrop({ busy, onFile, onRefuse }: LabFileProps) {
     if (/\.(xlsx?|xlsm|ods|pdf)$/i.test(file.name)) {
       onRefuse("This is a workbook or a document. Save the sheet as CSV, or paste its cells.");
     } else if (file.size > LARGEST_FILE) {
-      onRefuse("The file is larger than a megabyte. Save only the sheet with the study.");
+      onRefuse(
+        `The file has more than ${LARGEST_FILE / 1000} thousand characters. Save only the sheet with the study.`,
+      );
     } else onFile(file.name, await file.text());
   }
 

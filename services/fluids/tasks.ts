@@ -1,3 +1,4 @@
+import { readLabSheet } from "../lab-sheets/read-lab-sheet";
 import { describeDepletion } from "./depletion";
 import { describePhases } from "./equation-of-state";
 import { describeNearWell } from "./near-well";
@@ -14,6 +15,7 @@ export const fluidTasks = {
   equationOfState: describePhases,
   recovery: compareRecoveries,
   nearWell: describeNearWell,
+  labSheet: ({ text }: { text: string }) => readLabSheet(text),
 };
 
 export type FluidTasks = typeof fluidTasks;

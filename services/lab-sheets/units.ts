@@ -117,18 +117,38 @@ const units: Record<UnitKind, readonly SheetUnit[]> = {
 
 const fold = (text: string) => text.toLowerCase().replace(/[\s_]+/g, "");
 
+/** Folded once: a sheet has thousands of cells, and each is looked up several times. The first of two spellings wins. */
+const foldedUnits: ReadonlyMap<UnitKind, ReadonlyMap<string, SheetUnit>> = new Map(
+  (Object.keys(units) as UnitKind[]).map((kind) => [
+    kind,
+    new Map(
+      units[kind]
+        .flatMap((unit) => unit.spellings.map((spelling) => [fold(spelling), unit] as const))
+        .reverse(),
+    ),
+  ]),
+);
+
+const everySpelling: ReadonlySet<string> = new Set(
+  [...foldedUnits.values()].flatMap((spellings) => [...spellings.keys()]),
+);
+const LONGEST_SPELLING = Math.max(
+  ...Object.values(units).flatMap((list) =>
+    list.flatMap(({ spellings }) => spellings.map(({ length }) => length)),
+  ),
+);
+
+/** Spaces beyond those of any spelling are not a way of writing it. */
+const canBeUnit = (text: string) => text.length <= 2 * LONGEST_SPELLING;
+
 /** @returns the unit that a text names, or null; case and spaces do not matter */
 export function findUnit(text: string, kind: UnitKind): SheetUnit | null {
-  const wanted = fold(text);
-  return (
-    units[kind].find(({ spellings }) => spellings.some((spelling) => fold(spelling) === wanted)) ??
-    null
-  );
+  return canBeUnit(text) ? (foldedUnits.get(kind)?.get(fold(text)) ?? null) : null;
 }
 
 /** Whether a text is a unit of anything: to tell a row of units from a row of names. */
 export function isUnit(text: string): boolean {
-  return (Object.keys(units) as UnitKind[]).some((kind) => findUnit(text, kind) !== null);
+  return canBeUnit(text) && everySpelling.has(fold(text));
 }
 
 /** The units that can be written for a kind, for a message or the template. */

@@ -297,7 +297,6 @@ describe("POST /api/v1/calculations/lab-sheet", () => {
     const template = await engineer.get<string>(path("lab-sheet-template.csv"));
     expect(template.headers.get("content-disposition")).toContain(".csv");
     const body = await ask<LabSheetResponse>("lab-sheet", {
-      fileName: "template.csv",
       text: template.body,
     });
     labSheetResponseSchema.parse(body);
@@ -306,8 +305,10 @@ describe("POST /api/v1/calculations/lab-sheet", () => {
     expect(body.depletion).toEqual(table);
   });
 
-  it("refuses a text over a million characters", async () => {
-    const problem = await refused("lab-sheet", { fileName: "x.csv", text: "1".repeat(1_000_001) });
-    expect(pointersOf(problem)).toEqual(["#/text"]);
+  it("refuses a text longer than any study, in words at the field", async () => {
+    const problem = await refused("lab-sheet", { text: "1".repeat(200_001) });
+    expect(problem.errors).toEqual([
+      { pointer: "#/text", detail: expect.stringContaining("200 thousand characters") },
+    ]);
   });
 });

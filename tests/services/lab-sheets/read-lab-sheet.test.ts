@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { labSheetResponseSchema } from "@/app/api/v1/calculations/fluid-schema";
+import { LONGEST_LAB_SHEET } from "@/app/api/v1/calculations/fluid-schema";
 import { readLabSheet } from "@/services/lab-sheets/read-lab-sheet";
 import { labSheetTemplate } from "@/services/lab-sheets/template";
 
@@ -367,5 +368,24 @@ describe("readLabSheet: the file", () => {
     expect(read.problems.length).toBeGreaterThan(0);
     expect(read.problems.length).toBeLessThanOrEqual(101);
     expect(JSON.stringify(read).length).toBeLessThan(40_000);
+  });
+
+  /** Tables of one cell over and over, each as long as a request may be. */
+  const longest = (heading: string, lines: number, columns: number, cell: (n: number) => string) =>
+    `${heading}\n${Array.from({ length: lines }, (_, line) =>
+      Array.from({ length: columns }, (_, column) => cell(line * columns + column)).join("\t"),
+    ).join("\n")}`.slice(0, LONGEST_LAB_SHEET);
+
+  it.each(
+    ["", "composition", "depletion", "separators"].flatMap((heading) => [
+      ["many words in every cell", longest(heading, 1990, 20, () => "a ".repeat(50).trim())],
+      ["thousands of short words", longest(heading, 400, 99, () => "abcdefgh")],
+      ["thousands of units", longest(heading, 400, 99, (n) => (n % 99 === 0 ? "name" : "psia"))],
+      ["thousands of headings", longest(heading, 1990, 20, (n) => `Pressure ${n}`)],
+    ]),
+  )("reads a sheet of %s in less than a second of computing", (_, text) => {
+    const before = process.cpuUsage();
+    expect(readLabSheet(text).problems.length).toBeLessThanOrEqual(1000);
+    expect(process.cpuUsage(before).user).toBeLessThan(1e6);
   });
 });

@@ -295,7 +295,6 @@ export const materialBalanceExample: z.input<typeof materialBalanceRequestSchema
 };
 
 export const labSheetExample: z.input<typeof labSheetRequestSchema> = {
-  fileName: "study.csv",
   text: "composition\ncomponent,mol %\nC1,90\nC2,10\n",
 };
 

@@ -28,7 +28,6 @@ import {
   calculateMaterialBalance,
   calculateOnFluid,
 } from "@/services/calculations-of-fluids";
-import { readLabSheet } from "@/services/lab-sheets/read-lab-sheet";
 import {
   distributionExample,
   inPlaceExample,
@@ -61,7 +60,8 @@ function abridged(value: unknown): unknown {
 }
 
 async function calculateFluids(): Promise<Record<string, unknown>> {
-  const [equationOfState, depletion, tuning, recovery, nearWell] = await Promise.all([
+  const [labSheet, equationOfState, depletion, tuning, recovery, nearWell] = await Promise.all([
+    calculateOnFluid("labSheet", labSheetRequestSchema.parse(labSheetExample)),
     calculateOnFluid("equationOfState", equationOfStateRequestSchema.parse(equationOfStateExample)),
     calculateOnFluid("depletion", depletionRequestSchema.parse(depletionExample)),
     calculateOnFluid("tuning", tuningRequestSchema.parse(tuningExample)),
@@ -69,7 +69,7 @@ async function calculateFluids(): Promise<Record<string, unknown>> {
     calculateOnFluid("nearWell", nearWellRequestSchema.parse(nearWellExample)),
   ]);
   return {
-    "lab-sheet": readLabSheet(labSheetRequestSchema.parse(labSheetExample).text),
+    "lab-sheet": labSheet,
     composition: calculateComposition(compositionRequestSchema.parse(compositionExample)),
     "equation-of-state": equationOfState,
     depletion,

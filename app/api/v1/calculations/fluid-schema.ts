@@ -400,8 +400,15 @@ export type NearWellResponse = z.infer<typeof nearWellResponseSchema>;
 
 // lab sheet: a laboratory's CSV read, cell by cell
 
+/** Many times what a laboratory's study fills. */
+export const LONGEST_LAB_SHEET = 200_000;
+
 export const labSheetRequestSchema = z
-  .object({ fileName: z.string().max(200), text: z.string().max(1_000_000) })
+  .object({
+    text: z.string().max(LONGEST_LAB_SHEET, {
+      error: `A sheet of more than ${LONGEST_LAB_SHEET / 1000} thousand characters is not read. Send only the sheet with the study.`,
+    }),
+  })
   .strict();
 export type LabSheetRequest = z.infer<typeof labSheetRequestSchema>;
 

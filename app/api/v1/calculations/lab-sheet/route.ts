@@ -1,19 +1,19 @@
 import { withRoute } from "@/app/_server/with-route";
-import { readLabSheet } from "@/services/lab-sheets/read-lab-sheet";
+import { calculateOnFluid } from "@/services/calculations-of-fluids";
 import { labSheetRequestSchema } from "../fluid-schema";
 
 /**
  * POST /api/v1/calculations/lab-sheet: a laboratory's CSV, or cells pasted from a spreadsheet, read into a composition, a
  * depletion table and separators. What could not be read is listed cell by cell; nothing is stored. The layout is that of
- * /api/v1/calculations/lab-sheet-template.csv.
+ * /api/v1/calculations/lab-sheet-template.csv. Runs on the thread pool.
  *
  * @example request
- * { "fileName": "study.csv", "text": "composition\ncomponent,mol %\nC1,90\nC2,10\n" }
+ * { "text": "composition\ncomponent,mol %\nC1,90\nC2,10\n" }
  * @example answer (in part)
  * { "composition": { "kind": "wellstream", "stream": { "light": { "C1": 90, "C2": 10 }, ... } }, "problems": [] }
  */
 export const POST = withRoute({
   may: "calculation.run",
   body: labSheetRequestSchema,
-  handler: async ({ body }) => readLabSheet(body.text),
+  handler: ({ body, request }) => calculateOnFluid("labSheet", body, { signal: request.signal }),
 });

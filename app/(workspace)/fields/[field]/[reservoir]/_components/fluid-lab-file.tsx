@@ -38,7 +38,7 @@ export function FluidLabFile({
         onFile={(fileName, text) => {
           setRefusal(null);
           setFile(fileName);
-          reading.mutate({ fileName, text });
+          reading.mutate({ text });
         }}
         onRefuse={(words) => {
           reading.reset();
