@@ -1,4 +1,4 @@
-import type { RecoveryRoute } from "../recovery/recovery-curve-schema";
+import { recoveryRoutes, type RecoveryRoute } from "../recovery/recovery-curve-schema";
 import type { ReportingUnits } from "../units/reporting-units";
 import type { Range } from "../volumetrics/results-schema";
 import { rankedClasses, type LedgerQuantity, type RankedField, type SortValue } from "./ranking";
@@ -117,10 +117,17 @@ const recoveryWords: Record<RecoveryRoute, string> = {
   correlation: "correlation",
 };
 
-/** Where the recoveries come from: of several reservoirs the least trusted. */
-function recoveryWordsOf({ chosen, recoveryRoute }: RankedField): string | null {
-  if (recoveryRoute !== null) return recoveryWords[recoveryRoute];
-  return chosen.length === 0 ? null : "entered";
+/** Where the recoveries of several reservoirs come from, each once, in the order of trust; null is entered by hand. */
+export function recoverySourcesOf(chosen: RankedField["chosen"]): RankedField["recoveryRoute"][] {
+  const sources = new Set(chosen.map(({ recoveryRoute }) => recoveryRoute));
+  return [...recoveryRoutes, null].filter((route) => sources.has(route));
+}
+
+function recoveryWordsOf({ chosen }: RankedField): string | null {
+  const words = recoverySourcesOf(chosen).map((route) =>
+    route === null ? "entered" : recoveryWords[route],
+  );
+  return words.length === 0 ? null : words.join("; ");
 }
 
 /** The oldest approval among the revisions that stand for the field: how old its figures may be. */

@@ -1,4 +1,4 @@
-import { estimateWords } from "@/analytics/portfolio/ranking-columns";
+import { estimateWords, recoverySourcesOf } from "@/analytics/portfolio/ranking-columns";
 import type { LedgerQuantity, LedgerRanges, RankedField } from "@/analytics/portfolio/ranking";
 import type { Range } from "@/analytics/volumetrics/results-schema";
 import type { ChosenPrices, PortfolioBasis } from "../portfolio/basis";
@@ -230,8 +230,11 @@ export const budgetLayout: readonly BudgetColumn[] = [
   about(
     "recovery_route",
     "",
-    "where the recoveries of the revisions counted come from: laboratory, tunedEquationOfState, untunedEquationOfState, correlation or entered, the least trusted when there are several. untunedEquationOfState and correlation have no measured depletion behind them",
-    ({ chosen, recoveryRoute }) => recoveryRoute ?? (chosen.length > 0 ? "entered" : null),
+    "where the recoveries of the revisions counted come from: laboratory, tunedEquationOfState, untunedEquationOfState, correlation or entered, each once. untunedEquationOfState and correlation have no measured depletion behind them",
+    ({ chosen }) =>
+      recoverySourcesOf(chosen)
+        .map((route) => route ?? "entered")
+        .join(SEPARATOR),
   ),
   about(
     "producing_concept",

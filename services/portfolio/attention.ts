@@ -1,7 +1,7 @@
 import type { Ledger } from "@/analytics/portfolio/ledger";
 import { spreadOf } from "@/analytics/portfolio/ranking-columns";
 import type { RankedField } from "@/analytics/portfolio/ranking";
-import { isUnmeasured, type RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
+import { isUnmeasured } from "@/analytics/recovery/recovery-curve-schema";
 import type { PortfolioFieldRow, PortfolioReservoirRow } from "@/models/queries/portfolio";
 import type { PortfolioBasis } from "./basis";
 import type { RankedBook } from "./ranking";
@@ -32,7 +32,7 @@ export type Attention =
       changeStb: number | null;
     })
   | (At & {
-      /** a range that is wide where it matters, a place where people can get hurt, or a recovery that nobody measured */
+      /** a range that is wide where it matters, or a place where people can get hurt */
       kind: "field";
       /** P10 over P90; null when it is not remarkable */
       spread: number | null;
@@ -41,9 +41,14 @@ export type Attention =
       samples: number;
       cautions: string[];
       hydrogenSulphide: number | null;
-      /** a recovery without a measured depletion behind it, where it matters; null when it is not remarkable */
-      recoveryRoute: RecoveryRoute | null;
     })
+  | {
+      /** recoveries from a correlation or an untuned equation of state: nobody measured a depletion */
+      kind: "unmeasured";
+      fields: At[];
+      /** of the portfolio's mean recoverable condensate, 0 to 1 */
+      share: number;
+    }
   | { kind: "no_estimate"; names: string[] }
   | { kind: "basin"; name: string; shareOfVariance: number; rankCorrelation: number }
   | { kind: "price"; condensateMeanStb: number };
@@ -74,8 +79,7 @@ export function attentionOf(
     const share = shareOf(field);
     const known = spreadOf(field);
     const isWide = known !== null && known >= WIDE_SPREAD && share >= MATERIAL_SHARE;
-    const isWeak = isUnmeasured(field.recoveryRoute) && share >= MATERIAL_SHARE;
-    if (!isWide && !isWeak && field.cautions.length === 0) return [];
+    if (!isWide && field.cautions.length === 0) return [];
     const { name, slug, cautions, hydrogenSulphide } = field;
     const samples = book.reservoirs
       .filter(({ fieldId }) => fieldId === field.id)
@@ -90,15 +94,26 @@ export function attentionOf(
         samples,
         cautions,
         hydrogenSulphide,
-        recoveryRoute: isWeak ? field.recoveryRoute : null,
       },
     ];
   });
 
+  const unmeasured = fields.filter(
+    ({ ranges, recoveryRoute }) => ranges !== null && isUnmeasured(recoveryRoute),
+  );
   const without = fields.filter(({ ranges }) => ranges === null).map(({ name }) => name);
   return [
     ...waiting.sort((a, b) => materialOf(b) - materialOf(a)),
     ...remarkable,
+    ...(unmeasured.length > 0
+      ? [
+          {
+            kind: "unmeasured" as const,
+            fields: unmeasured.map(({ name, slug }) => ({ name, fieldSlug: slug })),
+            share: unmeasured.reduce((sum, field) => sum + shareOf(field), 0),
+          },
+        ]
+      : []),
     ...(without.length > 0 ? [{ kind: "no_estimate" as const, names: without }] : []),
     ...largestBasin(ledger, book.fields),
     { kind: "price", condensateMeanStb: total },

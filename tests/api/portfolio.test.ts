@@ -236,6 +236,22 @@ describe("GET /api/v1/portfolio", () => {
     expect(waiting?.kind === "submitted" && waiting.changeStb).toBeGreaterThan(1e6);
   });
 
+  it("names every field whose recovery nobody measured, with their share of the liquid", async () => {
+    const { attention, fields, totals } = await get<Statement>("/api/v1/portfolio");
+    const unmeasured = attention.find((item) => item.kind === "unmeasured");
+    const weak = fields.filter(
+      ({ recoveryRoute }) =>
+        recoveryRoute === "correlation" || recoveryRoute === "untunedEquationOfState",
+    );
+    expect(weak.length).toBeGreaterThan(0);
+    const named = unmeasured!.fields.map(({ name }) => name);
+    expect(named).toEqual(expect.arrayContaining(weak.map(({ name }) => name)));
+    const known = sum(weak.map(({ ranges }) => ranges!.condensateRecoverableStb.mean));
+    const total = totals!.trialByTrial.condensateRecoverableStb.mean;
+    expect(unmeasured!.share).toBeGreaterThanOrEqual(known / total - 1e-9);
+    expect(unmeasured!.share).toBeLessThan(1);
+  });
+
   it("explains the year's change of the mean in steps that add up", async () => {
     const { year, totals } = await get<Statement>("/api/v1/portfolio");
     const change = sum(year!.moves.map(({ changeStb }) => changeStb));

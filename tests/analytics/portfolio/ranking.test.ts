@@ -7,7 +7,12 @@ import {
   type RankedField,
   type RankingFilter,
 } from "@/analytics/portfolio/ranking";
-import { estimateWords, rankingColumn, spreadOf } from "@/analytics/portfolio/ranking-columns";
+import {
+  estimateWords,
+  rankingColumn,
+  recoverySourcesOf,
+  spreadOf,
+} from "@/analytics/portfolio/ranking-columns";
 
 const range = (p90: number, p50: number, p10: number, mean: number) => ({ p90, p50, p10, mean });
 
@@ -171,5 +176,27 @@ describe("estimateWords(field)", () => {
       state: "draft" as const,
     }));
     expect(estimateWords(field({ chosen: standing, open }))).toBe("draft r3");
+  });
+});
+
+describe("recoverySourcesOf", () => {
+  const [one] = field().chosen;
+  const from = (...routes: RankedField["recoveryRoute"][]) =>
+    routes.map((recoveryRoute) => ({ ...one, recoveryRoute }));
+
+  it("names every source once, in the order of trust, entered ones last", () => {
+    expect(recoverySourcesOf(from(null, "correlation", "laboratory", null))).toEqual([
+      "laboratory",
+      "correlation",
+      null,
+    ]);
+    expect(recoverySourcesOf([])).toEqual([]);
+  });
+
+  it("is what the ranking says of a field", () => {
+    const words = (chosen: RankedField["chosen"]) =>
+      rankingColumn("recoveryRoute").value(field({ chosen }));
+    expect(words(from("tunedEquationOfState", null))).toBe("tuned equation of state; entered");
+    expect(words([])).toBeNull();
   });
 });

@@ -1,7 +1,7 @@
 "use client";
 
+import { Fragment } from "react";
 import Link from "next/link";
-import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import type { AttentionView, Statement } from "@/app/api/v1/portfolio/schema";
 import { useBasis } from "@/components/basis/use-basis";
 import {
@@ -58,11 +58,6 @@ function changeWords(barrels: number, { liquid, reporting }: Words): string {
 const cautionAsides: Record<string, string> = {
   sour_gas: "Sour",
   high_pressure_high_temperature: "HPHT",
-};
-
-const recoverySources: Partial<Record<RecoveryRoute, string>> = {
-  correlation: "a correlation",
-  untunedEquationOfState: "an untuned equation of state",
 };
 
 function cautionWords(code: string, hydrogenSulphide: number | null): string {
@@ -124,18 +119,14 @@ function findingOf(item: AttentionView, words: Words): Finding {
         item.spread !== null &&
         `P10 is ${formatFigure(item.spread, { digits: 2 })} times P90, on ${formatPercent(item.share)} of the liquid; ${sampleWords(item.samples)}.`;
       const cautions = item.cautions.map((code) => cautionWords(code, item.hydrogenSulphide));
-      const weak =
-        item.recoveryRoute !== null &&
-        `Its recovery comes from ${recoverySources[item.recoveryRoute] ?? "no measurement"}, on ${formatPercent(item.share)} of the liquid; no measured depletion stands behind it.`;
       const asides = [
-        ...(item.recoveryRoute === null ? [] : ["Not measured"]),
         ...(item.spread === null ? [] : ["Wide range"]),
         ...item.cautions.map((code) => cautionAsides[code] ?? "Caution"),
       ];
       return {
         tone: "warning",
         title: link(`/fields/${item.fieldSlug}`, item.name),
-        detail: [wide, weak, ...cautions].filter(Boolean).join(" "),
+        detail: [wide, ...cautions].filter(Boolean).join(" "),
         aside: asides.map((aside) => (
           <span key={aside} className="block">
             {aside}
@@ -143,6 +134,22 @@ function findingOf(item: AttentionView, words: Words): Finding {
         )),
       };
     }
+    case "unmeasured":
+      return {
+        tone: "warning",
+        title: (
+          <>
+            {item.fields.map(({ name, fieldSlug }, index) => (
+              <Fragment key={fieldSlug}>
+                {index > 0 && (index === item.fields.length - 1 ? " and " : ", ")}
+                {link(`/fields/${fieldSlug}`, name)}
+              </Fragment>
+            ))}
+          </>
+        ),
+        detail: `Recoveries come from a correlation or an untuned equation of state, on ${formatPercent(item.share)} of the liquid; no measured depletion stands behind ${item.fields.length === 1 ? "it" : "them"}.`,
+        aside: "Not measured",
+      };
     case "no_estimate":
       return {
         title: link("/fields?state=none", listWords(item.names)),

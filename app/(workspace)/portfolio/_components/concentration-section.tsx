@@ -6,6 +6,7 @@ import { useBasis } from "@/components/basis/use-basis";
 import { ConcentrationBar } from "@/components/charts/concentration-bar";
 import { RangeMark, RangeScale, rangePhrase } from "@/components/charts/range-mark";
 import { scaleFor } from "@/components/charts/scale";
+import { RouteFlag } from "@/components/estimate/route-flag";
 import { capital, countOf, numberWords, type Reporting } from "@/components/portfolio/reporting";
 import { formatFigure, formatPercent } from "@/components/ui/format";
 import { Section } from "@/components/ui/section";
@@ -34,8 +35,8 @@ export function ConcentrationSection({
   if (!totals) return null;
   const liquid = liquidOf(statement, reporting);
   const total = liquid.rangeOf(totals.trialByTrial);
-  const rows = fields.flatMap(({ slug, name, basin, ranges }) =>
-    ranges ? [{ slug, name, basin, range: liquid.rangeOf(ranges) }] : [],
+  const rows = fields.flatMap(({ slug, name, basin, ranges, recoveryRoute }) =>
+    ranges ? [{ slug, name, basin, recoveryRoute, range: liquid.rangeOf(ranges) }] : [],
   );
   const rest = others && { ...others, range: liquid.rangeOf(others.trialByTrial) };
   const scale = scaleFor(
@@ -82,11 +83,12 @@ export function ConcentrationSection({
           </tr>
         </thead>
         <tbody>
-          {rows.map(({ slug, name, basin, range }, index) => (
+          {rows.map(({ slug, name, basin, range, recoveryRoute }, index) => (
             <tr key={slug}>
               <FolioCell>{index + 1}</FolioCell>
               <th scope="row">
                 <Link href={withBasis(`/fields/${slug}`)}>{name}</Link>
+                <RouteFlag route={recoveryRoute} short />
               </th>
               <td className="soft hide-phone">{basin.name}</td>
               <FigureCell value={range.mean} strong />

@@ -1,6 +1,5 @@
 import { z } from "zod";
 import { rankedClasses } from "@/analytics/portfolio/ranking";
-import { recoveryRoutes } from "@/analytics/recovery/recovery-curve-schema";
 import {
   chosenPricesSchema,
   groupTotalSchema,
@@ -29,8 +28,11 @@ export const attentionSchema = z.discriminatedUnion("kind", [
     samples: z.number(),
     cautions: z.array(z.string()),
     hydrogenSulphide: z.number().nullable(),
-    /** only where the recovery has no measured depletion behind it and the field matters */
-    recoveryRoute: z.enum(recoveryRoutes).nullable(),
+  }),
+  z.object({
+    kind: z.literal("unmeasured"),
+    fields: z.array(z.object(place)),
+    share: z.number(),
   }),
   z.object({ kind: z.literal("no_estimate"), names: z.array(z.string()) }),
   z.object({
