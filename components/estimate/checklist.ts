@@ -61,12 +61,14 @@ export function submitChecklist(draft: {
   warnings: readonly Warning[];
   /** name of the attached fluid sample; `null` when the sheet was typed by hand */
   sampleName: string | null;
+  /** the sample was changed since its sheet was taken */
+  isSampleNewer?: boolean;
   /** trials of the run that belongs to these inputs; `null` when there is none */
   trials: number | null;
 }): ChecklistItem[] {
   return [
     inputsItem(draft.reading),
-    fluidItem(draft.text, draft.sampleName),
+    fluidItem(draft.text, draft.sampleName, draft.isSampleNewer ?? false),
     ...planItems(draft.text),
     sourcesItem(draft.text, draft.reading),
     ...(draft.reading.estimate ? [warningsItem(draft.warnings), runItem(draft.trials)] : []),
@@ -99,10 +101,20 @@ function inputsItem({ incomplete, impossible, plan, problem }: EstimateReading):
   return { tone: "done", text: `${capital(inWords(all))} inputs complete, no impossible value` };
 }
 
-function fluidItem(text: EstimateText, sampleName: string | null): ChecklistItem {
+function fluidItem(
+  text: EstimateText,
+  sampleName: string | null,
+  isSampleNewer: boolean,
+): ChecklistItem {
   if (text.fluid === null) return { tone: "open", text: "A fluid sample to enter" };
-  return sampleName === null
-    ? { tone: "warning", text: "Separator test typed by hand; no sample stands behind it" }
+  if (sampleName === null) {
+    return { tone: "warning", text: "Separator test typed by hand; no sample stands behind it" };
+  }
+  return isSampleNewer
+    ? {
+        tone: "warning",
+        text: `Fluid sample ${sampleName}, as it was: its separator test has changed since`,
+      }
     : { tone: "done", text: `Fluid sample ${sampleName}` };
 }
 

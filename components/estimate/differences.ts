@@ -177,10 +177,26 @@ export function isSameDistribution(a: Distribution, b: Distribution): boolean {
   return sortedJson(a) === sortedJson(b);
 }
 
-/** Whether two separator tests say the same, whatever the order of their keys. */
+/** Apart by no more than what is lost between a figure, its text in a field and the figure read back. */
+const SAME_FIGURE = 1e-9;
+
+/** Whether two separator tests say the same: figure by figure, whatever the order of keys and the last binary digit. */
 export function isSameFluid(a: SeparatorTest | null, b: SeparatorTest | null): boolean {
-  return sortedJson(a) === sortedJson(b);
+  return saysTheSame(a, b);
 }
+
+function saysTheSame(a: unknown, b: unknown): boolean {
+  if (typeof a === "number" && typeof b === "number") {
+    return Math.abs(a - b) <= SAME_FIGURE * Math.max(Math.abs(a), Math.abs(b));
+  }
+  if (!isRecord(a) || !isRecord(b)) return (a ?? null) === (b ?? null);
+  return [...new Set([...Object.keys(a), ...Object.keys(b)])].every((key) =>
+    saysTheSame(a[key], b[key]),
+  );
+}
+
+const isRecord = (value: unknown): value is Record<string, unknown> =>
+  typeof value === "object" && value !== null;
 
 export function isSameInputs(a: EstimateInputs, b: EstimateInputs): boolean {
   return sortedJson(a) === sortedJson(b);

@@ -152,7 +152,12 @@ const isOptional = (name: SheetFieldName) =>
 
 function readSheetField(name: SheetFieldName, text: string): FieldReading {
   const { quantity, unit, symbol }: SheetField = sheetFields[name];
-  return quantity === null ? readPlain(text) : readQuantity(text, quantity, unit, symbol);
+  if (quantity === null) return readPlain(text);
+  const reading = readQuantity(text, quantity, unit, symbol);
+  // A share is stored as a fraction and typed in per cent: 1.504 % is 0.01504, not 0.015040000000000001.
+  return symbol === "%" && reading.value !== null
+    ? { ...reading, value: Number(reading.value.toPrecision(12)) }
+    : reading;
 }
 
 function testOf(

@@ -4,7 +4,7 @@ import { useState, type ReactNode } from "react";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import { useCan } from "@/app/_client/use-session";
 import type { FluidSampleView } from "@/app/api/v1/fluid-samples/schema";
-import { isSameFluid } from "@/components/estimate/differences";
+import { sampleOfEstimate } from "@/components/fluid/estimate-sample";
 import { newSampleText, textOfSample } from "@/components/fluid/sample-text";
 import { Select } from "@/components/ui/choice";
 import { formatDate } from "@/components/ui/format";
@@ -20,11 +20,10 @@ const NEW = "new";
 
 /** Fluid samples of the reservoir: entered, computed as they are typed, kept, used in the draft. */
 export function FluidTab() {
-  const { page, text } = useReservoir();
+  const { page, shown, text } = useReservoir();
   const can = useCan();
-  const used = page.fluidSamples.find((sample) =>
-    isSameFluid(sample.separatorTest, text?.fluid ?? null),
-  );
+  const taken = sampleOfEstimate(page.fluidSamples, shown, text?.fluid ?? null);
+  const used = taken?.sample;
   const start = used?.id ?? (text?.fluid ? OF_ESTIMATE : (page.fluidSamples.at(0)?.id ?? null));
   const [chosen, setChosen] = useState(() => readChosenSample(page.id));
   const isThere =
@@ -62,6 +61,7 @@ export function FluidTab() {
       key={`${current ?? NEW} ${sample?.version ?? 0}`}
       name={sample?.id ?? `${page.id}.${current ?? NEW}`}
       sample={sample}
+      isNewer={taken !== null && taken.isNewer && taken.sample.id === sample?.id}
       test={current === OF_ESTIMATE ? (text?.fluid ?? null) : null}
       chooser={
         options.length > 1 && (
@@ -82,6 +82,7 @@ export function FluidTab() {
 function Sheets({
   name,
   sample,
+  isNewer,
   test,
   chooser,
   onSaved,
@@ -89,11 +90,13 @@ function Sheets({
   /** what is typed is kept under it in this tab */
   name: string;
   sample: FluidSampleView | null;
+  /** the estimate was made with an earlier version of it */
+  isNewer: boolean;
   test: SeparatorTest | null;
   chooser: ReactNode;
   onSaved: (sample: FluidSampleView) => void;
 }) {
   const [stored] = useState(() => (sample ? textOfSample(sample) : newSampleText(test)));
   const draft = useSample(name, stored, sample?.version ?? null);
-  return <FluidSample {...{ sample, draft, chooser, onSaved }} />;
+  return <FluidSample {...{ sample, isNewer, draft, chooser, onSaved }} />;
 }

@@ -4,6 +4,7 @@ import { useState } from "react";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import { errorWords, ProblemError } from "@/app/_client/request";
 import { fluidSampleSchema, type FluidSampleView } from "@/app/api/v1/fluid-samples/schema";
+import { isSameFluid } from "@/components/estimate/differences";
 import { SampleConflict } from "@/components/fluid/sample-conflict";
 import { textOfSample, type StoredSample } from "@/components/fluid/sample-text";
 import { Button } from "@/components/ui/button";
@@ -44,7 +45,9 @@ export function SampleForm({
           name: text.name.trim(),
           sampledOn: text.sampledOn,
           laboratory: text.laboratory.trim(),
-          separatorTest: test,
+          // An untouched sheet stays as it was stored, to the last digit.
+          separatorTest:
+            sample && isSameFluid(sample.separatorTest, test) ? sample.separatorTest : test,
           study: reading.study,
         }
       : null;
