@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
-import { evidenceKinds, methodGroups } from "@/app/(tools)/methods/_components/catalogue";
+import { methodGroups } from "@/app/(tools)/methods/_components/catalogue";
+import { evidenceKinds } from "@/app/(tools)/methods/_components/method";
 
 describe("methodGroups", () => {
   const methods = methodGroups.flatMap((group) => group.methods);

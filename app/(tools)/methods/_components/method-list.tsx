@@ -1,5 +1,5 @@
 import { Section } from "@/components/ui/section";
-import type { EvidenceKind, Method, MethodGroup } from "./catalogue";
+import type { EvidenceKind, Method, MethodGroup } from "./method";
 
 /** How an error is known, before what it is. */
 const evidenceWords: Record<EvidenceKind, string> = {

@@ -1,0 +1,125 @@
+/** Methods on estimates and on the portfolio. */
+import { exact, measured, stated, unknown, type MethodGroup } from "./method";
+
+export const estimates: MethodGroup = {
+  id: "estimates",
+  title: "Volumes and their ranges",
+  note: "P90 is the low case: a 90 % chance of at least this much.",
+  methods: [
+    {
+      name: "Gas and condensate in place",
+      gives: "Wet gas, dry gas and condensate of a reservoir.",
+      source: "43,560 A h φ (1 − Sw) / Bg; split by the wellstream",
+      range:
+        "Porosity to 0.47. The yield varies trial by trial, and gravity and gas share with it.",
+      error: exact("Exact; the whole chain agrees with a separate implementation."),
+      usedIn: "Every estimate, calculation “in-place”",
+    },
+    {
+      name: "Sampling",
+      gives: "Trials that fill the range of every input.",
+      source:
+        "Latin hypercube: M. D. McKay, R. J. Beckman, W. J. Conover, Technometrics 21 (1979) 239–245",
+      range:
+        "10,000 trials unless asked otherwise. Same inputs, seed and engine give the same bytes.",
+      error: stated("Standard errors stand with the results; those shown are on the safe side."),
+      usedIn: "Every estimate",
+    },
+    {
+      name: "Rank correlation",
+      gives: "Inputs that move together.",
+      source: "R. L. Iman, W. J. Conover, Commun. Stat. Simul. Comput. 11 (1982) 311–334",
+      range: "A set of correlations that cannot be is refused.",
+      error: measured(
+        "A published worked example by S. J. Mildenhall (2006) to its last digit; Spearman correlations of what was asked, to sampling error.",
+      ),
+      usedIn: "Every estimate with correlations",
+    },
+    {
+      name: "Distributions and percentiles",
+      gives: "Curves of the inputs; P90, P50, P10 and mean of the results.",
+      source:
+        "Lognormal, normal, triangular, PERT, uniform, constant; quantiles R-7 of R. J. Hyndman, Y. Fan, Am. Stat. 50 (1996) 361–365",
+      range: "Cut-offs are shown with the probability they remove.",
+      error: exact("Exact; checked against published values and SciPy."),
+      usedIn: "Every estimate, calculation “distribution”",
+    },
+    {
+      name: "What drives the range",
+      gives: "Inputs by their share of the spread.",
+      source: "A. Saltelli et al., Global Sensitivity Analysis: the Primer (2008), section 1.2",
+      range: "Squared rank correlations. Shares of correlated inputs overlap.",
+      error: exact("A description of the sample."),
+      usedIn: "Results",
+    },
+  ],
+};
+
+export const portfolio: MethodGroup = {
+  id: "portfolio",
+  title: "Portfolio and value",
+  note: "Percentiles do not add: an arithmetic sum is shown only under that name.",
+  methods: [
+    {
+      name: "Totals",
+      gives: "Range of a sum of fields, trial by trial.",
+      source:
+        "One-factor normal copula a basin: A. J. McNeil, R. Frey, P. Embrechts, Quantitative Risk Management, 2nd ed. (2015), section 7.3",
+      range: "Basins are independent of each other. A portfolio's P90 is no reserves category.",
+      error: measured(
+        "Ten lognormal fields against the closed form and the approximation of Fenton and Wilkinson.",
+      ),
+      usedIn: "Portfolio, fields, exports",
+    },
+    {
+      name: "Risk",
+      gives: "Figures times the chance of commerciality.",
+      source: "Expectation, trial by trial",
+      range: "The mean is exact; the chance of nothing is not in the range, and screens say so.",
+      error: exact("The mean is exact."),
+      usedIn: "Portfolio, fields, when the basis is risked",
+    },
+    {
+      name: "Liquid value",
+      gives: "What a field's recoverable condensate would fetch.",
+      source: "Volume times the deck's realised price",
+      range: "Flat, real, undiscounted, before cost and tax.",
+      error: exact("That of the deck and of the volumes."),
+      usedIn: "Fields, portfolio, exports",
+    },
+  ],
+};
+
+export const conditions: MethodGroup = {
+  id: "conditions",
+  title: "Units, conditions and cautions",
+  note: "Kept in scf at 14.696 psia and 60 °F and in stock-tank barrels; shown as the basis says.",
+  methods: [
+    {
+      name: "Standard conditions",
+      gives: "The same gas at another base.",
+      source:
+        "ISO 13443; exact factors of the international yard and pound (1959) and the SI (2019)",
+      range: "14.65, 14.696, 14.73, 15.025 psia at 60 °F; 101.325 kPa at 15 °C.",
+      error: exact("Exact factors."),
+      usedIn: "Everywhere",
+    },
+    {
+      name: "Sour and corrosive gas",
+      gives: "A caution where people or steel are at risk.",
+      source:
+        "ISO 15156 / NACE MR0175 (0.05 psia H₂S); NIOSH limits; CO₂ partial pressure: common practice, from memory",
+      range: "From the first ppm of H₂S; CO₂ from 7 psi.",
+      error: unknown("A flag. It does not replace a site's own procedures."),
+      usedIn: "Fluid, estimates, fields",
+    },
+    {
+      name: "High pressure and temperature",
+      gives: "A caution about wells and equipment.",
+      source: "30 CFR 250.804 (15,000 psia, 350 °F)",
+      range: "From 10,000 psia or 300 °F.",
+      error: unknown("A flag."),
+      usedIn: "Estimates, fields",
+    },
+  ],
+};
