@@ -9,12 +9,15 @@ import { Import } from "./import";
 import { PriceDeck } from "./price-deck";
 import { PriceDeckPrice } from "./price-deck-price";
 import { Reservoir } from "./reservoir";
-import { sequelize } from "./sequelize";
 import { Settings } from "./settings";
 import { User } from "./user";
 
+const models = [
+  ...[ApiToken, AuditEvent, Basin, Estimate, EstimateTrials, Field, FluidSample, Import],
+  ...[PriceDeck, PriceDeckPrice, Reservoir, Settings, User],
+];
 // Hot reload runs this file again on models that it did not load again: they begin without associations each time.
-for (const { associations } of Object.values(sequelize.models)) {
+for (const { associations } of models) {
   for (const alias of Object.keys(associations)) delete associations[alias];
 }
 
