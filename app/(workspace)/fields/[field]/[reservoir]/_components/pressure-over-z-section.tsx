@@ -52,8 +52,11 @@ function Balance({ study, curve, reservoir, place }: Props) {
   // A curve by correlation holds the gas's own z, and ends where no history needs to.
   const twoPhase = curve && curve.route !== "correlation" ? curve : null;
   const missing = missingOf(reading, study.test === null, temperatureDegF === null);
+  // Without it the first line would be one by the gas's own z, which then moves.
+  const isCurveComing =
+    curve === null && (study.depletion.isFetching || study.equationOfState.isFetching);
   const query = useMaterialBalance(
-    missing === null && reading.records && study.test && temperatureDegF !== null
+    missing === null && !isCurveComing && reading.records && study.test && temperatureDegF !== null
       ? {
           records: reading.records,
           separatorTest: study.test,
@@ -64,10 +67,10 @@ function Balance({ study, curve, reservoir, place }: Props) {
       : null,
   );
   const problems = problemsOf(query.error, reading);
-  const result = missing === null && !query.error ? (query.data ?? null) : null;
+  const result = missing === null && !isCurveComing && !query.error ? (query.data ?? null) : null;
   const volumetric = volumetricOf(results.summary);
   return (
-    <div className="columns columns-equal pt-3">
+    <div className="balance">
       <RecordsSheet
         text={text}
         reading={reading}
