@@ -1,12 +1,15 @@
+import { Fragment } from "react";
 import type { SeparatorStage } from "@/analytics/composition/composition-schema";
 import type { EquationOfStateResponse } from "@/app/api/v1/calculations/fluid-schema";
 import { ChartFrame, type ChartCell } from "@/components/charts/chart-frame";
 import { Plot, PlotDot, PlotLabel } from "@/components/charts/plot";
-import { linePath, positionOn, ticksOf, type Scale } from "@/components/charts/scale";
+import { linePath, positionOn, ticksOf } from "@/components/charts/scale";
 import { formatFigure } from "@/components/ui/format";
 import { Flag } from "@/components/ui/text";
 import { psia } from "./words";
-import { clippedLine, roundScale, yTicksOf } from "./plot-scale";
+import { freeRoom, LABEL_GAP, layoutLabels, type PlacedText, type PlotBox } from "./label-layout";
+import { areaInside, partsInside, roundScale, yTicksOf } from "./plot-scale";
+import { useWidth } from "./use-width";
 
 type Envelope = EquationOfStateResponse["envelope"];
 type EnvelopePoint = Envelope["dew"][number];
@@ -109,16 +112,34 @@ function rowsOf(
   ];
 }
 
-function EnvelopePlot({
-  result,
-  temperatureDegF,
-  initialPressurePsia,
-  abandonmentPressurePsia,
-  stages,
-}: PhaseEnvelopeProps) {
+/** How far above its highest figure the picture reaches; a branch that goes on is cut there. */
+const HEADROOM = 1.2;
+const HEIGHT = 440;
+const LEFT = 52;
+
+/** The highest pressure of the picture: it holds the figures, and as much of the lines as lies about them. */
+function topOf({ envelope, saturation }: EquationOfStateResponse, initialPsia: number | null) {
+  const lines = [...envelope.bubble, ...envelope.dew].map((point) => point.pressurePsia);
+  const figures = [
+    initialPsia,
+    saturation.measuredPsia,
+    saturation.upperPsia,
+    envelope.critical?.pressurePsia,
+    envelope.cricondenbar?.pressurePsia,
+  ].filter((value) => typeof value === "number");
+  const most = Math.max(...lines, ...figures, 1);
+  return figures.length === 0 ? most : Math.min(most, HEADROOM * Math.max(...figures));
+}
+
+function EnvelopePlot(props: PhaseEnvelopeProps) {
+  const { result, temperatureDegF, initialPressurePsia, abandonmentPressurePsia, stages } = props;
   const { envelope, saturation, isTuned } = result;
-  const all = [...envelope.bubble, ...envelope.dew];
-  const temperatures = all.map((point) => point.temperatureDegF);
+  const [frame, width] = useWidth<HTMLDivElement>(520);
+  const y = roundScale([topOf(result, initialPressurePsia)]);
+  const top = y.domain[1];
+  const temperatures = [...envelope.bubble, ...envelope.dew]
+    .filter((point) => point.pressurePsia <= top)
+    .map((point) => point.temperatureDegF);
   const x = roundScale(
     [
       // Far below freezing nothing of a reservoir happens; the line runs out of the picture there.
@@ -128,222 +149,291 @@ function EnvelopePlot({
     ],
     { fromZero: false },
   );
-  const y = roundScale([
-    ...all.map((point) => point.pressurePsia),
-    initialPressurePsia ?? 0,
-    saturation.measuredPsia ?? 0,
-  ]);
-  const draw = (points: readonly EnvelopePoint[]) =>
-    linePath(
-      clippedLine(
-        points.map((point) => [
-          positionOn(x, point.temperatureDegF),
-          100 - positionOn(y, point.pressurePsia),
-        ]),
-      ),
-    );
-  const place = (temperature: number, pressure: number) => ({
-    x: positionOn(x, temperature),
-    y: 100 - positionOn(y, pressure),
+  const place = (point: EnvelopePoint) => ({
+    x: positionOn(x, point.temperatureDegF),
+    y: 100 - positionOn(y, point.pressurePsia),
   });
+  const pairs = (points: readonly EnvelopePoint[]) =>
+    points.map(place).map((at) => [at.x, at.y] as const);
+  const draw = (points: readonly EnvelopePoint[]) =>
+    partsInside(pairs(points)).map(linePath).join("");
   // Bubble line rising, then the dew line from the critical point down: one closed shape.
   const outline = outlineOf(envelope);
   const last = abandonmentPressurePsia ?? stages[0]?.pressurePsia ?? 0;
   const start = initialPressurePsia ?? saturation.measuredPsia ?? saturation.upperPsia;
   const dash = isTuned ? "" : " line-dashed";
+  const dots = [
+    ...marksOf(props),
+    ...[envelope.bubble, envelope.dew].flatMap((points) => leavingMark(points, top)),
+  ]
+    .map((mark) => ({ ...mark, ...place(mark.at) }))
+    .filter((mark) => [mark.x, mark.y].every((at) => at >= -0.01 && at <= 100.01));
 
   return (
-    <Plot
-      label={describe(result, temperatureDegF)}
-      height={440}
-      left={52}
-      tone="condensate"
-      yTitle="Pressure, psia"
-      xTitle="Temperature, °F"
-      yTicks={yTicksOf(y, 6)}
-      xTicks={ticksOf(x, 6)}
-      shapes={
-        <>
-          {outline.length > 2 && <path className="area" opacity={0.6} d={draw(closed(outline))} />}
-          {envelope.quality.map(({ liquidVolumeFraction, points }) => (
-            <path
-              key={liquidVolumeFraction}
-              className="line line-thin line-dotted"
-              d={draw(points)}
-            />
-          ))}
-          <path className={`line${dash}`} d={draw(envelope.bubble)} />
-          <path className={`line${dash}`} d={draw(envelope.dew)} />
-          {start !== null && (
-            <g data-tone="ink">
+    <div ref={frame}>
+      <Plot
+        label={describe(result, temperatureDegF)}
+        height={HEIGHT}
+        left={LEFT}
+        tone="condensate"
+        yTitle="Pressure, psia"
+        xTitle="Temperature, °F"
+        yTicks={yTicksOf(y, 6)}
+        xTicks={ticksOf(x, 6)}
+        shapes={
+          <>
+            {outline.length > 2 && (
               <path
-                className="line"
-                d={draw([
-                  { temperatureDegF, pressurePsia: start },
-                  { temperatureDegF, pressurePsia: last },
-                ])}
-              />
-            </g>
-          )}
-          <g data-tone="gas">
-            {start !== null && stages.length > 0 && (
-              <path
-                className="line line-thin line-dashed"
-                d={draw([{ temperatureDegF, pressurePsia: start }, stages[0]])}
+                className="area"
+                opacity={0.6}
+                d={`${linePath(areaInside(pairs(closed(outline))))}Z`}
               />
             )}
-            <path className="line" d={draw(stages)} />
-          </g>
-        </>
-      }
-    >
-      {envelope.critical && (
-        <Mark
-          {...place(envelope.critical.temperatureDegF, envelope.critical.pressurePsia)}
-          shape="open"
-          anchor="end"
-        >
-          Critical point
-        </Mark>
-      )}
-      {envelope.cricondentherm && (
-        <PlotLabel
-          {...place(envelope.cricondentherm.temperatureDegF, envelope.cricondentherm.pressurePsia)}
-          anchor="end"
-          dx={-8}
-          soft
-        >
-          {formatFigure(envelope.cricondentherm.temperatureDegF)} °F
-        </PlotLabel>
-      )}
-      <QualityLabels quality={envelope.quality} x={x} y={y} />
-      {initialPressurePsia !== null && (
-        <span data-tone="ink">
-          <Mark {...place(temperatureDegF, initialPressurePsia)} anchor="start" firm>
-            <b>Initial</b> {psia(initialPressurePsia)}
-          </Mark>
-        </span>
-      )}
-      <DewPointMarks {...{ saturation, place, temperatureDegF, isTuned }} />
-      {abandonmentPressurePsia !== null && (
-        <span data-tone="ink">
-          <Mark {...place(temperatureDegF, abandonmentPressurePsia)} anchor="start">
-            <b>Abandonment</b> {psia(abandonmentPressurePsia)}
-          </Mark>
-        </span>
-      )}
-      <span data-tone="gas">
-        {stages.map((stage, index) => (
-          <Mark
-            key={index}
-            {...place(stage.temperatureDegF, stage.pressurePsia)}
-            anchor={index === stages.length - 1 ? "end" : "start"}
-            dy={index === stages.length - 1 ? -8 : 0}
-            toned
-          >
-            {index === stages.length - 1 ? "Tank" : `Stage ${index + 1}`}
-          </Mark>
-        ))}
-      </span>
-    </Plot>
-  );
-}
-
-/** The measured dew point as a full dot, the computed one as an open one beside it. */
-function DewPointMarks({
-  saturation,
-  place,
-  temperatureDegF,
-  isTuned,
-}: {
-  saturation: EquationOfStateResponse["saturation"];
-  place: (temperature: number, pressure: number) => { x: number; y: number };
-  temperatureDegF: number;
-  isTuned: boolean;
-}) {
-  const { measuredPsia, upperPsia, kind } = saturation;
-  const name = kind === "bubblePoint" ? "Bubble point" : "Dew point";
-  // Two labels a line apart, where their points are nearer than that [% of the height].
-  const apart =
-    measuredPsia === null || upperPsia === null
-      ? Infinity
-      : place(0, upperPsia).y - place(0, measuredPsia).y;
-  const besideMeasured = Math.abs(apart) < 4 ? (apart >= 0 ? 16 : -16) : 0;
-  return (
-    <>
-      {measuredPsia !== null && (
-        <Mark {...place(temperatureDegF, measuredPsia)} anchor="start" toned>
-          <b>Dew point</b> {psia(measuredPsia)}, measured
-        </Mark>
-      )}
-      {upperPsia !== null && (
-        <Mark
-          {...place(temperatureDegF, upperPsia)}
-          shape="open"
-          anchor="start"
-          dy={besideMeasured}
-          toned
-        >
-          {measuredPsia === null && <b>{name} </b>}
-          {psia(upperPsia)}, {isTuned ? "tuned" : "untuned"}
-        </Mark>
-      )}
-    </>
-  );
-}
-
-function Mark({
-  x,
-  y,
-  shape = "full",
-  anchor,
-  toned,
-  firm,
-  dy = 0,
-  children,
-}: {
-  x: number;
-  y: number;
-  shape?: "full" | "open";
-  anchor: "start" | "end";
-  toned?: boolean;
-  firm?: boolean;
-  dy?: number;
-  children: React.ReactNode;
-}) {
-  return (
-    <>
-      <PlotDot x={x} y={y} shape={shape} />
-      <PlotLabel
-        {...{ x, y, dy, toned }}
-        anchor={anchor}
-        dx={anchor === "start" ? 11 : -11}
-        soft={!toned && !firm}
+            {envelope.quality.map(({ liquidVolumeFraction, points }) => (
+              <path
+                key={liquidVolumeFraction}
+                className="line line-thin line-dotted"
+                d={draw(points)}
+              />
+            ))}
+            <path className={`line${dash}`} d={draw(envelope.bubble)} />
+            <path className={`line${dash}`} d={draw(envelope.dew)} />
+            {start !== null && (
+              <g data-tone="ink">
+                <path
+                  className="line"
+                  d={draw([
+                    { temperatureDegF, pressurePsia: start },
+                    { temperatureDegF, pressurePsia: last },
+                  ])}
+                />
+              </g>
+            )}
+            <g data-tone="gas">
+              {start !== null && stages.length > 0 && (
+                <path
+                  className="line line-thin line-dashed"
+                  d={draw([{ temperatureDegF, pressurePsia: start }, stages[0]])}
+                />
+              )}
+              <path className="line" d={draw(stages)} />
+            </g>
+          </>
+        }
       >
-        {children}
-      </PlotLabel>
-    </>
+        <Labels
+          dots={dots}
+          quality={envelope.quality.map(({ liquidVolumeFraction, points }) => ({
+            text: `${formatFigure(liquidVolumeFraction * 100, { decimals: 0 })} %`,
+            points: places(points).map(place),
+          }))}
+          box={{ width: width - LEFT, height: HEIGHT }}
+        />
+      </Plot>
+    </div>
   );
 }
 
-/** Each line's share of liquid, where it reaches farthest to the right: there the lines lie apart. */
-function QualityLabels({ quality, x, y }: { quality: Envelope["quality"]; x: Scale; y: Scale }) {
-  return quality.map(({ liquidVolumeFraction, points }) => {
-    if (points.length === 0) return null;
-    const tip = points.reduce((far, point) =>
-      point.temperatureDegF > far.temperatureDegF ? point : far,
-    );
-    const at = {
-      x: positionOn(x, tip.temperatureDegF),
-      y: 100 - positionOn(y, tip.pressurePsia),
-    };
-    if (at.x < 5 || at.x > 95 || at.y < 5 || at.y > 95) return null;
-    return (
-      <PlotLabel key={liquidVolumeFraction} {...at} soft>
-        {formatFigure(liquidVolumeFraction * 100, { decimals: 0 })} %
-      </PlotLabel>
-    );
+interface Mark {
+  at: EnvelopePoint;
+  /** `null`: a label alone */
+  dot: "full" | "open" | null;
+  side: PlacedText["side"];
+  tone?: "ink" | "gas" | "condensate";
+  /** stands in bold before the first line */
+  name?: string;
+  /** none: a point that another label speaks for */
+  lines: readonly string[];
+}
+
+function marksOf({
+  result: { envelope, saturation, isTuned },
+  temperatureDegF,
+  initialPressurePsia,
+  abandonmentPressurePsia,
+  stages,
+}: PhaseEnvelopeProps): Mark[] {
+  const at = (pressurePsia: number) => ({ temperatureDegF, pressurePsia });
+  const marks: Mark[] = [];
+  if (envelope.critical) {
+    marks.push({ at: envelope.critical, dot: "open", side: "left", lines: ["Critical point"] });
+  }
+  if (envelope.cricondentherm) {
+    marks.push({
+      at: envelope.cricondentherm,
+      dot: null,
+      side: "left",
+      lines: [`Cricondentherm ${formatFigure(envelope.cricondentherm.temperatureDegF)} °F`],
+    });
+  }
+  if (initialPressurePsia !== null) {
+    marks.push({
+      at: at(initialPressurePsia),
+      dot: "full",
+      side: "right",
+      tone: "ink",
+      name: "Initial",
+      lines: [psia(initialPressurePsia)],
+    });
+  }
+  marks.push(...saturationMarks(saturation, isTuned, at));
+  if (abandonmentPressurePsia !== null) {
+    marks.push({
+      at: at(abandonmentPressurePsia),
+      dot: "full",
+      side: "right",
+      tone: "ink",
+      name: "Abandonment",
+      lines: [psia(abandonmentPressurePsia)],
+    });
+  }
+  stages.forEach((stage, index) => {
+    const isTank = index === stages.length - 1;
+    marks.push({
+      at: stage,
+      dot: "full",
+      side: isTank ? "left" : "right",
+      tone: "gas",
+      lines: [isTank ? "Tank" : `Stage ${index + 1}`],
+    });
   });
+  return marks;
+}
+
+/** The measured dew point as a full dot, the computed one as an open one; one label where they lie together. */
+function saturationMarks(
+  { measuredPsia, upperPsia, kind }: EquationOfStateResponse["saturation"],
+  isTuned: boolean,
+  at: (pressurePsia: number) => EnvelopePoint,
+): Mark[] {
+  const shared = { side: "right", tone: "condensate" } as const;
+  const computedWords = isTuned ? "tuned" : "untuned";
+  const areTogether =
+    measuredPsia !== null &&
+    upperPsia !== null &&
+    Math.abs(measuredPsia - upperPsia) < TOGETHER * Math.max(measuredPsia, upperPsia);
+  const marks: Mark[] = [];
+  if (upperPsia !== null) {
+    marks.push({
+      ...shared,
+      at: at(upperPsia),
+      dot: "open",
+      name:
+        measuredPsia === null ? (kind === "bubblePoint" ? "Bubble point" : "Dew point") : undefined,
+      lines: areTogether ? [] : [`${psia(upperPsia)}, ${computedWords}`],
+    });
+  }
+  if (measuredPsia !== null) {
+    marks.push({
+      ...shared,
+      at: at(measuredPsia),
+      dot: "full",
+      name: "Dew point",
+      lines: areTogether
+        ? [`${psia(measuredPsia)} measured,`, `${psia(upperPsia)} ${computedWords}`]
+        : [`${psia(measuredPsia)}, measured`],
+    });
+  }
+  return marks;
+}
+
+/** Pressures nearer to each other than this share are one place of the picture. */
+const TOGETHER = 0.04;
+
+/** Where a line leaves the picture at the top, and how far it goes. */
+function leavingMark(points: readonly EnvelopePoint[], top: number): Mark[] {
+  const most = Math.max(...points.map(({ pressurePsia }) => pressurePsia));
+  const index = points.findIndex(
+    ({ pressurePsia }, i) => i > 0 && pressurePsia > top !== points[i - 1].pressurePsia > top,
+  );
+  if (index < 0) return [];
+  const [from, to] = [points[index - 1], points[index]];
+  const share = (top - from.pressurePsia) / (to.pressurePsia - from.pressurePsia);
+  return [
+    {
+      at: {
+        temperatureDegF: from.temperatureDegF + share * (to.temperatureDegF - from.temperatureDegF),
+        pressurePsia: top,
+      },
+      dot: null,
+      side: "right",
+      lines: [`↑ goes on to ${formatFigure(most)} psia`],
+    },
+  ];
+}
+
+/** Places for a line's label, best first: its end to the right, where lines lie apart, then along it. */
+function places(points: readonly EnvelopePoint[]): EnvelopePoint[] {
+  if (points.length === 0) return [];
+  const tip = points.reduce((far, point) =>
+    point.temperatureDegF > far.temperatureDegF ? point : far,
+  );
+  return [tip, ...[0.3, 0.5, 0.7].map((share) => points[Math.floor(share * (points.length - 1))])];
+}
+
+function Labels({
+  dots,
+  quality,
+  box,
+}: {
+  dots: readonly (Mark & { x: number; y: number })[];
+  quality: readonly { text: string; points: readonly { x: number; y: number }[] }[];
+  box: PlotBox;
+}) {
+  const named = dots.filter(({ lines }) => lines.length > 0);
+  const placements = layoutLabels(
+    named.map(({ name, lines, ...mark }) => ({
+      ...mark,
+      lines: lines.map((line, index) => (index === 0 && name ? `${name} ${line}` : line)),
+    })),
+    box,
+  );
+  const blocks = placements.map(({ block }) => block);
+  return (
+    <>
+      {quality.map(({ text, points }) => {
+        for (const point of points) {
+          const room = freeRoom(point, text, blocks, box);
+          if (!room) continue;
+          blocks.push(room);
+          return (
+            <PlotLabel key={text} {...point} soft>
+              {text}
+            </PlotLabel>
+          );
+        }
+        return null;
+      })}
+      {dots.map(
+        ({ x, y, dot, tone }, index) =>
+          dot && (
+            <span key={index} data-tone={tone}>
+              <PlotDot x={x} y={y} shape={dot} />
+            </span>
+          ),
+      )}
+      {named.map(({ x, y, tone, name, lines }, index) => (
+        <span key={index} data-tone={tone}>
+          <PlotLabel
+            {...{ x, y }}
+            anchor={placements[index].side === "right" ? "start" : "end"}
+            dx={placements[index].side === "right" ? LABEL_GAP : -LABEL_GAP}
+            dy={placements[index].dy}
+            toned={tone === "gas" || tone === "condensate"}
+            soft={tone === undefined}
+          >
+            {name && <b>{name} </b>}
+            {lines.map((line, at) => (
+              <Fragment key={line}>
+                {at > 0 && <br />}
+                {line}
+              </Fragment>
+            ))}
+          </PlotLabel>
+        </span>
+      ))}
+    </>
+  );
 }
 
 /** The outline down to the axis at both ends, where the lines leave the picture or were not followed further. */

@@ -2,7 +2,8 @@ import { renderToStaticMarkup } from "react-dom/server";
 import { describe, expect, it } from "vitest";
 import { DepletionPanels } from "@/components/fluid/depletion-panels";
 import { routeWords } from "@/components/fluid/available-curves";
-import { clippedLine, roundScale, spread } from "@/components/fluid/plot-scale";
+import { layoutLabels } from "@/components/fluid/label-layout";
+import { areaInside, partsInside, roundScale, spread } from "@/components/fluid/plot-scale";
 import { envelopeFinding, PhaseEnvelope } from "@/components/fluid/phase-envelope";
 import { partAndPlace, takeLabSheet } from "@/components/fluid/take-lab-sheet";
 import { newSampleText } from "@/components/fluid/sample-text";
@@ -131,18 +132,66 @@ describe("plot scales", () => {
     expect(roundScale([-93, 415], { fromZero: false }).domain).toEqual([-200, 600]);
   });
 
-  it("cuts a line at the edge of the picture", () => {
-    expect(
-      clippedLine([
-        [-10, 0],
-        [10, 20],
-        [30, 40],
-      ]),
-    ).toEqual([
-      [0, 10],
+  it("cuts a line at the edges of the picture, into the parts inside", () => {
+    const line = [
+      [-10, 0],
       [10, 20],
       [30, 40],
+      [40, -40],
+      [60, -40],
+      [60, 50],
+    ] as const;
+    expect(partsInside(line)).toEqual([
+      [
+        [0, 10],
+        [10, 20],
+        [30, 40],
+        [35, 0],
+      ],
+      [
+        [60, 0],
+        [60, 50],
+      ],
     ]);
+    expect(
+      partsInside([
+        [120, 0],
+        [130, 90],
+      ]),
+    ).toEqual([]);
+  });
+
+  it("cuts an area at the edges of the picture", () => {
+    const area = areaInside([
+      [50, -100],
+      [150, 100],
+      [-50, 100],
+    ]);
+    for (const [x, y] of area) {
+      expect(Math.min(x, y)).toBeGreaterThanOrEqual(-1e-9);
+      expect(Math.max(x, y)).toBeLessThanOrEqual(100 + 1e-9);
+    }
+    expect(area).toContainEqual([100, 0]);
+  });
+
+  it("keeps labels in the picture and off each other", () => {
+    const box = { width: 300, height: 400 };
+    const texts = [
+      { x: 60, y: 40, lines: ["Dew point 4,424 measured,", "4,423 tuned"], side: "right" as const },
+      { x: 55, y: 41, lines: ["Critical point"], side: "left" as const },
+      { x: 60, y: 42, lines: ["Initial 4,500"], side: "right" as const },
+    ];
+    const placed = layoutLabels(texts, box);
+    expect(placed[0].side).toBe("left");
+    placed.forEach(({ block }, i) => {
+      expect(block.left).toBeGreaterThanOrEqual(0);
+      expect(block.right).toBeLessThanOrEqual(box.width);
+      for (const other of placed.slice(i + 1).map((placement) => placement.block)) {
+        const apart =
+          Math.abs(block.middle - other.middle) >= (block.height + other.height) / 2 - 1;
+        expect(apart || block.left > other.right || other.left > block.right).toBe(true);
+      }
+    });
   });
 
   it("moves labels apart and keeps their order", () => {
