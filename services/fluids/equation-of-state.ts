@@ -12,6 +12,7 @@ import { phaseEnvelope, type PhaseEnvelope } from "@/analytics/equation-of-state
 import type { Characterised } from "@/analytics/equation-of-state/mixture";
 import {
   saturationPressures,
+  upperSaturation,
   type SaturationPressures,
 } from "@/analytics/equation-of-state/saturation";
 import { flashTrain, type SeparatorTrain } from "@/analytics/equation-of-state/separator-train";
@@ -44,7 +45,8 @@ export function describePhases(question: EquationOfStateQuestion) {
   const { sheet, characterisation, temperatureDegF, measuredDewPointPsia, stages } = question;
   const { stream, characterised, warnings } = characteriseSheet(sheet, characterisation);
   const { mixture, moleFractions } = characterised;
-  const saturation = saturationPressures(mixture, moleFractions, degreesRankine(temperatureDegF));
+  const found = saturationOf(characterised, temperatureDegF);
+  const { saturation } = found;
   const { upper, lower } = saturation;
   const train = flashTrain(mixture, moleFractions, stages);
   const traced = envelopeOf(characterised);
@@ -74,10 +76,40 @@ export function describePhases(question: EquationOfStateQuestion) {
     warnings: [
       ...warnings,
       ...saturationWarnings(question, saturation),
+      ...found.warnings,
       ...traced.warnings,
       ...simulated.warnings,
     ],
   };
+}
+
+/** The lower dew point is of interest by itself only: where it cannot be found it is left out, and that is said. */
+function saturationOf(
+  { mixture, moleFractions }: Characterised,
+  temperatureDegF: number,
+): { saturation: SaturationPressures; warnings: Warning[] } {
+  const temperatureDegR = degreesRankine(temperatureDegF);
+  try {
+    return {
+      saturation: saturationPressures(mixture, moleFractions, temperatureDegR),
+      warnings: [],
+    };
+  } catch (error) {
+    if (!(error instanceof ConvergenceError)) throw error;
+    return {
+      saturation: {
+        upper: upperSaturation(mixture, moleFractions, temperatureDegR),
+        lower: null,
+      },
+      warnings: [
+        notConverged(
+          "lower_dew_point_not_found",
+          "characterisation",
+          `The lower dew point could not be found: ${error.message}`,
+        ),
+      ],
+    };
+  }
 }
 
 /** The diagram is drawn beside the figures; what of it cannot be traced is left out, and said. */
