@@ -244,7 +244,7 @@ export function planOf(
           : "Delivery pressure and lift at the last rate",
     },
     condensateCurveFactor: {
-      distribution: { kind: "normalP90P10", p90, p10, minimum: 0.3, maximum: 2 },
+      distribution: { kind: "normalP90P10", p90, p10, minimum: 0.3, maximum: 1.5 },
       source,
     },
     criticalSaturation: { low: 0.1, high: 0.2 },
