@@ -83,6 +83,14 @@ function checkPoint({ dewPointPsia, points }: RecoveryCurve, point: RecoveryPoin
         "or in the gas.",
     );
   }
+  const gas = point.gasProduced + gasInGasOf(point, points[0].producingYieldStbPerMmscf);
+  if (gas > 1 + BALANCE_TOLERANCE) {
+    refuse(
+      "producingYieldStbPerMmscf",
+      `The depletion curve accounts for more gas than there is ${at}: ${gas.toFixed(3)} of it produced, or in the gas ` +
+        "phase by the condensate there and the producing yield.",
+    );
+  }
   if (i === 0) {
     if (Math.abs(point.pressurePsia - dewPointPsia) > DEW_POINT_TOLERANCE_PSI) {
       refuse(
@@ -122,10 +130,17 @@ function liquidShareOf({ condensateProduced, condensateInGas }: RecoveryPoint): 
   return left > 0 ? Math.max(0, 1 - condensateInGas / left) : 0;
 }
 
-/** A gas that yields nothing has no liquid beside it: all of it is gas phase. */
+/** As `liquidShareOf`. A gas that yields nothing has no liquid beside it: all of it is gas phase. */
 function gasPhaseShareOf(point: RecoveryPoint, initialYield: number): number {
   const left = 1 - point.gasProduced;
   if (!(point.producingYieldStbPerMmscf > 0 && left > 0)) return 1;
-  const inGas = (point.condensateInGas * initialYield) / point.producingYieldStbPerMmscf;
-  return Math.min(1, inGas / left);
+  return Math.min(1, gasInGasOf(point, initialYield) / left);
+}
+
+/** Surface gas of the gas phase; a gas that yields nothing does not tell. */
+function gasInGasOf(point: RecoveryPoint, initialYield: number): number {
+  const { condensateInGas, producingYieldStbPerMmscf } = point;
+  return producingYieldStbPerMmscf > 0
+    ? (condensateInGas * initialYield) / producingYieldStbPerMmscf
+    : 0;
 }

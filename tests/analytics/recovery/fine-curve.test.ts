@@ -71,6 +71,13 @@ describe("fineCurve", () => {
       "curve.points.1.condensateInGas",
       "accounts for more condensate than there is at 3014.7 psia: 1.046",
     ],
+    [
+      "more gas than there is",
+      // 0.646 produced; in the gas phase 0.0545 of the condensate at a tenth of the first yield would be 0.545 of the gas.
+      changed(4, { producingYieldStbPerMmscf: 14.8 }),
+      "curve.points.4.producingYieldStbPerMmscf",
+      "accounts for more gas than there is at 1214.7 psia: 1.19",
+    ],
   ])("refuses %s", (_, wrong, input, message) => {
     try {
       fineCurve(wrong);

@@ -367,9 +367,9 @@ export const recovery: MethodGroup = {
       source:
         "Family of R. H. Jacoby, R. C. Koeller, V. J. Berry (1959) and B. A. Eaton, R. H. Jacoby (1965); coefficients from memory and not confirmed",
       range:
-        "Screening of depletion to 500 psig, from a dew point of 1,000 psia or more; the curve's shape is that of one published study.",
+        "Screening of depletion to 500 psig, from a dew point of 1,000 psia or more; gas and liquid balance with the yields, solution gas and shrinkage of one published study, bent to that recovery.",
       error: measured(
-        "Condensate about 12 % off on two published fluids; gas 8 points too high at 700 psig.",
+        "Condensate about 12 % off on two published fluids; moles produced within a point on the one whose shape it takes.",
       ),
       usedIn: "Estimates, marked as a correlation",
     },
