@@ -5,6 +5,7 @@ import type {
 } from "@/app/api/v1/calculations/fluid-schema";
 import type { WellstreamResponse } from "@/app/api/v1/calculations/schema";
 import type { SampleStudy } from "@/analytics/fluid/sample-study-schema";
+import type { Warning } from "@/analytics/warnings";
 import type { Finding } from "@/components/estimate/finding-list";
 import { formatFigure } from "@/components/ui/format";
 import type { AvailableCurve } from "./available-curves";
@@ -23,6 +24,8 @@ export interface SampleEvidence {
   composition: CompositionResponse | null;
   equationOfState: EquationOfStateResponse | null;
   depletion: DepletionResponse | null;
+  /** of the curve by correlation; none where there is another */
+  screeningWarnings: readonly Warning[];
   curve: AvailableCurve | null;
   tuning: SampleStudy["tuning"];
   /** of the separator sheet, and of the depletion table */
@@ -46,6 +49,7 @@ export function sampleFindings(evidence: SampleEvidence): Finding[] {
       ...(evidence.composition?.warnings ?? []),
       ...(evidence.equationOfState?.warnings ?? []),
       ...(evidence.depletion?.warnings ?? []),
+      ...evidence.screeningWarnings,
     ]
       .filter(
         ({ code, message }, index, all) =>

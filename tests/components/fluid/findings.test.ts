@@ -1,8 +1,10 @@
 import { describe, expect, it } from "vitest";
+import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import type { DepletionResponse } from "@/app/api/v1/calculations/fluid-schema";
 import { routeWords } from "@/components/fluid/available-curves";
 import { dewPointOf } from "@/components/fluid/fluid-figures";
 import { sampleFindings, type SampleEvidence } from "@/components/fluid/sample-findings";
+import { screeningCurve } from "@/components/fluid/screening-curve";
 import { equationOfState } from "./fixtures";
 
 const nothing: SampleEvidence = {
@@ -10,6 +12,7 @@ const nothing: SampleEvidence = {
   composition: null,
   equationOfState: null,
   depletion: null,
+  screeningWarnings: [],
   curve: null,
   tuning: null,
   dewPoints: { test: null, table: null },
@@ -22,6 +25,45 @@ const curve = {
 };
 const titles = (evidence: Partial<SampleEvidence>) =>
   sampleFindings({ ...nothing, ...evidence }).map(({ title }) => title);
+
+describe("screeningCurve", () => {
+  const test: SeparatorTest = {
+    basePressurePsia: 14.696,
+    primarySeparator: {
+      pressurePsia: 814.7,
+      temperatureDegF: 80,
+      gasOilRatioScfPerStb: 6_500,
+      gasGravity: 0.69,
+    },
+    secondSeparator: null,
+    stockTankGas: { gasOilRatioScfPerStb: 700, gasGravity: 1.1 },
+    condensateApi: 60,
+    condensateMolecularWeight: null,
+    nitrogen: 0,
+    carbonDioxide: 0,
+    hydrogenSulphide: 0,
+    dewPointPsia: 3500,
+  };
+
+  it("brings its warnings to the sample's findings", () => {
+    const { curve: found, reason, warnings } = screeningCurve(test, 200, null);
+    expect(found?.route).toBe("correlation");
+    expect(reason).toBeNull();
+    const texts = sampleFindings({ ...nothing, screeningWarnings: warnings }).map(
+      ({ text }) => text,
+    );
+    expect(texts.join(" ")).toContain("comes from a correlation of surface figures");
+  });
+
+  it("says why there is no curve, and nothing while figures are missing", () => {
+    const lean = {
+      ...test,
+      primarySeparator: { ...test.primarySeparator, gasOilRatioScfPerStb: 70_000 },
+    };
+    expect(screeningCurve(lean, 200, null).reason).toContain("too lean for it");
+    expect(screeningCurve(null, 200, null)).toEqual({ curve: null, reason: null, warnings: [] });
+  });
+});
 
 describe("sampleFindings(evidence)", () => {
   it("says nothing about what is not there", () => {

@@ -116,6 +116,7 @@ function ChecksSection({ draft, study, reservoir, criticalBand, curve }: FluidPa
       composition: study.composition.data,
       equationOfState: study.equationOfState.data,
       depletion: study.depletion.data,
+      screeningWarnings: study.screeningWarnings,
       curve,
       tuning: text.tuning,
       dewPoints: {

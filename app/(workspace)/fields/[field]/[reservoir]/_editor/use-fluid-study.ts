@@ -101,6 +101,8 @@ export function useFluidStudy(
     curves,
     /** why a fluid without a composition has no curve; `null` when it has one, or has nothing to begin with */
     noCurveReason: screening.reason,
+    /** what to know about the curve of a fluid without a composition */
+    screeningWarnings: screening.warnings,
     problems,
   };
 }
