@@ -1,10 +1,12 @@
 import { readComposition } from "@/analytics/composition/read-sheet";
+import { isAdjusted } from "@/analytics/equation-of-state/characterisation-schema";
 import type { SampleStudy } from "@/analytics/fluid/sample-study-schema";
 import { InvalidInputError, refuseImpossible, type InputProblem } from "./errors";
 
 /**
- * Refuse a study whose parts cannot belong together, or a composition that no fluid can have. What a depletion table says about itself is judged by its checks,
- * not here: a flawed table is kept as the laboratory wrote it, with its findings beside it.
+ * A study whose parts cannot belong together, or a composition that no fluid can have, is refused. What a depletion
+ * table says about itself is judged by its checks, not here: a flawed table is kept as the laboratory wrote it, with its
+ * findings beside it.
  *
  * @throws {InvalidInputError} with pointers under `#/study`
  */
@@ -20,6 +22,12 @@ export function assertPossibleStudy(study: SampleStudy): void {
     problems.push({
       pointer: "#/study/tuning",
       detail: "needs the characterisation that was tuned",
+    });
+  }
+  if (study.tuning === null && study.characterisation && isAdjusted(study.characterisation)) {
+    problems.push({
+      pointer: "#/study/tuning",
+      detail: "needs to say what the adjustments of the characterisation were fitted to",
     });
   }
   if (study.separatorTestOrigin === "computed" && study.composition === null) {

@@ -50,6 +50,6 @@ export const characterisationSchema = z
   .strict();
 export type Characterisation = z.infer<typeof characterisationSchema>;
 
-/** Whether anything was moved to meet a laboratory's figures. */
-export const isTuned = ({ adjustments }: Pick<Characterisation, "adjustments">): boolean =>
+/** Whether anything was moved. Whether that makes it tuned is for `tuningStanding` to say. */
+export const isAdjusted = ({ adjustments }: Pick<Characterisation, "adjustments">): boolean =>
   tunableNames.some((name) => adjustments[name] !== 1);

@@ -1,6 +1,7 @@
 import { z } from "zod";
 import { compositionSheetSchema, separatorStagesSchema } from "../composition/composition-schema";
 import { depletionTableSchema } from "../depletion/depletion-table-schema";
+import { tuningRecordSchema } from "../depletion/tuning-record";
 import { characterisationSchema } from "../equation-of-state/characterisation-schema";
 
 /** What a fluid sample keeps besides its separator test: the rest of the laboratory's study, and what was made of it. */
@@ -13,14 +14,7 @@ export const sampleStudySchema = z
     /** the equation of state's set-up; null while nobody has accepted one */
     characterisation: characterisationSchema.nullable(),
     /** what the accepted adjustments were fitted to and by how much they missed; null for an untuned one */
-    tuning: z
-      .object({
-        measuredDewPointPsia: z.number(),
-        fittedDewPointPsia: z.number(),
-        averageLiquidErrorPoints: z.number().nullable(),
-      })
-      .strict()
-      .nullable(),
+    tuning: tuningRecordSchema.nullable(),
     /** `computed`: the separator sheet was worked out from the composition, not measured */
     separatorTestOrigin: z.enum(["measured", "computed"]),
   })

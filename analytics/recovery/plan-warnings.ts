@@ -3,7 +3,7 @@ import type { CompiledDistribution } from "../uncertainty/distribution";
 import type { Warning } from "../warnings";
 import { planPaths, type CompiledPlan } from "./compile-plan";
 import { planRanges } from "./plan-ranges";
-import type { RecoveryRoute } from "./recovery-curve-schema";
+import type { RecoveryCurve, RecoveryRoute } from "./recovery-curve-schema";
 import type { Cycling } from "./recovery-plan-schema";
 
 /** What a plan is judged against: the estimate it belongs to. */
@@ -36,6 +36,7 @@ const RARE = 0.01;
 export function planWarnings(compiled: CompiledPlan, around: PlanSurroundings): Warning[] {
   return [
     ...routeWarnings(compiled.plan.curve.route),
+    ...doubtWarnings(compiled.plan.curve),
     ...inputWarnings(compiled),
     ...curveWarnings(compiled, around),
     ...saturatedWarnings(compiled, around),
@@ -70,6 +71,18 @@ function routeWarnings(route: RecoveryRoute): Warning[] {
     default:
       return [];
   }
+}
+
+/** What spoke against the curve when it was worked out is not lost with the table that stays behind. */
+function doubtWarnings({ doubts = [] }: RecoveryCurve): Warning[] {
+  if (doubts.length === 0) return [];
+  return [
+    warn(
+      "doubtful_curve",
+      "curve.doubts",
+      `The depletion behind the recovery does not hold together. ${doubts.join(" ")}`,
+    ),
+  ];
 }
 
 function inputWarnings({ plan, inputNames, distributions }: CompiledPlan): Warning[] {

@@ -56,6 +56,8 @@ export const recoveryCurveSchema = z
     temperatureDegF: z.number(),
     dewPointPsia: z.number().positive(),
     points: z.array(recoveryPointSchema).min(2).max(60),
+    /** what speaks against it, a sentence each: checks that its table failed. Absent where nothing does. */
+    doubts: z.array(z.string().max(1000)).max(20).optional(),
   })
   .strict();
 export type RecoveryCurve = z.infer<typeof recoveryCurveSchema>;

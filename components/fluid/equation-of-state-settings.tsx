@@ -1,11 +1,11 @@
 "use client";
 
 import {
+  isAdjusted,
   untouched,
   type Characterisation,
 } from "@/analytics/equation-of-state/characterisation-schema";
 import { Segmented, Select } from "@/components/ui/choice";
-import { isTuned } from "./sample-text";
 
 const splits = [
   { value: "1", label: "Kept whole" },
@@ -85,7 +85,7 @@ export function EquationOfStateSettings({
           onChange={(next) => onChange({ ...value, criticals: next, adjustments: untouched })}
         />
       </div>
-      {isTuned(value) && (
+      {isAdjusted(value) && (
         <p className="basis-full text-12 text-ink-soft">Another choice takes the tuning back.</p>
       )}
     </div>

@@ -58,9 +58,6 @@ export const usualCharacterisation: Characterisation = {
   adjustments: untouched,
 };
 
-export const isTuned = ({ adjustments }: Characterisation): boolean =>
-  Object.values(adjustments).some((factor) => factor !== 1);
-
 export interface StoredSample {
   name: string;
   sampledOn: string;

@@ -47,7 +47,10 @@ const ends: Record<NearWellField, readonly [number, number]> = {
 /** What the fields read as, and the question they make; `null` while one is missing or cannot be. */
 export function readNearWell(text: NearWellText): {
   fields: Record<NearWellField, FieldReading>;
-  asked: Omit<NearWellRequest, "sheet" | "characterisation" | "temperatureDegF"> | null;
+  asked: Pick<
+    NearWellRequest,
+    "reservoirPressurePsia" | "flowingPressurePsia" | "relativePermeability"
+  > | null;
 } {
   const fields = Object.fromEntries(
     nearWellFields.map((name) => [name, readOne(name, text[name])]),

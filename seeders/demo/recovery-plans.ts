@@ -1,5 +1,6 @@
 import type { CompositionSheet, SeparatorStage } from "@/analytics/composition/composition-schema";
 import type { DepletionTable } from "@/analytics/depletion/depletion-table-schema";
+import { tuningKey } from "@/analytics/depletion/tuning-record";
 import {
   untouched,
   type Characterisation,
@@ -166,6 +167,11 @@ export function studyOf(demo: DemoReservoir, test: SeparatorTest): SampleStudy {
         measuredDewPointPsia: table.dewPointPsia,
         fittedDewPointPsia: tuned.fittedDewPointPsia,
         averageLiquidErrorPoints: tuned.averageLiquidErrorPoints,
+        fittedTo: tuningKey({
+          sheet: composition,
+          characterisation: characterisationOf(study),
+          table,
+        }),
       },
     separatorTestOrigin: "measured",
   };
@@ -197,7 +203,7 @@ export async function recoveryOf(
   const curve =
     plan.route === "laboratory" && study.table
       ? await laboratoryCurve({ ...question, table: study.table })
-      : await simulatedCurve(question, demo);
+      : await simulatedCurve(question, demo, studyOf(demo, test));
   if (!curve) throw new Error(`the demo's study of ${keyOf(demo)} carries no recovery curve`);
   return { plan, curve };
 }
@@ -215,12 +221,18 @@ async function laboratoryCurve(question: Question & { table: DepletionTable }) {
 const temperatureOf = ({ temperatureDegF: [low, high] }: DemoReservoir) =>
   Math.round((low + high) / 2);
 
-async function simulatedCurve(question: Question, demo: DemoReservoir) {
+async function simulatedCurve(
+  question: Question,
+  demo: DemoReservoir,
+  { tuning, depletion }: SampleStudy,
+) {
   const { curve } = await calculateOnFluid("equationOfState", {
     ...question,
     temperatureDegF: temperatureOf(demo),
     measuredDewPointPsia: demo.fluid.dewPointPsia,
     depletionPressuresPsia: null,
+    tuning,
+    table: depletion,
   });
   return curve;
 }

@@ -3,8 +3,9 @@ import { readComposition } from "@/analytics/composition/read-sheet";
 import { cellRows } from "@/analytics/depletion/cell-rows";
 import { hoffmannLines, placedStates } from "@/analytics/depletion/check-balance";
 import { checkTable } from "@/analytics/depletion/check-table";
-import { recoveryCurveOfTable } from "@/analytics/depletion/curve-from-table";
+import { recoveryCurveOfTable, type TableRecovery } from "@/analytics/depletion/curve-from-table";
 import type { DepletionRow, DepletionTable } from "@/analytics/depletion/depletion-table-schema";
+import type { Finding } from "@/analytics/depletion/finding-schema";
 import { reportedHeptanesPlusMolePercent } from "@/analytics/depletion/lumped-gas";
 import { twoPhaseZFromMoles } from "@/analytics/depletion/two-phase-z";
 import { DomainError, underPath } from "@/analytics/errors";
@@ -63,9 +64,30 @@ export function describeDepletion({ sheet, table, stages, characterisation }: De
       intercept: line.intercept,
       rSquared: line.rSquared,
     })),
-    curve: recovery.curve,
+    curve: recovery.curve && {
+      ...recovery.curve,
+      ...doubtsOf([...findings, ...recovery.findings], recovery.method),
+    },
+    /** how the streams were separated at the surface */
+    method: recovery.method,
     warnings: warningsUnder("sheet", warnings),
   };
+}
+
+/** What a curve carries with it wherever it is copied to: failed checks, each once, and a flash that was given up. */
+function doubtsOf(findings: readonly Finding[], method: TableRecovery["method"]) {
+  const failed = findings.filter(({ severity }) => severity === "failed");
+  const doubts = failed.flatMap(({ code, title, message }, index) => {
+    if (failed.findIndex((other) => other.code === code) < index) return [];
+    const more = failed.filter((other) => other.code === code).length - 1;
+    return `Check “${title}” fails. ${message}${more === 0 ? "" : ` And ${more} more of the kind.`}`;
+  });
+  if (method === "kValues") {
+    doubts.push(
+      "The produced gas was separated by Standing’s K values: the equation of state gave no answer.",
+    );
+  }
+  return doubts.length === 0 ? {} : { doubts };
 }
 
 /** From the moles left in the cell; null in a row whose figures cannot carry one, which its findings say. */

@@ -2,12 +2,15 @@ import type { CompositionSheet, SeparatorStage } from "@/analytics/composition/c
 import type { Stream } from "@/analytics/composition/stream";
 import { recoveryCurveOfSimulation } from "@/analytics/depletion/recovery-curve";
 import { depleteCell, tableOfSimulation } from "@/analytics/depletion/simulate-depletion";
+import type { DepletionTable } from "@/analytics/depletion/depletion-table-schema";
+import {
+  tuningStanding,
+  type TuningRecord,
+  type TuningStanding,
+} from "@/analytics/depletion/tuning-record";
 import { ConvergenceError } from "@/analytics/errors";
 import { namedComponents } from "@/analytics/equation-of-state/characterise";
-import {
-  isTuned,
-  type Characterisation,
-} from "@/analytics/equation-of-state/characterisation-schema";
+import type { Characterisation } from "@/analytics/equation-of-state/characterisation-schema";
 import { phaseEnvelope, type PhaseEnvelope } from "@/analytics/equation-of-state/envelope";
 import type { Characterised } from "@/analytics/equation-of-state/mixture";
 import {
@@ -30,6 +33,9 @@ export interface EquationOfStateQuestion {
   stages: SeparatorStage[];
   /** null chooses steps from the dew point down */
   depletionPressuresPsia: number[] | null;
+  /** what the adjustments come from, with the table that they were fitted to; null leaves the fluid untuned */
+  tuning: TuningRecord | null;
+  table: DepletionTable | null;
 }
 
 /** Shares of liquid by volume for which the diagram has lines. */
@@ -50,7 +56,8 @@ export function describePhases(question: EquationOfStateQuestion) {
   const { upper, lower } = saturation;
   const train = flashTrain(mixture, moleFractions, stages);
   const traced = envelopeOf(characterised);
-  const simulated = depletionOf(question, characterised, saturation);
+  const standing = standingOf(question, saturation);
+  const simulated = depletionOf(question, characterised, saturation, standing);
   return {
     components: mixture.names.map((name, index) => ({
       name,
@@ -60,7 +67,7 @@ export function describePhases(question: EquationOfStateQuestion) {
       criticalPressurePsia: mixture.criticalPressurePsia[index],
       acentricFactor: mixture.acentricFactor[index],
     })),
-    isTuned: isTuned(characterisation),
+    isTuned: standing.isTuned,
     saturation: {
       upperPsia: upper?.pressurePsia ?? null,
       kind: upper?.kind ?? ("none" as const),
@@ -75,7 +82,7 @@ export function describePhases(question: EquationOfStateQuestion) {
     curve: simulated.curve,
     warnings: [
       ...warnings,
-      ...saturationWarnings(question, saturation),
+      ...saturationWarnings(question, saturation, standing),
       ...found.warnings,
       ...traced.warnings,
       ...simulated.warnings,
@@ -110,6 +117,16 @@ function saturationOf(
       ],
     };
   }
+}
+
+/** The dew point is held against the measured one at the temperature of the table only. */
+function standingOf(
+  { sheet, characterisation, table, tuning, temperatureDegF }: EquationOfStateQuestion,
+  { upper }: SaturationPressures,
+): TuningStanding {
+  const isThere = table !== null && Math.abs(table.temperatureDegF - temperatureDegF) < 0.5;
+  const dewPoint = isThere ? (upper?.pressurePsia ?? 0) : null;
+  return tuningStanding({ sheet, characterisation, table }, tuning, dewPoint);
 }
 
 /** The diagram is drawn beside the figures; what of it cannot be traced is left out, and said. */
@@ -150,15 +167,16 @@ const presentEnvelope = ({ bubble, dew, quality, ...extremes }: PhaseEnvelope) =
 
 /** A depletion begins at a dew point; a fluid without one has no depletion, which the warnings say. */
 function depletionOf(
-  { characterisation, temperatureDegF, stages, depletionPressuresPsia }: EquationOfStateQuestion,
+  { temperatureDegF, stages, depletionPressuresPsia }: EquationOfStateQuestion,
   characterised: Characterised,
   { upper }: SaturationPressures,
+  { isTuned }: TuningStanding,
 ) {
   const none = { depletion: null, curve: null };
   if (upper?.kind !== "dewPoint") return { ...none, warnings: [] };
   try {
     const cell = depleteCell(characterised, temperatureDegF, depletionPressuresPsia);
-    const route = isTuned(characterisation) ? "tunedEquationOfState" : "untunedEquationOfState";
+    const route = isTuned ? "tunedEquationOfState" : "untunedEquationOfState";
     return {
       depletion: tableOfSimulation(characterised, cell),
       curve: recoveryCurveOfSimulation(characterised, cell, stages, route),
@@ -187,8 +205,9 @@ const notConverged = (code: string, input: string, message: string): Warning => 
 });
 
 function saturationWarnings(
-  { temperatureDegF, measuredDewPointPsia, characterisation }: EquationOfStateQuestion,
+  { temperatureDegF, measuredDewPointPsia }: EquationOfStateQuestion,
   { upper }: SaturationPressures,
+  { isTuned, doubt }: TuningStanding,
 ): Warning[] {
   const at = { severity: "warning" as const, input: "temperatureDegF" };
   if (!upper) {
@@ -209,16 +228,18 @@ function saturationWarnings(
       },
     ];
   }
-  if (isTuned(characterisation)) return [];
+  if (isTuned) return [];
   return [
     {
       code: "untuned_equation_of_state",
       severity: "warning",
       input: "characterisation.adjustments",
       message:
-        measuredDewPointPsia === null
-          ? "The equation of state is not tuned, and no measured dew point stands beside its own. Dropout and recovery from it are an indication."
-          : `The equation of state is not tuned: its dew point is ${Math.round(Math.abs(upper.pressurePsia - measuredDewPointPsia))} psi ${upper.pressurePsia < measuredDewPointPsia ? "below" : "above"} the measured one. Dropout and recovery from it are an indication.`,
+        doubt !== null
+          ? `The equation of state does not count as tuned. ${doubt} Dropout and recovery from it are an indication.`
+          : measuredDewPointPsia === null
+            ? "The equation of state is not tuned, and no measured dew point stands beside its own. Dropout and recovery from it are an indication."
+            : `The equation of state is not tuned: its dew point is ${Math.round(Math.abs(upper.pressurePsia - measuredDewPointPsia))} psi ${upper.pressurePsia < measuredDewPointPsia ? "below" : "above"} the measured one. Dropout and recovery from it are an indication.`,
     },
   ];
 }

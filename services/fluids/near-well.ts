@@ -1,6 +1,7 @@
 import type { CompositionSheet } from "@/analytics/composition/composition-schema";
+import type { DepletionTable } from "@/analytics/depletion/depletion-table-schema";
+import { tuningStanding, type TuningRecord } from "@/analytics/depletion/tuning-record";
 import {
-  isTuned,
   untouched,
   type Characterisation,
 } from "@/analytics/equation-of-state/characterisation-schema";
@@ -12,6 +13,9 @@ import { characteriseSheet } from "./characterised-sheet";
 export interface NearWellQuestion extends NearWellConditions {
   sheet: CompositionSheet;
   characterisation: Characterisation;
+  /** what the adjustments come from, with the table that they were fitted to; null leaves the fluid untuned */
+  tuning: TuningRecord | null;
+  table: DepletionTable | null;
 }
 
 const UNTUNED: Warning = {
@@ -29,7 +33,14 @@ const UNTUNED: Warning = {
  * @throws {DomainError} with a path into the question
  * @throws {ConvergenceError}
  */
-export function describeNearWell({ sheet, characterisation, ...conditions }: NearWellQuestion) {
+export function describeNearWell({
+  sheet,
+  characterisation,
+  tuning,
+  table,
+  ...conditions
+}: NearWellQuestion) {
+  const { isTuned } = tuningStanding({ sheet, characterisation, table }, tuning);
   const { stream, characterised, warnings } = characteriseSheet(sheet, characterisation);
   const before = characterise(stream, { ...characterisation, adjustments: untouched });
   const { productivityRatio, points, ...well } = nearWell(
@@ -40,6 +51,6 @@ export function describeNearWell({ sheet, characterisation, ...conditions }: Nea
   return {
     productivityRatio,
     points,
-    warnings: [...(isTuned(characterisation) ? [] : [UNTUNED]), ...warnings, ...well.warnings],
+    warnings: [...(isTuned ? [] : [UNTUNED]), ...warnings, ...well.warnings],
   };
 }

@@ -2,6 +2,7 @@ import type { CompositionSheet } from "@/analytics/composition/composition-schem
 import { readComposition } from "@/analytics/composition/read-sheet";
 import type { DepletionTable } from "@/analytics/depletion/depletion-table-schema";
 import { tune, type Fit } from "@/analytics/depletion/tune";
+import { tuningKey } from "@/analytics/depletion/tuning-record";
 import { underPath } from "@/analytics/errors";
 import type {
   Characterisation,
@@ -26,8 +27,15 @@ export interface TuningQuestion {
 export function proposeTuning({ sheet, ...problem }: TuningQuestion) {
   const { stream, warnings } = underPath("sheet", () => readComposition(sheet));
   const { before, after, changes, ...proposal } = tune({ ...problem, stream });
+  const { characterisation } = proposal;
   return {
-    characterisation: proposal.characterisation,
+    characterisation,
+    record: {
+      measuredDewPointPsia: problem.table.dewPointPsia,
+      fittedDewPointPsia: after.dewPointPsia,
+      averageLiquidErrorPoints: after.averageLiquidErrorPoints,
+      fittedTo: tuningKey({ sheet, characterisation, table: problem.table }),
+    },
     before: plainFit(before),
     after: plainFit(after),
     changes: [...changes],

@@ -211,6 +211,46 @@ describe("POST /api/v1/calculations/tuning", () => {
     });
   });
 
+  it("counts as tuned with its record and the table it was fitted to, and else not", async () => {
+    const { record, ...tuned } = await ask<TuningResponse>("tuning", {
+      sheet,
+      table,
+      characterisation,
+      tunables: ["heavyCriticalTemperatureFactor", "heavyAcentricFactorFactor"],
+    });
+    const question = {
+      ...fluid,
+      characterisation: tuned.characterisation,
+      temperatureDegF: table.temperatureDegF,
+      measuredDewPointPsia: table.dewPointPsia,
+    };
+    const standing = async (more: object) => {
+      const { isTuned, curve, warnings } = await ask<EquationOfStateResponse>("equation-of-state", {
+        ...question,
+        ...more,
+      });
+      const said = warnings.find(({ code }) => code === "untuned_equation_of_state");
+      return [isTuned, curve?.route, said?.message.slice(0, 50)];
+    };
+    expect(await standing({ tuning: record, table })).toEqual([
+      true,
+      "tunedEquationOfState",
+      undefined,
+    ]);
+    const untuned = [
+      false,
+      "untunedEquationOfState",
+      "The equation of state does not count as tuned. Adj",
+    ];
+    expect(await standing({})).toEqual(untuned);
+    const [first, ...rest] = table.rows;
+    const edited = { ...table, rows: [{ ...first, gasZ: 0.999 }, ...rest] };
+    expect(await standing({ tuning: record, table: edited })).toEqual([
+      ...untuned.slice(0, 2),
+      "The equation of state does not count as tuned. Com",
+    ]);
+  });
+
   it("refuses a table with nothing below its dew point, at its field", async () => {
     const rows = [table.rows[0], { ...table.rows[0], pressurePsia: 4500 }];
     const problem = await refused("tuning", {

@@ -135,6 +135,21 @@ describe("fluid samples with a study", () => {
     ]);
   });
 
+  it("refuse adjustments that nothing was fitted with", async () => {
+    const engineer = await as("engineer");
+    const sample = await buildFluidSample((await buildReservoir()).id);
+    const adjustments = {
+      ...untunedCharacterisation.adjustments,
+      heavyCriticalTemperatureFactor: 1.000001,
+    };
+    const answer = await engineer.patch<Problem>(
+      pathOf(sample),
+      { study: { ...study, characterisation: { ...untunedCharacterisation, adjustments } } },
+      ifMatch(sample),
+    );
+    expect(answer.body.errors?.map(({ pointer }) => pointer)).toEqual(["#/study/tuning"]);
+  });
+
   it("say that a computed separator sheet is measured once it is typed over", async () => {
     const engineer = await as("engineer");
     const sample = await buildFluidSample((await buildReservoir()).id);

@@ -35,6 +35,8 @@ describe("calculateOnFluid(name, question)", { timeout: 60_000 }, () => {
       temperatureDegF: 220,
       measuredDewPointPsia: null,
       depletionPressuresPsia: null,
+      tuning: null,
+      table: null,
     }).catch((error: unknown) => error);
     expect(failure).toBeInstanceOf(InvalidInputError);
     expect((failure as InvalidInputError).problems[0].pointer).toBe(

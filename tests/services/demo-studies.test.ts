@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { readComposition } from "@/analytics/composition/read-sheet";
 import { checkTable } from "@/analytics/depletion/check-table";
+import { tuningStanding } from "@/analytics/depletion/tuning-record";
 import { characterise } from "@/analytics/equation-of-state/characterise";
 import { saturationPressures } from "@/analytics/equation-of-state/saturation";
 import { sampleStudySchema } from "@/analytics/fluid/sample-study-schema";
@@ -60,8 +61,12 @@ describe("studies of the demo", () => {
   });
 
   it.each(studies.filter(({ study }) => study.tuning))(
-    "$name keeps a tuning that meets its dew point",
+    "$name keeps a tuning that counts as one and meets its dew point",
     ({ study, stream, characterisation }) => {
+      const sheet = study.composition;
+      if (!sheet) throw new Error("a tuned study without a composition");
+      const fluid = { sheet, characterisation, table: study.depletion };
+      expect(tuningStanding(fluid, study.tuning)).toEqual({ isTuned: true, doubt: null });
       const { mixture, moleFractions } = characterise(stream, characterisation);
       const temperature = degreesRankine(study.depletion?.temperatureDegF ?? 0);
       const { upper } = saturationPressures(mixture, moleFractions, temperature);

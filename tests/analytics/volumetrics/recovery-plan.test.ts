@@ -316,6 +316,13 @@ describe("simulate with a recovery plan", () => {
     ["untuned_recovery", withRoute("untunedEquationOfState")],
     ["correlation_recovery", withRoute("correlation")],
     [
+      "doubtful_curve",
+      reservoir({
+        ...spread,
+        curve: { ...spread.curve, doubts: ["Components balance: propane is created."] },
+      }),
+    ],
+    [
       "saturated_trials",
       reservoir(spread, { pressurePsia: { kind: "uniform", low: 3000, high: 4000 } }),
     ],

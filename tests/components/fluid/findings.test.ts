@@ -86,6 +86,7 @@ describe("sampleFindings(evidence)", () => {
       measuredDewPointPsia: 5100,
       fittedDewPointPsia: 5101,
       averageLiquidErrorPoints: null,
+      fittedTo: null,
     };
     expect(titles({ tuning, dewPoints: { test: null, table: 5215 } })).toEqual([
       "Tuned to another dew point",
@@ -115,6 +116,7 @@ describe("sampleFindings(evidence)", () => {
       rows: [],
       hoffmann: [],
       curve: null,
+      method: "kValues",
       warnings: [],
     };
     expect(sampleFindings({ ...nothing, depletion })).toEqual([

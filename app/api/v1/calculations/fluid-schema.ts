@@ -4,6 +4,8 @@ import {
   separatorStagesSchema,
 } from "@/analytics/composition/composition-schema";
 import { depletionTableSchema } from "@/analytics/depletion/depletion-table-schema";
+import { findingSchema } from "@/analytics/depletion/finding-schema";
+import { tuningRecordSchema } from "@/analytics/depletion/tuning-record";
 import {
   characterisationSchema,
   tunableNameSchema,
@@ -101,6 +103,12 @@ export const compositionResponseSchema = z.object({
 });
 export type CompositionResponse = z.infer<typeof compositionResponseSchema>;
 
+/** The `record` of a tuning and the table it was fitted to: without them, adjustments do not count as tuned. */
+const tunedBy = {
+  tuning: tuningRecordSchema.nullable().default(null),
+  table: depletionTableSchema.nullable().default(null),
+};
+
 // equation of state: phase behaviour, separators and simulated depletion of a characterised fluid
 
 export const equationOfStateRequestSchema = z
@@ -112,6 +120,7 @@ export const equationOfStateRequestSchema = z
     stages: separatorStagesSchema,
     /** steps of the simulated depletion; null chooses ten from the dew point down */
     depletionPressuresPsia: z.array(z.number().positive()).max(40).nullable().default(null),
+    ...tunedBy,
   })
   .strict();
 export type EquationOfStateRequest = z.infer<typeof equationOfStateRequestSchema>;
@@ -214,19 +223,7 @@ export const depletionRequestSchema = z
 export type DepletionRequest = z.infer<typeof depletionRequestSchema>;
 
 export const depletionResponseSchema = z.object({
-  findings: z.array(
-    z.object({
-      code: z.string(),
-      severity: z.enum(["passed", "warning", "failed"]),
-      title: z.string(),
-      /** in words, with figures */
-      message: z.string(),
-      /** 0-based row of the table, null when it is about the whole */
-      row: z.number().int().nullable(),
-      /** column it is about, as named in the table, or null */
-      column: z.string().nullable(),
-    }),
-  ),
+  findings: z.array(findingSchema),
   rows: z.array(
     z.object({
       pressurePsia: z.number(),
@@ -259,8 +256,10 @@ export const depletionResponseSchema = z.object({
       rSquared: z.number(),
     }),
   ),
-  /** null when the table cannot carry one; the findings say why */
+  /** null when the table cannot carry one; the findings say why. Checks that failed are its `doubts` */
   curve: recoveryCurveSchema.nullable(),
+  /** how the streams were separated: by the equation of state, or by Standing's K values where that gave no answer */
+  method: z.enum(["equationOfState", "kValues"]),
   warnings: z.array(warningSchema),
 });
 export type DepletionResponse = z.infer<typeof depletionResponseSchema>;
@@ -294,6 +293,8 @@ const fitSchema = z.object({
 
 export const tuningResponseSchema = z.object({
   characterisation: characterisationSchema,
+  /** to keep with the characterisation: what it was fitted to and by how much it misses */
+  record: tuningRecordSchema,
   before: fitSchema,
   after: fitSchema,
   changes: z.array(
@@ -378,6 +379,7 @@ export const nearWellRequestSchema = z
         residualGasSaturation: z.number().min(0).max(0.5),
       })
       .strict(),
+    ...tunedBy,
   })
   .strict();
 export type NearWellRequest = z.infer<typeof nearWellRequestSchema>;

@@ -1,8 +1,6 @@
 "use client";
 
 import { useState, type ReactNode } from "react";
-import type { CompositionSheet } from "@/analytics/composition/composition-schema";
-import type { Characterisation } from "@/analytics/equation-of-state/characterisation-schema";
 import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import {
   producingConcepts,
@@ -40,14 +38,14 @@ import { Columns, Section, Stack } from "@/components/ui/section";
 import { Notice, Skeleton } from "@/components/ui/status";
 import { useReservoir } from "../_editor/reservoir-context";
 import { useConcepts } from "../_queries/recovery";
-import { NearWellSection } from "./near-well-section";
+import { NearWellSection, type NearWellSectionProps } from "./near-well-section";
 import { UsePlanDialog } from "./use-plan-dialog";
 
 export interface ConceptComparisonProps {
   /** depletion curves of the sample, most trusted first, as `availableCurves` gives them; may be empty */
   curves: readonly AvailableCurve[];
   /** what the estimate of the near-well loss flashes; `null` without a composition */
-  fluid: { sheet: CompositionSheet; characterisation: Characterisation } | null;
+  fluid: NearWellSectionProps["fluid"] | null;
   /** named in the sources of a plan that is put into the draft; `null` for a sample that was not saved */
   sampleName: string | null;
   /** the curve that the page's figures stand on; absent: the most trusted */

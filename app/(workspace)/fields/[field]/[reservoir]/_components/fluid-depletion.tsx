@@ -39,6 +39,8 @@ export function FluidDepletion(props: DepletionProps) {
             study.sheet && {
               sheet: study.sheet,
               characterisation: props.draft.reading.characterisation,
+              tuning: props.draft.text.tuning,
+              table: study.table,
             }
           }
           sampleName={props.sampleName}

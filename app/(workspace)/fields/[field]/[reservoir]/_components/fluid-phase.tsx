@@ -1,8 +1,9 @@
 "use client";
 
+import { tuningStanding } from "@/analytics/depletion/tuning-record";
+import { isAdjusted } from "@/analytics/equation-of-state/characterisation-schema";
 import { EquationOfStateSettings } from "@/components/fluid/equation-of-state-settings";
 import { PhaseEnvelope } from "@/components/fluid/phase-envelope";
-import { isTuned } from "@/components/fluid/sample-text";
 import { StagesSheet } from "@/components/fluid/stages-sheet";
 import { Button } from "@/components/ui/button";
 import { formatFigure } from "@/components/ui/format";
@@ -59,7 +60,9 @@ function missingWords({ draft, study }: FluidPartProps): string {
 function EquationOfStateSection({ draft, study, mayType, remarks }: FluidPartProps) {
   const { text, reading } = draft;
   const { characterisation } = reading;
-  const tuned = isTuned(characterisation);
+  const { isTuned: tuned, doubt } = study.sheet
+    ? tuningStanding({ sheet: study.sheet, characterisation, table: study.table }, text.tuning)
+    : { isTuned: false, doubt: null };
   return (
     <Section
       level={3}
@@ -67,7 +70,8 @@ function EquationOfStateSection({ draft, study, mayType, remarks }: FluidPartPro
       note={
         text.tuning && tuned
           ? `Fitted to a dew point of ${formatFigure(text.tuning.measuredDewPointPsia, { digits: 4 })} psia: gives ${formatFigure(text.tuning.fittedDewPointPsia, { digits: 4 })}${text.tuning.averageLiquidErrorPoints === null ? "" : `, dropout within ${formatFigure(text.tuning.averageLiquidErrorPoints, { digits: 2 })} points on average`}.`
-          : "How the heavy end is described, and the separators that streams are flashed through."
+          : (doubt ??
+            "How the heavy end is described, and the separators that streams are flashed through.")
       }
     >
       <div className="grid grid-cols-1 gap-4">
@@ -80,7 +84,7 @@ function EquationOfStateSection({ draft, study, mayType, remarks }: FluidPartPro
         {mayType && (
           <div className="flex flex-wrap items-center gap-2">
             <FluidTuning draft={draft} study={study} />
-            {tuned && (
+            {isAdjusted(characterisation) && (
               <Button
                 size="small"
                 onClick={() => draft.change({ characterisation: null, tuning: null })}

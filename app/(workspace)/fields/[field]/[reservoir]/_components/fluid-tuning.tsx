@@ -61,14 +61,7 @@ export function FluidTuning({ draft, study }: { draft: SampleDraft; study: Fluid
         onAccept={(result) => {
           draft.change({
             characterisation: result.characterisation,
-            tuning:
-              result.after.dewPointPsia === null
-                ? null
-                : {
-                    measuredDewPointPsia: table.dewPointPsia,
-                    fittedDewPointPsia: result.after.dewPointPsia,
-                    averageLiquidErrorPoints: result.after.averageLiquidErrorPoints,
-                  },
+            tuning: result.record,
           });
           setOpen(false);
           toast({

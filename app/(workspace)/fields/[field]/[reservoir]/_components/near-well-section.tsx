@@ -1,14 +1,14 @@
 "use client";
 
 import { useState } from "react";
-import type { CompositionSheet } from "@/analytics/composition/composition-schema";
-import type { Characterisation } from "@/analytics/equation-of-state/characterisation-schema";
 import { errorWords } from "@/app/_client/request";
+import type { NearWellRequest } from "@/app/api/v1/calculations/fluid-schema";
 import {
   nearWellFields,
   readNearWell,
   startingNearWell,
   type NearWellField,
+  type NearWellQuestion,
 } from "@/components/recovery/near-well-text";
 import { Disclosure } from "@/components/ui/dialog";
 import { NumberField } from "@/components/ui/field";
@@ -28,8 +28,14 @@ const about: Record<NearWellField, { label: string; unit?: string; hint?: string
   residualGasSaturation: { label: "Residual gas", hint: "fraction" },
 };
 
+/** The composition with the equation of state it is flashed by. */
+export type NearWellFluid = Omit<
+  z.input<typeof nearWellRequestSchema>,
+  keyof NearWellQuestion | "temperatureDegF"
+>;
+
 export interface NearWellSectionProps {
-  fluid: { sheet: CompositionSheet; characterisation: Characterisation };
+  fluid: Pick<NearWellRequest, "sheet" | "characterisation" | "tuning" | "table">;
   temperatureDegF: number;
   dewPointPsia: number;
   /** P50 of the estimate */

@@ -48,6 +48,8 @@ export function useFluidStudy(
           measuredDewPointPsia,
           stages,
           depletionPressuresPsia: null,
+          tuning: text.tuning,
+          table: text.tuning && table,
         }
       : null,
   );
