@@ -17,6 +17,7 @@ import { FindingList } from "@/components/estimate/finding-list";
 import { Section } from "@/components/ui/section";
 import { Notice, Skeleton } from "@/components/ui/status";
 import { FigureCell, LedgerTable } from "@/components/ui/table";
+import { Flag } from "@/components/ui/text";
 import { useNearWell } from "../_queries/recovery";
 
 const about: Record<NearWellField, { label: string; unit?: string; hint?: string }> = {
@@ -91,9 +92,14 @@ function NearWell({ fluid, temperatureDegF, dewPointPsia, initialPsia }: NearWel
       {!result && query.isFetching && <Skeleton lines={4} label="Integrating the pseudopressure" />}
       {result && (
         <div className="grid gap-3" data-stale={query.isPlaceholderData || undefined}>
-          <h4 className="font-semibold">
-            About {formatPercent(result.productivityRatio)} of the rate without liquid is left at
-            this drawdown
+          <h4 className="flex flex-wrap items-center gap-2 font-semibold">
+            <span>
+              About {formatPercent(result.productivityRatio)} of the rate without liquid is left at
+              this drawdown
+            </span>
+            {result.warnings.some(({ code }) => code === "untuned_equation_of_state") && (
+              <Flag>Untuned equation of state</Flag>
+            )}
           </h4>
           <LedgerTable caption="Along the drawdown" maxHeight="320px">
             <thead>

@@ -49,7 +49,7 @@ function Balance({ study, curve, reservoir, place }: Props) {
   const [text, setText] = useState(() => readRecordsBackup(page.id));
   const reading = readRecords(text);
   const temperatureDegF = reservoir?.temperatureDegF ?? study.temperatureDegF;
-  // A curve by correlation holds the gas's own z, and ends where no history needs to.
+  // A curve by correlation measures nothing, and pressures are not judged by it.
   const twoPhase = curve && curve.route !== "correlation" ? curve : null;
   const missing = missingOf(reading, study.test === null, temperatureDegF === null);
   // Without it the first line would be one by the gas's own z, which then moves.
