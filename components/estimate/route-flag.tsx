@@ -1,11 +1,11 @@
 import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import { routeWords } from "@/components/fluid/available-curves";
-import { Flag } from "@/components/ui/text";
+import { Flag, VisuallyHidden } from "@/components/ui/text";
 import { routeMark } from "./plan-words";
 
 const shortMarks: Partial<Record<RecoveryRoute, string>> = {
-  untunedEquationOfState: "Untuned recovery",
-  correlation: "Correlated recovery",
+  untunedEquationOfState: "Untuned",
+  correlation: "Correlated",
 };
 
 /** Stands wherever a recovery goes that no measured depletion stands behind; nothing for the others. */
@@ -25,6 +25,7 @@ export function RouteFlag({
       title={`Recovery ${mark}. ${routeWords[route].note}`}
     >
       {short ? shortMarks[route] : `Recovery ${mark}`}
+      {short && <VisuallyHidden> recovery</VisuallyHidden>}
     </Flag>
   );
 }

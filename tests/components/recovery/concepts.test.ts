@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { compareConcepts, type ConceptResult } from "@/analytics/recovery/compare-concepts";
+import { recoveryRoutes, type RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import { producingConcepts } from "@/analytics/recovery/recovery-plan-schema";
 import { readPlan } from "@/components/estimate/plan-reading";
 import { textOfPlan } from "@/components/estimate/plan-text";
@@ -92,10 +93,26 @@ describe("withEdit(edits, now, next)", () => {
     expect(depletion.fields.invadedFraction).toBe("0.25");
   });
 
-  it("follows another curve with what nobody has changed", () => {
+  it("leaves a curve factor behind when the curve is of another kind", () => {
+    const now = conceptText("depletion", start, noEdits);
+    const factor = { ...now.inputs.condensateCurveFactor, source: "Two samples" };
+    const inputs = { ...now.inputs, condensateCurveFactor: factor };
+    const edits = withEdit(noEdits, now, { ...now, inputs });
     const curve = { ...publishedCurve, route: "correlation" as const };
-    const { distribution } = startingPlan("depletion", { ...start, curve }).condensateCurveFactor;
-    expect(distribution).toMatchObject({ low: 0.75, high: 1.25 });
+    const other = conceptText("depletion", { ...start, curve }, edits);
+    expect(other.inputs.condensateCurveFactor.source).toMatch(/correlation curve/);
+    const back = conceptText("depletion", start, edits);
+    expect(back.inputs.condensateCurveFactor).toBe(factor);
+  });
+
+  it("starts with a wider curve factor the less is measured", () => {
+    const lowOf = (route: RecoveryRoute) => {
+      const curve = { ...publishedCurve, route };
+      const { distribution } = startingPlan("depletion", { ...start, curve }).condensateCurveFactor;
+      return distribution.kind === "pert" ? distribution.low : NaN;
+    };
+    const lows = recoveryRoutes.map(lowOf);
+    expect(lows).toEqual([...lows].sort((a, b) => b - a));
   });
 });
 
