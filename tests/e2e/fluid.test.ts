@@ -53,7 +53,7 @@ describe("a fluid sample", () => {
 
     const slider = page.getByRole("slider", { name: "Abandonment pressure" });
     await slider.waitFor();
-    await page.getByRole("heading", { name: /Liquid takes up to .* % of the pores/ }).waitFor();
+    await page.getByRole("heading", { name: /Liquid takes up to / }).waitFor();
     await page
       .getByRole("heading", { name: /Liquid starts to drop out|below the dew point/ })
       .waitFor();
