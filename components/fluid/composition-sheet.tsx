@@ -297,7 +297,7 @@ export function CompositionFacts({
   reservoir: { pressurePsia: number; temperatureDegF: number } | null;
 }) {
   const { zFactors } = computed;
-  const gas = equationOfState?.train.surfaceGas ?? null;
+  const gas = equationOfState?.train?.surfaceGas ?? null;
   const liquids = gas?.plantLiquids.reduce((sum, { gallonsPerMscf }) => sum + gallonsPerMscf, 0);
   const rows = [
     computed.heptanesPlus && {

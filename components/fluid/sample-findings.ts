@@ -137,7 +137,7 @@ function tuningAge({ tuning, dewPoints: { test, table } }: SampleEvidence): Find
 }
 
 function yields({ wellstream, equationOfState }: SampleEvidence): Finding[] {
-  if (!wellstream || !equationOfState) return [];
+  if (!wellstream || !equationOfState?.train) return [];
   const measured = wellstream.condensateYieldStbPerMmscf;
   const computed = equationOfState.train.condensateYieldStbPerMmscf;
   const apart = Math.abs(computed - measured) / measured;

@@ -8,7 +8,7 @@ import {
   type TuningRecord,
   type TuningStanding,
 } from "@/analytics/depletion/tuning-record";
-import { ConvergenceError } from "@/analytics/errors";
+import { ConvergenceError, DomainError } from "@/analytics/errors";
 import { namedComponents } from "@/analytics/equation-of-state/characterise";
 import type { Characterisation } from "@/analytics/equation-of-state/characterisation-schema";
 import { phaseEnvelope, type PhaseEnvelope } from "@/analytics/equation-of-state/envelope";
@@ -54,7 +54,7 @@ export function describePhases(question: EquationOfStateQuestion) {
   const found = saturationOf(characterised, temperatureDegF);
   const { saturation } = found;
   const { upper, lower } = saturation;
-  const train = flashTrain(mixture, moleFractions, stages);
+  const flashed = trainOf(characterised, stages);
   const traced = envelopeOf(characterised);
   const standing = standingOf(question, saturation);
   const simulated = depletionOf(question, characterised, saturation, standing);
@@ -77,13 +77,14 @@ export function describePhases(question: EquationOfStateQuestion) {
         upper && measuredDewPointPsia !== null ? upper.pressurePsia - measuredDewPointPsia : null,
     },
     envelope: traced.envelope,
-    train: presentTrain(train, stream, characterisation),
+    train: flashed.train && presentTrain(flashed.train, stream, characterisation),
     depletion: simulated.depletion,
     curve: simulated.curve,
     warnings: [
       ...warnings,
       ...saturationWarnings(question, saturation, standing),
       ...found.warnings,
+      ...flashed.warnings,
       ...traced.warnings,
       ...simulated.warnings,
     ],
@@ -127,6 +128,30 @@ function standingOf(
   const isThere = table !== null && Math.abs(table.temperatureDegF - temperatureDegF) < 0.5;
   const dewPoint = isThere ? (upper?.pressurePsia ?? 0) : null;
   return tuningStanding({ sheet, characterisation, table }, tuning, dewPoint);
+}
+
+/** A gas that leaves nothing in the tank has no yield; its diagram and its dew point stand all the same. */
+function trainOf(
+  { mixture, moleFractions }: Characterised,
+  stages: SeparatorStage[],
+): { train: SeparatorTrain | null; warnings: Warning[] } {
+  try {
+    return { train: flashTrain(mixture, moleFractions, stages), warnings: [] };
+  } catch (error) {
+    // A stage that cannot be is named itself; `stages` alone is about what comes out of them.
+    if (!(error instanceof DomainError) || error.details.input !== "stages") throw error;
+    return {
+      train: null,
+      warnings: [
+        {
+          code: "no_separation",
+          severity: "warning",
+          input: "stages",
+          message: `${error.message}: there is no yield and no separator test from it. The other figures stand.`,
+        },
+      ],
+    };
+  }
 }
 
 /** The diagram is drawn beside the figures; what of it cannot be traced is left out, and said. */
@@ -183,6 +208,9 @@ function depletionOf(
       warnings: [],
     };
   } catch (error) {
+    // A gas that leaves nothing in the tank has no condensate whose recovery could be followed.
+    const isEmptyTank = error instanceof DomainError && error.details.input === "stages";
+    if (isEmptyTank) return { ...none, warnings: [] };
     if (!(error instanceof ConvergenceError)) throw error;
     return {
       ...none,

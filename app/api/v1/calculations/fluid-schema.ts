@@ -201,7 +201,8 @@ export const equationOfStateResponseSchema = z.object({
       z.object({ liquidVolumeFraction: z.number(), points: z.array(envelopePointSchema) }),
     ),
   }),
-  train: separatorTrainSchema,
+  /** null for a fluid that leaves no liquid in the stock tank, or gives no gas; the warnings say which */
+  train: separatorTrainSchema.nullable(),
   /** null when there is no dew point at this temperature */
   depletion: depletionTableSchema.nullable(),
   curve: recoveryCurveSchema.nullable(),

@@ -57,7 +57,7 @@ export function useFluidStudy(
     sheet && stages && table ? { sheet, table, stages, characterisation } : null,
   );
   const test =
-    text.origin === "measured" ? typedTest : (equationOfState.data?.train.separatorTest ?? null);
+    text.origin === "measured" ? typedTest : (equationOfState.data?.train?.separatorTest ?? null);
   const wellstream = useWellstream(test, reservoir);
   // Only for want of a composition: with one, the equation of state is the better guess.
   const screening = useMemo(
