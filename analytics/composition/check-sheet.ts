@@ -139,6 +139,7 @@ export function checkPlausibility(
     ...check(HEPTANES_PLUS_SPECIFIC_GRAVITY, specificGravity, `${plusPath}.specificGravity`),
   );
   if (role === "wellstream") {
+    assertNoOil(100 * moleFraction, `${plusPath}.molePercent`);
     warnings.push(
       ...check(
         HEPTANES_PLUS_MOLE_PERCENT,
@@ -161,6 +162,18 @@ export function checkPlausibility(
     });
   }
   return warnings;
+}
+
+/** @see W. D. McCain, The Properties of Petroleum Fluids, 2nd ed. (1990), ch. 5: an oil from 12.5 mol % */
+function assertNoOil(heptanesPlusPercent: number, input: string): void {
+  const [, most] = HEPTANES_PLUS_MOLE_PERCENT.possible;
+  if (heptanesPlusPercent <= most) return;
+  throw new DomainError(
+    `With ${Number(heptanesPlusPercent.toPrecision(4))} mol % heptanes plus this is an oil: a gas condensate holds no ` +
+      `more than ${HEPTANES_PLUS_MOLE_PERCENT.usual[1]} % (McCain 1990), and above ${most} % nothing is worked out here. Look for a ` +
+      "typing error, or whether the stream is the separator's liquid",
+    { input, value: heptanesPlusPercent },
+  );
 }
 
 /** A wellstream does not end at the hexanes: what is heavier was left out, or is hidden in them. */

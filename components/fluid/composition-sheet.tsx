@@ -8,6 +8,7 @@ import type {
 import { Segmented, Select } from "@/components/ui/choice";
 import { Figure } from "@/components/ui/figure";
 import { formatFigure } from "@/components/ui/format";
+import { Icon } from "@/components/ui/icon";
 import { Unit } from "@/components/ui/text";
 import { ComponentLabel } from "./component-label";
 import { componentName } from "./component-names";
@@ -17,6 +18,7 @@ import {
   streamLabels,
   streamPlaces,
   streamsOf,
+  totalProblem,
   type CompositionReading,
   type CompositionText,
   type StreamName,
@@ -147,6 +149,7 @@ export function CompositionSheet({
               ))}
               {hasBars && <td />}
             </tr>
+            <TotalProblems {...{ streams, reading, columns }} />
             {plusRows.map(({ label, places }) => (
               <RowOfFractions
                 key={label}
@@ -180,6 +183,35 @@ export function CompositionSheet({
       </EntryGrid>
       {computed && <Normalising computed={computed} />}
     </div>
+  );
+}
+
+/** What is wrong with a sum, under it; nothing when it is near enough to 100 %. */
+function TotalProblems({
+  streams,
+  reading,
+  columns,
+}: {
+  streams: readonly StreamName[];
+  reading: CompositionReading;
+  columns: number;
+}) {
+  const found = streams.flatMap((name) => {
+    const words = reading.isEmpty ? null : totalProblem(name, reading);
+    return words ? [streams.length > 1 ? `${streamLabels[name]}: ${words}` : words] : [];
+  });
+  if (found.length === 0) return null;
+  return (
+    <tr className="follow">
+      <td colSpan={columns}>
+        {found.map((words) => (
+          <p key={words} className="field-error">
+            <Icon name="warning" />
+            <span>{words}</span>
+          </p>
+        ))}
+      </td>
+    </tr>
   );
 }
 

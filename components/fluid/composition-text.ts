@@ -149,6 +149,8 @@ export function aboveZero(reading: FieldReading, noun: string): FieldReading {
     : reading;
 }
 
+const plusWords = (plusFrom: number) => (plusFrom === 7 ? "Heptanes plus" : `C${plusFrom}+`);
+
 /** A stream's fields, and the stream they read as. */
 export function readStreamCells(prefix: string, plusFrom: number, cells: Cells) {
   const text = (place: string) => cells[place] ?? "";
@@ -167,6 +169,10 @@ export function readStreamCells(prefix: string, plusFrom: number, cells: Cells) 
   const value = (place: string) => fields[place].value;
   const share = value(`${prefix}.plus.molePercent`) ?? 0;
   const incomplete = share > 0 ? [weight, gravity].filter((place) => text(place) === "") : [];
+  for (const place of incomplete) {
+    const property = place === weight ? "molecular weight" : "specific gravity";
+    fields[place] = { ...NOTHING, problem: `${plusWords(plusFrom)} needs its ${property}.` };
+  }
   const isEmpty = Object.keys(fields).every((place) => text(place) === "");
   const total = places.reduce((sum, { place }) => sum + (value(place) ?? 0), 0);
   const isReadable =
@@ -196,6 +202,32 @@ export function readStreamCells(prefix: string, plusFrom: number, cells: Cells) 
         }
       : null;
   return { fields, stream, incomplete, isEmpty, total: Number(total.toPrecision(12)) };
+}
+
+/** Sums that the engine takes, mole per cent. */
+const POSSIBLE_TOTAL = [95, 105] as const;
+
+/** What is wrong with the sum of a stream's figures as they stand; `null` for one that can be worked with. */
+export function totalProblem(
+  name: StreamName,
+  { fields, totals }: Pick<CompositionReading, "fields" | "totals">,
+): string | null {
+  const isShare = (place: string) =>
+    place.startsWith(`${name}.`) && !/\.plus\.(molecularWeight|specificGravity)$/.test(place);
+  const unread = Object.entries(fields).filter(
+    ([place, { problem }]) => isShare(place) && problem !== null,
+  ).length;
+  if (unread > 0) {
+    return unread === 1
+      ? "One figure cannot be read; the sum leaves it out."
+      : `${unread} figures cannot be read; the sum leaves them out.`;
+  }
+  const total = totals[name] ?? 0;
+  const [least, most] = POSSIBLE_TOTAL;
+  if (total >= least && total <= most) return null;
+  return total < least
+    ? `A sheet adds up to 100 %. Below ${least} % something is missing, and nothing is worked out.`
+    : `A sheet adds up to 100 %. Above ${most} % something is counted twice, and nothing is worked out.`;
 }
 
 function readCondition(name: StreamCondition, text: string): FieldReading {

@@ -128,7 +128,10 @@ export function EntryProblems({
   state: EntryState;
 }) {
   const found = places.flatMap(({ place, label }) => {
-    const words = [state.remarks[place], problemAt(state, place)].filter(Boolean).join(" ");
+    const remark = state.remarks[place];
+    // A remark on a figure that cannot be read says why already.
+    const problem = remark && state.fields[place]?.problem ? null : problemAt(state, place);
+    const words = [remark, problem].filter(Boolean).join(" ");
     return words ? [{ place, label, words, isWrong: problemAt(state, place) !== null }] : [];
   });
   if (found.length === 0) return null;

@@ -49,7 +49,7 @@ export function takeLabSheet(
     const at = place ? partAndPlace(place) : null;
     if (!at) continue;
     remarks[at.part][at.place] =
-      `Line ${line} of the file${value ? ` has “${value}”` : ""}. ${message}`;
+      `Line ${line} of the file${value ? ` has “${value}”` : ""}. ${value === "" ? message : message.replace(/ ?Left empty\.$/, "")}`.trim();
     if (value !== "") unread[at.part][at.place] = value;
   }
   const composition = read.composition && textOfComposition(read.composition);

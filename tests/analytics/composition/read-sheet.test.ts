@@ -100,7 +100,9 @@ describe("readStream", () => {
       carbonNumbers: [],
       plus: { carbonNumber: 7, molePercent: 50, molecularWeight: 140, specificGravity: 0.774 },
     };
-    expect(refusal(() => readStream(oil)).details.input).toBe("stream.plus.molePercent");
+    const { message, details } = refusal(() => readStream(oil));
+    expect(details.input).toBe("stream.plus.molePercent");
+    expect(message).toMatch(/50 mol % heptanes plus this is an oil: .* 12\.5 % \(McCain 1990\)/);
     expect(readStream(oil, "liquid", "liquid").warnings).toEqual([]);
   });
 
