@@ -30,6 +30,7 @@ import {
   readStages,
   stagesOfTest,
   textOfStages,
+  usualStages,
   type StagesReading,
   type StagesText,
 } from "./stages-text";
@@ -118,8 +119,10 @@ export interface SampleReading {
   composition: CompositionReading;
   stagesReading: StagesReading | null;
   depletion: DepletionReading | null;
-  /** of the sheet, or of the separator test; `null` while unknown */
+  /** of the sheet, of the separator test, or the usual ones; `null` while the sheet is unfinished */
   stages: SeparatorStage[] | null;
+  /** nobody has given separators: the usual ones are computed with */
+  isStagesAssumed: boolean;
   characterisation: Characterisation;
   /** `null` while a part that was begun is missing something or cannot be read */
   study: SampleStudy | null;
@@ -133,12 +136,10 @@ export function readSample(text: SampleText): SampleReading {
   const composition = readCompositionText(text.composition);
   const stagesReading = text.stages && readStages(text.stages);
   const depletion = text.depletion && readDepletion(text.depletion);
-  const stages =
-    stagesReading !== null
-      ? stagesReading.stages
-      : separator.test && text.origin === "measured"
-        ? stagesOfTest(separator.test)
-        : null;
+  const ofTest = separator.test && text.origin === "measured" ? stagesOfTest(separator.test) : null;
+  const isStagesAssumed = stagesReading === null && ofTest === null && !composition.isEmpty;
+  const given = stagesReading !== null ? stagesReading.stages : ofTest;
+  const stages = isStagesAssumed ? [...usualStages] : given;
   const hasDepletion = depletion !== null && !depletion.isEmpty;
   const unfinished = [
     text.origin === "measured" && !separator.test && "the separator test",
@@ -152,6 +153,7 @@ export function readSample(text: SampleText): SampleReading {
     stagesReading,
     depletion,
     stages,
+    isStagesAssumed,
     characterisation: text.characterisation ?? usualCharacterisation,
     unfinished,
     study:
@@ -160,7 +162,12 @@ export function readSample(text: SampleText): SampleReading {
         : {
             composition: composition.sheet,
             depletion: hasDepletion ? depletion.table : null,
-            stages: stagesReading ? stagesReading.stages : null,
+            // A separator test that was worked out keeps the separators that it rests on.
+            stages: stagesReading
+              ? stagesReading.stages
+              : text.origin === "computed"
+                ? stages
+                : null,
             characterisation: text.characterisation,
             tuning: text.tuning,
             separatorTestOrigin: text.origin,

@@ -24,6 +24,8 @@ export interface StagesSheetProps {
   state: Omit<EntryState, "onChange" | "cells">;
   /** there is a separator test whose separators can be taken */
   hasTest: boolean;
+  /** nobody has given any: the usual ones stand in */
+  isAssumed?: boolean;
   /** absent: the sheet is read, not typed */
   onChange?: (text: StagesText | null) => void;
 }
@@ -32,7 +34,15 @@ const stageName = (index: number, count: number) =>
   index === count - 1 ? "Stock tank" : `Separator ${index + 1}`;
 
 /** Separators that streams are flashed through, and what each gives. */
-export function StagesSheet({ text, stages, train, state, hasTest, onChange }: StagesSheetProps) {
+export function StagesSheet({
+  text,
+  stages,
+  train,
+  state,
+  hasTest,
+  isAssumed = false,
+  onChange,
+}: StagesSheetProps) {
   const count = text?.count ?? stages?.length ?? 0;
   const isOwn = text !== null;
   const entry: EntryState = {
@@ -54,6 +64,17 @@ export function StagesSheet({ text, stages, train, state, hasTest, onChange }: S
             onChange(event.target.checked ? null : stages ? textOfStages(stages) : emptyStages())
           }
         />
+      )}
+      {isAssumed && (
+        <p className="text-13 text-ink-soft">
+          Assumed, as the sample gives no separators: one at 500 psia and 80 °F before the stock
+          tank (common practice, no source).{" "}
+          {onChange && stages && (
+            <Button size="small" onClick={() => onChange(textOfStages(stages))}>
+              Change them
+            </Button>
+          )}
+        </p>
       )}
       {count === 0 ? (
         <p className="text-13 text-ink-soft">

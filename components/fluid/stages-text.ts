@@ -38,6 +38,12 @@ export function textOfStages(stages: readonly SeparatorStage[]): StagesText {
   };
 }
 
+/** A two-stage train for a fluid whose separators nobody has given; common practice, no source. */
+export const usualStages: readonly SeparatorStage[] = [
+  { pressurePsia: 500, temperatureDegF: 80 },
+  TANK,
+];
+
 /** Two separators to fill in, and a stock tank at standard conditions. */
 export const emptyStages = (): StagesText => ({
   count: 3,

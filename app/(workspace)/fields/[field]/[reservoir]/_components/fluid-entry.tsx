@@ -82,7 +82,8 @@ function SeparatorSection({ draft, study, mayType, remarks, setRemarks }: FluidP
           />
         ) : (
           <p className="text-13 text-ink-soft">
-            Needs a composition and two or three stages of separators.
+            Needs a composition that leaves liquid in the tank, and two or three stages of
+            separators.
           </p>
         )}
       </div>

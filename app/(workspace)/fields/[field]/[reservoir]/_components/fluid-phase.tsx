@@ -49,7 +49,7 @@ export function FluidPhase(props: FluidPartProps) {
 function missingWords({ draft, study }: FluidPartProps): string {
   const missing = [
     !study.sheet && "the composition",
-    !draft.reading.stages && "the separators",
+    !draft.reading.stages && "the sheet of separators",
     study.temperatureDegF === null && "the reservoir temperature",
   ].filter((part) => part !== false);
   return missing.length === 0
@@ -98,6 +98,7 @@ function EquationOfStateSection({ draft, study, mayType, remarks }: FluidPartPro
           text={text.stages}
           stages={reading.stages}
           train={study.equationOfState.data?.train ?? null}
+          isAssumed={reading.isStagesAssumed && study.sheet !== null}
           hasTest={reading.separator.test !== null && text.origin === "measured"}
           state={{
             fields: reading.stagesReading?.fields ?? {},
