@@ -6,7 +6,7 @@ import type { RecoveryCurve, RecoveryRoute } from "../recovery/recovery-curve-sc
 import { cellRows } from "./cell-rows";
 import type { DepletionTable } from "./depletion-table-schema";
 import type { Finding } from "./finding-schema";
-import { CheckReport, psia } from "./findings";
+import { CheckReport, psia, rowName } from "./findings";
 import { gasMolesInCell } from "./material-balance";
 import { recoveryCurve, type CellPoint } from "./recovery-curve";
 import { separateByKValues } from "./separate-by-k-values";
@@ -49,7 +49,7 @@ const ROUNDING = 1e-9;
 /**
  * Recovery from a depletion table: each produced gas flashed through the separators, by the equation of state or, where
  * that is not set up or does not converge, by Standing's K values. It needs produced moles, gas z, liquid percentage and
- * composition row by row, and ends where one is missing.
+ * composition row by row, and ends where one is missing. A table whose pressures do not fall has none.
  *
  * @returns  the curve, or `null` with the reason among the findings
  * @throws {DomainError} when a separator stage is impossible
@@ -62,7 +62,14 @@ export function recoveryCurveOfTable(request: CurveRequest): TableRecovery {
   });
   const followed = cellRows(table);
   const { cell, rows } = followed;
-  if (followed.stop !== null) {
+  const misplaced = rowOutOfOrder(table);
+  if (misplaced !== null) {
+    report.fail(
+      `There is no recovery curve from this table: ${rowName(table, misplaced)} does not lie below the row before. ` +
+        "Put the rows in the order of falling pressure, or correct the pressure.",
+      { row: misplaced, column: "pressurePsia" },
+    );
+  } else if (followed.stop !== null) {
     const { row, column, reason } = followed.stop;
     const consequence =
       rows.length === 0
@@ -77,6 +84,7 @@ export function recoveryCurveOfTable(request: CurveRequest): TableRecovery {
     method: "kValues",
     findings: report.findings,
   };
+  if (misplaced !== null) return nothing;
   if (cell === null || rows.length === 0) {
     if (followed.stop === null) {
       report.warn("There is no recovery curve: no row below the dew point gives produced gas.");
@@ -152,6 +160,14 @@ export function recoveryCurveOfTable(request: CurveRequest): TableRecovery {
         `${(100 * last.gasProduced).toFixed(1)} % of the surface gas are produced.`,
     ),
   };
+}
+
+/** First row whose pressure does not lie below the one before; null when all fall. */
+function rowOutOfOrder({ rows }: DepletionTable): number | null {
+  const row = rows.findIndex(
+    ({ pressurePsia }, index) => index > 0 && !(pressurePsia < rows[index - 1].pressurePsia),
+  );
+  return row < 0 ? null : row;
 }
 
 function sayWhichStagesAreLowered(

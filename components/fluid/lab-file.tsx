@@ -6,6 +6,7 @@ import { Button } from "@/components/ui/button";
 import { classNames } from "@/components/ui/class-names";
 import { Dialog } from "@/components/ui/dialog";
 import { Notice } from "@/components/ui/status";
+import { rowFailures } from "./row-checks";
 
 /** The server takes so many characters. */
 const LARGEST_FILE = 200_000;
@@ -91,6 +92,14 @@ export const partsOf = (read: LabSheetResponse): string[] =>
 const listed = (parts: readonly string[]) =>
   parts.length < 2 ? parts.join("") : `${parts.slice(0, -1).join(", ")} and ${parts.at(-1)}`;
 
+const example = `composition
+component,mol %
+N2,0.6
+C1,77.2
+C7+,6.4
+molecular weight of the plus fraction,140
+specific gravity of the plus fraction,0.774`;
+
 /** What was read in a file and what was not, before anything of it goes into the sheets. */
 export function LabFileDialog({
   fileName,
@@ -105,6 +114,7 @@ export function LabFileDialog({
 }) {
   const parts = partsOf(read);
   const { problems } = read;
+  const failed = read.depletion ? rowFailures(read.depletion) : [];
   return (
     <Dialog
       open
@@ -128,6 +138,18 @@ export function LabFileDialog({
       }
     >
       <div className="grid grid-cols-1 gap-4">
+        {parts.length === 0 && (
+          <div>
+            <h3>What the template looks like</h3>
+            <pre className="table-scroll text-12">{example}</pre>
+          </div>
+        )}
+        {failed.length > 0 && (
+          <Notice tone="error" title="The depletion table contradicts itself.">
+            {failed.map(({ message }) => message).join(" ")} Put this right in the file, or in the sheet
+            after taking it over.
+          </Notice>
+        )}
         {read.read.length > 0 && (
           <div>
             <h3>How it was read</h3>

@@ -117,6 +117,16 @@ describe("recoveryCurveOfTable", () => {
     expect(findings[0].message).toMatch(/^The recovery curve ends at 1,814\.7 psia: /);
   });
 
+  it("draws no curve from a table whose pressures do not fall, and says what to do", () => {
+    const table = studyTable();
+    [table.rows[3], table.rows[4]] = [table.rows[4], table.rows[3]];
+    const { curve, findings } = fromStudy({ table });
+    expect(curve).toBeNull();
+    expect(findings).toHaveLength(1);
+    expect(findings[0]).toMatchObject({ severity: "failed", row: 4, column: "pressurePsia" });
+    expect(findings[0].message).toMatch(/Put the rows in the order of falling pressure/);
+  });
+
   it("draws no curve from a table in which more comes out than was there", () => {
     const table = studyTable();
     table.rows[1].producedGas!.plus!.molePercent = 14;
