@@ -30,6 +30,8 @@ export interface DepletionPanelsProps {
   initialPressurePsia: number | null;
   /** produced above the dew point, share of what is in place at first; `null` while unknown */
   producedBefore: number | null;
+  /** what speaks against any dropout at all, in a heading; `null` when nothing does */
+  contradiction?: string | null;
   /** liquid below this stays where it is, per cent of pore space */
   criticalBand: { low: number; high: number };
   abandonmentPressurePsia: number;
@@ -59,9 +61,11 @@ export function DepletionPanels(props: DepletionPanelsProps) {
     <div className="depletion-panels">
       <ChartFrame
         title={
-          hasLiquid
-            ? `${lead} takes up to ${formatFigure(most.liquidSaturation * 100)} % of the pores; the yield falls from ${formatFigure(points[0].producingYieldStbPerMmscf)} to ${formatFigure(leastYield)} STB/MMscf`
-            : `The yield falls from ${formatFigure(points[0].producingYieldStbPerMmscf)} to ${formatFigure(leastYield)} STB/MMscf`
+          props.contradiction
+            ? `${props.contradiction}; the depletion table says otherwise`
+            : hasLiquid
+              ? `${lead} takes up to ${formatFigure(most.liquidSaturation * 100)} % of the gas’s pore space; the yield falls from ${formatFigure(points[0].producingYieldStbPerMmscf)} to ${formatFigure(leastYield)} STB/MMscf`
+              : `${doubt ? `${doubt}: the` : "The"} yield falls from ${formatFigure(points[0].producingYieldStbPerMmscf)} to ${formatFigure(leastYield)} STB/MMscf`
         }
         note={
           <>

@@ -9,6 +9,7 @@ import { formatFigure, MISSING } from "@/components/ui/format";
 import { Unit } from "@/components/ui/text";
 import type { AvailableCurve } from "./available-curves";
 import { mostLiquid } from "./curve-reading";
+import { phaseStanding } from "./phase-standing";
 import { psia } from "./words";
 
 export interface FluidFiguresProps {
@@ -38,7 +39,8 @@ export function dewPointOf({
     };
   }
   const estimate = composition?.dewPointEstimates[0];
-  if (!estimate) return null;
+  // An equation of state without a dew point says more than a correlation that knows nothing else.
+  if (!estimate || saturation) return null;
   return {
     pressurePsia: estimate.dewPointPsia,
     source: `${estimate.label}, ± ${formatFigure(estimate.statedErrorFraction * 100, { digits: 2 })} %`,
@@ -79,8 +81,12 @@ export function FluidFigures(props: FluidFiguresProps) {
               `${formatFigure(Math.abs(margin))} psi ${margin >= 0 ? "below" : "above"} initial`,
           ]
             .filter(Boolean)
+  const standing =
+    props.equationOfState && temperatureDegF !== null
+      ? phaseStanding(props.equationOfState, temperatureDegF)
+      : null;
             .join("; ")
-        : "not measured",
+        : (standing?.heading ?? "not measured"),
     },
     {
       name: "Most liquid in the pores",
@@ -104,6 +110,7 @@ export function FluidFigures(props: FluidFiguresProps) {
     {
       name: "Surface gas fraction",
       value: surfaceShare,
+            standing && "the equation of state gives none",
       unit: "",
       note: "of the wellstream, by mole",
     },
@@ -139,3 +146,4 @@ export function FluidFigures(props: FluidFiguresProps) {
     </dl>
   );
 }
+        (dewPoint === null ? standing?.type : undefined) ??

@@ -6,6 +6,7 @@ import { Plot, PlotDot, PlotLabel } from "@/components/charts/plot";
 import { linePath, positionOn, ticksOf } from "@/components/charts/scale";
 import { formatFigure } from "@/components/ui/format";
 import { Flag } from "@/components/ui/text";
+import { phaseStanding } from "./phase-standing";
 import { psia } from "./words";
 import { freeRoom, LABEL_GAP, layoutLabels, type PlacedText, type PlotBox } from "./label-layout";
 import { areaInside, partsInside, roundScale, yTicksOf } from "./plot-scale";
@@ -25,28 +26,27 @@ export interface PhaseEnvelopeProps {
 
 /** "Liquid starts to drop out 1,474 psi below initial pressure", from the measured dew point where there is one. */
 export function envelopeFinding(
-  { saturation, isTuned }: Pick<EquationOfStateResponse, "saturation" | "isTuned">,
+  {
+    saturation,
+    isTuned,
+    ...result
+  }: Pick<EquationOfStateResponse, "saturation" | "isTuned" | "envelope" | "train">,
   initialPressurePsia: number | null,
+  temperatureDegF: number,
 ): string {
+  const standing = phaseStanding({ saturation, ...result }, temperatureDegF);
+  if (standing) return standing.heading;
   const dewPoint = saturation.measuredPsia ?? saturation.upperPsia;
   if (dewPoint === null) return "No liquid drops out at reservoir temperature";
   const doubt = saturation.measuredPsia === null && !isTuned ? "Untuned, not fitted: " : "";
-  const kind =
-    saturation.kind === "bubblePoint" && saturation.measuredPsia === null
-      ? "bubble point"
-      : "dew point";
   const say = (words: string) => (doubt ? doubt + words[0].toLowerCase() + words.slice(1) : words);
-  if (initialPressurePsia === null) return say(`The ${kind} is ${psia(dewPoint)} psia`);
+  if (initialPressurePsia === null) return say(`The dew point is ${psia(dewPoint)} psia`);
   const margin = initialPressurePsia - dewPoint;
-  if (Math.abs(margin) < 1) return say(`The reservoir begins at its ${kind}`);
+  if (Math.abs(margin) < 1) return say(`The reservoir begins at its dew point`);
   if (margin < 0) {
-    return say(`Initial pressure lies ${formatFigure(-margin)} psi below the ${kind}`);
+    return say(`Initial pressure lies ${formatFigure(-margin)} psi below the dew point`);
   }
-  return say(
-    kind === "bubble point"
-      ? `Gas comes out of the liquid ${formatFigure(margin)} psi below initial pressure`
-      : `Liquid starts to drop out ${formatFigure(margin)} psi below initial pressure`,
-  );
+  return say(`Liquid starts to drop out ${formatFigure(margin)} psi below initial pressure`);
 }
 
 /** Bubble and dew lines with the ways that the fluid goes: down in the reservoir, and up to the stock tank. */
@@ -56,7 +56,7 @@ export function PhaseEnvelope(props: PhaseEnvelopeProps) {
   const mismatch = saturation.mismatchPsia;
   return (
     <ChartFrame
-      title={envelopeFinding(result, props.initialPressurePsia)}
+      title={envelopeFinding(result, props.initialPressurePsia, temperatureDegF)}
       note={
         <>
           {isTuned ? (

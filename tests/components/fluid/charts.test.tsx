@@ -10,6 +10,7 @@ import { newSampleText } from "@/components/fluid/sample-text";
 import { equationOfState, labSheet } from "./fixtures";
 
 describe("envelopeFinding(result, initialPressure)", () => {
+  const { envelope, train } = equationOfState;
   const saturation = {
     upperPsia: 4310,
     kind: "dewPoint" as const,
@@ -20,22 +21,40 @@ describe("envelopeFinding(result, initialPressure)", () => {
 
   it("goes by the measured dew point where there is one", () => {
     const measured = { ...saturation, measuredPsia: 4424, mismatchPsia: -114 };
-    expect(envelopeFinding({ saturation: measured, isTuned: false }, 5898)).toBe(
-      "Liquid starts to drop out 1,470 psi below initial pressure",
-    );
+    expect(
+      envelopeFinding({ saturation: measured, isTuned: false, envelope, train }, 5898, 255),
+    ).toBe("Liquid starts to drop out 1,470 psi below initial pressure");
   });
 
   it("never states an untuned figure as fact", () => {
-    expect(envelopeFinding({ saturation, isTuned: false }, 5898)).toMatch(/^Untuned, not fitted: /);
-    expect(envelopeFinding({ saturation, isTuned: true }, 4000)).toBe(
+    expect(envelopeFinding({ saturation, isTuned: false, envelope, train }, 5898, 255)).toMatch(
+      /^Untuned, not fitted: /,
+    );
+    expect(envelopeFinding({ saturation, isTuned: true, envelope, train }, 4000, 255)).toBe(
       "Initial pressure lies 310 psi below the dew point",
     );
   });
 
-  it("says when nothing drops out", () => {
+  it("says when nothing drops out, whatever dew point was measured", () => {
+    const none = { ...saturation, upperPsia: null, kind: "none" as const, measuredPsia: 4424 };
+    const fluid = { saturation: none, isTuned: true, envelope };
+    expect(envelopeFinding({ ...fluid, train }, 5000, 750)).toBe(
+      "No dew point at 750 °F: the computed cricondentherm is 620 °F",
+    );
+    expect(envelopeFinding({ ...fluid, train: null }, 5000, 255)).toBe(
+      "Dry gas: no liquid drops out",
+    );
+  });
+
+  it("says that a fluid with a bubble point is an oil, and who says so against a measurement", () => {
+    const oil = { ...saturation, upperPsia: 2894, kind: "bubblePoint" as const };
+    const fluid = { isTuned: false, envelope, train };
+    expect(envelopeFinding({ ...fluid, saturation: oil }, 5000, 255)).toBe(
+      "This is an oil at reservoir temperature (bubble point 2,894 psia)",
+    );
     expect(
-      envelopeFinding({ saturation: { ...saturation, upperPsia: null }, isTuned: true }, 5000),
-    ).toBe("No liquid drops out at reservoir temperature");
+      envelopeFinding({ ...fluid, saturation: { ...oil, measuredPsia: 3000 } }, 5000, 255),
+    ).toMatch(/^By the equation of state this is an oil/);
   });
 });
 
@@ -111,7 +130,7 @@ describe("takeLabSheet(read, now)", () => {
     const { change, remarks } = takeLabSheet(labSheet, newSampleText(null));
     expect(change.depletion?.cells["rows.1.gasZ"]).toBe("0.9e1?");
     expect(remarks.depletion["rows.1.gasZ"]).toBe(
-      "Line 31 of the file has \u201c0.9e1?\u201d. This is not a number. Left empty.",
+      "Line 31 of the file has \u201c0.9e1?\u201d. This is not a number.",
     );
     expect(change.composition?.cells["stream.light.C1"]).toBe("90");
     expect(change).not.toHaveProperty("separator");

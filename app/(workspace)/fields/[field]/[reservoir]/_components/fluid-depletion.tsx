@@ -102,8 +102,9 @@ function Panels({
           <Skeleton lines={8} label="Working out the depletion" />
         ) : (
           <p className="text-13 text-ink-soft">
-            Appears with a composition, its separators and the reservoir temperature; a depletion
-            table of the laboratory makes it a measurement.
+            {study.standing
+              ? `${study.standing.heading}. A depletion below a dew point does not apply.`
+              : "Appears with a composition and the reservoir temperature; a depletion table of the laboratory makes it a measurement."}
           </p>
         )}
       </Section>
@@ -122,6 +123,7 @@ function Panels({
         producedBefore={producedBeforeDewPoint(
           study.wellstream.data?.pseudocritical ?? null,
           reservoir,
+        contradiction={study.standing?.heading ?? null}
           curve.curve.dewPointPsia,
         )}
         abandonmentPressurePsia={abandonment}
@@ -148,7 +150,7 @@ function Panels({
 
 function TableSection({ draft, study, mayType, reservoir, remarks, setRemarks }: DepletionProps) {
   const { text, reading } = draft;
-  const findings = study.depletion.data?.findings ?? [];
+  const { findings } = study;
   if (!text.depletion || !reading.depletion) {
     if (!mayType) return null;
     return (
@@ -197,7 +199,10 @@ function TableSection({ draft, study, mayType, reservoir, remarks, setRemarks }:
       <DepletionSheet
         text={depletion}
         reading={reading.depletion}
-        state={{ problems: study.problems.depletion, remarks: remarks.depletion }}
+        state={{
+          problems: study.problems.depletion,
+          remarks: { ...study.remarks.depletion, ...remarks.depletion },
+        }}
         flags={
           new Set(
             worst.flatMap(({ row, column }) =>

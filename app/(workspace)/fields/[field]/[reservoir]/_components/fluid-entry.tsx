@@ -184,7 +184,7 @@ function CompositionSection({
             cells: text.composition.cells,
             fields: composition.fields,
             problems: study.problems.composition,
-            remarks: remarks.composition,
+            remarks: { ...study.remarks.composition, ...remarks.composition },
             onChange: mayType
               ? (changes) => {
                   draft.change((now) => ({

@@ -1,9 +1,12 @@
 "use client";
 
 import { useMemo } from "react";
+import type { CompositionSheet } from "@/analytics/composition/composition-schema";
 import { availableCurves } from "@/components/fluid/available-curves";
 import { placeOfPointer } from "@/components/fluid/composition-text";
 import type { Cells } from "@/components/fluid/grid-paste";
+import { phaseStanding, type PhaseStanding } from "@/components/fluid/phase-standing";
+import { failuresAtCells, rowChecks } from "@/components/fluid/row-checks";
 import { screeningCurve } from "@/components/fluid/screening-curve";
 import type { SampleReading, SampleText } from "@/components/fluid/sample-text";
 import { useWellstream } from "../_queries/fluid";
@@ -64,6 +67,14 @@ export function useFluidStudy(
     () => screeningCurve(sheet ? null : test, temperatureDegF, measuredDewPointPsia),
     [sheet, test, temperatureDegF, measuredDewPointPsia],
   );
+  const standing =
+    equationOfState.data && temperatureDegF !== null
+      ? phaseStanding(equationOfState.data, temperatureDegF)
+      : null;
+  const findings = useMemo(
+    () => depletion.data?.findings ?? (table ? rowChecks(table) : []),
+    [depletion.data, table],
+  );
   const curves = useMemo(
     () => availableCurves([depletion.data?.curve, equationOfState.data?.curve, screening.curve]),
     [depletion.data, equationOfState.data, screening],
@@ -80,15 +91,19 @@ export function useFluidStudy(
         "stages",
         reading.stagesReading?.fields ?? {},
       ),
-      depletion: problemsAt(
-        [depletion.error],
-        "table",
-        reading.depletion?.fields ?? {},
-        reading.depletion?.rowsOfTable,
-      ),
+      depletion: {
+        ...failuresAtCells(findings, reading.depletion?.rowsOfTable ?? []),
+        ...problemsAt(
+          [depletion.error],
+          "table",
+          reading.depletion?.fields ?? {},
+          reading.depletion?.rowsOfTable,
+        ),
+      },
     }),
-    [composition.error, equationOfState.error, depletion.error, reading],
+    [composition.error, equationOfState.error, depletion.error, findings, reading],
   );
+  const remarks = remarksOf(standing, sheet?.kind ?? "wellstream");
 
   return {
     sheet,
@@ -101,6 +116,12 @@ export function useFluidStudy(
     depletion,
     wellstream,
     curves,
+    /** checks of the depletion table: all of them, or those of its rows while there is no composition */
+    findings,
+    /** what speaks against a dew point; `null` when nothing does */
+    standing,
+    /** what the equation of state says about a figure, by place */
+    remarks,
     /** why a fluid without a composition has no curve; `null` when it has one, or has nothing to begin with */
     noCurveReason: screening.reason,
     /** what to know about the curve of a fluid without a composition */
@@ -110,6 +131,18 @@ export function useFluidStudy(
 }
 
 export type FluidStudy = ReturnType<typeof useFluidStudy>;
+
+/** Where to look for what makes a fluid an oil, or a gas without a dew point. */
+function remarksOf(
+  standing: PhaseStanding | null,
+  kind: CompositionSheet["kind"],
+): { composition: Cells; depletion: Cells } {
+  if (!standing || standing.kind === "dryGas") return { composition: {}, depletion: {} };
+  const plus = `${kind === "wellstream" ? "stream" : "liquid"}.plus.molePercent`;
+  return standing.kind === "oil"
+    ? { composition: { [plus]: standing.advice }, depletion: {} }
+    : { composition: {}, depletion: { temperatureDegF: standing.advice } };
+}
 
 /** The server's refusals that belong to a sheet's cells, by place. */
 function problemsAt(
