@@ -287,6 +287,7 @@ describe("simulate with a recovery plan", () => {
             ...point,
             condensateProduced: 0.9 * point.gasProduced,
             condensateInGas: 0.9 * (1 - point.gasProduced),
+            producingYieldStbPerMmscf: 148,
           })),
         },
       }),
