@@ -146,8 +146,8 @@ export function LabFileDialog({
         )}
         {failed.length > 0 && (
           <Notice tone="error" title="The depletion table contradicts itself.">
-            {failed.map(({ message }) => message).join(" ")} Put this right in the file, or in the sheet
-            after taking it over.
+            {failed.map(({ message }) => message).join(" ")} Put this right in the file, or in the
+            sheet after taking it over.
           </Notice>
         )}
         {read.read.length > 0 && (
