@@ -1,4 +1,4 @@
-import { shortConcepts } from "@/components/estimate/plan-words";
+import { routeLabels, shortConcepts } from "@/components/estimate/plan-words";
 import { resultFactor, resultUnit, type ResultBasis } from "@/components/estimate/result-rows";
 import type { ChartData } from "@/components/charts/chart-frame";
 import { fractionDigits } from "@/components/ui/format";
@@ -6,7 +6,7 @@ import { FigureCell, LedgerTable } from "@/components/ui/table";
 import { Unit } from "@/components/ui/text";
 import type { ConceptView } from "./concept-findings";
 
-/** One concept's row in the units of the basis. What is left is the mean, as in the bars. */
+/** One concept's row in the units of the basis. Means add up to what is in place, as the bars do. */
 function rowOf(view: ConceptView, basis: ResultBasis) {
   const condensate = resultFactor("condensateRecoverableStb", basis);
   const { p90, p50, p10 } = view.condensateRecoverableStb;
@@ -16,6 +16,7 @@ function rowOf(view: ConceptView, basis: ResultBasis) {
     p90: p90 * condensate,
     p50: p50 * condensate,
     p10: p10 * condensate,
+    mean: inPlace * view.shares.toTank * condensate,
     rock: view.shares.leftInRock * inPlace * condensate,
     gas: view.shares.leftInGas * inPlace * condensate,
     salesGas: view.salesGasScf.p50 * resultFactor("salesGasScf", basis),
@@ -32,24 +33,27 @@ export function ConceptTable({
 }) {
   const rows = concepts.map((view) => rowOf(view, basis));
   const unit = resultUnit("condensateRecoverableStb", basis);
-  const digits = fractionDigits(rows.flatMap(({ p90, p50, p10 }) => [p90, p50, p10]));
+  const digits = fractionDigits(rows.flatMap(({ p90, p50, p10, mean }) => [p90, p50, p10, mean]));
   return (
-    <LedgerTable caption="Concepts: condensate to the tank and left behind" className="mt-0">
+    <LedgerTable
+      caption="Concepts: condensate to the tank and left behind"
+      className="concept-table mt-0"
+    >
       <thead>
         <tr>
           <th scope="col">
             To the tank <Unit>{unit}</Unit>
           </th>
-          {["P90", "P50", "P10"].map((level) => (
+          {["P90", "P50", "P10", "Mean"].map((level) => (
             <th key={level} scope="col" className="right">
               {level}
             </th>
           ))}
           <th scope="col" className="right">
-            In the rock
+            In the rock, mean
           </th>
           <th scope="col" className="right">
-            In the gas
+            In the gas, mean
           </th>
           <th scope="col" className="right">
             Sales gas P50 <Unit>{resultUnit("salesGasScf", basis)}</Unit>
@@ -65,6 +69,7 @@ export function ConceptTable({
             <FigureCell value={row.p90} fraction={digits} />
             <FigureCell value={row.p50} fraction={digits} strong />
             <FigureCell value={row.p10} fraction={digits} />
+            <FigureCell value={row.mean} fraction={digits} />
             <FigureCell value={row.rock} />
             <FigureCell value={row.gas} />
             <FigureCell value={row.salesGas} />
@@ -81,9 +86,11 @@ export function conceptData(concepts: readonly ConceptView[], basis: ResultBasis
   return {
     columns: [
       { label: "Concept" },
+      { label: "Recovery from" },
       { label: "To the tank P90", unit },
       { label: "To the tank P50", unit },
       { label: "To the tank P10", unit },
+      { label: "To the tank, mean", unit },
       { label: "To the tank, mean share", unit: "%" },
       { label: "Left in the rock, mean share", unit: "%" },
       { label: "Left in the gas, mean share", unit: "%" },
@@ -95,9 +102,11 @@ export function conceptData(concepts: readonly ConceptView[], basis: ResultBasis
       const row = rowOf(view, basis);
       return [
         shortConcepts[view.concept],
+        routeLabels[view.route],
         row.p90,
         row.p50,
         row.p10,
+        row.mean,
         view.shares.toTank * 100,
         view.shares.leftInRock * 100,
         view.shares.leftInGas * 100,

@@ -1,7 +1,8 @@
 import { phaseLabels, shortConcepts } from "@/components/estimate/plan-words";
 import { resultFactor, resultUnit, type ResultBasis } from "@/components/estimate/result-rows";
-import { formatFigure, formatPercent } from "@/components/ui/format";
+import { formatFigure, formatPercent, MISSING } from "@/components/ui/format";
 import { LedgerTable } from "@/components/ui/table";
+import { VisuallyHidden } from "@/components/ui/text";
 import { gasBalanceFinding, type ConceptView } from "./concept-findings";
 
 /** Phases and gas balance are all this table and list look at. */
@@ -35,7 +36,7 @@ export function PhaseTable({ concepts }: { concepts: readonly Phased[] }) {
               const phase = phases.find((candidate) => candidate.name === name);
               return (
                 <td key={concept} className="right">
-                  {phase ? (
+                  {phase && (phase.condensateShare !== 0 || phase.gasShare !== 0) ? (
                     <>
                       {formatPercent(phase.condensateShare, { decimals: 1 })}
                       <small className="block text-ink-soft">
@@ -43,7 +44,10 @@ export function PhaseTable({ concepts }: { concepts: readonly Phased[] }) {
                       </small>
                     </>
                   ) : (
-                    "–"
+                    <>
+                      <span aria-hidden="true">{MISSING}</span>
+                      <VisuallyHidden>does not occur</VisuallyHidden>
+                    </>
                   )}
                 </td>
               );
