@@ -150,10 +150,21 @@ export function BalanceTable({ wellstream }: { wellstream: WellstreamResponse })
 }
 
 /** Figures of the gas, for those who check. */
-export function GasTable({ wellstream }: { wellstream: WellstreamResponse }) {
+export function GasTable({
+  wellstream,
+  fluidType,
+}: {
+  wellstream: WellstreamResponse;
+  /** absent: by the gas-oil ratio */
+  fluidType?: { label: string; rule: string } | null;
+}) {
   const { pseudocritical, atReservoir } = wellstream;
   const rows = [
-    { label: "Fluid type", text: fluidTypeLabels[wellstream.fluidType] },
+    {
+      label: "Fluid type",
+      text: fluidType?.label ?? fluidTypeLabels[wellstream.fluidType],
+      note: fluidType?.rule,
+    },
     {
       label: "Condensate molecular weight",
       value: wellstream.condensateMolecularWeight,
@@ -177,10 +188,11 @@ export function GasTable({ wellstream }: { wellstream: WellstreamResponse }) {
     <table className="ledger-table">
       <caption className="sr-only">Properties of the wellstream</caption>
       <tbody>
-        {rows.map(({ label, value, unit, text }) => (
+        {rows.map(({ label, value, unit, text, note }) => (
           <tr key={label}>
-            <th scope="row" className="plain">
+            <th scope="row" className={note ? "plain wrap" : "plain"}>
               {label} {unit && <Unit>{unit}</Unit>}
+              {note && <small className="block text-ink-soft">{note}</small>}
             </th>
             <td className="right">{text ?? <Figure value={value} digits={4} />}</td>
           </tr>

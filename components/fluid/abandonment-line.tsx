@@ -2,7 +2,7 @@
 
 import { useRef, type KeyboardEvent, type PointerEvent } from "react";
 import { percent, positionOn, valueAt, type Scale } from "@/components/charts/scale";
-import { formatFigure } from "@/components/ui/format";
+import { psia } from "./words";
 
 export interface AbandonmentLineProps {
   pressurePsia: number;
@@ -65,7 +65,7 @@ export function AbandonmentLine({
         aria-valuemin={lowest}
         aria-valuemax={highest}
         aria-valuenow={pressurePsia}
-        aria-valuetext={`${formatFigure(pressurePsia, { digits: 4 })} psia. ${describe}`}
+        aria-valuetext={`${psia(pressurePsia)} psia. ${describe}`}
         style={{ left: percent(position) }}
         onPointerDown={(event) => {
           event.currentTarget.setPointerCapture(event.pointerId);

@@ -24,6 +24,7 @@ import {
   type StreamName,
 } from "./composition-text";
 import { EntryCell, EntryGrid, EntryProblems, type EntryState } from "./entry-grid";
+import { equationWords } from "./fluid-figures";
 import { psia } from "./words";
 import { ShareBar } from "./share-bar";
 
@@ -357,17 +358,17 @@ export function CompositionFacts({
       value: gas.heatingValue.grossRealBtuPerScf,
       unit: "Btu/scf",
       digits: 4,
-      note: `Real gas at 14.696 psia and 60 °F. Net ${formatFigure(gas.heatingValue.netRealBtuPerScf, { digits: 4 })}, Wobbe ${formatFigure(gas.heatingValue.wobbeRealBtuPerScf, { digits: 4 })}.`,
+      note: `Flashed by ${equationWords(equationOfState)}. Real gas at 14.696 psia and 60 °F. Net ${formatFigure(gas.heatingValue.netRealBtuPerScf, { digits: 4 })}, Wobbe ${formatFigure(gas.heatingValue.wobbeRealBtuPerScf, { digits: 4 })}.`,
     },
     gas &&
       liquids !== undefined && {
         label: "Surface gas, plant liquids",
         value: liquids,
         unit: "gal/Mscf",
-        note: gas.plantLiquids
+        note: `Flashed by ${equationWords(equationOfState)}: ${gas.plantLiquids
           .filter(({ gallonsPerMscf }) => gallonsPerMscf > 0)
           .map(({ name, gallonsPerMscf }) => `${name} ${formatFigure(gallonsPerMscf)}`)
-          .join(", "),
+          .join(", ")}`,
       },
   ].filter((row) => row !== null && row !== undefined && row !== false);
   return (

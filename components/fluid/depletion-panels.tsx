@@ -3,7 +3,7 @@
 import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import { ChartFrame, type ChartCell } from "@/components/charts/chart-frame";
 import { Plot, PlotDot, PlotLabel } from "@/components/charts/plot";
-import { linePath, positionOn, ticksOf, type Scale } from "@/components/charts/scale";
+import { linePath, percent, positionOn, ticksOf, type Scale } from "@/components/charts/scale";
 import { Figure } from "@/components/ui/figure";
 import { formatFigure, MISSING } from "@/components/ui/format";
 import { Flag, Unit } from "@/components/ui/text";
@@ -17,7 +17,9 @@ import {
   stateAt,
   type CurveState,
 } from "./curve-reading";
+import { LABEL_GAP, layoutLabels, type Placement } from "./label-layout";
 import { roundScale, yTicksOf } from "./plot-scale";
+import { useWidth } from "./use-width";
 import { psia } from "./words";
 
 export interface DepletionPanelsProps {
@@ -28,18 +30,39 @@ export interface DepletionPanelsProps {
   /** measured liquid, per cent of the cell; drawn as squares */
   measured: readonly { pressurePsia: number; liquidPercent: number | null }[];
   initialPressurePsia: number | null;
-  /** produced above the dew point, share of what is in place at first; `null` while unknown */
-  producedBefore: number | null;
   /** what speaks against any dropout at all, in a heading; `null` when nothing does */
   contradiction?: string | null;
+  /** produced above the dew point, share of what is in place at first; `null` while unknown */
+  producedBefore: number | null;
   /** liquid below this stays where it is, per cent of pore space */
   criticalBand: { low: number; high: number };
+  /** P50; liquid is measured in the pore space that water leaves. `null` while unknown: the band is drawn as it stands */
+  waterSaturation: number | null;
   abandonmentPressurePsia: number;
+  /** what depletion is compared on with other concepts, while it is known */
+  abandonmentRange: { p90: number; p10: number } | null;
   onAbandon: (pressurePsia: number) => void;
   fileName: string;
 }
 
 const LEFT = 46;
+const LIQUID_HEIGHT = 180;
+
+/** The band, which counts of all pore space, as per cent of what water leaves of it. */
+function ofHydrocarbons(
+  { low, high }: DepletionPanelsProps["criticalBand"],
+  waterSaturation: number | null,
+) {
+  const share = waterSaturation === null ? 1 : Math.max(1 - waterSaturation, 0.01);
+  return { low: low / share, high: high / share };
+}
+
+/** A label at its side of its point. */
+const besides = ({ side, dy }: Placement) => ({
+  anchor: side === "right" ? ("start" as const) : ("end" as const),
+  dx: side === "right" ? LABEL_GAP : -LABEL_GAP,
+  dy,
+});
 
 /** Curves that no measured depletion stands behind: said in words, and drawn dashed. */
 const doubts: Partial<Record<RecoveryRoute, string>> = {
@@ -56,7 +79,12 @@ export function DepletionPanels(props: DepletionPanelsProps) {
   const leastYield = Math.min(...points.map((point) => point.producingYieldStbPerMmscf));
   const doubt = doubts[curve.route];
   const hasLiquid = most.liquidSaturation > 0;
-  const lead = doubt ? `${doubt}: liquid` : "Liquid";
+  const lead =
+    doubt === undefined
+      ? "Liquid"
+      : curve.route === "correlation"
+        ? `${doubt}, liquid`
+        : `${doubt}: liquid`;
   return (
     <div className="depletion-panels">
       <ChartFrame
@@ -75,22 +103,30 @@ export function DepletionPanels(props: DepletionPanelsProps) {
               `Thin: ${props.others.map(({ label }) => label.toLowerCase()).join(", ")}. `}
             {back !== null &&
               `Below ${psia(most.pressurePsia)} psia ${formatFigure(back * 100, { digits: 2 })} points of it turn to vapour again. `}
-            Shaded: critical saturation; liquid below it stays in the rock. Drag the line, or use
-            the arrow keys.
+            Shaded: critical saturation; liquid below it stays in the rock
+            {props.waterSaturation === null
+              ? ". It counts of all pore space and liquid of what water leaves; water is not known yet. "
+              : `; it counts of all pore space, of which water takes ${formatFigure(props.waterSaturation * 100, { digits: 2 })} % (P50). `}
+            The line is one pressure, to be dragged or moved with the arrow keys
+            {props.abandonmentRange
+              ? "; concepts stand on a range of them: the band on the axis is depletion’s P90 to P10."
+              : "."}
           </>
         }
         fileName={fileName}
         data={{
           columns: [
+            { label: "Recovery from" },
             { label: "Pressure", unit: "psia" },
-            { label: "Liquid in the pores", unit: "%" },
-            { label: "Measured liquid", unit: "%" },
+            { label: "Liquid", unit: "% of hydrocarbon pore space" },
+            { label: "Measured liquid", unit: "% of hydrocarbon pore space" },
             { label: "Producing yield", unit: "STB/MMscf" },
             { label: "Condensate produced", unit: "% of that at the dew point" },
             { label: "Gas produced", unit: "% of that at the dew point" },
             { label: "Condensate left in the gas", unit: "% of that at the dew point" },
           ],
           rows: points.map((point): ChartCell[] => [
+            curve.label,
             point.pressurePsia,
             point.liquidSaturation * 100,
             measured.find(({ pressurePsia }) => Math.abs(pressurePsia - point.pressurePsia) < 0.5)
@@ -122,9 +158,13 @@ function Panels({
   initialPressurePsia,
   producedBefore,
   criticalBand,
+  waterSaturation,
   abandonmentPressurePsia,
+  abandonmentRange,
   onAbandon,
 }: DepletionPanelsProps) {
+  const [frame, width] = useWidth<HTMLDivElement>(640);
+  const band = ofHydrocarbons(criticalBand, waterSaturation);
   const before = producedBefore ?? 0;
   const { points, dewPointPsia } = curve.curve;
   const x = roundScale([0, Math.max(dewPointPsia * 1.06, initialPressurePsia ?? 0)], { count: 6 });
@@ -134,7 +174,7 @@ function Panels({
         shown.curve.points.map((point) => point.liquidSaturation * 100),
       ),
       ...measured.map(({ liquidPercent }) => liquidPercent ?? 0),
-      criticalBand.high * 1.15,
+      band.high * 1.15,
     ],
     { count: 4, least: 5 },
   );
@@ -161,24 +201,42 @@ function Panels({
       .join(" ");
   const saturation = (at: CurveState) => at.liquidSaturation * 100;
   const producing = (at: CurveState) => at.producingYieldStbPerMmscf;
-  const bandTop = 100 - positionOn(liquid, criticalBand.high);
-  const bandBottom = 100 - positionOn(liquid, criticalBand.low);
+  const bandTop = 100 - positionOn(liquid, band.high);
+  const bandBottom = 100 - positionOn(liquid, band.low);
   const mostAt = {
     x: positionOn(x, most.pressurePsia),
     y: 100 - positionOn(liquid, most.liquidSaturation * 100),
   };
+  const dewLabel = {
+    x: dewX,
+    y: 6,
+    lines: [`Dew point ${psia(dewPointPsia)}`],
+    side: "right",
+  } as const;
+  const mostLabel = {
+    x: mostAt.x,
+    y: Math.max(6, mostAt.y - 7),
+    lines: [
+      `Most liquid ${formatFigure(most.liquidSaturation * 100)} % at ${psia(most.pressurePsia)} psia`,
+    ],
+    side: "left",
+  } as const;
+  const [dewPlace, mostPlace] = layoutLabels([dewLabel, mostLabel], {
+    width: width - LEFT,
+    height: LIQUID_HEIGHT,
+  });
   const dewRule = (
     <line className="line-soft line-thin line-dashed" x1={dewX} x2={dewX} y1="0" y2="100" />
   );
 
   return (
-    <div className="panels-and-line">
+    <div className="panels-and-line" ref={frame}>
       <Plot
-        label={`Liquid in the pores against pressure, largest ${formatFigure(most.liquidSaturation * 100)} % at ${psia(most.pressurePsia)} psia; dew point ${psia(dewPointPsia)} psia; critical saturation ${formatFigure(criticalBand.low, { digits: 2 })} to ${formatFigure(criticalBand.high, { digits: 2 })} %.`}
-        height={180}
+        label={`Liquid in the hydrocarbon pore space against pressure, largest ${formatFigure(most.liquidSaturation * 100)} % at ${psia(most.pressurePsia)} psia; dew point ${psia(dewPointPsia)} psia; critical saturation ${formatFigure(criticalBand.low, { digits: 2 })} to ${formatFigure(criticalBand.high, { digits: 2 })} % of all pore space.`}
+        height={LIQUID_HEIGHT}
         left={LEFT}
         tone="rock"
-        yTitle="Liquid in the pores, % of pore space"
+        yTitle="Liquid, % of hydrocarbon pore space"
         yTicks={yTicksOf(liquid, 4, " %")}
         shapes={
           <>
@@ -197,10 +255,10 @@ function Panels({
       >
         <PlotLabel x={45} y={bandBottom} dy={10} soft>
           Critical saturation, {formatFigure(criticalBand.low, { decimals: 0 })} to{" "}
-          {formatFigure(criticalBand.high, { decimals: 0 })} %
+          {formatFigure(criticalBand.high, { decimals: 0 })} % of all pore space
         </PlotLabel>
-        <PlotLabel x={dewX} y={7} anchor={dewX > 80 ? "end" : "start"} dx={dewX > 80 ? -6 : 6} soft>
-          Dew point {psia(dewPointPsia)}
+        <PlotLabel x={dewX} y={dewLabel.y} {...besides(dewPlace)} soft>
+          {dewLabel.lines[0]}
         </PlotLabel>
         {measured.map(
           ({ pressurePsia, liquidPercent }) =>
@@ -214,13 +272,7 @@ function Panels({
             ),
         )}
         {most.liquidSaturation > 0 && (
-          <PlotLabel
-            {...mostAt}
-            anchor={mostAt.x > 55 ? "end" : "above"}
-            dx={mostAt.x > 55 ? -10 : 0}
-            dy={-7}
-            toned
-          >
+          <PlotLabel x={mostAt.x} y={mostLabel.y} {...besides(mostPlace)} toned>
             <b>Most liquid</b> {formatFigure(most.liquidSaturation * 100)} % at{" "}
             {psia(most.pressurePsia)} psia
           </PlotLabel>
@@ -257,6 +309,13 @@ function Panels({
         >
           <b>{formatFigure(points[0].producingYieldStbPerMmscf)}</b>
         </PlotLabel>
+        {abandonmentRange && (
+          <i
+            className="abandonment-span"
+            aria-hidden="true"
+            style={spanStyle(x, abandonmentRange)}
+          />
+        )}
       </Plot>
       <AbandonmentLine
         pressurePsia={abandonmentPressurePsia}
@@ -275,6 +334,12 @@ function Panels({
   );
 }
 
+/** Between P90 and P10, whichever is the lower pressure. */
+function spanStyle(x: Scale, { p90, p10 }: { p90: number; p10: number }) {
+  const [from, to] = [positionOn(x, Math.min(p90, p10)), positionOn(x, Math.max(p90, p10))];
+  return { left: percent(from), width: percent(to - from) };
+}
+
 /** What abandoning at the line brings. */
 function ReadOuts({ curve, abandonmentPressurePsia, producedBefore }: DepletionPanelsProps) {
   const states = fineStates(curve.curve);
@@ -286,7 +351,7 @@ function ReadOuts({ curve, abandonmentPressurePsia, producedBefore }: DepletionP
     {
       label: "Liquid in the pores",
       value: state && state.liquidSaturation * 100,
-      unit: "%",
+      unit: "% of hydrocarbons’",
     },
     {
       label: "Yield at that pressure",

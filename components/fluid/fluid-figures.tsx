@@ -20,6 +20,32 @@ export interface FluidFiguresProps {
   measuredDewPointPsia: number | null;
   temperatureDegF: number | null;
   initialPressurePsia: number | null;
+  /** the separator test is no measurement but a flash of the composition */
+  isComputed: boolean;
+}
+
+/** "untuned equation of state": the mark of every figure that it gives. */
+export const equationWords = (result: Pick<EquationOfStateResponse, "isTuned"> | null) =>
+  `${result?.isTuned ? "tuned" : "untuned"} equation of state`;
+
+/** Where a separator test comes from, for sources. */
+export const testWords = (
+  isComputed: boolean,
+  result: Pick<EquationOfStateResponse, "isTuned"> | null,
+) => (isComputed ? `flash of the composition, ${equationWords(result)}` : "separator test");
+
+/** One place decides a fluid's type: the composition where there is one, which takes the gas-oil ratio into account. */
+export function fluidTypeOf(
+  wellstream: WellstreamResponse | null,
+  composition: CompositionResponse | null,
+): { label: string; short: string; rule: string } | null {
+  if (composition) {
+    const { label, rule, source } = composition.fluidType;
+    return { label, short: `by ${rule.split(/: |; |\. /)[0]}`, rule: `${rule}; ${source}` };
+  }
+  if (!wellstream) return null;
+  const ratio = `by ${formatFigure(wellstream.surfaceGasOilRatioScfPerStb, { digits: 4 })} scf/STB`;
+  return { label: fluidTypeLabels[wellstream.fluidType], short: ratio, rule: "" };
 }
 
 /** The dew point to go by, and where it comes from: measured, computed, or estimated from the composition. */
@@ -35,7 +61,7 @@ export function dewPointOf({
   if (saturation?.upperPsia && saturation.kind === "dewPoint") {
     return {
       pressurePsia: saturation.upperPsia,
-      source: equationOfState?.isTuned ? "tuned equation of state" : "untuned equation of state",
+      source: equationWords(equationOfState),
     };
   }
   const estimate = composition?.dewPointEstimates[0];
@@ -49,9 +75,16 @@ export function dewPointOf({
 
 /** The figures a fluid is known by, large: those that exist. */
 export function FluidFigures(props: FluidFiguresProps) {
-  const { wellstream, composition, curve, temperatureDegF, initialPressurePsia } = props;
+  const { wellstream, composition, curve, temperatureDegF, initialPressurePsia, isComputed } =
+    props;
+  const equation = equationWords(props.equationOfState);
+  const fluidType = fluidTypeOf(wellstream, composition);
   const train = props.equationOfState?.train ?? null;
   const dewPoint = dewPointOf(props);
+  const standing =
+    props.equationOfState && temperatureDegF !== null
+      ? phaseStanding(props.equationOfState, temperatureDegF)
+      : null;
   const most = curve && mostLiquid(curve.curve);
   const gravity = wellstream?.wellstreamGravity ?? composition?.gravity ?? null;
   const surfaceShare = wellstream?.dryGasFraction ?? null;
@@ -63,9 +96,9 @@ export function FluidFigures(props: FluidFiguresProps) {
       value: wellstream?.condensateYieldStbPerMmscf ?? train?.condensateYieldStbPerMmscf ?? null,
       unit: "STB/MMscf surface gas",
       note: wellstream
-        ? `${formatFigure(wellstream.condensateYieldStbPerMmscfWellstream)} per MMscf of wellstream${train ? `; ${formatFigure(train.condensateYieldStbPerMmscf)} by equation of state` : ""}`
+        ? `${formatFigure(wellstream.condensateYieldStbPerMmscfWellstream)} per MMscf of wellstream${isComputed ? `; ${testWords(true, props.equationOfState)}` : train ? `; ${formatFigure(train.condensateYieldStbPerMmscf)} by ${equation}` : ""}`
         : train
-          ? "by equation of state"
+          ? equation
           : "needs a separator test",
     },
     {
@@ -77,14 +110,11 @@ export function FluidFigures(props: FluidFiguresProps) {
       note: dewPoint
         ? [
             dewPoint.source,
+            standing && "the equation of state gives none",
             margin !== null &&
               `${formatFigure(Math.abs(margin))} psi ${margin >= 0 ? "below" : "above"} initial`,
           ]
             .filter(Boolean)
-  const standing =
-    props.equationOfState && temperatureDegF !== null
-      ? phaseStanding(props.equationOfState, temperatureDegF)
-      : null;
             .join("; ")
         : (standing?.heading ?? "not measured"),
     },
@@ -93,7 +123,7 @@ export function FluidFigures(props: FluidFiguresProps) {
       value: most && most.liquidSaturation * 100,
       unit: most ? "%" : "",
       note: most
-        ? `at ${psia(most.pressurePsia)} psia; ${curve?.label.toLowerCase()}`
+        ? `of the hydrocarbons’ at ${psia(most.pressurePsia)} psia; ${curve?.label.toLowerCase()}`
         : "needs a composition or a depletion table",
     },
     {
@@ -105,25 +135,18 @@ export function FluidFigures(props: FluidFiguresProps) {
           ? `${formatFigure(composition.gravity)} from composition`
           : composition
             ? "from composition"
-            : "from the separator test",
+            : `from the ${testWords(isComputed, props.equationOfState)}`,
     },
     {
       name: "Surface gas fraction",
       value: surfaceShare,
-            standing && "the equation of state gives none",
       unit: "",
-      note: "of the wellstream, by mole",
+      note: `of the wellstream, by mole${isComputed && wellstream ? `; ${equation}` : ""}`,
     },
     {
       name: "Fluid type",
-      text:
-        composition?.fluidType.label ??
-        (wellstream ? fluidTypeLabels[wellstream.fluidType] : MISSING),
-      note: composition
-        ? `${composition.fluidType.rule}; ${composition.fluidType.source}`
-        : wellstream
-          ? "from the separator test"
-          : "",
+      text: (dewPoint === null ? standing?.type : undefined) ?? fluidType?.label ?? MISSING,
+      note: fluidType?.short ?? "",
     },
   ];
   return (
@@ -146,4 +169,3 @@ export function FluidFigures(props: FluidFiguresProps) {
     </dl>
   );
 }
-        (dewPoint === null ? standing?.type : undefined) ??

@@ -77,6 +77,7 @@ export function PhaseEnvelope(props: PhaseEnvelopeProps) {
       data={{
         columns: [
           { label: "Line" },
+          { label: "Equation of state" },
           { label: "Temperature", unit: "°F" },
           { label: "Pressure", unit: "psia" },
         ],
@@ -89,16 +90,17 @@ export function PhaseEnvelope(props: PhaseEnvelopeProps) {
 }
 
 function rowsOf(
-  { envelope, saturation }: EquationOfStateResponse,
+  { envelope, saturation, isTuned }: EquationOfStateResponse,
   temperatureDegF: number,
 ): ChartCell[][] {
-  const line = (name: string, points: readonly EnvelopePoint[]) =>
-    points.map((point): ChartCell[] => [name, point.temperatureDegF, point.pressurePsia]);
+  const tuned = isTuned ? "tuned" : "untuned";
+  const line = (name: string, points: readonly EnvelopePoint[], words = tuned) =>
+    points.map((point): ChartCell[] => [name, words, point.temperatureDegF, point.pressurePsia]);
   const one = (name: string, point: EnvelopePoint | null) => (point ? line(name, [point]) : []);
-  const at = (name: string, pressurePsia: number | null) =>
-    pressurePsia === null ? [] : line(name, [{ temperatureDegF, pressurePsia }]);
+  const at = (name: string, pressurePsia: number | null, words?: string) =>
+    pressurePsia === null ? [] : line(name, [{ temperatureDegF, pressurePsia }], words);
   return [
-    ...at("Dew point, measured", saturation.measuredPsia),
+    ...at("Dew point, measured", saturation.measuredPsia, "none"),
     ...at("Saturation, computed", saturation.upperPsia),
     ...at("Lower dew point, computed", saturation.lowerDewPointPsia),
     ...one("Critical point", envelope.critical),

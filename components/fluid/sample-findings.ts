@@ -4,6 +4,7 @@ import type {
   EquationOfStateResponse,
 } from "@/app/api/v1/calculations/fluid-schema";
 import type { WellstreamResponse } from "@/app/api/v1/calculations/schema";
+import { fluidTypeLabels } from "@/analytics/fluid/fluid-type";
 import type { SampleStudy } from "@/analytics/fluid/sample-study-schema";
 import type { Warning } from "@/analytics/warnings";
 import type { Finding } from "@/components/estimate/finding-list";
@@ -32,7 +33,15 @@ export interface SampleEvidence {
   dewPoints: { test: number | null; table: number | null };
   /** per cent of pore space */
   criticalBand: { low: number; high: number };
+  /** P50; `null` while unknown */
+  waterSaturation: number | null;
 }
+
+/** Warnings about the whole fluid: two calculations that give one mean the same. */
+const saidOnce = new Set(["sour_gas", "corrosive_gas", "untuned_equation_of_state"]);
+
+/** How a check that could not be made begins. */
+const NOT_CHECKED = "Not checked: ";
 
 const tones = { passed: "done", warning: "warning", failed: "caution" } as const;
 
@@ -40,6 +49,7 @@ const tones = { passed: "done", warning: "warning", failed: "caution" } as const
 export function sampleFindings(evidence: SampleEvidence): Finding[] {
   return [
     ...gravities(evidence),
+    ...fluidTypes(evidence),
     ...dewPoints(evidence),
     ...tuningAge(evidence),
     ...yields(evidence),
@@ -55,7 +65,9 @@ export function sampleFindings(evidence: SampleEvidence): Finding[] {
         ({ code, message }, index, all) =>
           // The separator test's own findings say it already.
           !evidence.wellstream?.warnings.some((told) => told.code === code) &&
-          all.findIndex((other) => other.message === message) === index,
+          all.findIndex((other) =>
+            saidOnce.has(code) ? other.code === code : other.message === message,
+          ) === index,
       )
       .map(
         ({ severity, message }): Finding => ({
@@ -63,6 +75,20 @@ export function sampleFindings(evidence: SampleEvidence): Finding[] {
           text: message,
         }),
       ),
+  ];
+}
+
+/** The composition decides a fluid's type; a gas-oil ratio that says another is named. */
+function fluidTypes({ wellstream, composition }: SampleEvidence): Finding[] {
+  if (!wellstream || !composition || wellstream.fluidType === composition.fluidType.type) return [];
+  const { label, rule } = composition.fluidType;
+  const other = fluidTypeLabels[wellstream.fluidType].toLowerCase();
+  return [
+    {
+      tone: "warning",
+      title: "Two rules disagree",
+      text: `${label} by the composition (${rule.split(". ")[0]}), ${other} by ${formatFigure(wellstream.surfaceGasOilRatioScfPerStb, { digits: 4 })} scf/STB alone. The composition’s is shown.`,
+    },
   ];
 }
 
@@ -79,7 +105,7 @@ function tableChecks({ depletion }: SampleEvidence): Finding[] {
       found.filter((other) => other.code === code && other.severity === severity).length - 1;
     return [
       {
-        tone: tones[severity],
+        tone: message.startsWith(NOT_CHECKED) ? "open" : tones[severity],
         title,
         text: more === 0 ? message : `${message} And ${more} more of the kind.`,
       },
@@ -150,10 +176,11 @@ function yields({ wellstream, equationOfState }: SampleEvidence): Finding[] {
   ];
 }
 
-function band({ curve, criticalBand }: SampleEvidence): Finding[] {
+/** Liquid counts of what water leaves, critical saturation of all pore space: compared as estimates compare them. */
+function band({ curve, criticalBand, waterSaturation }: SampleEvidence): Finding[] {
   if (!curve) return [];
   const most = mostLiquid(curve.curve);
-  const percent = most.liquidSaturation * 100;
+  const percent = most.liquidSaturation * (1 - (waterSaturation ?? 0)) * 100;
   if (percent <= criticalBand.low) return [];
   const isOver = percent > criticalBand.high;
   return [
@@ -162,7 +189,7 @@ function band({ curve, criticalBand }: SampleEvidence): Finding[] {
       title: isOver
         ? "Dropout passes the critical saturation"
         : "Dropout reaches into the critical band",
-      text: `${formatFigure(percent)} % at ${psia(most.pressurePsia)} psia, band ${formatFigure(criticalBand.low, { digits: 2 })} to ${formatFigure(criticalBand.high, { digits: 2 })} %: ${isOver ? "some" : "some perhaps"} of it may flow, while these figures leave all of it in the rock.`,
+      text: `${formatFigure(percent)} % of ${waterSaturation === null ? "what water leaves of the pores" : "all pore space"} at ${psia(most.pressurePsia)} psia, band ${formatFigure(criticalBand.low, { digits: 2 })} to ${formatFigure(criticalBand.high, { digits: 2 })} %: ${isOver ? "part of it may flow" : "part of it may begin to flow"}, while these figures leave all of it in the rock.`,
     },
   ];
 }

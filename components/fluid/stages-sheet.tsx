@@ -24,6 +24,8 @@ export interface StagesSheetProps {
   state: Omit<EntryState, "onChange" | "cells">;
   /** there is a separator test whose separators can be taken */
   hasTest: boolean;
+  /** the equation of state that the streams are flashed by */
+  isTuned: boolean;
   /** nobody has given any: the usual ones stand in */
   isAssumed?: boolean;
   /** absent: the sheet is read, not typed */
@@ -40,6 +42,7 @@ export function StagesSheet({
   train,
   state,
   hasTest,
+  isTuned,
   isAssumed = false,
   onChange,
 }: StagesSheetProps) {
@@ -157,7 +160,8 @@ export function StagesSheet({
               {train && (
                 <tr className="total">
                   <th scope="row" colSpan={3}>
-                    Computed: all stages, {train.condensateApi.toFixed(1)} <Unit>°API</Unit>
+                    {isTuned ? "Tuned flash" : "Untuned flash"}, all stages:{" "}
+                    {train.condensateApi.toFixed(1)} <Unit>°API</Unit>
                   </th>
                   <td className="right">
                     <Figure value={train.totalGasScfPerStb} />

@@ -102,6 +102,8 @@ describe("DepletionPanels", () => {
       initialPressurePsia={5900}
       producedBefore={0.1}
       criticalBand={{ low: 10, high: 20 }}
+      waterSaturation={0.2}
+      abandonmentRange={{ p90: 800, p10: 1400 }}
       abandonmentPressurePsia={1000}
       onAbandon={() => undefined}
       fileName="depletion"
@@ -120,7 +122,7 @@ describe("DepletionPanels", () => {
   });
 
   it("marks an untuned curve in its heading and by dashes", () => {
-    expect(html).toContain("Untuned: liquid takes up to 20.0 % of the pores");
+    expect(html).toContain("Untuned: liquid takes up to 20.0 % of the gas’s pore space");
     expect(html).toMatch(/class="line line-dashed"/);
   });
 });

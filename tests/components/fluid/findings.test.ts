@@ -17,6 +17,7 @@ const nothing: SampleEvidence = {
   tuning: null,
   dewPoints: { test: null, table: null },
   criticalBand: { low: 10, high: 20 },
+  waterSaturation: null,
 };
 const curve = {
   route: "untunedEquationOfState" as const,

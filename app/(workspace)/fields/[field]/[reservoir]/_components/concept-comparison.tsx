@@ -20,10 +20,10 @@ import { routeWords, type AvailableCurve } from "@/components/fluid/available-cu
 import { AssumptionTable, type ConceptTexts } from "@/components/recovery/assumption-table";
 import {
   conceptText,
-  editsOfPlan,
   isEdited,
   noEdits,
   withEdit,
+  type ConceptEdits,
   type ConceptStart,
 } from "@/components/recovery/concept-assumptions";
 import { ConceptBars } from "@/components/recovery/concept-bars";
@@ -52,6 +52,9 @@ export interface ConceptComparisonProps {
   route?: RecoveryRoute | null;
   /** per cent of pore space, as set at the curve */
   criticalBand: { low: number; high: number };
+  /** what was typed over the figures to start from */
+  edits: ConceptEdits;
+  onEdits: (edits: ConceptEdits) => void;
   /** why there is no curve, where that is known */
   noCurveReason: string | null;
   /** stands beside the bars on a wide screen */
@@ -85,12 +88,13 @@ function Comparison({
   fluid,
   sampleName,
   criticalBand,
+  edits,
+  onEdits,
   beside,
   text,
 }: ConceptComparisonProps & { chosen: AvailableCurve; text: EstimateText }) {
   const { place, shown, draft, reading, resultBasis } = useReservoir();
   const planned = text.usesPlan ? text.plan : null;
-  const [edits, setEdits] = useState(() => (planned ? editsOfPlan(planned) : noEdits));
   const [using, setUsing] = useState<ProducingConcept | null>(null);
   const pressure = reading?.inputs.pressurePsia.compiled?.range;
   const start: ConceptStart = {
@@ -124,8 +128,7 @@ function Comparison({
   const cycling = concepts.find(({ gasBalance }) => gasBalance !== null);
   const unread = producingConcepts.filter((concept) => !texts[concept].reading.plan);
   const findings = warningsByConcept(concepts);
-  const change = (now: PlanText, next: PlanText) =>
-    setEdits((current) => withEdit(current, now, next));
+  const change = (now: PlanText, next: PlanText) => onEdits(withEdit(edits, now, next));
 
   return (
     <Stack close>
@@ -133,7 +136,7 @@ function Comparison({
         {beside}
         <Stack close>
           <ChartFrame
-            title={conceptFinding(concepts, factor, unit)}
+            title={markedTitle(conceptFinding(concepts, factor, unit), chosen.route)}
             note={
               inPlace === undefined
                 ? "Condensate in place, by where it ends up."
@@ -199,7 +202,7 @@ function Comparison({
             place. What changes here changes the comparison, and the draft only when a concept is
             used.{" "}
             {isEdited(edits) && (
-              <Button size="small" onClick={() => setEdits(noEdits)}>
+              <Button size="small" onClick={() => onEdits(noEdits)}>
                 Start from common practice again
               </Button>
             )}
@@ -247,6 +250,13 @@ function Comparison({
       )}
     </Stack>
   );
+}
+
+/** A heading that no measured depletion stands behind says so. */
+function markedTitle(title: string, route: RecoveryRoute): string {
+  const words = title[0].toLowerCase() + title.slice(1);
+  if (route === "correlation") return `By correlation, ${words}`;
+  return route === "untunedEquationOfState" ? `Untuned: ${words}` : title;
 }
 
 function UseLink({

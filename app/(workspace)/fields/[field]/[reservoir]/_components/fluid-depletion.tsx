@@ -6,6 +6,7 @@ import { CriticalBandFields } from "@/components/fluid/critical-band-fields";
 import { DepletionPanels } from "@/components/fluid/depletion-panels";
 import { DepletionSheet } from "@/components/fluid/depletion-sheet";
 import { emptyDepletion } from "@/components/fluid/depletion-text";
+import { fluidTypeOf } from "@/components/fluid/fluid-figures";
 import { GasCompositionChart } from "@/components/fluid/gas-composition-chart";
 import { producedBeforeDewPoint } from "@/components/fluid/above-dew-point";
 import { HoffmannPlot } from "@/components/fluid/hoffmann-plot";
@@ -46,6 +47,8 @@ export function FluidDepletion(props: DepletionProps) {
           sampleName={props.sampleName}
           route={props.curve?.route}
           criticalBand={props.criticalBand}
+          edits={props.edits}
+          onEdits={props.onEdits}
           noCurveReason={study.noCurveReason}
           beside={<Panels {...props} />}
         />
@@ -73,7 +76,10 @@ export function FluidDepletion(props: DepletionProps) {
           )}
           {wellstream && (
             <Section title="The gas in numbers">
-              <GasTable wellstream={wellstream} />
+              <GasTable
+                wellstream={wellstream}
+                fluidType={study.composition.data && fluidTypeOf(null, study.composition.data)}
+              />
             </Section>
           )}
           {wellstream && <DailyRates wellstream={wellstream} />}
@@ -93,6 +99,8 @@ function Panels({
   onAbandon,
   criticalBand,
   setCriticalBand,
+  waterSaturation,
+  abandonmentRange,
 }: DepletionProps) {
   const { curves, table } = study;
   if (!curve || abandonment === null) {
@@ -119,11 +127,13 @@ function Panels({
           table?.rows.filter(({ pressurePsia }) => pressurePsia <= table.dewPointPsia) ?? []
         }
         initialPressurePsia={reservoir?.pressurePsia ?? null}
+        contradiction={study.standing?.heading ?? null}
         criticalBand={criticalBand}
+        waterSaturation={waterSaturation}
+        abandonmentRange={abandonmentRange}
         producedBefore={producedBeforeDewPoint(
           study.wellstream.data?.pseudocritical ?? null,
           reservoir,
-        contradiction={study.standing?.heading ?? null}
           curve.curve.dewPointPsia,
         )}
         abandonmentPressurePsia={abandonment}
@@ -178,14 +188,15 @@ function TableSection({ draft, study, mayType, reservoir, remarks, setRemarks }:
   }
   const { depletion } = text;
   const worst = findings.filter(({ severity }) => severity !== "passed");
+  const asked = worst.filter(({ message }) => !message.startsWith("Not checked"));
   return (
     <Section
       title="Depletion table"
       note={
         findings.length > 0
-          ? worst.length === 0
-            ? `${findings.length} checks passed.`
-            : `${worst.length} of ${findings.length} checks ask for a look: they stand under “Does the sample hold together?”.`
+          ? asked.length === 0
+            ? `${findings.length - worst.length} checks passed${worst.length > 0 ? `, ${worst.length} could not be made` : ""}.`
+            : `${asked.length} of ${findings.length} checks ask for a look: they stand under “Does the sample hold together?”.`
           : "Constant volume, pressures from the dew point down. Empty cells: not reported."
       }
       tools={

@@ -107,7 +107,14 @@ export function keep(
       );
 }
 
-function ChecksSection({ draft, study, reservoir, criticalBand, curve }: FluidPartProps) {
+function ChecksSection({
+  draft,
+  study,
+  reservoir,
+  criticalBand,
+  waterSaturation,
+  curve,
+}: FluidPartProps) {
   const { text, reading } = draft;
   const wellstream = study.wellstream.data ?? null;
   const isMeasured = text.origin === "measured";
@@ -125,6 +132,7 @@ function ChecksSection({ draft, study, reservoir, criticalBand, curve }: FluidPa
         table: study.table?.dewPointPsia ?? null,
       },
       criticalBand,
+      waterSaturation,
     }),
     ...(wellstream && isMeasured
       ? fluidFindings(wellstream, study.measuredDewPointPsia, reservoir)
@@ -132,9 +140,15 @@ function ChecksSection({ draft, study, reservoir, criticalBand, curve }: FluidPa
   ];
   if (findings.length === 0) return null;
   const passed = findings.filter(({ tone }) => tone === "done");
+  const notMade = findings.filter(({ tone }) => tone === "open");
   return (
     <Section id="checks" title="Does the sample hold together?">
-      <FindingList findings={findings.filter(({ tone }) => tone !== "done")} />
+      <FindingList findings={findings.filter(({ tone }) => tone !== "done" && tone !== "open")} />
+      {notMade.length > 0 && (
+        <Disclosure label={`Not checked: ${notMade.length}`}>
+          <FindingList findings={notMade} />
+        </Disclosure>
+      )}
       {passed.length > 0 && (
         <Disclosure
           label={passed.length === 1 ? "One check passed" : `${passed.length} checks passed`}

@@ -99,6 +99,7 @@ function EquationOfStateSection({ draft, study, mayType, remarks }: FluidPartPro
           stages={reading.stages}
           train={study.equationOfState.data?.train ?? null}
           isAssumed={reading.isStagesAssumed && study.sheet !== null}
+          isTuned={study.equationOfState.data?.isTuned ?? false}
           hasTest={reading.separator.test !== null && text.origin === "measured"}
           state={{
             fields: reading.stagesReading?.fields ?? {},

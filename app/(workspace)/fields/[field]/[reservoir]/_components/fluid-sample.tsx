@@ -6,9 +6,16 @@ import { useCan } from "@/app/_client/use-session";
 import type { FluidSampleView } from "@/app/api/v1/fluid-samples/schema";
 import { isSameFluid } from "@/components/estimate/differences";
 import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
+import { readPlan } from "@/components/estimate/plan-reading";
 import type { AvailableCurve } from "@/components/fluid/available-curves";
-import { FluidFigures } from "@/components/fluid/fluid-figures";
+import { FluidFigures, testWords } from "@/components/fluid/fluid-figures";
 import { noRemarks, type SheetRemarks } from "@/components/fluid/take-lab-sheet";
+import {
+  conceptText,
+  editsOfPlan,
+  noEdits,
+  type ConceptEdits,
+} from "@/components/recovery/concept-assumptions";
 import { Button } from "@/components/ui/button";
 import { formatDate } from "@/components/ui/format";
 import { Stack } from "@/components/ui/section";
@@ -43,7 +50,7 @@ export function FluidSample({
   chooser: ReactNode;
   onSaved: (sample: FluidSampleView) => void;
 }) {
-  const { page, reading: estimate, draft: estimateDraft } = useReservoir();
+  const { page, reading: estimate, draft: estimateDraft, text: estimateText } = useReservoir();
   const can = useCan();
   const mayType = can(sample ? "fluidSample.update" : "fluidSample.create");
   const [isUsing, setUsing] = useState(false);
@@ -51,12 +58,34 @@ export function FluidSample({
   const [route, setRoute] = useState<RecoveryRoute | null>(null);
   const [typedAbandonment, setAbandonment] = useState<number | null>(null);
   const [criticalBand, setCriticalBand] = useState(usualCriticalBand);
+  const [typedEdits, setEdits] = useState<ConceptEdits | null>(null);
+  const planned = estimateText?.usesPlan ? estimateText.plan : null;
+  const edits = typedEdits ?? (planned ? editsOfPlan(planned) : noEdits);
   const { text, reading } = draft;
   const reservoir = stateOf(estimate);
   const study = useFluidStudy(text, reading, reservoir);
   const wellstream = study.wellstream.data ?? null;
   const curve =
     study.curves.find((candidate) => candidate.route === route) ?? study.curves.at(0) ?? null;
+  // The line begins where depletion is compared with other concepts: at P50 of what is assumed there.
+  const depletion =
+    curve &&
+    estimateText &&
+    readPlan(
+      conceptText(
+        "depletion",
+        {
+          curve: curve.curve,
+          sampleName: sample?.name ?? null,
+          pressurePsia: estimate?.inputs.pressurePsia.compiled?.range ?? null,
+          depthFt: estimateText.depthFt,
+          criticalSaturation: { low: criticalBand.low / 100, high: criticalBand.high / 100 },
+        },
+        edits,
+      ),
+    );
+  const abandonmentRange =
+    (depletion && depletion.inputs.abandonmentPressurePsia.compiled?.range) ?? null;
   const place = `${page.field.slug}-${page.slug}`;
   const isReady = wellstream !== null && study.test !== null && !study.wellstream.error;
   const shared = {
@@ -71,7 +100,11 @@ export function FluidSample({
     setCriticalBand,
     curve,
     setRoute,
-    abandonment: curve && abandonmentOn(curve, typedAbandonment),
+    waterSaturation: estimate?.inputs.waterSaturation.compiled?.range.p50 ?? null,
+    edits,
+    onEdits: setEdits,
+    abandonmentRange,
+    abandonment: curve && abandonmentOn(curve, typedAbandonment ?? abandonmentRange?.p50 ?? null),
     onAbandon: setAbandonment,
   };
 
@@ -125,6 +158,7 @@ export function FluidSample({
         measuredDewPointPsia={study.measuredDewPointPsia}
         temperatureDegF={study.temperatureDegF}
         initialPressurePsia={reservoir?.pressurePsia ?? null}
+        isComputed={text.origin === "computed"}
       />
       <Failures study={study} />
       <div className="fluid-top">
@@ -151,6 +185,7 @@ export function FluidSample({
           {...(sample && isSameFluid(sample.separatorTest, study.test)
             ? { test: sample.separatorTest, sampleId: sample.id }
             : { test: study.test, sampleId: null })}
+          origin={testWords(text.origin === "computed", study.equationOfState.data)}
           yieldStbPerMmscf={wellstream.condensateYieldStbPerMmscf}
         />
       )}
@@ -171,6 +206,13 @@ export interface FluidPartProps {
   /** per cent of pore space */
   criticalBand: { low: number; high: number };
   setCriticalBand: (band: { low: number; high: number }) => void;
+  /** P50 of the estimate; `null` while unknown */
+  waterSaturation: number | null;
+  /** what was typed over the concepts' figures to start from */
+  edits: ConceptEdits;
+  onEdits: (edits: ConceptEdits) => void;
+  /** of depletion; `null` while unknown */
+  abandonmentRange: { p90: number; p50: number; p10: number } | null;
   /** what figures stand on; `null` while there is none */
   curve: AvailableCurve | null;
   setRoute: (route: RecoveryRoute) => void;

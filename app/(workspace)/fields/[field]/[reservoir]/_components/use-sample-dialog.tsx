@@ -19,12 +19,15 @@ export function UseSampleDialog({
   onClose,
   test,
   sampleId,
+  origin,
   yieldStbPerMmscf,
 }: {
   open: boolean;
   onClose: () => void;
   test: SeparatorTest;
   sampleId: string | null;
+  /** what the test is: "separator test" for a measured one */
+  origin: string;
   yieldStbPerMmscf: number;
 }) {
   const { draft, place, page, withBasis } = useReservoir();
@@ -42,7 +45,7 @@ export function UseSampleDialog({
   const sampleName = page.fluidSamples.find(({ id }) => id === sampleId)?.name;
 
   function handleUse() {
-    const source = `${sampleName ? `Sample ${sampleName}, separator test` : "Separator test"} ± ${spread.replace("%", "").trim()} %`;
+    const source = `${sampleName ? `Sample ${sampleName}, ${origin}` : origin[0].toUpperCase() + origin.slice(1)} ± ${spread.replace("%", "").trim()} %`;
     draft?.setFluid(
       test,
       sampleId,
