@@ -35,6 +35,10 @@ const advice: Record<FluidTaskName, string> = {
     "Try other adjustments, fewer of them, or begin from the untouched ones; the characterisation is as it was.",
 };
 
+/** Deep in a calculation a name may be none of the question's; such a fault is about the whole of it. */
+const placeIn = (question: object, input: string | undefined) =>
+  input !== undefined && input.split(".")[0] in question ? input : undefined;
+
 /**
  * One of the calculations that run on a thread.
  *
@@ -52,7 +56,7 @@ export async function calculateOnFluid<Name extends FluidTaskName>(
     return await runOnFluid(name, question, options);
   } catch (error) {
     if (error instanceof DomainError) {
-      const pointer = toPointer(error.details.input);
+      const pointer = toPointer(placeIn(question, error.details.input));
       throw new InvalidInputError([{ pointer, detail: error.message }]);
     }
     if (error instanceof ConvergenceError) {

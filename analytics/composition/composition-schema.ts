@@ -70,9 +70,18 @@ export const compositionSheetSchema = z.discriminatedUnion("kind", [
 ]);
 export type CompositionSheet = z.infer<typeof compositionSheetSchema>;
 
-/** One stage of the separators, in the direction of flow; the last one is the stock tank. */
+const stagePressure = "A separator's pressure lies between 14.65 and 3,000 psia";
+const stageTemperature = "A separator's temperature lies between 30 and 200 °F";
+
+/**
+ * One stage of the separators, in the direction of flow; the last one is the stock tank. It can be what a stage of a
+ * separator test can be.
+ */
 export const separatorStageSchema = z
-  .object({ pressurePsia: z.number().positive(), temperatureDegF: z.number() })
+  .object({
+    pressurePsia: z.number().min(14.65, stagePressure).max(3000, stagePressure),
+    temperatureDegF: z.number().min(30, stageTemperature).max(200, stageTemperature),
+  })
   .strict();
 export const separatorStagesSchema = z.array(separatorStageSchema).min(1).max(6);
 export type SeparatorStage = z.infer<typeof separatorStageSchema>;

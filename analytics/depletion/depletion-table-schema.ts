@@ -1,12 +1,14 @@
 import { z } from "zod";
 import { reportedStreamSchema } from "../composition/composition-schema";
-
-const positive = z.number().positive();
+import {
+  reservoirPressureSchema,
+  reservoirTemperatureSchema,
+} from "../fluid/reservoir-state-schema";
 
 /** One pressure step. `null` where the laboratory did not report. */
 export const depletionRowSchema = z
   .object({
-    pressurePsia: positive,
+    pressurePsia: reservoirPressureSchema,
     /** retrograde liquid, per cent of the cell's volume at the dew point */
     liquidPercent: z.number().nullable(),
     /** produced wellstream so far, mole per cent of the fluid at the dew point */
@@ -28,8 +30,8 @@ export type DepletionRow = z.infer<typeof depletionRowSchema>;
  */
 export const depletionTableSchema = z
   .object({
-    temperatureDegF: z.number(),
-    dewPointPsia: positive,
+    temperatureDegF: reservoirTemperatureSchema,
+    dewPointPsia: reservoirPressureSchema,
     rows: z.array(depletionRowSchema).min(2).max(40),
   })
   .strict();

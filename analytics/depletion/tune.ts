@@ -2,28 +2,17 @@
 import type { Stream } from "../composition/stream";
 import { ConvergenceError, DomainError } from "../errors";
 import { characterise } from "../equation-of-state/characterise";
-import type {
-  Adjustments,
-  Characterisation,
-  TunableName,
+import {
+  tuningBounds,
+  type Adjustments,
+  type Characterisation,
+  type TunableName,
 } from "../equation-of-state/characterisation-schema";
 import { fitLeastSquares } from "../numerics/least-squares";
 import type { Warning } from "../warnings";
 import type { DepletionTable } from "./depletion-table-schema";
 import { psia } from "./findings";
 import { depleteCell, type SimulatedDepletion } from "./simulate-depletion";
-
-/** How far a regression may move each adjustment. Common practice, no source. */
-export const tuningBounds: Readonly<
-  Record<TunableName, { readonly lowest: number; readonly highest: number }>
-> = {
-  heavyCriticalTemperatureFactor: { lowest: 0.85, highest: 1.15 },
-  heavyCriticalPressureFactor: { lowest: 0.7, highest: 1.4 },
-  heavyAcentricFactorFactor: { lowest: 0.7, highest: 1.4 },
-  methaneHeavyInteractionFactor: { lowest: 0, highest: 4 },
-  // It moves the density of the stock-tank liquid with it, so not far.
-  heavyVolumeShiftFactor: { lowest: 0.5, highest: 1.5 },
-};
 
 /**
  * What a miss counts: one unit of each. The dew point decides where liquid begins, so it weighs most; liquid and

@@ -28,7 +28,33 @@ export const tunableNames = [
 export const tunableNameSchema = z.enum(tunableNames);
 export type TunableName = z.infer<typeof tunableNameSchema>;
 
-export const adjustmentsSchema = z.record(tunableNameSchema, z.number());
+/** How far a regression may move each adjustment, and how far one can be set. Common practice, no source. */
+export const tuningBounds: Readonly<
+  Record<TunableName, { readonly lowest: number; readonly highest: number }>
+> = {
+  heavyCriticalTemperatureFactor: { lowest: 0.85, highest: 1.15 },
+  heavyCriticalPressureFactor: { lowest: 0.7, highest: 1.4 },
+  heavyAcentricFactorFactor: { lowest: 0.7, highest: 1.4 },
+  methaneHeavyInteractionFactor: { lowest: 0, highest: 4 },
+  // It moves the density of the stock-tank liquid with it, so not far.
+  heavyVolumeShiftFactor: { lowest: 0.5, highest: 1.5 },
+};
+
+function factorOf(name: TunableName) {
+  const { lowest, highest } = tuningBounds[name];
+  const message = `This factor lies between ${lowest} and ${highest}`;
+  return z.number().min(lowest, message).max(highest, message);
+}
+
+export const adjustmentsSchema = z
+  .object({
+    heavyCriticalTemperatureFactor: factorOf("heavyCriticalTemperatureFactor"),
+    heavyCriticalPressureFactor: factorOf("heavyCriticalPressureFactor"),
+    heavyAcentricFactorFactor: factorOf("heavyAcentricFactorFactor"),
+    methaneHeavyInteractionFactor: factorOf("methaneHeavyInteractionFactor"),
+    heavyVolumeShiftFactor: factorOf("heavyVolumeShiftFactor"),
+  })
+  .strict();
 export type Adjustments = z.infer<typeof adjustmentsSchema>;
 
 export const untouched: Adjustments = {

@@ -1,9 +1,9 @@
 import type { CompositionSheet } from "@/analytics/composition/composition-schema";
 import { readComposition } from "@/analytics/composition/read-sheet";
 import type { DepletionTable } from "@/analytics/depletion/depletion-table-schema";
-import { tune, type Fit } from "@/analytics/depletion/tune";
+import { tune, type Fit, type TuningProblem } from "@/analytics/depletion/tune";
 import { tuningKey } from "@/analytics/depletion/tuning-record";
-import { underPath } from "@/analytics/errors";
+import { DomainError, underPath } from "@/analytics/errors";
 import type {
   Characterisation,
   TunableName,
@@ -26,7 +26,7 @@ export interface TuningQuestion {
  */
 export function proposeTuning({ sheet, ...problem }: TuningQuestion) {
   const { stream, warnings } = underPath("sheet", () => readComposition(sheet));
-  const { before, after, changes, ...proposal } = tune({ ...problem, stream });
+  const { before, after, changes, ...proposal } = propose({ ...problem, stream });
   const { characterisation } = proposal;
   return {
     characterisation,
@@ -42,6 +42,17 @@ export function proposeTuning({ sheet, ...problem }: TuningQuestion) {
     iterations: proposal.iterations,
     warnings: [...warningsUnder("sheet", warnings), ...proposal.warnings],
   };
+}
+
+/** A depletion knows its temperature by itself; here it stands in the table. */
+function propose(problem: TuningProblem) {
+  try {
+    return tune(problem);
+  } catch (error) {
+    const { input } = error instanceof DomainError ? error.details : {};
+    if (!(error instanceof DomainError) || input !== "temperatureDegF") throw error;
+    throw new DomainError(error.message, { ...error.details, input: `table.${input}` });
+  }
 }
 
 const plainFit = ({ rows, ...fit }: Fit) => ({ ...fit, rows: [...rows] });

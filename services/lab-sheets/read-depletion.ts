@@ -1,5 +1,9 @@
 import type { ReportedStream } from "@/analytics/composition/composition-schema";
-import type { DepletionRow, DepletionTable } from "@/analytics/depletion/depletion-table-schema";
+import {
+  depletionTableSchema,
+  type DepletionRow,
+  type DepletionTable,
+} from "@/analytics/depletion/depletion-table-schema";
 import type { CsvRecord } from "../csv-records";
 import { componentOf, type NamedComponent } from "./component-names";
 import {
@@ -269,12 +273,18 @@ export class DepletionReader {
         producedGas: gas.isEmpty ? null : gas.finish(step.gasScale),
       };
     });
-    this.say(rows);
-    return {
+    const table = {
       temperatureDegF,
       dewPointPsia: this.lines.dewPointPsia ?? start.pressurePsia,
       rows,
     };
+    const parsed = depletionTableSchema.safeParse(table);
+    if (!parsed.success) {
+      this.refuse(`${parsed.error.issues[0].message}.`);
+      return null;
+    }
+    this.say(rows);
+    return parsed.data;
   }
 
   private refuse(reason: string): void {

@@ -125,7 +125,7 @@ export class SeparatorReader {
         this.first?.line ?? 1,
         null,
         "",
-        "There is no stage with pressure and temperature. No separators were read.",
+        `${stages.length === 0 ? "There is no stage with pressure and temperature" : parsed.error.issues[0].message}. No separators were read.`,
       );
       return null;
     }

@@ -190,6 +190,68 @@ describe("POST /api/v1/calculations/depletion", () => {
     const failed = body.findings.filter(({ severity }) => severity === "failed");
     expect(failed.some(({ row }) => row === 3)).toBe(true);
   });
+
+  it("keeps a failed check with the curve, for the estimate that it goes into to repeat", async () => {
+    const rows = table.rows.map((row, index) =>
+      index === 3 ? { ...row, liquidPercent: 45 } : row,
+    );
+    const body = await ask<DepletionResponse>("depletion", {
+      sheet,
+      table: { ...table, rows },
+      stages,
+      characterisation,
+    });
+    depletionResponseSchema.parse(body);
+    expect(body.method).toBe("equationOfState");
+    expect(body.curve?.doubts).toEqual([expect.stringMatching(/^Check “.*” fails\. Row 4/)]);
+  });
+});
+
+describe("calculations on fluids, of what cannot be", () => {
+  const adjustments = { ...characterisation.adjustments, heavyVolumeShiftFactor: 10 };
+  const conditions = {
+    sheet,
+    characterisation,
+    temperatureDegF: 220,
+    reservoirPressurePsia: 1e300,
+    flowingPressurePsia: 3000,
+    relativePermeability: {
+      gasExponent: 2,
+      condensateExponent: 2,
+      criticalCondensateSaturation: 0.15,
+      residualGasSaturation: 0.1,
+    },
+  };
+  const tunables = ["heavyCriticalTemperatureFactor"];
+
+  it.each([
+    ["equation-of-state", { ...fluid, temperatureDegF: -200 }, "#/temperatureDegF"],
+    [
+      "equation-of-state",
+      { ...fluid, characterisation: { ...characterisation, adjustments } },
+      "#/characterisation/adjustments/heavyVolumeShiftFactor",
+    ],
+    [
+      "equation-of-state",
+      { ...fluid, stages: [{ pressurePsia: 9000, temperatureDegF: 80 }, stages[1]] },
+      "#/stages/0/pressurePsia",
+    ],
+    [
+      "tuning",
+      { sheet, characterisation, tunables, table: { ...table, temperatureDegF: -200 } },
+      "#/table/temperatureDegF",
+    ],
+    ["near-well", conditions, "#/reservoirPressurePsia"],
+    [
+      "composition",
+      { sheet, reservoir: { pressurePsia: 5000, temperatureDegF: 1000 } },
+      "#/reservoir/temperatureDegF",
+    ],
+  ])("refuses it in %s with its range, at its field: %j", async (name, body, pointer) => {
+    const { errors } = await refused(name, body);
+    expect(errors?.map((error) => error.pointer)).toEqual([pointer]);
+    expect(errors?.[0].detail).toMatch(/between|at most/);
+  });
 });
 
 describe("POST /api/v1/calculations/tuning", () => {

@@ -1,8 +1,9 @@
 import { describe, expect, it } from "vitest";
 import { simulateDepletion } from "@/analytics/depletion/simulate-depletion";
-import { tune, tuningBounds } from "@/analytics/depletion/tune";
+import { tune } from "@/analytics/depletion/tune";
 import { characterise } from "@/analytics/equation-of-state/characterise";
 import {
+  tuningBounds,
   untouched,
   type Characterisation,
   type TunableName,

@@ -284,6 +284,24 @@ describe("readLabSheet: depletion tables", () => {
   });
 });
 
+describe("readLabSheet: what cannot be", () => {
+  it.each([
+    ["700", "5000", "between 60 and 500 °F"],
+    ["250", "500000", "at most 25000 psia"],
+  ])("refuses a table at %s degF from %s psia, in words", (temperature, pressure, words) => {
+    const read = sheet(
+      "depletion",
+      `temperature [degF],${temperature}`,
+      `dew point [psia],${pressure}`,
+      "pressure [psia],liquid [%]",
+      `${pressure},0`,
+      "4000,5",
+    );
+    expect(read.depletion).toBeNull();
+    expect(read.problems.map(({ message }) => message).join()).toContain(words);
+  });
+});
+
 describe("readLabSheet: separators", () => {
   it("reads stages alone", () => {
     const read = sheet(

@@ -10,6 +10,10 @@ import {
   characterisationSchema,
   tunableNameSchema,
 } from "@/analytics/equation-of-state/characterisation-schema";
+import {
+  reservoirPressureSchema,
+  reservoirTemperatureSchema,
+} from "@/analytics/fluid/reservoir-state-schema";
 import { separatorTestSchema } from "@/analytics/fluid/separator-test-schema";
 import { recoveryCurveSchema, recoveryRoutes } from "@/analytics/recovery/recovery-curve-schema";
 import { producingConcepts, recoveryPlanSchema } from "@/analytics/recovery/recovery-plan-schema";
@@ -23,7 +27,7 @@ import { warningSchema } from "@/analytics/warnings";
  */
 
 const reservoirState = z
-  .object({ pressurePsia: z.number().positive(), temperatureDegF: z.number() })
+  .object({ pressurePsia: reservoirPressureSchema, temperatureDegF: reservoirTemperatureSchema })
   .strict();
 
 // composition: a sheet normalised, with what follows from it without an equation of state
@@ -115,11 +119,11 @@ export const equationOfStateRequestSchema = z
   .object({
     sheet: compositionSheetSchema,
     characterisation: characterisationSchema,
-    temperatureDegF: z.number(),
-    measuredDewPointPsia: z.number().positive().nullable().default(null),
+    temperatureDegF: reservoirTemperatureSchema,
+    measuredDewPointPsia: reservoirPressureSchema.nullable().default(null),
     stages: separatorStagesSchema,
     /** steps of the simulated depletion; null chooses ten from the dew point down */
-    depletionPressuresPsia: z.array(z.number().positive()).max(40).nullable().default(null),
+    depletionPressuresPsia: z.array(reservoirPressureSchema).max(40).nullable().default(null),
     ...tunedBy,
   })
   .strict();
@@ -368,9 +372,9 @@ export const nearWellRequestSchema = z
   .object({
     sheet: compositionSheetSchema,
     characterisation: characterisationSchema,
-    temperatureDegF: z.number(),
-    reservoirPressurePsia: z.number().positive(),
-    flowingPressurePsia: z.number().positive(),
+    temperatureDegF: reservoirTemperatureSchema,
+    reservoirPressurePsia: reservoirPressureSchema,
+    flowingPressurePsia: reservoirPressureSchema,
     /** Corey: exponents and end points of gas and condensate */
     relativePermeability: z
       .object({
