@@ -8,7 +8,6 @@ import {
   readNearWell,
   startingNearWell,
   type NearWellField,
-  type NearWellQuestion,
 } from "@/components/recovery/near-well-text";
 import { Disclosure } from "@/components/ui/dialog";
 import { NumberField } from "@/components/ui/field";
@@ -28,12 +27,6 @@ const about: Record<NearWellField, { label: string; unit?: string; hint?: string
   criticalCondensateSaturation: { label: "Critical saturation", hint: "Usual 0.1 to 0.2" },
   residualGasSaturation: { label: "Residual gas", hint: "fraction" },
 };
-
-/** The composition with the equation of state it is flashed by. */
-export type NearWellFluid = Omit<
-  z.input<typeof nearWellRequestSchema>,
-  keyof NearWellQuestion | "temperatureDegF"
->;
 
 export interface NearWellSectionProps {
   fluid: Pick<NearWellRequest, "sheet" | "characterisation" | "tuning" | "table">;
