@@ -349,9 +349,9 @@ function ReadOuts({ curve, abandonmentPressurePsia, producedBefore }: DepletionP
   const inPlace = producedBefore === null ? "% of that at the dew point" : "% of in place";
   const figures = [
     {
-      label: "Liquid in the pores",
+      label: "Liquid in the hydrocarbon pores",
       value: state && state.liquidSaturation * 100,
-      unit: "% of hydrocarbons’",
+      unit: "%",
     },
     {
       label: "Yield at that pressure",

@@ -123,7 +123,7 @@ export function FluidFigures(props: FluidFiguresProps) {
       value: most && most.liquidSaturation * 100,
       unit: most ? "%" : "",
       note: most
-        ? `of the hydrocarbons’ at ${psia(most.pressurePsia)} psia; ${curve?.label.toLowerCase()}`
+        ? `of hydrocarbon pore space, at ${psia(most.pressurePsia)} psia; ${curve?.label.toLowerCase()}`
         : "needs a composition or a depletion table",
     },
     {

@@ -149,7 +149,7 @@ function EnvelopePlot(props: PhaseEnvelopeProps) {
       Math.max(...temperatures, temperatureDegF) + 15,
       ...stages.map((stage) => stage.temperatureDegF),
     ],
-    { fromZero: false },
+    { fromZero: false, count: 7 },
   );
   const place = (point: EnvelopePoint) => ({
     x: positionOn(x, point.temperatureDegF),
