@@ -1,7 +1,8 @@
+import { isUnmeasured } from "@/analytics/recovery/recovery-curve-schema";
 import { LedgerTable } from "@/components/ui/table";
 import type { RecoveryPlan } from "@/analytics/recovery/recovery-plan-schema";
 import { RouteFlag } from "./route-flag";
-import { isWeakRoute, planInWords } from "./plan-words";
+import { planInWords } from "./plan-words";
 import { planDifferences } from "./differences";
 
 /** How recoveries came about and how they do now, in words; a plan that stands as it stood is told in a line. */
@@ -18,7 +19,7 @@ export function PlanDifferenceTable({
       <div className="mt-6 grid gap-1.5">
         <h3>How recoveries come about{before ? ` is as in r${before.revision}` : ""}</h3>
         <p className="text-13 text-ink-soft">{planInWords(now)}.</p>
-        {isWeakRoute(now.curve.route) && (
+        {isUnmeasured(now.curve.route) && (
           <p>
             <RouteFlag route={now.curve.route} />
           </p>
@@ -47,7 +48,7 @@ export function PlanDifferenceTable({
           ))}
         </tbody>
       </LedgerTable>
-      {now && isWeakRoute(now.curve.route) && (
+      {now && isUnmeasured(now.curve.route) && (
         <p>
           <RouteFlag route={now.curve.route} />
         </p>

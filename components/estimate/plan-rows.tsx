@@ -1,11 +1,12 @@
 "use client";
 
+import { isUnmeasured } from "@/analytics/recovery/recovery-curve-schema";
 import Link from "next/link";
 import { Button } from "@/components/ui/button";
 import { PlanFields } from "./plan-fields";
 import type { PlanReading } from "./plan-reading";
 import type { PlanText } from "./plan-text";
-import { conceptLabels, curveInWords, isWeakRoute } from "./plan-words";
+import { conceptLabels, curveInWords } from "./plan-words";
 import { RouteFlag } from "./route-flag";
 
 /** What can be done about a plan in the input table. */
@@ -38,7 +39,7 @@ export function PlanHeadRow({
               {curveInWords(text)}. <Link href={fluidHref}>Curve and concepts</Link>
             </p>
           </div>
-          {isWeakRoute(route) && <RouteFlag route={route} />}
+          {isUnmeasured(route) && <RouteFlag route={route} />}
           {changes && (
             <Button size="small" onClick={() => changes.onUse(false)}>
               Enter recoveries by hand instead

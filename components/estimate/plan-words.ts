@@ -30,10 +30,6 @@ export const routeLabels: Record<RecoveryRoute, string> = {
   correlation: routeWords.correlation.label,
 };
 
-/** Whether no measured depletion stands behind a recovery: marked wherever its figures go. */
-export const isWeakRoute = (route: RecoveryRoute) =>
-  route === "untunedEquationOfState" || route === "correlation";
-
 /** The word that goes with a figure of a weak route; `null` for the others, and without a plan. */
 export const routeMark = (route: RecoveryRoute | null | undefined): string | null =>
   route === "correlation"

@@ -15,10 +15,10 @@ import {
   reservoirTemperatureSchema,
 } from "@/analytics/fluid/reservoir-state-schema";
 import { separatorTestSchema } from "@/analytics/fluid/separator-test-schema";
-import { recoveryCurveSchema, recoveryRoutes } from "@/analytics/recovery/recovery-curve-schema";
-import { producingConcepts, recoveryPlanSchema } from "@/analytics/recovery/recovery-plan-schema";
+import { recoveryCurveSchema } from "@/analytics/recovery/recovery-curve-schema";
+import { recoveryPlanSchema } from "@/analytics/recovery/recovery-plan-schema";
 import { estimateInputsSchema } from "@/analytics/volumetrics/inputs-schema";
-import { rangeSchema } from "@/analytics/volumetrics/results-schema";
+import { rangeSchema, recoverySummarySchema } from "@/analytics/volumetrics/results-schema";
 import { warningSchema } from "@/analytics/warnings";
 
 /**
@@ -331,8 +331,8 @@ export type RecoveryRequest = z.infer<typeof recoveryRequestSchema>;
 export const recoveryResponseSchema = z.object({
   concepts: z.array(
     z.object({
-      concept: z.enum(producingConcepts),
-      route: z.enum(recoveryRoutes),
+      concept: recoverySummarySchema.shape.concept,
+      route: recoverySummarySchema.shape.route,
       condensateInPlaceStb: rangeSchema,
       condensateRecoverableStb: rangeSchema,
       salesGasScf: rangeSchema,
@@ -340,26 +340,11 @@ export const recoveryResponseSchema = z.object({
       condensateRecovery: rangeSchema,
       gasRecovery: rangeSchema,
       /** means over the trials; they add up to 1 */
-      shares: z.object({ toTank: z.number(), leftInRock: z.number(), leftInGas: z.number() }),
+      shares: recoverySummarySchema.shape.shares,
       /** in order; means over the trials, shares of what is in place */
-      phases: z.array(
-        z.object({
-          name: z.enum(["aboveDewPoint", "belowDewPoint", "cycling", "blowdown"]),
-          condensateShare: z.number(),
-          gasShare: z.number(),
-        }),
-      ),
+      phases: recoverySummarySchema.shape.phases,
       /** mean volumes; only for cycling */
-      gasBalance: z
-        .object({
-          injectedScf: z.number(),
-          producedWhileCyclingScf: z.number(),
-          fuelScf: z.number(),
-          makeUpScf: z.number(),
-          /** mean reservoir pressure when injection ends, psia */
-          pressureAtEndPsia: z.number(),
-        })
-        .nullable(),
+      gasBalance: recoverySummarySchema.shape.gasBalance,
       warnings: z.array(warningSchema),
     }),
   ),

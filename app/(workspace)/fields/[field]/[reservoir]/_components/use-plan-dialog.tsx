@@ -1,9 +1,10 @@
 "use client";
 
+import { isUnmeasured } from "@/analytics/recovery/recovery-curve-schema";
 import { useRouter } from "next/navigation";
 import type { RecoveryPlan } from "@/analytics/recovery/recovery-plan-schema";
 import { textOfPlan } from "@/components/estimate/plan-text";
-import { conceptLabels, isWeakRoute, planInWords } from "@/components/estimate/plan-words";
+import { conceptLabels, planInWords } from "@/components/estimate/plan-words";
 import { RouteFlag } from "@/components/estimate/route-flag";
 import type { ConceptView } from "@/components/recovery/concept-findings";
 import { Button } from "@/components/ui/button";
@@ -68,7 +69,7 @@ export function UsePlanDialog({
             {formatPercent(view.gasRecovery.p10, { decimals: 1 })}.
           </p>
         )}
-        {isWeakRoute(plan.curve.route) && (
+        {isUnmeasured(plan.curve.route) && (
           <p>
             <RouteFlag route={plan.curve.route} />
           </p>
