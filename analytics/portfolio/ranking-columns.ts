@@ -1,4 +1,4 @@
-import { recoveryRoutes, type RecoveryRoute } from "../recovery/recovery-curve-schema";
+import { recoveryRouteLabels, recoveryRoutes } from "../recovery/recovery-curve-schema";
 import type { ReportingUnits } from "../units/reporting-units";
 import type { Range } from "../volumetrics/results-schema";
 import { rankedClasses, type LedgerQuantity, type RankedField, type SortValue } from "./ranking";
@@ -110,13 +110,6 @@ export function estimateWords(field: RankedField): string {
   ].join("; ");
 }
 
-const recoveryWords: Record<RecoveryRoute, string> = {
-  laboratory: "laboratory depletion",
-  tunedEquationOfState: "tuned equation of state",
-  untunedEquationOfState: "untuned equation of state",
-  correlation: "correlation",
-};
-
 /** Where the recoveries of several reservoirs come from, each once, in the order of trust; null is entered by hand. */
 export function recoverySourcesOf(chosen: RankedField["chosen"]): RankedField["recoveryRoute"][] {
   const sources = new Set(chosen.map(({ recoveryRoute }) => recoveryRoute));
@@ -125,7 +118,7 @@ export function recoverySourcesOf(chosen: RankedField["chosen"]): RankedField["r
 
 function recoveryWordsOf({ chosen }: RankedField): string | null {
   const words = recoverySourcesOf(chosen).map((route) =>
-    route === null ? "entered" : recoveryWords[route],
+    route === null ? "entered" : recoveryRouteLabels[route].toLowerCase(),
   );
   return words.length === 0 ? null : words.join("; ");
 }

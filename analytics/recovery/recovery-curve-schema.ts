@@ -12,6 +12,14 @@ export const recoveryRoutes = [
 ] as const;
 export type RecoveryRoute = (typeof recoveryRoutes)[number];
 
+/** Words for screens and files. */
+export const recoveryRouteLabels: Record<RecoveryRoute, string> = {
+  laboratory: "Laboratory",
+  tunedEquationOfState: "Tuned equation of state",
+  untunedEquationOfState: "Untuned equation of state",
+  correlation: "Correlation",
+};
+
 /** The route that decides how far a figure from several of them can be trusted; null when there is none among them. */
 export function leastTrusted(routes: readonly (RecoveryRoute | null)[]): RecoveryRoute | null {
   return [...recoveryRoutes].reverse().find((route) => routes.includes(route)) ?? null;

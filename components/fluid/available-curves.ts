@@ -1,4 +1,5 @@
 import {
+  recoveryRouteLabels,
   recoveryRoutes,
   type RecoveryCurve,
   type RecoveryRoute,
@@ -16,19 +17,19 @@ export interface AvailableCurve {
 
 export const routeWords: Record<RecoveryRoute, { label: string; note: string }> = {
   laboratory: {
-    label: "Laboratory",
+    label: recoveryRouteLabels.laboratory,
     note: "The laboratory’s moles and produced gas, flashed through the separators.",
   },
   tunedEquationOfState: {
-    label: "Tuned equation of state",
+    label: recoveryRouteLabels.tunedEquationOfState,
     note: "Peng–Robinson, fitted to the laboratory’s dew point and dropout.",
   },
   untunedEquationOfState: {
-    label: "Untuned equation of state",
+    label: recoveryRouteLabels.untunedEquationOfState,
     note: "Peng–Robinson as it comes, fitted to no measurement: an indication, not a fact.",
   },
   correlation: {
-    label: "Correlation",
+    label: recoveryRouteLabels.correlation,
     note: "From the yield and the dew point alone, for want of a depletion study.",
   },
 };

@@ -1,4 +1,4 @@
-import type { NearWellRequest } from "@/app/api/v1/calculations/fluid-schema";
+import type { NearWellRequest } from "@/app/api/v1/calculations/recovery-schema";
 import {
   readPlain,
   readQuantity,

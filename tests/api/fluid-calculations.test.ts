@@ -5,17 +5,19 @@ import {
   depletionResponseSchema,
   equationOfStateResponseSchema,
   labSheetResponseSchema,
-  nearWellResponseSchema,
-  recoveryResponseSchema,
   tuningResponseSchema,
   type CompositionResponse,
   type DepletionResponse,
   type EquationOfStateResponse,
   type LabSheetResponse,
-  type NearWellResponse,
-  type RecoveryResponse,
   type TuningResponse,
 } from "@/app/api/v1/calculations/fluid-schema";
+import {
+  nearWellResponseSchema,
+  recoveryResponseSchema,
+  type NearWellResponse,
+  type RecoveryResponse,
+} from "@/app/api/v1/calculations/recovery-schema";
 import { as, estimateInputs } from "../factories";
 import { visitor } from "../support/api";
 import { testEnvironment } from "../support/environment";

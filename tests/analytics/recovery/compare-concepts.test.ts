@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { recoveryResponseSchema } from "@/app/api/v1/calculations/fluid-schema";
+import { recoveryResponseSchema } from "@/app/api/v1/calculations/recovery-schema";
 import { DomainError } from "@/analytics/errors";
 import { compareConcepts } from "@/analytics/recovery/compare-concepts";
 import { simulate } from "@/analytics/volumetrics/simulate";

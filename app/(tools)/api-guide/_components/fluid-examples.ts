@@ -8,13 +8,15 @@ import {
   equationOfStateResponseSchema,
   labSheetRequestSchema,
   labSheetResponseSchema,
+  tuningRequestSchema,
+  tuningResponseSchema,
+} from "@/app/api/v1/calculations/fluid-schema";
+import {
   nearWellRequestSchema,
   nearWellResponseSchema,
   recoveryRequestSchema,
   recoveryResponseSchema,
-  tuningRequestSchema,
-  tuningResponseSchema,
-} from "@/app/api/v1/calculations/fluid-schema";
+} from "@/app/api/v1/calculations/recovery-schema";
 import {
   materialBalanceRequestSchema,
   materialBalanceResponseSchema,

@@ -4,10 +4,12 @@ import {
   depletionRequestSchema,
   equationOfStateRequestSchema,
   labSheetRequestSchema,
-  nearWellRequestSchema,
-  recoveryRequestSchema,
   tuningRequestSchema,
 } from "@/app/api/v1/calculations/fluid-schema";
+import {
+  nearWellRequestSchema,
+  recoveryRequestSchema,
+} from "@/app/api/v1/calculations/recovery-schema";
 import { materialBalanceRequestSchema } from "@/app/api/v1/calculations/material-balance-schema";
 import {
   distributionRequestSchema,

@@ -1,6 +1,6 @@
 import { withRoute } from "@/app/_server/with-route";
 import { calculateOnFluid } from "@/services/calculations-of-fluids";
-import { nearWellRequestSchema } from "../fluid-schema";
+import { nearWellRequestSchema } from "../recovery-schema";
 
 /**
  * POST /api/v1/calculations/near-well: what share of its rate a well keeps beside the liquid that collects around it, by

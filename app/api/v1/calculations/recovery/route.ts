@@ -1,6 +1,6 @@
 import { withRoute } from "@/app/_server/with-route";
 import { calculateOnFluid } from "@/services/calculations-of-fluids";
-import { recoveryRequestSchema } from "../fluid-schema";
+import { recoveryRequestSchema } from "../recovery-schema";
 
 /**
  * POST /api/v1/calculations/recovery: what depletion, compression and cycling bring to the tank, with ranges, on the same

@@ -2,7 +2,7 @@
 
 import { useState } from "react";
 import { errorWords } from "@/app/_client/request";
-import type { NearWellRequest } from "@/app/api/v1/calculations/fluid-schema";
+import type { NearWellRequest } from "@/app/api/v1/calculations/recovery-schema";
 import {
   nearWellFields,
   readNearWell,

@@ -9,7 +9,7 @@ import {
   recoveryResponseSchema,
   type NearWellRequest,
   type RecoveryRequest,
-} from "@/app/api/v1/calculations/fluid-schema";
+} from "@/app/api/v1/calculations/recovery-schema";
 import { useSettled } from "../_editor/use-live-results";
 
 const PAUSE_MS = 500;
