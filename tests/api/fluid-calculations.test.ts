@@ -117,9 +117,12 @@ describe("POST /api/v1/calculations/equation-of-state", () => {
   });
 
   it("says that a fluid above its cricondentherm drops no liquid", async () => {
+    if (sheet.kind !== "wellstream" || !sheet.stream.plus) throw new Error("not a wellstream");
+    const light = { ...sheet.stream.plus, molecularWeight: 110, specificGravity: 0.74 };
     const body = await ask<EquationOfStateResponse>("equation-of-state", {
       ...fluid,
-      temperatureDegF: 700,
+      sheet: { ...sheet, stream: { ...sheet.stream, plus: light } },
+      temperatureDegF: 450,
     });
     expect(body).toMatchObject({ depletion: null, curve: null, saturation: { kind: "none" } });
     expect(body.warnings.map(({ code }) => code)).toContain("above_cricondentherm");

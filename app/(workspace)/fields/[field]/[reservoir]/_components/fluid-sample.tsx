@@ -225,9 +225,9 @@ export interface FluidPartProps {
 function abandonmentOn({ curve }: AvailableCurve, wanted: number | null): number {
   const { points, dewPointPsia } = curve;
   const lowest = Math.ceil(points[points.length - 1].pressurePsia);
-  // A fifth of the dew point is only where the line begins; it is there to be moved.
-  const start = Math.round(dewPointPsia / 50) * 10;
-  return Math.min(Math.floor(dewPointPsia), Math.max(lowest, wanted ?? start));
+  // A fifth of the dew point is only where the line begins; it is there to be moved, in steps of 10 psi.
+  const start = Math.round((wanted ?? dewPointPsia / 5) / 10) * 10;
+  return Math.min(Math.floor(dewPointPsia), Math.max(lowest, start));
 }
 
 /** Calculations that gave no answer for a reason that belongs to no field. */
