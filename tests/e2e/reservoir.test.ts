@@ -129,7 +129,9 @@ describe("the recoveries of a draft", () => {
     const { page, context, problems } = await openPage(browser, { as: "engineer" });
     await page.goto(`${addressOf(draft)}/fluid`);
     // No composition: the correlation screens the fluid, and every figure of it is marked.
-    await page.getByRole("heading", { name: /^By correlation, cycling brings .* more to the tank/ }).waitFor();
+    await page
+      .getByRole("heading", { name: /^By correlation, cycling brings .* more to the tank/ })
+      .waitFor();
     await page.getByRole("button", { name: "Use in the draft: depletion", exact: true }).click();
     const dialog = page.getByRole("dialog");
     await dialog.getByText("Recovery from a correlation").waitFor();
