@@ -171,7 +171,8 @@ function Panels({
   const liquid = roundScale(
     [
       ...[curve, ...others].flatMap((shown) =>
-        shown.curve.points.map((point) => point.liquidSaturation * 100),
+        // Room above the line for its highest figure.
+        shown.curve.points.map((point) => point.liquidSaturation * 112),
       ),
       ...measured.map(({ liquidPercent }) => liquidPercent ?? 0),
       band.high * 1.15,

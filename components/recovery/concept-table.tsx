@@ -50,10 +50,10 @@ export function ConceptTable({
             </th>
           ))}
           <th scope="col" className="right">
-            In the rock, mean
+            In the rock <Unit>mean</Unit>
           </th>
           <th scope="col" className="right">
-            In the gas, mean
+            In the gas <Unit>mean</Unit>
           </th>
           <th scope="col" className="right">
             Sales gas P50 <Unit>{resultUnit("salesGasScf", basis)}</Unit>
