@@ -15,7 +15,6 @@ export const heavySplitSchema = z.discriminatedUnion("kind", [
     })
     .strict(),
 ]);
-export type HeavySplit = z.infer<typeof heavySplitSchema>;
 
 /** What a regression may move, and nothing else. Factors multiply the heavy fractions' properties; 1 is untouched. */
 export const tunableNames = [
