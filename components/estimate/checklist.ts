@@ -1,10 +1,10 @@
-import { isUnmeasured } from "@/analytics/recovery/recovery-curve-schema";
+import { isUnmeasured, recoveryRouteLabels } from "@/analytics/recovery/recovery-curve-schema";
 import type { DriverName } from "@/analytics/volumetrics/results-schema";
 import type { Warning } from "@/analytics/warnings";
 import type { EstimateReading } from "./estimate-reading";
 import { inputText, type EstimateText } from "./estimate-text";
 import { driverCatalogue, listedInputs } from "./input-catalogue";
-import { conceptLabels, routeLabels } from "./plan-words";
+import { conceptLabels } from "./plan-words";
 
 export interface ChecklistItem {
   /** done; to be explained; to be done before it can be submitted */
@@ -128,7 +128,7 @@ function planItems({ plan, usesPlan }: EstimateText): ChecklistItem[] {
       tone: isUnmeasured(route) ? "warning" : "done",
       text:
         `Recoveries worked out for ${conceptLabels[plan.concept].toLowerCase()}: ` +
-        `${routeLabels[route].toLowerCase()}${isUnmeasured(route) ? ", no measured depletion behind it" : ""}`,
+        `${recoveryRouteLabels[route].toLowerCase()}${isUnmeasured(route) ? ", no measured depletion behind it" : ""}`,
     },
   ];
 }

@@ -1,5 +1,8 @@
 /** Names of what a recovery plan is made of, wherever one is shown. */
-import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
+import {
+  recoveryRouteLabels,
+  type RecoveryRoute,
+} from "@/analytics/recovery/recovery-curve-schema";
 import type {
   Cycling,
   ProducingConcept,
@@ -7,7 +10,6 @@ import type {
 } from "@/analytics/recovery/recovery-plan-schema";
 import { compileDistribution } from "@/analytics/uncertainty/distribution";
 import type { RecoveryPhaseName } from "@/analytics/volumetrics/results-schema";
-import { routeWords } from "@/components/fluid/available-curves";
 import { formatFigure, formatPercent } from "@/components/ui/format";
 
 export const conceptLabels: Record<ProducingConcept, string> = {
@@ -21,13 +23,6 @@ export const shortConcepts: Record<ProducingConcept, string> = {
   depletion: "Depletion",
   compression: "Compression",
   cycling: "Cycling",
-};
-
-export const routeLabels: Record<RecoveryRoute, string> = {
-  laboratory: routeWords.laboratory.label,
-  tunedEquationOfState: routeWords.tunedEquationOfState.label,
-  untunedEquationOfState: routeWords.untunedEquationOfState.label,
-  correlation: routeWords.correlation.label,
 };
 
 /** The word that goes with a figure of a weak route; `null` for the others, and without a plan. */
@@ -60,7 +55,7 @@ export function planInWords(plan: RecoveryPlan): string {
     return [p90, p50, p10].map((value) => formatFigure(value)).join(" / ");
   };
   return [
-    `${conceptLabels[plan.concept]}, ${routeLabels[plan.curve.route].toLowerCase()} curve`,
+    `${conceptLabels[plan.concept]}, ${recoveryRouteLabels[plan.curve.route].toLowerCase()} curve`,
     `abandonment ${range(plan.abandonmentPressurePsia)} psia`,
     `curve factor ${range(plan.condensateCurveFactor)}`,
     ...(plan.cycling
@@ -78,7 +73,7 @@ export function planInWords(plan: RecoveryPlan): string {
 export function curveInWords({ curve }: Pick<RecoveryPlan, "curve">): string {
   const lowest = curve.points[curve.points.length - 1].pressurePsia;
   const from = formatFigure(lowest, { digits: 4 });
-  return `${routeLabels[curve.route]}, dew point ${psia(curve.dewPointPsia)} down to ${from} psia at ${formatFigure(curve.temperatureDegF)} °F`;
+  return `${recoveryRouteLabels[curve.route]}, dew point ${psia(curve.dewPointPsia)} down to ${from} psia at ${formatFigure(curve.temperatureDegF)} °F`;
 }
 
 /** "Closed volume", or what water takes and traps. */

@@ -1,5 +1,9 @@
 /** What each way of producing is worked out with: figures to start from, and what a person put in their place. */
-import type { RecoveryCurve, RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
+import {
+  recoveryRouteLabels,
+  type RecoveryCurve,
+  type RecoveryRoute,
+} from "@/analytics/recovery/recovery-curve-schema";
 import {
   planInputNames,
   type Cycling,
@@ -10,7 +14,6 @@ import {
 import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
 import type { InputText } from "@/components/estimate/input-text";
 import { textOfPlan, type PlanFieldName, type PlanText } from "@/components/estimate/plan-text";
-import { routeLabels } from "@/components/estimate/plan-words";
 
 /** The reservoir and the curve that assumptions start from. */
 export interface ConceptStart {
@@ -116,7 +119,7 @@ export function startingPlan(concept: ProducingConcept, start: ConceptStart): Re
     abandonmentPressurePsia: abandonmentOf(concept, start),
     condensateCurveFactor: {
       distribution: { kind: "pert", low: 1 - spread, mode: 1, high: 1 + spread },
-      source: `${sample}${routeLabels[curve.route].toLowerCase()} curve; ± ${percent} % is common practice, no source`,
+      source: `${sample}${recoveryRouteLabels[curve.route].toLowerCase()} curve; ± ${percent} % is common practice, no source`,
     },
     criticalSaturation: start.criticalSaturation,
     waterDrive: { kind: "none" },

@@ -1,7 +1,8 @@
+import { recoveryRouteLabels } from "@/analytics/recovery/recovery-curve-schema";
 import type { ReactNode } from "react";
 import { RangeMark } from "@/components/charts/range-mark";
 import type { Scale } from "@/components/charts/scale";
-import { conceptLabels, routeLabels } from "@/components/estimate/plan-words";
+import { conceptLabels } from "@/components/estimate/plan-words";
 import { formatPercent } from "@/components/ui/format";
 import type { ConceptView } from "./concept-findings";
 
@@ -68,7 +69,7 @@ function ConceptRow({ view, action }: { view: ConceptView; action: ReactNode }) 
     <>
       <div className="place-name">
         {conceptLabels[view.concept]}
-        <small>{routeLabels[view.route]}</small>
+        <small>{recoveryRouteLabels[view.route]}</small>
         {action}
       </div>
       <div>

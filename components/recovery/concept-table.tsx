@@ -1,4 +1,5 @@
-import { routeLabels, shortConcepts } from "@/components/estimate/plan-words";
+import { recoveryRouteLabels } from "@/analytics/recovery/recovery-curve-schema";
+import { shortConcepts } from "@/components/estimate/plan-words";
 import { resultFactor, resultUnit, type ResultBasis } from "@/components/estimate/result-rows";
 import type { ChartData } from "@/components/charts/chart-frame";
 import { fractionDigits } from "@/components/ui/format";
@@ -102,7 +103,7 @@ export function conceptData(concepts: readonly ConceptView[], basis: ResultBasis
       const row = rowOf(view, basis);
       return [
         shortConcepts[view.concept],
-        routeLabels[view.route],
+        recoveryRouteLabels[view.route],
         row.p90,
         row.p50,
         row.p10,

@@ -1,10 +1,11 @@
 "use client";
 
+import { recoveryRouteLabels } from "@/analytics/recovery/recovery-curve-schema";
 import type { ResultName } from "@/analytics/volumetrics/results-schema";
 import { Drivers } from "@/components/estimate/drivers";
 import { ExceedanceSection } from "@/components/estimate/exceedance-section";
 import { HistogramSection } from "@/components/estimate/histogram-section";
-import { conceptLabels, routeLabels } from "@/components/estimate/plan-words";
+import { conceptLabels } from "@/components/estimate/plan-words";
 import { resultGroups, resultFactor, resultUnit } from "@/components/estimate/result-rows";
 import { ResultTable } from "@/components/estimate/result-table";
 import { PlaceBar, PlaceKey } from "@/components/recovery/concept-bars";
@@ -141,7 +142,7 @@ function RecoverySection() {
     <Columns kind="equal">
       <Section
         title={`${formatPercent(shares.leftInRock)} of the condensate stays in the rock`}
-        note={`${conceptLabels[concept]}, ${routeLabels[recovery.route].toLowerCase()}. Means over the trials, of the condensate in place.`}
+        note={`${conceptLabels[concept]}, ${recoveryRouteLabels[recovery.route].toLowerCase()}. Means over the trials, of the condensate in place.`}
       >
         <PlaceKey />
         <PlaceBar name={conceptLabels[concept]} shares={shares} />
