@@ -45,3 +45,17 @@ export type PriceUnit = (typeof priceUnits)[Product];
 
 export const importStates = ["checking", "checked", "applying", "applied", "failed"] as const;
 export type ImportState = (typeof importStates)[number];
+
+/** Why many estimates, or one at length, are computed outside a request. */
+export const runKinds = ["recalculation", "untilSettled", "import"] as const;
+export type RunKind = (typeof runKinds)[number];
+
+/** Which estimates a recalculation takes: what the book stands on, what is being worked on, or both. */
+export const runScopes = ["approved", "open", "both"] as const;
+export type RunScope = (typeof runScopes)[number];
+
+export const runStates = ["waiting", "running", "finished", "cancelled"] as const;
+export type RunState = (typeof runStates)[number];
+
+export const runItemStates = ["waiting", "running", "done", "failed", "passedOver"] as const;
+export type RunItemState = (typeof runItemStates)[number];

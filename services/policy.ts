@@ -26,6 +26,8 @@ export const policy = {
   "estimate.read": everyone,
   "priceDeck.read": everyone,
   "settings.read": everyone,
+  "dependenceSet.read": everyone,
+  "run.read": everyone,
   "people.read": everyone,
   "calculation.run": everyone,
   "apiToken.manage": everyone,
@@ -51,6 +53,13 @@ export const policy = {
   "estimate.discard": ["engineer"],
   "estimate.approve": ["reviewer"],
   "estimate.return": ["reviewer"],
+
+  /** heavy work in the background; whoever began a run can stop it, and an administrator any */
+  "run.create": ["engineer", "planner"],
+  "run.cancel": ["engineer", "planner", "administrator"],
+
+  "dependenceSet.create": ["planner"],
+  "dependenceSet.update": ["planner"],
 
   "import.read": ["engineer", "reviewer", "planner"],
   "import.create": ["engineer"],

@@ -6,10 +6,30 @@ const finite = z.number().refine(Number.isFinite, "must be a finite number");
 const truncation = { minimum: finite.optional(), maximum: finite.optional() };
 
 /**
- * How an uncertain input is described. P90 is the low case (90 % chance of at least this much), P10 the high case.
- * The shape only; `distribution.ts` refuses parameters that make no distribution (low above high, negative spread).
+ * What the low and the high figure of a most-likely/low/high range mean: the ends of what is possible, or values that
+ * are exceeded with a chance of 90 % and 10 %, or 95 % and 5 %. Left out they are the ends.
  */
-export const distributionSchema = z.discriminatedUnion("kind", [
+export const rangeEnds = ["limits", "p90p10", "p95p05"] as const;
+export type RangeEnds = (typeof rangeEnds)[number];
+const ends = { ends: z.enum(rangeEnds).optional() };
+
+/** Families that are fitted through stated percentiles; the last three need three of them. */
+export const percentileFamilies = [
+  "normal",
+  "lognormal",
+  "shiftedLognormal",
+  "triangular",
+  "pert",
+] as const;
+export type PercentileFamily = (typeof percentileFamilies)[number];
+
+/** How pasted data become a distribution. */
+export const dataShapes = ["empirical", "normal", "lognormal"] as const;
+export type DataShape = (typeof dataShapes)[number];
+/** Fewer say nothing of a shape; more belong in a file. */
+export const DATA_VALUES = [5, 2_000] as const;
+
+const simpleKinds = [
   z.object({ kind: z.literal("constant"), value: finite }).strict(),
   z.object({ kind: z.literal("uniform"), low: finite, high: finite, ...truncation }).strict(),
   z
@@ -18,11 +38,19 @@ export const distributionSchema = z.discriminatedUnion("kind", [
       low: finite,
       mode: finite,
       high: finite,
+      ...ends,
       ...truncation,
     })
     .strict(),
   z
-    .object({ kind: z.literal("pert"), low: finite, mode: finite, high: finite, ...truncation })
+    .object({
+      kind: z.literal("pert"),
+      low: finite,
+      mode: finite,
+      high: finite,
+      ...ends,
+      ...truncation,
+    })
     .strict(),
   z
     .object({ kind: z.literal("normal"), mean: finite, standardDeviation: finite, ...truncation })
@@ -32,6 +60,60 @@ export const distributionSchema = z.discriminatedUnion("kind", [
   z.object({ kind: z.literal("normalP90P10"), p90: finite, p10: finite, ...truncation }).strict(),
   z
     .object({ kind: z.literal("lognormalP90P10"), p90: finite, p10: finite, ...truncation })
+    .strict(),
+  z
+    .object({
+      kind: z.literal("percentiles"),
+      family: z.enum(percentileFamilies),
+      /** `exceedance` is the chance of at least `value`, between 0 and 1: 0.9 for a P90 */
+      points: z
+        .array(z.object({ exceedance: z.number().gt(0).lt(1), value: finite }).strict())
+        .min(2)
+        .max(3),
+      ...truncation,
+    })
+    .strict(),
+  z
+    .object({
+      kind: z.literal("data"),
+      shape: z.enum(dataShapes),
+      values: z.array(finite).min(DATA_VALUES[0]).max(DATA_VALUES[1]),
+      ...truncation,
+    })
+    .strict(),
+] as const;
+
+/** A distribution that is not made of others. */
+export const simpleDistributionSchema = z.discriminatedUnion("kind", simpleKinds);
+export type SimpleDistribution = z.infer<typeof simpleDistributionSchema>;
+
+/** One of several things that may be true, with its chance and what the input is then. */
+export const scenarioSchema = z
+  .object({
+    name: z.string().trim().min(1).max(60),
+    /** chance of the case; those of one input add up to 1 */
+    weight: z.number().gt(0).lt(1),
+    distribution: simpleDistributionSchema,
+  })
+  .strict();
+export type Scenario = z.infer<typeof scenarioSchema>;
+
+/**
+ * How an uncertain input is described. P90 is the low case (90 % chance of at least this much), P10 the high case.
+ * The shape only; `distribution.ts` refuses parameters that make no distribution (low above high, negative spread).
+ */
+export const distributionSchema = z.discriminatedUnion("kind", [
+  ...simpleKinds,
+  z
+    .object({
+      kind: z.literal("scenarios"),
+      /**
+       * inputs that name the same set take the same case in every trial (a deeper gas-water contact is a larger area AND
+       * a thicker column); their cases then have the same names and weights
+       */
+      caseSet: z.string().trim().min(1).max(60).optional(),
+      scenarios: z.array(scenarioSchema).min(2).max(12),
+    })
     .strict(),
 ]);
 

@@ -25,6 +25,8 @@ const uncertainInputSchema = z
     distribution: distributionSchema,
     /** where the range comes from: a map, a log report, an analogue; what a reviewer will ask for */
     source: z.string().max(500).default(""),
+    /** why this range and not another, in the expert's words */
+    reason: z.string().max(2_000).optional(),
   })
   .strict();
 

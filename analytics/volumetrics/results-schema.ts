@@ -1,6 +1,7 @@
 import { z } from "zod";
 import { warningSchema } from "../warnings";
 import { recoveryRoutes } from "../recovery/recovery-curve-schema";
+import { samplingMethods } from "../uncertainty/sampling-schema";
 import { planInputNames, producingConcepts } from "../recovery/recovery-plan-schema";
 import { inputNames, inputNameSchema } from "./inputs-schema";
 
@@ -49,6 +50,8 @@ export type Range = z.infer<typeof rangeSchema>;
 
 export const quantitySummarySchema = rangeSchema.extend({
   standardDeviation: z.number(),
+  /** where values are densest; summaries of engines before 2.0.0 lack it */
+  mode: z.number().optional(),
   minimum: z.number(),
   maximum: z.number(),
   /** sampling error of each percentile and of the mean (one standard error) */
@@ -117,6 +120,10 @@ export const simulationSummarySchema = z.object({
   engineVersion: z.string(),
   seed: z.number().int(),
   trials: z.number().int(),
+  /** summaries of engines before 2.0.0 lack these two; they were one Latin hypercube */
+  sampling: z.enum(samplingMethods).optional(),
+  /** independent repetitions that the trials are made of, from which the standard errors come */
+  replicates: z.number().int().optional(),
   /**
    * percentiles of the sampled inputs (after truncation), so a screen can show what was actually sampled. With a
    * recovery plan, the two recoveries are those that were worked out

@@ -10,7 +10,10 @@ export const basisSchema = z.object({
   case: z.enum(["low", "mid", "high"]).default("mid"),
   estimates: z.enum(["approved", "latest"]).default("approved"),
   interest: z.enum(["gross", "net"]).default("net"),
-  risk: z.enum(["unrisked", "risked"]).default("unrisked"),
+  /** `risked`: every trial times the chance; `yesNo`: a field is there or not, drawn trial by trial */
+  risk: z.enum(["unrisked", "risked", "yesNo"]).default("unrisked"),
+  /** id of a dependence set, or the book's own */
+  dependence: z.union([z.uuid(), z.literal("default")]).default("default"),
   units: z.enum(["field", "metric"]).default("field"),
   /** pressure base of gas volumes [psia at 60 degF], or `metric`: 101.325 kPa and 15 degC */
   base: z.enum(["14.696", "14.65", "14.73", "15.025", "metric"]).default("14.696"),

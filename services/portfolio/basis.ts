@@ -14,8 +14,10 @@ export interface PortfolioBasis {
   estimates: EstimateChoice;
   /** `gross`: the whole field; `net`: times the company's net revenue interest */
   interest: "gross" | "net";
-  /** `risked`: each field happens with its chance of commerciality, drawn trial by trial */
-  risk: "unrisked" | "risked";
+  /** `risked`: every trial times the chance of commerciality; `yesNo`: a field is there or not, drawn trial by trial */
+  risk: "unrisked" | "risked" | "yesNo";
+  /** id of a dependence set, or `default`: the book's own */
+  dependence: string;
   units: UnitSystem;
   base: BaseName;
 }

@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { recoveryRoutes } from "@/analytics/recovery/recovery-curve-schema";
+import { samplingMethods } from "@/analytics/uncertainty/sampling-schema";
 import { estimateInputsSchema } from "@/analytics/volumetrics/inputs-schema";
 import { simulationSummarySchema } from "@/analytics/volumetrics/results-schema";
 import { estimateStates } from "@/models/vocabulary";
@@ -12,7 +13,9 @@ export const estimatePatchSchema = z
     fluidSampleId: z.uuid().nullable().optional(),
     note: noteSchema.optional(),
     seed: z.number().int().min(0).max(2_147_483_647).optional(),
-    trials: z.number().int().min(1000).max(100_000).optional(),
+    /** a power of two, at least 1,024, with scrambled Sobol points */
+    trials: z.number().int().min(1_000).max(1_048_576).optional(),
+    sampling: z.enum(samplingMethods).optional(),
   })
   .strict();
 export type EstimatePatchRequest = z.infer<typeof estimatePatchSchema>;
@@ -43,6 +46,7 @@ export const estimateRowSchema = z.object({
   fluidSampleId: z.uuid().nullable(),
   seed: z.number().int(),
   trials: z.number().int(),
+  sampling: z.enum(samplingMethods),
   engineVersion: z.string().nullable(),
   computedAt: momentSchema.nullable(),
   note: z.string(),
