@@ -3,7 +3,7 @@ import { parse } from "csv-parse/sync";
 import type { Browser, Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { formatFigure } from "@/components/ui/format";
-import { axeViolations, launchBrowser, openPage, type PageOptions } from "../support/browser";
+import { launchBrowser, openPage, type PageOptions } from "../support/browser";
 
 let browser: Browser;
 
@@ -113,19 +113,5 @@ describe("the ranking for everybody", () => {
     const { page } = await openRanking({ as: "administrator" });
     await page.waitForLoadState("networkidle");
     expect(await page.getByRole("link", { name: "Export CSV" }).count()).toBe(0);
-  });
-
-  it.each([
-    ["light", 1440],
-    ["dark", 1440],
-    ["light", 390],
-    ["dark", 390],
-  ] as const)("passes axe and fits in %s at %i px", async (theme, width) => {
-    const { page, problems } = await openRanking({ theme, width });
-    expect(await axeViolations(page)).toEqual([]);
-    expect(
-      await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth),
-    ).toBeLessThanOrEqual(0);
-    expect(problems).toEqual([]);
   });
 });

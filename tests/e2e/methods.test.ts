@@ -1,6 +1,6 @@
 import type { Browser } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
-import { axeViolations, launchBrowser, openPage } from "../support/browser";
+import { launchBrowser, openPage } from "../support/browser";
 
 let browser: Browser;
 beforeAll(async () => {
@@ -23,20 +23,5 @@ describe("the page of methods", () => {
       expect(problems).toEqual([]);
       await context.close();
     }
-  });
-
-  it.each([
-    ["light", 1440],
-    ["dark", 390],
-  ] as const)("passes axe and fits in %s at %i px", async (theme, width) => {
-    const { page, context } = await openPage(browser, { as: "executive", theme, width });
-    await page.goto("/methods");
-    await page.getByRole("heading", { name: "z factor", exact: true }).waitFor();
-    expect(await axeViolations(page)).toEqual([]);
-    const overflow = await page.evaluate(
-      () => document.documentElement.scrollWidth - window.innerWidth,
-    );
-    expect(overflow).toBeLessThanOrEqual(0);
-    await context.close();
   });
 });

@@ -2,7 +2,7 @@ import type { Browser, Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { uniqueName } from "../factories";
 import { signInWith } from "../support/api";
-import { axeViolations, launchBrowser, openPage } from "../support/browser";
+import { launchBrowser, openPage } from "../support/browser";
 
 let browser: Browser;
 
@@ -121,31 +121,5 @@ describe("the audit page", () => {
     expect(actions.length).toBeGreaterThan(0);
     expect(actions.every((action) => action.startsWith("Price deck"))).toBe(true);
     expect(problems).toEqual([]);
-  });
-});
-
-describe("pages about people and accounts", () => {
-  it.each(["light", "dark"] as const)("give axe nothing to complain of, %s", async (theme) => {
-    for (const width of [1440, 390]) {
-      const { page, problems } = await openPage(browser, { as: "administrator", theme, width });
-      for (const path of ["/people", "/audit", "/profile"]) {
-        await page.goto(path);
-        await page.locator(".skeleton").first().waitFor({ state: "detached" });
-        expect({ path, width, found: await axeViolations(page) }).toEqual({
-          path,
-          width,
-          found: [],
-        });
-        const overflow = await page.evaluate(
-          () => document.documentElement.scrollWidth - window.innerWidth,
-        );
-        expect({ path, width, overflow: Math.max(0, overflow) }).toEqual({
-          path,
-          width,
-          overflow: 0,
-        });
-      }
-      expect(problems).toEqual([]);
-    }
   });
 });

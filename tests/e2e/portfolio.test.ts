@@ -3,7 +3,7 @@ import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import type { Statement } from "@/app/api/v1/portfolio/schema";
 import { formatFigure } from "@/components/ui/format";
 import { as, made } from "../factories";
-import { axeViolations, launchBrowser, openPage, type PageOptions } from "../support/browser";
+import { launchBrowser, openPage, type PageOptions } from "../support/browser";
 
 let browser: Browser;
 
@@ -72,19 +72,5 @@ describe("the statement in an executive's hands", () => {
     const figure = page.getByRole("figure").filter({ hasText: "Adding up the fields" });
     await figure.getByRole("button", { name: "Table" }).click();
     expect(await figure.getByRole("row").count()).toBe(102);
-  });
-
-  it.each([
-    ["light", 1440],
-    ["dark", 1440],
-    ["light", 390],
-    ["dark", 390],
-  ] as const)("passes axe and fits in %s at %i px", async (theme, width) => {
-    const { page, problems } = await openStatement({ theme, width });
-    expect(await axeViolations(page)).toEqual([]);
-    expect(
-      await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth),
-    ).toBeLessThanOrEqual(0);
-    expect(problems).toEqual([]);
   });
 });

@@ -2,7 +2,7 @@ import type { Browser } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import type { PriceDeckView } from "@/app/api/v1/price-decks/schema";
 import { as, buildPriceDeck, ifMatch, made } from "../factories";
-import { axeViolations, launchBrowser, openPage } from "../support/browser";
+import { launchBrowser, openPage } from "../support/browser";
 
 let browser: Browser;
 
@@ -67,32 +67,5 @@ describe("a draft deck in a planner's hands", () => {
     await page.goto(`/prices/${deck.id}`);
     await page.getByRole("heading", { level: 1, name: deck.name }).waitFor();
     expect(await page.getByRole("button", { name: "Publish", exact: true }).count()).toBe(0);
-  });
-});
-
-describe("the prices and review pages", () => {
-  it.each(["light", "dark"] as const)("give axe nothing to complain of, %s", async (theme) => {
-    const deck = await buildPriceDeck();
-    for (const width of [1440, 390]) {
-      const { page, problems } = await openPage(browser, { as: "planner", theme, width });
-      for (const path of ["/prices", `/prices/${deck.id}`, "/review"]) {
-        await page.goto(path);
-        await page.locator(".skeleton").first().waitFor({ state: "detached" });
-        expect({ path, width, found: await axeViolations(page) }).toEqual({
-          path,
-          width,
-          found: [],
-        });
-        const overflow = await page.evaluate(
-          () => document.documentElement.scrollWidth - window.innerWidth,
-        );
-        expect({ path, width, overflow: Math.max(0, overflow) }).toEqual({
-          path,
-          width,
-          overflow: 0,
-        });
-      }
-      expect(problems).toEqual([]);
-    }
   });
 });

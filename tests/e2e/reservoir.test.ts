@@ -5,7 +5,6 @@ import {
   as,
   buildDraft,
   buildReservoir,
-  buildSubmitted,
   estimateInputs,
   ifMatch,
   made,
@@ -220,44 +219,10 @@ describe("an estimate on its way", () => {
   });
 });
 
-describe("the pages of a field and a reservoir", () => {
-  it.each(["light", "dark"] as const)(
-    "break no accessibility rule in the %s theme",
-    async (theme) => {
-      const submitted = await buildSubmitted();
-      const address = addressOf(submitted);
-      const draft = await buildDraft();
-      const engineer = await openPage(browser, { as: "engineer", theme });
-      for (const path of [
-        `/fields/${submitted.place.field.slug}`,
-        addressOf(draft),
-        `${addressOf(draft)}/fluid`,
-        `${addressOf(draft)}/results`,
-        `${address}/history`,
-        "/fields/new",
-      ]) {
-        await engineer.page.goto(path);
-        await engineer.page.getByRole("heading", { level: 1 }).waitFor();
-        await engineer.page.waitForLoadState("networkidle");
-        expect({ path, found: await axeViolations(engineer.page) }).toEqual({ path, found: [] });
-      }
-      expect(engineer.problems).toEqual([]);
-      await engineer.context.close();
-    },
-  );
-
-  it("fit a phone of 360 px without scrolling sideways, with the result at the foot", async () => {
+describe("a reservoir on a phone", () => {
+  it("keeps the result at the foot", async () => {
     const draft = await buildDraft();
     const { page, context } = await openPage(browser, { as: "engineer", width: 360, height: 740 });
-    for (const path of ["", "/fluid", "/results", "/history"]) {
-      await page.goto(addressOf(draft) + path);
-      await page.getByRole("heading", { level: 1 }).waitFor();
-      await page.waitForLoadState("networkidle");
-      const tooWide = await page.evaluate(
-        () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
-      );
-      expect({ path, tooWide }).toEqual({ path, tooWide: 0 });
-    }
     await page.goto(addressOf(draft));
     await page.getByText("To the tank, live").waitFor();
     await context.close();

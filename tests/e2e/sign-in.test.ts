@@ -1,7 +1,7 @@
 import type { Browser } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { demoPassword, people } from "../support/api";
-import { axeViolations, launchBrowser, openPage } from "../support/browser";
+import { launchBrowser, openPage } from "../support/browser";
 
 let browser: Browser;
 
@@ -57,15 +57,6 @@ describe("the sign-in page", () => {
     const { page } = await openPage(browser, { as: "engineer" });
     await page.goto("/sign-in?callbackUrl=https%3A%2F%2Felsewhere.example%2F");
     await page.waitForURL(/\/portfolio$/);
-  });
-
-  it.each(["light", "dark"] as const)("has nothing for axe to complain of, %s", async (theme) => {
-    for (const width of [1440, 390]) {
-      const { page, problems } = await openPage(browser, { theme, width });
-      await page.goto("/sign-in");
-      expect(await axeViolations(page)).toEqual([]);
-      expect(problems).toEqual([]);
-    }
   });
 });
 

@@ -1,0 +1,89 @@
+import type { Browser, Page } from "playwright-core";
+import { afterAll, beforeAll, describe, expect, it } from "vitest";
+import type { EstimateView } from "@/app/api/v1/estimates/schema";
+import type { Role } from "@/services/policy";
+import { buildDraft, buildPriceDeck, buildSubmitted } from "../factories";
+import { axeViolations, launchBrowser, openPage } from "../support/browser";
+
+let browser: Browser;
+let draft: EstimateView;
+let submitted: EstimateView;
+let deckId: string;
+
+beforeAll(async () => {
+  browser = await launchBrowser();
+  draft = await buildDraft();
+  submitted = await buildSubmitted();
+  deckId = (await buildPriceDeck()).id;
+});
+
+afterAll(async () => {
+  await browser?.close();
+});
+
+const fieldOf = ({ place }: EstimateView) => `/fields/${place.field.slug}`;
+const reservoirOf = (estimate: EstimateView) =>
+  `${fieldOf(estimate)}/${estimate.place.reservoir.slug}`;
+
+/** Every page there is, by a role that sees most of it. A new page gets its line here. */
+const pages: Partial<Record<Role | "visitor", () => string[]>> = {
+  visitor: () => ["/sign-in"],
+  engineer: () => [
+    fieldOf(submitted),
+    reservoirOf(draft),
+    `${reservoirOf(draft)}/fluid`,
+    `${reservoirOf(draft)}/results`,
+    `${reservoirOf(draft)}/compare`,
+    `${reservoirOf(submitted)}/history`,
+    "/fields/new",
+    "/import",
+    "/methods",
+    "/api-guide",
+  ],
+  planner: () => ["/fields", "/prices", `/prices/${deckId}`, "/review"],
+  executive: () => ["/portfolio"],
+  administrator: () => ["/people", "/audit", "/profile"],
+};
+
+/** 360 px is the narrowest phone; 1440 px an ordinary desk. */
+const widths = [1440, 360];
+const themes = ["light", "dark"] as const;
+
+async function findingsOf(page: Page) {
+  const findings: unknown[] = [];
+  for (const width of widths) {
+    await page.setViewportSize({ width, height: 900 });
+    for (const theme of themes) {
+      await page.evaluate((name) => {
+        document.documentElement.dataset.theme = name;
+      }, theme);
+      const violations = await axeViolations(page);
+      if (violations.length > 0) findings.push({ width, theme, violations });
+    }
+    const tooWide = await page.evaluate(
+      () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+    );
+    if (tooWide > 0) findings.push({ width, tooWide });
+  }
+  return findings;
+}
+
+describe.each(Object.keys(pages) as (keyof typeof pages)[])("every page for a %s", (role) => {
+  it("breaks no accessibility rule in either theme, and never scrolls sideways", async () => {
+    const opened = await openPage(browser, { as: role === "visitor" ? undefined : role });
+    const { page, context, problems } = opened;
+    const found: Record<string, unknown> = {};
+    for (const path of pages[role]?.() ?? []) {
+      await page.setViewportSize({ width: widths[0], height: 900 });
+      await page.goto(path);
+      await page.getByRole("heading", { level: 1 }).waitFor();
+      await page.waitForLoadState("networkidle");
+      await page.locator(".skeleton").first().waitFor({ state: "detached" });
+      const findings = await findingsOf(page);
+      if (findings.length > 0) found[path] = findings;
+    }
+    expect(found).toEqual({});
+    expect(problems).toEqual([]);
+    await context.close();
+  });
+});
