@@ -6,6 +6,7 @@ import {
   type InferCreationAttributes,
   type NonAttribute,
 } from "sequelize";
+import type { SamplingMethod } from "@/analytics/uncertainty/sampling-schema";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import type { SimulationSummary } from "@/analytics/volumetrics/results-schema";
 import { sequelize } from "./sequelize";
@@ -25,6 +26,7 @@ export class Estimate extends Model<InferAttributes<Estimate>, InferCreationAttr
   declare fluidSampleId: CreationOptional<string | null>;
   declare seed: number;
   declare trials: number;
+  declare sampling: SamplingMethod;
   declare engineVersion: CreationOptional<string | null>;
   declare summary: CreationOptional<SimulationSummary | null>;
   declare computedAt: CreationOptional<Date | null>;
@@ -66,6 +68,7 @@ Estimate.init(
     fluidSampleId: DataTypes.UUID,
     seed: { type: DataTypes.INTEGER, allowNull: false },
     trials: { type: DataTypes.INTEGER, allowNull: false },
+    sampling: { type: DataTypes.TEXT, allowNull: false },
     engineVersion: DataTypes.TEXT,
     summary: {
       type: DataTypes.JSONB,

@@ -52,9 +52,9 @@ export async function runEstimate(
   });
 }
 
-async function simulated({ inputs, trials, seed }: Estimate) {
+async function simulated({ inputs, trials, sampling, seed }: Estimate) {
   try {
-    return await runSimulation(inputs, { trials, seed });
+    return await runSimulation(inputs, { trials, sampling, seed });
   } catch (error) {
     if (!(error instanceof DomainError)) throw error;
     throw new InvalidInputError([
@@ -65,7 +65,7 @@ async function simulated({ inputs, trials, seed }: Estimate) {
 
 /** Enough of the results for a reader of the audit trail to see what moved. */
 export function headlineOf(summary: SimulationSummary) {
-  const { engineVersion, seed, trials, results } = summary;
+  const { engineVersion, seed, trials, sampling, results } = summary;
   const range = ({
     p90,
     p50,
@@ -86,6 +86,7 @@ export function headlineOf(summary: SimulationSummary) {
     engineVersion,
     seed,
     trials,
+    sampling,
     wetGasInPlaceScf: range(results.wetGasInPlaceScf),
     condensateRecoverableStb: range(results.condensateRecoverableStb),
   };

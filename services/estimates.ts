@@ -1,7 +1,9 @@
 import { isDeepStrictEqual } from "node:util";
 import type { Transaction } from "sequelize";
+import type { SamplingMethod } from "@/analytics/uncertainty/sampling-schema";
 import { checkInputs } from "@/analytics/volumetrics/check-inputs";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
+import { checkTrials, DEFAULT_TRIALS, samplingFor } from "@/analytics/volumetrics/trial-counts";
 import type { Estimate } from "@/models/estimate";
 import {
   createEstimateRow,
@@ -26,8 +28,6 @@ import { seedOf } from "./seeds";
 import { inTransaction } from "./transaction";
 import { assertVersion, saveVersioned } from "./versions";
 
-const defaultTrials = 10_000;
-
 /** What a person sets in a draft. */
 export interface EstimatePatch {
   inputs?: EstimateInputs;
@@ -36,8 +36,10 @@ export interface EstimatePatch {
   note?: string;
   /** 0 to 2^31 - 1 */
   seed?: number;
-  /** 100 to 1,000,000 */
+  /** 100 to 1,048,576; a power of two, at least 1,024, for Sobol points */
   trials?: number;
+  /** the approved estimate's unless given, else what suits the number of trials */
+  sampling?: SamplingMethod;
 }
 
 export async function listEstimates(
@@ -108,6 +110,9 @@ export async function createDraft(
     const inherited = input.inputs ? null : (approved?.fluidSampleId ?? null);
     const inputs = await withSampleSheet(start, input.fluidSampleId, reservoirId, transaction);
     refuseImpossible("inputs", () => checkInputs(inputs));
+    const trials = input.trials ?? approved?.trials ?? DEFAULT_TRIALS;
+    const sampling = input.sampling ?? approved?.sampling ?? samplingFor(trials);
+    refuseImpossible("", () => checkTrials(trials, sampling));
     const at = now();
     const values = {
       reservoirId,
@@ -118,7 +123,8 @@ export async function createDraft(
       fluidSampleId: input.fluidSampleId === undefined ? inherited : input.fluidSampleId,
       // The same seed for every revision: what moves between two is then the inputs, not the dice.
       seed: input.seed ?? approved?.seed ?? seedOf(reservoir.field.slug, reservoir.slug),
-      trials: input.trials ?? approved?.trials ?? defaultTrials,
+      trials,
+      sampling,
       note: input.note ?? "",
       createdBy: actor.id,
     };
@@ -141,8 +147,8 @@ export async function createDraft(
 }
 
 /**
- * Change a draft or a returned estimate. New inputs, seed or trials take the results away: what is shown always belongs
- * to what is written.
+ * Change a draft or a returned estimate. New inputs, seed, trials or sampling take the results away: what is shown always
+ * belongs to what is written.
  */
 export async function updateDraft(
   actor: Actor,
@@ -161,20 +167,22 @@ export async function updateDraft(
       estimate.reservoirId,
       transaction,
     );
-    const { fluidSampleId, note, seed, trials } = estimate;
+    const { fluidSampleId, note, seed, trials, sampling } = estimate;
     // A sheet edited by hand is no longer the laboratory's.
     const isEdited = !isDeepStrictEqual(inputs.fluid, estimate.inputs.fluid);
     const source =
       patch.fluidSampleId ?? (patch.fluidSampleId === null || isEdited ? null : fluidSampleId);
     const changes = changesBetween<Required<EstimatePatch>>(
-      { inputs: estimate.inputs, fluidSampleId, note, seed, trials },
+      { inputs: estimate.inputs, fluidSampleId, note, seed, trials, sampling },
       { ...patch, inputs, fluidSampleId: source },
     );
     if (changes.after.inputs) refuseImpossible("inputs", () => checkInputs(inputs));
 
     const { after } = changes;
-    const voidsResults =
-      after.inputs !== undefined || after.seed !== undefined || after.trials !== undefined;
+    refuseImpossible("", () => checkTrials(after.trials ?? trials, after.sampling ?? sampling));
+    const voidsResults = (["inputs", "seed", "trials", "sampling"] as const).some(
+      (name) => after[name] !== undefined,
+    );
     estimate.set(after);
     if (voidsResults) {
       estimate.set({ summary: null, computedAt: null, engineVersion: null });

@@ -5,6 +5,7 @@ import { planInputNames } from "../recovery/recovery-plan-schema";
 import { refusals, summariseRecovery, type RefusalName } from "../recovery/recovery-totals";
 import { createRecoveryColumns } from "../recovery/trial-recovery";
 import type { CompiledDistribution } from "../uncertainty/distribution";
+import type { SamplingMethod } from "../uncertainty/sampling-schema";
 import { rankDrivers, swingColumns } from "../uncertainty/drivers";
 import { spearman } from "../uncertainty/rank-correlation";
 import { rangeOfSample, summariseSample } from "../uncertainty/summary";
@@ -26,6 +27,7 @@ import {
   type TrialVectors,
 } from "./results-schema";
 import { sampleInputs, samplePlanInputs } from "./sample-inputs";
+import { checkTrials, DEFAULT_TRIALS } from "./trial-counts";
 import {
   evaluateTrials,
   fluidConstants,
@@ -38,11 +40,13 @@ import { columns, createWorkspace, planWorkspace, type SimulationWorkspace } fro
 /** Changes whenever the same inputs and seed would give other numbers. Stored with every result. */
 export const ENGINE_VERSION = "1.0.0";
 
-export const DEFAULT_TRIALS = 10_000;
+export { DEFAULT_SAMPLING, DEFAULT_TRIALS } from "./trial-counts";
 
 export interface SimulationOptions {
-  /** 100 to 1,000,000; 10,000 unless given */
+  /** 100 to 1,048,576; `DEFAULT_TRIALS` unless given */
   trials?: number;
+  /** a Latin hypercube unless given, because that takes any number of trials */
+  sampling?: SamplingMethod;
   /** a safe integer, 0 or more. The same seed, inputs and engine version give the same bytes */
   seed: number;
   /** made by `createWorkspace(trials)`, to reuse between runs on one thread */
@@ -68,7 +72,8 @@ export interface Simulation {
  */
 export function simulate(inputs: EstimateInputs, options: SimulationOptions): Simulation {
   const { seed } = options;
-  const trials = options.trials ?? DEFAULT_TRIALS;
+  const { trials = DEFAULT_TRIALS, sampling = "latinHypercube" } = options;
+  checkTrials(trials, sampling);
   const workspace = options.workspace ?? createWorkspace(trials);
   checkOptions(trials, seed, workspace);
   const prepared = prepareInputs(inputs);
@@ -99,6 +104,7 @@ export function simulate(inputs: EstimateInputs, options: SimulationOptions): Si
       engineVersion: ENGINE_VERSION,
       seed,
       trials,
+      sampling,
       inputs: { ...sampled, ...recoveries },
       results,
       derived: {

@@ -1,14 +1,11 @@
-import { DomainError } from "../errors";
 import { createOrderWorkspace } from "../numerics/order-statistics";
 import { planInputNames, type PlanInputName } from "../recovery/recovery-plan-schema";
 import { createRecoveryColumns, type RecoveryColumns } from "../recovery/trial-recovery";
 import { normalScores, type RankWorkspace } from "../uncertainty/rank-correlation";
 import { inputNames, type InputName } from "./inputs-schema";
 import { derivedNames, resultNames, type DerivedName, type ResultName } from "./results-schema";
+import { checkTrials } from "./trial-counts";
 import type { TrialColumns, TrialScratch } from "./trials";
-
-/** Fewer say nothing about a P90; more need more memory than a request should take. */
-export const TRIALS_RANGE = [100, 1_000_000] as const;
 
 /**
  * Every array that a simulation of a given number of trials needs, so that a thread runs any number of reservoirs
@@ -44,15 +41,9 @@ export function planWorkspace(workspace: SimulationWorkspace): PlanWorkspace {
   return workspace.plan;
 }
 
-/** @throws {DomainError} when the number of trials is not a whole number from 100 to 1,000,000 */
+/** @throws {DomainError} when the number of trials is not a whole number from 100 to 1,048,576 */
 export function createWorkspace(trials: number): SimulationWorkspace {
-  const [fewest, most] = TRIALS_RANGE;
-  if (!Number.isInteger(trials) || trials < fewest || trials > most) {
-    throw new DomainError(
-      `The number of trials is a whole number from ${fewest} to ${most.toLocaleString("en-GB")}; ${trials} is not.`,
-      { input: "trials", value: trials },
-    );
-  }
+  checkTrials(trials, "latinHypercube");
   const numbers = () => new Float64Array(trials);
   const integers = () => new Uint32Array(trials);
   return {

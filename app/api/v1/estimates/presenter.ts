@@ -20,6 +20,7 @@ export function presentEstimateRow(estimate: Estimate, actor: Actor): EstimateRo
     fluidSampleId: estimate.fluidSampleId,
     seed: estimate.seed,
     trials: estimate.trials,
+    sampling: estimate.sampling,
     engineVersion: estimate.engineVersion,
     computedAt: presentMoment(estimate.computedAt),
     note: estimate.note,
