@@ -2,14 +2,20 @@
 import fs from "node:fs";
 import { availableParallelism } from "node:os";
 import path from "node:path";
+import { MessageChannel, receiveMessageOnPort, type MessagePort } from "node:worker_threads";
 import { Piscina } from "piscina";
 import { ConvergenceError, DomainError } from "@/analytics/errors";
 import type { Ledger, LedgerMember, LedgerOptions } from "@/analytics/portfolio/ledger";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import type { Simulation, SimulationOptions } from "@/analytics/volumetrics/simulate";
+import type {
+  SettledSimulation,
+  SettleOptions,
+  SettleStep,
+} from "@/analytics/volumetrics/until-settled";
 import { ServiceBusyError } from "../errors";
 import type { FluidAnswer, FluidQuestion, FluidTask, FluidTaskName } from "../fluids/tasks";
-import type { LedgerTask, Outcome, SimulationTask } from "./worker";
+import type { LedgerTask, Outcome, SettleTask, SimulationTask } from "./worker";
 
 /** Tasks that may wait for a thread. More would wait longer than anybody does, each with its inputs in memory. */
 export const MAXIMUM_QUEUE = 64;
@@ -51,11 +57,19 @@ export interface ComputeOptions {
   signal?: AbortSignal;
 }
 
+/** What a thread can do, by the name of the function of worker.ts. */
+interface Tasks {
+  simulate: SimulationTask;
+  settle: SettleTask;
+  ledger: LedgerTask;
+  fluid: FluidTask;
+}
+
 /** @throws {ServiceBusyError} when the queue is full */
-async function run<Value>(
-  name: "simulate" | "ledger" | "fluid",
-  task: SimulationTask | LedgerTask | FluidTask,
-  options: ComputeOptions & { transferList?: ArrayBuffer[] },
+async function run<Value, Name extends keyof Tasks = keyof Tasks>(
+  name: Name,
+  task: Tasks[Name],
+  options: ComputeOptions & { transferList?: (ArrayBuffer | MessagePort)[] },
 ): Promise<Value> {
   const threads = pool();
   if (threads.queueSize >= MAXIMUM_QUEUE) throw new ServiceBusyError();
@@ -75,6 +89,38 @@ export async function runSimulation(
 ): Promise<Simulation> {
   const task: SimulationTask = { inputs, options };
   return run<Simulation>("simulate", task, { signal });
+}
+
+/**
+ * `simulateUntilSettled` on a thread.
+ *
+ * @param onStep  called as the thread gets there, once a doubling, and for the last one before the promise resolves
+ * @throws {DomainError} as `simulateUntilSettled`
+ * @throws {ServiceBusyError} when too many wait already
+ */
+export async function runUntilSettled(
+  inputs: EstimateInputs,
+  options: Omit<SettleOptions, "onStep">,
+  { signal, onStep }: ComputeOptions & { onStep?: (step: SettleStep) => void } = {},
+): Promise<SettledSimulation> {
+  const { port1: here, port2: there } = new MessageChannel();
+  const tell = (step: SettleStep) => onStep?.(step);
+  here.on("message", tell);
+  // Progress alone keeps no process alive.
+  here.unref();
+  try {
+    const task: SettleTask = { inputs, options, progress: there };
+    const settled = await run<SettledSimulation>("settle", task, { signal, transferList: [there] });
+    // The answer may overtake the last steps.
+    here.off("message", tell);
+    for (let left = receiveMessageOnPort(here); left; left = receiveMessageOnPort(here)) {
+      tell(left.message as SettleStep);
+    }
+    return settled;
+  } finally {
+    here.close();
+    there.close();
+  }
 }
 
 /**

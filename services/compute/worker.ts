@@ -2,6 +2,7 @@
  * What a calculation thread does. Bundled to dist/workers/compute.mjs by scripts/build-workers.mjs and run by the pool
  * in pool.ts; nothing else imports it.
  */
+import type { MessagePort } from "node:worker_threads";
 import { move, transferableSymbol, valueSymbol } from "piscina";
 import { ConvergenceError, DomainError } from "@/analytics/errors";
 import {
@@ -17,12 +18,24 @@ import {
   type Simulation,
   type SimulationOptions,
 } from "@/analytics/volumetrics/simulate";
+import {
+  simulateUntilSettled,
+  type SettledSimulation,
+  type SettleOptions,
+} from "@/analytics/volumetrics/until-settled";
 import { createWorkspace, type SimulationWorkspace } from "@/analytics/volumetrics/workspace";
 import { fluidTasks, type FluidAnswer, type FluidTask, type FluidTaskName } from "../fluids/tasks";
 
 export interface SimulationTask {
   inputs: EstimateInputs;
   options: Omit<SimulationOptions, "workspace">;
+}
+
+export interface SettleTask {
+  inputs: EstimateInputs;
+  options: Omit<SettleOptions, "onStep">;
+  /** each step is posted here */
+  progress: MessagePort;
 }
 
 export interface LedgerTask {
@@ -44,7 +57,7 @@ export type Outcome<Value> =
 let workspace: SimulationWorkspace | null = null;
 
 export function simulate({ inputs, options }: SimulationTask) {
-  return settle<Simulation>(
+  return answer<Simulation>(
     () => {
       const trials = options.trials ?? DEFAULT_TRIALS;
       if (workspace?.trials !== trials) workspace = createWorkspace(trials);
@@ -54,9 +67,27 @@ export function simulate({ inputs, options }: SimulationTask) {
   );
 }
 
+/** More and more trials until the percentiles are known well enough. */
+export function settle({ inputs, options, progress }: SettleTask) {
+  return answer<SettledSimulation>(
+    () => {
+      try {
+        return simulateUntilSettled(inputs, {
+          ...options,
+          onStep: (step) => progress.postMessage(step),
+        });
+      } finally {
+        progress.close();
+      }
+    },
+    ({ simulation }) =>
+      Object.values(simulation.vectors).map(({ buffer }) => buffer as ArrayBuffer),
+  );
+}
+
 /** Summaries only: what comes back is small, and the summing up of many fields stays off the event loop. */
 export function ledger({ members, options }: LedgerTask) {
-  return settle<Ledger>(
+  return answer<Ledger>(
     () => computeLedger(members, options),
     () => [],
   );
@@ -65,14 +96,14 @@ export function ledger({ members, options }: LedgerTask) {
 /** Any of the calculations on fluids, by its name. */
 export function fluid<Name extends FluidTaskName>({ name, question }: FluidTask<Name>) {
   const calculate = fluidTasks[name] as (asked: typeof question) => FluidAnswer<Name>;
-  return settle(
+  return answer(
     () => calculate(question),
     () => [],
   );
 }
 
 /** Runs a task and hands its arrays over without copying them. */
-function settle<Value>(
+function answer<Value>(
   run: () => Value,
   buffersOf: (value: Value) => ArrayBuffer[],
 ): Outcome<Value> {

@@ -4,7 +4,14 @@ import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { DomainError } from "@/analytics/errors";
 import { computeLedger, type LedgerMember } from "@/analytics/portfolio/ledger";
 import { simulate } from "@/analytics/volumetrics/simulate";
-import { closePool, MAXIMUM_QUEUE, runLedger, runSimulation } from "@/services/compute/pool";
+import { simulateUntilSettled, type SettleStep } from "@/analytics/volumetrics/until-settled";
+import {
+  closePool,
+  MAXIMUM_QUEUE,
+  runLedger,
+  runSimulation,
+  runUntilSettled,
+} from "@/services/compute/pool";
 import { ServiceBusyError } from "@/services/errors";
 import { buildInputs } from "../../analytics/volumetrics/estimate-inputs";
 
@@ -52,6 +59,50 @@ describe("runSimulation", () => {
     expect(refused.every(({ reason }) => reason instanceof ServiceBusyError)).toBe(true);
     expect(outcomes.length - refused.length).toBeGreaterThanOrEqual(MAXIMUM_QUEUE);
     await expect(runSimulation(inputs, { trials: 100, seed: 1 })).resolves.toBeDefined();
+  });
+});
+
+describe("runUntilSettled", () => {
+  const options = {
+    seed: 3,
+    sampling: "latinHypercube",
+    tolerance: 0.03,
+    mostTrials: 16_384,
+  } as const;
+
+  it("tells every step in order and gives what the calling thread would have given", async () => {
+    const inputs = buildInputs();
+    const steps: SettleStep[] = [];
+    const there = await runUntilSettled(inputs, options, { onStep: (step) => steps.push(step) });
+    expect(there).toEqual(simulateUntilSettled(inputs, options));
+    expect(steps).toEqual(there.steps);
+    expect(steps.length).toBeGreaterThan(1);
+  });
+
+  it("gives up between steps when told to", async () => {
+    const controller = new AbortController();
+    const hopeless = { ...options, tolerance: 1e-6, mostTrials: 1_048_576 };
+    const steps: SettleStep[] = [];
+    const asked = runUntilSettled(buildInputs(), hopeless, {
+      signal: controller.signal,
+      onStep(step) {
+        steps.push(step);
+        if (steps.length === 3) controller.abort();
+      },
+    });
+    await expect(asked).rejects.toThrow(/abort/i);
+    expect(steps.at(-1)?.trials).toBeLessThan(1_048_576);
+    await expect(
+      runSimulation(buildInputs(), { trials: 100, seed: 1 }),
+      "the pool goes on",
+    ).resolves.toBeDefined();
+  });
+
+  it("brings an impossible tolerance back as the error it was", async () => {
+    const failure = await runUntilSettled(buildInputs(), { ...options, tolerance: 0 }).catch(
+      (error: unknown) => error,
+    );
+    expect(failure).toBeInstanceOf(DomainError);
   });
 });
 
