@@ -13,6 +13,8 @@ export const rankRegressionSchema = z.object({
   /** share of the variance of ranks that the regression explains, 0 to 1 */
   rSquared: z.number(),
   coefficients: z.array(z.object({ input: driverName, coefficient: z.number() })),
+  /** inputs that vary but have no coefficient, and why: their ranks follow from those of others */
+  leftOut: z.array(z.object({ input: driverName, reason: z.string() })),
 });
 
 /**
@@ -72,10 +74,20 @@ export const sensitivitySchema = z.object({
 });
 export type Sensitivity = z.infer<typeof sensitivitySchema>;
 
-/** Something that differs between two estimates; `sampling` is seed, method and number of trials. */
-export const changeSchema = z.discriminatedUnion("kind", [
+const singleChanges = [
   z.object({ kind: z.literal("input"), input: driverName }),
   z.object({ kind: z.enum(["correlations", "fluid", "recoveryPlan", "sampling"]) }),
+] as const;
+const singleChangeSchema = z.discriminatedUnion("kind", singleChanges);
+export type SingleChange = z.infer<typeof singleChangeSchema>;
+
+/**
+ * Something that differs between two estimates; `sampling` is seed, method and number of trials. `together` are
+ * differences of which one without the others makes no estimate (inputs of one set of cases, for instance).
+ */
+export const changeSchema = z.discriminatedUnion("kind", [
+  ...singleChanges,
+  z.object({ kind: z.literal("together"), changes: z.array(singleChangeSchema).min(2) }),
 ]);
 export type Change = z.infer<typeof changeSchema>;
 
