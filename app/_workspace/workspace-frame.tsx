@@ -6,6 +6,8 @@ import type { DeckChoice } from "@/components/layout/basis-strip";
 import type { NavItem, Person } from "@/components/layout/top-bar";
 import { applyTheme, rememberedTheme } from "@/components/layout/theme";
 import { WorkspaceShell } from "@/components/layout/workspace-shell";
+import { useCan } from "@/app/_client/use-session";
+import { useDependenceSets } from "./use-dependence-sets";
 import { useSessionWatch } from "./use-session-watch";
 import { useWaitingCount } from "./use-waiting-count";
 
@@ -30,11 +32,14 @@ export function WorkspaceFrame({
   // A page that answers 403 is drawn anew in the browser, and with it the document's own attributes.
   useLayoutEffect(() => applyTheme(rememberedTheme()), []);
   const waiting = useWaitingCount();
+  const may = useCan();
+  const { data: dependenceSets } = useDependenceSets({ enabled: decks !== undefined });
   return (
     <WorkspaceShell
       person={person}
       nav={nav.map((item) => (item.href === "/review" ? { ...item, count: waiting } : item))}
       decks={decks}
+      dependence={{ dependenceSets, mayEditSets: may("dependenceSet.update") }}
       account={[
         {
           entries: [

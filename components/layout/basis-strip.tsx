@@ -16,8 +16,19 @@ export interface DeckChoice {
   asOf: string;
 }
 
+/** A named set of dependence, the book's own first. */
+export interface DependenceChoice {
+  id: string;
+  name: string;
+  isDefault: boolean;
+}
+
 export interface BasisStripProps {
   decks: readonly DeckChoice[];
+  /** undefined until they are known */
+  dependenceSets?: readonly DependenceChoice[];
+  /** the person may change sets, not only look at them */
+  mayEditSets?: boolean;
   /** parts that a page fixes itself (a frozen round fixes its deck and its estimates), with what they say */
   fixed?: Partial<Record<keyof Basis, string>>;
 }
@@ -26,9 +37,16 @@ const words = {
   case: { low: "Low case", mid: "Mid case", high: "High case" },
   estimates: { approved: "Approved only", latest: "Drafts too" },
   interest: { gross: "Gross, 100 %", net: "Net to company" },
-  risk: { unrisked: "Unrisked", risked: "Risked" },
+  risk: { unrisked: "Unrisked", risked: "Risked", yesNo: "Yes or no per trial" },
   units: { field: "Field units", metric: "Metric" },
 } as const;
+
+/** What a choice does, where its words alone do not say. */
+const meanings: Partial<Record<string, string>> = {
+  unrisked: "default; as if every field came",
+  risked: "every trial times the field’s chance; means are exact",
+  yesNo: "a field comes or does not, drawn trial by trial",
+};
 
 type Change = (change: Partial<Basis>) => void;
 
@@ -43,10 +61,48 @@ function choices<Part extends keyof typeof words>(
     heading,
     entries: entries.map(([value, label]) => ({
       label,
-      note: value === defaultBasis[part] ? "default" : undefined,
+      note: meanings[value] ?? (value === defaultBasis[part] ? "default" : undefined),
       current: basis[part] === value,
       onSelect: () => change({ [part]: value }),
     })),
+  };
+}
+
+/** The named sets, the book's own marked, and where they are kept. */
+function dependencePart(
+  sets: readonly DependenceChoice[],
+  mayEdit: boolean,
+  basis: Basis,
+  change: Change,
+  withBasis: (href: string) => string,
+): Part {
+  const chosen = sets.find(({ id, isDefault }) =>
+    basis.dependence === "default" ? isDefault : id === basis.dependence,
+  );
+  const unknown = basis.dependence === "default" ? "The book’s own" : "A set that is not here";
+  return {
+    of: ["dependence"],
+    name: "Dependence",
+    value: chosen?.name ?? unknown,
+    groups: [
+      {
+        heading: "How fields move together",
+        entries: sets.map(({ id, name, isDefault }) => ({
+          label: name,
+          note: isDefault ? "default" : undefined,
+          current: chosen?.id === id,
+          onSelect: () => change({ dependence: isDefault ? "default" : id }),
+        })),
+      },
+      {
+        entries: [
+          {
+            label: mayEdit ? "Edit sets…" : "What the sets say…",
+            href: withBasis("/portfolio/dependence"),
+          },
+        ],
+      },
+    ],
   };
 }
 
@@ -54,8 +110,13 @@ function choices<Part extends keyof typeof words>(
  * Says on what every number of the page stands. Each part opens to change it; what is not the
  * approved default turns warning ink.
  */
-export function BasisStrip({ decks, fixed = {} }: BasisStripProps) {
-  const { basis, setBasis } = useBasis();
+export function BasisStrip({
+  decks,
+  dependenceSets = [],
+  mayEditSets = false,
+  fixed = {},
+}: BasisStripProps) {
+  const { basis, setBasis, withBasis } = useBasis();
   const latest = decks[0];
   const deck = basis.deck === "latest" ? latest : decks.find(({ id }) => id === basis.deck);
   const deckWords = deck ? `${deck.name}, ${formatDate(deck.asOf)}` : "No published deck";
@@ -80,6 +141,13 @@ export function BasisStrip({ decks, fixed = {} }: BasisStripProps) {
     })),
   };
 
+  const plainPart = (part: "estimates" | "interest" | "risk" | "units"): Part => ({
+    of: [part],
+    name: { estimates: "Estimates", interest: "Interest", risk: "Risk", units: "Units" }[part],
+    value: (words[part] as Record<string, string>)[basis[part]],
+    groups: [choices(part, basis, setBasis)],
+  });
+
   const parts: Part[] = [
     {
       of: ["deck", "case"],
@@ -87,12 +155,9 @@ export function BasisStrip({ decks, fixed = {} }: BasisStripProps) {
       value: deckWords + caseWords,
       groups: [deckGroup, choices("case", basis, setBasis, "Case")],
     },
-    ...(["estimates", "interest", "risk", "units"] as const).map((part) => ({
-      of: [part],
-      name: { estimates: "Estimates", interest: "Interest", risk: "Risk", units: "Units" }[part],
-      value: (words[part] as Record<string, string>)[basis[part]],
-      groups: [choices(part, basis, setBasis)],
-    })),
+    ...(["estimates", "interest", "risk"] as const).map(plainPart),
+    dependencePart(dependenceSets, mayEditSets, basis, setBasis, withBasis),
+    plainPart("units"),
     { of: ["base"], name: "At", value: standardConditions[basis.base].label, groups: [baseGroup] },
   ];
 

@@ -1,6 +1,6 @@
 import { Suspense, type ReactNode } from "react";
 import type { MenuGroup } from "@/components/ui/choice";
-import { BasisStrip, type DeckChoice } from "./basis-strip";
+import { BasisStrip, type BasisStripProps, type DeckChoice } from "./basis-strip";
 import { Footer } from "./footer";
 import { TopBar, type NavItem, type Person } from "./top-bar";
 
@@ -9,6 +9,8 @@ export interface WorkspaceShellProps {
   nav: readonly NavItem[];
   /** for the basis strip; left out on pages whose figures stand on no basis */
   decks?: readonly DeckChoice[];
+  /** for the strip's dependence */
+  dependence?: Pick<BasisStripProps, "dependenceSets" | "mayEditSets">;
   account: MenuGroup[];
   tools?: ReactNode;
   /** what made the numbers, for the footer */
@@ -21,6 +23,7 @@ export function WorkspaceShell({
   person,
   nav,
   decks,
+  dependence,
   account,
   tools,
   provenance,
@@ -34,7 +37,7 @@ export function WorkspaceShell({
       {/* Both read the address, which is known only in the browser while a page is prerendered. */}
       <Suspense fallback={<div className="h-[88px]" />}>
         <TopBar person={person} nav={nav} account={account} tools={tools} />
-        {decks && <BasisStrip decks={decks} />}
+        {decks && <BasisStrip decks={decks} {...dependence} />}
       </Suspense>
       {children}
       <Footer provenance={provenance} />

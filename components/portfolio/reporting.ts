@@ -23,6 +23,13 @@ export interface Reporting {
   words: string;
 }
 
+/** What the choice of risk is called behind a figure. */
+export const riskWords: Record<Basis["risk"], string> = {
+  unrisked: "unrisked",
+  risked: "risked",
+  yesNo: "yes or no per trial",
+};
+
 /** "$", "€", "NOK" */
 export function currencySign(code: string): string {
   const parts = new Intl.NumberFormat("en", {
@@ -43,7 +50,7 @@ export function reportingOf(basis: Basis, prices: ChosenPricesView | null): Repo
     condensateYield: units.condensateYield,
     money: { unit: `${currency} million`, factor: 1e-6 },
     currency,
-    words: `${basis.interest}, ${basis.risk}`,
+    words: `${basis.interest}, ${riskWords[basis.risk]}`,
   };
 }
 

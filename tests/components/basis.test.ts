@@ -11,6 +11,7 @@ describe("parseBasis", () => {
       estimates: "approved",
       interest: "net",
       risk: "unrisked",
+      dependence: "default",
       units: "field",
       base: "14.696",
     });
