@@ -24,6 +24,8 @@ export interface RangeMarkProps {
   size?: "row" | "large";
   /** the range it had: a hollow box behind the mark */
   before?: MarkRange | null;
+  /** what the box is, read out: what it was unless told otherwise */
+  beforeWord?: string;
   /** decade lines through the row; on for rows */
   gridLines?: boolean;
   /** how many ticks the column's scale has, so that lines and header agree */
@@ -69,6 +71,7 @@ export function RangeMark({
   tone = "condensate",
   size = "row",
   before,
+  beforeWord = "before",
   gridLines = size === "row",
   ticks,
   values = size === "large",
@@ -86,7 +89,7 @@ export function RangeMark({
   };
   const cut = [!isOn(at.p90) && "low", !isOn(at.p10) && "high"].filter(Boolean).join(" ");
   const unitText = unit ? ` ${unit}` : "";
-  const beforeText = before ? `; before ${describeRange(before, format)}` : "";
+  const beforeText = before ? `; ${beforeWord} ${describeRange(before, format)}` : "";
 
   return (
     <>
@@ -98,7 +101,7 @@ export function RangeMark({
         data-tip-side={tipSide}
         data-tip={
           describeRange(range, format, "   ") +
-          (before ? `\nbefore ${describeRange(before, format, "   ")}` : "")
+          (before ? `\n${beforeWord} ${describeRange(before, format, "   ")}` : "")
         }
         role="img"
         tabIndex={0}

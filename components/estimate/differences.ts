@@ -54,9 +54,9 @@ export function inputDifferences(
   before: EstimateInputs | null,
 ): InputDifference[] {
   return listedOf(now).map((name) => {
-    const { distribution: current, source } = inputOf(now, name) ?? missing(name);
+    const { distribution: current, source } = sampledInput(now, name) ?? missing(name);
     const isListed = before !== null && listedOf(before).includes(name);
-    const previous = isListed ? (inputOf(before, name)?.distribution ?? null) : null;
+    const previous = isListed ? (sampledInput(before, name)?.distribution ?? null) : null;
     const range = compileDistribution(current).range;
     const beforeRange = previous && compileDistribution(previous).range;
     return {
@@ -78,7 +78,8 @@ const planInputsIn = ({ recoveryPlan }: EstimateInputs) =>
 /** Inputs that an estimate samples, in the order in which they are listed. */
 const listedOf = (inputs: EstimateInputs) => listedInputs(planInputsIn(inputs));
 
-function inputOf({ uncertain, recoveryPlan: plan }: EstimateInputs, name: DriverName) {
+/** One sampled input, of the estimate's own ten or of its recovery plan; `undefined` where the plan has none. */
+export function sampledInput({ uncertain, recoveryPlan: plan }: EstimateInputs, name: DriverName) {
   switch (name) {
     case "abandonmentPressurePsia":
     case "condensateCurveFactor":

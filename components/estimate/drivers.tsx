@@ -13,10 +13,12 @@ export function Drivers({
   summary,
   basis,
   result = "condensateRecoverableStb",
+  level,
 }: {
   summary: SimulationSummary;
   basis: ResultBasis;
   result?: keyof SimulationSummary["drivers"];
+  level?: 2 | 3;
 }) {
   const factor = resultFactor(result, basis);
   const unit = resultUnit(result, basis);
@@ -24,6 +26,7 @@ export function Drivers({
   const drivers = summary.drivers[result];
   return (
     <Section
+      level={level}
       title={driverFinding(drivers)}
       note={`${name}, ${unit}, as each input goes from its P90 to its P10`}
     >

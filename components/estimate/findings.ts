@@ -1,10 +1,9 @@
 /** What a chart or a table shows, in a sentence with the figures in it. Nothing here is said that was not computed. */
 import type { Driver, DriverName, Range } from "@/analytics/volumetrics/results-schema";
-import { formatFigure, formatPercent } from "@/components/ui/format";
+import { formatFigure, formatPercent, lowerFirst } from "@/components/ui/format";
 import { driverCatalogue } from "./input-catalogue";
 
 const named = (name: DriverName) => driverCatalogue[name].label;
-const lower = (text: string) => text[0].toLowerCase() + text.slice(1);
 
 /** "Net thickness and area make 92 % of the spread", or one input alone when it makes most of it. */
 export function driverFinding(drivers: readonly Driver[]): string {
@@ -14,7 +13,7 @@ export function driverFinding(drivers: readonly Driver[]): string {
     return `${named(first.input)} makes ${formatPercent(first.shareOfSpread)} of the spread`;
   }
   const both = first.shareOfSpread + second.shareOfSpread;
-  return `${named(first.input)} and ${lower(named(second.input))} make ${formatPercent(both)} of the spread`;
+  return `${named(first.input)} and ${lowerFirst(named(second.input))} make ${formatPercent(both)} of the spread`;
 }
 
 /** Below this a change of a percentile is of the size of the sampling error: it "barely moved". */

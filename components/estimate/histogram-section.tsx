@@ -1,4 +1,8 @@
-import type { ResultName, SimulationSummary } from "@/analytics/volumetrics/results-schema";
+import type {
+  QuantitySummary,
+  ResultName,
+  SimulationSummary,
+} from "@/analytics/volumetrics/results-schema";
 import { ChartFrame } from "@/components/charts/chart-frame";
 import { Histogram, type HistogramBin } from "@/components/charts/histogram";
 import { formatFigure } from "@/components/ui/format";
@@ -6,7 +10,7 @@ import { resultFactor, resultUnit, type ResultBasis } from "./result-rows";
 
 /** The histogram of a summary as shares of its trials, in the units of the basis. */
 export function binsOf(
-  { histogram: { low, high, counts } }: SimulationSummary["results"][ResultName],
+  { histogram: { low, high, counts } }: Pick<QuantitySummary, "histogram">,
   factor: number,
 ): HistogramBin[] {
   const total = counts.reduce((sum, count) => sum + count, 0);

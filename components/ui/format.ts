@@ -99,3 +99,6 @@ export function formatDate(
       : DateTime.fromISO(value, { zone });
   return date.isValid ? date.setLocale("en-GB").toFormat(dateFormats[style]) : MISSING;
 }
+
+/** "Net thickness" -> "net thickness": a name in the middle of a sentence. */
+export const lowerFirst = (text: string) => text.charAt(0).toLowerCase() + text.slice(1);

@@ -140,6 +140,9 @@ export interface FigureCellProps extends FigureProps {
   sorted?: boolean;
   /** the value it had: set above, soft, with the new one under it */
   before?: number | null;
+  /** what the two are, read out: before and now unless told otherwise */
+  beforeWord?: string;
+  nowWord?: string;
   className?: string;
 }
 
@@ -149,6 +152,8 @@ export function FigureCell({
   soft,
   sorted,
   before,
+  beforeWord = "before",
+  nowWord = "now",
   className,
   ...figure
 }: FigureCellProps) {
@@ -167,11 +172,11 @@ export function FigureCell({
       ) : (
         <span className="before-after">
           <span>
-            <VisuallyHidden>before </VisuallyHidden>
+            <VisuallyHidden>{beforeWord} </VisuallyHidden>
             <Figure {...figure} value={before} />
           </span>
           <span>
-            <VisuallyHidden>now </VisuallyHidden>
+            <VisuallyHidden>{nowWord} </VisuallyHidden>
             <Figure {...figure} />
           </span>
         </span>

@@ -1,0 +1,63 @@
+import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
+import { ChartFrame } from "@/components/charts/chart-frame";
+import { InputBars } from "@/components/charts/input-bars";
+import { formatPercent } from "@/components/ui/format";
+import { byTotal, jointWords, varianceFinding } from "./driver-findings";
+import { factorLabel, togetherWords } from "./driver-names";
+import type { DriverViewProps } from "./regression-view";
+
+/** "54 % ± 2 %": a share with twice its standard error */
+const shareText = ({ value, standardError }: { value: number; standardError: number }) =>
+  `${formatPercent(value)} ± ${(200 * standardError).toFixed(standardError < 0.005 ? 1 : 0)}`;
+
+/** Shares of the variance: what goes when a factor alone is known, and what stays when all others are. */
+export function VarianceView({
+  sensitivity,
+  inputs,
+  name,
+  tone,
+  fileName,
+}: DriverViewProps & { inputs: EstimateInputs }) {
+  const { varianceShares } = sensitivity;
+  const factors = byTotal(varianceShares.factors);
+  const together = togetherWords(factors, inputs);
+  return (
+    <ChartFrame
+      level={3}
+      title={varianceFinding(varianceShares)}
+      note={`${name}. Full bar: share that goes when the input alone is known (first order). Pale bar: share it has a hand in (total). Lines and ±: 95 % of the sampling, from ${varianceShares.evaluations.toLocaleString("en-US")} runs of the model. ${jointWords(varianceShares)}${together ? ` ${together}` : ""}`}
+      fileName={`${fileName}-variance-shares`}
+      data={{
+        columns: [
+          { label: "Factor" },
+          { label: "First order" },
+          { label: "Standard error of first order" },
+          { label: "Total" },
+          { label: "Standard error of total" },
+        ],
+        rows: factors.map(({ inputs: members, first, total }) => [
+          factorLabel(members),
+          first.value,
+          first.standardError,
+          total.value,
+          total.standardError,
+        ]),
+      }}
+    >
+      <InputBars
+        label={`Shares of the variance of ${name}`}
+        nameHeading="Factor"
+        figureHeadings={["Alone", "In all"]}
+        scale={{ kind: "linear", domain: [0, 1] }}
+        tone={tone}
+        format={(value) => formatPercent(value)}
+        rows={factors.map(({ inputs: members, first, total }) => ({
+          name: factorLabel(members),
+          bar: first,
+          wider: total,
+          figures: [shareText(first), shareText(total)],
+        }))}
+      />
+    </ChartFrame>
+  );
+}
