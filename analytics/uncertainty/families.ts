@@ -1,6 +1,7 @@
 import { incompleteBeta, logBeta, betaQuantile } from "../numerics/beta";
 import { normalCdf, normalPdf, normalQuantile } from "../numerics/normal";
 import { fillNormalQuantiles } from "../numerics/normal-table";
+import type { Atom } from "./compiled-distribution";
 import { createBetaTable, type BetaTable } from "./beta-table";
 
 /**
@@ -10,6 +11,8 @@ export interface Family {
   /** where the density is positive; infinite where it has no end */
   readonly minimum: number;
   readonly maximum: number;
+  /** values with chances of their own, ascending; none where there is a density everywhere */
+  readonly atoms?: readonly Atom[];
   quantile(p: number): number;
   cdf(x: number): number;
   pdf(x: number): number;

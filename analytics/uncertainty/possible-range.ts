@@ -1,6 +1,7 @@
 import { DomainError } from "../errors";
 import { compileDistribution, type CompiledDistribution } from "./distribution";
 import type { Distribution } from "./distribution-schema";
+import { compileScenarios } from "./scenarios";
 
 /** What a quantity can be whatever the others are. Units as its name says. */
 export interface PossibleRange {
@@ -25,7 +26,7 @@ export interface PossibleRange {
 const NEGLIGIBLE_MASS = 1e-6;
 
 /**
- * Compiles the distribution of one quantity, found possible for it.
+ * Compiles the distribution of one quantity, found possible for it; of scenarios, each case by itself.
  *
  * @throws {DomainError} when its parameters make no distribution, or when it reaches further past the possible range
  *   than a negligible chance; `details.input` is then `value`, `minimum` or `maximum`, and `details.value` the
@@ -35,6 +36,9 @@ export function compilePossible(
   range: PossibleRange,
   distribution: Distribution,
 ): CompiledDistribution {
+  if (distribution.kind === "scenarios") {
+    return compileScenarios(distribution, (ofCase) => compilePossible(range, ofCase));
+  }
   const compiled = compileDistribution(distribution);
   const { label, unit, possible, lowExcluded, slip } = range;
   const [low, high] = possible;

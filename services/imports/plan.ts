@@ -143,6 +143,15 @@ export function isSame(a: unknown, b: unknown): boolean {
 
 const figure = (value: number): string => String(Number(value.toPrecision(6)));
 
+const endsWords = { p90p10: "P90 and P10", p95p05: "P95 and P05" } as const;
+const percentileFamilyWords = {
+  normal: "normal",
+  lognormal: "lognormal",
+  shiftedLognormal: "shifted lognormal",
+  triangular: "triangular",
+  pert: "pert",
+} as const;
+
 /** A range in a few words: "1520 to 3350 acre (P90, P10)". */
 function describe(distribution: Distribution, unit: string): string {
   const suffix = unit === "fraction" ? "" : ` ${unit}`;
@@ -155,8 +164,9 @@ function describe(distribution: Distribution, unit: string): string {
       return span(distribution.low, distribution.high, "uniform");
     case "triangular":
     case "pert": {
-      const { low, mode, high, kind } = distribution;
-      return `${figure(low)}, ${figure(mode)}, ${figure(high)}${suffix} (${kind})`;
+      const { low, mode, high, kind, ends = "limits" } = distribution;
+      const how = ends === "limits" ? kind : `${kind}, ends at ${endsWords[ends]}`;
+      return `${figure(low)}, ${figure(mode)}, ${figure(high)}${suffix} (${how})`;
     }
     case "normalP90P10":
       return span(distribution.p90, distribution.p10, "P90 to P10, normal");
@@ -166,6 +176,22 @@ function describe(distribution: Distribution, unit: string): string {
       return `${figure(distribution.mean)}${suffix}, standard deviation ${figure(distribution.standardDeviation)} (normal)`;
     case "lognormal":
       return `mean of ln ${figure(distribution.mu)}, standard deviation ${figure(distribution.sigma)} (lognormal)`;
+    case "percentiles": {
+      const points = distribution.points.map(
+        ({ exceedance, value }) => `P${figure(100 * exceedance)} ${figure(value)}`,
+      );
+      return `${points.join(", ")}${suffix} (${percentileFamilyWords[distribution.family]})`;
+    }
+    case "data": {
+      const { values, shape } = distribution;
+      return `${values.length} values, ${figure(Math.min(...values))} to ${figure(Math.max(...values))}${suffix} (${shape})`;
+    }
+    case "scenarios": {
+      const cases = distribution.scenarios.map(
+        ({ name, weight }) => `${name} ${figure(100 * weight)} %`,
+      );
+      return `${cases.length} cases: ${cases.join(", ")}`;
+    }
   }
 }
 
