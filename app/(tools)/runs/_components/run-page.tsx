@@ -1,0 +1,180 @@
+"use client";
+
+import { useQueryClient } from "@tanstack/react-query";
+import { useEffect, useRef, useState } from "react";
+import { errorWords } from "@/app/_client/request";
+import type { RunView } from "@/app/api/v1/runs/schema";
+import { Button } from "@/components/ui/button";
+import { Dialog } from "@/components/ui/dialog";
+import { formatDate } from "@/components/ui/format";
+import { Page, PageHead, Section, Stack } from "@/components/ui/section";
+import { Notice, Skeleton } from "@/components/ui/status";
+import {
+  isUnderWay,
+  useCancelRun,
+  useComparison,
+  useRetryRun,
+  useRun,
+  type Comparison,
+} from "../_queries/runs";
+import { RunItems } from "./run-items";
+import { RunProgress } from "./run-progress";
+import { durationWords, movedNote, runTitle } from "./run-words";
+import { SettlingSteps } from "./settling-steps";
+
+const crumbs = [{ label: "Runs", href: "/runs" }, { label: "Run" }];
+
+/** One run: how far it is, what it found, and every estimate of it. */
+export function RunPage({ id }: { id: string }) {
+  const { data: run, error, refetch } = useRun(id);
+  const { data: comparison } = useComparison(run);
+  useRefreshAtEnd(run);
+
+  if (!run) {
+    return (
+      <Page>
+        <PageHead title="Run" crumbs={crumbs} />
+        {error ? (
+          <Notice
+            tone="error"
+            title={errorWords(error)}
+            actions={
+              <Button size="small" onClick={() => void refetch()}>
+                Try again
+              </Button>
+            }
+          >
+            The run goes on; only this page could not be read.
+          </Notice>
+        ) : (
+          <Skeleton lines={8} label="Loading the run" />
+        )}
+      </Page>
+    );
+  }
+  return (
+    <Page>
+      <PageHead
+        title={runTitle(run, comparison ?? null)}
+        crumbs={crumbs}
+        lead={run.title}
+        meta={<RunMeta run={run} />}
+        actions={<RunActions run={run} />}
+      />
+      <Stack>
+        <RunState run={run} comparison={comparison ?? null} />
+        {run.kind === "untilSettled" ? (
+          <Section
+            title="More trials, step by step"
+            note="Each step doubles the trials. It ends when the 95 % interval of P90, P50 and P10 is narrow enough, or at the most trials allowed."
+          >
+            <SettlingSteps id={id} live={isUnderWay(run)} />
+          </Section>
+        ) : (
+          <RunItems run={run} />
+        )}
+      </Stack>
+    </Page>
+  );
+}
+
+/** Open estimates have new results when a run ends, and with them pages that show them. */
+function useRefreshAtEnd(run: RunView | undefined): void {
+  const client = useQueryClient();
+  const wasUnderWay = useRef(false);
+  const underWay = isUnderWay(run);
+  useEffect(() => {
+    if (wasUnderWay.current && !underWay) void client.invalidateQueries();
+    wasUnderWay.current = underWay;
+  }, [client, underWay]);
+}
+
+function RunMeta({ run }: { run: RunView }) {
+  const { startedAt, finishedAt, workers } = run;
+  return (
+    <>
+      <span>
+        {run.createdBy?.name ?? "Somebody who has left"}, {formatDate(run.createdAt, "time")} UTC
+      </span>
+      {startedAt && finishedAt && (
+        <span>Took {durationWords((Date.parse(finishedAt) - Date.parse(startedAt)) / 1000)}</span>
+      )}
+      {workers.length > 0 && (
+        <span>
+          {workers.length === 1 ? "Worker" : `${workers.length} workers`}: {workers.join(", ")}
+        </span>
+      )}
+    </>
+  );
+}
+
+function RunActions({ run }: { run: RunView }) {
+  const [isAsking, setIsAsking] = useState(false);
+  const cancel = useCancelRun();
+  const retry = useRetryRun();
+  const problem = cancel.error ?? retry.error;
+
+  function handleCancel() {
+    setIsAsking(false);
+    cancel.mutate(run.id);
+  }
+
+  return (
+    <>
+      {problem && <span className="field-error">{errorWords(problem)}</span>}
+      {run.can.retry && (
+        <Button busy={retry.isPending} onClick={() => retry.mutate(run.id)}>
+          {run.counts.failed > 0 ? "Retry what failed" : "Take it up again"}
+        </Button>
+      )}
+      {run.can.cancel && (
+        <Button busy={cancel.isPending} busyLabel="Cancelling…" onClick={() => setIsAsking(true)}>
+          Cancel the run
+        </Button>
+      )}
+      <Dialog
+        open={isAsking}
+        onClose={() => setIsAsking(false)}
+        title="Cancel this run?"
+        description="What is done stays done. What still waits is passed over, and what is being computed now is dropped. It can be taken up again later."
+        actions={
+          <>
+            <Button onClick={() => setIsAsking(false)}>Let it run</Button>
+            <Button kind="primary" onClick={handleCancel}>
+              Cancel the run
+            </Button>
+          </>
+        }
+      />
+    </>
+  );
+}
+
+/** Where the run stands, and what to do about it. */
+function RunState({ run, comparison }: { run: RunView; comparison: Comparison | null }) {
+  const { counts } = run;
+  if (isUnderWay(run)) return <RunProgress run={run} label="Computing" />;
+  if (run.state === "cancelled") {
+    return (
+      <Notice tone="info" title="The run was cancelled.">
+        Results that were done are kept; the rest was passed over.
+      </Notice>
+    );
+  }
+  return (
+    <div className="grid grid-cols-1 gap-3">
+      {counts.failed > 0 && (
+        <Notice title={`${counts.failed} could not be computed.`}>
+          Their stored results are as they were. The reasons are below; repair the inputs, or retry
+          when the reason has gone.
+        </Notice>
+      )}
+      {comparison && comparison.compared > 0 && (
+        <p className="text-13 text-ink-soft">
+          Compared: recoverable condensate before and now, in standard errors of the difference.{" "}
+          {movedNote(comparison)}
+        </p>
+      )}
+    </div>
+  );
+}

@@ -1,0 +1,75 @@
+"use client";
+
+import { useRouter } from "next/navigation";
+import { useState } from "react";
+import { errorWords } from "@/app/_client/request";
+import { runScopes, type RunScope } from "@/models/vocabulary";
+import { Button } from "@/components/ui/button";
+import { Dialog } from "@/components/ui/dialog";
+import { Notice } from "@/components/ui/status";
+import { useStartRun } from "../_queries/runs";
+import { scopes } from "./run-words";
+
+/** Asks what to recalculate, saying of each choice what it changes. */
+export function StartRunDialog({ onClose }: { onClose: () => void }) {
+  const router = useRouter();
+  const start = useStartRun();
+  const [scope, setScope] = useState<RunScope>("approved");
+
+  async function handleStart() {
+    try {
+      const run = await start.mutateAsync({ kind: "recalculation", scope });
+      router.push(`/runs/${run.id}`);
+    } catch {
+      // The notice says it, and the choice stands.
+    }
+  }
+
+  return (
+    <Dialog
+      open
+      onClose={onClose}
+      title="Recalculate with today’s engine"
+      description="Seeds, numbers of trials and ways of sampling stay those of each estimate."
+      actions={
+        <>
+          <Button onClick={onClose}>Cancel</Button>
+          <Button
+            kind="primary"
+            busy={start.isPending}
+            busyLabel="Starting…"
+            onClick={() => void handleStart()}
+          >
+            Start
+          </Button>
+        </>
+      }
+    >
+      <fieldset className="scope-choice">
+        <legend className="sr-only">What to recalculate</legend>
+        {runScopes.map((value) => (
+          <label key={value}>
+            <input
+              type="radio"
+              name="scope"
+              value={value}
+              checked={scope === value}
+              onChange={() => setScope(value)}
+            />
+            <span>
+              <b>{scopes[value].label}</b>
+              <small>{scopes[value].note}</small>
+            </span>
+          </label>
+        ))}
+      </fieldset>
+      {start.error && (
+        <div className="mt-3">
+          <Notice tone="error" title={errorWords(start.error)}>
+            Nothing was begun.
+          </Notice>
+        </div>
+      )}
+    </Dialog>
+  );
+}
