@@ -4,7 +4,7 @@ import { positionOn, scaleFor, ticksOf, type Scale } from "./scale";
 
 export interface BridgeStep {
   label: string;
-  /** change of the total; they add exactly because they are changes of the mean */
+  /** change of the total; all of them add up to the whole change, as changes of a mean or shared-out effects do */
   change: number;
 }
 
@@ -68,7 +68,7 @@ function bridgeScale(bars: readonly Bar[]): Scale {
   return { kind: "linear", domain: [ticks[0].value, high + spread * 0.12] };
 }
 
-/** What moved a total from one round to the next. A fall is a hollow bar and a minus sign, never red. */
+/** What moved a figure from one state to the next. A fall is a hollow bar and a minus sign, never red. */
 export function Bridge(props: BridgeProps) {
   const { quantity, height = 250 } = props;
   const bars = barsOf(props);

@@ -18,6 +18,10 @@ export interface DriverViewProps {
 
 const coefficientText = (value: number) => formatFigure(value, { decimals: 2 });
 
+/** " Net thickness is left out: …" */
+const leftOutWords = (inputs: Sensitivity["rankRegression"]["leftOut"]) =>
+  inputs.map(({ input, reason }) => ` ${inputLabel(input)} is left out: ${reason}`).join("");
+
 /** By how many standard deviations of rank the result moves with each input, the others held. */
 export function RegressionView({ sensitivity, name, tone, fileName }: DriverViewProps) {
   const { rankRegression, trials } = sensitivity;
@@ -26,7 +30,7 @@ export function RegressionView({ sensitivity, name, tone, fileName }: DriverView
     <ChartFrame
       level={3}
       title={regressionFinding(rankRegression)}
-      note={`${name}. Standard deviations of rank that the result moves when the input moves by one and the others stand, over ${trials.toLocaleString("en-US")} trials. ${rSquaredWords(rankRegression)}`}
+      note={`${name}. Standard deviations of rank that the result moves when the input moves by one and the others stand, over ${trials.toLocaleString("en-US")} trials. ${rSquaredWords(rankRegression)}${leftOutWords(rankRegression.leftOut)}`}
       fileName={`${fileName}-rank-regression`}
       data={{
         columns: [{ label: "Input" }, { label: "Coefficient" }],

@@ -12,17 +12,14 @@ import { driverCatalogue, inputOfPath } from "./input-catalogue";
 export function DifferenceTable({
   differences,
   warnings,
+  caption = "Inputs against the approved revision",
 }: {
   differences: readonly InputDifference[];
   warnings: readonly Warning[];
+  caption?: string;
 }) {
   return (
-    <LedgerTable
-      caption="Inputs against the approved revision"
-      density="change"
-      framed
-      className="stacked-rows"
-    >
+    <LedgerTable caption={caption} density="change" framed className="stacked-rows">
       <thead>
         <tr>
           <FolioCell heading />

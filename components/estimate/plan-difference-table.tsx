@@ -11,13 +11,14 @@ export function PlanDifferenceTable({
   before,
 }: {
   now: RecoveryPlan | null;
-  before: { plan: RecoveryPlan | null; revision: number } | null;
+  /** with what it is called: "r4" */
+  before: { plan: RecoveryPlan | null; label: string } | null;
 }) {
   const differences = before ? planDifferences(now, before.plan) : [];
   if (differences.length === 0 || before === null) {
     return now ? (
       <div className="mt-6 grid gap-1.5">
-        <h3>How recoveries come about{before ? ` is as in r${before.revision}` : ""}</h3>
+        <h3>How recoveries come about{before ? ` is as in ${before.label}` : ""}</h3>
         <p className="text-13 text-ink-soft">{planInWords(now)}.</p>
         {isUnmeasured(now.curve.route) && (
           <p>
@@ -30,11 +31,11 @@ export function PlanDifferenceTable({
   return (
     <div className="mt-6 grid gap-2">
       <h3>How recoveries come about has changed</h3>
-      <LedgerTable caption="The recovery plan against the approved revision">
+      <LedgerTable caption={`The recovery plan against ${before.label}`}>
         <thead>
           <tr>
             <th scope="col">Part</th>
-            <th scope="col">r{before.revision}</th>
+            <th scope="col">{before.label}</th>
             <th scope="col">Now</th>
           </tr>
         </thead>

@@ -6,7 +6,13 @@ import { Unit } from "@/components/ui/text";
 import type { ResultGroup } from "./result-rows";
 
 /** Results before over now; each row scales itself. */
-export function ResultChangeTable({ groups }: { groups: readonly ResultGroup[] }) {
+export function ResultChangeTable({
+  groups,
+  caption = "Results against the approved revision",
+}: {
+  groups: readonly ResultGroup[];
+  caption?: string;
+}) {
   const rows = groups.flatMap(({ title, unit, rows: results }) =>
     results.map((row) => ({
       ...row,
@@ -15,12 +21,7 @@ export function ResultChangeTable({ groups }: { groups: readonly ResultGroup[] }
     })),
   );
   return (
-    <LedgerTable
-      caption="Results against the approved revision"
-      density="change"
-      framed
-      className="stacked-rows"
-    >
+    <LedgerTable caption={caption} density="change" framed className="stacked-rows">
       <thead>
         <tr>
           <th scope="col">Quantity</th>

@@ -85,20 +85,44 @@ export function resultGroups(
   before: SimulationSummary | null,
   basis: ResultBasis,
 ): ResultGroup[] {
+  return groupsOfRanges(
+    summary.results,
+    before?.results ?? null,
+    basis,
+    routeMark(summary.recovery?.route),
+  );
+}
+
+/**
+ * As `resultGroups`, of any ranges; results that are not among them are left out.
+ *
+ * @param mark  what the recovered volumes rest on, where no measured depletion stands behind them
+ */
+export function groupsOfRanges(
+  now: Partial<Record<ResultName, Range>>,
+  before: Partial<Record<ResultName, Range>> | null,
+  basis: ResultBasis,
+  mark: string | null,
+): ResultGroup[] {
   const units = reportingUnits(basis.units, basis.base);
   return layout.map(({ title, kind, rows }) => {
     const factor = units[kind].factor * basis.factor;
     return {
       title,
       unit: units[kind].unit,
-      rows: rows.map(({ name, label, tone }) => ({
-        name,
-        label,
-        tone,
-        range: scaled(summary.results[name], factor),
-        before: before && scaled(before.results[name], factor),
-        mark: recovered.has(name) ? routeMark(summary.recovery?.route) : null,
-      })),
+      rows: rows.flatMap(({ name, label, tone }) => {
+        const range = now[name];
+        const old = before?.[name];
+        if (!range) return [];
+        return {
+          name,
+          label,
+          tone,
+          range: scaled(range, factor),
+          before: old ? scaled(old, factor) : null,
+          mark: recovered.has(name) ? mark : null,
+        };
+      }),
     };
   });
 }

@@ -1,5 +1,7 @@
 "use client";
 
+import Link from "next/link";
+import { comparisonHref } from "@/components/compare/sides";
 import { differenceFinding } from "@/components/estimate/findings";
 import {
   inputDifferences,
@@ -16,10 +18,11 @@ import { Columns, Section, Stack } from "@/components/ui/section";
 import { EmptyState, Skeleton } from "@/components/ui/status";
 import { useReservoir } from "../_editor/reservoir-context";
 import { DecisionPanel } from "./decision-panel";
+import { ExplainedChange } from "./explained-change";
 
 /** What a reviewer looks at: inputs and results against the approved revision, the checks, and the decision. */
 export function CompareTab() {
-  const { shown, before, draft, results, resultBasis, place, warnings } = useReservoir();
+  const { shown, before, draft, results, resultBasis, place, warnings, withBasis } = useReservoir();
   const inputs = draft?.reading.estimate ?? shown?.inputs ?? null;
   if (!inputs) {
     return (
@@ -59,7 +62,7 @@ export function CompareTab() {
           />
           <PlanDifferenceTable
             now={inputs.recoveryPlan}
-            before={before && { plan: before.inputs.recoveryPlan, revision: before.revision }}
+            before={before && { plan: before.inputs.recoveryPlan, label: `r${before.revision}` }}
           />
         </Section>
         {!results.summary && draft?.reading.estimate && (
@@ -75,6 +78,7 @@ export function CompareTab() {
             />
           </Section>
         )}
+        <ExplainedChange />
         {results.summary && (
           <ExceedanceSection
             summary={results.summary}
@@ -113,6 +117,20 @@ export function CompareTab() {
           </Section>
         )}
         <DecisionPanel />
+        {shown && (
+          <p className="text-13">
+            <Link
+              href={withBasis(
+                comparisonHref({
+                  left: before && { kind: "estimate", estimateId: before.id },
+                  right: { kind: "estimate", estimateId: shown.id },
+                }),
+              )}
+            >
+              Compare {label} with another revision, concept or field
+            </Link>
+          </p>
+        )}
       </aside>
     </Columns>
   );

@@ -1,0 +1,100 @@
+/** How much each difference between two estimates explains, in words. */
+import type {
+  Change,
+  ChangeExplanation,
+  SingleChange,
+} from "@/analytics/sensitivity/sensitivity-schema";
+import { listWords } from "@/components/portfolio/reporting";
+import { formatFigure, lowerFirst } from "@/components/ui/format";
+import { inputLabel } from "./driver-names";
+
+const singleLabel = (change: SingleChange): string => {
+  switch (change.kind) {
+    case "input":
+      return inputLabel(change.input);
+    case "correlations":
+      return "Rank correlations";
+    case "fluid":
+      return "Separator test";
+    case "recoveryPlan":
+      return "Recovery plan";
+    case "sampling":
+      return "Seed and trials";
+  }
+};
+
+/** "Net thickness", "Area and net thickness together" */
+export function changeLabel(change: Change): string {
+  if (change.kind !== "together") return singleLabel(change);
+  const [first, ...others] = change.changes.map(singleLabel);
+  return `${listWords([first, ...others.map(lowerFirst)])} together`;
+}
+
+export interface ExplainedStep {
+  label: string;
+  effect: number;
+  standardError: number | null;
+}
+
+/** Bars of a bridge beyond these are too narrow to read. */
+const MOST_STEPS = 7;
+
+/** Largest effect first; from the eighth on they are one step, which still adds up. */
+export function explainedSteps({ changes }: ChangeExplanation): ExplainedStep[] {
+  const steps = [...changes]
+    .sort((a, b) => Math.abs(b.effect) - Math.abs(a.effect))
+    .map(({ change, ...rest }) => ({ label: changeLabel(change), ...rest }));
+  if (steps.length <= MOST_STEPS) return steps;
+  const rest = steps.slice(MOST_STEPS - 1);
+  return [
+    ...steps.slice(0, MOST_STEPS - 1),
+    {
+      label: `${rest.length} others`,
+      effect: rest.reduce((sum, { effect }) => sum + effect, 0),
+      standardError: rest.some(({ standardError }) => standardError === null)
+        ? null
+        : Math.hypot(...rest.map(({ standardError }) => standardError ?? 0)),
+    },
+  ];
+}
+
+/** A move smaller than this share of where it began is no move. */
+const NO_MOVE = 0.002;
+
+/** "Net thickness explains 6.2 of the 7.1 MMSTB by which P50 rises" */
+export function changeExplained(
+  explanation: ChangeExplanation,
+  factor: number,
+  unit: string,
+): string {
+  const [first, ...others] = explainedSteps(explanation);
+  const move = explanation.to - explanation.from;
+  const figure = (value: number) => formatFigure(Math.abs(value) * factor);
+  if (!first) return "Nothing differs, so P50 stands";
+  if (Math.abs(move) < NO_MOVE * Math.abs(explanation.from)) {
+    return Math.abs(first.effect) < NO_MOVE * Math.abs(explanation.from)
+      ? `P50 stands: no difference moves it`
+      : `P50 stands: ${lowerFirst(first.label)} moves it by ${figure(first.effect)} ${unit}, and the rest takes it back`;
+  }
+  const verb = move > 0 ? "rises" : "falls";
+  const sameWay = first.effect * move > 0;
+  if (others.length === 0) {
+    return `${first.label} explains all of the ${figure(move)} ${unit} by which P50 ${verb}`;
+  }
+  if (sameWay && Math.abs(first.effect) <= Math.abs(move)) {
+    return `${first.label} explains ${figure(first.effect)} of the ${figure(move)} ${unit} by which P50 ${verb}`;
+  }
+  const way = first.effect > 0 ? "raises" : "lowers";
+  return sameWay
+    ? `${first.label} ${way} P50 by ${figure(first.effect)} ${unit}; the other differences take back ${figure(first.effect - move)}`
+    : `${first.label} ${way} P50 by ${figure(first.effect)} ${unit}, and yet it ${verb} by ${figure(move)}`;
+}
+
+/** How effects were told apart when differences act through each other. */
+export function methodWords({ orders, trials }: ChangeExplanation): string {
+  const how =
+    orders === "all"
+      ? "Each effect is averaged over all orders in which the differences could be made"
+      : `Each effect is averaged over ${orders} orders of making the differences, drawn at random; its standard error is in the table`;
+  return `${how}, on the same ${trials.toLocaleString("en-US")} draws, so they add up to the whole move.`;
+}
