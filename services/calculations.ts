@@ -8,7 +8,12 @@ import { recombine, wellstreamGravityAtYield, yieldConstants } from "@/analytics
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import { gasProperties, type GasProperties } from "@/analytics/gas/gas-properties";
 import { pseudocritical } from "@/analytics/gas/pseudocritical";
-import { compileDistribution, densityCurve } from "@/analytics/uncertainty/distribution";
+import { describeFit } from "@/analytics/uncertainty/describe-fit";
+import {
+  compileDistribution,
+  densityCurve,
+  type CompiledDistribution as Compiled,
+} from "@/analytics/uncertainty/distribution";
 import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
 import {
   AIR_MOLECULAR_WEIGHT,
@@ -167,21 +172,34 @@ export function calculateInPlace(question: {
   };
 }
 
-/** Percentiles, moments and a drawable density of a distribution. */
+/** Percentiles, moments, a drawable density, and how well what was given fits. */
 export function calculateDistribution(question: { distribution: Distribution; points: number }) {
   const { distribution, points } = question;
   return refuseImpossible("distribution", () => {
     const compiled = compileDistribution(distribution);
-    const { minimum, maximum } = compiled.support;
     const curve = densityCurve(distribution, points);
     return {
-      range: { ...compiled.range, mean: compiled.mean },
-      standardDeviation: compiled.standardDeviation,
-      support: { low: finiteOrNull(minimum), high: finiteOrNull(maximum) },
-      lostMass: compiled.lostMass,
+      ...figuresOf(compiled),
       curve: { values: curve.x, densities: curve.density },
+      atoms: compiled.atoms.map((atom) => ({ ...atom })),
+      cases:
+        compiled.cases?.map(({ name, weight, compiled: one }) => ({
+          name,
+          weight,
+          ...figuresOf(one),
+        })) ?? null,
     };
   });
+}
+
+function figuresOf({ definition, range, mean, standardDeviation, support, lostMass }: Compiled) {
+  return {
+    range: { ...range, mean },
+    standardDeviation,
+    support: { low: finiteOrNull(support.minimum), high: finiteOrNull(support.maximum) },
+    lostMass,
+    fit: describeFit(definition),
+  };
 }
 
 const finiteOrNull = (value: number) => (Number.isFinite(value) ? value : null);

@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import type { Problem } from "@/app/_server/problem";
+import { distributionResponseSchema } from "@/app/api/v1/calculations/distribution/schema";
 import {
-  distributionResponseSchema,
   inPlaceResponseSchema,
   simulationResponseSchema,
   wellstreamResponseSchema,

@@ -2,6 +2,8 @@ import type { z } from "zod";
 import {
   distributionRequestSchema,
   distributionResponseSchema,
+} from "@/app/api/v1/calculations/distribution/schema";
+import {
   inPlaceRequestSchema,
   inPlaceResponseSchema,
   simulationRequestSchema,

@@ -11,8 +11,8 @@ import {
   recoveryRequestSchema,
 } from "@/app/api/v1/calculations/recovery-schema";
 import { materialBalanceRequestSchema } from "@/app/api/v1/calculations/material-balance-schema";
+import { distributionRequestSchema } from "@/app/api/v1/calculations/distribution/schema";
 import {
-  distributionRequestSchema,
   inPlaceRequestSchema,
   simulationRequestSchema,
   wellstreamRequestSchema,

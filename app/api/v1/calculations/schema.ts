@@ -1,9 +1,8 @@
 import { z } from "zod";
 import { fluidTypes } from "@/analytics/fluid/fluid-type";
 import { separatorTestSchema } from "@/analytics/fluid/separator-test-schema";
-import { distributionSchema } from "@/analytics/uncertainty/distribution-schema";
 import { estimateInputsSchema } from "@/analytics/volumetrics/inputs-schema";
-import { rangeSchema, simulationSummarySchema } from "@/analytics/volumetrics/results-schema";
+import { simulationSummarySchema } from "@/analytics/volumetrics/results-schema";
 import { meteredRateSchema } from "@/analytics/volumetrics/rates";
 import { warningSchema } from "@/analytics/warnings";
 
@@ -173,27 +172,6 @@ export const inPlaceResponseSchema = z.object({
   warnings: z.array(warningSchema),
 });
 export type InPlaceResponse = z.infer<typeof inPlaceResponseSchema>;
-
-// distribution
-
-export const distributionRequestSchema = z
-  .object({
-    distribution: distributionSchema,
-    points: z.number().int().min(2).max(400).default(80).describe("points of the density curve"),
-  })
-  .strict();
-export type DistributionRequest = z.infer<typeof distributionRequestSchema>;
-
-export const distributionResponseSchema = z.object({
-  range: rangeSchema,
-  standardDeviation: z.number(),
-  support: z.object({ low: z.number().nullable(), high: z.number().nullable() }),
-  /** probability that the truncation cut away */
-  lostMass: z.number(),
-  /** from the 0.1 % to the 99.9 % quantile; empty for a constant, which has no density */
-  curve: z.object({ values: z.array(z.number()), densities: z.array(z.number()) }),
-});
-export type DistributionResponse = z.infer<typeof distributionResponseSchema>;
 
 // simulation
 

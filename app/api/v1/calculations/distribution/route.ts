@@ -1,6 +1,6 @@
 import { withRoute } from "@/app/_server/with-route";
 import { calculateDistribution } from "@/services/calculations";
-import { distributionRequestSchema } from "../schema";
+import { distributionRequestSchema } from "./schema";
 
 /**
  * POST /api/v1/calculations/distribution: percentiles, moments and a drawable density. P90 is the low case.
