@@ -1,10 +1,12 @@
 import { underPath } from "../errors";
 import { recombine, type Wellstream } from "../fluid/wellstream";
 import { compileDistribution, type CompiledDistribution } from "../uncertainty/distribution";
-import { compilePlan, type CompiledPlan } from "../recovery/compile-plan";
+import { compilePlan, planPaths, type CompiledPlan } from "../recovery/compile-plan";
+import { planRanges } from "../recovery/plan-ranges";
 import type { Distribution } from "../uncertainty/distribution-schema";
 import { compilePossible } from "../uncertainty/possible-range";
 import { correlationBlocks, type CorrelationBlock } from "../uncertainty/rank-correlation";
+import { caseSetsOf, refuseCorrelatedCases, type CaseSet, type CaseSetMember } from "./case-sets";
 import { inputNames, type EstimateInputs, type InputName } from "./inputs-schema";
 import { recoveryNames, type RecoveryName } from "./results-schema";
 import { usualRanges } from "./usual-ranges";
@@ -16,7 +18,9 @@ export interface PreparedInputs {
   readonly distributions: Readonly<Record<InputName, CompiledDistribution>>;
   /** the inputs that count, in their order */
   readonly inputNames: readonly InputName[];
+  /** of inputs that are in no case set */
   readonly blocks: readonly CorrelationBlock<InputName>[];
+  readonly caseSets: readonly CaseSet[];
   readonly wellstream: Wellstream;
   readonly plan: CompiledPlan | null;
 }
@@ -33,23 +37,48 @@ export function prepareInputs(inputs: EstimateInputs): PreparedInputs {
   const plan = recoveryPlan ? underPath("recoveryPlan", () => compilePlan(recoveryPlan)) : null;
   const isUsed = (name: InputName) => !plan || !isRecovery(name);
   const names = inputNames.filter(isUsed);
+  const distributions = columns(inputNames, (name) =>
+    isUsed(name)
+      ? underPath(`uncertain.${name}`, () =>
+          compileInput(name, inputs.uncertain[name].distribution),
+        )
+      : PLACEHOLDER,
+  );
+  const pairs = inputs.correlations.filter(({ a, b }) => isUsed(a) && isUsed(b));
+  const labelOf = (name: InputName) => usualRanges[name].label;
+  refuseCorrelatedCases(pairs, distributions, labelOf);
   return {
-    distributions: columns(inputNames, (name) =>
-      isUsed(name)
-        ? underPath(`uncertain.${name}`, () =>
-            compileInput(name, inputs.uncertain[name].distribution),
-          )
-        : PLACEHOLDER,
-    ),
+    distributions,
     inputNames: names,
     blocks: correlationBlocks(
       names,
-      inputs.correlations.filter(({ a, b }) => isUsed(a) && isUsed(b)),
-      (name) => usualRanges[name].label,
+      // A correlation of 0 with an input of a case set says nothing.
+      pairs.filter(({ a, b }) => !distributions[a].caseSet && !distributions[b].caseSet),
+      labelOf,
     ),
+    caseSets: caseSetsOf([
+      ...names.map((name) => ({
+        input: name,
+        planInput: null,
+        path: `uncertain.${name}`,
+        label: labelOf(name),
+        compiled: distributions[name],
+      })),
+      ...(plan ? planMembers(plan) : []),
+    ]),
     wellstream: underPath("fluid", () => recombine(inputs.fluid)),
     plan,
   };
+}
+
+function planMembers({ plan, inputNames: names, distributions }: CompiledPlan): CaseSetMember[] {
+  const ranges = planRanges(plan);
+  return names.flatMap((name) => {
+    const compiled = distributions[name];
+    if (!compiled) return [];
+    const path = `recoveryPlan.${planPaths[name]}`;
+    return { input: null, planInput: name, path, label: ranges[name].label, compiled };
+  });
 }
 
 /** In the place of an input that a recovery plan replaces. */
