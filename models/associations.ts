@@ -1,6 +1,7 @@
 import { ApiToken } from "./api-token";
 import { AuditEvent } from "./audit-event";
 import { Basin } from "./basin";
+import { DependenceSet } from "./dependence-set";
 import { Estimate } from "./estimate";
 import { EstimateTrials } from "./estimate-trials";
 import { Field } from "./field";
@@ -9,12 +10,24 @@ import { Import } from "./import";
 import { PriceDeck } from "./price-deck";
 import { PriceDeckPrice } from "./price-deck-price";
 import { Reservoir } from "./reservoir";
+import { Run } from "./run";
+import { RunItem } from "./run-item";
 import { Settings } from "./settings";
 import { User } from "./user";
 
 const models = [
-  ...[ApiToken, AuditEvent, Basin, Estimate, EstimateTrials, Field, FluidSample, Import],
-  ...[PriceDeck, PriceDeckPrice, Reservoir, Settings, User],
+  ...[
+    ApiToken,
+    AuditEvent,
+    Basin,
+    DependenceSet,
+    Estimate,
+    EstimateTrials,
+    Field,
+    FluidSample,
+    Import,
+  ],
+  ...[PriceDeck, PriceDeckPrice, Reservoir, Run, RunItem, Settings, User],
 ];
 // Hot reload runs this file again on models that it did not load again: they begin without associations each time.
 for (const { associations } of models) {
@@ -42,6 +55,8 @@ Estimate.belongsTo(User, { as: "decider", foreignKey: "decidedBy" });
 Estimate.hasOne(EstimateTrials, { as: "vectors", foreignKey: "estimateId" });
 EstimateTrials.belongsTo(Estimate, { as: "estimate", foreignKey: "estimateId" });
 
+DependenceSet.belongsTo(User, { as: "updater", foreignKey: "updatedBy" });
+
 PriceDeck.hasMany(PriceDeckPrice, { as: "prices", foreignKey: "priceDeckId" });
 PriceDeckPrice.belongsTo(PriceDeck, { as: "deck", foreignKey: "priceDeckId" });
 PriceDeck.belongsTo(User, { as: "creator", foreignKey: "createdBy" });
@@ -49,11 +64,17 @@ PriceDeck.belongsTo(User, { as: "publisher", foreignKey: "publishedBy" });
 
 Import.belongsTo(User, { as: "creator", foreignKey: "createdBy" });
 
+Run.belongsTo(User, { as: "creator", foreignKey: "createdBy" });
+Run.hasMany(RunItem, { as: "items", foreignKey: "runId" });
+RunItem.belongsTo(Run, { as: "run", foreignKey: "runId" });
+RunItem.belongsTo(Reservoir, { as: "reservoir", foreignKey: "reservoirId" });
+
 /** Every query goes through here, so that no model is ever used before its associations exist. */
 export {
   ApiToken,
   AuditEvent,
   Basin,
+  DependenceSet,
   Estimate,
   EstimateTrials,
   Field,
@@ -62,6 +83,8 @@ export {
   PriceDeck,
   PriceDeckPrice,
   Reservoir,
+  Run,
+  RunItem,
   Settings,
   User,
 };

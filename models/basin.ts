@@ -11,7 +11,6 @@ export class Basin extends Model<InferAttributes<Basin>, InferCreationAttributes
   declare id: CreationOptional<string>;
   declare slug: string;
   declare name: string;
-  declare rankCorrelation: CreationOptional<number>;
   declare version: CreationOptional<number>;
   declare createdAt: CreationOptional<Date>;
   declare updatedAt: CreationOptional<Date>;
@@ -22,7 +21,6 @@ Basin.init(
     id: { type: DataTypes.UUID, primaryKey: true, defaultValue: DataTypes.UUIDV4 },
     slug: { type: DataTypes.TEXT, allowNull: false },
     name: { type: DataTypes.TEXT, allowNull: false },
-    rankCorrelation: { type: DataTypes.DOUBLE, allowNull: false, defaultValue: 0 },
     version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 1 },
     createdAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },
     updatedAt: { type: DataTypes.DATE, allowNull: false, defaultValue: DataTypes.NOW },

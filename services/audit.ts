@@ -21,7 +21,9 @@ export type AuditedEntity =
   | "fluidSample"
   | "estimate"
   | "priceDeck"
+  | "dependenceSet"
   | "import"
+  | "run"
   | "export";
 
 export interface AuditEntry {

@@ -10,8 +10,6 @@ import { assertVersion, saveVersioned } from "./versions";
 
 export interface NewBasin {
   name: string;
-  /** rank correlation that the basin's reservoirs share, 0 to 1; 0 when not given */
-  rankCorrelation?: number;
 }
 
 export async function listBasins(actor: Actor): Promise<Basin[]> {
@@ -21,11 +19,7 @@ export async function listBasins(actor: Actor): Promise<Basin[]> {
 
 export async function createBasin(actor: Actor, input: NewBasin): Promise<Basin> {
   authorise(actor, "basin.create");
-  const values = {
-    name: input.name.trim(),
-    slug: slugOf(input.name),
-    rankCorrelation: input.rankCorrelation ?? 0,
-  };
+  const values = { name: input.name.trim(), slug: slugOf(input.name) };
   return inTransaction(async (transaction) => {
     const at = now();
     const basin = await createBasinRow(
@@ -40,7 +34,7 @@ export async function createBasin(actor: Actor, input: NewBasin): Promise<Basin>
   });
 }
 
-/** Change name or dependence. The address (slug) stays, so that links keep working. */
+/** Change the name. The address (slug) stays, so that links keep working. */
 export async function updateBasin(
   actor: Actor,
   id: string,
@@ -52,10 +46,7 @@ export async function updateBasin(
     const basin = await findBasin(id, { transaction, lock: true });
     if (!basin) throw new NotFoundError("basin");
     assertVersion(basin, expectedVersion);
-    const changes = changesBetween(
-      { name: basin.name, rankCorrelation: basin.rankCorrelation },
-      { ...patch, name: patch.name?.trim() },
-    );
+    const changes = changesBetween({ name: basin.name }, { name: patch.name?.trim() });
     basin.set(changes.after);
     await saveVersioned(basin, transaction);
     await recordAudit(

@@ -7,6 +7,7 @@ import { listRevisionRanges, type RevisionRangeRow } from "@/models/queries/revi
 import { NotFoundError } from "./errors";
 import { authorise, type Actor } from "./policy";
 import type { ChosenPrices, PortfolioBasis } from "./portfolio/basis";
+import { describeDependence } from "./portfolio/dependence";
 import { loadRanking } from "./portfolio/ranking";
 import { getReservoirFileBySlugs, type ReservoirFile } from "./reservoirs";
 
@@ -18,6 +19,7 @@ export interface FieldFile {
   ranked: RankedField;
   fieldsInAll: number;
   prices: ChosenPrices | null;
+  dependence: { id: string; name: string; isDefault: boolean };
 }
 
 /**
@@ -46,6 +48,7 @@ export async function getFieldFile(
     ranked,
     fieldsInAll: book.fields.length,
     prices: book.prices,
+    dependence: describeDependence(book.book.dependence),
     reservoirs: reservoirs.map((reservoir) => ({
       reservoir,
       revisions: revisions.filter((row) => row.reservoirId === reservoir.id),

@@ -5,6 +5,7 @@ import { findUser } from "@/models/queries/users";
 import { prmsSubClasses, type PrmsClass, type PrmsSubClass } from "@/models/vocabulary";
 import { changesBetween, recordAudit } from "./audit";
 import { now } from "./clock";
+import { assertFieldFitsSets } from "./dependence-sets";
 import { InvalidInputError, NotFoundError } from "./errors";
 import { authorise, type Actor } from "./policy";
 import { slugOf } from "./slugs";
@@ -82,6 +83,9 @@ export async function updateField(
     if (commercial.some((name) => name in changes.after))
       authorise(actor, "field.updateCommercial");
     await assertCoherent({ ...before, ...changes.after }, transaction, changes.after);
+    if (changes.after.basinId !== undefined) {
+      await assertFieldFitsSets({ id, basinId: changes.after.basinId }, transaction);
+    }
     field.set(changes.after);
     await saveVersioned(field, transaction);
     await recordAudit(

@@ -22,6 +22,7 @@ const uniqueMessages: Record<string, string> = {
   estimates_one_open: "This reservoir has an open estimate already.",
   estimates_one_approved: "Another estimate of this reservoir was approved meanwhile.",
   estimates_revision_unique: "Another estimate of this reservoir was begun meanwhile.",
+  dependence_sets_name_unique: "There is a dependence set of this name already.",
   price_decks_name_unique: "There is a price deck of this name and version already.",
 };
 

@@ -39,7 +39,7 @@ export function made<Body>(answer: ApiAnswer<Body>): Body {
 
 export async function buildBasin(): Promise<BasinView> {
   const planner = await as("planner");
-  const body = { name: uniqueName("Basin"), rankCorrelation: 0.2 };
+  const body = { name: uniqueName("Basin") };
   return made(await planner.post<BasinView>("/api/v1/basins", body));
 }
 

@@ -1,182 +1,228 @@
 import { DomainError } from "../errors";
-import { createOrderWorkspace, type OrderWorkspace } from "../numerics/order-statistics";
-import { normalScoreCorrelation } from "../uncertainty/rank-correlation";
+import {
+  createOrderWorkspace,
+  rankByCounting,
+  type OrderWorkspace,
+} from "../numerics/order-statistics";
 import { rangeOfSample, summariseSample, type SampleSummary } from "../uncertainty/summary";
 import { vectorNames, type Range, type VectorName } from "../volumetrics/results-schema";
+import { createContributions, type Contribution } from "./contributions";
+import type { FieldTrials, TrialVector } from "./field-trials";
 import { rankTrials, type RankSpread } from "./rank-trials";
-import { rollUp, type RollUpMember, type Totals, type TrialVector } from "./roll-up";
-
-/** One reservoir with the stored trials of the revision that stands for it. */
-export interface LedgerMember {
-  /**
-   * The reservoir's address rather than a random id: it picks the draws, which then stay the same when a revision or a
-   * neighbour changes, and on every installation that holds the same book.
-   */
-  id: string;
-  fieldId: string;
-  basinId: string;
-  /** the basin's address, for its draws */
-  basinSlug: string;
-  /** PRMS class, or whatever else totals are wanted by */
-  classId: string;
-  vectors: Readonly<Record<VectorName, TrialVector>>;
-  /** what the company has of it: 1 for gross, the net revenue interest for net */
-  interest: number;
-  /** chance of commerciality; 1 for unrisked */
-  chance: number;
-}
-
-export interface LedgerOptions {
-  /** rank correlation between two members of a basin, 0 to 1, by basin */
-  basinRankCorrelations: Readonly<Record<string, number>>;
-  /** a safe integer, 0 or more */
-  seed: number;
-}
+import { scaleRange } from "./ranking";
 
 export type VolumeRanges = Record<VectorName, Range>;
+
+/** A field's own ranges, gross: should it come for certain, and as it comes or not. */
+export interface FieldFigures {
+  certain: VolumeRanges;
+  yesNo: VolumeRanges;
+}
+
+/** One field with its trials in the order of the portfolio. */
+export interface LedgerField {
+  id: string;
+  /** the field's address: sums are added in its order, so that they are the same in any */
+  slug: string;
+  basinId: string;
+  /** PRMS class, or whatever else totals are wanted by */
+  classId: string;
+  trials: FieldTrials;
+  figures: FieldFigures;
+  /** what the company has of it: 1 for gross, the net revenue interest for net */
+  interest: number;
+  /** chance of commerciality */
+  chance: number;
+  /** fewest trials among its reservoirs' estimates: how much there is behind its percentiles */
+  sourceTrials: number;
+}
+
+/**
+ * How the chance of commerciality counts. `unrisked`: every field comes. `risked`: every trial of a field is
+ * multiplied by its chance, which gives the mean exactly but not the spread of success and failure. `yesNo`: a field is
+ * there or not, drawn trial by trial, independently of other fields and of its volumes.
+ */
+export type Risking = "unrisked" | "risked" | "yesNo";
+
+export interface LedgerOptions {
+  risk: Risking;
+  /** place every field among the others, trial by trial */
+  withRanks: boolean;
+}
 
 export interface LedgerGroup {
   /** trial by trial */
   ranges: VolumeRanges;
-  /** of the recoverable condensate [STB2]; basins are independent, so theirs add up to the portfolio's */
-  condensateVariance: number;
+  /** of the variance of the total's recoverable condensate, by covariance; the shares of all groups add up to 1 */
+  shareOfVariance: number;
+}
+
+export interface LedgerEntry {
+  ranges: VolumeRanges;
+  /** to the total's recoverable condensate [STB] */
+  contribution: Contribution;
 }
 
 export interface Ledger {
   trials: number;
-  fields: Record<string, { ranges: VolumeRanges; ranks: RankSpread }>;
+  fields: Record<string, LedgerEntry>;
   basins: Record<string, LedgerGroup>;
   classes: Record<string, LedgerGroup>;
-  total: LedgerGroup;
-  /** of the total's recoverable condensate */
-  condensate: Pick<SampleSummary, "exceedance" | "standardErrors" | "minimum" | "maximum">;
+  total: VolumeRanges;
+  /** of the total's recoverable condensate; standard errors as `computeLedger` says */
+  condensate: Pick<
+    SampleSummary,
+    "exceedance" | "standardErrors" | "minimum" | "maximum" | "standardDeviation"
+  >;
   /** chance that the total's recoverable condensate reaches the sum of the fields' P90s, 0 to 1 */
   chanceOfSummedP90: number;
+  /** chance that no field comes at all, 0 to 1: the product of their chances of not coming; null unless `yesNo` */
+  chanceOfNothing: number | null;
+  /** where each field stands among the others; null unless asked for */
+  ranks: Record<string, RankSpread> | null;
 }
 
 /**
- * The correlation of normal scores under which two normal-copula variables have a wanted rank correlation:
- * rho = 2 sin(pi r / 6), 0 to 1.
+ * Fields, basins, classes and the total of some fields, added up trial by trial from trials in the portfolio's order.
+ * Percentiles of a total describe the portfolio; they are not reserves of any category.
  *
- * @param rankCorrelation  Spearman's, 0 to 1
- * @throws {DomainError} outside that range
- * @see K. Pearson, On further methods of determining correlation, Drapers' Company Research Memoirs, Biometric Series
- *      IV (1907)
- * @example scoreCorrelation(0.5) // => 0.517638
+ * Standard errors of the total are those of independent trials, with an effective number of them: each field counts by
+ * its share of the variance, with the trials of the total or of its own estimates, whichever are fewer, because
+ * repeated rows say nothing new. Estimates drawn as Latin hypercubes or Sobol' points vary less than independent
+ * trials, so the errors are on the safe side, of the mean above all; they hold what sampling leaves open, not whether
+ * the inputs are right.
+ *
+ * @param fields  at least one; all with the same number of trials
+ * @returns       volumes in the units of the vectors, times interest and, as `risk` says, chance
+ * @throws {DomainError} when there are no fields, one occurs twice, or an interest is negative
  */
-export function scoreCorrelation(rankCorrelation: number): number {
-  if (!(rankCorrelation >= 0 && rankCorrelation <= 1)) {
-    throw new DomainError(
-      `A rank correlation within a basin lies between 0 and 1; ${rankCorrelation} does not.`,
-      { input: "rankCorrelation", value: rankCorrelation },
-    );
-  }
-  return normalScoreCorrelation(rankCorrelation);
-}
-
-/**
- * Fields, basins, classes and the whole portfolio from the stored trials of their reservoirs, added up trial by trial
- * with each basin's own dependence. Basins are independent of each other.
- *
- * Chance multiplies every trial of a member: risked means are exact, and the spike at zero of a field that does not
- * come is not in the ranges.
- *
- * @param members  at least one; all with the same number of trials
- * @returns        volumes in the units of the vectors, times interest and chance
- * @throws {DomainError} as `rollUp`
- */
-export function computeLedger(members: readonly LedgerMember[], options: LedgerOptions): Ledger {
-  if (members.length === 0) throw new DomainError("There is nothing to add up.");
-  const trials = members[0].vectors.condensateRecoverableStb.length;
+export function computeLedger(fields: readonly LedgerField[], options: LedgerOptions): Ledger {
+  const sorted = inOrder(fields);
+  const trials = sorted[0].trials.comes.length;
   const counting = createOrderWorkspace(trials);
   const total = emptyVectors(trials);
-  const classVectors: Record<string, Vectors> = {};
-  const fields: Ledger["fields"] = {};
-  const basins: Ledger["basins"] = {};
-  const condensateByField: Record<string, Float64Array> = {};
+  const classes = new Map<string, Vectors>();
+  const basinRanges: [string, VolumeRanges][] = [];
 
-  for (const [basinId, inBasin] of byBasin(members)) {
-    const basin = rollUp(inBasin.map(toRollUpMember), {
-      quantities: Object.fromEntries(vectorNames.map((name) => [name, name])),
-      seed: options.seed,
-      dependence: scoreCorrelation(options.basinRankCorrelations[basinId] ?? 0),
-      risking: "expectation",
-      groupBy: ["field", "class"],
-    });
-    basins[basinId] = groupOf(basin.total.vectors as Vectors, counting);
-    addVectors(total, basin.total);
-    for (const [classId, totals] of Object.entries(basin.groups.class)) {
-      addVectors((classVectors[classId] ??= emptyVectors(trials)), totals);
+  const basin = emptyVectors(trials);
+  for (const [basinId, inBasin] of groupBy(sorted, ({ basinId: id }) => id)) {
+    for (const name of vectorNames) basin[name].fill(0);
+    for (const [classId, inClass] of groupBy(inBasin, ({ classId: id }) => id)) {
+      // One pass over the fields feeds basin, class and total: the sums of a class within a basin are added to all.
+      const sums = emptyVectors(trials);
+      for (const field of inClass) addField(sums, field, options.risk);
+      addVectors(basin, sums);
+      const known = classes.get(classId);
+      if (known) addVectors(known, sums);
+      else classes.set(classId, sums);
     }
-    for (const [fieldId, { vectors }] of Object.entries(basin.groups.field)) {
-      condensateByField[fieldId] = vectors.condensateRecoverableStb;
-      fields[fieldId] = {
-        ranges: rangesOf(vectors as Vectors, counting),
-        ranks: { low: 0, high: 0, chanceFirst: 0 },
-      };
-    }
+    addVectors(total, basin);
+    basinRanges.push([basinId, rangesOf(basin, counting)]);
   }
-  for (const [fieldId, ranks] of Object.entries(rankTrials(condensateByField))) {
-    fields[fieldId].ranks = ranks;
-  }
+
+  const condensate = total.condensateRecoverableStb;
+  const summary = summariseSample(condensate, trials, counting);
+  const entries = entriesOf(sorted, condensate, summary, counting, options.risk);
+  const shareOf = (belongs: (field: LedgerField) => boolean) =>
+    sorted
+      .filter(belongs)
+      .reduce((sum, { id }) => sum + entries[id].contribution.shareOfVariance, 0);
+  const summedP90 = sorted.reduce(
+    (sum, { id }) => sum + entries[id].ranges.condensateRecoverableStb.p90,
+    0,
+  );
+  const { exceedance, minimum, maximum, standardDeviation } = summary;
   return {
     trials,
-    fields,
-    basins,
-    classes: Object.fromEntries(
-      Object.entries(classVectors).map(([id, vectors]) => [id, groupOf(vectors, counting)]),
+    fields: entries,
+    basins: Object.fromEntries(
+      basinRanges.map(([id, ranges]) => [
+        id,
+        { ranges, shareOfVariance: shareOf(({ basinId }) => basinId === id) },
+      ]),
     ),
-    ...wholeOf(total, fields, counting),
+    classes: Object.fromEntries(
+      [...classes].map(([id, vectors]) => [
+        id,
+        {
+          ranges: rangesOf(vectors, counting),
+          shareOfVariance: shareOf(({ classId }) => classId === id),
+        },
+      ]),
+    ),
+    total: rangesOf(total, counting),
+    condensate: {
+      exceedance,
+      minimum,
+      maximum,
+      standardDeviation,
+      standardErrors: scaleErrors(summary.standardErrors, sorted, entries, trials),
+    },
+    chanceOfSummedP90: shareAtLeast(condensate, summedP90),
+    chanceOfNothing:
+      options.risk === "yesNo"
+        ? sorted.reduce((product, { chance }) => product * (1 - chance), 1)
+        : null,
+    ranks: options.withRanks ? ranksOf(sorted, options.risk) : null,
   };
 }
 
-function wholeOf(
-  total: Vectors,
-  fields: Ledger["fields"],
-  counting: OrderWorkspace,
-): Pick<Ledger, "total" | "condensate" | "chanceOfSummedP90"> {
-  const condensate = total.condensateRecoverableStb;
-  const summary = summariseSample(condensate, condensate.length, counting);
-  const summedP90 = Object.values(fields).reduce(
-    (sum, { ranges }) => sum + ranges.condensateRecoverableStb.p90,
-    0,
-  );
-  const { exceedance, standardErrors, minimum, maximum } = summary;
-  return {
-    total: {
-      ranges: rangesOf(total, counting),
-      condensateVariance: summary.standardDeviation ** 2,
-    },
-    condensate: { exceedance, standardErrors, minimum, maximum },
-    chanceOfSummedP90:
-      condensate.reduce((count, value) => count + Number(value >= summedP90), 0) /
-      condensate.length,
-  };
+/**
+ * A field's own ranges, from its trials.
+ *
+ * @param workspace  for at least as many values as there are trials
+ */
+export function figuresOf(
+  { volumes, comes }: FieldTrials,
+  workspace: OrderWorkspace,
+): FieldFigures {
+  const certain = rangesOf(volumes, workspace);
+  if (comes.every((one) => one === 1)) return { certain, yesNo: certain };
+  const drawn = emptyVectors(comes.length);
+  for (const name of vectorNames) {
+    for (let t = 0; t < comes.length; t += 1) drawn[name][t] = comes[t] * volumes[name][t];
+  }
+  return { certain, yesNo: rangesOf(drawn, workspace) };
 }
 
 type Vectors = Record<VectorName, Float64Array>;
 
-function toRollUpMember(member: LedgerMember): RollUpMember {
-  const { id, basinSlug, fieldId, classId, vectors, interest, chance } = member;
-  return {
-    id,
-    group: basinSlug,
-    vectors,
-    factors: Object.fromEntries(vectorNames.map((name) => [name, interest])),
-    chance,
-    tags: { field: fieldId, class: classId },
-  };
+function inOrder(fields: readonly LedgerField[]): LedgerField[] {
+  if (fields.length === 0) throw new DomainError("There is nothing to add up.");
+  const sorted = [...fields].sort((a, b) => (a.slug < b.slug ? -1 : 1));
+  const trials = sorted[0].trials.comes.length;
+  sorted.forEach(({ slug, interest, trials: { comes } }, index) => {
+    if (slug === sorted[index + 1]?.slug) {
+      throw new DomainError(`${slug} is in the sum twice.`, { input: "fields", field: slug });
+    }
+    if (comes.length !== trials) {
+      throw new DomainError(`${slug} has ${comes.length} trials in a total of ${trials}.`, {
+        input: "trials",
+        field: slug,
+      });
+    }
+    if (!(interest >= 0 && interest < Infinity)) {
+      throw new DomainError(`The interest in ${slug} is 0 or more; ${interest} is not.`, {
+        input: "interest",
+        field: slug,
+      });
+    }
+  });
+  return sorted;
 }
 
-/** Members by basin, basins in the order of their addresses, so that sums are added in one order. */
-function byBasin(members: readonly LedgerMember[]): [string, LedgerMember[]][] {
-  const basins = new Map<string, LedgerMember[]>();
-  for (const member of members) {
-    const known = basins.get(member.basinId);
-    if (known) known.push(member);
-    else basins.set(member.basinId, [member]);
+/** Groups in the order in which their first members stand, which is that of the fields' addresses. */
+function groupBy(
+  fields: readonly LedgerField[],
+  keyOf: (field: LedgerField) => string,
+): [string, LedgerField[]][] {
+  const groups = new Map<string, LedgerField[]>();
+  for (const field of fields) {
+    const known = groups.get(keyOf(field));
+    if (known) known.push(field);
+    else groups.set(keyOf(field), [field]);
   }
-  return [...basins].sort(([, [a]], [, [b]]) => (a.basinSlug < b.basinSlug ? -1 : 1));
+  return [...groups];
 }
 
 function emptyVectors(trials: number): Vectors {
@@ -189,16 +235,36 @@ function emptyVectors(trials: number): Vectors {
   };
 }
 
-function addVectors(sum: Vectors, { vectors }: Totals): void {
+/** What every trial of a field is multiplied by. */
+const factorOf = ({ interest, chance }: LedgerField, risk: Risking) =>
+  risk === "risked" ? interest * chance : interest;
+
+function addField(sums: Vectors, field: LedgerField, risk: Risking): void {
+  const factor = factorOf(field, risk);
+  const { volumes, comes } = field.trials;
   for (const name of vectorNames) {
-    const target = sum[name];
-    const values = vectors[name];
-    for (let trial = 0; trial < target.length; trial += 1) target[trial] += values[trial];
+    if (risk === "yesNo") addDrawn(sums[name], volumes[name], comes, factor);
+    else addScaled(sums[name], volumes[name], factor);
   }
 }
 
-function rangesOf(vectors: Vectors, counting: OrderWorkspace): VolumeRanges {
-  const range = (name: VectorName) => rangeOfSample(vectors[name], vectors[name].length, counting);
+function addScaled(sum: Float64Array, values: TrialVector, factor: number): void {
+  for (let t = 0; t < sum.length; t += 1) sum[t] += factor * values[t];
+}
+
+function addDrawn(sum: Float64Array, values: TrialVector, comes: Uint8Array, factor: number): void {
+  for (let t = 0; t < sum.length; t += 1) sum[t] += comes[t] * factor * values[t];
+}
+
+function addVectors(sums: Vectors, vectors: Vectors): void {
+  for (const name of vectorNames) addScaled(sums[name], vectors[name], 1);
+}
+
+function rangesOf(
+  vectors: Readonly<Record<VectorName, TrialVector>>,
+  workspace: OrderWorkspace,
+): VolumeRanges {
+  const range = (name: VectorName) => rangeOfSample(vectors[name], vectors[name].length, workspace);
   return {
     wetGasInPlaceScf: range("wetGasInPlaceScf"),
     dryGasInPlaceScf: range("dryGasInPlaceScf"),
@@ -208,8 +274,60 @@ function rangesOf(vectors: Vectors, counting: OrderWorkspace): VolumeRanges {
   };
 }
 
-function groupOf(vectors: Vectors, counting: OrderWorkspace): LedgerGroup {
-  const condensate = vectors.condensateRecoverableStb;
-  const { standardDeviation } = summariseSample(condensate, condensate.length, counting);
-  return { ranges: rangesOf(vectors, counting), condensateVariance: standardDeviation ** 2 };
+function entriesOf(
+  fields: readonly LedgerField[],
+  total: Float64Array,
+  quantiles: Range,
+  counting: OrderWorkspace,
+  risk: Risking,
+): Record<string, LedgerEntry> {
+  const trials = total.length;
+  const order = new Uint32Array(trials);
+  rankByCounting(total, trials, counting, new Uint32Array(trials), order);
+  const contributionOf = createContributions({ total, order, quantiles });
+  const own = new Float64Array(trials);
+  return Object.fromEntries(
+    fields.map((field) => {
+      own.fill(0);
+      const factor = factorOf(field, risk);
+      const { volumes, comes } = field.trials;
+      if (risk === "yesNo") addDrawn(own, volumes.condensateRecoverableStb, comes, factor);
+      else addScaled(own, volumes.condensateRecoverableStb, factor);
+      const figures = field.figures[risk === "yesNo" ? "yesNo" : "certain"];
+      const ranges = Object.fromEntries(
+        vectorNames.map((name) => [name, scaleRange(figures[name], factor)]),
+      ) as VolumeRanges;
+      return [field.id, { ranges, contribution: contributionOf(own) }];
+    }),
+  );
+}
+
+function scaleErrors(
+  errors: Range,
+  fields: readonly LedgerField[],
+  entries: Record<string, LedgerEntry>,
+  trials: number,
+): Range {
+  const inverse = fields.reduce((sum, { id, sourceTrials }) => {
+    const share = Math.max(0, entries[id].contribution.shareOfVariance);
+    return sum + share * Math.max(1, trials / sourceTrials);
+  }, 0);
+  return scaleRange(errors, Math.sqrt(Math.max(1, inverse)));
+}
+
+function shareAtLeast(values: Float64Array, least: number): number {
+  let count = 0;
+  for (let t = 0; t < values.length; t += 1) if (values[t] >= least) count += 1;
+  return count / values.length;
+}
+
+function ranksOf(fields: readonly LedgerField[], risk: Risking): Record<string, RankSpread> {
+  return rankTrials(
+    fields.map((field) => ({
+      id: field.id,
+      values: field.trials.volumes.condensateRecoverableStb,
+      factor: factorOf(field, risk),
+      comes: risk === "yesNo" ? field.trials.comes : null,
+    })),
+  );
 }

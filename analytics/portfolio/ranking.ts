@@ -35,10 +35,9 @@ export interface OpenEstimate {
   state: "draft" | "submitted" | "returned";
 }
 
-/** Trials are added one by one, so a revision with another number of them than the rest cannot be in a total. */
+/** A reservoir without a computed revision on this basis. */
 export interface LeftOut {
   reservoirName: string;
-  reason: "no_estimate" | "other_number_of_trials";
 }
 
 export const rankedClasses = ["reserves", "contingent", "prospective"] as const;

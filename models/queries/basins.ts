@@ -11,8 +11,8 @@ export async function findBasin(id: string, options: Options = {}): Promise<Basi
 }
 
 /** All of them, by name: a company has a handful. */
-export async function listAllBasins(): Promise<Basin[]> {
-  return Basin.findAll({ order: [["name", "ASC"]] });
+export async function listAllBasins(options: { transaction?: Transaction } = {}): Promise<Basin[]> {
+  return Basin.findAll({ ...options, order: [["name", "ASC"]] });
 }
 
 export async function createBasinRow(

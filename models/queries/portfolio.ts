@@ -1,4 +1,4 @@
-import { QueryTypes } from "sequelize";
+import { QueryTypes, type Transaction } from "sequelize";
 import type { RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import type { ProducingConcept } from "@/analytics/recovery/recovery-plan-schema";
 import type { VectorName } from "@/analytics/volumetrics/results-schema";
@@ -14,7 +14,6 @@ export interface PortfolioFieldRow {
   basinId: string;
   basinSlug: string;
   basinName: string;
-  basinRankCorrelation: number;
   operator: string;
   workingInterest: number;
   netRevenueInterest: number;
@@ -62,7 +61,7 @@ export interface PortfolioReservoirRow {
 export async function listPortfolioFields(): Promise<PortfolioFieldRow[]> {
   return sequelize.query<PortfolioFieldRow>(
     `select f.id, f.slug, f.name, b.id as "basinId", b.slug as "basinSlug", b.name as "basinName",
-            b.rank_correlation as "basinRankCorrelation", f.operator,
+            f.operator,
             f.working_interest as "workingInterest", f.net_revenue_interest as "netRevenueInterest",
             f.prms_class as "prmsClass", f.prms_sub_class as "prmsSubClass",
             f.chance_of_commerciality as "chanceOfCommerciality",
@@ -72,6 +71,17 @@ export async function listPortfolioFields(): Promise<PortfolioFieldRow[]> {
        left join users u on u.id = f.responsible_engineer_id
       order by lower(f.name)`,
     { type: QueryTypes.SELECT },
+  );
+}
+
+/** Where every field lies, in no order. */
+export async function listPlacedFields(
+  options: { transaction?: Transaction } = {},
+): Promise<Pick<PortfolioFieldRow, "id" | "name" | "basinId" | "basinName">[]> {
+  return sequelize.query(
+    `select f.id, f.name, b.id as "basinId", b.name as "basinName"
+       from fields f join basins b on b.id = f.basin_id`,
+    { type: QueryTypes.SELECT, ...options },
   );
 }
 

@@ -9,7 +9,8 @@
  * and portfolio totals with a common factor per basin.
  */
 import os from "node:os";
-import { rollUp, summariseTotal, type RollUpMember } from "@/analytics/portfolio/roll-up";
+import { rollUp, type RollUpField } from "@/analytics/portfolio/roll-up";
+import type { VectorName } from "@/analytics/volumetrics/results-schema";
 import { simulate } from "@/analytics/volumetrics/simulate";
 import { createWorkspace } from "@/analytics/volumetrics/workspace";
 import { streamOf } from "@/analytics/numerics/random";
@@ -25,32 +26,47 @@ const SEED = 1;
 
 function runEngine(reservoirs: readonly BenchReservoir[], trials: number) {
   const workspace = createWorkspace(trials);
-  const members = reservoirs.map(({ id, basin, inputs }): RollUpMember & { p50: number } => {
+  const fields = reservoirs.map(({ id, basin, inputs }): RollUpField & { p50: number } => {
     const { summary, vectors } = simulate(inputs, { trials, seed: streamOf(id), workspace });
+    // Single precision, as trials are stored.
+    const single = (name: VectorName) => Float32Array.from(vectors[name]);
     return {
       id,
-      group: basin,
-      // Single precision, as trials are stored.
-      vectors: {
-        condensateRecoverableStb: Float32Array.from(vectors.condensateRecoverableStb),
-        salesGasScf: Float32Array.from(vectors.salesGasScf),
-      },
-      factors: { condensate: 1, gas: 1 },
+      slug: id,
+      basinId: basin,
+      basinSlug: basin,
+      classId: "contingent",
+      interest: 1,
+      chance: 1,
+      reservoirs: [
+        {
+          id,
+          vectors: {
+            wetGasInPlaceScf: single("wetGasInPlaceScf"),
+            dryGasInPlaceScf: single("dryGasInPlaceScf"),
+            condensateInPlaceStb: single("condensateInPlaceStb"),
+            salesGasScf: single("salesGasScf"),
+            condensateRecoverableStb: single("condensateRecoverableStb"),
+          },
+        },
+      ],
       p50: summary.results.condensateRecoverableStb.p50,
     };
   });
   const simulated = performance.now();
-  const { total } = rollUp(members, {
-    quantities: { condensate: "condensateRecoverableStb", gas: "salesGasScf" },
+  const { total } = rollUp(fields, {
+    trials,
     seed: SEED,
-    dependence: DEPENDENCE,
+    dependence: {
+      portfolioRank: 0,
+      basinRanks: {},
+      otherBasinsRank: DEPENDENCE,
+      sharedFactors: [],
+    },
+    risk: "unrisked",
+    withRanks: false,
   });
-  return {
-    members,
-    simulated,
-    condensate: summariseTotal(total.vectors.condensate),
-    gas: summariseTotal(total.vectors.gas),
-  };
+  return { members: fields, simulated, total };
 }
 
 /** Wall time, and processor time of this process: only the second is fair on a machine with other work to do. */

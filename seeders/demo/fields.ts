@@ -1,12 +1,6 @@
 import type { PrmsSubClass } from "@/models/vocabulary";
 
 /** The demo scenario's basins and fields: Quillmere Gas and its places are invented. */
-export interface DemoBasin {
-  name: string;
-  /** rank correlation between fields of the basin: shared source rock, charge and mapping velocity */
-  rankCorrelation: number;
-}
-
 export interface DemoField {
   name: string;
   basin: string;
@@ -20,12 +14,7 @@ export interface DemoField {
   chanceOfCommerciality: number;
 }
 
-export const demoBasins: DemoBasin[] = [
-  { name: "Saltmarrow", rankCorrelation: 0.28 },
-  { name: "Corrith", rankCorrelation: 0.32 },
-  { name: "Veldrane", rankCorrelation: 0.22 },
-  { name: "Ilmarsh", rankCorrelation: 0.25 },
-];
+export const demoBasins = ["Saltmarrow", "Corrith", "Veldrane", "Ilmarsh"];
 
 const PARTNER = "Harbrook Energy";
 const OWN = "Quillmere Gas";

@@ -8,6 +8,7 @@ import { createDraft } from "@/services/estimates";
 import { createBasin } from "@/services/basins";
 import { atTime } from "@/services/clock";
 import { closePool } from "@/services/compute/pool";
+import { createDependenceSet, updateDependenceSet } from "@/services/dependence-sets";
 import { createField } from "@/services/fields";
 import { createFluidSample } from "@/services/fluid-samples";
 import type { Actor, Role } from "@/services/policy";
@@ -16,6 +17,7 @@ import { createReservoir } from "@/services/reservoirs";
 import { getSettings, updateSettings } from "@/services/settings";
 import { createFirstAdministrator, createUser } from "@/services/users";
 import type { Estimate } from "@/models/estimate";
+import { demoDependenceSets } from "./dependence-sets";
 import { demoBasins, demoFields } from "./fields";
 import { revisionsOf, type DemoRevision } from "./history";
 import { inputsOf, separatorTestOf } from "./inputs";
@@ -85,8 +87,8 @@ async function createDecks({ planner }: People): Promise<void> {
 /** @returns the ids of the fields by their names */
 async function createFields({ engineer, planner }: People): Promise<Map<string, string>> {
   const basinIds = new Map<string, string>();
-  for (const basin of demoBasins) {
-    basinIds.set(basin.name, (await createBasin(planner, basin)).id);
+  for (const name of demoBasins) {
+    basinIds.set(name, (await createBasin(planner, { name })).id);
   }
   const fieldIds = new Map<string, string>();
   for (const { basin, latitudeDeg, longitudeDeg, ...field } of demoFields) {
@@ -99,7 +101,32 @@ async function createFields({ engineer, planner }: People): Promise<Map<string, 
     });
     fieldIds.set(field.name, created.id);
   }
+  await createDependenceSets(planner, basinIds, fieldIds);
   return fieldIds;
+}
+
+async function createDependenceSets(
+  planner: Actor,
+  basinIds: ReadonlyMap<string, string>,
+  fieldIds: ReadonlyMap<string, string>,
+): Promise<void> {
+  for (const { name, note, portfolioRank, isDefault, ...set } of demoDependenceSets) {
+    const basinRanks = Object.fromEntries(
+      Object.entries(set.basinRanks).map(([basin, rank]) => [basinIds.get(basin) ?? "", rank]),
+    );
+    const sharedFactors = set.sharedFactors.map(({ fields, ...factor }) => ({
+      ...factor,
+      fieldIds: fields.map((field) => fieldIds.get(field) ?? ""),
+    }));
+    const dependence = {
+      portfolioRank,
+      basinRanks,
+      otherBasinsRank: portfolioRank,
+      sharedFactors,
+    };
+    const created = await createDependenceSet(planner, { name, note, dependence });
+    if (isDefault) await updateDependenceSet(planner, created.id, { isDefault }, created.version);
+  }
 }
 
 async function createReservoirWithHistory(

@@ -5,7 +5,9 @@ import path from "node:path";
 import { MessageChannel, receiveMessageOnPort, type MessagePort } from "node:worker_threads";
 import { Piscina } from "piscina";
 import { ConvergenceError, DomainError } from "@/analytics/errors";
-import type { Ledger, LedgerMember, LedgerOptions } from "@/analytics/portfolio/ledger";
+import type { AlignmentOptions } from "@/analytics/portfolio/field-trials";
+import type { FieldFigures, Ledger } from "@/analytics/portfolio/ledger";
+import type { FieldPiece } from "@/analytics/portfolio/roll-up";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import type { Simulation, SimulationOptions } from "@/analytics/volumetrics/simulate";
 import type {
@@ -15,7 +17,7 @@ import type {
 } from "@/analytics/volumetrics/until-settled";
 import { ServiceBusyError } from "../errors";
 import type { FluidAnswer, FluidQuestion, FluidTask, FluidTaskName } from "../fluids/tasks";
-import type { LedgerTask, Outcome, SettleTask, SimulationTask } from "./worker";
+import type { AlignmentTask, LedgerTask, Outcome, SettleTask, SimulationTask } from "./worker";
 
 /** Tasks that may wait for a thread. More would wait longer than anybody does, each with its inputs in memory. */
 export const MAXIMUM_QUEUE = 64;
@@ -61,6 +63,7 @@ export interface ComputeOptions {
 interface Tasks {
   simulate: SimulationTask;
   settle: SettleTask;
+  align: AlignmentTask;
   ledger: LedgerTask;
   fluid: FluidTask;
 }
@@ -123,24 +126,45 @@ export async function runUntilSettled(
   }
 }
 
+/** Some reservoirs of a field whose trials the caller shares with the thread. */
+export type SharedFieldPiece = FieldPiece & { buffer: SharedArrayBuffer };
+
 /**
- * `computeLedger` on a thread. The members' arrays are handed over, not copied: the caller must not use them again.
+ * `alignPieces` on a thread, into buffers that the caller keeps. The reservoirs' arrays are handed over, not copied:
+ * the caller must not use them again.
+ *
+ * @throws {DomainError} as `alignPieces`
+ * @throws {ServiceBusyError} when too many wait already
+ */
+export async function runAlignment(
+  pieces: SharedFieldPiece[],
+  options: AlignmentOptions,
+  { signal }: ComputeOptions = {},
+): Promise<(FieldFigures | null)[]> {
+  const task: AlignmentTask = { pieces, options };
+  const buffers = new Set(
+    pieces.flatMap(({ reservoirs }) =>
+      reservoirs.flatMap(({ vectors }) =>
+        Object.values(vectors).map(({ buffer }) => buffer as ArrayBuffer),
+      ),
+    ),
+  );
+  return run<(FieldFigures | null)[]>("align", task, { signal, transferList: [...buffers] });
+}
+
+/**
+ * `computeLedger` on a thread, from trials that it shares with the caller.
  *
  * @throws {DomainError} as `computeLedger`
  * @throws {ServiceBusyError} when too many wait already
  */
 export async function runLedger(
-  members: LedgerMember[],
-  options: LedgerOptions,
+  fields: LedgerTask["fields"],
+  options: LedgerTask["options"],
   { signal }: ComputeOptions = {},
 ): Promise<Ledger> {
-  const task: LedgerTask = { members, options };
-  const buffers = new Set(
-    members.flatMap(({ vectors }) =>
-      Object.values(vectors).map(({ buffer }) => buffer as ArrayBuffer),
-    ),
-  );
-  return run<Ledger>("ledger", task, { signal, transferList: [...buffers] });
+  const task: LedgerTask = { fields, options };
+  return run<Ledger>("ledger", task, { signal });
 }
 
 /**

@@ -5,12 +5,15 @@
 import type { MessagePort } from "node:worker_threads";
 import { move, transferableSymbol, valueSymbol } from "piscina";
 import { ConvergenceError, DomainError } from "@/analytics/errors";
+import { viewFieldTrials, type AlignmentOptions } from "@/analytics/portfolio/field-trials";
 import {
   computeLedger,
+  type FieldFigures,
   type Ledger,
-  type LedgerMember,
+  type LedgerField,
   type LedgerOptions,
 } from "@/analytics/portfolio/ledger";
+import { alignPieces, type FieldPiece } from "@/analytics/portfolio/roll-up";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import {
   DEFAULT_TRIALS,
@@ -38,9 +41,16 @@ export interface SettleTask {
   progress: MessagePort;
 }
 
+export interface AlignmentTask {
+  /** their buffers are shared, so that the caller has what the thread writes */
+  pieces: FieldPiece[];
+  options: AlignmentOptions;
+}
+
 export interface LedgerTask {
-  members: LedgerMember[];
-  options: LedgerOptions;
+  /** with the buffers of their trials, shared */
+  fields: (Omit<LedgerField, "trials"> & { buffer: SharedArrayBuffer })[];
+  options: LedgerOptions & { trials: number };
 }
 
 /** An error of analytics keeps its class only as data: a thrown one arrives as a plain Error. */
@@ -85,10 +95,25 @@ export function settle({ inputs, options, progress }: SettleTask) {
   );
 }
 
+/** Stored trials into the order of the portfolio. */
+export function align({ pieces, options }: AlignmentTask) {
+  return answer<(FieldFigures | null)[]>(
+    () => alignPieces(pieces, options),
+    () => [],
+  );
+}
+
 /** Summaries only: what comes back is small, and the summing up of many fields stays off the event loop. */
-export function ledger({ members, options }: LedgerTask) {
+export function ledger({ fields, options: { trials, ...options } }: LedgerTask) {
   return answer<Ledger>(
-    () => computeLedger(members, options),
+    () =>
+      computeLedger(
+        fields.map(({ buffer, ...field }) => ({
+          ...field,
+          trials: viewFieldTrials(buffer, trials),
+        })),
+        options,
+      ),
     () => [],
   );
 }

@@ -2,6 +2,7 @@ import { estimateWords, recoverySourcesOf } from "@/analytics/portfolio/ranking-
 import type { LedgerQuantity, LedgerRanges, RankedField } from "@/analytics/portfolio/ranking";
 import type { Range } from "@/analytics/volumetrics/results-schema";
 import type { ChosenPrices, PortfolioBasis } from "../portfolio/basis";
+import type { ChosenDependence } from "../portfolio/dependence";
 import type { CsvCell } from "./csv";
 
 /** A line of the budget file: a field, or the total of all fields that have an estimate. */
@@ -11,6 +12,7 @@ export interface BudgetRow {
   ranges: LedgerRanges | null;
   basis: PortfolioBasis;
   prices: ChosenPrices | null;
+  dependence: ChosenDependence;
 }
 
 export interface BudgetColumn {
@@ -63,6 +65,10 @@ const value = (quantity: LedgerQuantity, stem: string, meaning: string) =>
   ranged(quantity, stem, "", "units of the column currency", meaning, 1);
 
 const SEPARATOR = "; ";
+
+/** How the chance of commerciality counts, in the words that the files use. */
+export const riskWord = ({ risk }: Pick<PortfolioBasis, "risk">): string =>
+  risk === "yesNo" ? "yes_no" : risk;
 
 /** The oldest date among the approvals a field stands on. */
 const oldestApproval = ({ chosen }: RankedField): string | null =>
@@ -191,8 +197,8 @@ export const budgetLayout: readonly BudgetColumn[] = [
     name: "risk",
     unit: "",
     meaning:
-      "unrisked; risked: every trial times chance_of_commerciality, so means are exact and ranges do not hold the chance of nothing",
-    value: ({ basis }) => basis.risk,
+      "unrisked; risked: every trial times chance_of_commerciality, so means are exact and ranges do not hold the chance of nothing; yes_no: each field comes or not, drawn trial by trial with chance_of_commerciality, so ranges hold the chance of nothing and means are those of the draws",
+    value: ({ basis }) => riskWord(basis),
   },
   about(
     "estimate_states",
@@ -245,4 +251,11 @@ export const budgetLayout: readonly BudgetColumn[] = [
         .sort()
         .join(SEPARATOR),
   ),
+  {
+    name: "dependence_set",
+    unit: "",
+    meaning:
+      "name of the dependence set by which fields move together in the total; a field's own ranges depend on it only where the field has several reservoirs",
+    value: ({ dependence }) => dependence.name,
+  },
 ];

@@ -1,7 +1,8 @@
 import { today } from "../clock";
 import { authorise, type Actor } from "../policy";
 import type { PortfolioBasis } from "../portfolio/basis";
-import { loadRanking, totalOf } from "../portfolio/ranking";
+import { totalOf } from "../portfolio/group-total";
+import { loadRanking } from "../portfolio/ranking";
 import { budgetLayout, type BudgetRow } from "./budget-layout";
 import { csvResponse, type CsvCell } from "./csv";
 
@@ -13,12 +14,14 @@ export async function exportBudget(actor: Actor, basis: PortfolioBasis): Promise
   authorise(actor, "export.create");
   const ranked = await loadRanking(basis);
   const { fields, prices } = ranked;
+  const { dependence } = ranked.book;
   const total = await totalOf(ranked, basis, fields);
 
   function* rows(): Generator<CsvCell[]> {
     const cells = (row: BudgetRow) => budgetLayout.map(({ value }) => value(row));
-    for (const field of fields) yield cells({ field, ranges: field.ranges, basis, prices });
-    if (total) yield cells({ field: null, ranges: total.trialByTrial, basis, prices });
+    for (const field of fields)
+      yield cells({ field, ranges: field.ranges, basis, prices, dependence });
+    if (total) yield cells({ field: null, ranges: total.trialByTrial, basis, prices, dependence });
   }
 
   const names = budgetLayout.map(({ name }) => name);

@@ -9,7 +9,9 @@ import { reportingUnits, type ReportingUnits } from "@/analytics/units/reporting
 import { today } from "../clock";
 import { authorise, type Actor } from "../policy";
 import type { ChosenPrices, PortfolioBasis } from "../portfolio/basis";
-import { selectRanking, type GroupTotal, type RankingRequest } from "../portfolio/ranking";
+import type { GroupTotal } from "../portfolio/group-total";
+import { selectRanking, type RankingRequest } from "../portfolio/ranking";
+import { riskWord } from "./budget-layout";
 import { csvResponse, type CsvCell, type CsvFile } from "./csv";
 
 export interface RankingExportRequest extends RankingRequest {
@@ -19,16 +21,16 @@ export interface RankingExportRequest extends RankingRequest {
 /**
  * The ranking as it is shown: the same rows in the same order, the same columns in the same units, all digits, then the
  * total trial by trial and the arithmetic sum, each named in `row_kind`. The last columns carry the basis and, whatever
- * columns are shown, where each field's recoveries come from.
+ * columns are shown, where each field's recoveries come from and by which dependence set fields move together.
  */
 export async function exportRanking(
   actor: Actor,
   request: RankingExportRequest,
 ): Promise<Response> {
   authorise(actor, "export.create");
-  const { rows, totals, prices } = await selectRanking(request);
+  const { rows, totals, prices, book } = await selectRanking(request);
   const units = reportingUnits(request.basis.units, request.basis.base);
-  const file = rankingFile(rows, totals, prices, units, request);
+  const file = rankingFile(rows, totals, prices, units, request, book.dependence.name);
   return csvResponse(file, `dewledger-ranking-${today()}.csv`);
 }
 
@@ -38,6 +40,7 @@ function rankingFile(
   prices: ChosenPrices | null,
   units: ReportingUnits,
   { basis, columns: ids }: RankingExportRequest,
+  dependenceSet: string,
 ): CsvFile {
   // It stands at the end in any case, so that no figure leaves without its mark.
   const columns = ids.filter((id) => id !== "recoveryRoute").map(rankingColumn);
@@ -51,12 +54,13 @@ function rankingFile(
   function* lines(): Generator<CsvCell[]> {
     for (const row of rows) {
       const cells = columns.flatMap((column) => cellsOf(column, row, units));
-      yield ["field", row.rank, row.name, ...cells, ...basisValues, routeOf(row)];
+      yield ["field", row.rank, row.name, ...cells, ...basisValues, routeOf(row), dependenceSet];
     }
     if (totals === null) return;
     const count = `${totals.fields} fields`;
-    yield ["total_trial_by_trial", null, count, ...sumCells("trialByTrial"), ...basisValues, null];
-    yield ["arithmetic_sum", null, count, ...sumCells("arithmeticSum"), ...basisValues, null];
+    const last = [...basisValues, null, dependenceSet];
+    yield ["total_trial_by_trial", null, count, ...sumCells("trialByTrial"), ...last];
+    yield ["arithmetic_sum", null, count, ...sumCells("arithmeticSum"), ...last];
   }
 
   return {
@@ -67,6 +71,7 @@ function rankingFile(
       ...columns.flatMap((column) => namesOf(column, units)),
       ...basisNames,
       "recovery_route",
+      "dependence_set",
     ],
     rows: { [Symbol.iterator]: lines },
     byteOrderMark: true,
@@ -130,7 +135,7 @@ export function basisCells(
     gas_price_per_mscf: prices?.gasPerMscf ?? null,
     estimates: basis.estimates,
     interest: basis.interest,
-    risk: basis.risk,
+    risk: riskWord(basis),
     standard_conditions: units.standardConditions,
   };
 }

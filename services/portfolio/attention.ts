@@ -1,3 +1,4 @@
+import { basinRankOf } from "@/analytics/portfolio/factor-model";
 import type { Ledger } from "@/analytics/portfolio/ledger";
 import { spreadOf } from "@/analytics/portfolio/ranking-columns";
 import type { RankedField } from "@/analytics/portfolio/ranking";
@@ -5,7 +6,7 @@ import { isUnmeasured } from "@/analytics/recovery/recovery-curve-schema";
 import type { PortfolioFieldRow, PortfolioReservoirRow } from "@/models/queries/portfolio";
 import type { PortfolioBasis } from "./basis";
 import type { RankedBook } from "./ranking";
-import { chanceOf, interestOf } from "./roll-ups";
+import { chanceOf, interestOf, type Book } from "./roll-ups";
 
 /** A share of the portfolio's liquid from which one field is worth a remark. */
 const MATERIAL_SHARE = 0.05;
@@ -50,7 +51,13 @@ export type Attention =
       share: number;
     }
   | { kind: "no_estimate"; names: string[] }
-  | { kind: "basin"; name: string; shareOfVariance: number; rankCorrelation: number }
+  | {
+      /** where most of the spread comes from, with the rank correlation its reservoirs have by the dependence set */
+      kind: "basin";
+      name: string;
+      shareOfVariance: number;
+      rankCorrelation: number;
+    }
   | { kind: "price"; condensateMeanStb: number };
 
 /**
@@ -63,7 +70,7 @@ export function attentionOf(
   basis: PortfolioBasis,
   at: Date,
 ): Attention[] {
-  const total = ledger.total.ranges.condensateRecoverableStb.mean;
+  const total = ledger.total.condensateRecoverableStb.mean;
   const shareOf = ({ ranges }: RankedField) =>
     total > 0 ? (ranges?.condensateRecoverableStb.mean ?? 0) / total : 0;
   const waiting = book.fields.flatMap((field) => {
@@ -115,7 +122,7 @@ export function attentionOf(
         ]
       : []),
     ...(without.length > 0 ? [{ kind: "no_estimate" as const, names: without }] : []),
-    ...largestBasin(ledger, book.fields),
+    ...largestBasin(ledger, book),
     { kind: "price", condensateMeanStb: total },
   ];
 }
@@ -158,14 +165,11 @@ function sinceOf(reservoir: PortfolioReservoirRow): Date | null {
 }
 
 /** The basin that most of the portfolio's spread comes from, when there are several. */
-function largestBasin(
-  ledger: Ledger,
-  fields: readonly { basinId: string; basinName: string; basinRankCorrelation: number }[],
-): Attention[] {
+function largestBasin(ledger: Ledger, { fields, dependence: { dependence } }: Book): Attention[] {
   const entries = Object.entries(ledger.basins);
-  if (entries.length < 2 || ledger.total.condensateVariance === 0) return [];
-  const [id, { condensateVariance }] = entries.reduce((largest, entry) =>
-    entry[1].condensateVariance > largest[1].condensateVariance ? entry : largest,
+  if (entries.length < 2 || ledger.condensate.standardDeviation === 0) return [];
+  const [id, { shareOfVariance }] = entries.reduce((largest, entry) =>
+    entry[1].shareOfVariance > largest[1].shareOfVariance ? entry : largest,
   );
   const basin = fields.find(({ basinId }) => basinId === id);
   if (!basin) return [];
@@ -173,8 +177,8 @@ function largestBasin(
     {
       kind: "basin",
       name: basin.basinName,
-      shareOfVariance: condensateVariance / ledger.total.condensateVariance,
-      rankCorrelation: basin.basinRankCorrelation,
+      shareOfVariance,
+      rankCorrelation: basinRankOf(dependence, id),
     },
   ];
 }

@@ -1,10 +1,7 @@
 import type { Ledger, VolumeRanges } from "@/analytics/portfolio/ledger";
 import {
   matchesFilter,
-  scaleRange,
   sortFields,
-  sumRanges,
-  type LedgerRanges,
   type LeftOut,
   type RankedField,
   type RankingFilter,
@@ -12,11 +9,12 @@ import {
 } from "@/analytics/portfolio/ranking";
 import { rankingColumn, type RankingSortId } from "@/analytics/portfolio/ranking-columns";
 import { leastTrusted } from "@/analytics/recovery/recovery-curve-schema";
-import { vectorNames } from "@/analytics/volumetrics/results-schema";
 import type { PortfolioFieldRow, PortfolioReservoirRow } from "@/models/queries/portfolio";
 import { authorise, type Actor } from "../policy";
 import { findPrices, type ChosenPrices, type PortfolioBasis } from "./basis";
-import { loadBook, rollUpFields, type Book } from "./roll-ups";
+import { describeDependence } from "./dependence";
+import { totalOf, withValues } from "./group-total";
+import { isCounted, loadBook, rollUpFields, type Book } from "./roll-ups";
 
 /** Every field with its figures on a basis, and what they were computed from. */
 export interface RankedBook {
@@ -28,24 +26,16 @@ export interface RankedBook {
   ledger: Ledger | null;
 }
 
-/** Trial-by-trial total of some fields, with the arithmetic sum of their columns apart. */
-export interface GroupTotal {
-  /** fields that are in the figures */
-  fields: number;
-  trialByTrial: LedgerRanges;
-  arithmeticSum: LedgerRanges;
-}
-
 /** The whole ranking on a basis. Every screen and file of the portfolio starts from this. */
 export async function loadRanking(basis: PortfolioBasis): Promise<RankedBook> {
-  const [book, prices] = await Promise.all([loadBook(basis.estimates), findPrices(basis)]);
+  const [book, prices] = await Promise.all([loadBook(basis), findPrices(basis)]);
   const ledger = await rollUpFields(book, basis);
   const reservoirs = new Map<string, PortfolioReservoirRow[]>();
   for (const reservoir of book.reservoirs) {
     reservoirs.set(reservoir.fieldId, [...(reservoirs.get(reservoir.fieldId) ?? []), reservoir]);
   }
   const unranked = book.fields.map((field) =>
-    describeField(field, reservoirs.get(field.id) ?? [], book, ledger, prices),
+    describeField(field, reservoirs.get(field.id) ?? [], ledger, prices),
   );
   const fields = sortFields(
     unranked,
@@ -53,42 +43,6 @@ export async function loadRanking(basis: PortfolioBasis): Promise<RankedBook> {
     "descending",
   ).map((field, index) => ({ ...field, rank: field.ranges === null ? null : index + 1 }));
   return { book, prices, fields, ledger };
-}
-
-/**
- * Volumes with their values: recoverable condensate times the realised condensate price, sales gas times the realised
- * gas price, undiscounted. A value without a price is null, never 0.
- */
-export function withValues(volumes: VolumeRanges, prices: ChosenPrices | null): LedgerRanges {
-  const condensatePerStb = prices?.condensatePerStb ?? null;
-  const gasPerMscf = prices?.gasPerMscf ?? null;
-  return {
-    ...volumes,
-    liquidValue:
-      condensatePerStb === null
-        ? null
-        : scaleRange(volumes.condensateRecoverableStb, condensatePerStb),
-    gasValue: gasPerMscf === null ? null : scaleRange(volumes.salesGasScf, gasPerMscf / 1000),
-  };
-}
-
-/** Total of the fields among these that are in the figures, or null when none is. */
-export async function totalOf(
-  { book, prices }: Pick<RankedBook, "book" | "prices">,
-  basis: PortfolioBasis,
-  fields: readonly RankedField[],
-): Promise<GroupTotal | null> {
-  const ledger = await rollUpFields(book, basis, new Set(fields.map(({ id }) => id)));
-  if (!ledger) return null;
-  const members = Object.values(ledger.fields).map(({ ranges }) => ranges);
-  const summed = Object.fromEntries(
-    vectorNames.map((name) => [name, sumRanges(members.map((ranges) => ranges[name]))]),
-  ) as VolumeRanges;
-  return {
-    fields: members.length,
-    trialByTrial: withValues(ledger.total.ranges, prices),
-    arithmeticSum: withValues(summed, prices),
-  };
 }
 
 export interface RankingRequest {
@@ -112,10 +66,10 @@ export async function listRanking(
   request: RankingRequest & { limit: number; offset: number },
 ) {
   authorise(actor, "portfolio.read");
-  const { rows, fields, prices, totals, book } = await selectRanking(request);
+  const selected = await selectRanking(request);
+  const { rows, fields, prices, totals, book } = selected;
   const { limit, offset } = request;
   const known = rows.flatMap(({ ranges }) => ranges?.liquidValue ?? []);
-  const leader = fields.find(({ ranges }) => ranges !== null);
   return {
     items: rows.slice(offset, offset + limit),
     total: rows.length,
@@ -124,7 +78,8 @@ export async function listRanking(
     fieldsInAll: fields.length,
     totals,
     prices,
-    leader: await leaderOf(request.basis, book, leader),
+    dependence: describeDependence(book.dependence),
+    leader: leaderOf(selected),
     scale:
       known.length === 0
         ? null
@@ -148,14 +103,18 @@ export async function totalTogether(
   authorise(actor, "portfolio.read");
   const ranked = await loadRanking(request.basis);
   const chosen = ranked.fields.filter(({ id }) => request.fieldIds.includes(id));
-  return { total: await totalOf(ranked, request.basis, chosen), prices: ranked.prices };
+  return {
+    total: await totalOf(ranked, request.basis, chosen),
+    prices: ranked.prices,
+    dependence: describeDependence(ranked.book.dependence),
+  };
 }
 
 /** How often the field with the largest mean also comes first in a trial. */
-async function leaderOf(basis: PortfolioBasis, book: Book, leader: RankedField | undefined) {
-  const ledger = leader && (await rollUpFields(book, basis));
-  if (!ledger) return null;
-  return { name: leader.name, chance: ledger.fields[leader.id].ranks.chanceFirst };
+function leaderOf({ fields, ledger }: RankedBook) {
+  const leader = fields.find(({ ranges }) => ranges !== null);
+  const ranks = leader && ledger?.ranks?.[leader.id];
+  return ranks ? { name: leader.name, chance: ranks.chanceFirst } : null;
 }
 
 /** What made the figures, for the foot of a page. */
@@ -188,12 +147,12 @@ function choicesOf(fields: readonly RankedField[]) {
 function describeField(
   field: PortfolioFieldRow,
   reservoirs: readonly PortfolioReservoirRow[],
-  book: Book,
   ledger: Ledger | null,
   prices: ChosenPrices | null,
 ): RankedField {
   const entry = ledger?.fields[field.id];
-  const counted = reservoirs.filter(({ trials }) => trials !== null && trials === book.trials);
+  const ranks = ledger?.ranks?.[field.id];
+  const counted: readonly PortfolioReservoirRow[] = reservoirs.filter(isCounted);
   return {
     id: field.id,
     slug: field.slug,
@@ -221,7 +180,7 @@ function describeField(
     open: reservoirs.flatMap(toOpen),
     ranges: entry ? withValues(entry.ranges, prices) : null,
     rank: null,
-    rankRange: entry ? { low: entry.ranks.low, high: entry.ranks.high } : null,
+    rankRange: ranks ? { low: ranks.low, high: ranks.high } : null,
   };
 }
 
@@ -257,10 +216,7 @@ function toChosen(reservoir: PortfolioReservoirRow): RankedField["chosen"][numbe
   };
 }
 
-const toLeftOut = ({ name, estimateId }: PortfolioReservoirRow): LeftOut => ({
-  reservoirName: name,
-  reason: estimateId === null ? "no_estimate" : "other_number_of_trials",
-});
+const toLeftOut = ({ name }: PortfolioReservoirRow): LeftOut => ({ reservoirName: name });
 
 function toOpen({ name, slug, openRevision, openState }: PortfolioReservoirRow) {
   if (openRevision === null) return [];

@@ -4,43 +4,36 @@
  * with it every percentile and the mean, so a change of deck needs no new roll-up.
  */
 import { createHash } from "node:crypto";
-import type { Ledger, LedgerMember } from "@/analytics/portfolio/ledger";
-import { vectorNames } from "@/analytics/volumetrics/results-schema";
+import type { Ledger } from "@/analytics/portfolio/ledger";
 import {
   listPortfolioFields,
   listPortfolioReservoirs,
-  listTrialVectors,
   type PortfolioFieldRow,
   type PortfolioReservoirRow,
 } from "@/models/queries/portfolio";
 import { runLedger } from "../compute/pool";
-import { decodeVector } from "../trial-vectors";
+import { alignFields, trialsThatFit, type CountedReservoir } from "./aligned-fields";
 import type { PortfolioBasis } from "./basis";
 import { ByteBoundedCache } from "./cache";
+import { findChosenDependence, type ChosenDependence } from "./dependence";
 
-type VolumeBasis = Pick<PortfolioBasis, "estimates" | "interest" | "risk">;
-
-/** A reservoir that is in the figures, with the field it belongs to. */
-export interface CountedReservoir {
-  field: PortfolioFieldRow;
-  reservoir: PortfolioReservoirRow & { estimateId: string; trials: number; computedAt: Date };
-}
+type VolumeBasis = Pick<PortfolioBasis, "interest" | "risk">;
 
 /** The whole book on a basis, before any figures. */
 export interface Book {
   fields: PortfolioFieldRow[];
   reservoirs: PortfolioReservoirRow[];
-  /** number of trials that totals are made of: the commonest one; 0 when nothing has been computed */
+  /**
+   * Trials that totals are made of: the commonest number among the revisions, halved while a book so large would not
+   * fit in memory. Revisions with another number join by their ranks. 0 when nothing has been computed.
+   */
   trials: number;
   counted: CountedReservoir[];
+  dependence: ChosenDependence;
 }
 
-/** Changes when the same trials would give other totals; part of what a total is remembered by. */
-const ROLL_UP_VERSION = 2;
-/** Fixed, so that a total moves only when something that went into it did. */
-const ROLL_UP_SEED = 2027;
-/** Revisions whose trials are read in one statement: 16 x 5 x 10,000 floats are 3 MB. */
-const BATCH = 16;
+/** Changes when the same trials in the same order would give other totals. */
+const ROLL_UP_VERSION = 3;
 const CACHE_BYTES = 32 * 1024 * 1024;
 
 const holder = globalThis as typeof globalThis & {
@@ -52,29 +45,41 @@ const ledgers = (holder.dewledgerLedgers ??= new ByteBoundedCache<Ledger>(
   (ledger) => JSON.stringify(ledger).length,
 ));
 
-/** Fields and reservoirs, and which of them are in the figures of a basis. */
-export async function loadBook(choice: PortfolioBasis["estimates"]): Promise<Book> {
-  const [fields, reservoirs] = await Promise.all([
+/**
+ * Fields and reservoirs, and which of them are in the figures of a basis.
+ *
+ * @throws {NotFoundError} when the basis names a dependence set that is not there
+ */
+export async function loadBook(
+  basis: Pick<PortfolioBasis, "estimates" | "dependence">,
+): Promise<Book> {
+  const [fields, reservoirs, dependence] = await Promise.all([
     listPortfolioFields(),
-    listPortfolioReservoirs(choice),
+    listPortfolioReservoirs(basis.estimates),
+    findChosenDependence(basis),
   ]);
-  const trials = commonest(reservoirs.flatMap((reservoir) => reservoir.trials ?? []));
   const byId = new Map(fields.map((field) => [field.id, field]));
   const counted = reservoirs.flatMap((reservoir): CountedReservoir[] => {
     const field = byId.get(reservoir.fieldId);
-    const { estimateId, computedAt } = reservoir;
-    if (!field || estimateId === null || computedAt === null || reservoir.trials !== trials) {
-      return [];
-    }
-    return [{ field, reservoir: { ...reservoir, estimateId, computedAt, trials } }];
+    return field && isCounted(reservoir) ? [{ field, reservoir }] : [];
   });
-  return { fields, reservoirs, trials, counted };
+  const trials = trialsThatFit(
+    commonest(counted.map(({ reservoir }) => reservoir.trials)),
+    new Set(counted.map(({ field }) => field.id)).size,
+  );
+  return { fields, reservoirs, trials, counted, dependence };
 }
+
+/** Is there a computed revision for it on this basis? */
+export const isCounted = (
+  reservoir: PortfolioReservoirRow,
+): reservoir is CountedReservoir["reservoir"] =>
+  reservoir.estimateId !== null && reservoir.computedAt !== null && reservoir.trials !== null;
 
 /**
  * What the counted reservoirs of some fields come to, added up trial by trial.
  *
- * @param fieldIds  leave out for all of them
+ * @param fieldIds  leave out for all of them; only then are fields placed among each other
  * @returns         null when none of them is in the figures
  */
 export async function rollUpFields(
@@ -86,26 +91,60 @@ export async function rollUpFields(
     ? book.counted.filter(({ field }) => fieldIds.has(field.id))
     : book.counted;
   if (counted.length === 0) return null;
-  return ledgers.get(keyOf(counted, basis), async () => {
-    const members = await loadMembers(counted, basis);
-    return runLedger(members, {
-      seed: ROLL_UP_SEED,
-      basinRankCorrelations: Object.fromEntries(
-        counted.map(({ field }) => [field.basinId, field.basinRankCorrelation]),
-      ),
-    });
-  });
+  const withRanks = counted.length === book.counted.length;
+  const key = keyOf(counted, book, basis, withRanks);
+  return ledgers.get(key, () => computeTotals(counted, book, basis, withRanks));
+}
+
+async function computeTotals(
+  counted: readonly CountedReservoir[],
+  { trials, dependence }: Book,
+  basis: VolumeBasis,
+  withRanks: boolean,
+): Promise<Ledger> {
+  const aligned = await alignFields(counted, trials, dependence.dependence);
+  const sourceTrials = new Map<string, number>();
+  for (const { field, reservoir } of counted) {
+    const known = sourceTrials.get(field.id) ?? Infinity;
+    sourceTrials.set(field.id, Math.min(known, reservoir.trials));
+  }
+  const fields = new Map(counted.map(({ field }) => [field.id, field]));
+  return runLedger(
+    [...fields.values()].flatMap((field) => {
+      const own = aligned.get(field.id);
+      if (!own) return [];
+      return [
+        {
+          id: field.id,
+          slug: field.slug,
+          basinId: field.basinId,
+          classId: field.prmsClass,
+          buffer: own.buffer,
+          figures: own.figures,
+          interest: interestOf(field, basis),
+          chance: field.chanceOfCommerciality,
+          sourceTrials: sourceTrials.get(field.id) ?? trials,
+        },
+      ];
+    }),
+    { trials, risk: basis.risk, withRanks },
+  );
 }
 
 /** The company's share on this basis, 0 to 1. */
 export const interestOf = (field: PortfolioFieldRow, { interest }: VolumeBasis) =>
   interest === "net" ? field.netRevenueInterest : 1;
-/** What every trial is multiplied by for risk on this basis, 0 to 1. */
+/** What a mean is multiplied by for risk on this basis, 0 to 1: on average a yes or no comes to the chance, too. */
 export const chanceOf = (field: PortfolioFieldRow, { risk }: VolumeBasis) =>
-  risk === "risked" ? field.chanceOfCommerciality : 1;
+  risk === "unrisked" ? 1 : field.chanceOfCommerciality;
 
 /** A hash of everything that the result depends on; the trials of an open revision change with `computedAt`. */
-function keyOf(counted: readonly CountedReservoir[], basis: VolumeBasis): string {
+function keyOf(
+  counted: readonly CountedReservoir[],
+  { trials, dependence }: Book,
+  basis: VolumeBasis,
+  withRanks: boolean,
+): string {
   const parts = counted
     .map(({ field, reservoir }) => [
       reservoir.id,
@@ -113,51 +152,23 @@ function keyOf(counted: readonly CountedReservoir[], basis: VolumeBasis): string
       reservoir.computedAt.getTime(),
       field.id,
       field.basinId,
-      field.basinRankCorrelation,
       field.prmsClass,
       interestOf(field, basis),
-      chanceOf(field, basis),
+      field.chanceOfCommerciality,
     ])
     .sort(([a], [b]) => (String(a) < String(b) ? -1 : 1));
   return createHash("sha256")
-    .update(JSON.stringify([ROLL_UP_VERSION, ROLL_UP_SEED, parts]))
+    .update(
+      JSON.stringify([
+        ROLL_UP_VERSION,
+        trials,
+        basis.risk,
+        withRanks,
+        dependence.dependence,
+        parts,
+      ]),
+    )
     .digest("base64");
-}
-
-async function loadMembers(
-  counted: readonly CountedReservoir[],
-  basis: VolumeBasis,
-): Promise<LedgerMember[]> {
-  const members: LedgerMember[] = [];
-  for (let start = 0; start < counted.length; start += BATCH) {
-    const batch = counted.slice(start, start + BATCH);
-    const rows = await listTrialVectors(
-      batch.map(({ reservoir }) => reservoir.estimateId),
-      vectorNames,
-    );
-    const byEstimate = new Map(rows.map((row) => [row.estimateId, row]));
-    for (const { field, reservoir } of batch) {
-      const row = byEstimate.get(reservoir.estimateId);
-      if (!row) throw new Error(`estimate ${reservoir.estimateId} has a summary but no trials`);
-      members.push({
-        id: `${field.slug}/${reservoir.slug}`,
-        fieldId: field.id,
-        basinId: field.basinId,
-        basinSlug: field.basinSlug,
-        classId: field.prmsClass,
-        interest: interestOf(field, basis),
-        chance: chanceOf(field, basis),
-        vectors: {
-          wetGasInPlaceScf: decodeVector(row.wetGasInPlaceScf),
-          dryGasInPlaceScf: decodeVector(row.dryGasInPlaceScf),
-          condensateInPlaceStb: decodeVector(row.condensateInPlaceStb),
-          salesGasScf: decodeVector(row.salesGasScf),
-          condensateRecoverableStb: decodeVector(row.condensateRecoverableStb),
-        },
-      });
-    }
-  }
-  return members;
 }
 
 /** The value that occurs most often, the larger one of two that occur equally; 0 for none. */

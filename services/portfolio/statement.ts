@@ -5,7 +5,9 @@ import { now, today } from "../clock";
 import { authorise, type Actor } from "../policy";
 import { attentionOf } from "./attention";
 import type { ChosenPrices, PortfolioBasis } from "./basis";
-import { engineOf, loadRanking, totalOf, withValues, type RankedBook } from "./ranking";
+import { describeDependence } from "./dependence";
+import { totalOf, withValues } from "./group-total";
+import { engineOf, loadRanking, type RankedBook } from "./ranking";
 import { chanceOf, interestOf, type Book } from "./roll-ups";
 
 /** Fields that a statement names one by one; the others are added up. */
@@ -23,6 +25,7 @@ export async function getStatement(actor: Actor, basis: PortfolioBasis) {
   return {
     asOf: today(),
     prices,
+    dependence: describeDependence(book.dependence),
     counted: counted.length,
     leftOut: fields
       .filter(({ ranges }) => ranges === null)
@@ -65,16 +68,13 @@ function basinsOf(counted: readonly RankedField[], ledger: Ledger, prices: Chose
   return [...basins.values()]
     .map((basin) => {
       const inBasin = counted.filter((field) => field.basin.id === basin.id);
-      const { ranges, condensateVariance } = ledger.basins[basin.id];
+      const { ranges, shareOfVariance } = ledger.basins[basin.id];
       return {
         ...basin,
         fields: inBasin.length,
         ranges: withValues(ranges, prices),
-        /** of the portfolio's variance; basins are independent, so the shares add up to 1 */
-        shareOfVariance:
-          ledger.total.condensateVariance > 0
-            ? condensateVariance / ledger.total.condensateVariance
-            : 0,
+        /** of the portfolio's variance, by covariance with it: the shares add up to 1 however basins move together */
+        shareOfVariance,
         condensateMeanStbByClass: Object.fromEntries(
           rankedClasses.map((name) => [name, meanOf(inBasin, name)]),
         ) as Record<RankedClass, number | null>,

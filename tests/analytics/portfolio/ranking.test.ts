@@ -163,7 +163,7 @@ describe("estimateWords(field)", () => {
       { reservoirName: "Upper sand", reservoirSlug: "upper-sand", revision: 4, state: "draft" },
     ] as const;
     expect(estimateWords(field({ open: [...open] }))).toBe("approved r3; draft r4");
-    const several = field({ leftOut: [{ reservoirName: "Lower sand", reason: "no_estimate" }] });
+    const several = field({ leftOut: [{ reservoirName: "Lower sand" }] });
     expect(estimateWords(several)).toBe("Upper sand: approved r3");
   });
 

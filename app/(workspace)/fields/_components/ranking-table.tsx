@@ -264,8 +264,6 @@ function ValueMark({
         />
       ) : row.ranges ? (
         "No price"
-      ) : row.leftOut.some(({ reason }) => reason === "other_number_of_trials") ? (
-        "Other number of trials"
       ) : (
         "No estimate"
       )}

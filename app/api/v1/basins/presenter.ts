@@ -1,6 +1,6 @@
 import type { Basin } from "@/models/basin";
 import type { BasinView } from "./schema";
 
-export function presentBasin({ id, slug, name, rankCorrelation, version }: Basin): BasinView {
-  return { id, slug, name, rankCorrelation, version };
+export function presentBasin({ id, slug, name, version }: Basin): BasinView {
+  return { id, slug, name, version };
 }

@@ -1,9 +1,7 @@
 import { z } from "zod";
-import { fractionSchema, nameSchema } from "../common-schema";
+import { nameSchema } from "../common-schema";
 
-export const newBasinSchema = z
-  .object({ name: nameSchema, rankCorrelation: fractionSchema.optional() })
-  .strict();
+export const newBasinSchema = z.object({ name: nameSchema }).strict();
 export type NewBasinRequest = z.infer<typeof newBasinSchema>;
 
 export const basinPatchSchema = newBasinSchema.partial();
@@ -13,8 +11,6 @@ export const basinSchema = z.object({
   id: z.uuid(),
   slug: z.string(),
   name: z.string(),
-  /** rank correlation that the reservoirs of the basin share */
-  rankCorrelation: z.number(),
   version: z.number().int(),
 });
 export type BasinView = z.infer<typeof basinSchema>;

@@ -4,7 +4,7 @@ import { rangeSchema } from "@/analytics/volumetrics/results-schema";
 import { estimateStates } from "@/models/vocabulary";
 import { dateSchema, momentSchema } from "../common-schema";
 import { reservoirFileSchema } from "../reservoirs/schema";
-import { chosenPricesSchema, rankedFieldSchema } from "./ranking-schema";
+import { chosenDependenceSchema, chosenPricesSchema, rankedFieldSchema } from "./ranking-schema";
 import { fieldSchema } from "./schema";
 
 /** The field by its id, or by the word of its address. */
@@ -49,6 +49,7 @@ export const fieldFileSchema = z.object({
   ranked: rankedFieldSchema,
   fieldsInAll: z.number().int(),
   prices: chosenPricesSchema.nullable(),
+  dependence: chosenDependenceSchema,
 });
 export type FieldFileView = z.infer<typeof fieldFileSchema>;
 

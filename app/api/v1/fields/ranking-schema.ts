@@ -126,12 +126,8 @@ export const rankedFieldSchema = z.object({
       producingConcept: z.enum(producingConcepts).nullable(),
     }),
   ),
-  leftOut: z.array(
-    z.object({
-      reservoirName: z.string(),
-      reason: z.enum(["no_estimate", "other_number_of_trials"]),
-    }),
-  ),
+  /** reservoirs without an estimate on this basis */
+  leftOut: z.array(z.object({ reservoirName: z.string() })),
   open: z.array(
     z.object({
       reservoirName: z.string(),
@@ -145,13 +141,50 @@ export const rankedFieldSchema = z.object({
   rankRange: z.object({ low: z.number(), high: z.number() }).nullable(),
 });
 
+/** The dependence set that totals stand on. */
+export const chosenDependenceSchema = z.object({
+  id: z.uuid(),
+  name: z.string(),
+  isDefault: z.boolean(),
+});
+
+const percentilesSchema = rangeSchema.pick({ p90: true, p50: true, p10: true });
+
+/** What a field brings to a total's recoverable condensate, STB. */
+export const contributionSchema = z.object({
+  fieldId: z.uuid(),
+  slug: z.string(),
+  name: z.string(),
+  /** Cov(field, total) / Var(total); may be below 0, adds up to 1 */
+  shareOfVariance: z.number(),
+  mean: z.number(),
+  /** what it holds on average when the total comes out at its own P90, P50 and P10: they add up to these */
+  p90: z.number(),
+  p50: z.number(),
+  p10: z.number(),
+});
+export type ContributionView = z.infer<typeof contributionSchema>;
+
 /** A group of fields: added up trial by trial, and the sum of the column apart. */
 export const groupTotalSchema = z.object({
   /** fields counted; those without an estimate are not */
   fields: z.number(),
   trialByTrial: ledgerRangesSchema,
   arithmeticSum: ledgerRangesSchema,
+  /** trial by trial less the arithmetic sum */
+  diversification: z.object({
+    condensateRecoverableStb: percentilesSchema,
+    /** null where the deck has no condensate price */
+    liquidValue: percentilesSchema.nullable(),
+  }),
+  /** one standard error of the total's recoverable condensate [STB], of sampling alone; on the safe side */
+  standardErrors: rangeSchema,
+  /** chance that none of the fields comes, 0 to 1; null unless the risk is `yesNo` */
+  chanceOfNothing: z.number().nullable(),
+  /** every field counted, the largest mean first */
+  contributions: z.array(contributionSchema),
 });
+export type GroupTotalView = z.infer<typeof groupTotalSchema>;
 
 export const rankingSchema = z.object({
   items: z.array(rankedFieldSchema),
@@ -164,6 +197,7 @@ export const rankingSchema = z.object({
   /** of all rows that match, not of the page; null when none of them has an estimate */
   totals: groupTotalSchema.nullable(),
   prices: chosenPricesSchema.nullable(),
+  dependence: chosenDependenceSchema,
   /** which field comes first by liquid value in most trials of the whole portfolio */
   leader: z.object({ name: z.string(), chance: z.number() }).nullable(),
   /** lowest P90 and highest P10 of the liquid value among the rows, for one scale over all pages */
@@ -182,5 +216,6 @@ export type RankingRow = z.infer<typeof rankedFieldSchema>;
 export const togetherSchema = z.object({
   total: groupTotalSchema.nullable(),
   prices: chosenPricesSchema.nullable(),
+  dependence: chosenDependenceSchema,
 });
 export type Together = z.infer<typeof togetherSchema>;

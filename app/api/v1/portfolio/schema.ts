@@ -1,6 +1,7 @@
 import { z } from "zod";
 import { rankedClasses } from "@/analytics/portfolio/ranking";
 import {
+  chosenDependenceSchema,
   chosenPricesSchema,
   groupTotalSchema,
   ledgerRangesSchema,
@@ -50,6 +51,7 @@ export const statementSchema = z.object({
   /** today, YYYY-MM-DD */
   asOf: z.string(),
   prices: chosenPricesSchema.nullable(),
+  dependence: chosenDependenceSchema,
   /** fields in the figures */
   counted: z.number(),
   /** fields that are not, and are not counted as zero */
@@ -76,6 +78,7 @@ export const statementSchema = z.object({
       name: z.string(),
       fields: z.number(),
       ranges: ledgerRangesSchema,
+      /** by covariance with the total; the shares of all basins add up to 1 */
       shareOfVariance: z.number(),
       condensateMeanStbByClass: z.record(z.enum(rankedClasses), z.number().nullable()),
     }),
