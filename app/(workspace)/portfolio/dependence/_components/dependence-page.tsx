@@ -1,0 +1,110 @@
+"use client";
+
+import { useSearchParams } from "next/navigation";
+import { errorWords } from "@/app/_client/request";
+import { useCan } from "@/app/_client/use-session";
+import { useDependenceSets } from "@/app/_workspace/use-dependence-sets";
+import type { DependenceSetView } from "@/app/api/v1/dependence-sets/schema";
+import { useBasis } from "@/components/basis/use-basis";
+import { Button, LinkButton } from "@/components/ui/button";
+import { Page, PageHead, Stack } from "@/components/ui/section";
+import { EmptyState, Notice, Skeleton } from "@/components/ui/status";
+import { useBasins, useBookFields, useSetTotals } from "../_queries/dependence";
+import { RankMeaning } from "./rank-meaning";
+import { basinRankWords } from "./rank-words";
+import { SetEditor } from "./set-editor";
+import { SetReadingView } from "./set-reading";
+import { SetsTable } from "./sets-table";
+
+/** The named answers to how fields move together: what each says, what it does to the total, and its editor. */
+export function DependencePage() {
+  const { basis, withBasis } = useBasis();
+  const can = useCan();
+  const search = useSearchParams();
+  const { data: sets, error, refetch } = useDependenceSets();
+  const { data: basins } = useBasins();
+  const { data: fields } = useBookFields();
+  const totals = useSetTotals(basis, sets ?? []);
+  const crumbs = [{ label: "Portfolio", href: withBasis("/portfolio") }, { label: "Dependence" }];
+
+  if (!sets || !basins || !fields) {
+    return (
+      <Page>
+        <PageHead title="How fields move together" crumbs={crumbs} />
+        {error ? (
+          <Notice
+            tone="error"
+            title={errorWords(error)}
+            actions={
+              <Button size="small" onClick={() => void refetch()}>
+                Try again
+              </Button>
+            }
+          >
+            The sets are kept; only this page could not be read.
+          </Notice>
+        ) : (
+          <Skeleton lines={10} label="Loading the dependence sets" />
+        )}
+      </Page>
+    );
+  }
+
+  const wanted = search.get("set");
+  const mayEdit = can("dependenceSet.update");
+  const isNew = wanted === "new" && can("dependenceSet.create");
+  const inUse = sets.find(({ id, isDefault }) =>
+    basis.dependence === "default" ? isDefault : id === basis.dependence,
+  );
+  const chosen = sets.find(({ id }) => id === wanted) ?? inUse ?? sets[0];
+  const context = { sets, basins, fields, totals };
+  return (
+    <Page>
+      <PageHead
+        title={titleOf(sets, basins)}
+        crumbs={crumbs}
+        lead="Reservoirs that share a source rock, a survey or a plant tend to disappoint together. The more they do, the wider the total and the lower its P90. Means do not change."
+        actions={
+          can("dependenceSet.create") && (
+            <LinkButton
+              kind="primary"
+              icon="plus"
+              href={withBasis("/portfolio/dependence?set=new")}
+              scroll={false}
+            >
+              New set
+            </LinkButton>
+          )
+        }
+      />
+      <Stack>
+        {sets.length === 0 ? (
+          <EmptyState title="There is no dependence set yet">
+            Until a planner makes one, totals treat reservoirs as independent of each other.
+          </EmptyState>
+        ) : (
+          <SetsTable {...context} chosenId={isNew ? null : (chosen?.id ?? null)} inUse={inUse} />
+        )}
+        {isNew ? (
+          <SetEditor key="new" {...context} set={null} />
+        ) : (
+          chosen &&
+          (mayEdit ? (
+            // Another set is another form; what was typed stays while the set does.
+            <SetEditor key={chosen.id} {...context} set={chosen} />
+          ) : (
+            <SetReadingView set={chosen} basins={basins} fields={fields} />
+          ))
+        )}
+        <RankMeaning />
+      </Stack>
+    </Page>
+  );
+}
+
+function titleOf(sets: readonly DependenceSetView[], basins: readonly { id: string }[]): string {
+  const standing = sets.find(({ isDefault }) => isDefault);
+  if (!standing) return "How fields move together";
+  const ids = basins.map(({ id }) => id);
+  return `Totals stand on “${standing.name}”: rank correlation ${basinRankWords(standing.dependence, ids)} within a basin`;
+}
