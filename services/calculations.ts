@@ -8,6 +8,10 @@ import { recombine, wellstreamGravityAtYield, yieldConstants } from "@/analytics
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import { gasProperties, type GasProperties } from "@/analytics/gas/gas-properties";
 import { pseudocritical } from "@/analytics/gas/pseudocritical";
+import {
+  checkCorrelations,
+  type CorrelationCheck,
+} from "@/analytics/uncertainty/check-correlations";
 import { describeFit } from "@/analytics/uncertainty/describe-fit";
 import {
   compileDistribution,
@@ -24,9 +28,14 @@ import {
 import { inPlace } from "@/analytics/volumetrics/in-place";
 import { checkInputs } from "@/analytics/volumetrics/check-inputs";
 import { extremeConditionWarnings } from "@/analytics/volumetrics/extreme-conditions";
-import type { EstimateInputs, InputName } from "@/analytics/volumetrics/inputs-schema";
+import {
+  inputNames,
+  type EstimateInputs,
+  type InputName,
+} from "@/analytics/volumetrics/inputs-schema";
 import { compileInput } from "@/analytics/volumetrics/prepare-inputs";
 import type { SimulationSummary } from "@/analytics/volumetrics/results-schema";
+import { usualRanges } from "@/analytics/volumetrics/usual-ranges";
 import { wellstreamRates, type MeteredRate } from "@/analytics/volumetrics/rates";
 import type { Warning } from "@/analytics/warnings";
 import { runSimulation, type ComputeOptions } from "./compute/pool";
@@ -200,6 +209,15 @@ function figuresOf({ definition, range, mean, standardDeviation, support, lostMa
     lostMass,
     fit: describeFit(definition),
   };
+}
+
+/** Whether rank correlations are possible together, and the nearest that are. */
+export function calculateCorrelations({
+  correlations,
+}: Pick<EstimateInputs, "correlations">): CorrelationCheck<InputName> {
+  return refuseImpossible("", () =>
+    checkCorrelations(inputNames, correlations, (name) => usualRanges[name].label),
+  );
 }
 
 const finiteOrNull = (value: number) => (Number.isFinite(value) ? value : null);
