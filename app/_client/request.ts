@@ -18,6 +18,8 @@ export class ProblemError extends Error {
     /** the row as it is now, when somebody else saved first (412) */
     readonly current: unknown = undefined,
     readonly requestId: string | undefined = undefined,
+    /** of what is in the way already, when it has an address (409) */
+    readonly existingId: string | undefined = undefined,
   ) {
     super(detail);
   }
@@ -99,6 +101,7 @@ async function problemOf(response: Response): Promise<ProblemError> {
     detail?: string;
     errors?: ProblemAt[];
     current?: unknown;
+    existingId?: string;
   };
   return new ProblemError(
     response.status,
@@ -107,6 +110,7 @@ async function problemOf(response: Response): Promise<ProblemError> {
     problem.errors ?? [],
     problem.current,
     requestId,
+    problem.existingId,
   );
 }
 

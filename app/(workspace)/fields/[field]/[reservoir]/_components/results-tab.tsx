@@ -1,11 +1,20 @@
 "use client";
 
+import { useState } from "react";
 import { recoveryRouteLabels } from "@/analytics/recovery/recovery-curve-schema";
 import type { ResultName } from "@/analytics/volumetrics/results-schema";
-import { Drivers } from "@/components/estimate/drivers";
+import { chanceOf } from "@/components/charts/exceedance-curve";
 import { ExceedanceSection } from "@/components/estimate/exceedance-section";
 import { HistogramSection } from "@/components/estimate/histogram-section";
+import {
+  deterministicWords,
+  swansonFinding,
+  swansonReason,
+} from "@/components/estimate/moment-findings";
+import { MomentsTable } from "@/components/estimate/moments-table";
 import { conceptLabels } from "@/components/estimate/plan-words";
+import { PrecisionTable } from "@/components/estimate/precision-table";
+import { errorWords, precisionFinding, runWords } from "@/components/estimate/precision-words";
 import { resultGroups, resultFactor, resultUnit } from "@/components/estimate/result-rows";
 import { ResultTable } from "@/components/estimate/result-table";
 import { PlaceBar, PlaceKey } from "@/components/recovery/concept-bars";
@@ -15,11 +24,15 @@ import { EmptyState, Skeleton } from "@/components/ui/status";
 import { LedgerTable, FigureCell } from "@/components/ui/table";
 import { formatDate, formatPercent, fractionDigits } from "@/components/ui/format";
 import { useReservoir } from "../_editor/reservoir-context";
+import { ConditionalSection } from "./conditional-section";
 import { derivedRows } from "./derived-rows";
+import { DriversSection } from "./drivers-section";
+import { SettlePanel } from "./settle-panel";
 
 /** Everything a run gives, with the errors of its sampling. */
 export function ResultsTab() {
   const { results, resultBasis, before, shown, place, draft } = useReservoir();
+  const [result, setResult] = useState<ResultName>("condensateRecoverableStb");
   const { summary } = results;
   if (!summary) {
     return draft?.reading.estimate ? (
@@ -53,6 +66,7 @@ export function ResultsTab() {
           <DerivedTable />
         </Section>
       </Columns>
+      <MomentsSection />
       <Columns kind="equal">
         <ExceedanceSection
           summary={summary}
@@ -61,9 +75,6 @@ export function ResultsTab() {
           basis={resultBasis}
           place={placeName}
         />
-        <Drivers summary={summary} basis={resultBasis} />
-      </Columns>
-      <Columns kind="equal">
         <ExceedanceSection
           summary={summary}
           label={label}
@@ -73,7 +84,6 @@ export function ResultsTab() {
           name="Sales gas"
           place={placeName}
         />
-        <Drivers summary={summary} basis={resultBasis} result="wetGasInPlaceScf" />
       </Columns>
       <Columns kind="equal">
         <HistogramSection
@@ -91,6 +101,8 @@ export function ResultsTab() {
           place={placeName}
         />
       </Columns>
+      <DriversSection result={result} onResult={setResult} />
+      <ConditionalSection key={result} result={result} />
       <RecoverySection />
       <SamplingSection />
     </Stack>
@@ -162,65 +174,42 @@ function RecoverySection() {
   );
 }
 
-const sampled: { name: ResultName; label: string }[] = [
-  { name: "wetGasInPlaceScf", label: "Wet gas in place" },
-  { name: "salesGasScf", label: "Sales gas" },
-  { name: "condensateInPlaceStb", label: "Condensate in place" },
-  { name: "condensateRecoverableStb", label: "Condensate to the tank" },
-];
+/** What stands for the range as one figure, and why the usual short cuts differ from the mean. */
+function MomentsSection() {
+  const { results, resultBasis } = useReservoir();
+  const { summary } = results;
+  if (!summary) return null;
+  const name = "condensateRecoverableStb";
+  const quantity = summary.results[name];
+  const factor = resultFactor(name, resultBasis);
+  const unit = resultUnit(name, resultBasis);
+  const chance = chanceOf(quantity.exceedance, summary.deterministic[name]);
+  return (
+    <Section
+      title={swansonFinding(quantity, factor, unit)}
+      note={`Condensate to the tank. ${swansonReason(quantity)} ${deterministicWords(summary.deterministic[name], chance, factor, unit)}`}
+    >
+      <MomentsTable summary={summary} basis={resultBasis} />
+    </Section>
+  );
+}
 
-/** How well the trials know the percentiles, and what made them. */
+/** How well the trials know the percentiles, what made them, and running on until they are known well enough. */
 function SamplingSection() {
   const { results, resultBasis, shown } = useReservoir();
   const { summary } = results;
   if (!summary) return null;
-  const { condensateRecoverableStb: headline } = summary.results;
-  const worst = Math.max(
-    headline.standardErrors.p90 / headline.p90,
-    headline.standardErrors.p10 / headline.p10,
-  );
+  const at =
+    shown?.computedAt && results.isFull ? `, run ${formatDate(shown.computedAt, "time")} UTC` : "";
   return (
-    <Section
-      title={`${summary.trials.toLocaleString("en-US")} trials know the ends to within ${(worst * 100).toFixed(1)} %`}
-      note={`One standard error of sampling, for condensate to the tank. Latin hypercube, seed ${summary.seed}, engine ${summary.engineVersion}${shown?.computedAt && results.isFull ? `, run ${formatDate(shown.computedAt, "time")} UTC` : ""}.`}
-    >
-      <LedgerTable caption="Sampling errors and moments">
-        <thead>
-          <tr>
-            <th scope="col">Quantity</th>
-            {["Mean", "Standard deviation", "Error of P90", "Error of P50", "Error of P10"].map(
-              (heading) => (
-                <th key={heading} scope="col" className="right">
-                  {heading}
-                </th>
-              ),
-            )}
-            <th scope="col" className="right">
-              All at P50
-            </th>
-          </tr>
-        </thead>
-        <tbody>
-          {sampled.map(({ name, label }) => {
-            const quantity = summary.results[name];
-            const factor = resultFactor(name, resultBasis);
-            const { standardErrors } = quantity;
-            return (
-              <tr key={name}>
-                <th scope="row" className="plain">
-                  {label} <span className="unit">{resultUnit(name, resultBasis)}</span>
-                </th>
-                <FigureCell value={quantity.mean * factor} strong />
-                <FigureCell value={quantity.standardDeviation * factor} />
-                <FigureCell value={standardErrors.p90 * factor} digits={2} />
-                <FigureCell value={standardErrors.p50 * factor} digits={2} />
-                <FigureCell value={standardErrors.p10 * factor} digits={2} />
-                <FigureCell value={summary.deterministic[name] * factor} soft />
-              </tr>
-            );
-          })}
-        </tbody>
-      </LedgerTable>
-    </Section>
+    <Columns kind="equal">
+      <Section
+        title={precisionFinding(summary)}
+        note={`One standard error of sampling. ${runWords(summary)}${at}. ${errorWords(summary)}`}
+      >
+        <PrecisionTable summary={summary} basis={resultBasis} />
+      </Section>
+      <SettlePanel />
+    </Columns>
   );
 }
