@@ -7,7 +7,12 @@ export const producingConcepts = ["depletion", "compression", "cycling"] as cons
 export type ProducingConcept = (typeof producingConcepts)[number];
 
 const uncertain = z
-  .object({ distribution: distributionSchema, source: z.string().max(500).default("") })
+  .object({
+    distribution: distributionSchema,
+    source: z.string().max(500).default(""),
+    /** why this range and not another, in the expert's words */
+    reason: z.string().max(2_000).optional(),
+  })
   .strict();
 
 /** Water entering or gas being trapped behind it: simple options, stated. `none` is a closed volume. */

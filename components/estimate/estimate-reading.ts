@@ -10,6 +10,7 @@ import type { Warning } from "@/analytics/warnings";
 import { isWorkedOut, mapInputs, NOT_TYPED, type EstimateText } from "./estimate-text";
 import { inputOfPath } from "./input-catalogue";
 import { placeProblem, readInput, type InputReading } from "./input-reading";
+import { saidOf } from "./input-text";
 import { readPlan, type PlanReading } from "./plan-reading";
 
 /** What all fields read as. */
@@ -57,7 +58,7 @@ export function readEstimate(text: EstimateText): EstimateReading {
     schemaVersion: 1,
     uncertain: mapInputs((name) => ({
       distribution: inputs[name].distribution ?? NOT_TYPED,
-      source: text.inputs[name].source.trim(),
+      ...saidOf(text.inputs[name]),
     })),
     correlations: text.correlations.map((pair) => ({ ...pair })),
     fluid: text.fluid,
@@ -70,7 +71,7 @@ export function readEstimate(text: EstimateText): EstimateReading {
     if (!(error instanceof DomainError)) throw error;
     const name = inputNames.find((candidate) => candidate === inputOfPath(error.details.input));
     if (!name) return { ...partial, problem: error.message };
-    const placed = placeProblem(inputs[name].fields, error, text.inputs[name].kind);
+    const placed = placeProblem(inputs[name].fields, error, text.inputs[name]);
     return {
       ...partial,
       impossible: [name],

@@ -11,7 +11,7 @@ import {
   type InputName,
 } from "@/analytics/volumetrics/inputs-schema";
 import type { DriverName } from "@/analytics/volumetrics/results-schema";
-import { startingBounds, textOfDistribution, type InputText } from "./input-text";
+import { startingBounds, textOfInput, type InputText } from "./input-text";
 import { textOfPlan, type PlanText } from "./plan-text";
 
 export interface Correlation {
@@ -55,9 +55,7 @@ export const isWorkedOut = (name: InputName) =>
 export function textOfInputs(inputs: EstimateInputs): EstimateText {
   return {
     inputs: mapInputs((name) =>
-      isNotTyped(inputs, name)
-        ? emptyInput(name)
-        : textOfDistribution(inputs.uncertain[name].distribution, inputs.uncertain[name].source),
+      isNotTyped(inputs, name) ? emptyInput(name) : textOfInput(inputs.uncertain[name]),
     ),
     correlations: inputs.correlations.map((pair) => ({ ...pair })),
     fluid: inputs.fluid,

@@ -3,19 +3,16 @@ import {
   compileDistribution,
   type CompiledDistribution,
 } from "@/analytics/uncertainty/distribution";
-import {
-  distributionSchema,
-  type Distribution,
-  type DistributionKind,
-} from "@/analytics/uncertainty/distribution-schema";
+import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
 import { compilePossible, type PossibleRange } from "@/analytics/uncertainty/possible-range";
 import type { InputName } from "@/analytics/volumetrics/inputs-schema";
 import type { DriverName } from "@/analytics/volumetrics/results-schema";
 import { usualRanges } from "@/analytics/volumetrics/usual-ranges";
-import { driverCatalogue } from "./input-catalogue";
-import { emptyFields, type InputText } from "./input-text";
-import { readField, readPlain, type FieldReading } from "./quantities-of-inputs";
-import { shapeOf } from "./shapes";
+import type { InputText } from "./input-text";
+import type { PastedCells } from "./pasted-cells";
+import type { FieldReading } from "./quantities-of-inputs";
+import { readDefinition } from "./range-reading";
+import { parametersOfShape } from "./shapes";
 
 /** A bound that leaves out what cannot be, for a curve that reaches past it. */
 export interface CutOff {
@@ -29,16 +26,16 @@ export interface InputReading {
   distribution: Distribution | null;
   /** also of a curve that reaches past what is possible, so that its figures can be seen and reshaped */
   compiled: CompiledDistribution | null;
-  /** by parameter key, and by `minimum` and `maximum` */
+  /** by path in the distribution, such as `low`, `points.1.value` or `minimum` */
   fields: Record<string, FieldReading>;
   /** why the figures make no distribution, when that is no single field's fault */
   problem: string | null;
   /** would make the input possible; `null` while it is, or while most of the curve is impossible */
   cutOff: CutOff | null;
   isComplete: boolean;
+  /** of pasted data; `null` for other shapes */
+  cells: PastedCells | null;
 }
-
-const EMPTY: FieldReading = { value: null, preview: null, problem: null };
 
 /** Reads the fields of one input: each by itself, then all of them as a distribution that the input can have. */
 export const readInput = (name: InputName, text: InputText): InputReading =>
@@ -50,37 +47,18 @@ export function readDistribution(
   text: InputText,
   range: PossibleRange,
 ): InputReading {
-  const { unit } = driverCatalogue[name];
-  const fields: Record<string, FieldReading> = {};
-  for (const { key, inUnit } of shapeOf(text.kind).parameters) {
-    fields[key] = readField(text.fields[key] ?? "", name, inUnit, unit);
-  }
-  const bounded = text.kind !== "constant";
-  fields.minimum = bounded ? readField(text.minimum, name, true, unit) : EMPTY;
-  fields.maximum = bounded ? readField(text.maximum, name, true, unit) : EMPTY;
-  if (name === "temperatureDegF" && text.kind === "normal") {
-    // A spread of temperatures has no zero to convert.
-    fields.standardDeviation = readPlain(text.fields.standardDeviation ?? "");
-  }
-
-  const isComplete = emptyFields(text).length === 0;
-  const readable = Object.values(fields).every((field) => field.problem === null);
-  if (!isComplete || !readable) {
-    const nothing = { distribution: null, compiled: null, problem: null, cutOff: null };
-    return { ...nothing, fields, isComplete };
-  }
-  return { ...compileReading(range, text, fields), isComplete };
+  const { definition, ...read } = readDefinition(name, text);
+  const nothing = { distribution: null, compiled: null, cutOff: null };
+  if (definition === null) return { ...nothing, ...read };
+  return { ...read, ...compileReading(range, text, definition, read.fields) };
 }
 
 function compileReading(
   range: PossibleRange,
   text: InputText,
+  distribution: Distribution,
   fields: Record<string, FieldReading>,
-): Omit<InputReading, "isComplete"> {
-  const values = Object.entries(fields).flatMap(([key, field]) =>
-    field.value === null ? [] : [[key, field.value] as const],
-  );
-  const distribution = distributionSchema.parse({ kind: text.kind, ...Object.fromEntries(values) });
+): Omit<InputReading, "isComplete" | "cells"> {
   let compiled: CompiledDistribution | null = null;
   try {
     compiled = compileDistribution(distribution);
@@ -91,8 +69,8 @@ function compileReading(
     return {
       distribution: null,
       compiled,
-      cutOff: compiled && cutOffOf(compiled, error),
-      ...placeProblem(fields, error, text.kind),
+      cutOff: compiled && distribution.kind !== "scenarios" ? cutOffOf(compiled, error) : null,
+      ...placeProblem(fields, error, text),
     };
   }
 }
@@ -115,16 +93,34 @@ function cutOffOf(compiled: CompiledDistribution, error: DomainError): CutOff | 
 export function placeProblem(
   fields: Record<string, FieldReading>,
   error: DomainError,
-  kind: DistributionKind,
+  text: InputText,
 ): Pick<InputReading, "fields" | "problem"> {
-  const named = error.details.input?.split(".").at(-1);
-  const isBound = named === "minimum" || named === "maximum";
-  const { parameters } = shapeOf(kind);
-  const end = named === "minimum" ? parameters.at(0) : parameters.at(-1);
-  const key = isBound && fields[named].value === null ? end?.key : named;
-  if (key === undefined || !(key in fields)) return { fields, problem: error.message };
+  const key = fieldOf(fields, error.details.input ?? "", text);
+  if (key === null) return { fields, problem: error.message };
   return {
     fields: { ...fields, [key]: { ...fields[key], problem: error.message } },
     problem: null,
   };
+}
+
+/** Key of the field that a path ends in; `null` when it names none that is on the screen. */
+function fieldOf(
+  fields: Record<string, FieldReading>,
+  path: string,
+  text: InputText,
+): string | null {
+  const [named] = Object.keys(fields)
+    .filter((key) => path === key || path.endsWith(`.${key}`))
+    .sort((a, b) => b.length - a.length);
+  if (named === undefined) return null;
+  const parts = named.split(".");
+  const bound = parts.at(-1);
+  const isHidden = (bound === "minimum" || bound === "maximum") && fields[named].value === null;
+  if (!isHidden) return named;
+  const [, index] = parts;
+  const range = parts[0] === "scenarios" ? text.cases?.cases[Number(index)].range : text;
+  if (!range) return null;
+  const parameters = parametersOfShape(range);
+  const end = bound === "minimum" ? parameters.at(0) : parameters.at(-1);
+  return end ? [...parts.slice(0, -1), end.key].join(".") : null;
 }

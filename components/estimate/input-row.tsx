@@ -4,16 +4,17 @@ import { densityCurve } from "@/analytics/uncertainty/distribution";
 import type { DriverName } from "@/analytics/volumetrics/results-schema";
 import type { Warning } from "@/analytics/warnings";
 import { DensityCurve } from "@/components/charts/density-curve";
-import { Menu } from "@/components/ui/choice";
-import { formatFigure, formatPercent, MISSING } from "@/components/ui/format";
-import { Icon } from "@/components/ui/icon";
+import { formatFigure, MISSING } from "@/components/ui/format";
+import { hasBounds, InputBounds } from "./input-bounds";
 import { driverCatalogue, type InputDescription } from "./input-catalogue";
 import { InputNotes } from "./input-notes";
 import type { InputReading } from "./input-reading";
-import { withShape, type InputText } from "./input-text";
+import { InputShapeMenu } from "./input-shape-menu";
+import type { InputText } from "./input-text";
 import { typedFigure } from "./quantities-of-inputs";
 import { QuantityInput } from "./quantity-input";
-import { convertShape, shapeOf, shapes, type Slot } from "./shapes";
+import { withValues } from "./reshape";
+import { parametersOfShape, type Slot } from "./shapes";
 import { suspectUnit, type UnitSuspicion } from "./unit-suspicion";
 
 /** What is usual for an input, and what is possible. */
@@ -37,9 +38,6 @@ export interface InputRowProps {
   /** absent: the row is read, not typed */
   onChange?: (text: InputText) => void;
 }
-
-/** Bounds that cut away less than this are a safeguard, not a description. */
-const LEAST_LOST_MASS = 0.0005;
 
 const slots: Slot[] = ["low", "best", "high"];
 const percentileOf = { low: "p90", best: "p50", high: "p10" } as const;
@@ -71,12 +69,12 @@ export function InputRow({
     ? warnings.filter(({ code }) => code !== "unusual_value" && code !== "wide_range")
     : warnings;
   const hasNotes = problems.length > 0 || suspicion !== null || shown.length > 0;
-  const hasBounds = text.kind !== "constant" && (text.minimum !== "" || text.maximum !== "");
+  const showsBounds = hasBounds(text);
   const isFlagged = suspicion !== null || shown.length > 0;
 
   return (
     <>
-      <tr data-followed={hasNotes || hasBounds || undefined}>
+      <tr data-followed={hasNotes || showsBounds || undefined}>
         <td className="folio">{line}</td>
         <th scope="row">
           {about.label}
@@ -94,7 +92,11 @@ export function InputRow({
         </td>
         <td className="hint">
           <span className="hint-line">
-            <ShapeMenu {...{ about, name, expected, text, reading, onChange }} />
+            <InputShapeMenu
+              label={about.label}
+              possible={expected.possible}
+              {...{ name, text, reading, onChange }}
+            />
             <span className="text-ink-soft">
               Usual {typedFigure(expected.usual[0])} to {typedFigure(expected.usual[1])}
             </span>
@@ -102,11 +104,11 @@ export function InputRow({
           <SourceLine label={about.label} text={text} onChange={onChange} />
         </td>
       </tr>
-      {hasBounds && (
+      {showsBounds && (
         <tr className="follow" data-followed={hasNotes || undefined}>
           <td className="folio" />
           <td colSpan={6}>
-            <Bounds {...{ about, text, reading, notesId, onChange }} />
+            <InputBounds {...{ about, text, reading, notesId, onChange }} />
           </td>
         </tr>
       )}
@@ -138,11 +140,6 @@ const describe = (name: DriverName, of: string | undefined): InputDescription =>
   return of ? { ...about, label: `${about.label}, ${of}` } : about;
 };
 
-function withValues(text: InputText, values: Record<string, number>): InputText {
-  const typed = Object.entries(values).map(([key, value]) => [key, typedFigure(value)]);
-  return { ...text, fields: { ...text.fields, ...Object.fromEntries(typed) } };
-}
-
 /** Only shapes whose figures are values of the input can be in another unit as a whole. */
 function suspicionOf(
   name: DriverName,
@@ -150,7 +147,7 @@ function suspicionOf(
   text: InputText,
   reading: InputReading,
 ): UnitSuspicion | null {
-  const { parameters } = shapeOf(text.kind);
+  const parameters = parametersOfShape(text);
   if (parameters.some(({ key, inUnit }) => !inUnit || key === "standardDeviation")) return null;
   const values = parameters.flatMap(({ key }) => {
     const value = reading.fields[key].value;
@@ -187,7 +184,7 @@ function SlotCell({
   notesId,
   onChange,
 }: CellProps) {
-  const parameter = shapeOf(text.kind).parameters.find((candidate) => candidate.slot === slot);
+  const parameter = parametersOfShape(text).find((candidate) => candidate.slot === slot);
   const percentile = reading.compiled?.range[percentileOf[slot]];
   if (!parameter || !onChange) {
     const typed = parameter && reading.fields[parameter.key].value;
@@ -257,109 +254,6 @@ function Curve({
       usual={{ low, high }}
       flagged={flagged}
     />
-  );
-}
-
-function ShapeMenu({
-  about,
-  name,
-  expected: { possible },
-  text,
-  reading,
-  onChange,
-}: Pick<CellProps, "about" | "name" | "text" | "reading" | "onChange"> & {
-  expected: ExpectedRange;
-}) {
-  const current = shapeOf(text.kind);
-  if (!onChange) return <b>{current.label}</b>;
-  const isBounded = text.minimum !== "" || text.maximum !== "";
-  return (
-    <Menu
-      button={
-        <>
-          {current.label}
-          <Icon name="chevron-down" size={9} />
-        </>
-      }
-      label={`Shape of ${about.label}: ${current.label}`}
-      buttonClassName="shape-button"
-      groups={[
-        {
-          heading: "Shape",
-          entries: shapes.map((shape) => ({
-            label: shape.label,
-            current: shape.kind === text.kind,
-            onSelect: () => onChange(reshaped(name, text, reading, shape.kind)),
-          })),
-        },
-        {
-          heading: "Bounds",
-          entries: [
-            {
-              label: isBounded ? "Take the bounds away" : "Cut off what cannot be",
-              note: isBounded ? undefined : "conditions the curve on lying inside",
-              disabled: text.kind === "constant",
-              onSelect: () =>
-                onChange({
-                  ...text,
-                  minimum: isBounded ? "" : typedFigure(possible[0]),
-                  maximum: isBounded || possible[1] === Infinity ? "" : typedFigure(possible[1]),
-                }),
-            },
-          ],
-        },
-      ]}
-    />
-  );
-}
-
-function reshaped(
-  name: DriverName,
-  text: InputText,
-  reading: InputReading,
-  kind: InputText["kind"],
-): InputText {
-  if (kind === text.kind) return text;
-  const next = withShape(name, text, kind);
-  return reading.compiled ? withValues(next, convertShape(reading.compiled.quantile, kind)) : next;
-}
-
-function Bounds({
-  about: { label, unit },
-  text,
-  reading,
-  notesId,
-  onChange,
-}: Pick<CellProps, "about" | "text" | "reading" | "notesId" | "onChange">) {
-  if (!onChange) {
-    return (
-      <p className="bounds">
-        Cut off {text.minimum !== "" && `below ${text.minimum} `}
-        {text.maximum !== "" && `above ${text.maximum}`}
-      </p>
-    );
-  }
-  return (
-    <div className="bounds">
-      {(["minimum", "maximum"] as const).map((key) => (
-        <span key={key} className="flex items-center gap-1.5">
-          {key === "minimum" ? "Not below" : "Not above"}
-          <QuantityInput
-            label={`${label}, ${key === "minimum" ? "not below" : "not above"}`}
-            value={text[key]}
-            unit={unit}
-            reading={reading.fields[key]}
-            describedBy={notesId}
-            onChange={(value) => onChange({ ...text, [key]: value })}
-          />
-        </span>
-      ))}
-      {reading.compiled && reading.compiled.lostMass >= LEAST_LOST_MASS && (
-        <span>
-          Cuts away {formatPercent(reading.compiled.lostMass, { decimals: 1 })} of the curve
-        </span>
-      )}
-    </div>
   );
 }
 

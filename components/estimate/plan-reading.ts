@@ -9,6 +9,7 @@ import {
 import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
 import { planInputsOf } from "./input-catalogue";
 import { placeProblem, readDistribution, type InputReading } from "./input-reading";
+import { saidOf } from "./input-text";
 import {
   hasInflux,
   optionalPlanFields,
@@ -120,7 +121,7 @@ export function mapPlanInputs<Value>(
 function planOf(text: PlanText, { inputs, fields }: Pick<PlanReading, "inputs" | "fields">) {
   const input = (name: PlanInputName) => ({
     distribution: inputs[name].distribution as Distribution,
-    source: text.inputs[name].source.trim(),
+    ...saidOf(text.inputs[name]),
   });
   const value = (name: PlanFieldName) => fields[name].value as number;
   const plan: RecoveryPlan = {
@@ -169,7 +170,7 @@ function placed(
   const name = reading.used.find((candidate) => path.startsWith(planPaths[candidate]));
   if (!name) return { problem: error.message };
   const { inputs } = reading;
-  const at = placeProblem(inputs[name].fields, error, text.inputs[name].kind);
+  const at = placeProblem(inputs[name].fields, error, text.inputs[name]);
   return {
     inputs: { ...inputs, [name]: { ...inputs[name], ...at, distribution: null } },
     impossible: [name],

@@ -5,7 +5,7 @@ import type {
   ProducingConcept,
   RecoveryPlan,
 } from "@/analytics/recovery/recovery-plan-schema";
-import { startingBounds, textOfDistribution, type InputText } from "./input-text";
+import { startingBounds, textOfInput, type InputText } from "./input-text";
 import { typedFigure } from "./quantities-of-inputs";
 
 /** Single figures of a plan, in the order in which screens list them. */
@@ -47,7 +47,7 @@ export function textOfPlan(plan: RecoveryPlan): PlanText {
   const typed = (
     name: PlanInputName,
     input: RecoveryPlan["abandonmentPressurePsia"] | undefined,
-  ) => (input ? textOfDistribution(input.distribution, input.source) : emptyInput(name));
+  ) => (input ? textOfInput(input) : emptyInput(name));
   const written = (value: number | undefined) => (value === undefined ? "" : typedFigure(value));
   const influx = waterDrive.kind === "influx" ? waterDrive : undefined;
   return {
