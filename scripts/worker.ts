@@ -1,17 +1,36 @@
 /**
- * The process that does queued work. Start as many as the work needs; each takes one job of a kind
- * at a time. SIGTERM lets the work in hand finish.
+ * The process that does queued work. Start as many as the work needs, on as many machines; each takes one job of a kind
+ * at a time, and as many lanes of runs as keep its threads busy. SIGTERM gives items of runs back at once and lets
+ * other work in hand finish.
  */
+import { availableParallelism } from "node:os";
 import process from "node:process";
 import { sequelize } from "../models/sequelize";
+import { closePool } from "../services/compute/pool";
+import { isDatabaseAway } from "../services/database-errors";
 import { env } from "../services/env";
 import { log } from "../services/log";
-import { handlers } from "../services/queue/handlers";
+import { handlersOf } from "../services/queue/handlers";
 import { workOn } from "../services/queue/queue";
+import { RunWorker } from "../services/runs/run-worker";
 
 env();
-const work = await workOn(handlers);
-log.info("worker ready");
+// The queue does not wait for its own notes of jobs that ended. A database that is away is no reason to end with it.
+process.on("unhandledRejection", (error) => {
+  if (isDatabaseAway(error)) {
+    log.warn({ err: error }, "the database is away");
+    return;
+  }
+  log.fatal({ err: error }, "worker fails");
+  process.exit(1);
+});
+
+const runs = new RunWorker();
+// One lane more than there are calculation threads, which have work then while one lane stores its result.
+const lanes = Math.max(2, availableParallelism());
+const work = await workOn(handlersOf(runs), { "work-on-run": lanes });
+runs.start();
+log.info({ worker: runs.name, lanes }, "worker ready");
 // Tells the program that started this one, if it listens.
 process.send?.("ready");
 
@@ -22,8 +41,10 @@ for (const event of ["SIGTERM", "SIGINT", "disconnect"] as const) {
     if (stopping) return;
     stopping = true;
     log.info({ event }, "worker stops");
-    work
+    runs
       .stop()
+      .then(() => work.stop())
+      .then(() => closePool())
       .then(() => sequelize.close())
       .then(
         () => process.exit(0),

@@ -20,10 +20,14 @@ export class NotFoundError extends Error {
 export class ConflictError extends Error {
   override readonly name = "ConflictError";
 
-  /** @param code  stable, for programs; the message is for people */
+  /**
+   * @param code  stable, for programs; the message is for people
+   * @param existingId  of what is in the way, when it has an address
+   */
   constructor(
     message: string,
     readonly code: string = "conflict",
+    readonly existingId?: string,
   ) {
     super(message);
   }

@@ -26,6 +26,8 @@ export interface Problem {
   /** of a stale write: the version the request was about, and the row as it is now */
   expectedVersion?: number;
   current?: unknown;
+  /** of a conflict: what is in the way already */
+  existingId?: string;
 }
 
 interface Origin {
@@ -66,7 +68,7 @@ const faultStatus: Record<RequestFault, number> = {
 
 type Description = Pick<
   Problem,
-  "status" | "code" | "detail" | "errors" | "expectedVersion" | "current"
+  "status" | "code" | "detail" | "errors" | "expectedVersion" | "current" | "existingId"
 >;
 
 function describe(error: unknown, origin: Origin): Description {
@@ -100,7 +102,8 @@ function describe(error: unknown, origin: Origin): Description {
     return { status: 403, code: error.code, detail: error.message };
   }
   if (error instanceof ConflictError) {
-    return { status: 409, code: error.code, detail: error.message };
+    const { code, message, existingId } = error;
+    return { status: 409, code, detail: message, ...(existingId && { existingId }) };
   }
   if (error instanceof StaleVersionError) {
     return {

@@ -108,21 +108,11 @@ export async function listCurrentEstimates(
   });
 }
 
-/** Of these estimates, those that exist, and whether each has its results. */
-export async function listComputedFlags(
-  ids: readonly string[],
-): Promise<{ id: string; computed: boolean }[]> {
-  const rows = await Estimate.findAll({
-    attributes: ["id", "computedAt"],
-    where: { id: { [Op.in]: [...ids] } },
-  });
-  return rows.map((row) => ({ id: row.id, computed: row.computedAt !== null }));
-}
-
-/** Write how far the runs of an import are, without touching its version of anything else. */
+/** Write how far an import is, without touching anything else of it. */
 export async function recordImportProgress(
   id: string,
-  values: Partial<Pick<Import, "progress" | "state" | "report">> & { updatedAt: Date },
+  values: Partial<Pick<Import, "progress" | "state">> & { updatedAt: Date },
+  options: { transaction: Transaction },
 ): Promise<void> {
-  await Import.update(values, { where: { id } });
+  await Import.update(values, { where: { id }, ...options });
 }

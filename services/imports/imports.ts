@@ -5,7 +5,6 @@ import {
   findAppliedTwin,
   findImport,
   findImportWithCreator,
-  listComputedFlags,
   listImportsPage,
   lockImports,
 } from "@/models/queries/imports";
@@ -14,7 +13,8 @@ import { now, today } from "../clock";
 import { ConflictError, ForbiddenError, NotFoundError } from "../errors";
 import { toPage, type Page, type PageRequest } from "../paging";
 import { authorise, can, type Actor } from "../policy";
-import { enqueue } from "../queue/queue";
+import { createImportRun } from "../runs/create-run";
+import { runOfImport, type ImportRun } from "../runs/imports";
 import { findObject, putObject } from "../storage/storage";
 import { inTransaction } from "../transaction";
 import { Applier } from "./apply";
@@ -36,17 +36,9 @@ export interface ImportFile {
   row: Import;
   report: ImportReport;
   sameFileAs: Import | null;
-  runs: RunProgress;
+  /** null until rows are taken, and when none of them had to be run */
+  run: ImportRun | null;
 }
-
-export interface RunProgress {
-  total: number;
-  done: number;
-  waiting: boolean;
-}
-
-/** Runs that have not moved for this long are called waiting: the worker is away, or busy with other work. */
-const WAITING_AFTER_MS = 15_000;
 
 export async function listImports(actor: Actor, page: PageRequest): Promise<Page<Import>> {
   authorise(actor, "import.read");
@@ -63,25 +55,11 @@ export async function getImport(actor: Actor, id: string): Promise<ImportFile> {
 
 async function withProgress(row: Import): Promise<ImportFile> {
   const report = importReportSchema.parse(row.report);
-  const [sameFileAs, runs] = await Promise.all([
+  const [sameFileAs, run] = await Promise.all([
     findAppliedTwin(row.sha256, row.id),
-    runProgress(row, report),
+    runOfImport(row.id),
   ]);
-  return { row, report, sameFileAs, runs };
-}
-
-/** Counted from the estimates themselves, so that it is right whoever ran them, and after any crash. */
-async function runProgress(row: Import, report: ImportReport): Promise<RunProgress> {
-  const ids = report.rows.flatMap(({ estimateId }) => (estimateId ? [estimateId] : []));
-  const open = (await listComputedFlags(ids)).filter(
-    ({ id, computed }) => !computed && !(id in report.failedRuns),
-  ).length;
-  const isOpen = row.state === "applying" && open > 0;
-  return {
-    total: ids.length,
-    done: ids.length - open,
-    waiting: isOpen && now().getTime() - row.updatedAt.getTime() > WAITING_AFTER_MS,
-  };
+  return { row, report, sameFileAs, run };
 }
 
 /** Who may change what besides estimates, for the plan. */
@@ -131,7 +109,6 @@ function reportOf(table: Table, rows: ReportRow[]): ImportReport {
     remarks: table.remarkLines.length,
     rows,
     taken: null,
-    failedRuns: {},
   };
 }
 
@@ -252,7 +229,8 @@ export async function commitImport(
 
     const counts = countsOf(rows);
     const rowsApplied = counts.rowsGood - counts.rowsUnchanged;
-    const hasRuns = rows.some(({ estimateId }) => estimateId !== null);
+    const estimateIds = rows.flatMap(({ estimateId }) => (estimateId ? [estimateId] : []));
+    const hasRuns = estimateIds.length > 0;
     const report = importReportSchema.parse(row.report);
     row.set({
       ...counts,
@@ -274,7 +252,8 @@ export async function commitImport(
       transaction,
     );
     if (hasRuns) {
-      await enqueue("run-estimates", { importId: id }, { transaction });
+      const { fileName } = row;
+      await createImportRun(actor, { importId: id, fileName, estimateIds }, transaction);
     }
   });
   return getImport(actor, id);

@@ -1,7 +1,7 @@
 import { z } from "zod";
 import { problemSchema } from "./problem";
 
-/** What is kept of an import beside the file itself: what each row would do, or did, and how the runs went. */
+/** What is kept of an import beside the file itself: what each row would do, or did. */
 
 export const rowActions = ["create", "revise", "unchanged", "refused"] as const;
 
@@ -35,8 +35,6 @@ export const importReportSchema = z.object({
   rows: z.array(reportRowSchema),
   /** what was taken when the import was carried out; `null` before */
   taken: z.enum(["all", "good"]).nullable(),
-  /** runs that ended in a refusal of the engine, by estimate */
-  failedRuns: z.record(z.string(), z.string()),
 });
 export type ImportReport = z.infer<typeof importReportSchema>;
 

@@ -12,10 +12,13 @@ export const jobs = {
     payload: mailMessage,
     options: { retryLimit: 12, retryDelay: 15, retryBackoff: true, expireInSeconds: 120 },
   },
-  /** Run the estimates that an import made. What was run stays run, so a retry goes on where it stopped. */
-  "run-estimates": {
-    payload: z.object({ importId: z.uuid() }),
-    options: { retryLimit: 5, retryDelay: 5, retryBackoff: true, expireInSeconds: 3600 },
+  /**
+   * One lane of a run: takes items one after the other until none is left to take. At most one job a lane waits; what a
+   * lane that died leaves behind is found again by its leases, so nothing is gained by trying the job itself again.
+   */
+  "work-on-run": {
+    payload: z.object({ runId: z.uuid(), lane: z.number().int().min(1) }),
+    options: { policy: "short", retryLimit: 0, expireInSeconds: 4 * 3600 },
   },
 } as const;
 

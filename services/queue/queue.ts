@@ -65,6 +65,25 @@ export async function enqueue<Name extends JobName>(
   return id;
 }
 
+/**
+ * Ask for a piece of work of which one may wait at a time: under a key that waits already, nothing is asked for. The
+ * job's queue has the policy `short`.
+ */
+export async function enqueueUnlessWaiting<Name extends JobName>(
+  name: Name,
+  payload: JobPayload<Name>,
+  key: string,
+  { transaction, priority = 0 }: { transaction?: Transaction; priority?: number } = {},
+): Promise<void> {
+  const data = jobs[name].payload.parse(payload);
+  const boss = await queue();
+  await boss.send(name, data, {
+    singletonKey: key,
+    priority,
+    ...(transaction === undefined ? {} : { db: within(transaction) }),
+  });
+}
+
 /** Lets the queue write through a transaction of ours. */
 function within(transaction: Transaction): PgBoss.Db {
   return {
@@ -80,12 +99,17 @@ function within(transaction: Transaction): PgBoss.Db {
 /**
  * Run jobs in this process until `stop` is called. `stop` lets the work in hand finish for at most
  * `patienceSeconds`; what is not finished then goes back to the queue.
+ *
+ * @param atOnce  how many jobs of a kind this process does at the same time; one unless said otherwise
  */
 export async function workOn(
   handlers: JobHandlers,
+  atOnce: Partial<Record<JobName, number>> = {},
 ): Promise<{ stop: (patienceSeconds?: number) => Promise<void> }> {
   const boss = await connect({ supervise: true });
-  for (const name of jobNames) await register(boss, name, handlers);
+  for (const name of jobNames) {
+    for (let nth = 0; nth < (atOnce[name] ?? 1); nth += 1) await register(boss, name, handlers);
+  }
   return {
     stop: (patienceSeconds = 20) =>
       boss.stop({ graceful: true, wait: true, timeout: patienceSeconds * 1000 }),

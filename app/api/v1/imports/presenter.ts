@@ -30,14 +30,14 @@ function isShown(row: ReportRow, show: RowKind): boolean {
 
 /** An import with one page of its rows. */
 export function presentImportFile(
-  { row, report, sameFileAs, runs }: ImportFile,
+  { row, report, sameFileAs, run }: ImportFile,
   actor: Actor,
   { show, limit, offset }: ImportQuery = { show: "all", limit: 50, offset: 0 },
 ): ImportDetail {
   const shown = report.rows.filter((reportRow) => isShown(reportRow, show));
   return {
     ...presentImport(row),
-    progress: runs.total === 0 ? row.progress : runs.done / runs.total,
+    progress: run ? run.ended / run.total : row.progress,
     delimiter: report.delimiter,
     encoding: report.encoding,
     problems: report.problems,
@@ -54,14 +54,16 @@ export function presentImportFile(
       createdBy: presentPerson(sameFileAs.creator),
     },
     mayCommit: row.state === "checked" && row.createdBy === actor.id,
-    runs: {
-      ...runs,
-      failed: report.rows.flatMap(({ line, field, reservoir, estimateId }) =>
-        estimateId !== null && estimateId in report.failedRuns
-          ? [{ line, reservoir: `${field}, ${reservoir}`, reason: report.failedRuns[estimateId] }]
-          : [],
-      ),
-    },
+    runs: presentRun(run, report.rows),
     rows: { items: shown.slice(offset, offset + limit), total: shown.length, limit, offset },
   };
+}
+
+function presentRun(run: ImportFile["run"], rows: readonly ReportRow[]): ImportDetail["runs"] {
+  if (run === null) return { id: null, total: 0, done: 0, failed: [], waiting: false };
+  const failed = rows.flatMap(({ line, field, reservoir, estimateId }) => {
+    const reason = estimateId === null ? undefined : run.failed.get(estimateId);
+    return reason === undefined ? [] : [{ line, reservoir: `${field}, ${reservoir}`, reason }];
+  });
+  return { id: run.id, total: run.total, done: run.ended, failed, waiting: run.stalled };
 }

@@ -59,6 +59,8 @@ export const importSchema = importSummarySchema.extend({
     .nullable(),
   mayCommit: z.boolean(),
   runs: z.object({
+    /** of the run that computes them; null while there is none */
+    id: z.uuid().nullable(),
     total: z.number().int(),
     done: z.number().int(),
     failed: z.array(

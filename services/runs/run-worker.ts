@@ -1,0 +1,225 @@
+import os from "node:os";
+import process from "node:process";
+import { setTimeout as sleep } from "node:timers/promises";
+import {
+  claimRunItem,
+  failExhaustedItems,
+  giveItemBack,
+  listOpenRuns,
+  lockLeasedItem,
+  markRunStarted,
+  renewLeases,
+  saveItemProgress,
+  type ClaimedItem,
+  type LeaseToken,
+} from "@/models/queries/run-leases";
+import { findRun } from "@/models/queries/runs";
+import type { Run } from "@/models/run";
+import type { RunStep } from "@/models/run-item";
+import { now } from "../clock";
+import { log } from "../log";
+import { inTransaction } from "../transaction";
+import { computeItem, endingOf, type Ending } from "./compute-item";
+import { finishRunIfDone } from "./finish-run";
+import { sendLane, sendLanes } from "./lanes";
+import { LatestOnly } from "./latest-only";
+import { isUnfinished } from "./overview";
+import { patiently } from "./patience";
+
+/** A worker that is not heard of for this long has lost what it was computing. */
+const LEASE_SECONDS = 30;
+/** Leases are renewed, and cancelled or lost items noticed, this often. */
+const BEAT_MS = 2_000;
+/** Runs that nobody works on, and items that nobody ends, are looked for this often. */
+const SWEEP_MS = 5_000;
+/** An item that brought its worker down, or failed without a reason of its own, is tried this often in all. */
+const MOST_ATTEMPTS = 3;
+/** After this long a lane lets other runs have its place, and waits for its next turn. */
+const SLICE_MS = 10_000;
+/** Progress is written at most this often. */
+const PROGRESS_MS = 500;
+
+const exhausted =
+  "The worker that computed this ended three times before it was done. It may need more memory than there is: try fewer trials.";
+const unforeseen = "Something went wrong here that is not the estimate's fault, three times. ";
+
+interface Held {
+  token: LeaseToken;
+  controller: AbortController;
+}
+
+class LeaseLost extends Error {
+  override readonly name = "LeaseLost";
+}
+class WorkerStops extends Error {
+  override readonly name = "WorkerStops";
+}
+
+/** Host and process: what a person needs to find it. */
+export function nameOfWorker(): string {
+  return `${os.hostname()}:${process.pid}`;
+}
+
+/**
+ * This process's part in runs. Workers know nothing of each other: each takes items under a lease and stores a result
+ * and the end of its item in one transaction, if the item is still its own. So every item is done once, whoever dies.
+ */
+export class RunWorker {
+  private readonly held = new Set<Held>();
+  private readonly stopping = new AbortController();
+  private readonly loops: Promise<void>[] = [];
+
+  constructor(readonly name: string = nameOfWorker()) {}
+
+  /** Begin to renew leases and to look after runs that nobody works on; those of a worker that died go on from here. */
+  start(): void {
+    this.loops.push(
+      this.every(BEAT_MS, () => this.beat()),
+      this.every(SWEEP_MS, () => this.sweep()),
+    );
+  }
+
+  /** Give everything in hand back at once, for other workers to take. */
+  async stop(): Promise<void> {
+    this.stopping.abort(new WorkerStops("the worker stops"));
+    for (const { controller } of this.held) controller.abort(this.stopping.signal.reason);
+    await Promise.all(this.loops);
+  }
+
+  /** One lane: takes items of a run until none can be taken, or it is another run's turn. */
+  async work({ runId, lane }: { runId: string; lane: number }): Promise<void> {
+    const { signal } = this.stopping;
+    const until = performance.now() + SLICE_MS;
+    try {
+      const run = await patiently(() => findRun(runId), signal);
+      if (!run || !isUnfinished(run)) return;
+      await patiently(() => markRunStarted(runId), signal);
+      for (;;) {
+        signal.throwIfAborted();
+        const item = await patiently(() => this.claim(runId), signal);
+        if (item === null) break;
+        await this.treat(run, item);
+        if (performance.now() > until) {
+          await patiently(() => sendLane(run, lane), signal);
+          return;
+        }
+      }
+      await patiently(() => finishRunIfDone(runId), signal);
+    } catch (error) {
+      if (!(error instanceof WorkerStops)) throw error;
+    }
+  }
+
+  private claim(runId: string): Promise<ClaimedItem | null> {
+    const limits = { leaseSeconds: LEASE_SECONDS, mostAttempts: MOST_ATTEMPTS };
+    return claimRunItem(runId, this.name, limits);
+  }
+
+  private async treat(run: Run, item: ClaimedItem): Promise<void> {
+    const { runId, position, worker, attempts } = item;
+    const token = { runId, position, worker, attempts };
+    const held: Held = { token, controller: new AbortController() };
+    const { signal } = held.controller;
+    if (this.stopping.signal.aborted) held.controller.abort(this.stopping.signal.reason);
+    this.held.add(held);
+    const progress = new LatestOnly<RunStep[]>(PROGRESS_MS, (steps) =>
+      saveItemProgress(token, steps),
+    );
+    try {
+      signal.throwIfAborted();
+      const onSteps = (steps: RunStep[]) => progress.offer(steps);
+      const ending = await patiently(() => computeItem(run, item, { signal, onSteps }), signal);
+      await progress.settled();
+      await patiently(() => this.end(token, ending), signal);
+    } catch (error) {
+      await progress.settled();
+      await this.afterFault(token, signal, error);
+    } finally {
+      this.held.delete(held);
+    }
+  }
+
+  /** Store what came of an item, with its results, in one transaction; nothing when the item is another's by now. */
+  private async end(token: LeaseToken, ending: Ending): Promise<void> {
+    try {
+      await this.write(token, ending);
+    } catch (error) {
+      // Somebody changed the estimate, or may no longer store, since it was read.
+      const instead = endingOf(error);
+      if (instead === null || ending.state !== "done") throw error;
+      await this.write(token, instead);
+    }
+  }
+
+  private async write(token: LeaseToken, ending: Ending): Promise<void> {
+    await inTransaction(async (transaction) => {
+      const item = await lockLeasedItem(token, transaction);
+      if (item === null) {
+        log.warn({ ...token }, "run item lost, its result dropped");
+        return;
+      }
+      if (ending.state === "done") await ending.store?.(transaction);
+      item.set({
+        state: ending.state,
+        leasedUntil: null,
+        finishedAt: now(),
+        ...(ending.state === "done"
+          ? { outcome: ending.outcome, progress: ending.steps }
+          : { reason: ending.reason }),
+      });
+      await item.save({ transaction });
+    });
+  }
+
+  private async afterFault(token: LeaseToken, signal: AbortSignal, error: unknown): Promise<void> {
+    const stops = signal.aborted && signal.reason instanceof WorkerStops;
+    if (signal.aborted && !stops) return;
+    try {
+      if (stops) {
+        await giveItemBack(token, { counted: false });
+        return;
+      }
+      log.error({ err: error, ...token }, "run item failed");
+      if (token.attempts < MOST_ATTEMPTS) {
+        await patiently(() => giveItemBack(token, { counted: true }), this.stopping.signal);
+        return;
+      }
+      const reason = unforeseen + (error instanceof Error ? error.message : String(error));
+      await patiently(() => this.write(token, { state: "failed", reason }), this.stopping.signal);
+    } catch (fault) {
+      // The lease ends by itself, and whoever takes the item then goes on from there.
+      log.warn({ err: fault, ...token }, "run item left to its lease");
+    }
+  }
+
+  private async beat(): Promise<void> {
+    // Only what was held before asking: an item that is taken meanwhile is not in the answer.
+    const asked = [...this.held];
+    if (asked.length === 0) return;
+    const own = new Set((await renewLeases(this.name, LEASE_SECONDS)).map(keyOf));
+    for (const { token, controller } of asked) {
+      if (!own.has(keyOf(token))) controller.abort(new LeaseLost("the item is no longer ours"));
+    }
+  }
+
+  private async sweep(): Promise<void> {
+    await failExhaustedItems(MOST_ATTEMPTS, exhausted);
+    for (const run of await listOpenRuns(MOST_ATTEMPTS)) {
+      if (run.open === 0) await finishRunIfDone(run.id);
+      else if (run.claimable > 0) await sendLanes(run, run.claimable);
+    }
+  }
+
+  private async every(ms: number, work: () => Promise<void>): Promise<void> {
+    const { signal } = this.stopping;
+    while (!signal.aborted) {
+      // A database that is away comes back; the next round does what this one could not.
+      await work().catch((error: unknown) => log.warn({ err: error }, "run worker"));
+      await sleep(ms, undefined, { signal }).catch(() => undefined);
+    }
+  }
+}
+
+function keyOf({ runId, position, attempts }: LeaseToken): string {
+  return `${runId}/${position}/${attempts}`;
+}
