@@ -8,7 +8,11 @@ import { ConvergenceError, DomainError } from "@/analytics/errors";
 import type { AlignmentOptions } from "@/analytics/portfolio/field-trials";
 import type { FieldFigures, Ledger } from "@/analytics/portfolio/ledger";
 import type { FieldPiece } from "@/analytics/portfolio/roll-up";
+import type { ChangeQuestion } from "@/analytics/sensitivity/explain-change";
+import type { SensitivityOptions } from "@/analytics/sensitivity/sensitivity";
+import type { ChangeExplanation, Sensitivity } from "@/analytics/sensitivity/sensitivity-schema";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
+import type { QuantitySummary, VectorName } from "@/analytics/volumetrics/results-schema";
 import type { Simulation, SimulationOptions } from "@/analytics/volumetrics/simulate";
 import type {
   SettledSimulation,
@@ -17,7 +21,15 @@ import type {
 } from "@/analytics/volumetrics/until-settled";
 import { ServiceBusyError } from "../errors";
 import type { FluidAnswer, FluidQuestion, FluidTask, FluidTaskName } from "../fluids/tasks";
-import type { AlignmentTask, LedgerTask, Outcome, SettleTask, SimulationTask } from "./worker";
+import type {
+  AlignmentTask,
+  LedgerTask,
+  Outcome,
+  SensitivityTask,
+  SettleTask,
+  SimulationTask,
+  SummaryTask,
+} from "./worker";
 
 /** Tasks that may wait for a thread. More would wait longer than anybody does, each with its inputs in memory. */
 export const MAXIMUM_QUEUE = 64;
@@ -63,6 +75,9 @@ export interface ComputeOptions {
 interface Tasks {
   simulate: SimulationTask;
   settle: SettleTask;
+  sensitivity: SensitivityTask;
+  change: ChangeQuestion;
+  summarise: SummaryTask;
   align: AlignmentTask;
   ledger: LedgerTask;
   fluid: FluidTask;
@@ -124,6 +139,45 @@ export async function runUntilSettled(
     here.close();
     there.close();
   }
+}
+
+/**
+ * `computeSensitivity` on a thread.
+ *
+ * @throws {DomainError} as `computeSensitivity`
+ * @throws {ServiceBusyError} when too many wait already
+ */
+export async function runSensitivity(
+  inputs: EstimateInputs,
+  options: SensitivityOptions,
+  { signal }: ComputeOptions = {},
+): Promise<Sensitivity> {
+  return run<Sensitivity>("sensitivity", { inputs, options }, { signal });
+}
+
+/**
+ * `explainChange` on a thread.
+ *
+ * @throws {DomainError} as `explainChange`
+ * @throws {ServiceBusyError} when too many wait already
+ */
+export async function runChange(
+  question: ChangeQuestion,
+  { signal }: ComputeOptions = {},
+): Promise<ChangeExplanation> {
+  return run<ChangeExplanation>("change", question, { signal });
+}
+
+/**
+ * Percentiles, moments and curve of each quantity of a field, on a thread, from trials that it shares with the caller.
+ *
+ * @throws {ServiceBusyError} when too many wait already
+ */
+export async function runFieldSummary(
+  task: SummaryTask,
+  { signal }: ComputeOptions = {},
+): Promise<Record<VectorName, QuantitySummary>> {
+  return run<Record<VectorName, QuantitySummary>>("summarise", task, { signal });
 }
 
 /** Some reservoirs of a field whose trials the caller shares with the thread. */

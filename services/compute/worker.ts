@@ -5,6 +5,7 @@
 import type { MessagePort } from "node:worker_threads";
 import { move, transferableSymbol, valueSymbol } from "piscina";
 import { ConvergenceError, DomainError } from "@/analytics/errors";
+import { summariseField } from "@/analytics/portfolio/field-summary";
 import { viewFieldTrials, type AlignmentOptions } from "@/analytics/portfolio/field-trials";
 import {
   computeLedger,
@@ -14,7 +15,11 @@ import {
   type LedgerOptions,
 } from "@/analytics/portfolio/ledger";
 import { alignPieces, type FieldPiece } from "@/analytics/portfolio/roll-up";
+import { explainChange, type ChangeQuestion } from "@/analytics/sensitivity/explain-change";
+import { computeSensitivity, type SensitivityOptions } from "@/analytics/sensitivity/sensitivity";
+import type { ChangeExplanation, Sensitivity } from "@/analytics/sensitivity/sensitivity-schema";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
+import type { QuantitySummary, VectorName } from "@/analytics/volumetrics/results-schema";
 import {
   DEFAULT_TRIALS,
   simulate as simulateReservoir,
@@ -39,6 +44,17 @@ export interface SettleTask {
   options: Omit<SettleOptions, "onStep">;
   /** each step is posted here */
   progress: MessagePort;
+}
+
+export interface SensitivityTask {
+  inputs: EstimateInputs;
+  options: SensitivityOptions;
+}
+
+export interface SummaryTask {
+  /** a field's trials in the order of the portfolio, shared */
+  buffer: SharedArrayBuffer;
+  trials: number;
 }
 
 export interface AlignmentTask {
@@ -92,6 +108,30 @@ export function settle({ inputs, options, progress }: SettleTask) {
     },
     ({ simulation }) =>
       Object.values(simulation.vectors).map(({ buffer }) => buffer as ArrayBuffer),
+  );
+}
+
+/** What drives one result of an estimate. */
+export function sensitivity({ inputs, options }: SensitivityTask) {
+  return answer<Sensitivity>(
+    () => computeSensitivity(inputs, options),
+    () => [],
+  );
+}
+
+/** How much each difference between two estimates explains. */
+export function change(question: ChangeQuestion) {
+  return answer<ChangeExplanation>(
+    () => explainChange(question),
+    () => [],
+  );
+}
+
+/** What a field's trials come to. */
+export function summarise({ buffer, trials }: SummaryTask) {
+  return answer<Record<VectorName, QuantitySummary>>(
+    () => summariseField(viewFieldTrials(buffer, trials)),
+    () => [],
   );
 }
 

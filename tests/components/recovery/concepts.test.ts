@@ -2,6 +2,11 @@ import { describe, expect, it } from "vitest";
 import { compareConcepts, type ConceptResult } from "@/analytics/recovery/compare-concepts";
 import { recoveryRoutes, type RecoveryRoute } from "@/analytics/recovery/recovery-curve-schema";
 import { producingConcepts } from "@/analytics/recovery/recovery-plan-schema";
+import {
+  planForConcept,
+  startingPlan,
+  type ConceptStart,
+} from "@/analytics/recovery/starting-plan";
 import { readPlan } from "@/components/estimate/plan-reading";
 import { textOfPlan } from "@/components/estimate/plan-text";
 import {
@@ -9,9 +14,7 @@ import {
   editsOfPlan,
   isEdited,
   noEdits,
-  startingPlan,
   withEdit,
-  type ConceptStart,
 } from "@/components/recovery/concept-assumptions";
 import { conceptFinding, gasBalanceFinding } from "@/components/recovery/concept-findings";
 import { warningsByConcept } from "@/components/recovery/concept-warnings";
@@ -26,6 +29,31 @@ const start: ConceptStart = {
   depthFt: 12_500,
   criticalSaturation: { low: 0.1, high: 0.2 },
 };
+
+describe("planForConcept(concept, plan, start)", () => {
+  const plan = {
+    ...startingPlan("cycling", start),
+    condensateCurveFactor: {
+      distribution: { kind: "constant", value: 1.1 } as const,
+      source: "A/1",
+    },
+  };
+
+  it("leaves a plan alone that has the concept already", () => {
+    expect(planForConcept("cycling", plan, start)).toBe(plan);
+  });
+
+  it("starts from the concept's own abandonment pressure and keeps the rest", () => {
+    const compressed = planForConcept("compression", plan, start);
+    expect(compressed).toEqual({
+      ...startingPlan("compression", start),
+      condensateCurveFactor: plan.condensateCurveFactor,
+    });
+    expect(planForConcept("cycling", compressed, start).cycling).toEqual(
+      startingPlan("cycling", start).cycling,
+    );
+  });
+});
 
 describe("startingPlan(concept, start)", () => {
   it("starts with plans that can be, for deep and shallow reservoirs and for ones that begin saturated", () => {

@@ -1,12 +1,12 @@
 import { renderToStaticMarkup } from "react-dom/server";
 import { describe, expect, it } from "vitest";
+import { startingPlan } from "@/analytics/recovery/starting-plan";
 import { simulate } from "@/analytics/volumetrics/simulate";
 import { resultGroups } from "@/components/estimate/result-rows";
 import { ResultTable } from "@/components/estimate/result-table";
 import { RouteFlag } from "@/components/estimate/route-flag";
 import { PlaceBar } from "@/components/recovery/concept-bars";
 import { PhaseTable } from "@/components/recovery/phase-table";
-import { startingPlan } from "@/components/recovery/concept-assumptions";
 import { publishedCurve } from "../../analytics/recovery/published-curve";
 import { buildInputs } from "../../analytics/volumetrics/estimate-inputs";
 

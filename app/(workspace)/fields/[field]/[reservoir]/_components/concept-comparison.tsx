@@ -6,6 +6,7 @@ import {
   producingConcepts,
   type ProducingConcept,
 } from "@/analytics/recovery/recovery-plan-schema";
+import type { ConceptStart } from "@/analytics/recovery/starting-plan";
 import { errorWords } from "@/app/_client/request";
 import { ChartFrame } from "@/components/charts/chart-frame";
 import { readEstimate } from "@/components/estimate/estimate-reading";
@@ -24,7 +25,6 @@ import {
   noEdits,
   withEdit,
   type ConceptEdits,
-  type ConceptStart,
 } from "@/components/recovery/concept-assumptions";
 import { ConceptBars } from "@/components/recovery/concept-bars";
 import { conceptFinding } from "@/components/recovery/concept-findings";
