@@ -8,6 +8,7 @@ import type { CompiledDistribution } from "../uncertainty/distribution";
 import { degreesRankine } from "../units/conversions";
 import type { Warning } from "../warnings";
 import { extremeConditionWarnings } from "./extreme-conditions";
+import { fitWarnings } from "./fit-warnings";
 import type { EstimateInputs, InputName } from "./inputs-schema";
 import { isRecovery, prepareInputs, type PreparedInputs } from "./prepare-inputs";
 import { usualRanges } from "./usual-ranges";
@@ -29,6 +30,7 @@ export function warningsOf(inputs: EstimateInputs, prepared: PreparedInputs): Wa
   return [
     ...inputNames.flatMap((name) => inputWarnings(name, distributions[name])),
     ...correlationWarnings(inputs, prepared),
+    ...caseSetWarnings(prepared),
     ...depthWarnings(inputs, prepared),
     ...(plan
       ? planWarnings(plan, surroundingsOf(inputs, prepared, plan))
@@ -83,14 +85,7 @@ function inputWarnings(name: InputName, compiled: CompiledDistribution): Warning
         "Is it really known that well?",
     );
   }
-  if (compiled.lostMass > 0.05) {
-    warn(
-      "heavy_truncation",
-      `The bounds of the ${label} leave out ${Math.round(100 * compiled.lostMass)} % of the distribution as ` +
-        "described, which moves its percentiles. Describe the range between the bounds instead.",
-    );
-  }
-  return warnings;
+  return [...warnings, ...fitWarnings(name, compiled)];
 }
 
 function correlationWarnings(
@@ -114,6 +109,22 @@ function correlationWarnings(
       severity: "warning",
       input: "correlations",
       message: `The ${usualRanges[fixed].label} is a constant, so its correlation has no effect.`,
+    };
+  });
+}
+
+/** A set that only one input names ties nothing: the other inputs' cases were perhaps called otherwise. */
+function caseSetWarnings({ caseSets }: PreparedInputs): Warning[] {
+  return caseSets.flatMap(({ name, inputs, planInputs }) => {
+    if (inputs.length + planInputs.length !== 1) return [];
+    const [input] = inputs;
+    return {
+      code: "case_set_of_one",
+      severity: "warning",
+      input: input ? `uncertain.${input}` : "recoveryPlan",
+      message:
+        `Only one input takes its case from the set “${name}”, so the set ties nothing. Does another input belong to it, ` +
+        "under the same name?",
     };
   });
 }

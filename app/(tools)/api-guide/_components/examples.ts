@@ -1,5 +1,9 @@
 import type { z } from "zod";
 import {
+  correlationsRequestSchema,
+  correlationsResponseSchema,
+} from "@/app/api/v1/calculations/correlations/schema";
+import {
   distributionRequestSchema,
   distributionResponseSchema,
 } from "@/app/api/v1/calculations/distribution/schema";
@@ -63,6 +67,14 @@ export const distributionExample: z.input<typeof distributionRequestSchema> = {
   points: 5,
 };
 
+export const correlationsExample: z.input<typeof correlationsRequestSchema> = {
+  correlations: [
+    { a: "areaAcres", b: "netThicknessFt", rank: 0.9 },
+    { a: "areaAcres", b: "porosity", rank: 0.7 },
+    { a: "netThicknessFt", b: "porosity", rank: -0.9 },
+  ],
+};
+
 export const simulationExample: z.input<typeof simulationRequestSchema> = {
   inputs: {
     schemaVersion: 1,
@@ -118,10 +130,20 @@ export const calculations: readonly Calculation[] = [
   {
     name: "distribution",
     title: "A range",
-    purpose: "Percentiles, moments and a drawable density of a distribution. P90 is the low case.",
+    purpose:
+      "Percentiles, moments and a drawable density of a distribution, and how well it fits what was given: the residual at each percentile, two tests of measured values. P90 is the low case.",
     request: distributionRequestSchema,
     response: distributionResponseSchema,
     example: distributionExample,
+  },
+  {
+    name: "correlations",
+    title: "Rank correlations",
+    purpose:
+      "Whether rank correlations between inputs are possible together, and the nearest set that is. Nothing is changed.",
+    request: correlationsRequestSchema,
+    response: correlationsResponseSchema,
+    example: correlationsExample,
   },
   {
     name: "simulation",

@@ -11,6 +11,7 @@ import {
   recoveryRequestSchema,
 } from "@/app/api/v1/calculations/recovery-schema";
 import { materialBalanceRequestSchema } from "@/app/api/v1/calculations/material-balance-schema";
+import { correlationsRequestSchema } from "@/app/api/v1/calculations/correlations/schema";
 import { distributionRequestSchema } from "@/app/api/v1/calculations/distribution/schema";
 import {
   inPlaceRequestSchema,
@@ -19,6 +20,7 @@ import {
   zFactorRequestSchema,
 } from "@/app/api/v1/calculations/schema";
 import {
+  calculateCorrelations,
   calculateDistribution,
   calculateInPlace,
   calculateSimulation,
@@ -31,6 +33,7 @@ import {
   calculateOnFluid,
 } from "@/services/calculations-of-fluids";
 import {
+  correlationsExample,
   distributionExample,
   inPlaceExample,
   simulationExample,
@@ -92,6 +95,7 @@ async function calculate(): Promise<Record<string, unknown>> {
     "z-factor": calculateZFactor(zFactorRequestSchema.parse(zFactorExample)),
     "in-place": calculateInPlace(inPlaceRequestSchema.parse(inPlaceExample)),
     distribution: calculateDistribution(distributionRequestSchema.parse(distributionExample)),
+    correlations: calculateCorrelations(correlationsRequestSchema.parse(correlationsExample)),
     simulation: {
       engineVersion,
       seed,
