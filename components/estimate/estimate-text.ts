@@ -11,6 +11,7 @@ import {
   type InputName,
 } from "@/analytics/volumetrics/inputs-schema";
 import type { DriverName } from "@/analytics/volumetrics/results-schema";
+import { withSharedCases } from "./case-sets";
 import { startingBounds, textOfInput, type InputText } from "./input-text";
 import { textOfPlan, type PlanText } from "./plan-text";
 
@@ -98,9 +99,14 @@ export function emptyText(depthFt: number | null, fluid: SeparatorTest | null): 
   };
 }
 
-/** Sets one uncertain input, of the estimate or of its recovery plan. */
+/**
+ * Sets one uncertain input, of the estimate or of its recovery plan. Inputs that take their case from the same set get
+ * its names and chances.
+ */
 export function withInput(text: EstimateText, name: DriverName, input: InputText): EstimateText {
-  if (!isPlanInput(name)) return { ...text, inputs: { ...text.inputs, [name]: input } };
+  if (!isPlanInput(name)) {
+    return { ...text, inputs: withSharedCases({ ...text.inputs, [name]: input }, name) };
+  }
   const { plan } = text;
   return plan ? { ...text, plan: { ...plan, inputs: { ...plan.inputs, [name]: input } } } : text;
 }

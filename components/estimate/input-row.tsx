@@ -1,10 +1,13 @@
 "use client";
 
+import { useState } from "react";
 import { densityCurve } from "@/analytics/uncertainty/distribution";
 import type { DriverName } from "@/analytics/volumetrics/results-schema";
 import type { Warning } from "@/analytics/warnings";
 import { DensityCurve } from "@/components/charts/density-curve";
 import { formatFigure, MISSING } from "@/components/ui/format";
+import type { CaseSet } from "./case-sets";
+import { DetailPanel, panelSummary } from "./detail-panel";
 import { hasBounds, InputBounds } from "./input-bounds";
 import { driverCatalogue, type InputDescription } from "./input-catalogue";
 import { InputNotes } from "./input-notes";
@@ -14,7 +17,7 @@ import type { InputText } from "./input-text";
 import { typedFigure } from "./quantities-of-inputs";
 import { QuantityInput } from "./quantity-input";
 import { withValues } from "./reshape";
-import { parametersOfShape, type Slot } from "./shapes";
+import { isDetailed, parametersOfShape, type Slot } from "./shapes";
 import { suspectUnit, type UnitSuspicion } from "./unit-suspicion";
 
 /** What is usual for an input, and what is possible. */
@@ -35,6 +38,8 @@ export interface InputRowProps {
   text: InputText;
   reading: InputReading;
   warnings: readonly Warning[];
+  /** sets of cases that inputs share; `null` for an input that can share none */
+  caseSets?: readonly CaseSet[] | null;
   /** absent: the row is read, not typed */
   onChange?: (text: InputText) => void;
 }
@@ -52,10 +57,21 @@ export function InputRow({
   text,
   reading,
   warnings,
+  caseSets = null,
   onChange,
 }: InputRowProps) {
   const about = describe(name, of);
-  const notesId = `notes-${name}${of ? `-${of}` : ""}`.replace(/\W+/g, "-");
+  const rowId = `${name}${of ? `-${of}` : ""}`.replace(/\W+/g, "-");
+  const notesId = `notes-${rowId}`;
+  const panelId = `panel-${rowId}`;
+  const hasPanel = isDetailed(text.kind);
+  const [isOpen, setOpen] = useState(hasPanel && !reading.isComplete);
+  const change =
+    onChange &&
+    ((next: InputText) => {
+      if (next.kind !== text.kind) setOpen(isDetailed(next.kind));
+      onChange(next);
+    });
   const suspicion = onChange ? suspicionOf(name, expected, text, reading) : null;
   const problems = [
     ...new Set(
@@ -70,11 +86,12 @@ export function InputRow({
     : warnings;
   const hasNotes = problems.length > 0 || suspicion !== null || shown.length > 0;
   const showsBounds = hasBounds(text);
+  const showsPanel = hasPanel && isOpen;
   const isFlagged = suspicion !== null || shown.length > 0;
 
   return (
     <>
-      <tr data-followed={hasNotes || showsBounds || undefined}>
+      <tr data-followed={hasNotes || showsBounds || showsPanel || undefined}>
         <td className="folio">{line}</td>
         <th scope="row">
           {about.label}
@@ -95,15 +112,39 @@ export function InputRow({
             <InputShapeMenu
               label={about.label}
               possible={expected.possible}
-              {...{ name, text, reading, onChange }}
+              {...{ name, text, reading }}
+              onChange={change}
             />
+            {hasPanel && (
+              <button
+                type="button"
+                className="shape-button"
+                aria-expanded={isOpen}
+                aria-controls={isOpen ? panelId : undefined}
+                aria-label={`${panelVerb(isOpen, onChange !== undefined)} the ${panelNouns[text.kind] ?? "figures"} of ${about.label}`}
+                onClick={() => setOpen(!isOpen)}
+              >
+                {panelVerb(isOpen, onChange !== undefined)}
+              </button>
+            )}
             <span className="text-ink-soft">
               Usual {typedFigure(expected.usual[0])} to {typedFigure(expected.usual[1])}
             </span>
           </span>
-          <SourceLine label={about.label} text={text} onChange={onChange} />
+          {hasPanel && !isOpen && (
+            <span className="panel-summary">{panelSummary(text, reading)}</span>
+          )}
+          <Said label={about.label} text={text} onChange={onChange} />
         </td>
       </tr>
+      {showsPanel && (
+        <tr className="follow" data-followed={hasNotes || showsBounds || undefined} id={panelId}>
+          <td className="folio" />
+          <td colSpan={6}>
+            <DetailPanel {...{ about, name, text, reading, notesId, caseSets, onChange }} />
+          </td>
+        </tr>
+      )}
       {showsBounds && (
         <tr className="follow" data-followed={hasNotes || undefined}>
           <td className="folio" />
@@ -250,6 +291,7 @@ function Curve({
       name={about.label}
       unit={about.unit || undefined}
       points={x.map((value, index) => ({ x: value, density: density[index] }))}
+      atoms={distribution.kind === "scenarios" ? compiled.atoms : undefined}
       range={compiled.range}
       usual={{ low, high }}
       flagged={flagged}
@@ -257,7 +299,8 @@ function Curve({
   );
 }
 
-function SourceLine({
+/** Where the range comes from, and why it is this one. */
+function Said({
   label,
   text,
   onChange,
@@ -266,15 +309,42 @@ function SourceLine({
   text: InputText;
   onChange?: (text: InputText) => void;
 }) {
-  if (!onChange) return <span className="text-ink-soft">{text.source || MISSING}</span>;
+  if (!onChange) {
+    return (
+      <>
+        <span className="text-ink-soft">{text.source || MISSING}</span>
+        {text.reason && <span className="said">{text.reason}</span>}
+      </>
+    );
+  }
   return (
-    <input
-      className="source-input"
-      aria-label={`Source of ${label}`}
-      placeholder="Where this comes from"
-      maxLength={500}
-      value={text.source}
-      onChange={(event) => onChange({ ...text, source: event.target.value })}
-    />
+    <>
+      <input
+        className="source-input"
+        aria-label={`Source of ${label}`}
+        placeholder="Where this comes from"
+        maxLength={500}
+        value={text.source}
+        onChange={(event) => onChange({ ...text, source: event.target.value })}
+      />
+      <textarea
+        className="source-input reason-input"
+        aria-label={`Why this range of ${label}`}
+        placeholder="Why this range"
+        rows={1}
+        maxLength={2_000}
+        value={text.reason ?? ""}
+        onChange={(event) => onChange({ ...text, reason: event.target.value })}
+      />
+    </>
   );
 }
+
+const panelVerb = (isOpen: boolean, isTyped: boolean) =>
+  isOpen ? "Close" : isTyped ? "Edit" : "Show";
+
+const panelNouns: Partial<Record<InputText["kind"], string>> = {
+  percentiles: "percentiles",
+  data: "values",
+  scenarios: "cases",
+};

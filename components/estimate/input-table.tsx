@@ -8,6 +8,7 @@ import type { Warning } from "@/analytics/warnings";
 import { formatFigure } from "@/components/ui/format";
 import { FolioCell, GroupRow } from "@/components/ui/table";
 import { Unit } from "@/components/ui/text";
+import { caseSetsOf } from "./case-sets";
 import type { EstimateReading } from "./estimate-reading";
 import { inputText, type EstimateText } from "./estimate-text";
 import { inputGroups, inputOfPath } from "./input-catalogue";
@@ -143,6 +144,7 @@ function Line({
       text={typed}
       reading={readingOf(name, reading)}
       warnings={warnings.filter((warning) => inputOfPath(warning.input) === name)}
+      caseSets={name in text.inputs ? caseSetsOf(text.inputs) : null}
       onChange={onChange && ((next) => onChange(name, next))}
     />
   );

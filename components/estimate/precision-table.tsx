@@ -43,7 +43,7 @@ export function PrecisionTable({
                 {resultLabels[name]} <Unit>{resultUnit(name, basis)}</Unit>
               </th>
               {levels.map((level) => {
-                const held = digitsHeld(quantity, level);
+                const held = digitsHeld(quantity, level, factor);
                 return (
                   <td key={level} className="right">
                     <span aria-hidden="true">±</span>

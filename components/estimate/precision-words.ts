@@ -25,29 +25,28 @@ export const levelLabels: Record<Level, string> = {
 
 type Quantity = Pick<QuantitySummary, Level | "standardErrors">;
 
-/** Digits shown of a percentile that the trials do hold, at most those shown. */
-export const digitsHeld = (quantity: Quantity, level: Level): number =>
-  Math.min(SHOWN_DIGITS, digitsKnown(quantity[level], quantity.standardErrors[level]));
+/** Digits of a percentile, as it is shown times a factor, that the trials do hold; at most those shown. */
+export const digitsHeld = (quantity: Quantity, level: Level, factor: number): number =>
+  Math.min(
+    SHOWN_DIGITS,
+    digitsKnown(quantity[level] * factor, quantity.standardErrors[level] * factor),
+  );
 
 /** Percentiles of which fewer digits hold than are shown. */
-export const uncertainLevels = (quantity: Quantity): Level[] =>
-  levels.filter((level) => digitsHeld(quantity, level) < SHOWN_DIGITS);
+export const uncertainLevels = (quantity: Quantity, factor: number): Level[] =>
+  levels.filter((level) => digitsHeld(quantity, level, factor) < SHOWN_DIGITS);
 
 /** "10,000 trials hold all three digits of every percentile", or which they do not. */
-export function precisionFinding(
-  { trials, results }: Pick<SimulationSummary, "trials" | "results">,
-  result: "condensateRecoverableStb" = "condensateRecoverableStb",
-): string {
-  const quantity = results[result];
+export function precisionFinding(trials: number, quantity: Quantity, factor: number): string {
   const count = trials.toLocaleString("en-US");
-  const open = uncertainLevels(quantity);
+  const open = uncertainLevels(quantity, factor);
   if (open.length === 0) return `${count} trials hold all three digits of every percentile`;
   const worst = open.reduce((a, b) => (share(quantity, b) > share(quantity, a) ? b : a));
-  const held = digitsHeld(quantity, worst);
+  const held = digitsHeld(quantity, worst, factor);
   const error = formatPercent(1.96 * share(quantity, worst), { decimals: 1 });
-  return `${count} trials are too few for three digits: ${levelLabels[worst]} is known to ±${error}, ${
-    held === 0 ? "not even its first digit" : `${numberWords(held)} digit${held === 1 ? "" : "s"}`
-  }`;
+  const digits =
+    held === 0 ? "not even its first digit" : `${numberWords(held)} digit${held === 1 ? "" : "s"}`;
+  return `${count} trials are too few for three digits: ${levelLabels[worst]} is known to ±${error}, ${digits}`;
 }
 
 const share = (quantity: Quantity, level: Level) =>

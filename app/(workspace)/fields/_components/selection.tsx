@@ -2,9 +2,10 @@
 
 import { rankingColumn, type RankingColumnId } from "@/analytics/portfolio/ranking-columns";
 import type { RankingRow } from "@/app/api/v1/fields/ranking-schema";
-import type { Basis } from "@/components/basis/basis";
+import { basisHref, type Basis } from "@/components/basis/basis";
+import { comparisonHref } from "@/components/compare/sides";
 import { shownRange, type Reporting } from "@/components/portfolio/reporting";
-import { Button, IconButton } from "@/components/ui/button";
+import { Button, IconButton, LinkButton } from "@/components/ui/button";
 import { formatFigure } from "@/components/ui/format";
 import { SelectionBar } from "@/components/ui/statement";
 import { useToast } from "@/components/ui/toast";
@@ -34,6 +35,14 @@ export function Selection({ basis, reporting, ids, rows, columns, onClear }: Sel
 
   function shownOf() {
     return value ? reporting.money : reporting.condensate;
+  }
+
+  function comparisonOf([left, right]: readonly string[]) {
+    const href = comparisonHref({
+      left: { kind: "field", fieldId: left },
+      right: { kind: "field", fieldId: right },
+    });
+    return basisHref(href, basis);
   }
 
   async function handleCopy() {
@@ -76,6 +85,11 @@ export function Selection({ basis, reporting, ids, rows, columns, onClear }: Sel
       }
       actions={
         <>
+          {ids.length === 2 && (
+            <LinkButton kind="inverse" size="small" href={comparisonOf(ids)}>
+              Compare
+            </LinkButton>
+          )}
           <Button kind="inverse" size="small" onClick={() => void handleCopy()}>
             Copy as TSV
           </Button>

@@ -5,6 +5,7 @@ import { errorWords, ProblemError } from "@/app/_client/request";
 import { useCan } from "@/app/_client/use-session";
 import type { FieldFileView } from "@/app/api/v1/fields/file-schema";
 import { useBasis } from "@/components/basis/use-basis";
+import { comparisonHref } from "@/components/compare/sides";
 import { prmsClassNames, prmsFill, prmsSubClassNames } from "@/components/fields/prms";
 import { reportingOf, shownRange } from "@/components/portfolio/reporting";
 import { Button, LinkButton } from "@/components/ui/button";
@@ -69,6 +70,13 @@ export function FieldPage({ slug }: { slug: string }) {
         }
         actions={
           <>
+            <LinkButton
+              href={withBasis(
+                comparisonHref({ left: { kind: "field", fieldId: field.id }, right: null }),
+              )}
+            >
+              Compare
+            </LinkButton>
             {can("field.update") && (
               <Button onClick={() => setDialog("edit")}>Edit the field</Button>
             )}

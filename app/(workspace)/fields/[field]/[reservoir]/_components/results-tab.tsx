@@ -204,8 +204,12 @@ function SamplingSection() {
   return (
     <Columns kind="equal">
       <Section
-        title={precisionFinding(summary)}
-        note={`One standard error of sampling. ${runWords(summary)}${at}. ${errorWords(summary)}`}
+        title={precisionFinding(
+          summary.trials,
+          summary.results.condensateRecoverableStb,
+          resultFactor("condensateRecoverableStb", resultBasis),
+        )}
+        note={`Heading: condensate to the tank, 95 %. Table: one standard error of sampling. ${runWords(summary)}${at}. ${errorWords(summary)}`}
       >
         <PrecisionTable summary={summary} basis={resultBasis} />
       </Section>
