@@ -86,11 +86,12 @@ export interface Ledger {
  * Fields, basins, classes and the total of some fields, added up trial by trial from trials in the portfolio's order.
  * Percentiles of a total describe the portfolio; they are not reserves of any category.
  *
- * Standard errors of the total are those of independent trials, with an effective number of them: each field counts by
- * its share of the variance, with the trials of the total or of its own estimates, whichever are fewer, because
- * repeated rows say nothing new. Estimates drawn as Latin hypercubes or Sobol' points vary less than independent
- * trials, so the errors are on the safe side, of the mean above all; they hold what sampling leaves open, not whether
- * the inputs are right.
+ * Standard errors of the total are on the safe side; they hold what sampling leaves open, not whether the inputs are
+ * right. Percentiles have those of independent trials, with an effective number of them: each field counts by its share
+ * of the variance, with the trials of the total or of its own estimates, whichever are fewer, because repeated rows say
+ * nothing new. The factors and the draws behind them are evenly spread, so that the errors are smaller in fact. Means
+ * add, and estimates are drawn independently of each other whatever their dependence here, so the mean has the root of
+ * the fields' own squared errors; those of Latin hypercubes and Sobol' points are smaller again.
  *
  * @param fields  at least one; all with the same number of trials
  * @returns       volumes in the units of the vectors, times interest and, as `risk` says, chance
@@ -122,7 +123,7 @@ export function computeLedger(fields: readonly LedgerField[], options: LedgerOpt
 
   const condensate = total.condensateRecoverableStb;
   const summary = summariseSample(condensate, trials, counting);
-  const entries = entriesOf(sorted, condensate, summary, counting, options.risk);
+  const { entries, meanError } = entriesOf(sorted, condensate, summary, counting, options.risk);
   const shareOf = (belongs: (field: LedgerField) => boolean) =>
     sorted
       .filter(belongs)
@@ -156,7 +157,10 @@ export function computeLedger(fields: readonly LedgerField[], options: LedgerOpt
       minimum,
       maximum,
       standardDeviation,
-      standardErrors: scaleErrors(summary.standardErrors, sorted, entries, trials),
+      standardErrors: {
+        ...scaleErrors(summary.standardErrors, sorted, entries, trials),
+        mean: meanError,
+      },
     },
     chanceOfSummedP90: shareAtLeast(condensate, summedP90),
     chanceOfNothing:
@@ -274,32 +278,42 @@ function rangesOf(
   };
 }
 
+/** Every field's ranges and contribution, and the standard error of the total's mean. */
 function entriesOf(
   fields: readonly LedgerField[],
   total: Float64Array,
   quantiles: Range,
   counting: OrderWorkspace,
   risk: Risking,
-): Record<string, LedgerEntry> {
+): { entries: Record<string, LedgerEntry>; meanError: number } {
   const trials = total.length;
   const order = new Uint32Array(trials);
   rankByCounting(total, trials, counting, new Uint32Array(trials), order);
   const contributionOf = createContributions({ total, order, quantiles });
   const own = new Float64Array(trials);
-  return Object.fromEntries(
-    fields.map((field) => {
-      own.fill(0);
-      const factor = factorOf(field, risk);
-      const { volumes, comes } = field.trials;
-      if (risk === "yesNo") addDrawn(own, volumes.condensateRecoverableStb, comes, factor);
-      else addScaled(own, volumes.condensateRecoverableStb, factor);
-      const figures = field.figures[risk === "yesNo" ? "yesNo" : "certain"];
-      const ranges = Object.fromEntries(
-        vectorNames.map((name) => [name, scaleRange(figures[name], factor)]),
-      ) as VolumeRanges;
-      return [field.id, { ranges, contribution: contributionOf(own) }];
-    }),
-  );
+  const entries: Record<string, LedgerEntry> = {};
+  let squaredError = 0;
+  for (const field of fields) {
+    own.fill(0);
+    const factor = factorOf(field, risk);
+    const { volumes, comes } = field.trials;
+    if (risk === "yesNo") addDrawn(own, volumes.condensateRecoverableStb, comes, factor);
+    else addScaled(own, volumes.condensateRecoverableStb, factor);
+    const figures = field.figures[risk === "yesNo" ? "yesNo" : "certain"];
+    const ranges = Object.fromEntries(
+      vectorNames.map((name) => [name, scaleRange(figures[name], factor)]),
+    ) as VolumeRanges;
+    const contribution = contributionOf(own);
+    entries[field.id] = { ranges, contribution };
+    squaredError += varianceAround(own, contribution.mean) / Math.min(trials, field.sourceTrials);
+  }
+  return { entries, meanError: Math.sqrt(squaredError) };
+}
+
+function varianceAround(values: Float64Array, mean: number): number {
+  let squares = 0;
+  for (let t = 0; t < values.length; t += 1) squares += (values[t] - mean) ** 2;
+  return squares / values.length;
 }
 
 function scaleErrors(

@@ -1,196 +1,124 @@
 import { describe, expect, it } from "vitest";
-import { createOrderWorkspace, rankByCounting } from "@/analytics/numerics/order-statistics";
-import { createRandom, fillPermutation } from "@/analytics/numerics/random";
-import {
-  rollUp,
-  summariseTotal,
-  type RollUpMember,
-  type RollUpOptions,
-} from "@/analytics/portfolio/roll-up";
-import { compileDistribution } from "@/analytics/uncertainty/distribution";
-import { spearman } from "@/analytics/uncertainty/rank-correlation";
+import { createRandom } from "@/analytics/numerics/random";
+import { alignFields, alignPieces, rollUp } from "@/analytics/portfolio/roll-up";
+import { bytesOfFieldTrials, viewFieldTrials } from "@/analytics/portfolio/field-trials";
+import { computeLedger } from "@/analytics/portfolio/ledger";
+import { loadingsOf } from "@/analytics/portfolio/factor-model";
+import { fieldOf, independent, optionsOf, rankOf, reservoirOf, sampleOf } from "./book";
 
-const options: RollUpOptions = {
-  quantities: { condensate: "condensateRecoverableStb" },
-  seed: 12,
-  dependence: 0,
-};
+const lognormal = { kind: "lognormalP90P10", p90: 50, p10: 200 } as const;
+const ten = (trials: number) =>
+  Array.from({ length: 10 }, (_, i) => fieldOf(`f${i}`, sampleOf(lognormal, trials, i + 1)));
 
-/** Trials of a lognormal in a random order, with a second vector tied to the first row by row. */
-function member(id: string, trials: number, changes: Partial<RollUpMember> = {}): RollUpMember {
-  const p = Float64Array.from({ length: trials }, (_, i) => (i + 0.5) / trials);
-  const sorted = new Float64Array(trials);
-  compileDistribution({ kind: "lognormalP90P10", p90: 50, p10: 200 }).fillQuantiles(
-    p,
-    trials,
-    sorted,
-  );
-  const order = new Uint32Array(trials);
-  fillPermutation(createRandom(99, Number(id.slice(1))), order, trials, new Uint32Array(trials));
-  const condensate = Float64Array.from(order, (rank) => sorted[rank]);
-  return {
-    id,
-    group: "basin",
-    vectors: { condensateRecoverableStb: condensate, salesGasScf: condensate.map((v) => 1000 * v) },
-    factors: { condensate: 1, gas: 1 },
-    ...changes,
-  };
-}
-
-const ten = (trials: number, changes: Partial<RollUpMember> = {}) =>
-  Array.from({ length: 10 }, (_, i) => member(`r${i}`, trials, changes));
-
-describe("rollUp", () => {
+describe("rollUp(fields, options)", () => {
   /**
    * Ten identical lognormals, P90 50 and P10 200, under a one-factor normal copula. Mean and standard deviation are
    * exact (moments of lognormals); P90s from 400,000 plain draws, confirmed by the sum-of-lognormals approximation of
-   * Fenton, IRE Trans. Commun. Syst. 8 (1960) 57-67 to 0.3 %.
+   * Fenton, IRE Trans. Commun. Syst. 8 (1960) 57-67 to 0.3 %, whose P10s these are.
    */
   const published = [
-    { dependence: 0, p90: 902.5, standardDeviation: 213.3772 },
-    { dependence: 0.3, p90: 715.5, standardDeviation: 395.1425 },
-    { dependence: 0.7, p90: 574.5, standardDeviation: 565.2921 },
-    { dependence: 1, p90: 500, standardDeviation: 674.758 },
+    { rho: 0, p90: 902.5, p10: 1438.83, standardDeviation: 213.3772 },
+    { rho: 0.3, p90: 715.5, p10: 1676.39, standardDeviation: 395.1425 },
+    { rho: 0.7, p90: 574.5, p10: 1881.43, standardDeviation: 565.2921 },
+    { rho: 1, p90: 500, p10: 2000, standardDeviation: 674.758 },
   ];
 
   it.each(published)(
-    "adds ten lognormals with dependence $dependence as theory does",
+    "adds ten lognormals of score correlation $rho as theory does",
     { timeout: 60_000 },
-    ({ dependence, p90, standardDeviation }) => {
-      const { total } = rollUp(ten(50_000), { ...options, dependence });
-      const summary = summariseTotal(total.vectors.condensate);
-      expect(summary.mean / 1157.506).toBeCloseTo(1, 2);
-      expect(Math.abs(summary.p90 / p90 - 1)).toBeLessThan(0.01);
-      expect(Math.abs(summary.standardDeviation / standardDeviation - 1)).toBeLessThan(0.02);
+    ({ rho, p90, p10, standardDeviation }) => {
+      const ledger = rollUp(ten(50_000), optionsOf(50_000, { otherBasinsRank: rankOf(rho) }));
+      const { condensateRecoverableStb: total } = ledger.total;
+      expect(total.mean / 1157.506).toBeCloseTo(1, 3);
+      expect(Math.abs(total.p90 / p90 - 1)).toBeLessThan(0.01);
+      expect(Math.abs(total.p10 / p10 - 1)).toBeLessThan(0.015);
+      expect(Math.abs(ledger.condensate.standardDeviation / standardDeviation - 1)).toBeLessThan(
+        0.02,
+      );
     },
   );
 
-  it("keeps the arithmetic sum of percentiles apart from the percentiles of the sum", () => {
-    const { total } = rollUp(ten(20_000), options);
-    expect(total.arithmeticSums.condensate.p90).toBeCloseTo(500, 0);
-    expect(total.arithmeticSums.condensate.p10).toBeCloseTo(2000, 0);
-    const { p90, mean } = summariseTotal(total.vectors.condensate);
-    expect(p90).toBeGreaterThan(880);
-    expect(total.arithmeticSums.condensate.mean).toBeCloseTo(mean, 6);
-  });
-
-  it("ties members of a group by (6 / pi) asin(rho / 2) in rank, and other groups not at all", () => {
-    const n = 20_000;
-    const alone = (id: string, group: string) =>
-      rollUp([member(id, n, { group })], { ...options, dependence: 0.5 }).total.vectors.condensate;
-    const ranks = (values: Float64Array) => {
-      const out = new Uint32Array(n);
-      rankByCounting(values, n, createOrderWorkspace(n), out, new Uint32Array(n));
-      return out;
-    };
-    const first = ranks(alone("r1", "north"));
-    const expected = (6 / Math.PI) * Math.asin(0.25);
-    expect(Math.abs(spearman(first, ranks(alone("r2", "north")), n) - expected)).toBeLessThan(0.02);
-    expect(Math.abs(spearman(first, ranks(alone("r2", "south")), n))).toBeLessThan(0.03);
-  });
-
-  it("keeps the rows of a member whole", () => {
-    const { total } = rollUp([member("r1", 500)], {
-      ...options,
-      quantities: { condensate: "condensateRecoverableStb", gas: "salesGasScf" },
-      dependence: 0.4,
-    });
-    total.vectors.condensate.forEach((value, t) => expect(total.vectors.gas[t]).toBe(1000 * value));
-  });
-
-  it("multiplies by each quantity's own factor", () => {
-    const half = member("r1", 400, { factors: { condensate: 0.5, value: 30 } });
-    const { total } = rollUp([half], {
-      ...options,
-      quantities: { condensate: "condensateRecoverableStb", value: "condensateRecoverableStb" },
-    });
-    total.vectors.condensate.forEach((value, t) =>
-      expect(total.vectors.value[t]).toBeCloseTo(60 * value, 9),
+  it("finds the published mean and P90 also from estimates with fewer and more trials than the total", () => {
+    const fields = Array.from({ length: 10 }, (_, i) =>
+      fieldOf(`f${i}`, sampleOf(lognormal, [2500, 10_000, 37_000][i % 3], i + 1)),
     );
+    const { total } = rollUp(fields, optionsOf(10_000, { otherBasinsRank: rankOf(0.3) }));
+    expect(total.condensateRecoverableStb.mean / 1157.506).toBeCloseTo(1, 2);
+    expect(Math.abs(total.condensateRecoverableStb.p90 / 715.5 - 1)).toBeLessThan(0.02);
   });
 
-  it("multiplies every trial by the chance when risked by expectation, and not otherwise", () => {
-    const risky = ten(1000, { chance: 0.4 });
-    const mean = (risking: RollUpOptions["risking"]) =>
-      summariseTotal(rollUp(risky, { ...options, risking }).total.vectors.condensate).mean;
-    expect(mean("expectation") / mean("unrisked")).toBeCloseTo(0.4, 12);
-  });
-
-  it("totals by tag in the same pass", () => {
-    const members = ten(300).map((one, i) => ({
-      ...one,
-      tags: { class: i < 4 ? "reserves" : "contingent" },
-    }));
-    const { total, groups } = rollUp(members, { ...options, groupBy: ["class"] });
-    const { reserves, contingent } = groups.class;
-    expect([reserves.members, contingent.members, total.members]).toEqual([4, 6, 10]);
-    total.vectors.condensate.forEach((value, t) =>
-      expect(reserves.vectors.condensate[t] + contingent.vectors.condensate[t]).toBeCloseTo(
-        value,
-        8,
-      ),
-    );
-  });
-
-  it("gives the same bytes whatever the order of the members", () => {
-    const members = ten(300);
-    const there = rollUp(members, { ...options, dependence: 0.3 });
-    const back = rollUp([...members].reverse(), { ...options, dependence: 0.3 });
-    expect(back.total.vectors.condensate).toEqual(there.total.vectors.condensate);
-  });
+  /**
+   * One standard error should hold the truth in at least 68 % of runs, and two in 95 %. The truth is the mean of many
+   * runs, whose members are plain random draws made afresh each time: what a Latin hypercube would do better.
+   */
+  it(
+    "states standard errors that hold over many runs, on the safe side",
+    { timeout: 60_000 },
+    () => {
+      const runs = 100;
+      const trials = 1000;
+      const values = sampleOf(lognormal, 20_000).sort();
+      const words = new Uint32Array(trials);
+      const found = Array.from({ length: runs }, (_, run) => {
+        const fields = Array.from({ length: 4 }, (_, i) => {
+          createRandom(run, i).fill(words);
+          const drawn = Float64Array.from(words, (word) => values[word % values.length]);
+          return fieldOf(`f${i}`, drawn);
+        });
+        const options = optionsOf(trials, { otherBasinsRank: 0.3 }, { seed: run });
+        const ledger = rollUp(fields, options);
+        return { range: ledger.total.condensateRecoverableStb, ...ledger.condensate };
+      });
+      for (const name of ["p90", "p50", "p10", "mean"] as const) {
+        const truth = found.reduce((sum, { range }) => sum + range[name], 0) / runs;
+        const within = (times: number) =>
+          found.filter(
+            ({ range, standardErrors }) =>
+              Math.abs(range[name] - truth) <= times * standardErrors[name],
+          ).length / runs;
+        // 68 % and 95 %, less two of their own errors in 100 runs.
+        expect(within(1), name).toBeGreaterThan(0.68 - 2 * 0.047);
+        expect(within(2), name).toBeGreaterThan(0.95 - 2 * 0.022);
+        expect(within(1), `${name} is not wide of the mark`).toBeLessThan(0.95);
+      }
+    },
+  );
 
   it("accepts trials in single precision", () => {
-    const double = member("r1", 300);
-    const single = {
-      ...double,
-      vectors: {
-        condensateRecoverableStb: Float32Array.from(double.vectors.condensateRecoverableStb),
-      },
-    };
-    const sums = [double, single].map(
-      (one) => summariseTotal(rollUp([one], options).total.vectors.condensate).mean,
+    const double = sampleOf(lognormal, 300);
+    const [one, other] = [double, Float32Array.from(double)].map(
+      (values) =>
+        rollUp([fieldOf("a", values)], optionsOf(300)).total.condensateRecoverableStb.mean,
     );
-    expect(sums[1] / sums[0]).toBeCloseTo(1, 6);
+    expect(one).toBe(other);
   });
+});
 
-  it("gives an empty total for no members", () => {
-    const { trials, total } = rollUp([], options);
-    expect([trials, total.members, total.vectors.condensate.length]).toEqual([0, 0, 0]);
-  });
+describe("alignPieces(pieces, options)", () => {
+  it("gives the same bytes whether a field comes whole or reservoir by reservoir", () => {
+    const dependence = { ...independent, otherBasinsRank: 0.3 };
+    const reservoirs = ["a/x", "a/y", "a/z"].map((id, i) =>
+      reservoirOf(id, sampleOf(lognormal, 200, i + 1)),
+    );
+    const field = { ...fieldOf("a", new Float64Array(1)), chance: 0.6, reservoirs };
+    const [whole] = alignFields([field], { trials: 200, seed: 9, dependence });
 
-  it("does not change what it is given", () => {
-    const one = member("r1", 300);
-    const before = one.vectors.condensateRecoverableStb.slice();
-    rollUp([one], { ...options, dependence: 0.5 });
-    expect(one.vectors.condensateRecoverableStb).toEqual(before);
-  });
-
-  it.each<[string, RollUpMember[], Partial<RollUpOptions>]>([
-    [
-      "r1 has 200 trials and r0 has 100; trials are added one by one",
-      [member("r0", 100), member("r1", 200)],
-      {},
-    ],
-    ["r0 is in the sum twice", [member("r0", 100), member("r0", 100)], {}],
-    ["r0 has no trials of oil", [member("r0", 100)], { quantities: { condensate: "oil" } }],
-    [
-      "r0 needs a factor of 0 or more for condensate",
-      [member("r0", 100, { factors: { condensate: -1 } })],
-      {},
-    ],
-    [
-      "The chance of r0 lies between 0 and 1; 1.2 does not",
-      [member("r0", 100, { chance: 1.2 })],
-      {},
-    ],
-    [
-      "The dependence within a group lies between 0 and 1",
-      [member("r0", 100)],
-      { dependence: -0.1 },
-    ],
-    ["The seed is a whole number", [member("r0", 100)], { seed: 0.5 }],
-    ["Member r0 has no class to be grouped by", [member("r0", 100)], { groupBy: ["class"] }],
-  ])("refuses: %s", (message, members, changes) => {
-    expect(() => rollUp(members, { ...options, ...changes })).toThrow(message);
+    const buffer = new SharedArrayBuffer(bytesOfFieldTrials(200));
+    const loadings = loadingsOf(dependence, {
+      fieldId: field.id,
+      basinId: field.basinId,
+      basinSlug: field.basinSlug,
+    });
+    const figures = reservoirs.flatMap((reservoir, i) =>
+      alignPieces(
+        [{ slug: "a", chance: 0.6, loadings, buffer, reservoirs: [reservoir], isLast: i === 2 }],
+        { trials: 200, seed: 9 },
+      ),
+    );
+    expect(figures.slice(0, 2)).toEqual([null, null]);
+    expect(figures[2]).toEqual(whole.figures);
+    const pieced = { ...whole, trials: viewFieldTrials(buffer, 200) };
+    const options = { risk: "yesNo", withRanks: true } as const;
+    expect(computeLedger([pieced], options)).toEqual(computeLedger([whole], options));
   });
 });

@@ -2,12 +2,15 @@ import { execFileSync } from "node:child_process";
 import path from "node:path";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { DomainError } from "@/analytics/errors";
-import { computeLedger, type LedgerMember } from "@/analytics/portfolio/ledger";
+import { loadingsOf } from "@/analytics/portfolio/factor-model";
+import { bytesOfFieldTrials } from "@/analytics/portfolio/field-trials";
+import { rollUp } from "@/analytics/portfolio/roll-up";
 import { simulate } from "@/analytics/volumetrics/simulate";
 import { simulateUntilSettled, type SettleStep } from "@/analytics/volumetrics/until-settled";
 import {
   closePool,
   MAXIMUM_QUEUE,
+  runAlignment,
   runLedger,
   runSimulation,
   runUntilSettled,
@@ -106,22 +109,43 @@ describe("runUntilSettled", () => {
   });
 });
 
-describe("runLedger", () => {
-  it("adds up on a thread as the calling one would have", async () => {
-    const { vectors } = simulate(buildInputs(), { trials: 300, seed: 1 });
-    const buildMembers = (): LedgerMember[] =>
-      ["a", "b"].map((id) => ({
-        id,
-        fieldId: `field-${id}`,
-        basinId: "basin",
-        basinSlug: "basin",
-        classId: "reserves",
-        interest: 0.5,
-        chance: 1,
-        vectors: structuredClone(vectors),
-      }));
-    const options = { seed: 4, basinRankCorrelations: { basin: 0.3 } };
-    const expected = computeLedger(buildMembers(), options);
-    expect(await runLedger(buildMembers(), options)).toEqual(expected);
+describe("runAlignment and runLedger", () => {
+  it("put trials in order and add them up on a thread as the calling one would have", async () => {
+    const trials = 300;
+    const { vectors } = simulate(buildInputs(), { trials, seed: 1 });
+    const fields = ["a", "b"].map((slug) => ({
+      id: `field-${slug}`,
+      slug,
+      basinId: "basin",
+      basinSlug: "basin",
+      classId: "reserves",
+      interest: 0.5,
+      chance: 0.6,
+      reservoirs: [{ id: `${slug}/sand`, vectors: structuredClone(vectors) }],
+    }));
+    const dependence = {
+      portfolioRank: 0,
+      basinRanks: {},
+      otherBasinsRank: 0.3,
+      sharedFactors: [],
+    };
+    const options = { trials, risk: "yesNo", withRanks: true } as const;
+    const expected = rollUp(fields, { ...options, seed: 4, dependence });
+
+    const pieces = fields.map(({ id, slug, basinId, basinSlug, chance, reservoirs }) => ({
+      slug,
+      chance,
+      loadings: loadingsOf(dependence, { fieldId: id, basinId, basinSlug }),
+      buffer: new SharedArrayBuffer(bytesOfFieldTrials(trials)),
+      reservoirs,
+      isLast: true,
+    }));
+    const figures = await runAlignment(pieces, { trials, seed: 4 });
+    const aligned = fields.flatMap(({ reservoirs: _, ...field }, index) => {
+      const own = figures[index];
+      const { buffer } = pieces[index];
+      return own ? [{ ...field, buffer, figures: own, sourceTrials: trials }] : [];
+    });
+    expect(await runLedger(aligned, options)).toEqual(expected);
   });
 });
