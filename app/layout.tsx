@@ -12,6 +12,7 @@ import "./styles/float.css";
 import "./styles/shell.css";
 import "./styles/sign-in.css";
 import "./styles/estimate.css";
+import "./styles/inputs.css";
 import "./styles/drivers.css";
 import "./styles/fluid.css";
 import "./styles/lists.css";
