@@ -9,10 +9,10 @@ import { Page, PageHead, Section, Stack } from "@/components/ui/section";
 import { Notice, Skeleton } from "@/components/ui/status";
 import { useImport, useTake } from "../_queries/imports";
 import { ImportNotices } from "./import-notices";
+import { ImportProgress } from "./import-progress";
 import { importTitle, rowsWords } from "./import-words";
 import { ProblemTable } from "./problem-table";
 import { RowTable } from "./row-table";
-import { RunProgress } from "./run-progress";
 import { TakeBar } from "./take-bar";
 
 const crumbs = [{ label: "Import", href: "/import" }, { label: "Sheet" }];
@@ -61,7 +61,7 @@ export function ImportFile({ id }: { id: string }) {
       />
       <Stack>
         <ImportNotices file={file} takeError={take.error} />
-        {(file.state === "applying" || file.state === "applied") && <RunProgress file={file} />}
+        {(file.state === "applying" || file.state === "applied") && <ImportProgress file={file} />}
         {file.state === "failed" && (
           <Section
             title="What stands in the way"

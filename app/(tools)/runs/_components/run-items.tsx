@@ -13,15 +13,9 @@ import { Section } from "@/components/ui/section";
 import { Notice, Skeleton } from "@/components/ui/status";
 import { ColumnHeading, FolioCell, LedgerTable, MarkCell } from "@/components/ui/table";
 import { VisuallyHidden } from "@/components/ui/text";
-import {
-  ITEMS_PER_PAGE,
-  MOVED_BEYOND,
-  isUnderWay,
-  useRunItems,
-  type ItemFilter,
-} from "../_queries/runs";
+import { ITEMS_PER_PAGE, isUnderWay, useRunItems, type ItemFilter } from "../../_queries/runs";
 import { Pager } from "./pager";
-import { itemStateWords, movedWords } from "./run-words";
+import { MOVED_BEYOND, itemStateWords, movedWords } from "@/components/runs/run-words";
 
 /** A run shows volumes as they are stored, on no basis: gross, unrisked, in field units. */
 const condensate = reportingUnits("field", "14.696").condensate;

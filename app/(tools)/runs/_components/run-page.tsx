@@ -1,25 +1,18 @@
 "use client";
 
 import { useQueryClient } from "@tanstack/react-query";
-import { useEffect, useRef, useState } from "react";
+import { useEffect, useRef } from "react";
 import { errorWords } from "@/app/_client/request";
 import type { RunView } from "@/app/api/v1/runs/schema";
 import { Button } from "@/components/ui/button";
-import { Dialog } from "@/components/ui/dialog";
 import { formatDate } from "@/components/ui/format";
 import { Page, PageHead, Section, Stack } from "@/components/ui/section";
 import { Notice, Skeleton } from "@/components/ui/status";
-import {
-  isUnderWay,
-  useCancelRun,
-  useComparison,
-  useRetryRun,
-  useRun,
-  type Comparison,
-} from "../_queries/runs";
+import { isUnderWay, useComparison, useRun } from "../../_queries/runs";
+import { RunAction } from "../../_components/run-action";
 import { RunItems } from "./run-items";
-import { RunProgress } from "./run-progress";
-import { durationWords, movedNote, runTitle } from "./run-words";
+import { RunProgress } from "@/components/runs/run-progress";
+import { durationWords, movedNote, runTitle, type Comparison } from "@/components/runs/run-words";
 import { SettlingSteps } from "./settling-steps";
 
 const crumbs = [{ label: "Runs", href: "/runs" }, { label: "Run" }];
@@ -59,7 +52,7 @@ export function RunPage({ id }: { id: string }) {
         crumbs={crumbs}
         lead={run.title}
         meta={<RunMeta run={run} />}
-        actions={<RunActions run={run} />}
+        actions={<RunAction run={run} action="retry" />}
       />
       <Stack>
         <RunState run={run} comparison={comparison ?? null} />
@@ -108,52 +101,13 @@ function RunMeta({ run }: { run: RunView }) {
   );
 }
 
-function RunActions({ run }: { run: RunView }) {
-  const [isAsking, setIsAsking] = useState(false);
-  const cancel = useCancelRun();
-  const retry = useRetryRun();
-  const problem = cancel.error ?? retry.error;
-
-  function handleCancel() {
-    setIsAsking(false);
-    cancel.mutate(run.id);
-  }
-
-  return (
-    <>
-      {problem && <span className="field-error">{errorWords(problem)}</span>}
-      {run.can.retry && (
-        <Button busy={retry.isPending} onClick={() => retry.mutate(run.id)}>
-          {run.counts.failed > 0 ? "Retry what failed" : "Take it up again"}
-        </Button>
-      )}
-      {run.can.cancel && (
-        <Button busy={cancel.isPending} busyLabel="Cancelling…" onClick={() => setIsAsking(true)}>
-          Cancel the run
-        </Button>
-      )}
-      <Dialog
-        open={isAsking}
-        onClose={() => setIsAsking(false)}
-        title="Cancel this run?"
-        description="What is done stays done. What still waits is passed over, and what is being computed now is dropped. It can be taken up again later."
-        actions={
-          <>
-            <Button onClick={() => setIsAsking(false)}>Let it run</Button>
-            <Button kind="primary" onClick={handleCancel}>
-              Cancel the run
-            </Button>
-          </>
-        }
-      />
-    </>
-  );
-}
-
 /** Where the run stands, and what to do about it. */
 function RunState({ run, comparison }: { run: RunView; comparison: Comparison | null }) {
   const { counts } = run;
-  if (isUnderWay(run)) return <RunProgress run={run} label="Computing" />;
+  if (isUnderWay(run))
+    return (
+      <RunProgress run={run} label="Computing" action={<RunAction run={run} action="cancel" />} />
+    );
   if (run.state === "cancelled") {
     return (
       <Notice tone="info" title="The run was cancelled.">

@@ -10,9 +10,9 @@ import { formatDate } from "@/components/ui/format";
 import { Page, PageHead, Section, Stack } from "@/components/ui/section";
 import { EmptyState, Notice, Skeleton } from "@/components/ui/status";
 import { LedgerTable } from "@/components/ui/table";
-import { RUNS_PER_PAGE, isUnderWay, useRuns } from "../_queries/runs";
+import { RUNS_PER_PAGE, isUnderWay, useRuns } from "../../_queries/runs";
 import { Pager } from "./pager";
-import { durationWords, estimatesWords, outcomeWords } from "./run-words";
+import { durationWords, estimatesWords, outcomeWords } from "@/components/runs/run-words";
 import { StartRunDialog } from "./start-run-dialog";
 
 /** What is being computed in the background, and what was. */

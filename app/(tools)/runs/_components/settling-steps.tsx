@@ -6,7 +6,7 @@ import { reportingUnits } from "@/analytics/units/reporting-units";
 import { formatPercent } from "@/components/ui/format";
 import { Notice, Skeleton } from "@/components/ui/status";
 import { ColumnHeading, FigureCell, LedgerTable } from "@/components/ui/table";
-import { useRunItems } from "../_queries/runs";
+import { useRunItems } from "../../_queries/runs";
 
 const condensate = reportingUnits("field", "14.696").condensate;
 

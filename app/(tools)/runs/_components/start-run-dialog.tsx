@@ -2,18 +2,19 @@
 
 import { useRouter } from "next/navigation";
 import { useState } from "react";
-import { errorWords } from "@/app/_client/request";
+import { errorWords, ProblemError } from "@/app/_client/request";
 import { runScopes, type RunScope } from "@/models/vocabulary";
-import { Button } from "@/components/ui/button";
+import { Button, LinkButton } from "@/components/ui/button";
 import { Dialog } from "@/components/ui/dialog";
 import { Notice } from "@/components/ui/status";
-import { useStartRun } from "../_queries/runs";
-import { scopes } from "./run-words";
+import { useStartRun } from "../../_queries/runs";
+import { scopes } from "@/components/runs/run-words";
 
 /** Asks what to recalculate, saying of each choice what it changes. */
 export function StartRunDialog({ onClose }: { onClose: () => void }) {
   const router = useRouter();
   const start = useStartRun();
+  const existing = start.error instanceof ProblemError ? start.error.existingId : undefined;
   const [scope, setScope] = useState<RunScope>("approved");
 
   async function handleStart() {
@@ -21,7 +22,7 @@ export function StartRunDialog({ onClose }: { onClose: () => void }) {
       const run = await start.mutateAsync({ kind: "recalculation", scope });
       router.push(`/runs/${run.id}`);
     } catch {
-      // The notice says it, and the choice stands.
+      // The notice says why, with the run that is under way already; the choice stands.
     }
   }
 
@@ -65,7 +66,17 @@ export function StartRunDialog({ onClose }: { onClose: () => void }) {
       </fieldset>
       {start.error && (
         <div className="mt-3">
-          <Notice tone="error" title={errorWords(start.error)}>
+          <Notice
+            tone="error"
+            title={errorWords(start.error)}
+            actions={
+              existing && (
+                <LinkButton size="small" href={`/runs/${existing}`}>
+                  Look at it
+                </LinkButton>
+              )
+            }
+          >
             Nothing was begun.
           </Notice>
         </div>

@@ -38,7 +38,7 @@ export function BasinSection({
   return (
     <Section
       title={findingOf(basins)}
-      note={`Mean ${liquid.name}, ${liquid.unit}, by basin and PRMS class`}
+      note={`Mean ${liquid.name}, ${liquid.unit}, by basin and PRMS class. Of variance: the basin’s covariance with the total.`}
     >
       <LedgerTable caption={`Mean ${liquid.name} by basin and class`} density="executive">
         <thead>
@@ -50,13 +50,14 @@ export function BasinSection({
               </ColumnHeading>
             ))}
             <ColumnHeading align="right">Total</ColumnHeading>
+            <ColumnHeading align="right">Of variance</ColumnHeading>
             <ColumnHeading mark>
               <RangeScale scale={scale} ticks={3} />
             </ColumnHeading>
           </tr>
         </thead>
         <tbody>
-          {rows.map(({ slug, name, range, condensateMeanStbByClass }) => (
+          {rows.map(({ slug, name, range, shareOfVariance, condensateMeanStbByClass }) => (
             <tr key={slug}>
               <th scope="row">
                 <Link href={withBasis(`/fields?basin=${slug}`)}>{name}</Link>
@@ -68,6 +69,7 @@ export function BasinSection({
                 );
               })}
               <FigureCell value={range.mean} strong />
+              <td className="right">{formatPercent(shareOfVariance)}</td>
               <MarkCell>
                 <RangeMark
                   name={`${name} ${liquid.name}`}
@@ -88,6 +90,7 @@ export function BasinSection({
               <FigureCell key={name} value={classMean(name)} />
             ))}
             <FigureCell value={classes.reduce((sum, name) => sum + classMean(name), 0)} />
+            <td className="right">{formatPercent(1)}</td>
             <td className="mark" />
           </TotalRow>
         </tfoot>

@@ -14,6 +14,8 @@ import { useStatement } from "../_queries/statement";
 import { AttentionSection } from "./attention-section";
 import { BasinSection } from "./basin-section";
 import { ConcentrationSection } from "./concentration-section";
+import { ContributionSection } from "./contribution-section";
+import { DiversificationSection } from "./diversification-section";
 import { ExceedanceSection } from "./exceedance-section";
 import { TotalsSection } from "./totals-section";
 import { MoversSection, YearBridge } from "./year-section";
@@ -155,11 +157,13 @@ function StatementBody({ statement, basis }: { statement: Statement; basis: Basi
       <Columns className="statement-columns mt-[var(--gap)]">
         <Stack>
           <ExceedanceSection {...part} />
+          <ContributionSection {...part} />
           <ConcentrationSection {...part} />
           {statement.year && <YearBridge {...part} year={statement.year} />}
         </Stack>
         <Stack>
           <AttentionSection {...part} />
+          <DiversificationSection {...part} />
           <BasinSection {...part} />
           {statement.year && <MoversSection {...part} year={statement.year} />}
         </Stack>

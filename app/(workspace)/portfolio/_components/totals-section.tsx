@@ -6,6 +6,7 @@ import { shownRange, type Reporting, type Shown } from "@/components/portfolio/r
 import { formatDate, formatFigure, formatPercent } from "@/components/ui/format";
 import { KeyFigures } from "@/components/ui/statement";
 import type { Range } from "@/analytics/volumetrics/results-schema";
+import { riskNote } from "./total-words";
 
 interface Headline {
   label: string;
@@ -26,7 +27,7 @@ export function TotalsSection({
   reporting: Reporting;
   basis: Basis;
 }) {
-  const { totals, year, prices } = statement;
+  const { totals, year, prices, dependence } = statement;
   if (!totals) return null;
   const headlines = headlinesOf(statement, reporting);
   const relative = headlines.flatMap(({ range }) =>
@@ -65,16 +66,15 @@ export function TotalsSection({
       <p className="scale-note">
         Each mark is drawn from {low.toFixed(2)} to {high.toFixed(2)} times its own P50, so the
         widths compare. P90 is the low case: 90 % chance of at least this much. Totals are added up
-        trial by trial.{" "}
+        trial by trial, with fields moving together by “{dependence.name}”.{" "}
         {year &&
           `Changes are of the mean, from estimates revised since ${formatDate(year.since)}, at today’s interests and prices. `}
         {prices?.condensatePerStb != null &&
           `Values are undiscounted, at the deck’s flat price: ${reporting.currency}${prices.condensatePerStb.toFixed(2)} per STB of condensate${prices.gasPerMscf === null ? "" : `, ${reporting.currency}${prices.gasPerMscf.toFixed(2)} per Mscf of sales gas`}. `}
-        {basis.risk !== "risked" &&
-          classesIn(statement) > 1 &&
-          "Unrisked totals add reserves and resources of other classes as if every field came; the risked basis weighs each by its chance of commerciality. "}
-        {basis.risk === "risked" &&
-          "Risked: every trial is multiplied by the field’s chance of commerciality, so means are exact and ranges leave out the chance of nothing."}
+        {riskNote(basis.risk, {
+          classes: classesIn(statement),
+          chanceOfNothing: totals.chanceOfNothing,
+        })}
       </p>
     </>
   );

@@ -1,7 +1,6 @@
 import type { RunItemView, RunView } from "@/app/api/v1/runs/schema";
 import type { RunItemState, RunScope } from "@/models/vocabulary";
 import { formatFigure, formatPercent } from "@/components/ui/format";
-import type { Comparison } from "../_queries/runs";
 
 const whole = (count: number) => count.toLocaleString("en-GB");
 
@@ -73,6 +72,17 @@ export function progressWords(run: Pick<RunView, "counts" | "remainingSeconds">)
     .filter(Boolean)
     .join(", ");
 }
+
+/** How recomputed figures compare with those that were there. */
+export interface Comparison {
+  /** estimates that had figures before */
+  compared: number;
+  /** of these, moved by more than `MOVED_BEYOND` standard errors */
+  moved: number;
+}
+
+/** A change beyond two standard errors of the two runs is more than chance usually does. */
+export const MOVED_BEYOND = 2;
 
 /** The finding that heads a run's page. */
 export function runTitle(run: RunView, comparison: Comparison | null): string {

@@ -1,30 +1,31 @@
+"use client";
+
 import type { ImportDetail } from "@/app/api/v1/imports/schema";
+import { RunProgress } from "@/components/runs/run-progress";
 import { Section } from "@/components/ui/section";
-import { Notice, Progress } from "@/components/ui/status";
+import { Notice } from "@/components/ui/status";
 import { LedgerTable } from "@/components/ui/table";
+import { RunAction } from "../../_components/run-action";
+import { useRun } from "../../_queries/runs";
 import { rowsWords } from "./import-words";
 
-/** How far the simulations of the taken rows are, and which could not be run. */
-export function RunProgress({ file }: { file: ImportDetail }) {
+/** How far the run of the taken rows is, with a way to stop it, and which rows could not be run. */
+export function ImportProgress({ file }: { file: ImportDetail }) {
   const { runs, state, rowsApplied, rowsBad, rowsUnchanged } = file;
+  const { data: run } = useRun(state === "applying" || runs.failed.length > 0 ? runs.id : null);
   const left = [
     rowsUnchanged > 0 && `${rowsWords(rowsUnchanged)} unchanged`,
     rowsBad > 0 && `${rowsWords(rowsBad)} left out`,
   ].filter(Boolean);
   return (
     <div className="grid grid-cols-1 gap-3">
-      {state === "applying" && (
-        <Progress
+      {state === "applying" && run && (
+        <RunProgress
+          run={run}
           label="Running the simulations"
-          fraction={runs.total === 0 ? 1 : runs.done / runs.total}
-          detail={`${runs.done} of ${runs.total}`}
           note="The rows are in the book already. You may leave this page; the runs go on."
+          action={<RunAction run={run} action="cancel" />}
         />
-      )}
-      {runs.waiting && (
-        <Notice tone="info" title="The runs are waiting for the worker process.">
-          It is away or busy with other work. Nothing is lost: they start as soon as it is there.
-        </Notice>
       )}
       {state === "applied" && (
         <Notice
@@ -43,6 +44,7 @@ export function RunProgress({ file }: { file: ImportDetail }) {
         <Section
           title={`${rowsWords(runs.failed.length)} could not be run`}
           note="Their drafts are kept, without results."
+          tools={run && <RunAction run={run} action="retry" />}
         >
           <LedgerTable caption="Rows that could not be run">
             <thead>

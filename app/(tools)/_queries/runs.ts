@@ -9,6 +9,7 @@ import {
   type NewRunRequest,
   type RunView,
 } from "@/app/api/v1/runs/schema";
+import { MOVED_BEYOND, type Comparison } from "@/components/runs/run-words";
 import type { RunItemState } from "@/models/vocabulary";
 
 const keys = {
@@ -21,9 +22,6 @@ const keys = {
 
 export const RUNS_PER_PAGE = 20;
 export const ITEMS_PER_PAGE = 50;
-
-/** A change beyond two standard errors of the two runs is more than chance usually does. */
-export const MOVED_BEYOND = 2;
 
 /** What of a run is listed: everything, items of one state, or those whose figures moved. */
 export type ItemFilter = "all" | "moved" | RunItemState;
@@ -78,14 +76,6 @@ export function useRunItems(id: string, show: ItemFilter, offset: number, live: 
     placeholderData: keepPreviousData,
     refetchInterval: live ? 2 * LOOK_EVERY_MS : false,
   });
-}
-
-/** How recomputed figures compare with those that were there. */
-export interface Comparison {
-  /** estimates that had figures before */
-  compared: number;
-  /** of these, moved by more than `MOVED_BEYOND` standard errors */
-  moved: number;
 }
 
 const WHOLE_PAGE = 200;
