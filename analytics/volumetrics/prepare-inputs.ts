@@ -6,9 +6,15 @@ import { planRanges } from "../recovery/plan-ranges";
 import type { Distribution } from "../uncertainty/distribution-schema";
 import { compilePossible } from "../uncertainty/possible-range";
 import { correlationBlocks, type CorrelationBlock } from "../uncertainty/rank-correlation";
-import { caseSetsOf, refuseCorrelatedCases, type CaseSet, type CaseSetMember } from "./case-sets";
+
 import { inputNames, type EstimateInputs, type InputName } from "./inputs-schema";
 import { recoveryNames, type RecoveryName } from "./results-schema";
+import {
+  refuseCorrelatedCases,
+  sharedCasesOf,
+  type CaseHolder,
+  type SharedCases,
+} from "./shared-cases";
 import { usualRanges } from "./usual-ranges";
 import { columns } from "./workspace";
 
@@ -20,7 +26,7 @@ export interface PreparedInputs {
   readonly inputNames: readonly InputName[];
   /** of inputs that are in no case set */
   readonly blocks: readonly CorrelationBlock<InputName>[];
-  readonly caseSets: readonly CaseSet[];
+  readonly caseSets: readonly SharedCases[];
   readonly wellstream: Wellstream;
   readonly plan: CompiledPlan | null;
 }
@@ -56,7 +62,7 @@ export function prepareInputs(inputs: EstimateInputs): PreparedInputs {
       pairs.filter(({ a, b }) => !distributions[a].caseSet && !distributions[b].caseSet),
       labelOf,
     ),
-    caseSets: caseSetsOf([
+    caseSets: sharedCasesOf([
       ...names.map((name) => ({
         input: name,
         planInput: null,
@@ -71,7 +77,7 @@ export function prepareInputs(inputs: EstimateInputs): PreparedInputs {
   };
 }
 
-function planMembers({ plan, inputNames: names, distributions }: CompiledPlan): CaseSetMember[] {
+function planMembers({ plan, inputNames: names, distributions }: CompiledPlan): CaseHolder[] {
   const ranges = planRanges(plan);
   return names.flatMap((name) => {
     const compiled = distributions[name];
