@@ -7,7 +7,7 @@ const whole = (count: number) => count.toLocaleString("en-GB");
 export const estimatesWords = (count: number): string =>
   `${whole(count)} ${count === 1 ? "estimate" : "estimates"}`;
 
-/** "40 s", "3 min", "1 h 20 min": no finer than what is known. */
+/** "40 s", "3 min", "1 h 40 min": no finer than what is known. */
 export function durationWords(seconds: number): string {
   const rounded = Math.max(1, Math.round(seconds));
   if (rounded < 90) return `${rounded} s`;

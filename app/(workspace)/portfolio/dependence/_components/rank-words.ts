@@ -10,7 +10,7 @@ import { formatPercent } from "@/components/ui/format";
  * @returns     0.5 (nothing in common) to 1 (always together)
  * @see W. F. Sheppard, On the application of the theory of error to cases of normal distribution and normal
  *      correlation, Phil. Trans. R. Soc. A 192 (1899) 101-167 (the orthant probability)
- * @example upperHalfTogether(0.3) // => 0.601302
+ * @example upperHalfTogether(0.3) // => 0.601290
  */
 export const upperHalfTogether = (rank: number): number =>
   0.5 + Math.asin(scoreCorrelation(rank)) / Math.PI;

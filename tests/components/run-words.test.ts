@@ -1,0 +1,139 @@
+import { describe, expect, it } from "vitest";
+import type { RunView } from "@/app/api/v1/runs/schema";
+import {
+  durationWords,
+  fractionOf,
+  movedNote,
+  movedWords,
+  outcomeWords,
+  paceWords,
+  progressWords,
+  runTitle,
+} from "@/components/runs/run-words";
+
+const range = { p90: 1, p50: 2, p10: 3, mean: 2 };
+
+function run(change: Partial<RunView> = {}, counts: Partial<RunView["counts"]> = {}): RunView {
+  return {
+    id: "0198f0aa-5c1e-7000-8000-000000000001",
+    kind: "recalculation",
+    state: "finished",
+    title: "Recalculation of the approved book",
+    createdBy: null,
+    createdAt: "2026-12-01T08:00:00.000Z",
+    startedAt: null,
+    finishedAt: null,
+    counts: { total: 22, waiting: 0, running: 0, done: 22, failed: 0, passedOver: 0, ...counts },
+    remainingSeconds: null,
+    workers: [],
+    stalled: false,
+    can: { cancel: false, retry: false },
+    version: 1,
+    ...change,
+  };
+}
+
+describe("durationWords(seconds)", () => {
+  it("is no finer than what is known", () => {
+    expect(durationWords(0.2)).toBe("1 s");
+    expect(durationWords(89)).toBe("89 s");
+    expect(durationWords(100)).toBe("2 min");
+    expect(durationWords(4800)).toBe("80 min");
+    expect(durationWords(6000)).toBe("1 h 40 min");
+    expect(durationWords(7200)).toBe("2 h");
+  });
+});
+
+describe("the progress of a run", () => {
+  const underWay = run(
+    { state: "running", remainingSeconds: 540 },
+    { total: 500, waiting: 376, running: 2, done: 120, failed: 2 },
+  );
+
+  it("counts what needs nothing more", () => {
+    expect(fractionOf(underWay)).toBe(122 / 500);
+    expect(fractionOf(run({}, { total: 0, done: 0 }))).toBe(1);
+  });
+
+  it("says counts, pace and remaining time", () => {
+    expect(paceWords(underWay)).toBe("42 a minute");
+    expect(progressWords(underWay)).toBe("122 of 500, 42 a minute, about 9 min left");
+  });
+
+  it("says how long one takes where a minute is too short for one", () => {
+    const slow = run({ state: "running", remainingSeconds: 600 }, { waiting: 4, running: 1 });
+    expect(paceWords(slow)).toBe("one in 2 min");
+  });
+
+  it("claims no pace before anything is done", () => {
+    expect(paceWords(run({ state: "running" }, { waiting: 22, done: 0 }))).toBeNull();
+  });
+});
+
+describe("runTitle(run, comparison)", () => {
+  it("states the finding of a finished recalculation", () => {
+    expect(runTitle(run(), { compared: 22, moved: 0 })).toBe(
+      "22 of 22 estimates repeat within their sampling error",
+    );
+    expect(runTitle(run(), { compared: 22, moved: 3 })).toMatch(/^19 of 22 estimates repeat/);
+    expect(runTitle(run(), { compared: 1, moved: 0 })).toBe(
+      "1 of 1 estimate repeats within its sampling error",
+    );
+  });
+
+  it("puts failures before everything else", () => {
+    expect(runTitle(run({}, { done: 20, failed: 2 }), { compared: 20, moved: 0 })).toBe(
+      "2 of 22 estimates could not be computed",
+    );
+  });
+
+  it("claims no comparison where there were no results before", () => {
+    expect(runTitle(run(), { compared: 0, moved: 0 })).toBe("22 of 22 estimates computed");
+    expect(runTitle(run(), null)).toBe("22 of 22 estimates computed");
+  });
+
+  it("says where a run stands that has not finished", () => {
+    expect(runTitle(run({ state: "waiting" }), null)).toBe("22 estimates wait for a worker");
+    expect(runTitle(run({ state: "cancelled" }, { done: 7 }), null)).toBe(
+      "Cancelled after 7 of 22 estimates",
+    );
+  });
+});
+
+describe("outcomeWords(run)", () => {
+  it("says that a run stands still instead of a pace", () => {
+    expect(outcomeWords(run({ state: "running", stalled: true }))).toBe("standing still");
+  });
+});
+
+describe("movedWords(item)", () => {
+  const outcome = {
+    trials: 16_384,
+    engineVersion: "2.0.0",
+    before: range,
+    after: range,
+    standardErrors: range,
+    movedStandardErrors: 2.43,
+    settled: null,
+  };
+
+  it("gives the change in standard errors", () => {
+    expect(movedWords({ outcome })).toBe("2.4 SE");
+    expect(movedWords({ outcome: { ...outcome, movedStandardErrors: 0 } })).toBe("the same");
+  });
+
+  it("compares nothing with results that were not there", () => {
+    const first = { ...outcome, before: null, movedStandardErrors: null };
+    expect(movedWords({ outcome: first })).toBe("first results");
+    expect(movedWords({ outcome: null })).toBe("–");
+  });
+});
+
+describe("movedNote(comparison)", () => {
+  it("knows how many move by chance: 13 % at most, by SciPy 1.17.1's norm.cdf(2)", () => {
+    // 1 - (1 - 2 * (1 - norm.cdf(2))) ** 3 = 0.13038
+    expect(movedNote({ compared: 22, moved: 2 })).toMatch(/up to 13\s% of the estimates/);
+    expect(movedNote({ compared: 22, moved: 2 })).not.toMatch(/look at the largest/);
+    expect(movedNote({ compared: 22, moved: 5 })).toMatch(/More than that moved here/);
+  });
+});
