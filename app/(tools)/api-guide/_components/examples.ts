@@ -1,8 +1,13 @@
 import type { z } from "zod";
+import { changeRequestSchema, changeResponseSchema } from "@/app/api/v1/calculations/change/schema";
 import {
   correlationsRequestSchema,
   correlationsResponseSchema,
 } from "@/app/api/v1/calculations/correlations/schema";
+import {
+  sensitivityRequestSchema,
+  sensitivityResponseSchema,
+} from "@/app/api/v1/calculations/sensitivity/schema";
 import {
   distributionRequestSchema,
   distributionResponseSchema,
@@ -101,6 +106,35 @@ export const simulationExample: z.input<typeof simulationRequestSchema> = {
   seed: 1,
 };
 
+export const sensitivityExample: z.input<typeof sensitivityRequestSchema> = {
+  inputs: simulationExample.inputs,
+  seed: 1,
+  trials: 2000,
+  sampling: "latinHypercube",
+  result: "condensateRecoverableStb",
+  chosen: { from: 0.9, to: 1 },
+};
+
+const { inputs: exampleInputs } = simulationExample;
+const exampleRun = { seed: 1, trials: 2000, sampling: "latinHypercube" } as const;
+
+export const changeExample: z.input<typeof changeRequestSchema> = {
+  from: { ...exampleRun, inputs: exampleInputs },
+  to: {
+    ...exampleRun,
+    inputs: {
+      ...exampleInputs,
+      uncertain: {
+        ...exampleInputs.uncertain,
+        areaAcres: { distribution: { kind: "lognormalP90P10", p90: 1900, p10: 3500 } },
+        porosity: { distribution: { kind: "normalP90P10", p90: 0.12, p10: 0.16 } },
+      },
+    },
+  },
+  result: "condensateRecoverableStb",
+  percentile: "p50",
+};
+
 /** The stateless calculations, in the order in which an estimate needs them. */
 export const calculations: readonly Calculation[] = [
   {
@@ -153,5 +187,23 @@ export const calculations: readonly Calculation[] = [
     request: simulationRequestSchema,
     response: simulationResponseSchema,
     example: simulationExample,
+  },
+  {
+    name: "sensitivity",
+    title: "What drives a result",
+    purpose:
+      "Rank regression, variance-based shares, what each input is worth knowing, and what the trials between two chances share.",
+    request: sensitivityRequestSchema,
+    response: sensitivityResponseSchema,
+    example: sensitivityExample,
+  },
+  {
+    name: "change",
+    title: "What explains a change",
+    purpose:
+      "How much each difference between two estimates explains of the move of a percentile, averaged over the orders of making the changes.",
+    request: changeRequestSchema,
+    response: changeResponseSchema,
+    example: changeExample,
   },
 ];

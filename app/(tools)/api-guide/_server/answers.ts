@@ -11,7 +11,9 @@ import {
   recoveryRequestSchema,
 } from "@/app/api/v1/calculations/recovery-schema";
 import { materialBalanceRequestSchema } from "@/app/api/v1/calculations/material-balance-schema";
+import { changeRequestSchema } from "@/app/api/v1/calculations/change/schema";
 import { correlationsRequestSchema } from "@/app/api/v1/calculations/correlations/schema";
+import { sensitivityRequestSchema } from "@/app/api/v1/calculations/sensitivity/schema";
 import { distributionRequestSchema } from "@/app/api/v1/calculations/distribution/schema";
 import {
   inPlaceRequestSchema,
@@ -32,10 +34,13 @@ import {
   calculateMaterialBalance,
   calculateOnFluid,
 } from "@/services/calculations-of-fluids";
+import { calculateChange, calculateSensitivity } from "@/services/sensitivity";
 import {
+  changeExample,
   correlationsExample,
   distributionExample,
   inPlaceExample,
+  sensitivityExample,
   simulationExample,
   wellstreamExample,
   zFactorExample,
@@ -103,6 +108,8 @@ async function calculate(): Promise<Record<string, unknown>> {
       results: { condensateRecoverableStb: results.condensateRecoverableStb },
       drivers: { condensateRecoverableStb: drivers.condensateRecoverableStb.slice(0, 1) },
     },
+    sensitivity: await calculateSensitivity(sensitivityRequestSchema.parse(sensitivityExample)),
+    change: await calculateChange(changeRequestSchema.parse(changeExample)),
     ...(await calculateFluids()),
   };
 }
