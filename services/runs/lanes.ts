@@ -5,8 +5,8 @@ import { enqueueUnlessWaiting } from "../queue/queue";
 /** Lanes of one run: more than the threads of all workers together would only look and find nothing. */
 const MOST_LANES = 16;
 
-/** Who waits in front of a screen goes before who left for lunch. */
-const priorities: Record<RunKind, number> = { untilSettled: 2, import: 1, recalculation: 0 };
+/** Who waits in front of a screen goes before who left for lunch; higher goes first. */
+export const priorities: Record<RunKind, number> = { untilSettled: 2, import: 1, recalculation: 0 };
 
 interface LanesOf {
   id: string;

@@ -21,7 +21,7 @@ import { log } from "../log";
 import { inTransaction } from "../transaction";
 import { computeItem, endingOf, type Ending } from "./compute-item";
 import { finishRunIfDone } from "./finish-run";
-import { sendLane, sendLanes } from "./lanes";
+import { priorities, sendLane, sendLanes } from "./lanes";
 import { LatestOnly } from "./latest-only";
 import { isUnfinished } from "./overview";
 import { patiently } from "./patience";
@@ -86,28 +86,46 @@ export class RunWorker {
     await Promise.all(this.loops);
   }
 
-  /** One lane: takes items of a run until none can be taken, or it is another run's turn. */
+  /** One lane: takes items of its run, then of any other, until none can be taken or it is another lane's turn. */
   async work({ runId, lane }: { runId: string; lane: number }): Promise<void> {
     const { signal } = this.stopping;
     const until = performance.now() + SLICE_MS;
     try {
-      const run = await patiently(() => findRun(runId), signal);
-      if (!run || !isUnfinished(run)) return;
-      await patiently(() => markRunStarted(runId), signal);
-      for (;;) {
+      let run = await patiently(() => this.begin(runId), signal);
+      while (run) {
+        const { id } = run;
         signal.throwIfAborted();
-        const item = await patiently(() => this.claim(runId), signal);
-        if (item === null) break;
-        await this.treat(run, item);
-        if (performance.now() > until) {
-          await patiently(() => sendLane(run, lane), signal);
-          return;
+        const item = await patiently(() => this.claim(id), signal);
+        if (item === null) {
+          await patiently(() => finishRunIfDone(id), signal);
+          run = await patiently(() => this.anotherRun(), signal);
+          continue;
         }
+        await this.treat(run, item);
+        if (performance.now() < until) continue;
+        const { kind } = run;
+        await patiently(() => sendLane({ id, kind }, lane), signal);
+        return;
       }
-      await patiently(() => finishRunIfDone(runId), signal);
     } catch (error) {
       if (!(error instanceof WorkerStops)) throw error;
     }
+  }
+
+  private async begin(runId: string): Promise<Run | null> {
+    const run = await findRun(runId);
+    if (!run || !isUnfinished(run)) return null;
+    await markRunStarted(runId);
+    return run;
+  }
+
+  /** The run that most deserves a lane which has nothing left to do for its own. */
+  private async anotherRun(): Promise<Run | null> {
+    const open = await listOpenRuns(MOST_ATTEMPTS);
+    const [next] = open
+      .filter(({ claimable }) => claimable > 0)
+      .sort((a, b) => priorities[b.kind] - priorities[a.kind]);
+    return next ? this.begin(next.id) : null;
   }
 
   private claim(runId: string): Promise<ClaimedItem | null> {
