@@ -19,6 +19,7 @@ import {
   type CompiledDistribution as Compiled,
 } from "@/analytics/uncertainty/distribution";
 import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
+import type { SamplingMethod } from "@/analytics/uncertainty/sampling-schema";
 import {
   AIR_MOLECULAR_WEIGHT,
   baseAtPressure,
@@ -36,6 +37,7 @@ import {
 import { compileInput } from "@/analytics/volumetrics/prepare-inputs";
 import type { SimulationSummary } from "@/analytics/volumetrics/results-schema";
 import { usualRanges } from "@/analytics/volumetrics/usual-ranges";
+import { checkTrials } from "@/analytics/volumetrics/trial-counts";
 import { wellstreamRates, type MeteredRate } from "@/analytics/volumetrics/rates";
 import type { Warning } from "@/analytics/warnings";
 import { runSimulation, type ComputeOptions } from "./compute/pool";
@@ -228,12 +230,13 @@ const finiteOrNull = (value: number) => (Number.isFinite(value) ? value : null);
  * @param options.signal  gives it up: a preview is abandoned with the next keystroke
  */
 export async function calculateSimulation(
-  question: { inputs: EstimateInputs; trials: number; seed: number },
+  question: { inputs: EstimateInputs; trials: number; seed: number; sampling: SamplingMethod },
   options: ComputeOptions = {},
 ): Promise<SimulationSummary> {
-  const { inputs, trials, seed } = question;
+  const { inputs, trials, seed, sampling } = question;
+  refuseImpossible("", () => checkTrials(trials, sampling));
   refuseImpossible("inputs", () => checkInputs(inputs));
-  const { summary } = await runSimulation(inputs, { trials, seed }, options);
+  const { summary } = await runSimulation(inputs, { trials, seed, sampling }, options);
   return summary;
 }
 

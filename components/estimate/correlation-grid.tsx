@@ -1,51 +1,98 @@
 "use client";
 
-import { useState, type CSSProperties } from "react";
+import { useState, type CSSProperties, type KeyboardEvent } from "react";
 import { inputNames, type InputName } from "@/analytics/volumetrics/inputs-schema";
+import type { FixedInputs } from "./correlation-words";
 import { correlationOf, type Correlation } from "./estimate-text";
 import { inputCatalogue } from "./input-catalogue";
 
 export interface CorrelationGridProps {
-  /** inputs that are sampled, in their order */
-  names?: readonly InputName[];
   pairs: readonly Correlation[];
+  /** inputs that take no correlation, with the reason */
+  fixed?: FixedInputs;
+  /** pairs that contradict each other */
+  conflicts?: readonly Pick<Correlation, "a" | "b">[];
   /** absent: the grid is read, not typed */
   onChange?: (a: InputName, b: InputName, rank: number) => void;
 }
 
-/** Pairs below the diagonal, so that each stands once. */
-export function CorrelationGrid({ names = inputNames, pairs, onChange }: CorrelationGridProps) {
-  const rows = names.slice(1);
-  const columns = names.slice(0, -1);
+const steps: Record<string, readonly [rows: number, columns: number]> = {
+  ArrowUp: [-1, 0],
+  ArrowDown: [1, 0],
+  Enter: [1, 0],
+};
+
+/**
+ * The whole matrix: what is typed on one side of the diagonal stands on the other too. The Tab key goes through the
+ * lower half, so that it meets each pair once; up, down and Enter go along a column.
+ */
+export function CorrelationGrid({
+  pairs,
+  fixed = {},
+  conflicts = [],
+  onChange,
+}: CorrelationGridProps) {
+  function handleKey(event: KeyboardEvent<HTMLTableElement>) {
+    const step = steps[event.key];
+    const cell = (event.target as HTMLElement).closest("td");
+    if (!step || !cell) return;
+    const row = cell.parentElement as HTMLTableRowElement;
+    const body = row.parentElement as HTMLTableSectionElement;
+    for (
+      let next = row.sectionRowIndex + step[0];
+      next >= 0 && next < body.rows.length;
+      next += step[0]
+    ) {
+      const input = body.rows[next].cells[cell.cellIndex].querySelector("input");
+      if (!input) continue;
+      event.preventDefault();
+      input.focus();
+      return;
+    }
+  }
+
   return (
     <div className="table-scroll" role="region" aria-label="Rank correlations" tabIndex={0}>
-      <table className="correlation-grid">
+      <table className="correlation-grid" onKeyDown={handleKey}>
         <caption className="sr-only">
           Rank correlation between each two inputs, from −1 to 1; 0 is independent
         </caption>
         <thead>
           <tr>
             <td />
-            {columns.map((name) => (
-              <th key={name} scope="col">
+            {inputNames.map((name) => (
+              <th key={name} scope="col" data-fixed={fixed[name] && ""}>
                 {inputCatalogue[name].short}
               </th>
             ))}
           </tr>
         </thead>
         <tbody>
-          {rows.map((row, rowIndex) => (
+          {inputNames.map((row, rowIndex) => (
             <tr key={row}>
-              <th scope="row">{inputCatalogue[row].short}</th>
-              {columns.map((column, columnIndex) =>
-                columnIndex > rowIndex ? (
-                  <td key={column} className="off" />
+              <th scope="row" data-fixed={fixed[row] && ""}>
+                {inputCatalogue[row].short}
+              </th>
+              {inputNames.map((column, columnIndex) =>
+                row === column ? (
+                  <td key={column} data-diagonal="">
+                    1
+                  </td>
+                ) : fixed[row] || fixed[column] ? (
+                  <td key={column} data-fixed="" data-sign="zero">
+                    <span aria-hidden="true">–</span>
+                    <span className="sr-only">takes none</span>
+                  </td>
                 ) : (
                   <Cell
                     key={column}
                     a={column}
                     b={row}
                     rank={correlationOf(pairs, column, row)}
+                    isMirror={columnIndex > rowIndex}
+                    isConflict={conflicts.some(
+                      ({ a, b }) => (a === row && b === column) || (a === column && b === row),
+                    )}
                     onChange={onChange}
                   />
                 ),
@@ -62,6 +109,9 @@ interface CellProps {
   a: InputName;
   b: InputName;
   rank: number;
+  /** above the diagonal, where every pair stands a second time */
+  isMirror: boolean;
+  isConflict: boolean;
   onChange?: (a: InputName, b: InputName, rank: number) => void;
 }
 
@@ -73,27 +123,29 @@ export function readRank(text: string): number | null {
   return text.trim() !== "" && value >= -1 && value <= 1 ? value : null;
 }
 
-function Cell({ a, b, rank, onChange }: CellProps) {
+function Cell({ a, b, rank, isMirror, isConflict, onChange }: CellProps) {
   const [typed, setTyped] = useState<string | null>(null);
   const label = `${inputCatalogue[a].label} with ${inputCatalogue[b].label}`;
   const sign = rank === 0 ? "zero" : rank > 0 ? "positive" : "negative";
   const style = { "--strength": Math.abs(rank) } as CSSProperties;
+  const marks = { "data-sign": sign, "data-conflict": isConflict ? "" : undefined, style };
   if (!onChange) {
     return (
-      <td data-sign={sign} style={style}>
+      <td {...marks}>
         <span>{written(rank)}</span>
       </td>
     );
   }
   const isInvalid = typed !== null && readRank(typed) === null;
   return (
-    <td data-sign={sign} style={style}>
+    <td {...marks}>
       <input
         type="text"
         inputMode="decimal"
         autoComplete="off"
+        tabIndex={isMirror ? -1 : undefined}
         aria-label={label}
-        aria-invalid={isInvalid || undefined}
+        aria-invalid={isInvalid || isConflict || undefined}
         title={isInvalid ? "From −1 to 1" : undefined}
         value={typed ?? written(rank)}
         onFocus={(event) => event.target.select()}

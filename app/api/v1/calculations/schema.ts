@@ -1,6 +1,7 @@
 import { z } from "zod";
 import { fluidTypes } from "@/analytics/fluid/fluid-type";
 import { separatorTestSchema } from "@/analytics/fluid/separator-test-schema";
+import { samplingMethods } from "@/analytics/uncertainty/sampling-schema";
 import { estimateInputsSchema } from "@/analytics/volumetrics/inputs-schema";
 import { simulationSummarySchema } from "@/analytics/volumetrics/results-schema";
 import { meteredRateSchema } from "@/analytics/volumetrics/rates";
@@ -183,6 +184,8 @@ export const simulationRequestSchema = z
     inputs: estimateInputsSchema,
     trials: z.number().int().min(100).max(MAXIMUM_PREVIEW_TRIALS).default(2_000),
     seed: z.number().int().min(0).max(2_147_483_647).default(1),
+    /** scrambled Sobol points need a power of two of trials, at least 1,024 */
+    sampling: z.enum(samplingMethods).default("latinHypercube"),
   })
   .strict();
 export type SimulationRequest = z.infer<typeof simulationRequestSchema>;

@@ -1,10 +1,7 @@
 "use client";
 
-import { inputNames } from "@/analytics/volumetrics/inputs-schema";
 import { waitingWords } from "@/components/estimate/checklist";
-import { CorrelationGrid } from "@/components/estimate/correlation-grid";
 import { Drivers } from "@/components/estimate/drivers";
-import { isWorkedOut } from "@/components/estimate/estimate-text";
 import { ExceedanceSection } from "@/components/estimate/exceedance-section";
 import { FindingList } from "@/components/estimate/finding-list";
 import { inputOfPath } from "@/components/estimate/input-catalogue";
@@ -16,8 +13,10 @@ import { Columns, Section, Stack } from "@/components/ui/section";
 import { EmptyState, Notice, Skeleton } from "@/components/ui/status";
 import { useReservoir } from "../_editor/reservoir-context";
 import { useChecklist } from "../_editor/use-checklist";
+import { CorrelationsSection } from "./correlations-section";
 import { LiveFoot } from "./live-foot";
 import { Revisions } from "./revisions";
+import { SamplingSection } from "./sampling-section";
 
 /** The engineer's main place: ranges at the left, what they come to at the right, as they are typed. */
 export function InputsTab() {
@@ -61,22 +60,10 @@ export function InputsTab() {
             />
             <OtherWarnings />
           </section>
+          <CorrelationsSection text={text} draft={draft} />
           <Columns>
-            <Section
-              title="Inputs that move together"
-              note={
-                draft
-                  ? "Rank correlation. Type in a cell, from −1 to 1; 0 is independent. Hatched: they move against each other."
-                  : "Rank correlation. Hatched: they move against each other."
-              }
-            >
-              <CorrelationGrid
-                names={inputNames.filter((name) => !reading.plan || !isWorkedOut(name))}
-                pairs={text.correlations}
-                onChange={draft?.setCorrelation}
-              />
-            </Section>
             <Exceedance />
+            {draft && <SamplingSection />}
           </Columns>
         </Stack>
         <aside className="editor-side" aria-label="Results">

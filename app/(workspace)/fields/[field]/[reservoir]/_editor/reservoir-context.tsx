@@ -2,6 +2,7 @@
 
 import { createContext, useContext, useMemo, useState, type ReactNode } from "react";
 import type { SimulationSummary } from "@/analytics/volumetrics/results-schema";
+import { DEFAULT_SAMPLING } from "@/analytics/volumetrics/trial-counts";
 import type { Warning } from "@/analytics/warnings";
 import { useCan } from "@/app/_client/use-session";
 import type { EstimateBodyView } from "@/app/api/v1/estimates/schema";
@@ -100,7 +101,10 @@ function TypingProvider({ place, page, children }: ProviderProps) {
     onSaved: take,
   });
   const stored = draft.isSaved ? (open?.summary ?? null) : null;
-  const live = useLiveResults(stored ? null : draft.reading.estimate, open?.seed ?? 1);
+  const live = useLiveResults(stored ? null : draft.reading.estimate, {
+    seed: open?.seed ?? 1,
+    sampling: open?.sampling ?? DEFAULT_SAMPLING,
+  });
   const summary = stored ?? live.summary;
   const isStale = stored === null && live.isStale;
 

@@ -13,11 +13,12 @@ import {
   textOfInputs,
   withCorrelation,
   withInput,
+  type Correlation,
   type EstimateText,
 } from "@/components/estimate/estimate-text";
 import type { InputText } from "@/components/estimate/input-text";
 import type { PlanText } from "@/components/estimate/plan-text";
-import { saveDraft } from "../_queries/reservoir-page";
+import { saveDraft, type DraftChange, type SamplingChoice } from "../_queries/reservoir-page";
 import { dropBackup, readBackup, writeBackup, type Backup } from "./draft-backup";
 
 const SAVE_PAUSE_MS = 1_200;
@@ -103,27 +104,37 @@ export function useDraft(start: DraftStart) {
     }
   }
 
+  const send = useCallback(
+    async (change: Partial<DraftChange>): Promise<EstimateView | null> => {
+      if (!base.estimateId || base.version === null) return null;
+      setProgress({ busy: true, failure: null });
+      try {
+        const saved = await saveDraft(base.estimateId, base.version, change);
+        setBase(baseOf(saved));
+        onSaved(saved);
+        setProgress({ busy: false, failure: null });
+        return saved;
+      } catch (error) {
+        const current = conflictOf(error);
+        if (current) setTheirs(current);
+        setProgress({ busy: false, failure: current ? null : errorWords(error) });
+        return null;
+      }
+    },
+    [base, onSaved],
+  );
+
   const save = useCallback(async (): Promise<EstimateView | null> => {
-    if (!base.estimateId || base.version === null || !reading.estimate) return null;
-    setProgress({ busy: true, failure: null });
-    try {
-      const saved = await saveDraft(base.estimateId, base.version, {
-        inputs: reading.estimate,
-        ...(pendingSample.current !== undefined && { fluidSampleId: pendingSample.current }),
-      });
-      pendingSample.current = undefined;
-      setBase(baseOf(saved));
-      setRestored(null);
-      onSaved(saved);
-      setProgress({ busy: false, failure: null });
-      return saved;
-    } catch (error) {
-      const current = conflictOf(error);
-      if (current) setTheirs(current);
-      setProgress({ busy: false, failure: current ? null : errorWords(error) });
-      return null;
-    }
-  }, [base, reading.estimate, onSaved]);
+    if (!reading.estimate) return null;
+    const saved = await send({
+      inputs: reading.estimate,
+      ...(pendingSample.current !== undefined && { fluidSampleId: pendingSample.current }),
+    });
+    if (!saved) return null;
+    pendingSample.current = undefined;
+    setRestored(null);
+    return saved;
+  }, [reading.estimate, send]);
 
   const isReady = base.estimateId !== null && reading.estimate !== null && !isSaved && !theirs;
   useEffect(() => {
@@ -168,6 +179,8 @@ export function useDraft(start: DraftStart) {
     isSaved,
     saveState: saveStateOf({ isSaved, theirs, progress, canSave: isReady }),
     save,
+    /** How the trials are drawn: saved by themselves, whatever stands in the fields. */
+    saveSampling: useCallback((sampling: SamplingChoice) => send(sampling), [send]),
     setInput: useCallback(
       (name: DriverName, input: InputText) => change((now) => withInput(now, name, input)),
       [change],
@@ -185,6 +198,10 @@ export function useDraft(start: DraftStart) {
     setCorrelation: useCallback(
       (a: InputName, b: InputName, rank: number) =>
         change((now) => ({ ...now, correlations: withCorrelation(now.correlations, a, b, rank) })),
+      [change],
+    ),
+    setCorrelations: useCallback(
+      (correlations: Correlation[]) => change((now) => ({ ...now, correlations })),
       [change],
     ),
     /** @param sampleId  `null` when the sheet is no laboratory's */

@@ -2,12 +2,16 @@
 
 import { keepPreviousData, useQuery } from "@tanstack/react-query";
 import { useEffect, useState } from "react";
+import type { SamplingMethod } from "@/analytics/uncertainty/sampling-schema";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import { request } from "@/app/_client/request";
 import { simulationResponseSchema } from "@/app/api/v1/calculations/schema";
 
-/** Few enough to answer while typing; P90 of a lognormal spread of 0.8 is known to about 3 %. */
-const LIVE_TRIALS = 2_000;
+/**
+ * Few enough to answer while typing; P90 of a lognormal spread of 0.8 is known to about 3 %. A power of two, which
+ * suits either way of drawing trials.
+ */
+const LIVE_TRIALS = 2_048;
 const PAUSE_MS = 250;
 
 /** The value once it has stood still for a while. */
@@ -25,16 +29,19 @@ export function useSettled<Value>(value: Value, pauseMs = PAUSE_MS): Value {
  * an older question is given up.
  *
  * @param inputs  `null` while something is missing or impossible
- * @param seed    the draft's own, so that the full run continues the preview rather than rolling new dice
+ * @param drawn   seed and method of the draft, so that the full run continues the preview rather than rolling new dice
  */
-export function useLiveResults(inputs: EstimateInputs | null, seed: number) {
+export function useLiveResults(
+  inputs: EstimateInputs | null,
+  { seed, sampling }: { seed: number; sampling: SamplingMethod },
+) {
   const settled = useSettled(inputs);
   const query = useQuery({
-    queryKey: ["simulation", settled, seed],
+    queryKey: ["simulation", settled, seed, sampling],
     queryFn: ({ signal }) =>
       request("/api/v1/calculations/simulation", {
         method: "POST",
-        body: { inputs: settled, trials: LIVE_TRIALS, seed },
+        body: { inputs: settled, trials: LIVE_TRIALS, seed, sampling },
         schema: simulationResponseSchema,
         signal,
       }),

@@ -30,7 +30,10 @@ export function useReservoirPage({ field, reservoir }: Place) {
 const post = (path: string, version: number | undefined, body?: unknown) =>
   request(path, { method: "POST", version, body, schema: estimateSchema });
 
-export interface DraftChange {
+/** How the trials of an estimate are drawn. */
+export type SamplingChoice = Pick<EstimateView, "sampling" | "trials" | "seed">;
+
+export interface DraftChange extends SamplingChoice {
   inputs: EstimateView["inputs"];
   fluidSampleId?: string | null;
   note?: string;
