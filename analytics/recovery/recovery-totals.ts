@@ -86,6 +86,36 @@ export function createTotals(): RecoveryTotals {
   };
 }
 
+/** Sums over the trials of two parts of a run. */
+export function addTotals(a: RecoveryTotals, b: RecoveryTotals): RecoveryTotals {
+  const phases = (x: Record<RecoveryPhaseName, number>, y: Record<RecoveryPhaseName, number>) => ({
+    aboveDewPoint: x.aboveDewPoint + y.aboveDewPoint,
+    belowDewPoint: x.belowDewPoint + y.belowDewPoint,
+    cycling: x.cycling + y.cycling,
+    blowdown: x.blowdown + y.blowdown,
+  });
+  const refused = { ...a.refused };
+  for (const [name, count] of Object.entries(b.refused) as [RefusalName, number][]) {
+    refused[name] = (refused[name] ?? 0) + count;
+  }
+  return {
+    trials: a.trials + b.trials,
+    condensateInPlaceStb: a.condensateInPlaceStb + b.condensateInPlaceStb,
+    dryGasInPlaceScf: a.dryGasInPlaceScf + b.dryGasInPlaceScf,
+    leftInRockStb: a.leftInRockStb + b.leftInRockStb,
+    leftInGasStb: a.leftInGasStb + b.leftInGasStb,
+    condensateStb: phases(a.condensateStb, b.condensateStb),
+    gasScf: phases(a.gasScf, b.gasScf),
+    injectedScf: a.injectedScf + b.injectedScf,
+    producedWhileCyclingScf: a.producedWhileCyclingScf + b.producedWhileCyclingScf,
+    fuelScf: a.fuelScf + b.fuelScf,
+    makeUpScf: a.makeUpScf + b.makeUpScf,
+    pressureAtEndPsia: a.pressureAtEndPsia + b.pressureAtEndPsia,
+    saturatedTrials: a.saturatedTrials + b.saturatedTrials,
+    refused,
+  };
+}
+
 const DEPLETION_PHASES = ["aboveDewPoint", "belowDewPoint"] as const;
 const CYCLING_PHASES = [...DEPLETION_PHASES, "cycling", "blowdown"] as const;
 

@@ -44,7 +44,7 @@ export function computeSensitivity(
   inputs: EstimateInputs,
   { seed, trials, sampling, result, chosen }: SensitivityOptions,
 ): Sensitivity {
-  const workspace = createWorkspace(trials);
+  const workspace = createWorkspace(trials, { keepInputs: true });
   const { summary } = simulate(inputs, { seed, trials, sampling, workspace });
   const counting = createOrderWorkspace(trials);
   const values = workspace.outputs[result];

@@ -30,6 +30,41 @@ export function rankDrivers<Name extends string>(
     .sort((a, b) => b.shareOfSpread - a.shareOfSpread);
 }
 
+/**
+ * Spearman's rank correlation of an input with a result, over trials made of replicates: the correlation of the
+ * stratum that each trial drew in its replicate, which is the input's rank there, with the result's rank among all
+ * trials.
+ *
+ * @param strata  0 to the replicate's length - 1, each once a replicate
+ * @param grades  relative ranks of the result, between 0 and 1
+ * @param starts  where each replicate begins, and the number of trials last
+ */
+export function gradeCorrelation(
+  strata: Uint16Array,
+  grades: Float64Array,
+  starts: readonly number[],
+): number {
+  const replicates = starts.length - 1;
+  const count = starts[replicates];
+  let products = 0;
+  let spread = 0;
+  for (let r = 0; r < replicates; r += 1) {
+    const size = starts[r + 1] - starts[r];
+    let sum = 0;
+    let total = 0;
+    for (let t = starts[r]; t < starts[r + 1]; t += 1) {
+      const grade = grades[t] - 0.5;
+      sum += strata[t] * grade;
+      total += grade;
+    }
+    products += (sum - 0.5 * (size - 1) * total) / size;
+    spread += (size * (1 - 1 / (size * size))) / 12;
+  }
+  let squares = 0;
+  for (let t = 0; t < count; t += 1) squares += (grades[t] - 0.5) ** 2;
+  return squares > 0 && spread > 0 ? products / Math.sqrt(spread * squares) : 0;
+}
+
 /** Rows of a one-at-a-time study: row 0 has every input at P50, then a pair per input, at its P90 and at its P10. */
 export function swingColumns(ranges: readonly Omit<SampleRange, "mean">[]): Float64Array[] {
   return ranges.map((range, i) => {

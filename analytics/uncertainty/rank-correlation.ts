@@ -182,12 +182,24 @@ export function correlateScores(
       value: count,
     });
   }
-  const weights = product(factor, invertLower(ownFactor, k), k);
+  combineScores(columns, count, product(factor, invertLower(ownFactor, k), k));
+}
+
+/**
+ * Gives independent columns of scores the correlations of a lower triangular factor L: each trial's row z becomes L z.
+ * The columns are overwritten.
+ */
+export function combineScores(
+  columns: readonly Float64Array[],
+  count: number,
+  factor: Float64Array,
+): void {
+  const k = columns.length;
   // From the last column up: each needs the untouched columns before it.
   for (let j = k - 1; j >= 0; j -= 1) {
     const column = columns[j];
-    scale(column, weights[j * k + j], count);
-    for (let i = 0; i < j; i += 1) addScaled(column, columns[i], weights[j * k + i], count);
+    scale(column, factor[j * k + j], count);
+    for (let i = 0; i < j; i += 1) addScaled(column, columns[i], factor[j * k + i], count);
   }
 }
 
@@ -198,6 +210,7 @@ function dot(x: Float64Array, y: Float64Array, count: number): number {
 }
 
 function scale(x: Float64Array, factor: number, count: number): void {
+  if (factor === 1) return;
   for (let i = 0; i < count; i += 1) x[i] *= factor;
 }
 
@@ -222,7 +235,6 @@ function product(left: Float64Array, right: Float64Array, n: number): Float64Arr
 export interface RankWorkspace {
   readonly words: Uint32Array;
   readonly order: Uint32Array;
-  readonly scores: Float64Array;
   readonly scoreColumns: readonly Float64Array[];
   readonly counting: OrderWorkspace;
 }
@@ -232,12 +244,14 @@ export interface RankWorkspace {
  * correlations. Each input keeps exactly its own values: only their order is chosen.
  *
  * @param randoms  one stream per input of the block
+ * @param scores   `normalScores(count)`
  * @param ranks    one array of n ranks per input, overwritten
  */
 export function fillCorrelatedRanks(
   factor: Float64Array,
   randoms: readonly RandomStream[],
   count: number,
+  scores: Float64Array,
   workspace: RankWorkspace,
   ranks: readonly Uint32Array[],
 ): void {
@@ -245,7 +259,7 @@ export function fillCorrelatedRanks(
   ranks.forEach((own, i) => {
     fillPermutation(randoms[i], own, count, workspace.words);
     const column = columns[i];
-    for (let t = 0; t < count; t += 1) column[t] = workspace.scores[own[t]];
+    for (let t = 0; t < count; t += 1) column[t] = scores[own[t]];
   });
   correlateScores(columns, count, factor);
   for (let i = 1; i < ranks.length; i += 1) {

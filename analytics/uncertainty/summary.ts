@@ -1,3 +1,4 @@
+import { modeOfCurve } from "./mode";
 import { countSample, quantileSorted, type OrderWorkspace } from "../numerics/order-statistics";
 
 /** P90 is the low case: 90 % of the values are at least this. */
@@ -10,6 +11,8 @@ export interface SampleRange {
 
 export interface SampleSummary extends SampleRange {
   standardDeviation: number;
+  /** where values are densest */
+  mode: number;
   minimum: number;
   maximum: number;
   standardErrors: SampleRange;
@@ -50,55 +53,150 @@ export function rangeOfSorted(sorted: ArrayLike<number>, count: number): SampleR
 }
 
 /**
- * Everything a screen shows about one simulated quantity: R-7 percentiles, moments, a 40-bar histogram and a
- * 101-point exceedance curve.
+ * P90, P50, P10 and mean of a stratified sample of one input, one draw in each stratum, ascending: quantiles by the R-5
+ * rule, which puts value i at the middle of its stratum, (i + 1/2) / n.
+ */
+export function rangeOfStrata(sorted: Float64Array, count: number): SampleRange {
+  let sum = 0;
+  for (let i = 0; i < count; i += 1) sum += sorted[i];
+  const quantile = (p: number) => {
+    const h = Math.min(Math.max(count * p - 0.5, 0), count - 1);
+    const below = Math.min(Math.floor(h), count - 2);
+    return sorted[below] + (h - below) * (sorted[below + 1] - sorted[below]);
+  };
+  return { p90: quantile(0.1), p50: quantile(0.5), p10: quantile(0.9), mean: sum / count };
+}
+
+/**
+ * Everything a screen shows about one simulated quantity: R-7 percentiles, moments, the mode, a 40-bar histogram and a
+ * 101-point exceedance curve of all trials together, with standard errors.
  *
- * Standard errors are those of independent trials: sd / sqrt(n) for the mean, sqrt(p (1 - p) / n) / f for a
- * percentile, with the density f from the sample itself (the slope of its distribution between neighbouring
- * percentiles). For a Latin hypercube sample they are on the safe side: its variance is at most n / (n - 1) times
- * that of independent trials and usually about half.
+ * Standard errors come from sectioning. The trials are R replicates, independent of each other and alike, however they
+ * were drawn inside; in each one F_r, the share of its trials below the percentile of all trials, scatters about p, and
+ *
+ *     SE(percentile) = s(F_1 ... F_R) / sqrt(R) / f        SE(mean) = s(means) / sqrt(R)
+ *
+ * with s the standard deviation (R - 1) and f the density there, from the slope of the sample's own distribution. With
+ * 16 replicates the error is itself known to about 18 % (1 / sqrt(2 x 15)), and an interval of a chance stated takes
+ * Student's t with R - 1 degrees of freedom.
+ *
+ * With one replicate they are those of independent trials, sd / sqrt(n) and sqrt(p (1 - p) / n) / f: for runs too short
+ * to divide. For a Latin hypercube that is on the safe side: its variance is at most n / (n - 1) times that of
+ * independent trials and usually about half.
  *
  * @param values  finite numbers, not changed
  * @param count   how many of them to use
- * @see A. M. Mood, F. A. Graybill, D. C. Boes, Introduction to the Theory of Statistics, 3rd ed. (1974), section
- *      VI.5.3 (asymptotic variance of a sample quantile); A. B. Owen, Monte Carlo variance of scrambled net
- *      quadrature, SIAM J. Numer. Anal. 34 (1997) 1884-1910 (the bound for Latin hypercubes)
+ * @param starts  where each replicate's values begin, and `count` last
+ * @see M. K. Nakayama, Confidence intervals for quantiles using sectioning when applying variance-reduction techniques,
+ *      ACM Trans. Model. Comput. Simul. 24 (2014) 19; S. Asmussen, P. W. Glynn, Stochastic Simulation (2007), section
+ *      III.5; A. M. Mood, F. A. Graybill, D. C. Boes, Introduction to the Theory of Statistics, 3rd ed. (1974), section
+ *      VI.5.3 (independent trials); A. B. Owen, Monte Carlo variance of scrambled net quadrature, SIAM J. Numer. Anal.
+ *      34 (1997) 1884-1910 (the bound for Latin hypercubes)
  */
 export function summariseSample(
   values: ArrayLike<number>,
   count: number,
   workspace: OrderWorkspace,
+  starts: readonly number[] = [0, count],
 ): SampleSummary {
   const counted = countSample(values, count, CURVE_PROBABILITIES, workspace);
   const { minimum, maximum, mean, standardDeviation, quantiles, histogram } = counted;
-  const error = (percent: number) => quantileError(quantiles, percent, count);
   return {
     p90: quantiles[10],
     p50: quantiles[50],
     p10: quantiles[90],
     mean,
+    mode: modeOfCurve(quantiles, count),
     standardDeviation,
     minimum,
     maximum,
-    standardErrors: {
-      p90: error(10),
-      p50: error(50),
-      p10: error(90),
-      mean: standardDeviation / Math.sqrt(count),
-    },
+    standardErrors:
+      starts.length > 2
+        ? sectioned(values, quantiles, starts)
+        : ofIndependentTrials(quantiles, standardDeviation, count),
     histogram: { low: minimum, high: maximum, counts: histogram },
     exceedance: { values: quantiles, probabilities: EXCEEDANCE_PROBABILITIES.slice() },
   };
 }
 
+function ofIndependentTrials(
+  quantiles: readonly number[],
+  standardDeviation: number,
+  count: number,
+): SampleRange {
+  const error = (percent: number) => {
+    const p = percent / 100;
+    return Math.sqrt((p * (1 - p)) / count) * slopeAt(quantiles, percent, count);
+  };
+  return {
+    p90: error(10),
+    p50: error(50),
+    p10: error(90),
+    mean: standardDeviation / Math.sqrt(count),
+  };
+}
+
+function sectioned(
+  values: ArrayLike<number>,
+  quantiles: readonly number[],
+  starts: readonly number[],
+): SampleRange {
+  const replicates = starts.length - 1;
+  const [low, middle, high] = [quantiles[10], quantiles[50], quantiles[90]];
+  const shares = { p90: 0, p50: 0, p10: 0, mean: 0 };
+  const squares = { p90: 0, p50: 0, p10: 0, mean: 0 };
+  for (let r = 0; r < replicates; r += 1) {
+    const size = starts[r + 1] - starts[r];
+    const part = sharesBelow(values, starts[r], starts[r + 1], low, middle, high);
+    for (const level of LEVELS) {
+      const value = part[level] / size;
+      // The mean and the sum of squared deviations so far, by Welford's recurrence.
+      const change = value - shares[level];
+      shares[level] += change / (r + 1);
+      squares[level] += change * (value - shares[level]);
+    }
+  }
+  const count = starts[replicates];
+  const error = (level: keyof SampleRange) =>
+    Math.sqrt(squares[level] / (replicates - 1) / replicates);
+  return {
+    p90: error("p90") * slopeAt(quantiles, 10, count),
+    p50: error("p50") * slopeAt(quantiles, 50, count),
+    p10: error("p10") * slopeAt(quantiles, 90, count),
+    mean: error("mean"),
+  };
+}
+
+const LEVELS = ["p90", "p50", "p10", "mean"] as const;
+
+/** How many values lie below each of three bounds, and the sum of all. */
+function sharesBelow(
+  values: ArrayLike<number>,
+  from: number,
+  to: number,
+  low: number,
+  middle: number,
+  high: number,
+): SampleRange {
+  let belowLow = 0;
+  let belowMiddle = 0;
+  let belowHigh = 0;
+  let sum = 0;
+  for (let i = from; i < to; i += 1) {
+    const value = values[i];
+    sum += value;
+    if (value < low) belowLow += 1;
+    if (value < middle) belowMiddle += 1;
+    if (value < high) belowHigh += 1;
+  }
+  return { p90: belowLow, p50: belowMiddle, p10: belowHigh, mean: sum };
+}
+
 /**
- * sqrt(p (1 - p) / n) / f, with 1 / f the slope of the quantile function over 2 percentiles either side (5 where the
- * sample is too small for that to hold a hundred values).
+ * 1 / f: the slope of the quantile function over 2 percentiles either side (5 where the sample is too small for that to
+ * hold a hundred values).
  */
-function quantileError(quantiles: readonly number[], percent: number, count: number): number {
+function slopeAt(quantiles: readonly number[], percent: number, count: number): number {
   const half = count >= 2500 ? 2 : 5;
-  const inverseDensity =
-    (quantiles[percent + half] - quantiles[percent - half]) / ((2 * half) / 100);
-  const p = percent / 100;
-  return Math.sqrt((p * (1 - p)) / count) * inverseDensity;
+  return (quantiles[percent + half] - quantiles[percent - half]) / ((2 * half) / 100);
 }

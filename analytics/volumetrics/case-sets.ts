@@ -1,107 +1,84 @@
-import { DomainError } from "../errors";
-import type { PlanInputName } from "../recovery/recovery-plan-schema";
-import type { CompiledDistribution } from "../uncertainty/distribution";
+import { rankByCounting } from "../numerics/order-statistics";
+import type { PointSource } from "../uncertainty/points";
+import { rangeOfSample } from "../uncertainty/summary";
 import type { InputName } from "./inputs-schema";
+import type { DriverName } from "./results-schema";
+import type { RangeTotals, SampledInput } from "./sample-inputs";
+import type { InputColumn, SimulationWorkspace } from "./workspace";
 
-/** Inputs that take the same case in every trial: a deeper contact is a larger area and a thicker column. */
+/** Inputs that take the same case in every trial. */
 export interface CaseSet {
-  readonly name: string;
-  /** the same for each of the inputs, in this order */
-  readonly cases: readonly { readonly name: string; readonly weight: number }[];
-  readonly inputs: readonly InputName[];
-  /** inputs of the recovery plan that belong to it as well */
-  readonly planInputs: readonly PlanInputName[];
+  readonly members: readonly SampledInput[];
+  /** cumulative chances of the cases, the last one 1 */
+  readonly bounds: readonly number[];
 }
 
-/** An input that may belong to a set. */
-export interface CaseSetMember {
-  readonly input: InputName | null;
-  readonly planInput: PlanInputName | null;
-  /** where it stands in the estimate's inputs */
-  readonly path: string;
-  /** as in "the area" */
-  readonly label: string;
-  readonly compiled: CompiledDistribution;
-}
-
-/** Chances that differ by no more are the same figure, divided by sums that were rounded differently. */
-const SAME_WEIGHT = 1e-6;
-
-/**
- * The sets of cases that inputs share, in the order in which they first appear.
- *
- * @throws {DomainError} when two inputs of a set do not have the same cases with the same weights in the same order; the
- *   message names both and where they differ
- */
-export function caseSetsOf(members: readonly CaseSetMember[]): CaseSet[] {
-  const sets = new Map<string, CaseSetMember[]>();
-  for (const member of members) {
-    const { caseSet } = member.compiled;
-    if (caseSet === null) continue;
-    const together = sets.get(caseSet) ?? [];
-    const [first] = together;
-    if (first) requireSameCases(caseSet, first, member);
-    sets.set(caseSet, [...together, member]);
-  }
-  return [...sets].map(([name, together]) => ({
-    name,
-    cases: (together[0].compiled.cases ?? []).map((one) => ({
-      name: one.name,
-      weight: one.weight,
-    })),
-    inputs: together.flatMap(({ input }) => input ?? []),
-    planInputs: together.flatMap(({ planInput }) => planInput ?? []),
-  }));
-}
-
-function requireSameCases(set: string, first: CaseSetMember, other: CaseSetMember): void {
-  const [ours, theirs] = [first, other].map(({ compiled }) => compiled.cases ?? []);
-  const details = { input: `${other.path}.scenarios`, caseSet: set };
-  if (ours.length !== theirs.length) {
-    throw new DomainError(
-      `The case set “${set}” has ${ours.length} cases for the ${first.label} and ${theirs.length} for the ` +
-        `${other.label}. Inputs that share a set have the same cases.`,
-      details,
-    );
-  }
-  ours.forEach((mine, i) => {
-    const { name, weight } = theirs[i];
-    if (mine.name !== name) {
-      throw new DomainError(
-        `Case ${i + 1} of the set “${set}” is “${mine.name}” for the ${first.label} and “${name}” for the ` +
-          `${other.label}. Inputs that share a set have the same cases in the same order.`,
-        details,
-      );
-    }
-    if (Math.abs(mine.weight - weight) > SAME_WEIGHT) {
-      const figure = (value: number) => Number(value.toPrecision(4));
-      throw new DomainError(
-        `The case “${name}” of the set “${set}” weighs ${figure(mine.weight)} for the ${first.label} and ` +
-          `${figure(weight)} for the ${other.label}. Inputs that share a set have the same weights.`,
-        details,
-      );
-    }
+export function caseSetsOf(inputs: readonly SampledInput[]): CaseSet[] {
+  const names = new Set(inputs.flatMap(({ distribution: { caseSet } }) => caseSet ?? []));
+  return [...names].map((name) => {
+    const members = inputs.filter(({ distribution }) => distribution.caseSet === name);
+    let sum = 0;
+    const bounds = (members[0].distribution.cases ?? []).map(({ weight }) => (sum += weight));
+    bounds[bounds.length - 1] = 1;
+    return { members, bounds };
   });
 }
 
+interface Addresses {
+  readonly dimensionOf: (name: DriverName) => number;
+  readonly caseDimensionOf: (first: DriverName) => number;
+  readonly columnOf: (name: DriverName) => InputColumn;
+}
+
 /**
- * Refuses rank correlations of inputs that belong to a set: their cases tie them already, and an order within the cases
- * would contradict the case that the set draws.
- *
- * @throws {DomainError} with `input` `correlations`
+ * Draws the case of each trial from a dimension of its own, then every member from its distribution in that case, with
+ * its own dimension: given the case, members are independent.
  */
-export function refuseCorrelatedCases(
-  pairs: readonly { a: InputName; b: InputName; rank: number }[],
-  distributions: Readonly<Record<InputName, CompiledDistribution>>,
-  labelOf: (name: InputName) => string,
+export function placeCases(
+  { members, bounds }: CaseSet,
+  source: PointSource<InputName>,
+  { dimensionOf, caseDimensionOf, columnOf }: Addresses,
+  count: number,
+  workspace: SimulationWorkspace,
+  ranges: RangeTotals,
 ): void {
-  for (const { a, b, rank } of pairs) {
-    const tied = rank === 0 ? undefined : [a, b].find((name) => distributions[name].caseSet);
-    if (!tied) continue;
-    throw new DomainError(
-      `The ${labelOf(tied)} takes its case from the set “${distributions[tied].caseSet}”, so it cannot also have a rank ` +
-        `correlation with the ${labelOf(tied === a ? b : a)}. Take the correlation away, or let the other input share the set.`,
-      { input: "correlations", value: rank, pairs: [`${labelOf(a)} with ${labelOf(b)} ${rank}`] },
-    );
+  const { cases, ranks, probabilities, order, counting } = workspace;
+  source.fill(caseDimensionOf(members[0].name), count);
+  for (let t = 0; t < count; t += 1) {
+    const p = probabilities[ranks[t]];
+    let chosen = 0;
+    while (p > bounds[chosen]) chosen += 1;
+    cases[t] = chosen;
   }
+  for (const { name, distribution } of members) {
+    const { values, strata } = columnOf(name);
+    source.fill(dimensionOf(name), count);
+    for (let t = 0; t < count; t += 1) order[ranks[t]] = t;
+    distribution.cases?.forEach(({ compiled }, chosen) => {
+      fillCase(compiled, chosen, count, workspace, values);
+    });
+    ranges.add(name, rangeOfSample(values, count, counting), count);
+    rankByCounting(values, count, counting, ranks, order);
+    for (let t = 0; t < count; t += 1) strata[t] = ranks[t];
+  }
+}
+
+/** Values of the trials that take one case: quantiles of their probabilities, which ascend along `order`. */
+function fillCase(
+  compiled: SampledInput["distribution"],
+  chosen: number,
+  count: number,
+  { cases, order, probabilities, words, caseProbabilities, sorted }: SimulationWorkspace,
+  values: Float64Array,
+): void {
+  let taken = 0;
+  for (let stratum = 0; stratum < count; stratum += 1) {
+    const trial = order[stratum];
+    if (cases[trial] !== chosen) continue;
+    caseProbabilities[taken] = probabilities[stratum];
+    words[taken] = trial;
+    taken += 1;
+  }
+  compiled.fillQuantiles(caseProbabilities, taken, sorted);
+  for (let i = 0; i < taken; i += 1) values[words[i]] = sorted[i];
 }

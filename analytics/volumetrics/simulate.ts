@@ -1,16 +1,16 @@
 import { DomainError } from "../errors";
-import { rankByCounting } from "../numerics/order-statistics";
+import { gradesOfCounted } from "../numerics/order-statistics";
+import type { CompiledPlan } from "../recovery/compile-plan";
 import { recoveryWarnings } from "../recovery/plan-warnings";
 import { planInputNames } from "../recovery/recovery-plan-schema";
 import { refusals, summariseRecovery, type RefusalName } from "../recovery/recovery-totals";
 import { createRecoveryColumns } from "../recovery/trial-recovery";
-import type { CompiledDistribution } from "../uncertainty/distribution";
+import { gradeCorrelation, rankDrivers, swingColumns } from "../uncertainty/drivers";
 import type { SamplingMethod } from "../uncertainty/sampling-schema";
-import { rankDrivers, swingColumns } from "../uncertainty/drivers";
-import { spearman } from "../uncertainty/rank-correlation";
-import { rangeOfSample, summariseSample } from "../uncertainty/summary";
+import { rangeOfSample, summariseSample, type SampleRange } from "../uncertainty/summary";
 import type { Warning } from "../warnings";
 import { warningsOf } from "./check-inputs";
+import { drawTrials, type DrawnTrials } from "./draw-trials";
 import { inputNames, type EstimateInputs } from "./inputs-schema";
 import { prepareInputs, type PreparedInputs } from "./prepare-inputs";
 import {
@@ -26,7 +26,7 @@ import {
   type SimulationSummary,
   type TrialVectors,
 } from "./results-schema";
-import { sampleInputs, samplePlanInputs } from "./sample-inputs";
+import { sampledInputs } from "./sample-inputs";
 import { checkTrials, DEFAULT_TRIALS } from "./trial-counts";
 import {
   evaluateTrials,
@@ -35,10 +35,16 @@ import {
   type FluidConstants,
   type TrialColumns,
 } from "./trials";
-import { columns, createWorkspace, planWorkspace, type SimulationWorkspace } from "./workspace";
+import {
+  columns,
+  createWorkspace,
+  planWorkspace,
+  strataOf,
+  type SimulationWorkspace,
+} from "./workspace";
 
 /** Changes whenever the same inputs and seed would give other numbers. Stored with every result. */
-export const ENGINE_VERSION = "1.0.0";
+export const ENGINE_VERSION = "2.0.0";
 
 export { DEFAULT_SAMPLING, DEFAULT_TRIALS } from "./trial-counts";
 
@@ -60,9 +66,9 @@ export interface Simulation {
 }
 
 /**
- * The range of gas and condensate in place and recoverable of one reservoir, by Monte Carlo: the ten inputs as a
- * Latin hypercube with the rank correlations asked for, the in-place equations on every trial, percentiles of what
- * comes out.
+ * The range of gas and condensate in place and recoverable of one reservoir, by Monte Carlo: the ten inputs as Latin
+ * hypercubes or scrambled Sobol points with the rank correlations asked for, in replicates that are independent of each
+ * other; the in-place equations on every trial; percentiles of what comes out, with standard errors from the replicates.
  *
  * In every trial dry gas plus vapour equivalent times condensate equals wet gas, to rounding.
  *
@@ -71,33 +77,28 @@ export interface Simulation {
  *   trials); never a NaN
  */
 export function simulate(inputs: EstimateInputs, options: SimulationOptions): Simulation {
-  const { seed } = options;
-  const { trials = DEFAULT_TRIALS, sampling = "latinHypercube" } = options;
+  const { trials = DEFAULT_TRIALS, sampling = "latinHypercube", seed } = options;
   checkTrials(trials, sampling);
   const workspace = options.workspace ?? createWorkspace(trials);
   checkOptions(trials, seed, workspace);
   const prepared = prepareInputs(inputs);
   const fluid = fluidConstants(prepared.wellstream, inputs.fluid);
-
-  const sampled = sampleInputs(prepared.distributions, prepared.blocks, seed, workspace);
-  const sampledByPlan = prepared.plan && samplePlanInputs(prepared.plan, seed, workspace);
-  const plan = prepared.plan && { compiled: prepared.plan, ...planWorkspace(workspace) };
-  const evaluated = evaluateTrials(
-    fluid,
-    workspace.inputs,
-    plan,
-    trials,
-    workspace,
-    workspace.outputs,
-  );
-  refuseImpossible(evaluated, trials);
+  const drawn = drawTrials(prepared, fluid, { seed, sampling }, workspace);
+  refuseImpossible(drawn, trials);
 
   const swings = evaluateSwings(prepared, fluid);
-  const results = columns(resultNames, (name) =>
-    summariseSample(workspace.outputs[name], trials, workspace.counting),
-  );
+  const { plan } = prepared;
+  const { outputs, pooled, starts } = workspace;
+  const drivers: Partial<Record<ResultName, Driver[]>> = {};
+  const results = columns(resultNames, (name) => {
+    const summary = summariseSample(outputs[name], trials, pooled, starts);
+    if (isDriven(name)) drivers[name] = driversOf(name, swings, prepared, workspace);
+    return summary;
+  });
   const recoveries = columns(recoveryNames, (name) =>
-    plan ? rangeOfSample(plan.columns[name], trials, workspace.counting) : sampled[name],
+    plan
+      ? rangeOfSample(planWorkspace(workspace).recoveries[name], trials, pooled)
+      : sampledRange(drawn, name),
   );
   return {
     summary: {
@@ -105,36 +106,44 @@ export function simulate(inputs: EstimateInputs, options: SimulationOptions): Si
       seed,
       trials,
       sampling,
-      inputs: { ...sampled, ...recoveries },
+      replicates: workspace.replicates.length,
+      inputs: { ...columns(inputNames, (name) => sampledRange(drawn, name)), ...recoveries },
       results,
       derived: {
-        ...columns(derivedNames, (name) =>
-          rangeOfSample(workspace.outputs[name], trials, workspace.counting),
-        ),
+        ...columns(derivedNames, (name) => rangeOfSample(outputs[name], trials, pooled)),
         ...recoveries,
       },
-      drivers: {
-        wetGasInPlaceScf: driversOf("wetGasInPlaceScf", swings, prepared, workspace),
-        condensateRecoverableStb: driversOf(
-          "condensateRecoverableStb",
-          swings,
-          prepared,
-          workspace,
-        ),
-      },
+      drivers: columns(drivenNames, (name) => drivers[name] ?? []),
       deterministic: columns(resultNames, (name) => swings[name][0]),
       recovery:
-        plan && evaluated.recovery
-          ? summariseRecovery(plan.compiled, evaluated.recovery, sampledByPlan ?? {})
+        plan && drawn.recovery
+          ? summariseRecovery(plan, drawn.recovery, planRanges(plan, drawn))
           : null,
       warnings: [
         ...warningsOf(inputs, prepared),
-        ...(plan ? recoveryWarnings(plan.compiled, recoveries) : []),
+        ...(plan ? recoveryWarnings(plan, recoveries) : []),
         ...resultWarnings(results),
       ],
     },
-    vectors: columns(vectorNames, (name) => workspace.outputs[name].slice(0, trials)),
+    vectors: columns(vectorNames, (name) => outputs[name].slice(0, trials)),
   };
+}
+
+/** Results whose spread is traced to the inputs. */
+const drivenNames = ["wetGasInPlaceScf", "condensateRecoverableStb"] as const;
+type DrivenName = (typeof drivenNames)[number];
+
+function isDriven(name: ResultName): name is DrivenName {
+  return drivenNames.some((driven) => driven === name);
+}
+
+/** Inputs that a recovery plan replaces are not drawn; their place is taken by what it worked out. */
+function sampledRange({ sampler }: DrawnTrials, name: DriverName): SampleRange {
+  return sampler.rangeOf(name) ?? { p90: 0, p50: 0, p10: 0, mean: 0 };
+}
+
+function planRanges(plan: CompiledPlan, drawn: DrawnTrials) {
+  return Object.fromEntries(plan.inputNames.map((name) => [name, sampledRange(drawn, name)]));
 }
 
 function checkOptions(trials: number, seed: number, workspace: SimulationWorkspace): void {
@@ -167,43 +176,16 @@ function refuseImpossible({ impossible, recovery }: EvaluatedTrials, trials: num
   throw new DomainError(`${count} of ${trials} trials ${message}`, { input, value: count, trials });
 }
 
-/** A driver's name with its distribution and, over the trials, its ranks. */
-interface DriverInput {
-  readonly name: DriverName;
-  readonly distribution: CompiledDistribution;
-  readonly ranks: (workspace: SimulationWorkspace) => Uint32Array;
-}
-
-/** The sampled inputs that count, then those of the plan. */
-function driverInputs({ inputNames: names, distributions, plan }: PreparedInputs): DriverInput[] {
-  const ofPlan = (plan?.inputNames ?? []).flatMap((name): DriverInput[] => {
-    const distribution = plan?.distributions[name];
-    if (!distribution) return [];
-    return [
-      { name, distribution, ranks: (workspace) => planWorkspace(workspace).inputRanks[name] },
-    ];
-  });
-  return [
-    ...names.map((name) => ({
-      name,
-      distribution: distributions[name],
-      ranks: ({ inputRanks }: SimulationWorkspace) => inputRanks[name],
-    })),
-    ...ofPlan,
-  ];
-}
-
 /** Results with every input at P50 (row 0), and with one at a time at P90 and P10. */
 function evaluateSwings(
   prepared: PreparedInputs,
   fluid: FluidConstants,
 ): TrialColumns<ResultName | DerivedName> {
-  const drivers = driverInputs(prepared);
-  const cases = swingColumns(drivers.map(({ distribution }) => distribution.range));
+  const inputs = sampledInputs(prepared);
+  const cases = swingColumns(inputs.map(({ distribution }) => distribution.range));
   const rows = cases[0].length;
   const row = () => new Float64Array(rows);
-  const column = (name: DriverName) =>
-    cases[drivers.findIndex((driver) => driver.name === name)] ?? row();
+  const column = (name: DriverName) => cases[inputs.findIndex((one) => one.name === name)] ?? row();
   const outputs = columns([...resultNames, ...derivedNames], row);
   const scratch = { reducedPressure: row(), reducedTemperature: row() };
   const plan = prepared.plan && {
@@ -211,25 +193,28 @@ function evaluateSwings(
     inputs: columns(planInputNames, column),
     columns: createRecoveryColumns(rows),
   };
-  const inputs = columns(inputNames, column);
-  refuseImpossible(evaluateTrials(fluid, inputs, plan, rows, scratch, outputs), rows);
+  const sampled = columns(inputNames, column);
+  refuseImpossible(evaluateTrials(fluid, sampled, plan, rows, scratch, outputs), rows);
   return outputs;
 }
 
+/** Of the result that was summarised last, whose counts the workspace still holds. */
 function driversOf(
-  result: ResultName,
+  result: DrivenName,
   swings: TrialColumns<ResultName | DerivedName>,
   prepared: PreparedInputs,
   workspace: SimulationWorkspace,
 ): Driver[] {
-  const { outputs, counting, resultRanks, order, trials } = workspace;
-  rankByCounting(outputs[result], trials, counting, resultRanks, order);
+  const { outputs, pooled, grades, starts, trials } = workspace;
+  gradesOfCounted(outputs[result], trials, pooled, grades);
   return rankDrivers(
-    driverInputs(prepared).map(({ name, distribution, ranks }, i) => ({
+    sampledInputs(prepared).map(({ name, distribution }, i) => ({
       input: name,
-      // The ranks of a constant are an arbitrary order, not a rank.
+      // A constant has no rank.
       rankCorrelation:
-        distribution.standardDeviation === 0 ? 0 : spearman(ranks(workspace), resultRanks, trials),
+        distribution.standardDeviation === 0
+          ? 0
+          : gradeCorrelation(strataOf(workspace, name), grades, starts),
       swing: { atP90: swings[result][1 + 2 * i], atP10: swings[result][2 + 2 * i] },
     })),
   );

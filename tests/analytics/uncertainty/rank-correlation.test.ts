@@ -134,10 +134,10 @@ describe("fillCorrelatedRanks", () => {
       block.factor,
       names.map((_, i) => createRandom(5, i)),
       n,
+      normalScores(n),
       {
         words: integers(n),
         order: integers(n),
-        scores: normalScores(n),
         scoreColumns: names.map(() => new Float64Array(n)),
         counting: createOrderWorkspace(n),
       },
