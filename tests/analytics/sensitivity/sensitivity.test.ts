@@ -78,7 +78,8 @@ describe("computeSensitivity", () => {
     const { p90, p50, p10 } = summary.results.condensateRecoverableStb;
     expect(conditional.result).toMatchObject({ p90, p50, p10 });
     const thicknesses = conditional.inputs.find(({ input }) => input === "netThicknessFt");
-    expect(thicknesses?.all.p50).toBeCloseTo(summary.inputs.netThicknessFt.p50, 6);
+    // The summary averages the percentiles of the replicates.
+    expect(thicknesses?.all.p50).toBeCloseTo(summary.inputs.netThicknessFt.p50, 2);
   });
 
   it("has rank coefficients whose squares share the fit of a near product", () => {
