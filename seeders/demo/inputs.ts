@@ -2,8 +2,14 @@ import { recombine } from "@/analytics/fluid/wellstream";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
 import type { RecoveryPlan } from "@/analytics/recovery/recovery-plan-schema";
 import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
-import type { EstimateInputs, InputName } from "@/analytics/volumetrics/inputs-schema";
+import {
+  inputNames,
+  type EstimateInputs,
+  type InputName,
+} from "@/analytics/volumetrics/inputs-schema";
 import type { DemoRevision } from "./history";
+import { demoRanges } from "./ranges";
+import { reasonFor } from "./reasons";
 import type { DemoReservoir } from "./reservoirs";
 
 const round = (value: number, digits: number) => Number(value.toPrecision(digits));
@@ -91,6 +97,9 @@ function pertThen(
   };
 }
 
+/** A revision this much less certain than the current one was made with the first well. */
+const FIRST_WELL_SPREAD = 1.25;
+
 /** The inputs of one revision of one reservoir. */
 export function inputsOf(
   reservoir: DemoReservoir,
@@ -98,66 +107,29 @@ export function inputsOf(
   revision: DemoRevision,
   recoveryPlan: RecoveryPlan | null,
 ): EstimateInputs {
-  const { fluid } = reservoir;
-  const yieldNow = recombine(test).condensateYieldStbPerMmscf;
-  const range = (ends: Ends, input: InputName) => then(ends, revision, input);
-  const wells = `Wells and map of ${reservoir.field}`;
+  const special = demoRanges[`${reservoir.field} / ${reservoir.name}`] ?? {};
+  const isEarly = (revision.spread ?? 1) >= FIRST_WELL_SPREAD;
+  const uncertain = ordinaryInputs(reservoir, test, revision);
+  for (const input of inputNames) {
+    const range = special[input];
+    if (range && revision.on >= range.since) {
+      const { distribution, source, reason } = range;
+      uncertain[input] = { distribution, source, reason };
+    } else {
+      uncertain[input].reason = reasonFor(input, isEarly, reservoir.depthFt);
+    }
+  }
+  const isShared = ({ distribution }: UncertainInput) =>
+    distribution.kind === "scenarios" && distribution.caseSet !== undefined;
   return {
     schemaVersion: 1,
-    uncertain: {
-      areaAcres: {
-        distribution: lognormal(range(reservoir.areaAcres, "areaAcres")),
-        source: `Structure map, ${revision.on.slice(0, 4)}`,
-      },
-      netThicknessFt: {
-        distribution: lognormal(range(reservoir.netThicknessFt, "netThicknessFt")),
-        source: "Log evaluation, net pay cut-offs of the field",
-      },
-      porosity: {
-        distribution: normal(range(reservoir.porosity, "porosity"), {
-          minimum: 0.01,
-          maximum: 0.4,
-        }),
-        source: "Core and density log",
-      },
-      waterSaturation: {
-        distribution: normal(range(reservoir.waterSaturation, "waterSaturation"), {
-          minimum: 0.03,
-          maximum: 0.9,
-        }),
-        source: "Resistivity log, Archie",
-      },
-      pressurePsia: {
-        distribution: normal(reservoir.pressurePsia),
-        source: "Formation tester, at the datum",
-      },
-      temperatureDegF: {
-        distribution: normal(reservoir.temperatureDegF),
-        source: "Bottom-hole gauge, extrapolated",
-      },
-      condensateYieldStbPerMmscf: {
-        distribution: normal(
-          range([yieldNow * 0.93, yieldNow * 1.07], "condensateYieldStbPerMmscf"),
-          { minimum: round(yieldNow * 0.5, 3) },
-        ),
-        source: `Separator test ${fluid.sample}`,
-      },
-      gasRecovery: {
-        distribution: pertThen(reservoir.gasRecovery, revision, "gasRecovery"),
-        source: `${wells}; depletion analogues`,
-      },
-      condensateRecovery: {
-        distribution: pertThen(reservoir.condensateRecovery, revision, "condensateRecovery"),
-        source: "Analogues of like richness, depletion",
-      },
-      salesGasFraction: {
-        distribution: { kind: "triangular", low: 0.9, mode: 0.945, high: 0.97 },
-        source: "Fuel and flare of the nearest plant",
-      },
-    },
+    uncertain,
     correlations: [
       { a: "porosity", b: "waterSaturation", rank: -0.5 },
-      { a: "areaAcres", b: "netThicknessFt", rank: 0.2 },
+      // Inputs that take their case together are tied by it.
+      ...(isShared(uncertain.areaAcres)
+        ? []
+        : [{ a: "areaAcres" as const, b: "netThicknessFt" as const, rank: 0.2 }]),
       // A plan works both recoveries out of one curve.
       ...(recoveryPlan
         ? []
@@ -166,5 +138,69 @@ export function inputsOf(
     fluid: test,
     depthFt: reservoir.depthFt,
     recoveryPlan,
+  };
+}
+
+type UncertainInput = EstimateInputs["uncertain"][InputName];
+
+function ordinaryInputs(
+  reservoir: DemoReservoir,
+  test: SeparatorTest,
+  revision: DemoRevision,
+): EstimateInputs["uncertain"] {
+  const { fluid } = reservoir;
+  const yieldNow = recombine(test).condensateYieldStbPerMmscf;
+  const range = (ends: Ends, input: InputName) => then(ends, revision, input);
+  const wells = `Wells and map of ${reservoir.field}`;
+  return {
+    areaAcres: {
+      distribution: lognormal(range(reservoir.areaAcres, "areaAcres")),
+      source: `Structure map, ${revision.on.slice(0, 4)}`,
+    },
+    netThicknessFt: {
+      distribution: lognormal(range(reservoir.netThicknessFt, "netThicknessFt")),
+      source: "Log evaluation, net pay cut-offs of the field",
+    },
+    porosity: {
+      distribution: normal(range(reservoir.porosity, "porosity"), {
+        minimum: 0.01,
+        maximum: 0.4,
+      }),
+      source: "Core and density log",
+    },
+    waterSaturation: {
+      distribution: normal(range(reservoir.waterSaturation, "waterSaturation"), {
+        minimum: 0.03,
+        maximum: 0.9,
+      }),
+      source: "Resistivity log, Archie",
+    },
+    pressurePsia: {
+      distribution: normal(reservoir.pressurePsia),
+      source: "Formation tester, at the datum",
+    },
+    temperatureDegF: {
+      distribution: normal(reservoir.temperatureDegF),
+      source: "Bottom-hole gauge, extrapolated",
+    },
+    condensateYieldStbPerMmscf: {
+      distribution: normal(
+        range([yieldNow * 0.93, yieldNow * 1.07], "condensateYieldStbPerMmscf"),
+        { minimum: round(yieldNow * 0.5, 3) },
+      ),
+      source: `Separator test ${fluid.sample}`,
+    },
+    gasRecovery: {
+      distribution: pertThen(reservoir.gasRecovery, revision, "gasRecovery"),
+      source: `${wells}; depletion analogues`,
+    },
+    condensateRecovery: {
+      distribution: pertThen(reservoir.condensateRecovery, revision, "condensateRecovery"),
+      source: "Analogues of like richness, depletion",
+    },
+    salesGasFraction: {
+      distribution: { kind: "triangular", low: 0.9, mode: 0.945, high: 0.97 },
+      source: "Fuel and flare of the nearest plant",
+    },
   };
 }
