@@ -12,8 +12,9 @@ export interface StackedRow {
 
 /** Room kept for a total at the end of the longest bar [%]. */
 const LONGEST = 90;
-/** A share narrower than this has no room for its name; the table under the bars has it. */
-const LEAST_LABELLED = 0.16;
+/** A part narrower than these [% of the row] has no room for its name, or its share; the table under the bars has both. */
+const LEAST_NAMED = 18;
+const LEAST_SHARED = 6;
 
 /** Totals as bars on one scale, each cut into what its parts bring. */
 export function StackedTotals({ label, rows }: { label: string; rows: readonly StackedRow[] }) {
@@ -36,6 +37,7 @@ export function StackedTotals({ label, rows }: { label: string; rows: readonly S
             >
               {row.parts.map(({ name, value }, part) => {
                 const share = Math.max(value, 0) / lengths[index];
+                const width = (share * LONGEST * lengths[index]) / longest;
                 return (
                   <i
                     key={name}
@@ -43,9 +45,10 @@ export function StackedTotals({ label, rows }: { label: string; rows: readonly S
                     style={{ width: percent(100 * share) }}
                     title={`${name}, ${formatPercent(share)}`}
                   >
-                    {share >= LEAST_LABELLED && (
+                    {width >= LEAST_SHARED && (
                       <b>
-                        {name} {formatPercent(share)}
+                        {width >= LEAST_NAMED && <span className="hide-phone">{name} </span>}
+                        {formatPercent(share)}
                       </b>
                     )}
                   </i>

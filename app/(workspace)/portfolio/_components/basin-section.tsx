@@ -38,7 +38,7 @@ export function BasinSection({
   return (
     <Section
       title={findingOf(basins)}
-      note={`Mean ${liquid.name}, ${liquid.unit}, by basin and PRMS class. Of variance: the basin’s covariance with the total.`}
+      note={`Mean ${liquid.name}, ${liquid.unit}, by basin and PRMS class. Variance: its share, by covariance with the total.`}
     >
       <LedgerTable caption={`Mean ${liquid.name} by basin and class`} density="executive">
         <thead>
@@ -50,7 +50,7 @@ export function BasinSection({
               </ColumnHeading>
             ))}
             <ColumnHeading align="right">Total</ColumnHeading>
-            <ColumnHeading align="right">Of variance</ColumnHeading>
+            <ColumnHeading align="right">Variance</ColumnHeading>
             <ColumnHeading mark>
               <RangeScale scale={scale} ticks={3} />
             </ColumnHeading>

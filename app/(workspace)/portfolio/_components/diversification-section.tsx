@@ -41,6 +41,8 @@ export function DiversificationSection({
         before={{ ...sum, mean: null }}
         unit={liquid.unit}
         scale={scale}
+        gridLines={false}
+        tipSide="left"
       />
       <LedgerTable caption={`Portfolio ${liquid.name}, trial by trial and as an arithmetic sum`}>
         <thead>
