@@ -1,5 +1,6 @@
 import { DomainError } from "../errors";
 import {
+  countSample,
   createOrderWorkspace,
   rankByCounting,
   type OrderWorkspace,
@@ -181,12 +182,38 @@ export function figuresOf(
   workspace: OrderWorkspace,
 ): FieldFigures {
   const certain = rangesOf(volumes, workspace);
-  if (comes.every((one) => one === 1)) return { certain, yesNo: certain };
-  const drawn = emptyVectors(comes.length);
+  const successes = Uint32Array.from(comes.keys()).filter((trial) => comes[trial] === 1);
+  if (successes.length === comes.length) return { certain, yesNo: certain };
+  const drawn = new Float64Array(successes.length);
+  const yesNo = {} as VolumeRanges;
   for (const name of vectorNames) {
-    for (let t = 0; t < comes.length; t += 1) drawn[name][t] = comes[t] * volumes[name][t];
+    const values = volumes[name];
+    for (let i = 0; i < drawn.length; i += 1) drawn[i] = values[successes[i]];
+    yesNo[name] = rangeWithZeros(drawn, comes.length, workspace);
   }
-  return { certain, yesNo: rangesOf(drawn, workspace) };
+  return { certain, yesNo };
+}
+
+/**
+ * R-7 percentiles and mean of a sample of `count` values of which all but these are zeros; found among the rest alone,
+ * because half a sample of equals is slow to sort.
+ *
+ * @param values  0 or more
+ */
+function rangeWithZeros(values: Float64Array, count: number, workspace: OrderWorkspace): Range {
+  const zeros = count - values.length;
+  if (values.length === 0) return { p90: 0, p50: 0, p10: 0, mean: 0 };
+  const last = Math.max(1, values.length - 1);
+  /** the place among the rest, from 0 for the smallest; below it lie the zeros */
+  const places = [0.1, 0.5, 0.9].map((p) => (count - 1) * p - zeros);
+  const shares = places.map((place) => Math.min(1, Math.max(0, place / last)));
+  const { quantiles, mean, minimum } = countSample(values, values.length, shares, workspace);
+  const [p90, p50, p10] = places.map((place, index) => {
+    if (place >= 0) return quantiles[index];
+    // Between the last zero and the smallest of the rest, the rule draws a straight line.
+    return place > -1 ? (1 + place) * minimum : 0;
+  });
+  return { p90, p50, p10, mean: (mean * values.length) / count };
 }
 
 type Vectors = Record<VectorName, Float64Array>;

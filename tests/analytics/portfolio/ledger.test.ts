@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { DomainError } from "@/analytics/errors";
+import { quantileSorted } from "@/analytics/numerics/order-statistics";
 import { scoreCorrelation } from "@/analytics/portfolio/factor-model";
 import { computeLedger, type Ledger } from "@/analytics/portfolio/ledger";
 import { rankTrials } from "@/analytics/portfolio/rank-trials";
@@ -157,6 +158,30 @@ describe("computeLedger(fields, options)", () => {
     expect([own.p90, own.p50]).toEqual([0, 0]);
     // Standard normal quantile of 0.7142857: 0.5659 (tables).
     expect(Math.abs(own.p10 - 105.659)).toBeLessThan(0.5);
+  });
+
+  it("has the R-7 percentiles of a field's draws, zeros and all", () => {
+    const share = 0.47;
+    const [field] = alignFields(
+      [fieldOf("one", sampleOf({ kind: "uniform", low: 10, high: 20 }, 501), { chance: share })],
+      optionsOf(501),
+    );
+    const { volumes, comes } = field.trials;
+    const drawn = volumes.condensateRecoverableStb.map((value, t) => value * comes[t]).sort();
+    const { yesNo } = field.figures;
+    // `quantileSorted` is checked against published values in its own test.
+    expect(yesNo.condensateRecoverableStb.p10).toBeCloseTo(quantileSorted(drawn, 0.9), 5);
+    expect(yesNo.condensateRecoverableStb.p50).toBe(0);
+    expect(yesNo.condensateRecoverableStb.mean).toBeCloseTo(sumOf([...drawn]) / 501, 5);
+    const [even] = alignFields(
+      [fieldOf("one", Float64Array.of(4, 6, 8, 10, 12, 14), { chance: 0.5 })],
+      optionsOf(6),
+    );
+    const six = even.trials.volumes.condensateRecoverableStb
+      .map((value, t) => value * even.trials.comes[t])
+      .sort();
+    // Half of an even number of trials: the median lies midway between the last zero and the smallest success.
+    expect(even.figures.yesNo.condensateRecoverableStb.p50).toBeCloseTo(six[3] / 2, 6);
   });
 
   it("has the sum of the fields' means as mean, a P90 above the sum of their P90s and a P10 below theirs", () => {
