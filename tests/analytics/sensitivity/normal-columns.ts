@@ -1,11 +1,18 @@
 import { normalQuantile } from "@/analytics/numerics/normal";
-import { fillUniforms } from "@/analytics/sensitivity/base-samples";
+import { createRandom, fillPermutation } from "@/analytics/numerics/random";
+import { fillStrata } from "@/analytics/uncertainty/latin-hypercube";
 
-/** Columns of independent standard normal numbers. */
-export function normalColumns(count: number, trials: number, seed = 1): Float64Array[] {
-  const columns = Array.from({ length: count }, () => new Float64Array(trials));
-  fillUniforms(seed, 0, columns);
-  return columns.map((column) => column.map(normalQuantile));
+/** Columns of independent standard normal numbers: a Latin hypercube. */
+export function normalColumns(count: number, trials: number): Float64Array[] {
+  const words = new Uint32Array(trials);
+  const order = new Uint32Array(trials);
+  const strata = new Float64Array(trials);
+  return Array.from({ length: count }, (_, i) => {
+    const random = createRandom(1, i);
+    fillPermutation(random, order, trials, words);
+    fillStrata(random, trials, strata, words);
+    return Float64Array.from(order, (stratum) => normalQuantile(strata[stratum]));
+  });
 }
 
 /** Column by column sums. */
