@@ -1,13 +1,12 @@
 /** Chances between 0 and 1 as people write them: in per cent, or as a percentile. */
 
-/** The fewest digits of a chance in per cent that read back as exactly the same number: 0.9 is "90". */
+/** A chance in per cent, every digit of it: 0.9 is "90". The point moves in the text, so that it reads back exactly. */
 export function percentText(chance: number): string {
-  const percent = chance * 100;
-  for (let digits = 1; digits < 17; digits += 1) {
-    const rounded = Number(percent.toPrecision(digits));
-    if (rounded / 100 === chance) return String(rounded);
-  }
-  return String(percent);
+  const written = String(chance);
+  const decimals = (written.includes("e") ? chance.toFixed(20) : written).split(".")[1] ?? "";
+  const whole = decimals.slice(0, 2).padEnd(2, "0").replace(/^0/, "");
+  const rest = decimals.slice(2).replace(/0+$/, "");
+  return rest === "" ? whole : `${whole}.${rest}`;
 }
 
 /**
@@ -19,10 +18,10 @@ export function readPercent(text: string, words: string): number | string | null
   const typed = text.trim();
   if (typed === "") return null;
   const digits = typed.replace(/^p\s*/i, "").replace(/\s*%$/, "").replace(",", ".");
-  const percent = digits === "" ? NaN : Number(digits);
-  if (!Number.isFinite(percent)) return `“${typed}” is not a number. ${words}`;
-  if (percent <= 0 || percent >= 100) return `${typed} is not between 0 and 100. ${words}`;
-  return percent / 100;
+  if (!/^[-−]?(\d+\.?\d*|\.\d+)$/.test(digits)) return `“${typed}” is not a number. ${words}`;
+  const chance = Number(`${digits.replace("−", "-")}e-2`);
+  if (chance <= 0 || chance >= 1) return `${typed} is not between 0 and 100. ${words}`;
+  return chance;
 }
 
 /** "P90" of an exceedance of 0.9; "P05" of 0.05. */
