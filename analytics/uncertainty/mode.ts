@@ -14,8 +14,8 @@ const KERNEL = Float64Array.from({ length: 2 * CELLS * REACH + 1 }, (_, i) => {
  * The bandwidth is the one that is best for a normal density's slope, h = (4/5)^(1/7) s n^(-1/7), because the mode is
  * where the slope vanishes; and the values are first drawn together about their mean by 1 / sqrt(1 + h^2/s^2), so that
  * smoothing does not widen them. For a lognormal distribution both together are exact, exp(mu - sigma^2); of two peaks
- * nearer than about three bandwidths one is seen. The sampling error is some 5 % of the standard deviation at 10,000
- * trials: a mode is never known as well as a mean.
+ * nearer than about three bandwidths one is seen. A mode is never known as well as a mean: for a lognormal of
+ * P10/P90 = 8 to 4 % with 10,000 trials of a Latin hypercube, to 2 % with 16,384 Sobol points.
  *
  * @param quantiles  of cumulative probabilities 0, 0.01, ..., 1, ascending; each step counts as values at its middle
  * @param count      trials that they come from

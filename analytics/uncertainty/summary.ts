@@ -1,5 +1,6 @@
-import { modeOfCurve } from "./mode";
+import { normalPdf, normalQuantile } from "../numerics/normal";
 import { countSample, quantileSorted, type OrderWorkspace } from "../numerics/order-statistics";
+import { modeOfCurve } from "./mode";
 
 /** P90 is the low case: 90 % of the values are at least this. */
 export interface SampleRange {
@@ -193,10 +194,19 @@ function sharesBelow(
 }
 
 /**
- * 1 / f: the slope of the quantile function over 2 percentiles either side (5 where the sample is too small for that to
- * hold a hundred values).
+ * 1 / f: the slope of the quantile function, from the percentiles 2 either side (5 where the sample is too small for that
+ * to hold a hundred values). Positive values are taken by their logarithms, and probabilities by normal scores, so that
+ * the slope is exact for lognormal and normal values however steep the tail:
+ *
+ *     1 / f = x (d ln x / dz) / phi(z)
+ *
+ * @see M. P. Wand, J. S. Marron, D. Ruppert, Transformations in density estimation, J. Am. Stat. Assoc. 86 (1991) 343-353
  */
 function slopeAt(quantiles: readonly number[], percent: number, count: number): number {
   const half = count >= 2500 ? 2 : 5;
-  return (quantiles[percent + half] - quantiles[percent - half]) / ((2 * half) / 100);
+  const [below, above] = [quantiles[percent - half], quantiles[percent + half]];
+  const score = (percentile: number) => normalQuantile(percentile / 100);
+  const scores = score(percent + half) - score(percent - half);
+  const perScore = below > 0 ? quantiles[percent] * Math.log(above / below) : above - below;
+  return perScore / scores / normalPdf(score(percent));
 }

