@@ -36,7 +36,7 @@ export function KnowingView({ sensitivity, name, tone, fileName }: DriverViewPro
         rows={rows.map(({ input, remainingWidth, varianceRemoved }) => ({
           name: inputLabel(input),
           bar: { value: Math.max(0, 1 - remainingWidth) },
-          figures: [formatPercent(1 - remainingWidth), formatPercent(varianceRemoved)],
+          figures: [formatPercent(Math.max(0, 1 - remainingWidth)), formatPercent(varianceRemoved)],
         }))}
       />
     </ChartFrame>

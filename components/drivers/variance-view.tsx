@@ -6,9 +6,13 @@ import { byTotal, jointWords, varianceFinding } from "./driver-findings";
 import { factorLabel, togetherWords } from "./driver-names";
 import type { DriverViewProps } from "./regression-view";
 
-/** "54 % ± 2 %": a share with twice its standard error */
-const shareText = ({ value, standardError }: { value: number; standardError: number }) =>
-  `${formatPercent(value)} ± ${(200 * standardError).toFixed(standardError < 0.005 ? 1 : 0)}`;
+/** "54 % ± 2", "1.2 % ± 0.3": a share with its 95 % half-width, to the digits that it has. */
+function shareText({ value, standardError }: { value: number; standardError: number }): string {
+  const half = 196 * standardError;
+  if (value < 0.0005 && half < 0.05) return "0 %";
+  const decimals = half < 0.95 ? 1 : 0;
+  return `${formatPercent(value, { decimals })} ± ${half.toFixed(decimals)}`;
+}
 
 /** Shares of the variance: what goes when a factor alone is known, and what stays when all others are. */
 export function VarianceView({

@@ -4,7 +4,7 @@ import { Figure } from "@/components/ui/figure";
 import { fractionDigits } from "@/components/ui/format";
 import { LedgerTable } from "@/components/ui/table";
 import { Unit } from "@/components/ui/text";
-import { digitsHeld, levelLabels, SHOWN_DIGITS, type Level } from "./precision-words";
+import { knownOf, levelLabels, SHOWN_DIGITS, type Level } from "./precision-words";
 import { resultFactor, resultUnit, type ResultBasis } from "./result-rows";
 
 const levels: Level[] = ["p90", "p50", "p10", "mean"];
@@ -43,7 +43,7 @@ export function PrecisionTable({
                 {resultLabels[name]} <Unit>{resultUnit(name, basis)}</Unit>
               </th>
               {levels.map((level) => {
-                const held = digitsHeld(quantity, level, factor);
+                const { digits: held, enough } = knownOf(quantity, level, factor, summary.trials);
                 return (
                   <td key={level} className="right">
                     <span aria-hidden="true">±</span>
@@ -53,7 +53,7 @@ export function PrecisionTable({
                       digits={2}
                       fraction={digits}
                     />
-                    {held < SHOWN_DIGITS && (
+                    {!enough && (
                       <small className="block text-warning-ink">
                         {held} of {SHOWN_DIGITS} digits
                       </small>

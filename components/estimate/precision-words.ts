@@ -1,5 +1,5 @@
 /** How well the trials of a run know its percentiles, in words. */
-import { digitsKnown } from "@/analytics/uncertainty/known-digits";
+import { digitsKnown } from "@/analytics/uncertainty/digits-known";
 import type { QuantitySummary, SimulationSummary } from "@/analytics/volumetrics/results-schema";
 import type { SamplingMethod } from "@/analytics/uncertainty/sampling-schema";
 import { numberWords } from "@/components/portfolio/reporting";
@@ -25,28 +25,38 @@ export const levelLabels: Record<Level, string> = {
 
 type Quantity = Pick<QuantitySummary, Level | "standardErrors">;
 
-/** Digits of a percentile, as it is shown times a factor, that the trials do hold; at most those shown. */
-export const digitsHeld = (quantity: Quantity, level: Level, factor: number): number =>
-  Math.min(
-    SHOWN_DIGITS,
-    digitsKnown(quantity[level] * factor, quantity.standardErrors[level] * factor),
-  );
+/** What the trials know of a percentile as it is shown, times a factor. */
+export function knownOf(quantity: Quantity, level: Level, factor: number, trials: number) {
+  const error = quantity.standardErrors[level] * factor;
+  return digitsKnown(quantity[level] * factor, error, trials, SHOWN_DIGITS);
+}
 
-/** Percentiles of which fewer digits hold than are shown. */
-export const uncertainLevels = (quantity: Quantity, factor: number): Level[] =>
-  levels.filter((level) => digitsHeld(quantity, level, factor) < SHOWN_DIGITS);
-
-/** "10,000 trials hold all three digits of every percentile", or which they do not. */
+/** "10,000 trials hold all three digits of every percentile", or which of them they hold least. */
 export function precisionFinding(trials: number, quantity: Quantity, factor: number): string {
   const count = trials.toLocaleString("en-US");
-  const open = uncertainLevels(quantity, factor);
-  if (open.length === 0) return `${count} trials hold all three digits of every percentile`;
-  const worst = open.reduce((a, b) => (share(quantity, b) > share(quantity, a) ? b : a));
-  const held = digitsHeld(quantity, worst, factor);
+  const [worst] = levels
+    .filter((level) => !knownOf(quantity, level, factor, trials).enough)
+    .sort((a, b) => share(quantity, b) - share(quantity, a));
+  if (!worst) return `${count} trials hold all three digits of every percentile`;
   const error = formatPercent(1.96 * share(quantity, worst), { decimals: 1 });
-  const digits =
-    held === 0 ? "not even its first digit" : `${numberWords(held)} digit${held === 1 ? "" : "s"}`;
-  return `${count} trials are too few for three digits: ${levelLabels[worst]} is known to ±${error}, ${digits}`;
+  const { digits } = knownOf(quantity, worst, factor, trials);
+  const held =
+    digits === 0
+      ? "not even its first digit holds"
+      : `${numberWords(digits)} ${digits === 1 ? "digit holds" : "digits hold"}`;
+  return `${count} trials are too few for three digits: ${levelLabels[worst]} is known to ±${error}, ${held}`;
+}
+
+/** Trials at which every percentile would have its three digits, as sampling error falls; `null` when they have. */
+export function enoughTrials(trials: number, quantity: Quantity, factor: number): string | null {
+  const needed = Math.max(
+    ...levels.map((level) => knownOf(quantity, level, factor, trials).trialsNeeded ?? 0),
+  );
+  if (needed === 0) return null;
+  const rounded = Number(needed.toPrecision(2)).toLocaleString("en-US");
+  return needed > 1_048_576
+    ? `Three digits would take about ${rounded} trials, more than a run may have: read two.`
+    : `About ${rounded} trials would be enough.`;
 }
 
 const share = (quantity: Quantity, level: Level) =>

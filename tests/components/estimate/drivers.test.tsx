@@ -184,7 +184,7 @@ describe("VarianceView", () => {
         fileName="x"
       />,
     );
-    expect(words(html)).toMatch(/Area and net thickness together 80 % ± 0\.8, 92 % ± 0\.8/);
+    expect(words(html)).toMatch(/Area and net thickness together 80\.0 % ± 0\.8, 92\.0 % ± 0\.8/);
     expect(words(html)).toContain("40,960 runs of the model");
   });
 });

@@ -1,12 +1,11 @@
 import { describe, expect, it } from "vitest";
-import { digitsKnown } from "@/analytics/uncertainty/known-digits";
 import { swansonMean } from "@/analytics/uncertainty/swanson";
 import { swansonFinding, swansonReason } from "@/components/estimate/moment-findings";
 import {
-  digitsHeld,
+  enoughTrials,
+  knownOf,
   precisionFinding,
   runWords,
-  uncertainLevels,
 } from "@/components/estimate/precision-words";
 
 const plain = (text: string) => text.replace(/\s/g, " ");
@@ -44,21 +43,6 @@ describe("swansonFinding", () => {
   });
 });
 
-describe("digitsKnown", () => {
-  it("counts the digits whose last place the 95 % interval leaves within one", () => {
-    // by hand: 1.96 x 0.03 = 0.059 is below 0.1, and 1.96 x 0.06 = 0.118 is not
-    expect(digitsKnown(30.4, 0.03)).toBe(3);
-    expect(digitsKnown(30.4, 0.06)).toBe(2);
-    expect(digitsKnown(30.4, 40)).toBe(0);
-    expect(digitsKnown(-0.304, 0.0003)).toBe(3);
-  });
-
-  it("knows all digits of what has no error, and none of zero with one", () => {
-    expect(digitsKnown(30.4, 0)).toBe(12);
-    expect(digitsKnown(0, 1)).toBe(0);
-  });
-});
-
 describe("precisionFinding", () => {
   const quantity = {
     p90: 20,
@@ -69,10 +53,9 @@ describe("precisionFinding", () => {
   };
 
   it("names the percentile that is known least, with the digits that hold", () => {
-    expect(uncertainLevels(quantity, 1)).toEqual(["p10"]);
-    expect(digitsHeld(quantity, "p10", 1)).toBe(1);
+    expect(knownOf(quantity, "p10", 1, 1_024)).toMatchObject({ digits: 1, enough: false });
     expect(plain(precisionFinding(1_024, quantity, 1))).toBe(
-      "1,024 trials are too few for three digits: P10 is known to ±2.4 %, one digit",
+      "1,024 trials are too few for three digits: P10 is known to ±2.4 %, one digit holds",
     );
   });
 
@@ -81,6 +64,23 @@ describe("precisionFinding", () => {
     expect(precisionFinding(65_536, { ...quantity, standardErrors: errors }, 1)).toBe(
       "65,536 trials hold all three digits of every percentile",
     );
+  });
+});
+
+describe("enoughTrials", () => {
+  const quantity = (error: number) => ({
+    p90: 20,
+    p50: 45,
+    p10: 99,
+    mean: 54,
+    standardErrors: { p90: 0.01, p50: 0.02, p10: error, mean: 0.01 },
+  });
+
+  it("says how many would do, or that no run may have so many", () => {
+    // by hand: an error of 0.2 has to fall to 0.05, so 16 times as many
+    expect(enoughTrials(1_000, quantity(0.2), 1)).toBe("About 16,000 trials would be enough.");
+    expect(enoughTrials(1_000, quantity(5), 1)).toMatch(/more than a run may have: read two/);
+    expect(enoughTrials(1_000, quantity(0.01), 1)).toBeNull();
   });
 });
 

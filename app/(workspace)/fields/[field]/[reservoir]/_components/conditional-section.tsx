@@ -4,6 +4,7 @@ import { useState } from "react";
 import type { QuantitySummary, ResultName } from "@/analytics/volumetrics/results-schema";
 import { errorWords } from "@/app/_client/request";
 import { chanceOf } from "@/components/charts/exceedance-curve";
+import type { HistogramBin } from "@/components/charts/histogram";
 import { WindowPicker, type ValueWindow } from "@/components/charts/window-picker";
 import { ConditionalTable } from "@/components/drivers/conditional-table";
 import { resultLabels } from "@/components/drivers/driver-names";
@@ -16,7 +17,7 @@ import { formatFigure, formatPercent } from "@/components/ui/format";
 import { Section } from "@/components/ui/section";
 import { Notice, Skeleton } from "@/components/ui/status";
 import { useReservoir } from "../_editor/reservoir-context";
-import { useQuestion } from "../_editor/use-question";
+import { ABOVE_P10, useQuestion } from "../_editor/use-question";
 import { useSettled } from "../_editor/use-live-results";
 import { useSensitivity } from "../_queries/sensitivity";
 
@@ -34,7 +35,7 @@ const choices: { value: Choice; label: string }[] = [
 ];
 
 const fixed: Record<Exclude<Choice, "window">, Chances> = {
-  aboveP10: { from: 0.9, to: 1 },
+  aboveP10: ABOVE_P10,
   aboveP50: { from: 0.5, to: 1 },
   belowP90: { from: 0, to: 0.1 },
 };
@@ -43,13 +44,29 @@ const fixed: Record<Exclude<Choice, "window">, Chances> = {
 const LEAST_SHARE = 0.01;
 const PAUSE_MS = 400;
 
+/** The last half per cent at either end goes with the window, as the histogram is cut off there. */
+const EDGE = 0.005;
+
 /** The share of trials below each end of a window of amounts, to a thousandth. */
 export function chancesOf(
   { exceedance }: Pick<QuantitySummary, "exceedance">,
   { low, high }: ValueWindow,
 ): Chances {
-  const below = (value: number) => Math.round((1 - chanceOf(exceedance, value)) * 1000) / 1000;
+  const below = (value: number) => {
+    const chance = Math.round((1 - chanceOf(exceedance, value)) * 1000) / 1000;
+    return chance <= EDGE ? 0 : chance >= 1 - EDGE ? 1 : chance;
+  };
   return { from: below(low), to: below(high) };
+}
+
+/** The bins that hold all but the last of the trials: a long thin tail leaves no room for the rest. */
+function withoutTail(bins: readonly HistogramBin[]): HistogramBin[] {
+  let share = 0;
+  return bins.filter((bin) => {
+    const isInside = share < 1 - EDGE;
+    share += bin.share;
+    return isInside;
+  });
 }
 
 /** What the trials of a part of the range have in common. */
@@ -69,9 +86,9 @@ export function ConditionalSection({ result }: { result: ResultName }) {
         : fixed.aboveP50;
   const settled = useSettled(chosen, PAUSE_MS);
   const isTooThin = chosen.to - chosen.from < LEAST_SHARE;
-  const question = useQuestion(result);
-  const asked = question && settled.to - settled.from >= LEAST_SHARE;
-  const query = useSensitivity(asked ? { ...question, chosen: settled } : null);
+  const question = useQuestion(result, settled);
+  const asked = settled.to - settled.from >= LEAST_SHARE;
+  const query = useSensitivity(asked ? question : null);
   const factor = resultFactor(result, resultBasis);
   const unit = resultUnit(result, resultBasis);
   const name = resultLabels[result];
@@ -79,11 +96,15 @@ export function ConditionalSection({ result }: { result: ResultName }) {
 
   return (
     <Section
+      className="asked-section"
       title="What do the chosen trials share?"
       note={`Of ${name.toLowerCase()}: pick a part of its range and see which inputs put it there.`}
     >
       <div className="mb-4 flex flex-wrap items-end gap-x-6 gap-y-3">
         <Segmented label="Trials" value={choice} options={choices} onChange={setChoice} />
+        <span className="pb-1 text-13 text-ink-soft" role="status">
+          {query.isStale && "Looking at them"}
+        </span>
       </div>
       {choice === "window" && shownWindow && (
         <div className="mb-6">
@@ -97,7 +118,7 @@ export function ConditionalSection({ result }: { result: ResultName }) {
           <WindowPicker
             name={name}
             unit={unit}
-            bins={binsOf(quantity, factor)}
+            bins={withoutTail(binsOf(quantity, factor))}
             window={{ low: shownWindow.low * factor, high: shownWindow.high * factor }}
             tone={result.endsWith("Scf") ? "gas" : "condensate"}
             onChange={({ low, high }) => setWindow({ low: low / factor, high: high / factor })}

@@ -43,7 +43,7 @@ export function DriversSection({
       id="drivers"
       title="What drives the spread"
       note="Four ways to ask, of one result at a time."
-      className="drivers-section"
+      className="asked-section"
     >
       <div className="mb-6 flex flex-wrap items-end gap-x-6 gap-y-3">
         <Select label="Result" value={result} options={resultOptions} onChange={onResult} />

@@ -14,7 +14,12 @@ import {
 import { MomentsTable } from "@/components/estimate/moments-table";
 import { conceptLabels } from "@/components/estimate/plan-words";
 import { PrecisionTable } from "@/components/estimate/precision-table";
-import { errorWords, precisionFinding, runWords } from "@/components/estimate/precision-words";
+import {
+  enoughTrials,
+  errorWords,
+  precisionFinding,
+  runWords,
+} from "@/components/estimate/precision-words";
 import { resultGroups, resultFactor, resultUnit } from "@/components/estimate/result-rows";
 import { ResultTable } from "@/components/estimate/result-table";
 import { PlaceBar, PlaceKey } from "@/components/recovery/concept-bars";
@@ -101,8 +106,10 @@ export function ResultsTab() {
           place={placeName}
         />
       </Columns>
-      <DriversSection result={result} onResult={setResult} />
-      <ConditionalSection key={result} result={result} />
+      <Columns kind="equal">
+        <DriversSection result={result} onResult={setResult} />
+        <ConditionalSection key={result} result={result} />
+      </Columns>
       <RecoverySection />
       <SamplingSection />
     </Stack>
@@ -199,17 +206,16 @@ function SamplingSection() {
   const { results, resultBasis, shown } = useReservoir();
   const { summary } = results;
   if (!summary) return null;
+  const name = "condensateRecoverableStb";
+  const factor = resultFactor(name, resultBasis);
+  const enough = enoughTrials(summary.trials, summary.results[name], factor);
   const at =
     shown?.computedAt && results.isFull ? `, run ${formatDate(shown.computedAt, "time")} UTC` : "";
   return (
     <Columns kind="equal">
       <Section
-        title={precisionFinding(
-          summary.trials,
-          summary.results.condensateRecoverableStb,
-          resultFactor("condensateRecoverableStb", resultBasis),
-        )}
-        note={`Heading: condensate to the tank, 95 %. Table: one standard error of sampling. ${runWords(summary)}${at}. ${errorWords(summary)}`}
+        title={precisionFinding(summary.trials, summary.results[name], factor)}
+        note={`Heading: condensate to the tank, 95 %. Table: one standard error of sampling. ${runWords(summary)}${at}. ${errorWords(summary)}${enough ? ` ${enough}` : ""}`}
       >
         <PrecisionTable summary={summary} basis={resultBasis} />
       </Section>

@@ -7,9 +7,7 @@ import {
   type SensitivityRequest,
 } from "@/app/api/v1/calculations/sensitivity/schema";
 
-export type SensitivityQuestion = Omit<SensitivityRequest, "chosen"> & {
-  chosen?: SensitivityRequest["chosen"];
-};
+export type SensitivityQuestion = SensitivityRequest;
 
 /**
  * What drives a result of an estimate, from its own trials made again. The last answer stays while another is worked
