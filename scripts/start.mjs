@@ -44,6 +44,7 @@ async function main() {
   say(`Dewledger, on Node ${process.versions.node}`);
   loadDotenv();
   const { host, port } = webAddress();
+  const workers = workerCount();
   const address = `http://${host === "0.0.0.0" ? "127.0.0.1" : host}:${port}`;
 
   const hadCluster = await recover();
@@ -76,7 +77,7 @@ async function main() {
   // Asked again: a build takes long enough for somebody to take a port that was free before it.
   const { env: own, standIns, mailPage } = await settings({ address });
   const running = { ...own, DATABASE_URL: env.DATABASE_URL };
-  await startProcesses(group, { env: running, standIns, host, port, address });
+  await startProcesses(group, { env: running, standIns, host, port, address, workers });
   await greet({ address, mailPage, demo });
 }
 
@@ -89,6 +90,17 @@ function webAddress() {
     );
   }
   return { host: process.env.HOST || "127.0.0.1", port: Number(port) };
+}
+
+function workerCount() {
+  const workers = process.env.WORKERS || "1";
+  if (!/^[1-9]\d?$/.test(workers)) {
+    throw new Failure(
+      "WORKERS must be a whole number from 1 to 99.",
+      `Example: WORKERS=2 ${command}`,
+    );
+  }
+  return Number(workers);
 }
 
 /**
@@ -130,7 +142,7 @@ async function startCluster(group, hadCluster) {
   });
 }
 
-async function startProcesses(group, { env, standIns, host, port, address }) {
+async function startProcesses(group, { env, standIns, host, port, address, workers }) {
   const production = { ...env, NODE_ENV: "production" };
   const onUnexpectedEnd = (name) => {
     fail(
@@ -148,14 +160,17 @@ async function startProcesses(group, { env, standIns, host, port, address }) {
   const worker = dev
     ? ["--watch", "--watch-preserve-output", ...program("worker")]
     : program("worker");
-  const { ready } = group.start("worker", worker, { env: production, onUnexpectedEnd });
+  const working = Array.from({ length: workers }, (_, index) => {
+    const name = index === 0 ? "worker" : `worker-${index + 1}`;
+    return group.start(name, worker, { env: production, onUnexpectedEnd }).ready;
+  });
   const web = group.start(
     "web",
     ["node_modules/next/dist/bin/next", dev ? "dev" : "start", "-H", host, "-p", String(port)],
     { env: dev ? { ...env, NODE_ENV: "development" } : production, show: dev, onUnexpectedEnd },
   );
   await Promise.all([
-    dev ? undefined : ready,
+    ...(dev ? [] : working),
     waitUntilHealthy(
       address,
       web.ready.then(() => new Promise(() => undefined)),
