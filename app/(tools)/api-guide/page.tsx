@@ -25,7 +25,11 @@ export default async function ApiGuidePage() {
       />
       <Stack>
         <TokenSection />
-        <FileAddresses origin={origin} mayImport={can(actor, "import.create")} />
+        <FileAddresses
+          origin={origin}
+          mayImport={can(actor, "import.create")}
+          mayRun={can(actor, "run.create")}
+        />
         {[...calculations, ...fluidCalculations].map((calculation) => (
           <CalculationGuide
             key={calculation.name}

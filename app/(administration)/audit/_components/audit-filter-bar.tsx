@@ -20,6 +20,7 @@ const entities = [
   "settings",
   "apiToken",
   "import",
+  "run",
   "export",
 ] as const;
 

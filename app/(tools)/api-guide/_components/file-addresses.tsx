@@ -1,12 +1,20 @@
 import { Section } from "@/components/ui/section";
 import { CodeBlock } from "./code-block";
 
-/** Files a script can fetch or send: the same as on the screens. */
-export function FileAddresses({ origin, mayImport }: { origin: string; mayImport: boolean }) {
+/** Files a script can fetch or send, and long work it can begin: the same as on the screens. */
+export function FileAddresses({
+  origin,
+  mayImport,
+  mayRun,
+}: {
+  origin: string;
+  mayImport: boolean;
+  mayRun: boolean;
+}) {
   const bearer = `-H "authorization: Bearer $DEWLEDGER_TOKEN"`;
   return (
     <Section
-      title="Fetch the budget, bring in a sheet"
+      title="Fetch the budget, bring in a sheet, run the book again"
       note="What a token may do is what its owner may do, as their role stands at that moment."
     >
       <div className="columns columns-equal">
@@ -24,6 +32,23 @@ export function FileAddresses({ origin, mayImport }: { origin: string; mayImport
               `  ${bearer} \\`,
               `  -H "content-type: application/json" \\`,
               `  -d '{"rows": "good"}'`,
+            ].join("\n")}
+          </CodeBlock>
+        )}
+        {mayRun && (
+          <CodeBlock label="Compute every approved estimate again, follow it, list what moved">
+            {[
+              `curl -s ${origin}/api/v1/runs \\`,
+              `  ${bearer} \\`,
+              `  -H "content-type: application/json" \\`,
+              `  -H "idempotency-key: $(uuidgen)" \\`,
+              `  -d '{"kind": "recalculation", "scope": "approved"}'`,
+              ``,
+              `curl -s ${origin}/api/v1/runs/ID \\`,
+              `  ${bearer}`,
+              ``,
+              `curl -s "${origin}/api/v1/runs/ID/items?movedBeyond=2" \\`,
+              `  ${bearer}`,
             ].join("\n")}
           </CodeBlock>
         )}
