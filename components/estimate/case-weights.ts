@@ -1,5 +1,5 @@
 /** Chances of cases, which have to add up to 100 %. */
-import type { CaseText } from "./input-text";
+import type { CaseText, InputText } from "./input-text";
 import { readPercent } from "./percent-text";
 
 /** Sum in per cent; `null` while a chance is missing or is none. */
@@ -15,6 +15,12 @@ export function totalPercent(cases: readonly Pick<CaseText, "weight">[]): number
 
 /** As the engine has it: sums that miss 100 % by no more were rounded. */
 export const addsUp = (total: number) => Math.abs(total - 100) <= 1e-4;
+
+/** Whether chances that can all be read miss 100 %. */
+export function hasUnevenChances({ kind, cases }: InputText): boolean {
+  const total = kind === "scenarios" && cases ? totalPercent(cases.cases) : null;
+  return total !== null && !addsUp(total);
+}
 
 /** Digits after the point of a scaled chance in per cent. */
 const DECIMALS = 2;

@@ -60,7 +60,7 @@ function DifferenceRow({
   difference: InputDifference;
   warning: Warning | undefined;
 }) {
-  const { name, now, before, medianChange, shapeChanged, isSame, source } = difference;
+  const { name, now, before, medianChange, shapeChanged, isSame, source, reason } = difference;
   const about = driverCatalogue[name];
   const scale = scaleFor([now.p90, now.p10, before?.p90, before?.p10], {
     kind: "linear",
@@ -85,6 +85,7 @@ function DifferenceRow({
           ) : (
             !isSame && source
           )}
+          {!isSame && reason && <span className="said">{reason}</span>}
         </small>
       </th>
       {(["p90", "p50", "p10"] as const).map((level) => (

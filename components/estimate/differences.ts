@@ -39,6 +39,8 @@ export interface InputDifference {
   shapeChanged: boolean;
   isSame: boolean;
   source: string;
+  /** why this range, in the expert's words; empty when nobody said */
+  reason: string;
   /** a plan worked it out rather than a person typing it */
   isWorkedOut: boolean;
 }
@@ -54,7 +56,7 @@ export function inputDifferences(
   before: EstimateInputs | null,
 ): InputDifference[] {
   return listedOf(now).map((name) => {
-    const { distribution: current, source } = sampledInput(now, name) ?? missing(name);
+    const { distribution: current, source, reason } = sampledInput(now, name) ?? missing(name);
     const isListed = before !== null && listedOf(before).includes(name);
     const previous = isListed ? (sampledInput(before, name)?.distribution ?? null) : null;
     const range = compileDistribution(current).range;
@@ -67,6 +69,7 @@ export function inputDifferences(
       shapeChanged: previous !== null && previous.kind !== current.kind,
       isSame: previous !== null && isSameDistribution(current, previous),
       source,
+      reason: reason ?? "",
       isWorkedOut: false,
     };
   });
@@ -117,6 +120,7 @@ export function recoveryDifferences(
       shapeChanged: false,
       isSame: previous !== null && sortedJson(previous) === sortedJson(range),
       source: now.inputs.recoveryPlan ? "Worked out by the recovery plan" : "Typed by hand",
+      reason: "",
       isWorkedOut: true,
     };
   });

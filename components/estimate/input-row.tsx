@@ -7,6 +7,7 @@ import type { Warning } from "@/analytics/warnings";
 import { DensityCurve } from "@/components/charts/density-curve";
 import { formatFigure, MISSING } from "@/components/ui/format";
 import type { CaseSet } from "./case-sets";
+import { hasUnevenChances } from "./case-weights";
 import { DetailPanel, panelSummary } from "./detail-panel";
 import { hasBounds, InputBounds } from "./input-bounds";
 import { driverCatalogue, type InputDescription } from "./input-catalogue";
@@ -73,11 +74,13 @@ export function InputRow({
       onChange(next);
     });
   const suspicion = onChange ? suspicionOf(name, expected, text, reading) : null;
+  const isSaidInPanel = hasPanel && isOpen && hasUnevenChances(text);
   const problems = [
     ...new Set(
-      [reading.problem, ...Object.values(reading.fields).map((field) => field.problem)].filter(
-        (problem): problem is string => problem !== null,
-      ),
+      [
+        isSaidInPanel ? null : reading.problem,
+        ...Object.values(reading.fields).map((field) => field.problem),
+      ].filter((problem): problem is string => problem !== null),
     ),
   ];
   // The question about units says what the warning about the range says, and more.

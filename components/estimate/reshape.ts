@@ -59,7 +59,7 @@ export function withEnds(text: InputText, quantile: Quantile | null, ends: Range
   return withValues(next, { low, high });
 }
 
-/** One case in another shape. */
+/** One case in another shape. A single value says nothing of a spread: what it does not say is left to fill in. */
 export function reshapedCase(
   name: DriverName,
   range: RangeText,
@@ -68,9 +68,10 @@ export function reshapedCase(
 ): RangeText {
   if (kind === range.kind) return range;
   const next = { ...range, kind, ...startingBounds(name, kind) };
-  return quantile && !isDetailed(range.kind)
-    ? withValues(next, convertShape(quantile, kind, next.ends))
-    : next;
+  if (range.kind === "constant") {
+    return { ...next, fields: { ...next.fields, mode: range.fields.value ?? "" } };
+  }
+  return quantile ? withValues(next, convertShape(quantile, kind, next.ends)) : next;
 }
 
 const written = (value: number | undefined) =>
