@@ -41,3 +41,17 @@ export function otherDifferences(left: EstimateInputs, right: EstimateInputs): s
   if (parts.length === 0) return null;
   return `${capital(listWords(parts))} ${parts.length === 1 && !parts[0].endsWith("s") ? "differs" : "differ"} too.`;
 }
+
+/** Longer does not stand under a bar. */
+const LONGEST = 22;
+
+/** What tells two labels apart: "Larkhaven, Main sand, r3" and "…, r5" are "r3" and "r5". */
+export function shortLabels(left: string, right: string): [string, string] {
+  const [a, b] = [left, right].map((label) => label.split(", "));
+  const most = Math.min(a.length, b.length) - 1;
+  let shared = 0;
+  while (shared < most && a[shared] === b[shared]) shared += 1;
+  const short = [a, b].map((parts) => parts.slice(shared).join(", "));
+  const fits = short[0] !== short[1] && short.every((text) => text.length <= LONGEST);
+  return fits ? [short[0], short[1]] : ["Left", "Right"];
+}

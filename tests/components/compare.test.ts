@@ -3,6 +3,7 @@ import {
   comparisonFinding,
   inputsFinding,
   otherDifferences,
+  shortLabels,
 } from "@/components/compare/comparison-words";
 import { comparisonHref, readComparison, readSide, writeSide } from "@/components/compare/sides";
 import { inputDifferences } from "@/components/estimate/differences";
@@ -88,5 +89,23 @@ describe("otherDifferences", () => {
     expect(
       otherDifferences(pair("areaAcres", "porosity"), pair("porosity", "areaAcres")),
     ).toBeNull();
+  });
+});
+
+describe("shortLabels", () => {
+  it("leaves out what both have in common", () => {
+    expect(shortLabels("Larkhaven, Main sand, r3", "Larkhaven, Main sand, r5")).toEqual([
+      "r3",
+      "r5",
+    ]);
+    expect(shortLabels("Larkhaven, Main sand, r3", "Larkhaven, Main sand, r3, cycling")).toEqual([
+      "r3",
+      "r3, cycling",
+    ]);
+    expect(shortLabels("Larkhaven", "Pellow North")).toEqual(["Larkhaven", "Pellow North"]);
+    expect(shortLabels("Larkhaven, Main sand, r3", "Pellow North, Marrow sand, r2")).toEqual([
+      "Left",
+      "Right",
+    ]);
   });
 });

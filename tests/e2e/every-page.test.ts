@@ -1,6 +1,7 @@
 import type { Browser, Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import type { EstimateView } from "@/app/api/v1/estimates/schema";
+import { comparisonHref } from "@/components/compare/sides";
 import type { Role } from "@/services/policy";
 import { buildDraft, buildPriceDeck, buildSubmitted } from "../factories";
 import { axeViolations, launchBrowser, openPage } from "../support/browser";
@@ -35,6 +36,10 @@ const pages: Partial<Record<Role | "visitor", () => string[]>> = {
     `${reservoirOf(draft)}/results`,
     `${reservoirOf(draft)}/compare`,
     `${reservoirOf(submitted)}/history`,
+    comparisonHref({
+      left: { kind: "estimate", estimateId: submitted.id },
+      right: { kind: "field", fieldId: submitted.place.field.id },
+    }),
     "/fields/new",
     "/import",
     "/methods",

@@ -15,10 +15,10 @@ import { SidePicker } from "./side-picker";
 /** Any two revisions, concepts or fields beside each other. Both sides are in the address. */
 export function ComparePage() {
   const router = useRouter();
-  const { withBasis } = useBasis();
+  const { basis, withBasis } = useBasis();
   const address = readComparison(useSearchParams());
   const { left, right, result } = address;
-  const query = useComparison(left && right ? { left, right, result } : null);
+  const query = useComparison(left && right ? { left, right, result } : null, basis);
 
   function go(change: Partial<ComparisonAddress>) {
     router.replace(withBasis(comparisonHref({ ...address, ...change })), { scroll: false });

@@ -10,6 +10,7 @@ import {
   comparisonFinding,
   inputsFinding,
   otherDifferences,
+  shortLabels,
 } from "@/components/compare/comparison-words";
 import { ChangeExplanation } from "@/components/drivers/change-explanation";
 import { resultLabels, resultOptions } from "@/components/drivers/driver-names";
@@ -59,6 +60,7 @@ export function ComparisonBody({
     right: scaled(right.quantities[result], factor),
   };
   const name = resultLabels[result];
+  const names = shortLabels(left.label, right.label);
   const finding = comparisonFinding(
     { label: left.label, range: ranges.left },
     { label: right.label, range: ranges.right },
@@ -107,7 +109,7 @@ export function ComparisonBody({
               tone={result.endsWith("Scf") ? "gas" : "condensate"}
               scale={ranges.right.p10 / ranges.right.p90 > 10 ? "log" : "linear"}
               before={{
-                label: left.label,
+                label: names[0],
                 range: ranges.left,
                 curve: curveOf(left, result, factor),
               }}
@@ -116,8 +118,8 @@ export function ComparisonBody({
           {comparison.explanation ? (
             <ChangeExplanation
               explanation={comparison.explanation}
-              from={left.label}
-              to={right.label}
+              from={names[0]}
+              to={names[1]}
               name={name}
               factor={factor}
               unit={unit}

@@ -8,13 +8,18 @@ import {
   type ComparisonSide,
 } from "@/app/api/v1/comparisons/schema";
 import { estimateSchema } from "@/app/api/v1/estimates/schema";
+import { basisParams, type Basis } from "@/components/basis/basis";
 
-/** Two sides beside each other; the last answer stays while another result is explained. */
-export function useComparison(question: ComparisonRequest | null) {
+/**
+ * Two sides beside each other; the last answer stays while another result is explained. The basis says which revisions
+ * stand for a field.
+ */
+export function useComparison(question: ComparisonRequest | null, basis: Basis) {
+  const search = basisParams(basis).toString();
   return useQuery({
-    queryKey: ["comparison", question],
+    queryKey: ["comparison", question, search],
     queryFn: ({ signal }) =>
-      request("/api/v1/comparisons", {
+      request(`/api/v1/comparisons${search && `?${search}`}`, {
         method: "POST",
         body: question,
         schema: comparisonSchema,
