@@ -178,20 +178,53 @@ export const portfolio: MethodGroup = {
       name: "Totals",
       gives: "Range of a sum of fields, trial by trial.",
       source:
-        "One-factor normal copula a basin: A. J. McNeil, R. Frey, P. Embrechts, Quantitative Risk Management, 2nd ed. (2015), section 7.3",
-      range: "Basins are independent of each other. A portfolio's P90 is no reserves category.",
+        "Normal copula with common factors: A. J. McNeil, R. Frey, P. Embrechts, Quantitative Risk Management, 2nd ed. (2015), sections 6.4 and 7.3",
+      range:
+        "By a named dependence set. Estimates with another number of trials join by their ranks. A portfolio's P90 is no reserves category.",
       error: measured(
-        "Ten lognormal fields against the closed form and the approximation of Fenton and Wilkinson.",
+        "Ten lognormal fields to 1 % of the closed form and of the approximation of Fenton and Wilkinson; standard errors stand with the total, on the safe side.",
       ),
       usedIn: "Portfolio, fields, exports",
     },
     {
+      name: "Dependence of fields",
+      gives: "How reservoirs move together: the portfolio, the basin, and factors that some share.",
+      source:
+        "Rank correlation r as 2 sin(π r / 6) between normal scores: K. Pearson, Biometric Series IV (1907)",
+      range:
+        "0 to 0.99; a basin at least the portfolio. What a field shares comes to at most 1, else the set is refused with the names.",
+      error: measured("Spearman correlations of what was asked to 0.02 at 20,000 trials."),
+      usedIn: "Dependence sets, every total",
+    },
+    {
+      name: "Diversification",
+      gives: "What adding trial by trial does to P90, P50 and P10.",
+      source:
+        "Total less arithmetic sum; direction as in the Guidelines for Application of the PRMS (2011), from memory",
+      range: "P90 gains and P10 loses unless all fields move as one.",
+      error: exact("A difference of the two totals."),
+      usedIn: "Portfolio, fields",
+    },
+    {
+      name: "Contributions to a percentile",
+      gives: "What each field holds when the total comes out at its P90, P50 or P10.",
+      source:
+        "Euler's allocation: D. Tasche, Risk contributions and performance measurement (1999); a line through the 5 % of trials nearest the percentile",
+      range:
+        "They add up to the percentile. Shares of variance are covariances with the total; they add up to 1.",
+      error: measured("Closed form of jointly normal fields within 0.1 of a field's deviation."),
+      usedIn: "Portfolio, selections of fields",
+    },
+    {
       name: "Risk",
-      gives: "Figures times the chance of commerciality.",
-      source: "Expectation, trial by trial",
-      range: "The mean is exact; the chance of nothing is not in the range, and screens say so.",
-      error: exact("The mean is exact."),
-      usedIn: "Portfolio, fields, when the basis is risked",
+      gives: "Figures times the chance of commerciality, or drawn yes or no trial by trial.",
+      source: "Expectation; or independent draws with the field's chance (common practice)",
+      range:
+        "Risked: the mean is exact and the chance of nothing is not in the range. Yes or no: it is, and the mean is that of the draws.",
+      error: measured(
+        "Mean, variance and chance of nothing of the closed form of the mixture, within sampling error at 20,000 trials.",
+      ),
+      usedIn: "Portfolio, fields, exports, as the basis says",
     },
     {
       name: "Liquid value",
