@@ -55,22 +55,22 @@ export const demoRanges: Readonly<Record<string, Partial<Record<InputName, DemoR
       since: autumn,
       distribution: cases(
         CONTACT,
-        ["Lowest gas seen", 0.3, lognormal(1_080, 1_560)],
-        ["From pressure gradients", 0.5, lognormal(1_560, 2_150)],
-        ["Spill point", 0.2, lognormal(2_200, 2_850)],
+        ["Lowest gas seen", 0.25, lognormal(1_160, 1_560)],
+        ["From pressure gradients", 0.6, lognormal(1_560, 2_060)],
+        ["Spill point", 0.15, lognormal(2_100, 2_560)],
       ),
       source: "Depth map BM-26 with three contacts; formation pressures of BM-2 and BM-4",
       reason:
-        "The gas and water gradients cross at 6,634 ft, give or take 20 ft, so that case has half the weight. Gas was " +
-        "logged down to 6,598 ft and cannot be higher; the structure spills at 6,690 ft.",
+        "The gas and water gradients cross at 6,634 ft, give or take 20 ft, and the pressure decline fits that, so the case " +
+        "weighs most. Gas was logged down to 6,598 ft and cannot end higher; the structure spills at 6,690 ft.",
     },
     netThicknessFt: {
       since: autumn,
       distribution: cases(
         CONTACT,
-        ["Lowest gas seen", 0.3, lognormal(44, 66)],
-        ["From pressure gradients", 0.5, lognormal(60, 88)],
-        ["Spill point", 0.2, lognormal(82, 116)],
+        ["Lowest gas seen", 0.25, lognormal(48, 67)],
+        ["From pressure gradients", 0.6, lognormal(60, 86)],
+        ["Spill point", 0.15, lognormal(74, 104)],
       ),
       source: "Log evaluation of four wells, net pay above each contact",
       reason:

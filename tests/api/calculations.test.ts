@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
 import type { Problem } from "@/app/_server/problem";
+import { correlationsResponseSchema } from "@/app/api/v1/calculations/correlations/schema";
 import { distributionResponseSchema } from "@/app/api/v1/calculations/distribution/schema";
 import {
   inPlaceResponseSchema,
@@ -220,6 +221,108 @@ describe("POST /api/v1/calculations/distribution", () => {
   });
 });
 
+describe("POST /api/v1/calculations/distribution of what was given", () => {
+  const askRange = async (distribution: unknown) =>
+    distributionResponseSchema.parse(await ask("distribution", { distribution }));
+
+  it("gives the limits behind a P90 and a P10", async () => {
+    // PERT(10, 20, 50) has its P90 and P10 there (SciPy 1.17.1)
+    const distribution = {
+      kind: "pert",
+      low: 14.48939834,
+      mode: 20,
+      high: 33.35561498,
+      ends: "p90p10",
+    };
+    const { fit, support } = await askRange(distribution);
+    expect(fit?.kind === "limits" && fit.limits.high).toBeCloseTo(50, 5);
+    expect(support.low).toBeCloseTo(10, 5);
+  });
+
+  it("gives the residual at each percentile", async () => {
+    const points = [
+      { exceedance: 0.9, value: 10 },
+      { exceedance: 0.5, value: 14 },
+      { exceedance: 0.1, value: 22 },
+    ];
+    const normal = await askRange({ kind: "percentiles", family: "normal", points });
+    // Least squares against the normal quantiles: mean 46 / 3, slope 12 / 2.5631
+    if (normal.fit?.kind !== "percentiles") throw new Error("Not a fit of percentiles.");
+    const given = normal.fit.points.map((point) => point.given);
+    [28 / 3, 46 / 3, 64 / 3].forEach((value, i) => expect(given[i]).toBeCloseTo(value, 9));
+    expect(normal.fit.largestResidual).toBeCloseTo(4 / 3 / 12, 9);
+    const shifted = await askRange({ kind: "percentiles", family: "shiftedLognormal", points });
+    expect(shifted.fit?.kind === "percentiles" && shifted.fit.largestResidual).toBeCloseTo(0, 9);
+  });
+
+  it("gives both tests of measured values and their stairs", async () => {
+    const values = [12, 15, 15, 16, 18, 21, 24, 30, 41, 66, 90, 180];
+    const { fit } = await askRange({ kind: "data", shape: "lognormal", values });
+    if (fit?.kind !== "data") throw new Error("Not a fit of data.");
+    // ad.test and lillie.test of nortest 1.0-4 in R 4.2.2
+    expect(fit.tests.normal.andersonDarling.pValue).toBeCloseTo(0.000312520910313, 9);
+    expect(fit.tests.lognormal?.andersonDarling.pValue).toBeCloseTo(0.116755228715, 9);
+    expect(fit.tests.lognormal?.lilliefors.pValue).toBeCloseTo(0.293920749793, 9);
+    expect([fit.sampleSize, fit.stairs.values.length]).toEqual([12, 11]);
+  });
+
+  it("gives each case and the values with chances of their own", async () => {
+    const { cases, atoms, range } = await askRange({
+      kind: "scenarios",
+      scenarios: [
+        { name: "Dry", weight: 0.3, distribution: { kind: "constant", value: 100 } },
+        { name: "Wet", weight: 0.7, distribution: { kind: "uniform", low: 100, high: 200 } },
+      ],
+    });
+    expect(atoms).toEqual([{ value: 100, probability: 0.3 }]);
+    expect(cases?.map(({ name, range: own }) => [name, own.mean])).toEqual([
+      ["Dry", 100],
+      ["Wet", 150],
+    ]);
+    expect(range.mean).toBeCloseTo(135, 10);
+  });
+
+  it("refuses weights that do not add up, and a case by its place", async () => {
+    const scenarios = (weight: number, high: number) => ({
+      distribution: {
+        kind: "scenarios",
+        scenarios: [
+          { name: "A", weight: 0.3, distribution: { kind: "constant", value: 1 } },
+          { name: "B", weight, distribution: { kind: "uniform", low: 2, high } },
+        ],
+      },
+    });
+    const weights = await refused("distribution", scenarios(0.6, 3));
+    expect(weights.errors?.[0]).toMatchObject({
+      pointer: "#/distribution/scenarios",
+      detail: expect.stringContaining("add up to 0.9"),
+    });
+    const high = await refused("distribution", scenarios(0.7, 1));
+    expect(high.errors?.[0].pointer).toBe("#/distribution/scenarios/1/distribution/high");
+  });
+});
+
+describe("POST /api/v1/calculations/correlations", () => {
+  it("proposes the nearest possible set, and finds it possible when asked again", async () => {
+    const correlations = [
+      { a: "areaAcres", b: "netThicknessFt", rank: 0.9 },
+      { a: "areaAcres", b: "porosity", rank: 0.7 },
+      { a: "netThicknessFt", b: "porosity", rank: -0.9 },
+    ];
+    const first = correlationsResponseSchema.parse(await ask("correlations", { correlations }));
+    expect(first.possible).toBe(false);
+    expect(first.reason).toContain("contradict each other");
+    const again = await ask("correlations", { correlations: first.nearest?.correlations });
+    expect(again).toMatchObject({ possible: true, nearest: null });
+  });
+
+  it("refuses a pair that is given twice, at its place", async () => {
+    const pair = { a: "porosity", b: "waterSaturation", rank: -0.5 };
+    const problem = await refused("correlations", { correlations: [pair, pair] });
+    expect(problem.errors?.[0].pointer).toBe("#/correlations/1");
+  });
+});
+
 describe("POST /api/v1/calculations/simulation", () => {
   it("answers the same question with the same figures", async () => {
     const question = { inputs: estimateInputs(), trials: 1000, seed: 7 };
@@ -247,7 +350,7 @@ describe("POST /api/v1/calculations/simulation", () => {
   });
 });
 
-describe.each(["wellstream", "z-factor", "in-place", "distribution", "simulation"])(
+describe.each(["wellstream", "z-factor", "in-place", "distribution", "correlations", "simulation"])(
   "POST /api/v1/calculations/%s",
   (name) => {
     it("answers 401 to a visitor", async () => {
