@@ -89,6 +89,25 @@ describe("explainChange", () => {
     expect(explanation).toMatchObject({ from: p50(from), to: p50(to), trials: 4_000 });
   });
 
+  it("takes an estimate between the two for what its own simulation says", () => {
+    const [from, to] = [product(2000, 80), product(2600, 60)];
+    const p50 = ({ inputs, seed, trials }: EstimateRun) =>
+      simulate(inputs, { seed, trials }).summary.results.condensateRecoverableStb.p50;
+    const { areaAcres } = to.inputs.uncertain;
+    const onlyArea = run({
+      ...from.inputs,
+      uncertain: { ...from.inputs.uncertain, areaAcres },
+    });
+    const { netThicknessFt } = to.inputs.uncertain;
+    const onlyThickness = run({
+      ...from.inputs,
+      uncertain: { ...from.inputs.uncertain, netThicknessFt },
+    });
+    const expected = (p50(onlyArea) - p50(from) + p50(to) - p50(onlyThickness)) / 2;
+    const found = explain(from, to).changes.find(({ change }) => nameOf(change) === "areaAcres");
+    expect(found?.effect).toBeCloseTo(expected, 6);
+  });
+
   it("gives no effect to a change that the result does not feel", () => {
     const explanation = explain(
       product(2000, 80),

@@ -3,15 +3,22 @@ import path from "node:path";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { DomainError } from "@/analytics/errors";
 import { loadingsOf } from "@/analytics/portfolio/factor-model";
-import { bytesOfFieldTrials } from "@/analytics/portfolio/field-trials";
+import { summariseField } from "@/analytics/portfolio/field-summary";
+import { bytesOfFieldTrials, viewFieldTrials } from "@/analytics/portfolio/field-trials";
 import { rollUp } from "@/analytics/portfolio/roll-up";
+import { explainChange } from "@/analytics/sensitivity/explain-change";
+import { computeSensitivity } from "@/analytics/sensitivity/sensitivity";
+import { vectorNames } from "@/analytics/volumetrics/results-schema";
 import { simulate } from "@/analytics/volumetrics/simulate";
 import { simulateUntilSettled, type SettleStep } from "@/analytics/volumetrics/until-settled";
 import {
   closePool,
   MAXIMUM_QUEUE,
   runAlignment,
+  runChange,
+  runFieldSummary,
   runLedger,
+  runSensitivity,
   runSimulation,
   runUntilSettled,
 } from "@/services/compute/pool";
@@ -147,5 +154,37 @@ describe("runAlignment and runLedger", () => {
       return own ? [{ ...field, buffer, figures: own, sourceTrials: trials }] : [];
     });
     expect(await runLedger(aligned, options)).toEqual(expected);
+  });
+});
+
+describe("runSensitivity and runChange", () => {
+  const how = { seed: 3, trials: 500, sampling: "latinHypercube" } as const;
+  const question = { ...how, result: "salesGasScf", chosen: { from: 0.9, to: 1 } } as const;
+
+  it("give what the calling thread would have given", { timeout: 60_000 }, async () => {
+    const inputs = buildInputs();
+    expect(await runSensitivity(inputs, question)).toEqual(computeSensitivity(inputs, question));
+    const change = {
+      from: { ...how, inputs },
+      to: { ...how, inputs: buildInputs({ areaAcres: { kind: "constant", value: 2_000 } }) },
+      result: "salesGasScf",
+      percentile: "p50",
+    } as const;
+    expect(await runChange(change)).toEqual(explainChange(change));
+  });
+
+  it("bring an impossible input back as the error it was", async () => {
+    const inputs = buildInputs({ porosity: { kind: "constant", value: 0.6 } });
+    await expect(runSensitivity(inputs, question)).rejects.toThrow(DomainError);
+  });
+});
+
+describe("runFieldSummary", () => {
+  it("sums up a field from trials that it shares", async () => {
+    const trials = 200;
+    const buffer = new SharedArrayBuffer(bytesOfFieldTrials(trials));
+    const field = viewFieldTrials(buffer, trials);
+    vectorNames.forEach((name, i) => field.volumes[name].forEach((_, t, all) => (all[t] = i + t)));
+    expect(await runFieldSummary({ buffer, trials })).toEqual(summariseField(field));
   });
 });
