@@ -27,8 +27,9 @@ const numbers = [
   "eleven",
   "twelve",
 ];
-const inWords = (count: number) => numbers[count] ?? String(count);
-const capital = (text: string) => text[0].toUpperCase() + text.slice(1);
+/** "three" for 3; figures above twelve. */
+export const inWords = (count: number) => numbers[count] ?? String(count);
+export const capital = (text: string) => text[0].toUpperCase() + text.slice(1);
 const labels = (names: readonly DriverName[]) =>
   names.map((name) => driverCatalogue[name].label.toLowerCase()).join(", ");
 

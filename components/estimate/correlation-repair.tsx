@@ -3,6 +3,7 @@
 import { useState } from "react";
 import { Button } from "@/components/ui/button";
 import { Notice } from "@/components/ui/status";
+import { capital, inWords } from "./checklist";
 import { correlationChanges, pairName } from "./correlation-words";
 import type { Correlation } from "./estimate-text";
 
@@ -87,5 +88,5 @@ function largestWords(changes: readonly { before: number; after: number }[]): st
   const [first] = changes;
   if (!first) return "No pair changes by as much as is shown";
   const largest = Math.abs(first.after - first.before).toFixed(2);
-  return `${changes.length === 1 ? "One pair changes" : `${changes.length} pairs change`}, the most by ${largest}`;
+  return `${changes.length === 1 ? "One pair changes" : `${capital(inWords(changes.length))} pairs change`}, the most by ${largest}`;
 }

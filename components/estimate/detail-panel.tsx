@@ -7,6 +7,7 @@ import { familyLabels } from "./fit-words";
 import type { InputDescription } from "./input-catalogue";
 import type { InputReading } from "./input-reading";
 import type { InputText } from "./input-text";
+import { readPercent } from "./percent-text";
 import { PercentilesPanel } from "./percentiles-panel";
 
 export interface DetailPanelProps {
@@ -54,10 +55,18 @@ export function panelSummary(text: InputText, reading: InputReading): string | n
     }
     case "scenarios": {
       const cases = text.cases?.cases ?? [];
-      const names = cases.map(({ name, weight }) => `${name.trim() || "unnamed"} ${weight} %`);
+      const names = cases.map(
+        ({ name, weight }) => `${name.trim() || "unnamed"} ${shortPercent(weight)}`,
+      );
       return names.join(", ");
     }
     default:
       return null;
   }
+}
+
+/** A chance as typed, or to four digits where it was worked out. */
+function shortPercent(weight: string): string {
+  const chance = readPercent(weight, "");
+  return typeof chance === "number" ? `${Number((chance * 100).toPrecision(4))} %` : "– %";
 }

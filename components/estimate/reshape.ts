@@ -10,7 +10,7 @@ import {
   type RangeText,
 } from "./input-text";
 import { typedFigure } from "./quantities-of-inputs";
-import { convertShape, hasEnds, isDetailed, tidy, type ParametricKind } from "./shapes";
+import { convertShape, hasEnds, tidy, type ParametricKind } from "./shapes";
 
 type Quantile = (probability: number) => number;
 

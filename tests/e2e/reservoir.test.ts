@@ -35,6 +35,16 @@ async function toTheTank(page: Page): Promise<string> {
   return (await row.getByRole("cell").nth(1).textContent()) ?? "";
 }
 
+async function shape(page: Page, input: string, name: string) {
+  await page.getByRole("button", { name: new RegExp(`^Shape of ${input}:`) }).click();
+  await page.getByRole("menuitem", { name: new RegExp(`^${name}`) }).click();
+}
+
+async function choose(page: Page, option: RegExp) {
+  await page.getByRole("button", { name: /^Which case is true is decided/ }).click();
+  await page.getByRole("option", { name: option }).click();
+}
+
 const saved = (page: Page) => page.getByText("Saved", { exact: true }).waitFor();
 
 describe("the inputs of a draft", () => {
@@ -92,6 +102,50 @@ describe("the inputs of a draft", () => {
     await page.getByText("Is 9 in metres?").waitFor();
     await page.getByRole("button", { name: "Use 29.5 ft" }).click();
     expect(await field(page, "Net thickness, Lowest").inputValue()).toBe("29.5");
+    await context.close();
+  });
+
+  it("take percentiles, pasted values, a case that two inputs share, and correlations that can be", async () => {
+    const draft = await buildDraft();
+    const { page, context, problems } = await openPage(browser, { as: "engineer" });
+    await page.goto(addressOf(draft));
+    await shape(page, "Porosity", "Percentiles");
+    await field(page, "Porosity, percentile 2, value").fill("0.15");
+    await page.getByText(/curve misses P50 by/).waitFor();
+    await shape(page, "Water saturation", "Pasted data");
+    await page.getByLabel(/^Values/).fill("Sw\n0.21\n0.24\n0.19\n0.31\n0.27");
+    await page.getByText("Cell 1, “Sw” is no number and is left out.").waitFor();
+
+    await shape(page, "Area", "Cases");
+    await field(page, "Area, case Low, chance").fill("20");
+    await page.getByText("The chances add up to 90.00 %, not 100 %.").waitFor();
+    await page.getByRole("button", { name: "Scale to 100 %" }).click();
+    await choose(page, /that you name$/);
+    await field(page, "Name of the set of cases of Area").fill("Gas-water contact");
+    await page.getByRole("button", { name: "Close the cases of Area" }).click();
+    await shape(page, "Net thickness", "Cases");
+    await choose(page, /^once for “Gas-water contact”/);
+    await page.getByText("Takes the same case as area in every trial.").waitFor();
+
+    await field(page, "Porosity with Gas recovery").fill("0.9");
+    await field(page, "Gas recovery with Condensate recovery").fill("0.9");
+    await field(page, "Porosity with Condensate recovery").fill("-0.9");
+    await page.getByRole("heading", { name: "These correlations cannot all hold" }).waitFor();
+    await page.getByRole("button", { name: "Nearest possible matrix" }).click();
+    await page.getByRole("button", { name: "Take these correlations" }).click();
+    await page.getByText("These correlations are possible together.").waitFor();
+    expect(await axeViolations(page)).toEqual([]);
+    await saved(page);
+
+    const { inputs } = made(
+      await (await as("engineer")).get<EstimateView>(`/api/v1/estimates/${draft.id}`),
+    );
+    expect(inputs.uncertain.netThicknessFt.distribution).toMatchObject({
+      kind: "scenarios",
+      caseSet: "Gas-water contact",
+    });
+    expect(inputs.uncertain.waterSaturation.distribution).toMatchObject({ kind: "data" });
+    expect(problems).toEqual([]);
     await context.close();
   });
 

@@ -2,6 +2,7 @@
 
 import { useState } from "react";
 import { errorWords } from "@/app/_client/request";
+import { capital, inWords } from "@/components/estimate/checklist";
 import { CorrelationGrid } from "@/components/estimate/correlation-grid";
 import { CorrelationRepair } from "@/components/estimate/correlation-repair";
 import {
@@ -117,5 +118,5 @@ function title(counted: readonly Correlation[], possible: boolean | null): strin
   if (possible === false) return "These correlations cannot all hold";
   return counted.length === 1
     ? "One pair of inputs moves together"
-    : `${counted.length} pairs of inputs move together`;
+    : `${capital(inWords(counted.length))} pairs of inputs move together`;
 }

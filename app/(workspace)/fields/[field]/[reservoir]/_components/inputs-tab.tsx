@@ -78,7 +78,9 @@ export function InputsTab() {
 /** Warnings that are about no single input: the fluid, the correlations, the depth. */
 function OtherWarnings() {
   const { warnings, place, withBasis, text } = useReservoir();
-  const others = warnings.filter((warning) => inputOfPath(warning.input) === null);
+  const about = warnings.filter((warning) => inputOfPath(warning.input) === null);
+  // One input that is tied to several others is said once.
+  const others = [...new Map(about.map((warning) => [warning.message, warning])).values()];
   if (others.length === 0 && text?.fluid) return null;
   const fluidHref = withBasis(`/fields/${place.field}/${place.reservoir}/fluid`);
   return (
@@ -117,7 +119,9 @@ function Exceedance() {
         <p className="text-ink-soft">
           {reading && reading.impossible.length > 0
             ? "The curve appears when no input is impossible."
-            : "The curve appears when every input is filled in."}
+            : reading && reading.problem !== null
+              ? "The curve appears when the inputs can all be true together."
+              : "The curve appears when every input is filled in."}
         </p>
       </Section>
     );
