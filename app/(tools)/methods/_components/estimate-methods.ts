@@ -107,6 +107,16 @@ export const estimates: MethodGroup = {
       usedIn: "Correlation grid, calculation “correlations”",
     },
     {
+      name: "Swanson’s mean",
+      gives: "A mean from three percentiles, beside the mean of every trial.",
+      source: "Hurst, Brown and Swanson (2000): 0.3 P90 + 0.4 P50 + 0.3 P10",
+      range: "Ranges that are not too skewed.",
+      error: measured(
+        "Exact for a normal; against the closed form of a lognormal within 1 % up to P10/P90 of 4.7, 19 % low at 47.",
+      ),
+      usedIn: "Results, beside the true mean",
+    },
+    {
       name: "What drives the range",
       gives: "Inputs by their share of the spread.",
       source: "A. Saltelli et al., Global Sensitivity Analysis: the Primer (2008), section 1.2",
