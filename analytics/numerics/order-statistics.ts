@@ -40,7 +40,7 @@ export function createOrderWorkspace(capacity: number): OrderWorkspace {
     picked: new Float64Array(capacity),
     binOfRank: new Int32Array(2 * MAXIMUM_QUANTILES),
     placeOfRank: new Int32Array(2 * MAXIMUM_QUANTILES),
-    low: new Uint32Array(RADIX),
+    low: new Uint32Array(4 * SHORT_RANKING),
     high: new Uint32Array(RADIX),
     half: new Uint32Array(capacity),
     wideKeys: new Uint32Array(capacity),
@@ -115,6 +115,36 @@ export function countSample(
   return { minimum, maximum, mean, standardDeviation, quantiles, histogram };
 }
 
+/**
+ * How many of the values from `from` up to `to` lie below a bound, for the array that `countSample` counted last. By their
+ * keys: whole numbers compare without a branch, which half of the time a processor would foresee wrongly, and only the
+ * few values in the bound's own bin are looked at themselves.
+ *
+ * @param sample  what that call returned
+ * @param count   its number of values
+ * @param bound   from the sample's minimum to its maximum
+ */
+export function countBelow(
+  values: ArrayLike<number>,
+  from: number,
+  to: number,
+  bound: number,
+  { minimum, maximum }: Pick<CountedSample, "minimum" | "maximum">,
+  count: number,
+  { keys }: OrderWorkspace,
+): number {
+  if (minimum === maximum) return 0;
+  const bins = quantileBins(count);
+  const own = Math.min(((bound - minimum) * (bins / (maximum - minimum))) | 0, bins - 1);
+  let below = 0;
+  for (let i = from; i < to; i += 1) {
+    const key = keys[i];
+    below += (key - own) >>> 31;
+    if (key === own && values[i] < bound) below += 1;
+  }
+  return below;
+}
+
 /** A bin of the last count with more than this share of the values is too coarse to rank by. */
 const LARGEST_BIN = 0.02;
 
@@ -153,13 +183,15 @@ export function gradesOfCounted(
 /** Ranking sorts by the upper and the lower half of a 22-bit key: two passes over 2,048 bins that stay in cache. */
 const RADIX_BITS = 11;
 const RADIX = 1 << RADIX_BITS;
+/** Up to this many values are ranked in a single pass over bins that stay in cache. */
+const SHORT_RANKING = 1_024;
 
 /**
  * Writes the rank (0 for the smallest) of each value to `ranks`, and the positions of the values from smallest to
  * largest to `order`. Equal values are ranked in the order in which they stand.
  *
- * Two counting passes over the value's 22-bit position between the extremes put nearly everything in place; an
- * insertion pass settles values that share a key.
+ * One or two counting passes over the value's position between the extremes put nearly everything in place; an insertion
+ * pass settles values that share a key.
  *
  * @param values finite numbers; not changed
  */
@@ -175,8 +207,43 @@ export function rankByCounting(
     for (let i = 0; i < count; i += 1) ranks[i] = order[i] = i;
     return;
   }
-  const { low, high, half, wideKeys } = workspace;
-  low.fill(0);
+  if (count <= SHORT_RANKING) {
+    rankInOnePass(values, count, minimum, maximum, workspace, order);
+  } else rankInTwoPasses(values, count, minimum, maximum, workspace, order);
+  settle(order, count, values);
+  for (let rank = 0; rank < count; rank += 1) ranks[order[rank]] = rank;
+}
+
+/** About four bins to a value, so that hardly two share one. */
+function rankInOnePass(
+  values: ArrayLike<number>,
+  count: number,
+  minimum: number,
+  maximum: number,
+  { low, wideKeys }: OrderWorkspace,
+  order: Uint32Array,
+): void {
+  const bins = Math.min(4 * count, low.length);
+  low.fill(0, 0, bins);
+  const scale = (bins - 1) / (maximum - minimum);
+  for (let i = 0; i < count; i += 1) {
+    const key = ((values[i] - minimum) * scale) | 0;
+    wideKeys[i] = key;
+    low[key] += 1;
+  }
+  toStarts(low, bins);
+  for (let i = 0; i < count; i += 1) order[low[wideKeys[i]]++] = i;
+}
+
+function rankInTwoPasses(
+  values: ArrayLike<number>,
+  count: number,
+  minimum: number,
+  maximum: number,
+  { low, high, half, wideKeys }: OrderWorkspace,
+  order: Uint32Array,
+): void {
+  low.fill(0, 0, RADIX);
   high.fill(0);
   const scale = (RADIX * RADIX - 1) / (maximum - minimum);
   for (let i = 0; i < count; i += 1) {
@@ -185,21 +252,19 @@ export function rankByCounting(
     low[key & (RADIX - 1)] += 1;
     high[key >>> RADIX_BITS] += 1;
   }
-  toStarts(low);
-  toStarts(high);
+  toStarts(low, RADIX);
+  toStarts(high, RADIX);
   for (let i = 0; i < count; i += 1) half[low[wideKeys[i] & (RADIX - 1)]++] = i;
   for (let i = 0; i < count; i += 1) {
     const index = half[i];
     order[high[wideKeys[index] >>> RADIX_BITS]++] = index;
   }
-  settle(order, count, values);
-  for (let rank = 0; rank < count; rank += 1) ranks[order[rank]] = rank;
 }
 
 /** Counts to the positions at which their bins start. */
-function toStarts(counts: Uint32Array): void {
+function toStarts(counts: Uint32Array, bins: number): void {
   let start = 0;
-  for (let bin = 0; bin < RADIX; bin += 1) {
+  for (let bin = 0; bin < bins; bin += 1) {
     const size = counts[bin];
     counts[bin] = start;
     start += size;

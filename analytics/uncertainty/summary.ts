@@ -1,5 +1,11 @@
 import { normalPdf, normalQuantile } from "../numerics/normal";
-import { countSample, quantileSorted, type OrderWorkspace } from "../numerics/order-statistics";
+import {
+  countBelow,
+  countSample,
+  quantileSorted,
+  type CountedSample,
+  type OrderWorkspace,
+} from "../numerics/order-statistics";
 import { modeOfCurve } from "./mode";
 
 /** P90 is the low case: 90 % of the values are at least this. */
@@ -113,7 +119,7 @@ export function summariseSample(
     maximum,
     standardErrors:
       starts.length > 2
-        ? sectioned(values, quantiles, starts)
+        ? sectioned(values, counted, starts, workspace)
         : ofIndependentTrials(quantiles, standardDeviation, count),
     histogram: { low: minimum, high: maximum, counts: histogram },
     exceedance: { values: quantiles, probabilities: EXCEEDANCE_PROBABILITIES.slice() },
@@ -139,25 +145,28 @@ function ofIndependentTrials(
 
 function sectioned(
   values: ArrayLike<number>,
-  quantiles: readonly number[],
+  counted: CountedSample,
   starts: readonly number[],
+  workspace: OrderWorkspace,
 ): SampleRange {
+  const { quantiles } = counted;
   const replicates = starts.length - 1;
-  const [low, middle, high] = [quantiles[10], quantiles[50], quantiles[90]];
+  const count = starts[replicates];
   const shares = { p90: 0, p50: 0, p10: 0, mean: 0 };
   const squares = { p90: 0, p50: 0, p10: 0, mean: 0 };
   for (let r = 0; r < replicates; r += 1) {
-    const size = starts[r + 1] - starts[r];
-    const part = sharesBelow(values, starts[r], starts[r + 1], low, middle, high);
+    const [from, to] = [starts[r], starts[r + 1]];
+    const below = (percent: number) =>
+      countBelow(values, from, to, quantiles[percent], counted, count, workspace);
+    const part = { p90: below(10), p50: below(50), p10: below(90), mean: sumOf(values, from, to) };
     for (const level of LEVELS) {
-      const value = part[level] / size;
+      const value = part[level] / (to - from);
       // The mean and the sum of squared deviations so far, by Welford's recurrence.
       const change = value - shares[level];
       shares[level] += change / (r + 1);
       squares[level] += change * (value - shares[level]);
     }
   }
-  const count = starts[replicates];
   const error = (level: keyof SampleRange) =>
     Math.sqrt(squares[level] / (replicates - 1) / replicates);
   return {
@@ -170,27 +179,10 @@ function sectioned(
 
 const LEVELS = ["p90", "p50", "p10", "mean"] as const;
 
-/** How many values lie below each of three bounds, and the sum of all. */
-function sharesBelow(
-  values: ArrayLike<number>,
-  from: number,
-  to: number,
-  low: number,
-  middle: number,
-  high: number,
-): SampleRange {
-  let belowLow = 0;
-  let belowMiddle = 0;
-  let belowHigh = 0;
+function sumOf(values: ArrayLike<number>, from: number, to: number): number {
   let sum = 0;
-  for (let i = from; i < to; i += 1) {
-    const value = values[i];
-    sum += value;
-    if (value < low) belowLow += 1;
-    if (value < middle) belowMiddle += 1;
-    if (value < high) belowHigh += 1;
-  }
-  return { p90: belowLow, p50: belowMiddle, p10: belowHigh, mean: sum };
+  for (let i = from; i < to; i += 1) sum += values[i];
+  return sum;
 }
 
 /**
