@@ -60,6 +60,9 @@ export function settleEnd(
   { tolerance, mostTrials }: SettleWish,
 ): SettleEnd | null {
   if (run.state === "waiting" || run.state === "running") return null;
+  // The run was read after its end, its item before it: the next look at both will agree.
+  const isBehind = !item || item.state === "waiting" || item.state === "running";
+  if (run.state === "finished" && isBehind) return null;
   const last = item?.progress?.at(-1);
   if (item?.state === "done" && item.outcome) {
     const trials = trialsText(item.outcome.trials);

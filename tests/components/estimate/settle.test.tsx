@@ -62,6 +62,7 @@ describe("settleEnd", () => {
 
   it("has nothing to say while it goes on", () => {
     expect(settleEnd({ state: "running" }, item, wish)).toBeNull();
+    expect(settleEnd({ state: "finished" }, { ...item, state: "running" }, wish)).toBeNull();
   });
 
   it("gives the trials that settled it", () => {
