@@ -25,24 +25,22 @@ export function DataPanel({ about, text, reading, notesId, onChange }: DetailPan
   return (
     <div className="range-panel data-panel">
       <div className="grid content-start gap-1.5">
-        {onChange ? (
-          <>
-            <label className="field-label" htmlFor={`${id}-cells`}>
-              Values{about.unit && `, ${about.unit}`}: paste a column
-            </label>
-            <textarea
-              id={`${id}-cells`}
-              className="field-area"
-              rows={9}
-              spellCheck={false}
-              value={data.cells}
-              aria-describedby={`${id}-count ${notesId}`}
-              onChange={(event) =>
-                onChange({ ...text, data: { ...data, cells: event.target.value } })
-              }
-            />
-          </>
-        ) : null}
+        <label className="field-label" htmlFor={`${id}-cells`}>
+          Values{about.unit && `, ${about.unit}`}
+          {onChange && ": paste a column"}
+        </label>
+        <textarea
+          id={`${id}-cells`}
+          className="field-area"
+          rows={9}
+          spellCheck={false}
+          readOnly={!onChange}
+          value={data.cells}
+          aria-describedby={`${id}-count ${notesId}`}
+          onChange={(event) =>
+            onChange?.({ ...text, data: { ...data, cells: event.target.value } })
+          }
+        />
         <p id={`${id}-count`} role="status" className="text-13">
           <b>{countWords(values)}</b> {left && <span className="text-warning-ink">{left}</span>}
         </p>

@@ -35,10 +35,10 @@ function wordsOf(inputs: EstimateInputs, part: DraftPart): string {
   if (part === "recoveryPlan") {
     return inputs.recoveryPlan ? planInWords(inputs.recoveryPlan) : "recoveries typed by hand";
   }
-  const { distribution, source } = inputs.uncertain[part];
+  const { distribution, source, reason } = inputs.uncertain[part];
   const { p90, p50, p10 } = compileDistribution(distribution).range;
   const figures = [p90, p50, p10].map((value) => formatFigure(value)).join(" / ");
-  return `${figures}, ${shapeOf(distribution.kind).label}${source ? `. ${source}` : ""}`;
+  return `${figures}, ${shapeOf(distribution.kind).label}${source ? `. ${source}` : ""}${reason ? `. ${reason}` : ""}`;
 }
 
 /** Somebody else saved the same draft first. Both versions stay on screen until each difference has been chosen. */
