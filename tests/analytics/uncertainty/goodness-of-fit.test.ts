@@ -47,6 +47,14 @@ describe("testNormality", () => {
     expect(lilliefors.pValue).not.toBeNull();
   });
 
+  it("stays finite for an outlier beyond the range of the distribution function", () => {
+    const values = [...Array.from({ length: 1999 }, (_, i) => i / 1999), 1e6];
+    const { andersonDarling, lilliefors } = testNormality(values);
+    expect(andersonDarling.statistic).toBeGreaterThan(100);
+    expect(andersonDarling.statistic).toBeLessThan(1e4);
+    expect([andersonDarling.pValue, lilliefors.pValue]).toEqual([0, expect.closeTo(0, 12)]);
+  });
+
   it("counts a fit as contradicted when either test does", () => {
     expect(isContradicted(testNormality(core))).toBe(false);
     expect(isContradicted(testNormality(even))).toBe(true);
