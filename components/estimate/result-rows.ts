@@ -23,6 +23,10 @@ export function resultBasisOf(
 ): ResultBasis {
   const isNet = basis.interest === "net";
   const isRisked = basis.risk === "risked";
+  const unless =
+    basis.risk === "yesNo"
+      ? `, if it comes, of which the chance is ${formatPercent(field.chanceOfCommerciality)}`
+      : ", unrisked";
   const share = formatPercent(field.netRevenueInterest, { decimals: 1 });
   const chance = formatPercent(field.chanceOfCommerciality);
   return {
@@ -31,7 +35,7 @@ export function resultBasisOf(
     factor: (isNet ? field.netRevenueInterest : 1) * (isRisked ? field.chanceOfCommerciality : 1),
     words:
       (isNet ? `Net to the company (${share})` : "Gross") +
-      (isRisked ? `, times the ${chance} chance of commerciality` : ", unrisked"),
+      (isRisked ? `, times the ${chance} chance of commerciality` : unless),
   };
 }
 

@@ -45,7 +45,15 @@ const pages: Partial<Record<Role | "visitor", () => string[]>> = {
     "/methods",
     "/api-guide",
   ],
-  planner: () => ["/fields", "/prices", `/prices/${deckId}`, "/review"],
+  planner: () => [
+    "/fields",
+    "/portfolio/dependence",
+    "/portfolio/dependence?set=new",
+    "/prices",
+    `/prices/${deckId}`,
+    "/review",
+    "/runs",
+  ],
   executive: () => ["/portfolio"],
   administrator: () => ["/people", "/audit", "/profile"],
 };

@@ -5,7 +5,8 @@ import { rankingColumn } from "@/analytics/portfolio/ranking-columns";
 import { errorWords } from "@/app/_client/request";
 import { useCan } from "@/app/_client/use-session";
 import type { Ranking } from "@/app/api/v1/fields/ranking-schema";
-import { capital, countOf, reportingOf } from "@/components/portfolio/reporting";
+import type { Basis } from "@/components/basis/basis";
+import { capital, countOf, reportingOf, riskWords } from "@/components/portfolio/reporting";
 import { Button, LinkButton } from "@/components/ui/button";
 import { formatPercent } from "@/components/ui/format";
 import { Page, PageHead } from "@/components/ui/section";
@@ -51,7 +52,7 @@ export function RankingPage() {
     <Page wide>
       <PageHead
         title={title}
-        lead={data ? leadOf(data) : "Reading the estimates."}
+        lead={data ? leadOf(data, state.basis.risk) : "Reading the estimates."}
         actions={<Actions state={state} />}
       />
       {data ? (
@@ -83,7 +84,10 @@ function Actions({ state }: { state: RankingState }) {
 }
 
 /** What the ranking stands on, and how sure its first place is. */
-function leadOf({ choices, prices, leader, fieldsInAll }: Ranking): string {
+function leadOf(
+  { choices, prices, leader, fieldsInAll, dependence }: Ranking,
+  risk: Basis["risk"],
+): string {
   if (fieldsInAll === 0) return "The book has no fields yet.";
   const basins = capital(countOf(choices.basins.length, "basin"));
   const value = prices
@@ -92,7 +96,10 @@ function leadOf({ choices, prices, leader, fieldsInAll }: Ranking): string {
   const first = leader
     ? ` ${leader.name} has the largest mean and comes first in ${formatPercent(leader.chance)} of trials.`
     : "";
-  return value + first;
+  const totals = ` Totals are trial by trial, ${riskWords[risk]}, with fields moving together by “${dependence.name}”.`;
+  const nothing =
+    risk === "yesNo" ? " Where a field does not come, its trial counts as nothing." : "";
+  return value + first + totals + nothing;
 }
 
 function RankingBody({

@@ -22,12 +22,12 @@ export function DependencePage() {
   const can = useCan();
   const search = useSearchParams();
   const { data: sets, error, refetch } = useDependenceSets();
-  const { data: basins } = useBasins();
+  const { data: allBasins } = useBasins();
   const { data: fields } = useBookFields();
   const totals = useSetTotals(basis, sets ?? []);
   const crumbs = [{ label: "Portfolio", href: withBasis("/portfolio") }, { label: "Dependence" }];
 
-  if (!sets || !basins || !fields) {
+  if (!sets || !allBasins || !fields) {
     return (
       <Page>
         <PageHead title="How fields move together" crumbs={crumbs} />
@@ -50,6 +50,12 @@ export function DependencePage() {
     );
   }
 
+  // A basin without a field or a figure has nothing to say here; it follows the other basins until it has.
+  const basins = allBasins.filter(
+    ({ id }) =>
+      fields.some(({ basinId }) => basinId === id) ||
+      sets.some(({ dependence }) => id in dependence.basinRanks),
+  );
   const wanted = search.get("set");
   const mayEdit = can("dependenceSet.update");
   const isNew = wanted === "new" && can("dependenceSet.create");
@@ -61,7 +67,7 @@ export function DependencePage() {
   return (
     <Page>
       <PageHead
-        title={titleOf(sets, basins)}
+        title={titleOf(sets, fields)}
         crumbs={crumbs}
         lead="Reservoirs that share a source rock, a survey or a plant tend to disappoint together. The more they do, the wider the total and the lower its P90. Means do not change."
         actions={
@@ -102,9 +108,12 @@ export function DependencePage() {
   );
 }
 
-function titleOf(sets: readonly DependenceSetView[], basins: readonly { id: string }[]): string {
+function titleOf(
+  sets: readonly DependenceSetView[],
+  fields: readonly { basinId: string }[],
+): string {
   const standing = sets.find(({ isDefault }) => isDefault);
   if (!standing) return "How fields move together";
-  const ids = basins.map(({ id }) => id);
+  const ids = [...new Set(fields.map(({ basinId }) => basinId))];
   return `Totals stand on “${standing.name}”: rank correlation ${basinRankWords(standing.dependence, ids)} within a basin`;
 }

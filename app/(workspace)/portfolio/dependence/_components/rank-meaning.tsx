@@ -13,7 +13,7 @@ export function RankMeaning() {
       note="Only the order of the trials counts, not the shape of either range, so one figure serves fields of any size."
     >
       <div className="rank-meaning">
-        <div className="grid gap-3 text-13">
+        <div className="grid content-start gap-3 text-13">
           <p>
             Take two reservoirs. With nothing in common, when one comes out above its P50 the other
             does so half the time. At 0.3 it does so three times in five; at 0.7 three times in

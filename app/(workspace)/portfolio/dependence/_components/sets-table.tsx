@@ -110,8 +110,10 @@ export function SetsTable({ sets, basins, totals, chosenId, inUse }: SetsTablePr
                     unit={liquid.unit}
                     scale={scale}
                   />
+                ) : totals.get(set.id) ? (
+                  "Nothing to add up"
                 ) : (
-                  "No total yet"
+                  "Adding up…"
                 )}
               </MarkCell>
             </tr>
