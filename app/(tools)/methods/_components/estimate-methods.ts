@@ -1,5 +1,5 @@
 /** Methods on estimates and on the portfolio. */
-import { exact, measured, stated, unknown, type MethodGroup } from "./method";
+import { exact, measured, unknown, type MethodGroup } from "./method";
 
 export const estimates: MethodGroup = {
   id: "estimates",
@@ -19,10 +19,32 @@ export const estimates: MethodGroup = {
       name: "Sampling",
       gives: "Trials that fill the range of every input.",
       source:
-        "Latin hypercube: M. D. McKay, R. J. Beckman, W. J. Conover, Technometrics 21 (1979) 239–245",
+        "Sobol points with the direction numbers of S. Joe, F. Y. Kuo, SIAM J. Sci. Comput. 30 (2008) 2635–2654, scrambled after J. Matoušek, J. Complexity 14 (1998) 527–556; Latin hypercube: M. D. McKay, R. J. Beckman, W. J. Conover, Technometrics 21 (1979) 239–245",
       range:
-        "10,000 trials unless asked otherwise. Same inputs, seed and engine give the same bytes.",
-      error: stated("Standard errors stand with the results; those shown are on the safe side."),
+        "16,384 Sobol points unless asked otherwise, powers of two only; a Latin hypercube takes any number. Same inputs, seed, method and engine give the same bytes.",
+      error: measured(
+        "Points equal to SciPy's in 48 dimensions. On a typical reservoir 16,384 points know P90 and P10 to 0.3 to 0.5 %, a Latin hypercube to 0.5 to 0.7 %.",
+      ),
+      usedIn: "Every estimate",
+    },
+    {
+      name: "Standard errors",
+      gives: "How far sampling alone may have moved each percentile and the mean.",
+      source:
+        "Sectioning over 16 independent replicates: M. K. Nakayama, ACM Trans. Model. Comput. Simul. 24 (2014) 19",
+      range: "From 800 trials; shorter runs take the formula for independent trials.",
+      error: measured(
+        "Over 200 seeds one error holds the closed form of a product of lognormals in 67 % of runs and 1.96 errors in 93 %, as Student's t with 15 degrees of freedom says; the mean of Sobol points in 90 %.",
+      ),
+      usedIn: "Every estimate, running until settled",
+    },
+    {
+      name: "Mode",
+      gives: "Where a result's trials are densest.",
+      source:
+        "Kernel density of the logarithms, bandwidth of J. E. Chacón, T. Duong, M. P. Wand, Stat. Sinica 21 (2011) 807–840, spread kept after M. C. Jones, Comput. Stat. Data Anal. 11 (1991) 3–15",
+      range: "Of two peaks closer than three bandwidths one is seen.",
+      error: measured("Closed form of lognormals to 1 %; sampling moves it by 2 to 4 %."),
       usedIn: "Every estimate",
     },
     {
