@@ -1,4 +1,3 @@
-import { DomainError } from "../errors";
 import { normalCdf, normalQuantileUnchecked } from "../numerics/normal";
 import { createOrderWorkspace, rankByCounting } from "../numerics/order-statistics";
 import { planInputNames } from "../recovery/recovery-plan-schema";
@@ -50,7 +49,7 @@ interface Part {
 
 /**
  * @param count  trials of a column
- * @throws {DomainError} as `prepareInputs`; `evaluate` throws where a trial has no possible result
+ * @throws {DomainError} as `prepareInputs`. A trial without a possible result evaluates to no finite number
  */
 export function estimateModel(
   inputs: EstimateInputs,
@@ -128,6 +127,7 @@ function createQuantiles(capacity: number): FillQuantiles {
   return (distribution, probabilities, trials, out) => {
     const chosen = trials ? Float64Array.from(trials, (t) => probabilities[t]) : probabilities;
     const count = chosen.length;
+    if (count === 0) return;
     rankByCounting(chosen, count, counting, ranks, order);
     for (let i = 0; i < count; i += 1) sorted[i] = chosen[order[i]];
     distribution.fillQuantiles(sorted, count, values);
@@ -223,22 +223,7 @@ function createEvaluation(
         inputs: record(planInputNames, valuesOf),
         columns: recoveryColumns,
       };
-    const { impossible, recovery } = evaluateTrials(
-      fluid,
-      record(inputNames, valuesOf),
-      plan,
-      count,
-      scratch,
-      outputs,
-    );
-    const refused = Object.values(recovery?.refused ?? {}).reduce((sum, n) => sum + n, impossible);
-    if (refused > 0) {
-      throw new DomainError(
-        `${refused} of ${count} combinations of the inputs have no possible result. Narrow the ranges of pressure, ` +
-          "temperature, condensate yield or of what the recovery plan assumes.",
-        { input: "uncertain", value: refused, trials: count },
-      );
-    }
+    evaluateTrials(fluid, record(inputNames, valuesOf), plan, count, scratch, outputs);
     return outputs[result];
   };
 }

@@ -31,9 +31,9 @@ export interface SobolStudy {
 }
 
 export interface SobolIndices {
-  /** trials of each of the two samples, all replicates together */
+  /** trials of each of the two samples that were used, all replicates together */
   baseRuns: number;
-  /** trials that the model was evaluated on: baseRuns x (factors + 2) */
+  /** trials that the model was evaluated on: those of a sample x (factors + 2) */
   evaluations: number;
   /** in the order of the factors */
   indices: { first: Estimated; total: Estimated }[];
@@ -51,27 +51,31 @@ export interface SobolIndices {
  *
  * Standard errors come from leaving out one replicate at a time (jackknife).
  *
- * @throws {DomainError} when the model has no finite value somewhere
+ * A trial without a finite value in one of the samples is left out of all of them: far out in the tails there may be
+ * combinations that the inputs' own trials never met.
+ *
+ * @throws {DomainError} when more than one trial in a thousand has to be left out
  * @see A. Saltelli et al., Variance based sensitivity analysis of model output, Comput. Phys. Commun. 181 (2010) 259-270,
  *      table 2 (b) and (f); M. J. W. Jansen, Analysis of variance designs for model output, Comput. Phys. Commun. 117
  *      (1999) 35-43; B. Efron, The Jackknife, the Bootstrap and Other Resampling Plans (1982), chapter 3
  */
 export function sobolIndices(study: SobolStudy): SobolIndices {
-  const { factors, runsPerReplicate: runs, replicates } = study;
+  const { factors, runsPerReplicate, replicates } = study;
   const results = evaluateReplicates(study);
-  const centre =
-    results.reduce((sum, { a, b }) => sum + sumOf(a) + sumOf(b), 0) / (2 * runs * replicates);
+  const baseRuns = results.reduce((sum, { a }) => sum + a.length, 0);
+  refuseMany(runsPerReplicate * replicates - baseRuns, runsPerReplicate * replicates);
+  const centre = results.reduce((sum, { a, b }) => sum + sumOf(a) + sumOf(b), 0) / (2 * baseRuns);
   const sums = results.map((result) => sumsOf(result, centre));
   const whole = addUp(sums);
-  const shares = sharesOf(whole, runs * replicates);
-  const without = sums.map((left) => sharesOf(subtract(whole, left), runs * (replicates - 1)));
+  const shares = sharesOf(whole);
+  const without = sums.map((left) => sharesOf(subtract(whole, left)));
   const estimated = (value: number, of: (shares: Shares) => number): Estimated => ({
     value,
     standardError: jackknifeError(without.map(of)),
   });
   return {
-    baseRuns: runs * replicates,
-    evaluations: runs * replicates * (factors.length + 2),
+    baseRuns,
+    evaluations: runsPerReplicate * replicates * (factors.length + 2),
     indices: factors.map((_, i) => ({
       first: estimated(shares.first[i], ({ first }) => first[i]),
       total: estimated(shares.total[i], ({ total }) => total[i]),
@@ -91,29 +95,45 @@ function evaluateReplicates(study: SobolStudy): ReplicateResult[] {
   const fresh = () => Array.from({ length: columns }, () => new Float64Array(runs));
   const a = fresh();
   const b = fresh();
-  const evaluate = (sample: readonly Float64Array[]) => {
-    const values = model(sample, runs).slice(0, runs);
-    if (!values.every(Number.isFinite)) {
-      throw new DomainError("Some combinations of the inputs have no possible result.", {
-        input: "uncertain",
-      });
-    }
-    return values;
-  };
+  const evaluate = (sample: readonly Float64Array[]) => model(sample, runs).slice(0, runs);
   return Array.from({ length: replicates }, (_, replicate) => {
     study.fillSamples(replicate, a, b);
-    return {
-      a: evaluate(a),
-      b: evaluate(b),
-      exchanged: factors.map((factor) =>
+    const values = [
+      evaluate(a),
+      evaluate(b),
+      ...factors.map((factor) =>
         evaluate(a.map((column, i) => (factor.includes(i) ? b[i] : column))),
       ),
-    };
+    ];
+    const [inA, inB, ...exchanged] = withoutImpossible(values);
+    return { a: inA, b: inB, exchanged };
   });
+}
+
+/** The trials that have a finite value in each of the samples. */
+function withoutImpossible(samples: Float64Array[]): Float64Array[] {
+  if (samples.every((values) => values.every(Number.isFinite))) return samples;
+  const isPossible = samples[0].map((_, t) =>
+    samples.every((values) => Number.isFinite(values[t])) ? 1 : 0,
+  );
+  return samples.map((values) => values.filter((_, t) => isPossible[t] === 1));
+}
+
+/** Above this share what is left is another question than the one that was asked. */
+const MOST_LEFT_OUT = 1e-3;
+
+function refuseMany(leftOut: number, runs: number): void {
+  if (leftOut <= MOST_LEFT_OUT * runs) return;
+  throw new DomainError(
+    `${leftOut} of ${runs} combinations of the inputs have no possible result. Narrow the ranges of pressure, ` +
+      "temperature, condensate yield or of what the recovery plan assumes.",
+    { input: "uncertain", value: leftOut, trials: runs },
+  );
 }
 
 /** Sums over trials, of centred values. */
 interface Sums {
+  runs: number;
   /** of the values of A and B, and of their squares */
   linear: number;
   squares: number;
@@ -124,6 +144,7 @@ interface Sums {
 
 function sumsOf({ a, b, exchanged }: ReplicateResult, centre: number): Sums {
   const sums: Sums = {
+    runs: a.length,
     linear: 0,
     squares: 0,
     products: [],
@@ -154,6 +175,7 @@ function sumsOf({ a, b, exchanged }: ReplicateResult, centre: number): Sums {
 function combine(x: Sums, y: Sums, sign: 1 | -1): Sums {
   const each = (left: number[], right: number[]) => left.map((value, i) => value + sign * right[i]);
   return {
+    runs: x.runs + sign * y.runs,
     linear: x.linear + sign * y.linear,
     squares: x.squares + sign * y.squares,
     products: each(x.products, y.products),
@@ -170,7 +192,8 @@ interface Shares {
   total: number[];
 }
 
-function sharesOf(sums: Sums, runs: number): Shares {
+function sharesOf(sums: Sums): Shares {
+  const { runs } = sums;
   const mean = sums.linear / (2 * runs);
   const variance = (sums.squares - 2 * runs * mean * mean) / (2 * runs - 1);
   const share = (value: number) => (variance > 0 ? value / variance : 0);

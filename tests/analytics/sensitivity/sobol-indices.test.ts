@@ -104,7 +104,14 @@ describe("sobolIndices", () => {
     ]);
   });
 
-  it("refuses a model without a value somewhere", () => {
+  it("leaves out rare trials without a value, in every sample", () => {
+    const { indices, baseRuns } = study(2, ([u, v]) => (u > 0.9999 ? NaN : u + v));
+    expect(baseRuns).toBeLessThan(16_384);
+    expect(baseRuns).toBeGreaterThan(16_370);
+    expectNear(indices[0].first, 0.5, 0.01);
+  });
+
+  it("refuses a model without a value in many places", () => {
     expect(() => study(1, ([u]) => Math.log(u - 0.5))).toThrow(DomainError);
   });
 });
