@@ -43,7 +43,7 @@ const HALF_WIDTH_95 = 2.13145;
  *
  * To stop because an error looks small favours errors that look smaller than they are, so the chance that all six
  * percentiles lie within the tolerance is below 95 %; doubling, which looks at few errors, keeps that small. One run at a
- * time is held in memory, about 150 bytes a trial.
+ * time is held in memory, about 200 bytes a trial.
  *
  * @see A. M. Law, Simulation Modeling and Analysis, 5th ed. (2015), section 9.4.1 (relative precision, doubling); Y. S.
  *      Chow, H. Robbins, On the asymptotic theory of fixed-width sequential confidence intervals for the mean, Ann.

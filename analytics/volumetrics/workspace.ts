@@ -20,7 +20,7 @@ import type { TrialColumns, TrialScratch } from "./trials";
  * without allocating per trial or per reservoir. Not to be shared between runs that overlap in time.
  *
  * Trials are drawn and evaluated replicate by replicate. What only a replicate needs is as long as a replicate, which
- * keeps it in a processor's cache and a run of a million trials at about 150 MB; what all trials need is as long as
+ * keeps it in a processor's cache and a run of a million trials at about 200 MB; what all trials need is as long as
  * the run. About 2 MB for 10,000 trials.
  */
 export interface SimulationWorkspace extends PointsWorkspace, TrialScratch {
