@@ -19,12 +19,16 @@ export interface RankedTrials {
   comes: Uint8Array | null;
 }
 
+/** Room for the place of a member in a key, above which its value stands: 2^32 of one times 2^20 of the other is exact. */
+const PLACES = 2 ** 20;
+
 /**
  * Ranks every member in every trial, and says between which ranks each lies in the middle 80 % of trials.
  *
- * Equals share the better places in the order of their ids, so that the ranks of a trial are always 1 to n.
+ * Equals in single precision share the better places in the order of their ids, so that the ranks of a trial are always
+ * 1 to n.
  *
- * @param members  each with as many trials as the first
+ * @param members  values of 0 or more; each with as many trials as the first
  * @example rankTrials([of("a", [3, 1]), of("b", [2, 2])]).a // => { low: 1, high: 2, chanceFirst: 0.5 }
  */
 export function rankTrials(members: readonly RankedTrials[]): Record<string, RankSpread> {
@@ -33,26 +37,22 @@ export function rankTrials(members: readonly RankedTrials[]): Record<string, Ran
   const trials = sorted[0]?.values.length ?? 0;
   /** count x count, row = member, column = rank - 1 */
   const tally = new Uint32Array(count * count);
-  const usual = usualOrder(sorted, trials);
-  const order = new Uint32Array(count);
-  const values = new Float64Array(count);
+  // The bits of floats of 0 or more stand in the order of their values, so value and member make one number, and
+  // numbers sort without a comparator.
+  const keys = new Float64Array(count);
+  const value = new Float32Array(1);
+  const bits = new Uint32Array(value.buffer);
   for (let trial = 0; trial < trials; trial += 1) {
     for (let index = 0; index < count; index += 1) {
-      const member = sorted[index];
-      const value = member.factor * member.values[trial];
-      values[index] = member.comes === null ? value : value * member.comes[trial];
+      const { values, factor, comes } = sorted[index];
+      value[0] = comes !== null && comes[trial] === 0 ? 0 : factor * values[trial];
+      keys[index] = bits[0] * PLACES + (count - 1 - index);
     }
-    // The usual order is nearly that of any trial, which an insertion sort is quick at.
-    order.set(usual);
-    for (let place = 1; place < count; place += 1) {
-      const index = order[place];
-      let gap = place;
-      for (; gap > 0 && isBefore(values, index, order[gap - 1]); gap -= 1) {
-        order[gap] = order[gap - 1];
-      }
-      order[gap] = index;
+    keys.sort();
+    for (let place = 0; place < count; place += 1) {
+      const index = count - 1 - (keys[count - 1 - place] % PLACES);
+      tally[index * count + place] += 1;
     }
-    for (let place = 0; place < count; place += 1) tally[order[place] * count + place] += 1;
   }
   return Object.fromEntries(
     sorted.map(({ id }, index) => {
@@ -68,19 +68,6 @@ export function rankTrials(members: readonly RankedTrials[]): Record<string, Ran
     }),
   );
 }
-
-/** Members from the largest mean to the smallest. */
-function usualOrder(members: readonly RankedTrials[], trials: number): Uint32Array {
-  const means = Float64Array.from(members, ({ values, factor }) => {
-    let sum = 0;
-    for (let trial = 0; trial < trials; trial += 1) sum += values[trial];
-    return factor * sum;
-  });
-  return Uint32Array.from(members.keys()).sort((a, b) => means[b] - means[a] || a - b);
-}
-
-const isBefore = (values: Float64Array, member: number, other: number) =>
-  values[member] > values[other] || (values[member] === values[other] && member < other);
 
 /** The first rank at which so many trials are reached. */
 function rankReachedBy(row: Uint32Array, wanted: number): number {
