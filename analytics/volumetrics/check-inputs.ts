@@ -2,7 +2,8 @@ import { acidGasWarnings } from "../fluid/acid-gas";
 import { wellstreamGravityAtYield, yieldConstants } from "../fluid/wellstream";
 import { pseudocritical } from "../gas/pseudocritical";
 import { zFactor } from "../gas/z-factor";
-import type { CompiledPlan } from "../recovery/compile-plan";
+import { planPaths, type CompiledPlan } from "../recovery/compile-plan";
+import { planRanges } from "../recovery/plan-ranges";
 import { planWarnings, type PlanSurroundings } from "../recovery/plan-warnings";
 import type { CompiledDistribution } from "../uncertainty/distribution";
 import { degreesRankine } from "../units/conversions";
@@ -29,6 +30,7 @@ export function warningsOf(inputs: EstimateInputs, prepared: PreparedInputs): Wa
   const { distributions, inputNames, wellstream, plan } = prepared;
   return [
     ...inputNames.flatMap((name) => inputWarnings(name, distributions[name])),
+    ...planFitWarnings(prepared),
     ...correlationWarnings(inputs, prepared),
     ...caseSetWarnings(prepared),
     ...depthWarnings(inputs, prepared),
@@ -85,7 +87,26 @@ function inputWarnings(name: InputName, compiled: CompiledDistribution): Warning
         "Is it really known that well?",
     );
   }
-  return [...warnings, ...fitWarnings(name, compiled)];
+  return [
+    ...warnings,
+    ...fitWarnings({ input, label, unit, isAverage: isAverage(name) }, compiled),
+  ];
+}
+
+/** Properties of rock, which an estimate needs the average of. */
+function isAverage(name: InputName): boolean {
+  return name === "netThicknessFt" || name === "porosity" || name === "waterSaturation";
+}
+
+function planFitWarnings({ plan }: PreparedInputs): Warning[] {
+  if (!plan) return [];
+  const ranges = planRanges(plan.plan);
+  return plan.inputNames.flatMap((name) => {
+    const compiled = plan.distributions[name];
+    const { label, unit } = ranges[name];
+    const input = `recoveryPlan.${planPaths[name]}`;
+    return compiled ? fitWarnings({ input, label, unit, isAverage: false }, compiled) : [];
+  });
 }
 
 function correlationWarnings(

@@ -2,8 +2,17 @@ import type { CompiledDistribution } from "../uncertainty/distribution";
 import { describeFit } from "../uncertainty/describe-fit";
 import type { DataFitReport, PercentilesFitReport } from "../uncertainty/fit-schema";
 import type { Warning } from "../warnings";
-import type { InputName } from "./inputs-schema";
-import { usualRanges } from "./usual-ranges";
+
+/** The quantity that a range is of. */
+export interface Quantity {
+  /** where it stands in the estimate's inputs */
+  readonly input: string;
+  /** as in "the porosity" */
+  readonly label: string;
+  readonly unit: string;
+  /** an estimate needs its average over the reservoir, not its value at a place */
+  readonly isAverage: boolean;
+}
 
 /** With fewer values a fitted range rests on chance. Common practice, no source. */
 const FEW_VALUES = 10;
@@ -11,8 +20,6 @@ const FEW_VALUES = 10;
 const MISSED_END = 0.05;
 /** With more values of a property of rock, each is a plug or a log reading, not a well. Common practice, no source. */
 const MANY_SAMPLES = 30;
-/** Properties that an estimate needs the average of, over the reservoir. */
-const AVERAGED: readonly InputName[] = ["netThicknessFt", "porosity", "waterSaturation"];
 /** A fit that misses a stated percentile by more of the stated spread is not what was stated. */
 const MOST_RESIDUAL = 0.05;
 
@@ -23,10 +30,10 @@ const HEAVY_TRUNCATION = 0.05;
  * What a reviewer would ask about how the figures of a range became its distribution: too few values, a shape that they
  * contradict, a percentile that is missed, bounds that cut off much. Scenarios are looked at case by case.
  */
-export function fitWarnings(name: InputName, compiled: CompiledDistribution): Warning[] {
+export function fitWarnings(quantity: Quantity, compiled: CompiledDistribution): Warning[] {
   if (compiled.cases) {
     return compiled.cases.flatMap(({ name: ofCase, compiled: one }) =>
-      fitWarnings(name, one).map((warning) => ({
+      fitWarnings(quantity, one).map((warning) => ({
         ...warning,
         message: `In the case “${ofCase}”: ${warning.message}`,
       })),
@@ -34,22 +41,24 @@ export function fitWarnings(name: InputName, compiled: CompiledDistribution): Wa
   }
   const fit = describeFit(compiled.definition);
   const found = [
-    ...(fit?.kind === "data" ? ofData(name, fit) : []),
-    ...(fit?.kind === "percentiles" ? ofPercentiles(name, fit, compiled.lostMass) : []),
-    ...(compiled.lostMass > HEAVY_TRUNCATION ? [truncated(name, compiled.lostMass)] : []),
+    ...(fit?.kind === "data" ? ofData(quantity, fit) : []),
+    ...(fit?.kind === "percentiles" ? ofPercentiles(quantity, fit, compiled.lostMass) : []),
+    ...(compiled.lostMass > HEAVY_TRUNCATION ? [truncated(quantity, compiled.lostMass)] : []),
   ];
   return found.map(([code, message]) => ({
     code,
     severity: "warning",
-    input: `uncertain.${name}`,
+    input: quantity.input,
     message,
   }));
 }
 
 type Found = readonly [code: string, message: string];
 
-function ofData(name: InputName, { shape, sampleSize, tests }: DataFitReport): Found[] {
-  const { label } = usualRanges[name];
+function ofData(
+  { label, isAverage }: Quantity,
+  { shape, sampleSize, tests }: DataFitReport,
+): Found[] {
   const found: Found[] = [];
   const missed = 0.9 ** sampleSize;
   if (sampleSize < FEW_VALUES) {
@@ -68,7 +77,7 @@ function ofData(name: InputName, { shape, sampleSize, tests }: DataFitReport): F
     const test = tests[shape];
     if (test?.contradicted) found.push(["poor_fit", `${upper(label)}: ${test.meaning}`]);
   }
-  if (AVERAGED.includes(name) && sampleSize > MANY_SAMPLES) {
+  if (isAverage && sampleSize > MANY_SAMPLES) {
     found.push([
       "spread_of_samples",
       `The ${label} has the spread of ${sampleSize} single values, but an estimate needs how well its average over the ` +
@@ -79,12 +88,15 @@ function ofData(name: InputName, { shape, sampleSize, tests }: DataFitReport): F
 }
 
 /** Of a fit that bounds cut, the lost share says more than the residuals do. */
-function ofPercentiles(name: InputName, fit: PercentilesFitReport, lostMass: number): Found[] {
+function ofPercentiles(
+  { label, unit }: Quantity,
+  fit: PercentilesFitReport,
+  lostMass: number,
+): Found[] {
   if (lostMass > HEAVY_TRUNCATION || fit.largestResidual <= MOST_RESIDUAL) return [];
   const worst = fit.points.reduce((a, b) =>
     Math.abs(b.given - b.asked) > Math.abs(a.given - a.asked) ? b : a,
   );
-  const { label, unit } = usualRanges[name];
   return [
     [
       "poor_fit",
@@ -94,10 +106,10 @@ function ofPercentiles(name: InputName, fit: PercentilesFitReport, lostMass: num
   ];
 }
 
-function truncated(name: InputName, lostMass: number): Found {
+function truncated({ label }: Quantity, lostMass: number): Found {
   return [
     "heavy_truncation",
-    `The bounds of the ${usualRanges[name].label} leave out ${Math.round(100 * lostMass)} % of the distribution as ` +
+    `The bounds of the ${label} leave out ${Math.round(100 * lostMass)} % of the distribution as ` +
       "described, which moves its percentiles. Describe the range between the bounds instead.",
   ];
 }

@@ -3,6 +3,7 @@ import { DomainError } from "@/analytics/errors";
 import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
 import { checkInputs } from "@/analytics/volumetrics/check-inputs";
 import { prepareInputs } from "@/analytics/volumetrics/prepare-inputs";
+import { buildPlan } from "../recovery/published-curve";
 import { buildInputs } from "./estimate-inputs";
 
 type Case = [name: string, weight: number, p90: number, p10: number];
@@ -182,6 +183,20 @@ describe("checkInputs of ranges that were fitted", () => {
     ],
   ])("asks about %s", (_, distributions, expected) => {
     expect(codes(distributions)).toContain(expected);
+  });
+
+  it("asks the same of a recovery plan's inputs", () => {
+    const values = [900, 950, 1_000, 1_100, 1_200];
+    const plan = buildPlan({
+      abandonmentPressurePsia: {
+        distribution: { kind: "data", shape: "empirical", values },
+        source: "",
+      },
+    });
+    const found = checkInputs(buildInputs({}, { recoveryPlan: plan, correlations: [] }));
+    expect(found.map(({ code, input }) => `${input} ${code}`)).toContain(
+      "recoveryPlan.abandonmentPressurePsia few_values",
+    );
   });
 
   it("names the case that a question is about", () => {
