@@ -93,7 +93,12 @@ export function CaseRow({
         const parameter = parametersOfShape(range).find((candidate) => candidate.slot === slot);
         const derived = isDetailed(range.kind) ? compiled?.range[percentileOf[slot]] : undefined;
         return (
-          <td key={slot} className="figure-cell" data-label={parameter?.label ?? columnName[slot]}>
+          <td
+            key={slot}
+            className="figure-cell"
+            data-unused={(!parameter && derived === undefined) || undefined}
+            data-label={parameter?.label ?? columnName[slot]}
+          >
             {parameter ? (
               <PanelFigure
                 label={`${which}, ${parameter.label}`}
@@ -124,7 +129,7 @@ export function CaseRow({
             size="small"
             kind="quiet"
             disabled={!onRemove}
-            aria-label={`Take case ${text.name.trim() || index + 1} of ${about.label} out`}
+            aria-label={`Take out case ${text.name.trim() || index + 1} of ${about.label}`}
             onClick={onRemove}
           >
             Take out

@@ -104,7 +104,7 @@ export function PercentilesPanel({ about, text, reading, notesId, onChange }: De
                       size="small"
                       kind="quiet"
                       disabled={points.length <= 2}
-                      aria-label={`Take percentile ${index + 1} of ${about.label} out`}
+                      aria-label={`Take out percentile ${index + 1} of ${about.label}`}
                       onClick={() =>
                         change({
                           family: needsThree(typed.family) ? "lognormal" : typed.family,

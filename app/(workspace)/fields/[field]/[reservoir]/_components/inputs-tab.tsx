@@ -117,11 +117,13 @@ function Exceedance() {
     return (
       <Section title="How much, and how sure">
         <p className="text-ink-soft">
-          {reading && reading.impossible.length > 0
-            ? "The curve appears when no input is impossible."
-            : reading && reading.problem !== null
-              ? "The curve appears when the inputs can all be true together."
-              : "The curve appears when every input is filled in."}
+          {reading?.estimate
+            ? "The curve is being worked out."
+            : reading && reading.impossible.length > 0
+              ? "The curve appears when no input is impossible."
+              : reading && reading.problem !== null
+                ? "The curve appears when the inputs can all be true together."
+                : "The curve appears when every input is filled in."}
         </p>
       </Section>
     );
