@@ -144,6 +144,25 @@ describe("POST /api/v1/estimates/:id/run", () => {
 });
 
 describe("PATCH /api/v1/estimates/:id", () => {
+  it("changes the method of sampling where the number of trials allows it, and takes the results away", async () => {
+    const engineer = await as("engineer");
+    const done = await run(await buildDraft());
+    expect(done.sampling).toBe("latinHypercube");
+    const sobol = { sampling: "sobol" };
+    const refused = await engineer.patch<Problem>(pathOf(done), sobol, ifMatch(done));
+    expect(refused.status).toBe(422);
+    expect(refused.body.errors?.[0]).toMatchObject({
+      pointer: "#/trials",
+      detail: expect.stringContaining("powers of two") as string,
+    });
+    const changed = made(
+      await engineer.patch<EstimateView>(pathOf(done), { ...sobol, trials: 2048 }, ifMatch(done)),
+    );
+    expect(changed).toMatchObject({ sampling: "sobol", trials: 2048, summary: null });
+    const again = await run(changed);
+    expect(again.summary).toMatchObject({ sampling: "sobol", trials: 2048, replicates: 16 });
+  });
+
   it("takes the results away when an input changes, and keeps them when only the note does", async () => {
     const engineer = await as("engineer");
     const done = await run(await buildDraft());
@@ -362,6 +381,13 @@ describe("the database", () => {
       queryRows("update estimates set state = 'draft' where id = $1", [id]),
     ).rejects.toThrow(immutable);
     await expect(queryRows("delete from estimates where id = $1", [id])).rejects.toThrow(immutable);
+    await expect(
+      queryRows("update estimates set sampling = 'sobol' where id = $1", [id]),
+    ).rejects.toThrow(immutable);
+    const submitted = await buildSubmitted();
+    await expect(
+      queryRows("update estimates set sampling = 'sobol' where id = $1", [submitted.id]),
+    ).rejects.toThrow(/lies with a reviewer/);
     await expect(
       queryRows("update estimate_trials set trials = trials where estimate_id = $1", [id]),
     ).rejects.toThrow(immutable);
