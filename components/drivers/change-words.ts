@@ -13,13 +13,13 @@ const singleLabel = (change: SingleChange): string => {
     case "input":
       return inputLabel(change.input);
     case "correlations":
-      return "Rank correlations";
+      return "Rank correlation";
     case "fluid":
       return "Separator test";
     case "recoveryPlan":
       return "Recovery plan";
     case "sampling":
-      return "Seed and trials";
+      return "Sampling";
   }
 };
 
@@ -29,6 +29,10 @@ export function changeLabel(change: Change): string {
   const [first, ...others] = change.changes.map(singleLabel);
   return `${listWords([first, ...others.map(lowerFirst)])} together`;
 }
+
+/** "explains", or "explain" for differences that are several. */
+const verbFor = (label: string, verb: string) =>
+  / (together|others)$/.test(label) ? verb : `${verb}s`;
 
 export interface ExplainedStep {
   label: string;
@@ -59,7 +63,7 @@ export function explainedSteps({ changes }: ChangeExplanation): ExplainedStep[] 
 }
 
 /** A move smaller than this share of where it began is no move. */
-const NO_MOVE = 0.002;
+const NO_MOVE = 0.005;
 
 /** "Net thickness explains 6.2 of the 7.1 MMSTB by which P50 rises" */
 export function changeExplained(
@@ -74,17 +78,17 @@ export function changeExplained(
   if (Math.abs(move) < NO_MOVE * Math.abs(explanation.from)) {
     return Math.abs(first.effect) < NO_MOVE * Math.abs(explanation.from)
       ? `P50 stands: no difference moves it`
-      : `P50 stands: ${lowerFirst(first.label)} moves it by ${figure(first.effect)} ${unit}, and the rest takes it back`;
+      : `P50 stands: ${lowerFirst(first.label)} ${verbFor(first.label, "move")} it by ${figure(first.effect)} ${unit}, and the rest takes it back`;
   }
   const verb = move > 0 ? "rises" : "falls";
   const sameWay = first.effect * move > 0;
   if (others.length === 0) {
-    return `${first.label} explains all of the ${figure(move)} ${unit} by which P50 ${verb}`;
+    return `${first.label} ${verbFor(first.label, "explain")} all of the ${figure(move)} ${unit} by which P50 ${verb}`;
   }
   if (sameWay && Math.abs(first.effect) <= Math.abs(move)) {
-    return `${first.label} explains ${figure(first.effect)} of the ${figure(move)} ${unit} by which P50 ${verb}`;
+    return `${first.label} ${verbFor(first.label, "explain")} ${figure(first.effect)} of the ${figure(move)} ${unit} by which P50 ${verb}`;
   }
-  const way = first.effect > 0 ? "raises" : "lowers";
+  const way = verbFor(first.label, first.effect > 0 ? "raise" : "lower");
   return sameWay
     ? `${first.label} ${way} P50 by ${figure(first.effect)} ${unit}; the other differences take back ${figure(first.effect - move)}`
     : `${first.label} ${way} P50 by ${figure(first.effect)} ${unit}, and yet it ${verb} by ${figure(move)}`;

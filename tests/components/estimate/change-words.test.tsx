@@ -52,6 +52,14 @@ describe("changeExplained", () => {
     expect(with2(4e6, -4e6)).toMatch(/^P50 stands: net thickness moves it by 4\.00 MMSTB/);
   });
 
+  it("speaks of several differences in the plural", () => {
+    const both = { kind: "together" as const, changes: [input("areaAcres"), input("porosity")] };
+    const changes = [{ change: both, effect: 7e6, standardError: null }];
+    expect(changeExplained({ ...explanation, changes }, 1e-6, "MMSTB")).toBe(
+      "Area and porosity together explain all of the 7.00 MMSTB by which P50 rises",
+    );
+  });
+
   it("says nothing of a move where nothing differs", () => {
     expect(changeExplained({ ...explanation, to: 30e6, changes: [] }, 1e-6, "MMSTB")).toBe(
       "Nothing differs, so P50 stands",
@@ -78,7 +86,7 @@ describe("changeLabel", () => {
     expect(
       changeLabel({ kind: "together", changes: [input("areaAcres"), input("netThicknessFt")] }),
     ).toBe("Area and net thickness together");
-    expect(changeLabel({ kind: "sampling" })).toBe("Seed and trials");
+    expect(changeLabel({ kind: "sampling" })).toBe("Sampling");
   });
 });
 
