@@ -3,6 +3,7 @@
 import type { PlacedField } from "@/analytics/portfolio/factor-model";
 import type { BasinView } from "@/app/api/v1/basins/schema";
 import { Button } from "@/components/ui/button";
+import { Select } from "@/components/ui/choice";
 import { NumberField, TextArea, TextField } from "@/components/ui/field";
 import { FactorFields } from "./factor-fields";
 import { meaningWords } from "./rank-words";
@@ -32,6 +33,10 @@ export function SetFields({ text, faults, basins, fields, onChange, onAddFactor 
         place === index ? { ...factor, ...change } : factor,
       ),
     });
+  const own = basins.filter(({ id }) => id in text.basinRanks);
+  const others = basins.filter(({ id }) => !(id in text.basinRanks));
+  const changeBasin = (id: string, typed: string) =>
+    onChange({ basinRanks: { ...text.basinRanks, [id]: typed } });
   const factorFaults = (index: number): Record<string, string> => {
     const prefix = `sharedFactors.${index}.`;
     return Object.fromEntries(
@@ -68,21 +73,19 @@ export function SetFields({ text, faults, basins, fields, onChange, onAddFactor 
           error={faults.portfolioRank}
           onChange={(event) => onChange({ portfolioRank: event.target.value })}
         />
-        {basins.map(({ id, name }) => (
+        {own.map(({ id, name }) => (
           <NumberField
             key={id}
             label={`Both in ${name}`}
             placeholder={text.otherBasinsRank}
-            value={text.basinRanks[id] ?? ""}
+            value={text.basinRanks[id]}
             hint={
-              (text.basinRanks[id] ?? "").trim() === ""
+              text.basinRanks[id].trim() === ""
                 ? "Empty: as other basins"
                 : hintOf(text.basinRanks[id])
             }
             error={faults[`basinRanks.${id}`]}
-            onChange={(event) =>
-              onChange({ basinRanks: { ...text.basinRanks, [id]: event.target.value } })
-            }
+            onChange={(event) => changeBasin(id, event.target.value)}
           />
         ))}
         <NumberField
@@ -92,6 +95,16 @@ export function SetFields({ text, faults, basins, fields, onChange, onAddFactor 
           error={faults.otherBasinsRank}
           onChange={(event) => onChange({ otherBasinsRank: event.target.value })}
         />
+        {others.length > 0 && (
+          <Select
+            label="A figure of its own"
+            placeholder="Choose a basin"
+            value={null}
+            options={others.map(({ id, name }) => ({ value: id, label: name }))}
+            hint={`${others.length} ${others.length === 1 ? "basin follows" : "basins follow"} the others`}
+            onChange={(id) => changeBasin(id, text.otherBasinsRank)}
+          />
+        )}
       </fieldset>
       <div className="set-factors">
         <h3>

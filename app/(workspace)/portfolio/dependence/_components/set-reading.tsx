@@ -17,12 +17,11 @@ export function SetReadingView({ set, basins, fields }: SetReadingViewProps) {
   const { portfolioRank, basinRanks, otherBasinsRank, sharedFactors } = set.dependence;
   const names = new Map(fields.map(({ id, name }) => [id, name]));
   const rows = [
-    { what: "Any two reservoirs of the portfolio", why: "", rank: portfolioRank },
-    ...basins.map(({ id, name }) => ({
-      what: `Two reservoirs of ${name}`,
-      why: id in basinRanks ? "" : "as other basins",
-      rank: basinRanks[id] ?? otherBasinsRank,
-    })),
+    { what: "Any two reservoirs of the portfolio", rank: portfolioRank },
+    ...basins
+      .filter(({ id }) => id in basinRanks)
+      .map(({ id, name }) => ({ what: `Two reservoirs of ${name}`, rank: basinRanks[id] })),
+    { what: "Two reservoirs of one other basin", rank: otherBasinsRank },
   ];
   return (
     <Section title={`What “${set.name}” says`} note={set.note}>
@@ -42,10 +41,10 @@ export function SetReadingView({ set, basins, fields }: SetReadingViewProps) {
           </tr>
         </thead>
         <tbody>
-          {rows.map(({ what, why, rank }) => (
+          {rows.map(({ what, rank }) => (
             <tr key={what}>
               <th scope="row" className="wrap font-normal">
-                {what} {why && <span className="text-ink-soft">({why})</span>}
+                {what}
               </th>
               <td className="right">{rankWords(rank)}</td>
               <td className="wrap soft">{meaningWords(rank)}</td>
