@@ -3,7 +3,7 @@ import type { Problem } from "@/app/_server/problem";
 import type { DependenceSetView } from "@/app/api/v1/dependence-sets/schema";
 import type { Ranking, Together } from "@/app/api/v1/fields/ranking-schema";
 import type { Statement } from "@/app/api/v1/portfolio/schema";
-import { as, buildBasin, buildField, ifMatch, made, uniqueName } from "../factories";
+import { as, buildApproved, buildBasin, buildField, ifMatch, made, uniqueName } from "../factories";
 import { visitor } from "../support/api";
 import { queryRows } from "../support/database";
 
@@ -270,5 +270,23 @@ describe("totals drawn yes or no", () => {
     );
     expect(total!.chanceOfNothing).toBeCloseTo(1 - unsure.chanceOfCommerciality, 9);
     expect(unsure.ranges!.condensateRecoverableStb.p90).toBe(0);
+  });
+});
+
+describe("an estimate with another number of trials", () => {
+  it("is in the totals by its ranks, with its own mean", async () => {
+    const approved = await buildApproved();
+    const planner = await as("planner");
+    const { items, engine } = made(
+      await planner.get<Ranking>("/api/v1/fields?limit=1000&interest=gross"),
+    );
+    const row = items.find(({ chosen }) => chosen.some((one) => one.estimateId === approved.id))!;
+    expect(row.chosen[0].trials).toBe(1000);
+    expect(engine!.trials).not.toBe(1000);
+    expect(row.leftOut).toEqual([]);
+    const own = approved.summary!.results.condensateRecoverableStb;
+    const { condensateRecoverableStb: shown } = row.ranges!;
+    expect(shown.mean / own.mean).toBeCloseTo(1, 2);
+    expect(shown.p50 / own.p50).toBeCloseTo(1, 2);
   });
 });

@@ -244,11 +244,11 @@ describe("estimates with a recovery plan", () => {
 
     const budget = made(await reviewer.get<string>("/api/v1/exports/budget.csv"));
     const [header, ...lines] = budget.split("\r\n");
-    expect(header.endsWith("recovery_route,producing_concept")).toBe(true);
-    expect(lines.find((line) => line.includes(field.id))).toMatch(/correlation,depletion$/);
+    expect(header.endsWith("recovery_route,producing_concept,dependence_set")).toBe(true);
+    expect(lines.find((line) => line.includes(field.id))).toMatch(/correlation,depletion,[^,]+$/);
     const ranking = made(await reviewer.get<string>("/api/v1/exports/ranking.csv"));
     const row = ranking.split("\r\n").find((line) => line.includes(field.name));
-    expect(ranking.split("\r\n")[0].endsWith("recovery_route")).toBe(true);
-    expect(row).toMatch(/correlation$/);
+    expect(ranking.split("\r\n")[0].endsWith("recovery_route,dependence_set")).toBe(true);
+    expect(row).toMatch(/correlation,[^,]+$/);
   });
 });
