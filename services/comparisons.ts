@@ -82,7 +82,11 @@ export async function compare(
     authorise(actor, "portfolio.read");
     return loadFieldSide(side.fieldId, pointer, basis, options);
   };
-  const [before, now] = await Promise.all([load(left, "left"), load(right, "right")]);
+  // Whichever fails first, what is said is about the left side when both fail.
+  const [first, second] = await Promise.allSettled([load(left, "left"), load(right, "right")]);
+  if (first.status === "rejected") throw first.reason;
+  if (second.status === "rejected") throw second.reason;
+  const [before, now] = [first.value, second.value];
   const sides = { left: before.view, right: now.view };
   if (!before.run || !now.run) {
     return { ...sides, explanation: null, whyNotExplained: before.whyNot ?? now.whyNot };
@@ -148,7 +152,7 @@ const stateWords: Record<EstimateState, string> = {
   superseded: "Superseded",
 };
 
-/** "Approved 14 Mar 2026", "Draft, run 2 Apr 2026" */
+/** "Approved, in force from 14 Mar 2026", "Draft, run 2 Apr 2026" */
 function stateInWords({ state, effectiveOn, computedAt }: Estimate): string {
   if (effectiveOn)
     return `${stateWords[state]}, in force from ${dateInWords(new Date(effectiveOn))}`;
