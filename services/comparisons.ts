@@ -109,13 +109,10 @@ async function loadEstimateSide(
   const { reservoir } = estimate ?? {};
   if (!estimate || !reservoir?.field) throw new NotFoundError("estimate");
   const { seed, trials, sampling, revision } = estimate;
-  const inputs =
-    side.kind === "concept" ? withConcept(estimate, side.concept, pointer) : estimate.inputs;
-  const isStored = inputs === estimate.inputs && estimate.summary !== null;
-  const summary = isStored
-    ? estimate.summary
-    : await simulated({ inputs, seed, trials, sampling }, pointer, options);
-  if (summary === null) throw new NotFoundError("estimate");
+  const other = side.kind === "concept" ? withConcept(estimate, side.concept, pointer) : null;
+  const inputs = other ?? estimate.inputs;
+  const stored = other === null ? estimate.summary : null;
+  const summary = stored ?? (await simulated({ inputs, seed, trials, sampling }, pointer, options));
   const concept = side.kind === "concept" ? conceptWords[side.concept] : null;
   const label = `${reservoir.field.name}, ${reservoir.name}, r${revision}`;
   return {
@@ -123,8 +120,8 @@ async function loadEstimateSide(
       label: concept ? `${label}, ${concept}` : label,
       detail: [
         stateInWords(estimate),
-        concept && (isStored ? "the concept of its recovery plan" : "instead of its own concept"),
-        !isStored && "computed for this comparison",
+        concept && (other ? "instead of its own concept" : "the concept of its recovery plan"),
+        stored === null && "computed for this comparison",
       ]
         .filter(Boolean)
         .join(", "),
@@ -162,12 +159,12 @@ function stateInWords({ state, effectiveOn, computedAt }: Estimate): string {
 const dateFormat = new Intl.DateTimeFormat("en-GB", { dateStyle: "medium", timeZone: "UTC" });
 const dateInWords = (date: Date) => dateFormat.format(date);
 
-/** The inputs as another concept would have them, on the curve of their own plan. */
+/** The inputs as another concept would have them, on the curve of their own plan; null when it is their own concept. */
 function withConcept(
   { inputs, revision }: Estimate,
   concept: ProducingConcept,
   pointer: string,
-): EstimateInputs {
+): EstimateInputs | null {
   const { recoveryPlan } = inputs;
   if (!recoveryPlan) {
     throw new InvalidInputError([
@@ -177,7 +174,7 @@ function withConcept(
       },
     ]);
   }
-  if (recoveryPlan.concept === concept) return inputs;
+  if (recoveryPlan.concept === concept) return null;
   const { p90, p50 } = compileDistribution(inputs.uncertain.pressurePsia.distribution).range;
   const start = { sampleName: null, pressurePsia: { p90, p50 }, depthFt: inputs.depthFt };
   return { ...inputs, recoveryPlan: planForConcept(concept, recoveryPlan, start) };
