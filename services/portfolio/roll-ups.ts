@@ -5,6 +5,7 @@
  */
 import { createHash } from "node:crypto";
 import type { Ledger } from "@/analytics/portfolio/ledger";
+import { DEFAULT_TRIALS } from "@/analytics/volumetrics/trial-counts";
 import {
   listPortfolioFields,
   listPortfolioReservoirs,
@@ -33,7 +34,7 @@ export interface Book {
 }
 
 /** Changes when the same trials in the same order would give other totals. */
-const ROLL_UP_VERSION = 3;
+const ROLL_UP_VERSION = 4;
 const CACHE_BYTES = 32 * 1024 * 1024;
 
 const holder = globalThis as typeof globalThis & {
@@ -63,10 +64,8 @@ export async function loadBook(
     const field = byId.get(reservoir.fieldId);
     return field && isCounted(reservoir) ? [{ field, reservoir }] : [];
   });
-  const trials = trialsThatFit(
-    commonest(counted.map(({ reservoir }) => reservoir.trials)),
-    new Set(counted.map(({ field }) => field.id)).size,
-  );
+  const fieldsCounted = new Set(counted.map(({ field }) => field.id)).size;
+  const trials = fieldsCounted > 0 ? trialsThatFit(DEFAULT_TRIALS, fieldsCounted) : 0;
   return { fields, reservoirs, trials, counted, dependence };
 }
 
@@ -169,15 +168,4 @@ function keyOf(
       ]),
     )
     .digest("base64");
-}
-
-/** The value that occurs most often, the larger one of two that occur equally; 0 for none. */
-function commonest(values: readonly number[]): number {
-  const counts = new Map<number, number>();
-  for (const value of values) counts.set(value, (counts.get(value) ?? 0) + 1);
-  return [...counts].reduce(
-    (best, [value, count]) =>
-      count > best.count || (count === best.count && value > best.value) ? { value, count } : best,
-    { value: 0, count: 0 },
-  ).value;
 }

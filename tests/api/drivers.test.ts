@@ -233,9 +233,10 @@ describe("POST /api/v1/comparisons", () => {
     const two = await buildApproved(second.id);
     const both = await compare({ left: field, right: estimate });
     const mean = (run: EstimateView) => run.summary?.results.condensateRecoverableStb.mean ?? 0;
+    // Their trials are spread over the total's by rank: rows come 16 or 17 times, which moves a mean a little.
     expect(
       both.left.quantities.condensateRecoverableStb.mean / (mean(one) + mean(two)),
-    ).toBeCloseTo(1, 5);
+    ).toBeCloseTo(1, 3);
     expect(both.explanation).toBeNull();
     expect(both.whyNotExplained).toContain("2 reservoirs");
   });
