@@ -19,7 +19,7 @@ export const rankRegressionSchema = z.object({
 
 /**
  * Variance-based shares. Inputs that are rank-correlated are one factor together: only independent factors have such
- * shares.
+ * shares. As estimated: sampling can put a share a little below 0 or above 1, or a first one above its total.
  */
 export const varianceSharesSchema = z.object({
   /** size of each base sample and number of evaluations of the model that it took */
@@ -36,10 +36,13 @@ export const varianceSharesSchema = z.object({
   ),
 });
 
-/** What it is worth to know one input exactly, on average over what it may turn out to be. */
+/**
+ * What it is worth to know one input exactly, on average over what it may turn out to be. As estimated: sampling can put
+ * the share of an input of no importance a little below 0.
+ */
 export const knowingSchema = z.object({
   input: driverName,
-  /** expected share of the variance that goes, 0 to 1; right with correlated inputs too */
+  /** expected share of the variance that goes; right with correlated inputs too */
   varianceRemoved: z.number(),
   /** expected P90-P10 width of the result once the input is known, over the width now */
   remainingWidth: z.number(),

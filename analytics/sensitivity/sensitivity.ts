@@ -67,7 +67,7 @@ export function computeSensitivity(
     knowing: drivers
       .map(({ name, values: column, ranking: order }) => ({
         input: name,
-        ...valueOfKnowing(column, order, values, p10 - p90),
+        ...valueOfKnowing(column, order, values, p10 - p90, workspace.starts),
       }))
       .sort((a, b) => b.varianceRemoved - a.varianceRemoved),
     conditional: conditionalView(drivers, values, ranking, chosen),
