@@ -48,7 +48,9 @@ function sectionsOf(actor: Actor): NavItem[] {
     { href: "/prices", label: "Prices" },
     { href: "/review", label: "Review" },
     ...(can(actor, "import.read") ? [{ href: "/import", label: "Import" }] : []),
-    ...(can(actor, "run.create") ? [{ href: "/runs", label: "Runs" }] : []),
+    ...(can(actor, "run.create") || can(actor, "run.cancel")
+      ? [{ href: "/runs", label: "Runs" }]
+      : []),
     ...(can(actor, "user.read") ? [{ href: "/people", label: "People" }] : []),
     ...(can(actor, "audit.read") ? [{ href: "/audit", label: "Audit" }] : []),
   ];

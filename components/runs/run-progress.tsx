@@ -1,5 +1,6 @@
 import type { ReactNode } from "react";
 import type { RunView } from "@/app/api/v1/runs/schema";
+import { formatDate } from "@/components/ui/format";
 import { Notice, Progress } from "@/components/ui/status";
 import { fractionOf, progressWords } from "./run-words";
 
@@ -9,22 +10,29 @@ export function RunProgress({
   label,
   note,
   action,
+  lastHeard = null,
 }: {
   run: RunView;
   label: string;
   note?: ReactNode;
   /** a Cancel button */
   action?: ReactNode;
+  /** when the server last answered, while it does not: then nobody knows how fast the run is, or whether it goes on */
+  lastHeard?: Date | null;
 }) {
   const { counts, stalled } = run;
   return (
     <div className="grid grid-cols-1 gap-3">
       <Progress
-        label={label}
+        label={lastHeard ? `Last heard ${formatDate(lastHeard, "clock")} UTC` : label}
         fraction={fractionOf(run)}
-        detail={progressWords(run)}
-        note={note ?? "You may leave this page; the run goes on."}
-        action={action}
+        detail={progressWords(lastHeard ? { ...run, remainingSeconds: null } : run)}
+        note={
+          lastHeard
+            ? "The server does not answer, so how far the run is now is not known. What was done is kept; this page asks again by itself."
+            : (note ?? "You may leave this page; the run goes on.")
+        }
+        action={lastHeard ? null : action}
       />
       <p className="run-facts">
         <span>
@@ -47,7 +55,7 @@ export function RunProgress({
           </span>
         )}
       </p>
-      {stalled && (
+      {stalled && !lastHeard && (
         <Notice title="Nothing has moved for a while.">
           No worker process is there, or all are busy with other work. Nothing is lost: the run goes
           on by itself as soon as a worker is free. If none is running, an administrator starts one;

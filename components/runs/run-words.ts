@@ -87,7 +87,9 @@ export const MOVED_BEYOND = 2;
 /** The finding that heads a run's page. */
 export function runTitle(run: RunView, comparison: Comparison | null): string {
   const { counts, state, kind } = run;
-  if (state === "waiting") return `${estimatesWords(counts.total)} wait for a worker`;
+  if (state === "waiting") {
+    return `${estimatesWords(counts.waiting)} ${counts.waiting === 1 ? "waits" : "wait"} for a worker`;
+  }
   if (state === "running") {
     return `${whole(settledItems(run))} of ${estimatesWords(counts.total)} computed`;
   }

@@ -78,12 +78,13 @@ export function fractionDigits(values: readonly Value[], format?: FigureFormat) 
   return Math.max(0, ...lengths.map((length) => length - 1));
 }
 
-/** "day" 2 Nov 2026; "long" 2 November 2026; "month" Nov 2026; "time" 2 Nov 2026, 16:20. */
+/** "day" 2 Nov 2026; "long" 2 November 2026; "month" Nov 2026; "time" 2 Nov 2026, 16:20; "clock" 16:20:05. */
 const dateFormats = {
   day: "d LLL yyyy",
   long: "d LLLL yyyy",
   month: "LLL yyyy",
   time: "d LLL yyyy, HH:mm",
+  clock: "HH:mm:ss",
 } as const;
 
 /** A date of business (no zone) or an instant (ISO, shown in `zone`). Missing or malformed: en dash. */

@@ -93,7 +93,12 @@ describe("runTitle(run, comparison)", () => {
   });
 
   it("says where a run stands that has not finished", () => {
-    expect(runTitle(run({ state: "waiting" }), null)).toBe("22 estimates wait for a worker");
+    expect(runTitle(run({ state: "waiting" }, { waiting: 22, done: 0 }), null)).toBe(
+      "22 estimates wait for a worker",
+    );
+    expect(runTitle(run({ state: "waiting" }, { waiting: 20, done: 2 }), null)).toBe(
+      "20 estimates wait for a worker",
+    );
     expect(runTitle(run({ state: "cancelled" }, { done: 7 }), null)).toBe(
       "Cancelled after 7 of 22 estimates",
     );

@@ -57,6 +57,25 @@ export function useRun(id: string | null) {
   });
 }
 
+/** What a query that is looked at again and again says of its last answer. */
+interface Listened {
+  dataUpdatedAt: number;
+  error: Error | null;
+  failureCount: number;
+  fetchStatus: string;
+}
+
+/** When the server last answered, once a later look got no answer; null while all is well, or nothing was heard yet. */
+export function lastHeardOf({
+  dataUpdatedAt,
+  error,
+  failureCount,
+  fetchStatus,
+}: Listened): Date | null {
+  const isSilent = error !== null || failureCount > 0 || fetchStatus === "paused";
+  return isSilent && dataUpdatedAt > 0 ? new Date(dataUpdatedAt) : null;
+}
+
 function itemSearch(show: ItemFilter, offset: number, limit: number): string {
   const search = new URLSearchParams({ limit: String(limit), offset: String(offset) });
   if (show === "moved") search.set("movedBeyond", String(MOVED_BEYOND));

@@ -6,13 +6,14 @@ import { Section } from "@/components/ui/section";
 import { Notice } from "@/components/ui/status";
 import { LedgerTable } from "@/components/ui/table";
 import { RunAction } from "../../_components/run-action";
-import { useRun } from "../../_queries/runs";
+import { lastHeardOf, useRun } from "../../_queries/runs";
 import { rowsWords } from "./import-words";
 
 /** How far the run of the taken rows is, with a way to stop it, and which rows could not be run. */
 export function ImportProgress({ file }: { file: ImportDetail }) {
   const { runs, state, rowsApplied, rowsBad, rowsUnchanged } = file;
-  const { data: run } = useRun(state === "applying" || runs.failed.length > 0 ? runs.id : null);
+  const query = useRun(state === "applying" || runs.failed.length > 0 ? runs.id : null);
+  const run = query.data;
   const left = [
     rowsUnchanged > 0 && `${rowsWords(rowsUnchanged)} unchanged`,
     rowsBad > 0 && `${rowsWords(rowsBad)} left out`,
@@ -23,6 +24,7 @@ export function ImportProgress({ file }: { file: ImportDetail }) {
         <RunProgress
           run={run}
           label="Running the simulations"
+          lastHeard={lastHeardOf(query)}
           note="The rows are in the book already. You may leave this page; the runs go on."
           action={<RunAction run={run} action="cancel" />}
         />

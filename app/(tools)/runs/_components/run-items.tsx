@@ -20,8 +20,12 @@ import { MOVED_BEYOND, itemStateWords, movedWords } from "@/components/runs/run-
 /** A run shows volumes as they are stored, on no basis: gross, unrisked, in field units. */
 const condensate = reportingUnits("field", "14.696").condensate;
 
-/** Every estimate of a run, with what it had and what it has. */
-export function RunItems({ run }: { run: RunView }) {
+/**
+ * Every estimate of a run, with what it had and what it has.
+ *
+ * @param moved  how many moved beyond chance; null until that is known
+ */
+export function RunItems({ run, moved }: { run: RunView; moved: number | null }) {
   const [show, setShow] = useState<ItemFilter>("all");
   const [offset, setOffset] = useState(0);
   const { data, error } = useRunItems(run.id, show, offset, isUnderWay(run));
@@ -37,7 +41,7 @@ export function RunItems({ run }: { run: RunView }) {
       note={`Recoverable condensate, ${condensate.unit}, gross and unrisked. Boxes and soft figures: before. Each mark has a scale of its own.`}
     >
       <div className="filter-bar" role="group" aria-label="Estimates shown">
-        {filtersOf(run).map(({ filter, label, count }) => (
+        {filtersOf(run, moved).map(({ filter, label, count }) => (
           <button
             key={filter}
             type="button"
@@ -51,7 +55,8 @@ export function RunItems({ run }: { run: RunView }) {
       </div>
       {error && (
         <Notice tone="error" title={errorWords(error)}>
-          The run goes on; only this list could not be read.
+          {data ? "The list is as it was when last heard." : "The list could not be read."} What was
+          done is kept.
         </Notice>
       )}
       {!data && !error && <Skeleton lines={8} label="Loading the estimates" />}
@@ -66,17 +71,17 @@ export function RunItems({ run }: { run: RunView }) {
   );
 }
 
-function filtersOf({ counts }: RunView) {
+function filtersOf({ counts }: RunView, moved: number | null) {
   const filters: { filter: ItemFilter; label: string; count: number | null }[] = [
     { filter: "all", label: "All", count: counts.total },
     { filter: "failed", label: "Failed", count: counts.failed },
-    { filter: "moved", label: `Moved beyond ${MOVED_BEYOND} standard errors`, count: null },
+    { filter: "moved", label: `Moved beyond ${MOVED_BEYOND} standard errors`, count: moved },
     { filter: "waiting", label: "Waiting", count: counts.waiting },
     { filter: "running", label: "Running", count: counts.running },
     { filter: "done", label: "Done", count: counts.done },
     { filter: "passedOver", label: "Passed over", count: counts.passedOver },
   ];
-  return filters.filter(({ count }) => count === null || count > 0);
+  return filters.filter(({ filter, count }) => filter === "moved" || count === null || count > 0);
 }
 
 function emptyWords(show: ItemFilter, run: RunView): string {

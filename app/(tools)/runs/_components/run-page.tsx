@@ -8,7 +8,7 @@ import { Button } from "@/components/ui/button";
 import { formatDate } from "@/components/ui/format";
 import { Page, PageHead, Section, Stack } from "@/components/ui/section";
 import { Notice, Skeleton } from "@/components/ui/status";
-import { isUnderWay, useComparison, useRun } from "../../_queries/runs";
+import { isUnderWay, lastHeardOf, useComparison, useRun } from "../../_queries/runs";
 import { RunAction } from "../../_components/run-action";
 import { RunItems } from "./run-items";
 import { RunProgress } from "@/components/runs/run-progress";
@@ -19,7 +19,8 @@ const crumbs = [{ label: "Runs", href: "/runs" }, { label: "Run" }];
 
 /** One run: how far it is, what it found, and every estimate of it. */
 export function RunPage({ id }: { id: string }) {
-  const { data: run, error, refetch } = useRun(id);
+  const query = useRun(id);
+  const { data: run, error, refetch } = query;
   const { data: comparison } = useComparison(run);
   useRefreshAtEnd(run);
 
@@ -37,7 +38,7 @@ export function RunPage({ id }: { id: string }) {
               </Button>
             }
           >
-            The run goes on; only this page could not be read.
+            What the run has done is kept; only this page could not be read.
           </Notice>
         ) : (
           <Skeleton lines={8} label="Loading the run" />
@@ -55,7 +56,7 @@ export function RunPage({ id }: { id: string }) {
         actions={<RunAction run={run} action="retry" />}
       />
       <Stack>
-        <RunState run={run} comparison={comparison ?? null} />
+        <RunState run={run} comparison={comparison ?? null} lastHeard={lastHeardOf(query)} />
         {run.kind === "untilSettled" ? (
           <Section
             title="More trials, step by step"
@@ -64,7 +65,7 @@ export function RunPage({ id }: { id: string }) {
             <SettlingSteps id={id} live={isUnderWay(run)} />
           </Section>
         ) : (
-          <RunItems run={run} />
+          <RunItems run={run} moved={comparison?.moved ?? null} />
         )}
       </Stack>
     </Page>
@@ -102,11 +103,24 @@ function RunMeta({ run }: { run: RunView }) {
 }
 
 /** Where the run stands, and what to do about it. */
-function RunState({ run, comparison }: { run: RunView; comparison: Comparison | null }) {
+function RunState({
+  run,
+  comparison,
+  lastHeard,
+}: {
+  run: RunView;
+  comparison: Comparison | null;
+  lastHeard: Date | null;
+}) {
   const { counts } = run;
   if (isUnderWay(run))
     return (
-      <RunProgress run={run} label="Computing" action={<RunAction run={run} action="cancel" />} />
+      <RunProgress
+        run={run}
+        label="Computing"
+        lastHeard={lastHeard}
+        action={<RunAction run={run} action="cancel" />}
+      />
     );
   if (run.state === "cancelled") {
     return (

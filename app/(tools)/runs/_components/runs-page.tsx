@@ -10,7 +10,7 @@ import { formatDate } from "@/components/ui/format";
 import { Page, PageHead, Section, Stack } from "@/components/ui/section";
 import { EmptyState, Notice, Skeleton } from "@/components/ui/status";
 import { LedgerTable } from "@/components/ui/table";
-import { RUNS_PER_PAGE, isUnderWay, useRuns } from "../../_queries/runs";
+import { RUNS_PER_PAGE, isUnderWay, lastHeardOf, useRuns } from "../../_queries/runs";
 import { Pager } from "./pager";
 import { durationWords, estimatesWords, outcomeWords } from "@/components/runs/run-words";
 import { StartRunDialog } from "./start-run-dialog";
@@ -20,7 +20,9 @@ export function RunsPage() {
   const can = useCan();
   const [offset, setOffset] = useState(0);
   const [isStarting, setIsStarting] = useState(false);
-  const { data, error, isPending, refetch } = useRuns(offset);
+  const query = useRuns(offset);
+  const { data, error, isPending, refetch } = query;
+  const lastHeard = lastHeardOf(query);
   const start = can("run.create") && (
     <Button kind="primary" onClick={() => setIsStarting(true)}>
       Recalculate
@@ -46,7 +48,9 @@ export function RunsPage() {
               </Button>
             }
           >
-            Runs go on; only this list could not be read.
+            {lastHeard
+              ? `The list is as it was when last heard, ${formatDate(lastHeard, "clock")} UTC. What was done is kept.`
+              : "The list could not be read. What was done is kept."}
           </Notice>
         )}
         {data?.items.length === 0 && (
@@ -57,7 +61,7 @@ export function RunsPage() {
         )}
         {data && data.items.length > 0 && (
           <Section title="Every run" note="Newest first.">
-            <RunTable runs={data.items} />
+            <RunTable runs={lastHeard ? data.items.map(withoutPace) : data.items} />
             <Pager {...data} noun="runs" step={RUNS_PER_PAGE} onPage={setOffset} />
           </Section>
         )}
@@ -73,6 +77,9 @@ function titleOf(runs: readonly RunView[]): string {
   const left = underWay.reduce((sum, { counts }) => sum + counts.waiting + counts.running, 0);
   return `${estimatesWords(left)} still to compute in ${underWay.length === 1 ? "one run" : `${underWay.length} runs`}`;
 }
+
+/** Nobody knows how long a run still takes while the server is silent. */
+const withoutPace = (run: RunView): RunView => ({ ...run, remainingSeconds: null });
 
 const tookWords = ({ startedAt, finishedAt }: RunView) =>
   startedAt && finishedAt

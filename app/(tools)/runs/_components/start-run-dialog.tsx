@@ -3,6 +3,7 @@
 import { useRouter } from "next/navigation";
 import { useState } from "react";
 import { errorWords, ProblemError } from "@/app/_client/request";
+import { useCan } from "@/app/_client/use-session";
 import { runScopes, type RunScope } from "@/models/vocabulary";
 import { Button, LinkButton } from "@/components/ui/button";
 import { Dialog } from "@/components/ui/dialog";
@@ -16,6 +17,8 @@ export function StartRunDialog({ onClose }: { onClose: () => void }) {
   const start = useStartRun();
   const existing = start.error instanceof ProblemError ? start.error.existingId : undefined;
   const [scope, setScope] = useState<RunScope>("approved");
+  const mayRun = useCan()("estimate.run");
+  const isRefused = (value: RunScope) => value !== "approved" && !mayRun;
 
   async function handleStart() {
     try {
@@ -49,17 +52,21 @@ export function StartRunDialog({ onClose }: { onClose: () => void }) {
       <fieldset className="scope-choice">
         <legend className="sr-only">What to recalculate</legend>
         {runScopes.map((value) => (
-          <label key={value}>
+          <label key={value} className={isRefused(value) ? "text-ink-soft" : undefined}>
             <input
               type="radio"
               name="scope"
               value={value}
               checked={scope === value}
+              disabled={isRefused(value)}
               onChange={() => setScope(value)}
             />
             <span>
               <b>{scopes[value].label}</b>
               <small>{scopes[value].note}</small>
+              {isRefused(value) && (
+                <small>Not for your role: drafts get new results from an engineer.</small>
+              )}
             </span>
           </label>
         ))}
