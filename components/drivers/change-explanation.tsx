@@ -1,7 +1,13 @@
 import type { ChangeExplanation as Explanation } from "@/analytics/sensitivity/sensitivity-schema";
 import { Bridge } from "@/components/charts/bridge";
 import { ChartFrame } from "@/components/charts/chart-frame";
-import { changeExplained, changeLabel, explainedSteps, methodWords } from "./change-words";
+import {
+  changeExplained,
+  changeLabel,
+  explainedSteps,
+  methodWords,
+  remarksOn,
+} from "./change-words";
 
 /** What explains the change of P50 from one estimate to another: bars that add up from one to the other. */
 export function ChangeExplanation({
@@ -12,6 +18,7 @@ export function ChangeExplanation({
   factor,
   unit,
   fileName,
+  storedTrials,
 }: {
   explanation: Explanation;
   /** what the two are called: "r4", "r5" */
@@ -22,11 +29,13 @@ export function ChangeExplanation({
   factor: number;
   unit: string;
   fileName: string;
+  /** trials that the two were run with, the more of them */
+  storedTrials: number;
 }) {
   return (
     <ChartFrame
       title={changeExplained(explanation, factor, unit)}
-      note={`What explains the change in P50 of ${name.toLowerCase()}. ${methodWords(explanation)}`}
+      note={`What explains the change in P50 of ${name.toLowerCase()}. ${methodWords(explanation)}${remarksOn(explanation, storedTrials)}`}
       fileName={`${fileName}-change-of-p50`}
       data={{
         columns: [
@@ -46,6 +55,7 @@ export function ChangeExplanation({
       }}
     >
       <Bridge
+        horizontal
         quantity={`P50 of ${name.toLowerCase()}, ${unit}`}
         from={{ label: from, value: explanation.from * factor }}
         steps={explainedSteps(explanation).map(({ label, effect }) => ({

@@ -43,9 +43,16 @@ export interface ExplainedStep {
 /** Bars of a bridge beyond these are too narrow to read. */
 const MOST_STEPS = 7;
 
-/** Largest effect first; from the eighth on they are one step, which still adds up. */
-export function explainedSteps({ changes }: ChangeExplanation): ExplainedStep[] {
-  const steps = [...changes]
+/** An effect smaller than this share of the figure is what rounding leaves of none. */
+const NO_EFFECT = 1e-9;
+
+const hasEffect = ({ from, to }: ChangeExplanation, { effect }: { effect: number }) =>
+  Math.abs(effect) > NO_EFFECT * Math.max(Math.abs(from), Math.abs(to));
+
+/** Largest effect first, those without one left out; from the eighth on they are one step, which still adds up. */
+export function explainedSteps(explanation: ChangeExplanation): ExplainedStep[] {
+  const steps = explanation.changes
+    .filter((change) => hasEffect(explanation, change))
     .sort((a, b) => Math.abs(b.effect) - Math.abs(a.effect))
     .map(({ change, ...rest }) => ({ label: changeLabel(change), ...rest }));
   if (steps.length <= MOST_STEPS) return steps;
@@ -74,7 +81,11 @@ export function changeExplained(
   const [first, ...others] = explainedSteps(explanation);
   const move = explanation.to - explanation.from;
   const figure = (value: number) => formatFigure(Math.abs(value) * factor);
-  if (!first) return "Nothing differs, so P50 stands";
+  if (!first) {
+    return explanation.changes.length === 0
+      ? "Nothing differs, so P50 stands"
+      : "P50 stands: no difference moves it";
+  }
   if (Math.abs(move) < NO_MOVE * Math.abs(explanation.from)) {
     return Math.abs(first.effect) < NO_MOVE * Math.abs(explanation.from)
       ? `P50 stands: no difference moves it`
@@ -101,4 +112,25 @@ export function methodWords({ orders, trials }: ChangeExplanation): string {
       ? "Each effect is averaged over all orders in which the differences could be made"
       : `Each effect is averaged over ${orders} orders of making the differences, drawn at random; its standard error is in the table`;
   return `${how}, on the same ${trials.toLocaleString("en-US")} draws, so they add up to the whole move.`;
+}
+
+/** What a reader may ask besides: which differences do nothing, what "Sampling" is, and why P50 is not the stored one. */
+export function remarksOn(explanation: ChangeExplanation, storedTrials: number): string {
+  const idle = explanation.changes
+    .filter((change) => !hasEffect(explanation, change))
+    .map(({ change }) => changeLabel(change));
+  const isSampled = explanation.changes.some(
+    ({ change }) =>
+      change.kind === "sampling" ||
+      (change.kind === "together" && change.changes.some(({ kind }) => kind === "sampling")),
+  );
+  const sentences = [
+    idle.length > 0 &&
+      `No effect on it: ${listWords(idle.map(lowerFirst))}.`,
+    isSampled &&
+      "Sampling is another seed, method or number of trials: what it moves is sampling error.",
+    explanation.trials < storedTrials &&
+      `The runs have up to ${storedTrials.toLocaleString("en-US")} trials; with fewer, both ends stand a little off the stored P50.`,
+  ].filter((sentence) => sentence !== false);
+  return sentences.map((sentence) => ` ${sentence}`).join("");
 }

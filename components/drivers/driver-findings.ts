@@ -41,17 +41,38 @@ export function varianceFinding({ factors }: Shares): string {
   const [first] = byTotal(factors);
   if (!first || first.total.value < SLIGHT) return "Nothing spreads: every input is a constant";
   const name = factorLabel(first.inputs);
-  const alone = formatPercent(Math.max(0, first.first.value));
+  const alone = formatPercent(possibleShare(first.first.value));
   const joint = first.total.value - first.first.value;
   const noise = 2 * Math.hypot(first.first.standardError, first.total.standardError);
   const verb = first.inputs.length > 1 ? "make" : "makes";
   return joint > Math.max(SLIGHT, noise)
-    ? `${name} ${verb} ${alone} of the variance alone, ${formatPercent(first.total.value)} with what ${first.inputs.length > 1 ? "they do" : "it does"} through others`
+    ? `${name} ${verb} ${alone} of the variance alone, ${formatPercent(possibleShare(first.total.value))} with what ${first.inputs.length > 1 ? "they do" : "it does"} through others`
     : `${name} ${verb} ${alone} of the variance, next to nothing of it through others`;
 }
 
 export const byTotal = (factors: Shares["factors"]) =>
   [...factors].sort((a, b) => b.total.value - a.total.value);
+
+/** A share as a screen shows it; sampling can put an estimate of one below nothing or above everything. */
+export const possibleShare = (share: number) => Math.min(1, Math.max(0, share));
+
+/** Less than this goes with rounding on a screen. */
+const UNSEEN = 0.0005;
+
+/** That shares are shown otherwise than estimated, or contradict each other; `null` when neither. */
+export function samplingWords(
+  estimates: readonly { alone: number; inAll?: number }[],
+): string | null {
+  const isBeyond = (share: number) => Math.abs(share - possibleShare(share)) > UNSEEN;
+  const sentences = [
+    estimates.some(({ alone, inAll = alone }) => isBeyond(alone) || isBeyond(inAll)) &&
+      "Sampling put an estimate outside 0 to 100 %: it stands at that end here, and as it came in the table.",
+    estimates.some(
+      ({ alone, inAll = alone }) => possibleShare(alone) - possibleShare(inAll) > UNSEEN,
+    ) && "Where a share alone is above the share in all, that is sampling error.",
+  ].filter((sentence) => sentence !== false);
+  return sentences.length === 0 ? null : sentences.join(" ");
+}
 
 /** What the shares leave over: the part of the variance that only inputs acting together explain. */
 export function jointWords({ factors }: Shares): string {

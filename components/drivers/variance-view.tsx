@@ -2,7 +2,13 @@ import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import { ChartFrame } from "@/components/charts/chart-frame";
 import { InputBars } from "@/components/charts/input-bars";
 import { formatPercent } from "@/components/ui/format";
-import { byTotal, jointWords, varianceFinding } from "./driver-findings";
+import {
+  byTotal,
+  jointWords,
+  possibleShare,
+  samplingWords,
+  varianceFinding,
+} from "./driver-findings";
 import { factorLabel, togetherWords } from "./driver-names";
 import type { DriverViewProps } from "./regression-view";
 
@@ -11,7 +17,7 @@ function shareText({ value, standardError }: { value: number; standardError: num
   const half = 196 * standardError;
   if (value < 0.0005 && half < 0.05) return "0 %";
   const decimals = half < 0.95 ? 1 : 0;
-  return `${formatPercent(value, { decimals })} ± ${half.toFixed(decimals)}`;
+  return `${formatPercent(possibleShare(value), { decimals })} ± ${half.toFixed(decimals)}`;
 }
 
 /** Shares of the variance: what goes when a factor alone is known, and what stays when all others are. */
@@ -24,12 +30,16 @@ export function VarianceView({
 }: DriverViewProps & { inputs: EstimateInputs }) {
   const { varianceShares } = sensitivity;
   const factors = byTotal(varianceShares.factors);
-  const together = togetherWords(factors, inputs);
+  const words = [
+    jointWords(varianceShares),
+    samplingWords(factors.map(({ first, total }) => ({ alone: first.value, inAll: total.value }))),
+    togetherWords(factors, inputs),
+  ].filter(Boolean);
   return (
     <ChartFrame
       level={3}
       title={varianceFinding(varianceShares)}
-      note={`${name}. Full bar: share that goes when the input alone is known (first order). Pale bar: share it has a hand in (total). Lines and ±: 95 % of the sampling, from ${varianceShares.evaluations.toLocaleString("en-US")} runs of the model. ${jointWords(varianceShares)}${together ? ` ${together}` : ""}`}
+      note={`${name}. Full bar: share that goes when the input alone is known (first order). Pale bar: share it has a hand in (total). Lines and ±: 95 % of the sampling, from ${varianceShares.evaluations.toLocaleString("en-US")} runs of the model. ${words.join(" ")}`}
       fileName={`${fileName}-variance-shares`}
       data={{
         columns: [

@@ -10,6 +10,7 @@ import {
   knowingFinding,
   regressionFinding,
   rSquaredWords,
+  samplingWords,
   varianceFinding,
 } from "@/components/drivers/driver-findings";
 import { factorLabel, togetherWords } from "@/components/drivers/driver-names";
@@ -101,6 +102,17 @@ describe("jointWords", () => {
   });
 });
 
+describe("samplingWords", () => {
+  it("says when an estimate is shown otherwise than it came, or above what holds it", () => {
+    expect(samplingWords([{ alone: 0.6, inAll: 0.7 }, { alone: -0.0002 }])).toBeNull();
+    expect(samplingWords([{ alone: 0.2, inAll: 1.01 }])).toMatch(/outside 0 to 100 %/);
+    expect(samplingWords([{ alone: -0.01 }])).toMatch(/outside 0 to 100 %/);
+    expect(samplingWords([{ alone: 0.31, inAll: 0.3 }])).toBe(
+      "Where a share alone is above the share in all, that is sampling error.",
+    );
+  });
+});
+
 describe("knowingFinding", () => {
   it("says by how much the range would narrow", () => {
     const knowing = [
@@ -186,6 +198,33 @@ describe("VarianceView", () => {
     );
     expect(words(html)).toMatch(/Area and net thickness together 80\.0 % ± 0\.8, 92\.0 % ± 0\.8/);
     expect(words(html)).toContain("40,960 runs of the model");
+  });
+});
+
+describe("VarianceView beyond the possible", () => {
+  it("shows no share above 100 % or below nothing, and says so", () => {
+    const factors = [
+      { inputs: ["areaAcres" as const], first: estimated(1.004), total: estimated(1.002) },
+      { inputs: ["porosity" as const], first: estimated(-0.003), total: estimated(0.001) },
+    ];
+    const html = renderToStaticMarkup(
+      <VarianceView
+        sensitivity={{
+          trials: 10_000,
+          rankRegression: { rSquared: 1, coefficients: [], leftOut: [] },
+          varianceShares: { ...shares, factors },
+          knowing: [],
+          conditional,
+        }}
+        inputs={buildInputs()}
+        name="Condensate to the tank"
+        tone="condensate"
+        fileName="x"
+      />,
+    );
+    expect(words(html)).toMatch(/Area 100\.0 % ± 0\.8, 100\.0 % ± 0\.8/);
+    expect(words(html)).toMatch(/Porosity 0\.0 % ± 0\.8/);
+    expect(words(html)).toContain("Sampling put an estimate outside 0 to 100 %");
   });
 });
 
