@@ -4,6 +4,7 @@ import { useState } from "react";
 import { rankingColumn } from "@/analytics/portfolio/ranking-columns";
 import { errorWords } from "@/app/_client/request";
 import { useCan } from "@/app/_client/use-session";
+import { UseOwnSet } from "@/app/_workspace/use-own-set";
 import type { Ranking } from "@/app/api/v1/fields/ranking-schema";
 import type { Basis } from "@/components/basis/basis";
 import { capital, countOf, reportingOf, riskWords } from "@/components/portfolio/reporting";
@@ -38,9 +39,12 @@ export function RankingPage() {
           tone="error"
           title="The fields could not be ranked."
           actions={
-            <Button size="small" onClick={() => void refetch()}>
-              Try again
-            </Button>
+            <>
+              <UseOwnSet error={error} />
+              <Button size="small" onClick={() => void refetch()}>
+                Try again
+              </Button>
+            </>
           }
         >
           {errorWords(error)} Nothing in the book has changed.

@@ -2,6 +2,7 @@
 
 import { errorWords } from "@/app/_client/request";
 import { useCan } from "@/app/_client/use-session";
+import { UseOwnSet } from "@/app/_workspace/use-own-set";
 import type { Statement } from "@/app/api/v1/portfolio/schema";
 import { basisHref, type Basis } from "@/components/basis/basis";
 import { useBasis } from "@/components/basis/use-basis";
@@ -35,9 +36,12 @@ export function StatementPage() {
           tone="error"
           title="The statement could not be computed."
           actions={
-            <Button size="small" onClick={() => void refetch()}>
-              Try again
-            </Button>
+            <>
+              <UseOwnSet error={error} />
+              <Button size="small" onClick={() => void refetch()}>
+                Try again
+              </Button>
+            </>
           }
         >
           {errorWords(error)} Nothing in the book has changed.

@@ -18,7 +18,7 @@ import { SetsTable } from "./sets-table";
 
 /** The named answers to how fields move together: what each says, what it does to the total, and its editor. */
 export function DependencePage() {
-  const { basis, withBasis } = useBasis();
+  const { basis, setBasis, withBasis } = useBasis();
   const can = useCan();
   const search = useSearchParams();
   const { data: sets, error, refetch } = useDependenceSets();
@@ -62,14 +62,15 @@ export function DependencePage() {
   const inUse = sets.find(({ id, isDefault }) =>
     basis.dependence === "default" ? isDefault : id === basis.dependence,
   );
-  const chosen = sets.find(({ id }) => id === wanted) ?? inUse ?? sets[0];
+  const isGone = wanted !== null && wanted !== "new" && !sets.some(({ id }) => id === wanted);
+  const chosen = isGone ? undefined : (sets.find(({ id }) => id === wanted) ?? inUse ?? sets[0]);
   const context = { sets, basins, fields, totals };
   return (
     <Page>
       <PageHead
         title={titleOf(sets, fields)}
         crumbs={crumbs}
-        lead="Reservoirs that share a source rock, a survey or a plant tend to disappoint together. The more they do, the wider the total and the lower its P90. Means do not change."
+        lead="Reservoirs that share a source rock, a survey or a plant tend to disappoint together. The more they do, the wider the total and the lower its P90. Means do not change beyond sampling."
         actions={
           can("dependenceSet.create") && (
             <LinkButton
@@ -84,6 +85,32 @@ export function DependencePage() {
         }
       />
       <Stack>
+        {!inUse && sets.length > 0 && basis.dependence !== "default" && (
+          <Notice
+            title="The basis names a dependence set that is not here."
+            actions={
+              <Button size="small" onClick={() => setBasis({ dependence: "default" })}>
+                Use the book’s own set
+              </Button>
+            }
+          >
+            It was deleted, or the link is not of this book. The totals below are those of the sets
+            that there are.
+          </Notice>
+        )}
+        {isGone && (
+          <Notice
+            title="The dependence set of this link is not here."
+            actions={
+              <LinkButton size="small" href={withBasis("/portfolio/dependence")} scroll={false}>
+                Show the set in use
+              </LinkButton>
+            }
+          >
+            It was deleted, or the link is not of this book. The audit trail keeps what a deleted
+            set held; the sets that there are stand below.
+          </Notice>
+        )}
         {sets.length === 0 ? (
           <EmptyState title="There is no dependence set yet">
             Until a planner makes one, totals treat reservoirs as independent of each other.

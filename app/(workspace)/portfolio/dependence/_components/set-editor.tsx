@@ -12,6 +12,7 @@ import { Section } from "@/components/ui/section";
 import { Notice } from "@/components/ui/status";
 import { useToast } from "@/components/ui/toast";
 import { useCreateSet, useRemoveSet, useSaveSet, type SetTotals } from "../_queries/dependence";
+import { SetConflict } from "./set-conflict";
 import { SetFields } from "./set-fields";
 import { SetQuestions, type SetQuestion } from "./set-questions";
 import { newFactor, readSetText, setTextOf, type SetText } from "./set-text";
@@ -133,26 +134,15 @@ export function SetEditor({ set, sets, basins, fields, totals }: SetEditorProps)
           </Notice>
         )}
         {theirs && (
-          <Notice
-            tone="error"
-            title="Somebody else saved this set after you opened it."
-            actions={
-              <>
-                <Button size="small" onClick={() => handleTakeTheirs(theirs)}>
-                  Take theirs
-                </Button>
-                <Button
-                  size="small"
-                  disabled={isFaulty}
-                  onClick={() => void handleSave(theirs.version)}
-                >
-                  Save mine over it
-                </Button>
-              </>
-            }
-          >
-            What you typed is still here; theirs is kept too, until you choose.
-          </Notice>
+          <SetConflict
+            theirs={theirs}
+            mine={text}
+            basins={basins}
+            fields={fields}
+            isFaulty={isFaulty}
+            onTakeTheirs={() => handleTakeTheirs(theirs)}
+            onSaveMine={() => void handleSave(theirs.version)}
+          />
         )}
         <SetFields
           text={text}

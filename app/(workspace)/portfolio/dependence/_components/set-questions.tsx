@@ -41,7 +41,7 @@ export function SetQuestions({
         open={question === "makeDefault"}
         onClose={onClose}
         title={`Make “${set.name}” the book’s own?`}
-        description={`Totals will move on every page, export and link that does not name a set of its own.${moves} Means and the figures of single fields stay.`}
+        description={`Totals will move on every page, export and link that does not name a set of its own.${moves} Means stay, beyond sampling. Fields of one reservoir keep their ranges; those of fields with several reservoirs move, because reservoirs follow the set inside a field too.`}
         actions={
           <>
             <Button onClick={onClose}>Cancel</Button>

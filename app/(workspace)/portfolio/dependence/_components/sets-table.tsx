@@ -10,13 +10,8 @@ import { reportingOf } from "@/components/portfolio/reporting";
 import { Figure } from "@/components/ui/figure";
 import { formatDate } from "@/components/ui/format";
 import { Section } from "@/components/ui/section";
-import {
-  ArithmeticRow,
-  ColumnHeading,
-  FigureCell,
-  LedgerTable,
-  MarkCell,
-} from "@/components/ui/table";
+import { ColumnHeading, LedgerTable, MarkCell } from "@/components/ui/table";
+import { VisuallyHidden } from "@/components/ui/text";
 import { liquidOf, type Liquid } from "../../_components/liquid";
 import type { SetTotals } from "../_queries/dependence";
 import { basinRankWords, effectWords, isIndependent, rankWords } from "./rank-words";
@@ -36,11 +31,10 @@ export function SetsTable({ sets, basins, totals, chosenId, inUse }: SetsTablePr
   const known = [...totals.values()].find((set) => set?.totals);
   const reporting = reportingOf(basis, known?.prices ?? null);
   const liquid = liquidOf({ prices: known?.prices ?? null }, reporting);
-  const rows = sets.map((set) => ({ set, range: rangeOf(liquid, totals.get(set.id)) }));
-  const sum = known?.totals && liquid.rangeOf(known.totals.arithmeticSum);
+  const rows = sets.map((set) => ({ set, ...rangesOf(liquid, totals.get(set.id)) }));
   const scale = scaleFor(
-    [...rows.map(({ range }) => range), sum].flatMap((range) =>
-      range ? [range.p90, range.p10] : [],
+    rows.flatMap(({ range, sum }) =>
+      [range, sum].flatMap((each) => (each ? [each.p90, each.p10] : [])),
     ),
     { kind: "linear", fromZero: false },
   );
@@ -49,11 +43,11 @@ export function SetsTable({ sets, basins, totals, chosenId, inUse }: SetsTablePr
   return (
     <Section
       title={findingOf(rows)}
-      note={`Portfolio ${liquid.name}, ${liquid.unit}, ${reporting.words}, under each set. Nothing but the dependence differs.`}
+      note={`Portfolio ${liquid.name}, ${liquid.unit}, ${reporting.words}, under each set. Nothing but the dependence differs. In italics, and as a box behind the mark: the arithmetic sum under that set, as if every field came out low or high together. Each set has its own, because reservoirs inside a field follow the set too.`}
     >
       <LedgerTable
         caption="Dependence sets and what they make of the portfolio"
-        density="executive"
+        density="change"
         framed
         className="stacking-table sets-table"
       >
@@ -72,7 +66,7 @@ export function SetsTable({ sets, basins, totals, chosenId, inUse }: SetsTablePr
           </tr>
         </thead>
         <tbody>
-          {rows.map(({ set, range }) => (
+          {rows.map(({ set, range, sum }) => (
             <tr key={set.id} aria-selected={set.id === chosenId}>
               <th scope="row" className="wrap">
                 <Link href={withBasis(`/portfolio/dependence?set=${set.id}`)} scroll={false}>
@@ -100,6 +94,12 @@ export function SetsTable({ sets, basins, totals, chosenId, inUse }: SetsTablePr
               {(["p90", "p50", "p10"] as const).map((key) => (
                 <td key={key} className="right" data-label={key.toUpperCase()}>
                   <Figure value={range?.[key]} />
+                  {sum && (
+                    <span className="set-sum">
+                      <VisuallyHidden>arithmetic sum </VisuallyHidden>
+                      <Figure value={sum[key]} />
+                    </span>
+                  )}
                 </td>
               ))}
               <MarkCell>
@@ -107,6 +107,8 @@ export function SetsTable({ sets, basins, totals, chosenId, inUse }: SetsTablePr
                   <RangeMark
                     name={`${liquid.name} under ${set.name}`}
                     range={range}
+                    before={sum && { ...sum, mean: null }}
+                    beforeWord="arithmetic sum"
                     unit={liquid.unit}
                     scale={scale}
                   />
@@ -119,39 +121,21 @@ export function SetsTable({ sets, basins, totals, chosenId, inUse }: SetsTablePr
             </tr>
           ))}
         </tbody>
-        {sum && (
-          <tfoot>
-            <ArithmeticRow>
-              <th scope="row" className="wrap">
-                Arithmetic sum
-              </th>
-              <td colSpan={3} className="wrap">
-                as if every field came out low or high together
-              </td>
-              {(["p90", "p50", "p10"] as const).map((key) => (
-                <FigureCell key={key} value={sum[key]} />
-              ))}
-              <MarkCell>
-                <RangeMark
-                  name={`${liquid.name}, arithmetic sum of percentiles`}
-                  range={{ ...sum, mean: null }}
-                  unit={liquid.unit}
-                  scale={scale}
-                  tone="soft"
-                />
-              </MarkCell>
-            </ArithmeticRow>
-          </tfoot>
-        )}
       </LedgerTable>
     </Section>
   );
 }
 
-const rangeOf = (liquid: Liquid, set: SetTotals | undefined) =>
-  set?.totals ? liquid.rangeOf(set.totals.trialByTrial) : null;
+/** The total under a set, and the sum of its fields' percentiles under the same set. */
+const rangesOf = (liquid: Liquid, set: SetTotals | undefined) =>
+  set?.totals
+    ? {
+        range: liquid.rangeOf(set.totals.trialByTrial),
+        sum: liquid.rangeOf(set.totals.arithmeticSum),
+      }
+    : { range: null, sum: null };
 
-type Row = { set: DependenceSetView; range: ReturnType<typeof rangeOf> };
+type Row = { set: DependenceSetView } & ReturnType<typeof rangesOf>;
 
 /** What the book's own set does against no dependence at all, when there is such a set to compare with. */
 function findingOf(rows: readonly Row[]): string {
