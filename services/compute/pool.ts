@@ -21,6 +21,7 @@ import type {
 } from "@/analytics/volumetrics/until-settled";
 import { ServiceBusyError } from "../errors";
 import type { FluidAnswer, FluidQuestion, FluidTask, FluidTaskName } from "../fluids/tasks";
+import { Turns } from "../turns";
 import type {
   AlignmentTask,
   LedgerTask,
@@ -30,6 +31,9 @@ import type {
   SimulationTask,
   SummaryTask,
 } from "./worker";
+
+/** Threads for calculations. There are always two, so that a short one finds a thread while a long one runs. */
+const THREADS = Math.max(2, availableParallelism() - 1);
 
 /** Tasks that may wait for a thread. More would wait longer than anybody does, each with its inputs in memory. */
 export const MAXIMUM_QUEUE = 64;
@@ -43,6 +47,8 @@ const program = path.join(
 
 interface OpenPool {
   threads: Piscina;
+  /** of tasks that take seconds: they never have every thread, so that a preview or a total does not wait for them */
+  long: Turns;
   /** when its program was bundled; one that was bundled again since replaces it, without a restart */
   bundledAt: number;
 }
@@ -50,20 +56,21 @@ interface OpenPool {
 /** One pool a process, kept across hot reloads in development. */
 const holder = globalThis as typeof globalThis & { dewledgerCompute?: OpenPool };
 
-function pool(): Piscina {
+function pool(): OpenPool {
   const bundledAt = fs.statSync(program).mtimeMs;
   if (holder.dewledgerCompute?.bundledAt !== bundledAt) {
     void holder.dewledgerCompute?.threads.close();
     const threads = new Piscina({
       filename: program,
       minThreads: 1,
-      maxThreads: Math.max(1, availableParallelism() - 1),
+      maxThreads: THREADS,
       idleTimeout: 60_000,
       maxQueue: MAXIMUM_QUEUE,
     });
-    holder.dewledgerCompute = { threads, bundledAt };
+    const long = new Turns(THREADS - 1, MAXIMUM_QUEUE);
+    holder.dewledgerCompute = { threads, long, bundledAt };
   }
-  return holder.dewledgerCompute.threads;
+  return holder.dewledgerCompute;
 }
 
 export interface ComputeOptions {
@@ -83,15 +90,22 @@ interface Tasks {
   fluid: FluidTask;
 }
 
-/** @throws {ServiceBusyError} when the queue is full */
+/** What takes seconds rather than tenths of one. */
+const longTasks: ReadonlySet<keyof Tasks> = new Set(["settle", "sensitivity", "change"]);
+
+/** @throws {ServiceBusyError} when the queue of such tasks is full */
 async function run<Value, Name extends keyof Tasks = keyof Tasks>(
   name: Name,
   task: Tasks[Name],
   options: ComputeOptions & { transferList?: (ArrayBuffer | MessagePort)[] },
 ): Promise<Value> {
-  const threads = pool();
-  if (threads.queueSize >= MAXIMUM_QUEUE) throw new ServiceBusyError();
-  return valueOf<Value>(await threads.run(task, { name, ...options }));
+  const work = async () => {
+    const { threads } = pool();
+    if (threads.queueSize >= MAXIMUM_QUEUE) throw new ServiceBusyError();
+    return valueOf<Value>(await threads.run(task, { name, ...options }));
+  };
+  // Long tasks wait in a queue of their own: however many there are, short ones are not turned away for them.
+  return longTasks.has(name) ? pool().long.take(work, options.signal) : work();
 }
 
 /**
@@ -241,6 +255,7 @@ export async function runOnFluid<Name extends FluidTaskName>(
 export async function closePool(): Promise<void> {
   const open = holder.dewledgerCompute;
   holder.dewledgerCompute = undefined;
+  open?.long.dismiss(new Error("The calculation threads were closed."));
   await open?.threads.destroy();
 }
 

@@ -14,8 +14,9 @@ import {
   type PortfolioFieldRow,
   type PortfolioReservoirRow,
 } from "@/models/queries/portfolio";
-import { runAlignment, type SharedFieldPiece } from "../compute/pool";
+import { MAXIMUM_QUEUE, runAlignment, type SharedFieldPiece } from "../compute/pool";
 import { decodeVector } from "../trial-vectors";
+import { Turns } from "../turns";
 import { ByteBoundedCache } from "./cache";
 
 /** A reservoir that is in the figures, with the field it belongs to. */
@@ -45,7 +46,13 @@ const CACHE_BYTES = 320 * 1024 * 1024;
 
 const holder = globalThis as typeof globalThis & {
   dewledgerAlignedFields?: ByteBoundedCache<AlignedField>;
+  dewledgerFieldLoads?: Turns;
 };
+/**
+ * One total at a time reads what it lacks, and keeps its turn until it is done: however many ask for however many sets,
+ * there is at most one book in memory beside the cache.
+ */
+const loads = (holder.dewledgerFieldLoads ??= new Turns(1, MAXIMUM_QUEUE));
 /** One a process, kept across hot reloads in development. */
 const cache = (holder.dewledgerAlignedFields ??= new ByteBoundedCache<AlignedField>(
   CACHE_BYTES,
@@ -77,18 +84,37 @@ interface Waiting {
 }
 
 /**
- * The fields of some reservoirs in the order of totals of so many trials, by field id; what is not in memory is read
- * from the database and put in order on a thread.
+ * Does something with the fields of some reservoirs in the order of totals of so many trials. What is not in memory is
+ * read from the database and put in order on a thread, when nobody else is doing so.
  *
  * @param counted  all counted reservoirs of every field among them
+ * @param work     gets them by field id; what it keeps of them afterwards is not accounted for
+ * @throws {DomainError} with the input `dependence`, as `loadingsOf`
+ * @throws {ServiceBusyError} when too many wait already
  */
-export async function alignFields(
+export async function withAlignedFields<Result>(
   counted: readonly CountedReservoir[],
   trials: number,
   dependence: Dependence,
-): Promise<Map<string, AlignedField>> {
+  work: (fields: ReadonlyMap<string, AlignedField>) => Promise<Result>,
+): Promise<Result> {
+  const requests = requestsOf(counted, trials, dependence);
+  const whole = async () => work(await findOrLoad(requests));
+  // Whoever has to wait takes nothing out of the cache before, so that nothing is held while waiting.
+  return requests.every(({ key }) => cache.has(key)) ? whole() : loads.take(whole);
+}
+
+/** The fields themselves, by id, as `withAlignedFields`: for a few of them. */
+export const alignFields = (
+  counted: readonly CountedReservoir[],
+  trials: number,
+  dependence: Dependence,
+): Promise<ReadonlyMap<string, AlignedField>> =>
+  withAlignedFields(counted, trials, dependence, async (fields) => fields);
+
+async function findOrLoad(requests: readonly Request[]): Promise<Map<string, AlignedField>> {
   const waiting: Waiting[] = [];
-  const wanted = requestsOf(counted, trials, dependence).map((request) => ({
+  const wanted = requests.map((request) => ({
     id: request.field.id,
     aligned: cache.get(
       request.key,

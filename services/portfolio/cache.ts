@@ -17,6 +17,11 @@ export class ByteBoundedCache<Value> {
     return this.bytes;
   }
 
+  /** Is the value of this key kept, or being computed? */
+  has(key: string): boolean {
+    return this.entries.has(key);
+  }
+
   /** The value of this key, computed if it is not kept. A failure is not kept. */
   async get(key: string, compute: () => Promise<Value>): Promise<Value> {
     const known = this.entries.get(key);

@@ -4,6 +4,8 @@
  * with it every percentile and the mean, so a change of deck needs no new roll-up.
  */
 import { createHash } from "node:crypto";
+import { DomainError } from "@/analytics/errors";
+import { checkDependence } from "@/analytics/portfolio/factor-model";
 import type { Ledger } from "@/analytics/portfolio/ledger";
 import { DEFAULT_TRIALS } from "@/analytics/volumetrics/trial-counts";
 import {
@@ -13,7 +15,14 @@ import {
   type PortfolioReservoirRow,
 } from "@/models/queries/portfolio";
 import { runLedger } from "../compute/pool";
-import { alignFields, trialsThatFit, type CountedReservoir } from "./aligned-fields";
+import type { LedgerTask } from "../compute/worker";
+import { ConflictError } from "../errors";
+import {
+  trialsThatFit,
+  withAlignedFields,
+  type AlignedField,
+  type CountedReservoir,
+} from "./aligned-fields";
 import type { PortfolioBasis } from "./basis";
 import { ByteBoundedCache } from "./cache";
 import { findChosenDependence, type ChosenDependence } from "./dependence";
@@ -25,8 +34,8 @@ export interface Book {
   fields: PortfolioFieldRow[];
   reservoirs: PortfolioReservoirRow[];
   /**
-   * Trials that totals are made of: the commonest number among the revisions, halved while a book so large would not
-   * fit in memory. Revisions with another number join by their ranks. 0 when nothing has been computed.
+   * Trials that totals are made of: `DEFAULT_TRIALS`, halved while a book so large would not fit in memory. Revisions
+   * with another number join by their ranks. 0 when nothing has been computed.
    */
   trials: number;
   counted: CountedReservoir[];
@@ -97,11 +106,37 @@ export async function rollUpFields(
 
 async function computeTotals(
   counted: readonly CountedReservoir[],
-  { trials, dependence }: Book,
+  book: Book,
   basis: VolumeBasis,
   withRanks: boolean,
 ): Promise<Ledger> {
-  const aligned = await alignFields(counted, trials, dependence.dependence);
+  const { trials, dependence } = book;
+  try {
+    return await withAlignedFields(counted, trials, dependence.dependence, (aligned) =>
+      addUp(counted, aligned, basis, { trials, risk: basis.risk, withRanks }),
+    );
+  } catch (error) {
+    if (!(error instanceof DomainError) || error.details.input !== "dependence") throw error;
+    throw impossibleSet(book, error);
+  }
+}
+
+/** The set in words: everything that stands on it waits for somebody to change it. */
+function impossibleSet({ fields, dependence }: Book, error: DomainError): ConflictError {
+  const [problem] = checkDependence(dependence.dependence, fields);
+  return new ConflictError(
+    `Totals cannot stand on the dependence set “${dependence.name}”. ${problem?.message ?? error.message} ` +
+      "Change the set, or choose another one.",
+    "impossible_dependence",
+  );
+}
+
+async function addUp(
+  counted: readonly CountedReservoir[],
+  aligned: ReadonlyMap<string, AlignedField>,
+  basis: VolumeBasis,
+  options: LedgerTask["options"],
+): Promise<Ledger> {
   const sourceTrials = new Map<string, number>();
   for (const { field, reservoir } of counted) {
     const known = sourceTrials.get(field.id) ?? Infinity;
@@ -122,11 +157,11 @@ async function computeTotals(
           figures: own.figures,
           interest: interestOf(field, basis),
           chance: field.chanceOfCommerciality,
-          sourceTrials: sourceTrials.get(field.id) ?? trials,
+          sourceTrials: sourceTrials.get(field.id) ?? options.trials,
         },
       ];
     }),
-    { trials, risk: basis.risk, withRanks },
+    options,
   );
 }
 

@@ -1,6 +1,7 @@
 import { execFileSync } from "node:child_process";
+import { availableParallelism } from "node:os";
 import path from "node:path";
-import { afterAll, beforeAll, describe, expect, it } from "vitest";
+import { afterAll, beforeAll, describe, expect, it, vi } from "vitest";
 import { DomainError } from "@/analytics/errors";
 import { loadingsOf } from "@/analytics/portfolio/factor-model";
 import { summariseField } from "@/analytics/portfolio/field-summary";
@@ -176,6 +177,56 @@ describe("runSensitivity and runChange", () => {
   it("bring an impossible input back as the error it was", async () => {
     const inputs = buildInputs({ porosity: { kind: "constant", value: 0.6 } });
     await expect(runSensitivity(inputs, question)).rejects.toThrow(DomainError);
+  });
+});
+
+describe("long tasks", () => {
+  const hopeless = {
+    seed: 3,
+    sampling: "latinHypercube",
+    tolerance: 1e-6,
+    mostTrials: 1_048_576,
+  } as const;
+
+  /** So many of them, more than there are threads, and the means to end them. */
+  function occupy(count = availableParallelism() + 2) {
+    const controllers = Array.from({ length: count }, () => new AbortController());
+    const tasks = controllers.map(({ signal }) =>
+      runUntilSettled(buildInputs(), hopeless, { signal }).catch((error: Error) => error),
+    );
+    return { controllers, tasks };
+  }
+
+  it("leave a thread to short ones, however many wait", { timeout: 60_000 }, async () => {
+    const { controllers, tasks } = occupy();
+    const ended = vi.fn();
+    for (const task of tasks) void task.then(ended);
+    await runSimulation(buildInputs(), { trials: 100, seed: 1 });
+    expect(ended).not.toHaveBeenCalled();
+    for (const controller of controllers) controller.abort();
+    for (const outcome of await Promise.all(tasks)) expect(String(outcome)).toMatch(/abort/i);
+  });
+
+  it("leave the queue when given up, and let the next one in", { timeout: 60_000 }, async () => {
+    const { controllers, tasks } = occupy();
+    const [last] = controllers.slice(-1);
+    last.abort();
+    expect(String(await tasks[tasks.length - 1])).toMatch(/abort/i);
+    for (const controller of controllers) controller.abort();
+    await Promise.all(tasks);
+    const question = { seed: 3, trials: 500, sampling: "latinHypercube" } as const;
+    const inputs = buildInputs();
+    await expect(
+      runSensitivity(inputs, { ...question, result: "salesGasScf", chosen: { from: 0.9, to: 1 } }),
+    ).resolves.toBeDefined();
+  });
+
+  it("refuse what would wait behind a full queue of their own", { timeout: 60_000 }, async () => {
+    const { controllers, tasks } = occupy(MAXIMUM_QUEUE + availableParallelism() + 2);
+    expect(await tasks[tasks.length - 1]).toBeInstanceOf(ServiceBusyError);
+    await expect(runSimulation(buildInputs(), { trials: 100, seed: 1 })).resolves.toBeDefined();
+    for (const controller of controllers) controller.abort();
+    await Promise.all(tasks);
   });
 });
 
