@@ -12,6 +12,7 @@ import { loadDotenv } from "./lib/dotenv.mjs";
 import { Failure } from "./lib/failure.mjs";
 import { waitUntilHealthy } from "./lib/health.mjs";
 import { checkSettings, migrate, seed, settings, typescript } from "./lib/installation.mjs";
+import { keepRunning } from "./lib/keep-running.mjs";
 import { withLock } from "./lib/lock.mjs";
 import { dataPath } from "./lib/paths.mjs";
 import { isPortFree, portTakenFailure } from "./lib/ports.mjs";
@@ -162,7 +163,8 @@ async function startProcesses(group, { env, standIns, host, port, address, worke
     : program("worker");
   const working = Array.from({ length: workers }, (_, index) => {
     const name = index === 0 ? "worker" : `worker-${index + 1}`;
-    return group.start(name, worker, { env: production, onUnexpectedEnd }).ready;
+    return keepRunning(group, name, worker, { env: production, onNeverReady: onUnexpectedEnd })
+      .ready;
   });
   const web = group.start(
     "web",

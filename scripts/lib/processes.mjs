@@ -17,6 +17,7 @@ import { observeRuns } from "./run.mjs";
  */
 
 const LARGEST_LOG = 10_000_000;
+const MOST_LAST_WORDS = 100_000;
 
 /** @typedef {{ pid: number, startTime: string | null }} ProcessRecord */
 /** @typedef {{ command: string, address: string, supervisor: ProcessRecord,
@@ -26,7 +27,7 @@ export class ProcessGroup {
   #recordFile;
   #logFolder;
   #children = [];
-  #stopping = false;
+  #stop = new AbortController();
   /** @type {RunRecord} */
   #record;
 
@@ -58,6 +59,16 @@ export class ProcessGroup {
     });
   }
 
+  /** Aborted as soon as the group stops: from then on nothing is started any more. */
+  get stopped() {
+    return this.#stop.signal;
+  }
+
+  /** Where a process of this group writes what it prints. */
+  logFile(name) {
+    return `${this.#logFolder}/${name}.log`;
+  }
+
   /** Remember that this run started the database cluster, and so has to stop it. */
   ownCluster() {
     this.#record.ownsCluster = true;
@@ -72,11 +83,12 @@ export class ProcessGroup {
    * @param {object} options
    * @param {NodeJS.ProcessEnv} options.env
    * @param {boolean} [options.show] copy what it prints to this terminal too
-   * @param {(name: string, lastWords: string) => void} options.onUnexpectedEnd
-   * @returns {{ ready: Promise<void>, logFile: string }} ready: it said so over its channel
+   * @param {(name: string, end: { how: string, said: string }) => void} options.onUnexpectedEnd
+   *   how: its exit code or signal in words; said: its last words
+   * @returns {{ ready: Promise<void> }} ready: it said so over its channel
    */
   start(name, args, { env, show = false, onUnexpectedEnd }) {
-    const logFile = `${this.#logFolder}/${name}.log`;
+    const logFile = this.logFile(name);
     keepSmall(logFile);
     const began = fs.statSync(logFile, { throwIfNoEntry: false })?.size ?? 0;
     const log = fs.openSync(logFile, "a", 0o600);
@@ -96,25 +108,35 @@ export class ProcessGroup {
     } else {
       fs.closeSync(log);
     }
-    this.#children.push({ name, child });
-    this.#record.children.push({ name, ...identify(child.pid) });
-    this.#write();
     const ready = new Promise((resolve, reject) => {
-      child.once("message", resolve);
-      child.once("exit", () => {
-        const said = fs.readFileSync(logFile).subarray(began).toString("utf8");
+      // Node's own messages, when it watches files, come over the same channel as objects.
+      child.on("message", (message) => {
+        if (typeof message === "string") resolve();
+      });
+      const ended = (how) => {
+        this.#forgetChild(child);
+        const said = wordsSince(logFile, began);
         reject(failureFromOutput(`The ${name} process`, said, `Its log is ${logFile}.`));
-        if (!this.#stopping) onUnexpectedEnd(name, said);
+        if (!this.stopped.aborted) onUnexpectedEnd(name, { how, said });
+      };
+      child.once("exit", (code, signal) => {
+        // A process that it started goes with it.
+        signalGroup(child.pid, "SIGTERM");
+        ended(signal === null ? `exit code ${code}` : `killed by ${signal}`);
+      });
+      child.once("error", (error) => {
+        if (child.pid === undefined) ended(error.message);
       });
     });
     // Whoever waits sees the failure; a process that nobody waits for reports through the callback.
     ready.catch(() => undefined);
-    return { ready, logFile };
+    if (child.pid !== undefined) this.#rememberChild(name, child);
+    return { ready };
   }
 
   /** Stop every process, last started first. */
   async stop() {
-    this.#stopping = true;
+    this.#stop.abort();
     for (const { child } of [...this.#children].reverse()) {
       if (child.exitCode === null && child.signalCode === null) await stopGroup(child.pid);
     }
@@ -124,6 +146,32 @@ export class ProcessGroup {
   forget() {
     observeRuns(() => undefined);
     if (this.#recordFile !== null) fs.rmSync(this.#recordFile, { force: true });
+    // News of an end that comes late does not bring it back.
+    this.#recordFile = null;
+  }
+
+  #rememberChild(name, child) {
+    this.#children.push({ name, child });
+    this.#record.children.push({ name, ...identify(child.pid) });
+    try {
+      this.#write();
+    } catch (error) {
+      // Nothing runs that the next command could not find.
+      child.removeAllListeners("exit");
+      signalGroup(child.pid, "SIGKILL");
+      this.#forgetChild(child);
+      throw error;
+    }
+  }
+
+  #forgetChild(child) {
+    this.#children = this.#children.filter((other) => other.child !== child);
+    this.#record.children = this.#record.children.filter(({ pid }) => pid !== child.pid);
+    try {
+      this.#write();
+    } catch {
+      // On a full disk the record still names it, but a process that is gone is never mistaken.
+    }
   }
 
   #write() {
@@ -174,6 +222,24 @@ function signalGroup(pid, signal) {
     return true;
   } catch {
     return false;
+  }
+}
+
+/** The end of what a log file has gained since it was `began` bytes long. */
+function wordsSince(file, began) {
+  try {
+    const log = fs.openSync(file, "r");
+    try {
+      const { size } = fs.fstatSync(log);
+      const from = Math.max(began, size - MOST_LAST_WORDS);
+      const words = Buffer.alloc(Math.max(0, size - from));
+      fs.readSync(log, words, 0, words.length, from);
+      return words.toString("utf8");
+    } finally {
+      fs.closeSync(log);
+    }
+  } catch {
+    return "";
   }
 }
 

@@ -69,7 +69,7 @@ export async function startTestProduct({ dev, undo }) {
 
   const started = { env: { ...env, NODE_ENV: dev ? "development" : "production" } };
   let failure = null;
-  const onUnexpectedEnd = (name, said) => {
+  const onUnexpectedEnd = (name, { said }) => {
     failure = new Failure(`The ${name} process ended while tests ran.`, "", said);
     process.stderr.write(`${failure.message}\n${said}\n`);
   };
