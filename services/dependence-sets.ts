@@ -4,6 +4,7 @@ import type { Dependence } from "@/analytics/portfolio/dependence-schema";
 import type { DependenceSet } from "@/models/dependence-set";
 import { listAllBasins } from "@/models/queries/basins";
 import {
+  countDependenceSets,
   createDependenceSetRow,
   deleteDependenceSet,
   findDefaultDependenceSet,
@@ -58,7 +59,7 @@ export async function createDependenceSet(
   return inTransaction(async (transaction) => {
     await lockDependenceSets(transaction);
     await assertPossible(values.dependence, transaction);
-    if ((await listAllDependenceSets({ transaction })).length >= MAXIMUM_DEPENDENCE_SETS) {
+    if ((await countDependenceSets({ transaction })) >= MAXIMUM_DEPENDENCE_SETS) {
       throw new ConflictError(
         `A book has at most ${MAXIMUM_DEPENDENCE_SETS} dependence sets. Delete one that nobody uses first.`,
         "too_many",
@@ -203,7 +204,8 @@ async function assertPossible(dependence: Dependence, transaction: Transaction):
 }
 
 /**
- * Refuse to move a field into a basin where a set would ask for more than the field can share.
+ * Refuse to move a field into a basin where a set would ask for more than the field can share. Nobody saves a set until
+ * the transaction ends: a set that was checked against the old basin could not be had in the new one.
  *
  * @throws {InvalidInputError} naming the sets
  */
@@ -211,6 +213,7 @@ export async function assertFieldFitsSets(
   field: { id: string; basinId: string },
   transaction: Transaction,
 ): Promise<void> {
+  await lockDependenceSets(transaction);
   const [sets, fields] = await Promise.all([
     listAllDependenceSets({ transaction }),
     listPlacedFields({ transaction }),

@@ -1,5 +1,8 @@
 import { z } from "zod";
 
+/** Fields that the factors of one set may name, taken together: every total looks each field up in every factor. */
+const MOST_NAMED = 2000;
+
 const rank = z.number().min(0).max(0.99);
 
 /**
@@ -28,7 +31,11 @@ export const dependenceSchema = z
           })
           .strict(),
       )
-      .max(20),
+      .max(20)
+      .refine(
+        (factors) => factors.reduce((sum, { fieldIds }) => sum + fieldIds.length, 0) <= MOST_NAMED,
+        `The factors of a set name at most ${MOST_NAMED.toLocaleString("en-GB")} fields, taken together. Use ranks of basins where whole basins move together.`,
+      ),
   })
   .strict();
 export type Dependence = z.infer<typeof dependenceSchema>;

@@ -46,7 +46,13 @@ export async function listAllDependenceSets(
   });
 }
 
-/** Holds back everybody else who would add a set or choose the default until this transaction ends. */
+export async function countDependenceSets(
+  options: { transaction?: Transaction } = {},
+): Promise<number> {
+  return DependenceSet.count(options);
+}
+
+/** Holds back everybody else who would save a set, or move a field among them, until this transaction ends. */
 export async function lockDependenceSets(transaction: Transaction): Promise<void> {
   await sequelize.query("lock table dependence_sets in share row exclusive mode", { transaction });
 }

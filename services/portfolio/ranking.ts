@@ -10,6 +10,7 @@ import {
 import { rankingColumn, type RankingSortId } from "@/analytics/portfolio/ranking-columns";
 import { leastTrusted } from "@/analytics/recovery/recovery-curve-schema";
 import type { PortfolioFieldRow, PortfolioReservoirRow } from "@/models/queries/portfolio";
+import { InvalidInputError } from "../errors";
 import { authorise, type Actor } from "../policy";
 import { findPrices, type ChosenPrices, type PortfolioBasis } from "./basis";
 import { describeDependence } from "./dependence";
@@ -95,13 +96,24 @@ export async function listRanking(
   };
 }
 
-/** GET /api/v1/fields/together: what some chosen fields come to. */
+/**
+ * GET /api/v1/fields/together: what some chosen fields come to.
+ *
+ * @throws {InvalidInputError} naming fields that are not there; fields without figures are left out
+ */
 export async function totalTogether(
   actor: Actor,
   request: { basis: PortfolioBasis; fieldIds: readonly string[] },
 ) {
   authorise(actor, "portfolio.read");
   const ranked = await loadRanking(request.basis);
+  const known = new Set(ranked.fields.map(({ id }) => id));
+  const unknown = request.fieldIds.filter((id) => !known.has(id));
+  if (unknown.length > 0) {
+    throw new InvalidInputError(
+      unknown.map((id) => ({ pointer: "#/ids", detail: `There is no field ${id}.` })),
+    );
+  }
   const chosen = ranked.fields.filter(({ id }) => request.fieldIds.includes(id));
   return {
     total: await totalOf(ranked, request.basis, chosen),

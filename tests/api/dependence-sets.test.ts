@@ -5,7 +5,7 @@ import type { Ranking, Together } from "@/app/api/v1/fields/ranking-schema";
 import type { Statement } from "@/app/api/v1/portfolio/schema";
 import { as, buildApproved, buildBasin, buildField, ifMatch, made, uniqueName } from "../factories";
 import { visitor } from "../support/api";
-import { queryRows } from "../support/database";
+import { openTransaction, queryRows } from "../support/database";
 
 const PATH = "/api/v1/dependence-sets";
 const NOWHERE = "00000000-0000-4000-8000-000000000000";
@@ -26,6 +26,9 @@ async function buildSet(values: Record<string, unknown> = {}): Promise<Dependenc
 
 const listSets = async () =>
   made(await (await as("engineer")).get<{ items: DependenceSetView[] }>(PATH)).items;
+
+const soon = (word: string) =>
+  new Promise<string>((resolve) => setTimeout(() => resolve(word), 1000));
 
 const propose = async (dependence: Record<string, unknown>) =>
   (await as("planner")).post<Problem>(PATH, { name: uniqueName("Set"), dependence });
@@ -110,6 +113,17 @@ describe("POST /api/v1/dependence-sets", () => {
     expect(body.errors?.[0].detail).toContain("Survey (0.4), Plant (0.4)");
   });
 
+  it("answers 422 for factors that name too many fields taken together", async () => {
+    const fieldIds = Array.from(
+      { length: 401 },
+      (_, i) => `00000000-0000-4000-8000-${String(i).padStart(12, "0")}`,
+    );
+    const factors = ["a", "b", "c", "d", "e"].map((name) => ({ name, rank: 0.1, fieldIds }));
+    const { status, body } = await propose({ ...independent, sharedFactors: factors });
+    expect(status).toBe(422);
+    expect(body.errors?.map(({ detail }) => detail).join()).toContain("at most 2,000 fields");
+  });
+
   it("answers 409 for a name that is taken, in any case", async () => {
     const { name } = await buildSet();
     const planner = await as("planner");
@@ -182,7 +196,62 @@ describe("PATCH and DELETE /api/v1/dependence-sets/:id", () => {
   });
 });
 
+describe("a field that is moved while somebody saves a set", () => {
+  it("waits for the set, and is refused where the set as saved would ask too much of it", async () => {
+    const planner = await as("planner");
+    const [one, other] = [await buildField(), await buildField()];
+    const basin = await buildBasin();
+    await buildField({ basinId: basin.id });
+    const set = await buildSet();
+    const saved = {
+      ...independent,
+      basinRanks: { [basin.id]: 0.8 },
+      sharedFactors: [{ name: "Plant", note: "", rank: 0.5, fieldIds: [one.id, other.id] }],
+    };
+    const [saving, saves] = await openTransaction(
+      "lock table dependence_sets in share row exclusive mode",
+    );
+    await saving("update dependence_sets set dependence = $1 where id = $2", [saved, set.id]);
+    const moving = planner.patch<Problem>(
+      `/api/v1/fields/${one.id}`,
+      { basinId: basin.id },
+      ifMatch(one),
+    );
+    const first = await Promise.race([moving, soon("waits")]);
+    await saves();
+    expect(first).toBe("waits");
+    const { status, body } = await moving;
+    expect(status).toBe(422);
+    expect(body.errors?.[0].detail).toContain(set.name);
+  });
+});
+
 describe("totals on a dependence set", () => {
+  it("answer 409 naming a set that cannot be had, and go on with the others", async () => {
+    const approved = await buildApproved();
+    const planner = await as("planner");
+    const set = await buildSet();
+    const { items } = made(await planner.get<Ranking>("/api/v1/fields?limit=1000"));
+    const { id } = items.find(({ chosen }) =>
+      chosen.some((one) => one.estimateId === approved.id),
+    )!;
+    const impossible = {
+      ...independent,
+      otherBasinsRank: 0.8,
+      sharedFactors: [{ name: "Plant", note: "", rank: 0.5, fieldIds: [id] }],
+    };
+    // Nothing lets such a set in; should one be there all the same, a person has to know which.
+    await queryRows("update dependence_sets set dependence = $1 where id = $2", [
+      impossible,
+      set.id,
+    ]);
+    const answer = await planner.get<Problem>(`/api/v1/portfolio?dependence=${set.id}`);
+    expect(answer).toMatchObject({ status: 409, body: { code: "impossible_dependence" } });
+    expect(answer.body.detail).toContain(set.name);
+    expect((await planner.get("/api/v1/portfolio")).status).toBe(200);
+    await queryRows("delete from dependence_sets where id = $1", [set.id]);
+  });
+
   const get = async <Body>(path: string) => made(await (await as("planner")).get<Body>(path));
 
   it("are wider the more fields move together, with the same mean", async () => {
@@ -224,6 +293,18 @@ describe("totals on a dependence set", () => {
       expect(sum / trialByTrial.condensateRecoverableStb[name]).toBeCloseTo(1, 9);
     }
     expect(contributions.reduce((all, one) => all + one.shareOfVariance, 0)).toBeCloseTo(1, 9);
+  });
+
+  it("answer 422 for a selection with a field that is not there, naming it", async () => {
+    const planner = await as("planner");
+    const { id } = await buildField();
+    const answer = await planner.get<Problem>(`/api/v1/fields/together?ids=${id},${NOWHERE}`);
+    expect(answer).toMatchObject({
+      status: 422,
+      body: { errors: [{ pointer: "#/ids", detail: `There is no field ${NOWHERE}.` }] },
+    });
+    const { total } = await get<Together>(`/api/v1/fields/together?ids=${id}`);
+    expect(total, "a field without figures").toBeNull();
   });
 
   it("answer 404 for a set that is not there, and 400 for a word that is none", async () => {
