@@ -15,6 +15,8 @@ export interface BridgeProps {
   steps: readonly BridgeStep[];
   to: { label: string; value: number };
   height?: number;
+  /** bars under each other at every width, for labels too long to stand under a bar */
+  horizontal?: boolean;
 }
 
 interface Bar {
@@ -68,11 +70,15 @@ function bridgeScale(bars: readonly Bar[]): Scale {
   return { kind: "linear", domain: [ticks[0].value, high + spread * 0.12] };
 }
 
+/** Where a cut axis starts, wherever the bars stand: "axis starts at 5,000, not at 0". */
+const startWords = (scale: Scale) => `axis starts at ${ticksOf(scale, 5)[0].label}, not at 0`;
+
 /** What moved a figure from one state to the next. A fall is a hollow bar and a minus sign, never red. */
 export function Bridge(props: BridgeProps) {
-  const { quantity, height = 250 } = props;
+  const { quantity, height = 250, horizontal = false } = props;
   const bars = barsOf(props);
   const scale = bridgeScale(bars);
+  if (horizontal) return <BridgeList bars={bars} scale={scale} quantity={quantity} />;
   const start = scale.domain[0];
   const yOf = (value: number) => 100 - positionOn(scale, value);
   const slot = 100 / bars.length;
@@ -85,9 +91,7 @@ export function Bridge(props: BridgeProps) {
         <Plot
           label={`Bridge of ${quantity}: ${spoken}`}
           height={height}
-          yTitle={
-            start === 0 ? quantity : `${quantity} (axis starts at ${ticksOf(scale, 5)[0].label})`
-          }
+          yTitle={start === 0 ? quantity : `${quantity} (${startWords(scale)})`}
           yTicks={ticksOf(scale, 5).map((tick) => ({ ...tick, position: 100 - tick.position }))}
           xTicks={bars.map(({ label }, index) => ({
             value: index,
@@ -149,9 +153,12 @@ export function BridgeList({
   scale: Scale;
   quantity: string;
 }) {
+  const start = scale.domain[0];
   return (
     <table className="ledger-table bridge-list">
-      <caption className="sr-only">{quantity}</caption>
+      <caption className={start === 0 ? "sr-only" : "bridge-caption"}>
+        {start === 0 ? quantity : `${quantity}. ${startWords(scale)}.`}
+      </caption>
       <tbody>
         {bars.map((bar) => {
           const left = bar.kind === "end" ? 0 : positionOn(scale, bar.low);

@@ -42,16 +42,21 @@ export function otherDifferences(left: EstimateInputs, right: EstimateInputs): s
   return `${capital(listWords(parts))} ${parts.length === 1 && !parts[0].endsWith("s") ? "differs" : "differ"} too.`;
 }
 
-/** Longer does not stand under a bar. */
-const LONGEST = 22;
-
-/** What tells two labels apart: "Larkhaven, Main sand, r3" and "…, r5" are "r3" and "r5". */
-export function shortLabels(left: string, right: string): [string, string] {
+/** What tells two labels apart, however long it is: "Larkhaven, Main sand, r3" and "…, r5" are "r3" and "r5". */
+export function distinctLabels(left: string, right: string): [string, string] {
   const [a, b] = [left, right].map((label) => label.split(", "));
   const most = Math.min(a.length, b.length) - 1;
   let shared = 0;
   while (shared < most && a[shared] === b[shared]) shared += 1;
-  const short = [a, b].map((parts) => parts.slice(shared).join(", "));
-  const fits = short[0] !== short[1] && short.every((text) => text.length <= LONGEST);
-  return fits ? [short[0], short[1]] : ["Left", "Right"];
+  const own = [a, b].map((parts) => parts.slice(shared).join(", "));
+  return own[0] === own[1] ? ["Left", "Right"] : [own[0], own[1]];
+}
+
+/** Longer does not stand beside a curve. */
+const LONGEST = 22;
+
+/** As `distinctLabels`, for where there is little room. */
+export function shortLabels(left: string, right: string): [string, string] {
+  const labels = distinctLabels(left, right);
+  return labels.every((text) => text.length <= LONGEST) ? labels : ["Left", "Right"];
 }

@@ -125,8 +125,7 @@ export function remarksOn(explanation: ChangeExplanation, storedTrials: number):
       (change.kind === "together" && change.changes.some(({ kind }) => kind === "sampling")),
   );
   const sentences = [
-    idle.length > 0 &&
-      `No effect on it: ${listWords(idle.map(lowerFirst))}.`,
+    idle.length > 0 && `No effect on it: ${listWords(idle.map(lowerFirst))}.`,
     isSampled &&
       "Sampling is another seed, method or number of trials: what it moves is sampling error.",
     explanation.trials < storedTrials &&

@@ -60,7 +60,8 @@ function DifferenceRow({
   difference: InputDifference;
   warning: Warning | undefined;
 }) {
-  const { name, now, before, medianChange, shapeChanged, isSame, source, reason } = difference;
+  const { name, now, before, medianChange, shapeChanged, isSame, typed, source, reason } =
+    difference;
   const about = driverCatalogue[name];
   const scale = scaleFor([now.p90, now.p10, before?.p90, before?.p10], {
     kind: "linear",
@@ -78,13 +79,21 @@ function DifferenceRow({
       <th scope="row" className={isSame || difference.isWorkedOut ? "wrap plain soft" : "wrap"}>
         {about.label} {about.unit && <Unit>{about.unit}</Unit>}
         <small className="block font-normal text-ink-soft">
-          {warning ? (
-            <span className="text-warning-ink">
-              <Icon name="warning" /> {warning.message}
+          {warning && (
+            <span className="flex items-baseline gap-1.5 text-warning-ink">
+              <span className="shrink-0">
+                <Icon name="warning" />
+              </span>
+              <span>{warning.message}</span>
             </span>
-          ) : (
-            !isSame && source
           )}
+          {typed?.before && <span className="block">Was {typed.before}.</span>}
+          {typed && (
+            <span className="block">
+              {typed.before ? "Now" : "Typed:"} {typed.now}.
+            </span>
+          )}
+          {!isSame && source && <span className="block">{source}</span>}
           {!isSame && reason && <span className="said">{reason}</span>}
         </small>
       </th>

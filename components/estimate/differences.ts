@@ -13,6 +13,7 @@ import {
   type DriverName,
   type SimulationSummary,
 } from "@/analytics/volumetrics/results-schema";
+import { distributionWords, isReadOffRange } from "./difference-words";
 import { isWorkedOut } from "./estimate-text";
 import { listedInputs, planInputsOf } from "./input-catalogue";
 import {
@@ -37,6 +38,8 @@ export interface InputDifference {
   medianChange: number | null;
   /** the shape changed, whatever the percentiles did */
   shapeChanged: boolean;
+  /** as it was typed, in words; `null` where P90, P50 and P10 say it all */
+  typed: { before: string | null; now: string } | null;
   isSame: boolean;
   source: string;
   /** why this range, in the expert's words; empty when nobody said */
@@ -61,13 +64,22 @@ export function inputDifferences(
     const previous = isListed ? (sampledInput(before, name)?.distribution ?? null) : null;
     const range = compileDistribution(current).range;
     const beforeRange = previous && compileDistribution(previous).range;
+    const isSame = previous !== null && isSameDistribution(current, previous);
     return {
       name,
       before: beforeRange,
       now: range,
       medianChange: beforeRange && beforeRange.p50 !== 0 ? range.p50 / beforeRange.p50 - 1 : null,
       shapeChanged: previous !== null && previous.kind !== current.kind,
-      isSame: previous !== null && isSameDistribution(current, previous),
+      typed:
+        isReadOffRange(current) && (previous === null || previous.kind === current.kind)
+          ? null
+          : {
+              now: distributionWords(current, name, now),
+              before:
+                before && previous && !isSame ? distributionWords(previous, name, before) : null,
+            },
+      isSame,
       source,
       reason: reason ?? "",
       isWorkedOut: false,
@@ -118,6 +130,7 @@ export function recoveryDifferences(
       before: previous,
       medianChange: previous && previous.p50 !== 0 ? range.p50 / previous.p50 - 1 : null,
       shapeChanged: false,
+      typed: null,
       isSame: previous !== null && sortedJson(previous) === sortedJson(range),
       source: now.inputs.recoveryPlan ? "Worked out by the recovery plan" : "Typed by hand",
       reason: "",

@@ -7,6 +7,7 @@ import {
   changeLabel,
   explainedSteps,
   methodWords,
+  remarksOn,
 } from "@/components/drivers/change-words";
 
 const input = (name: "netThicknessFt" | "porosity" | "areaAcres") => ({
@@ -67,6 +68,27 @@ describe("changeExplained", () => {
   });
 });
 
+describe("remarksOn", () => {
+  it("names what has no effect, says what sampling is, and that the runs have more trials", () => {
+    const changes = [
+      ...explanation.changes,
+      { change: { kind: "sampling" as const }, effect: 2e4, standardError: null },
+      { change: input("areaAcres"), effect: 0, standardError: null },
+    ];
+    const all = { ...explanation, changes };
+    expect(explainedSteps(all).map(({ label }) => label)).toEqual([
+      "Net thickness",
+      "Porosity",
+      "Sampling",
+    ]);
+    expect(remarksOn(all, 262_144)).toBe(
+      " No effect on it: area. Sampling is another seed, method or number of trials: what it moves is sampling error." +
+        " The runs have up to 262,144 trials; with fewer, both ends stand a little off the stored P50.",
+    );
+    expect(remarksOn(explanation, 10_000)).toBe("");
+  });
+});
+
 describe("explainedSteps", () => {
   it("makes one step of the smallest, so that all still add up", () => {
     const changes = Array.from({ length: 10 }, (_, index) => ({
@@ -107,9 +129,12 @@ describe("ChangeExplanation", () => {
         name="Condensate to the tank"
         factor={1e-6}
         unit="MMSTB"
+        storedTrials={10_000}
         fileName="x"
       />,
     );
-    expect(html).toContain("r4 30.0, Net thickness +6.0, Porosity +1.0, r5 37.0");
+    expect(html.replace(/<[^>]+>/g, " ").replace(/\s+/g, " ")).toContain(
+      "r4 30.0 Net thickness +6.0 Porosity +1.0 r5 37.0",
+    );
   });
 });

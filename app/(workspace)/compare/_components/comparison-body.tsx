@@ -8,12 +8,14 @@ import { ChartFrame } from "@/components/charts/chart-frame";
 import { Exceedance } from "@/components/charts/exceedance";
 import {
   comparisonFinding,
+  distinctLabels,
   inputsFinding,
   otherDifferences,
   shortLabels,
 } from "@/components/compare/comparison-words";
 import { ChangeExplanation } from "@/components/drivers/change-explanation";
 import { resultLabels, resultOptions } from "@/components/drivers/driver-names";
+import { CorrelationDifferences } from "@/components/estimate/difference-correlations";
 import { DifferenceTable } from "@/components/estimate/difference-table";
 import { inputDifferences } from "@/components/estimate/differences";
 import { PlanDifferenceTable } from "@/components/estimate/plan-difference-table";
@@ -61,6 +63,7 @@ export function ComparisonBody({
   };
   const name = resultLabels[result];
   const names = shortLabels(left.label, right.label);
+  const fullNames = distinctLabels(left.label, right.label);
   const finding = comparisonFinding(
     { label: left.label, range: ranges.left },
     { label: right.label, range: ranges.right },
@@ -118,12 +121,13 @@ export function ComparisonBody({
           {comparison.explanation ? (
             <ChangeExplanation
               explanation={comparison.explanation}
-              from={names[0]}
-              to={names[1]}
+              from={fullNames[0]}
+              to={fullNames[1]}
               name={name}
               factor={factor}
               unit={unit}
               fileName={`${fileName}-${result}`}
+              storedTrials={Math.max(left.trials, right.trials)}
             />
           ) : (
             <Section title="What explains the difference">
@@ -165,6 +169,10 @@ function InputSection({ left, right }: { left: Side; right: Side }) {
       <PlanDifferenceTable
         now={right.inputs.recoveryPlan}
         before={{ plan: left.inputs.recoveryPlan, label: left.label }}
+      />
+      <CorrelationDifferences
+        now={{ pairs: right.inputs.correlations, label: right.label }}
+        before={{ pairs: left.inputs.correlations, label: left.label }}
       />
     </Section>
   );

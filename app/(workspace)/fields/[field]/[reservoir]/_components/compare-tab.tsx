@@ -8,6 +8,7 @@ import {
   isSameFluid,
   recoveryDifferences,
 } from "@/components/estimate/differences";
+import { CorrelationDifferences } from "@/components/estimate/difference-correlations";
 import { DifferenceTable } from "@/components/estimate/difference-table";
 import { ExceedanceSection } from "@/components/estimate/exceedance-section";
 import { FindingList } from "@/components/estimate/finding-list";
@@ -64,6 +65,12 @@ export function CompareTab() {
             now={inputs.recoveryPlan}
             before={before && { plan: before.inputs.recoveryPlan, label: `r${before.revision}` }}
           />
+          {before && (
+            <CorrelationDifferences
+              now={{ pairs: inputs.correlations, label }}
+              before={{ pairs: before.inputs.correlations, label: `r${before.revision}` }}
+            />
+          )}
         </Section>
         {!results.summary && draft?.reading.estimate && (
           <Skeleton lines={7} label="Working the results out" />

@@ -61,6 +61,7 @@ export function ExplainedChange() {
             factor={resultFactor(result, resultBasis)}
             unit={resultUnit(result, resultBasis)}
             fileName={`${place.field}-${place.reservoir}-${result}`}
+            storedTrials={Math.max(before.trials, shown.trials)}
           />
         </div>
       ) : (
