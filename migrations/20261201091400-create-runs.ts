@@ -1,9 +1,9 @@
 import type { QueryInterface } from "sequelize";
 
 /**
- * Long work: a run and its items, one an estimate. The lease on an item (worker, attempts, leased_until) says whose it
- * is; a worker that lost it stores nothing. Items have no foreign key to their estimate, because a draft may be
- * discarded and its run still tells what became of it.
+ * Long work: a run and its items, one an estimate. Each claim of an item has an id of its own, which stands for as long
+ * as the item is the claimant's; a worker whose claim is gone stores nothing. Items have no foreign key to their
+ * estimate, because a draft may be discarded and its run still tells what became of it.
  *
  * What imports kept of their runs in their reports becomes runs as well; those that were under way go on.
  */
@@ -43,6 +43,7 @@ export async function up({ context }: { context: QueryInterface }): Promise<void
         check (state in ('waiting', 'running', 'done', 'failed', 'passedOver')),
       attempts integer not null default 0 check (attempts >= 0),
       worker text,
+      claim_id uuid,
       leased_until timestamptz,
       progress jsonb,
       outcome jsonb,
@@ -52,6 +53,7 @@ export async function up({ context }: { context: QueryInterface }): Promise<void
       constraint run_items_estimate_once unique (run_id, estimate_id),
       constraint run_items_leased_whole check (
         (state = 'running') = (leased_until is not null)
+        and (state = 'running') = (claim_id is not null)
         and (state <> 'running' or worker is not null)),
       constraint run_items_finished_whole check (
         (state in ('done', 'failed', 'passedOver')) = (finished_at is not null)),
@@ -61,7 +63,7 @@ export async function up({ context }: { context: QueryInterface }): Promise<void
     );
     create index run_items_open on run_items (run_id, position)
       where state in ('waiting', 'running');
-    create index run_items_leased on run_items (worker) where state = 'running';
+    create unique index run_items_claimed on run_items (claim_id) where claim_id is not null;
 
     insert into runs (kind, state, title, import_id, created_by, created_at, updated_at, finished_at)
       select 'import', case state when 'applying' then 'waiting' else 'finished' end,

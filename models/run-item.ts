@@ -27,14 +27,14 @@ export interface RunOutcome {
   before: Range | null;
   after: Range;
   standardErrors: Range;
-  /** largest change of P90, P50 or P10 in standard errors of the two; null without a before */
+  /** largest change of P90, P50 or P10, over the larger standard error of the two; null without a before */
   movedStandardErrors: number | null;
   settled: boolean | null;
 }
 
 /**
- * One estimate of a run. While it is computed it belongs to the worker named in it until `leasedUntil`; worker and
- * attempt together are the token by which that worker may store its result.
+ * One estimate of a run. While it is computed it belongs to the worker named in it until `leasedUntil`; `claimId`, new
+ * with every claim and gone with its end, is the token by which that worker may store its result.
  */
 export class RunItem extends Model<InferAttributes<RunItem>, InferCreationAttributes<RunItem>> {
   declare runId: string;
@@ -46,6 +46,7 @@ export class RunItem extends Model<InferAttributes<RunItem>, InferCreationAttrib
   declare state: CreationOptional<RunItemState>;
   declare attempts: CreationOptional<number>;
   declare worker: CreationOptional<string | null>;
+  declare claimId: CreationOptional<string | null>;
   declare leasedUntil: CreationOptional<Date | null>;
   declare progress: CreationOptional<RunStep[] | null>;
   declare outcome: CreationOptional<RunOutcome | null>;
@@ -66,6 +67,7 @@ RunItem.init(
     state: { type: DataTypes.TEXT, allowNull: false, defaultValue: "waiting" },
     attempts: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
     worker: DataTypes.TEXT,
+    claimId: DataTypes.UUID,
     leasedUntil: DataTypes.DATE,
     progress: DataTypes.JSONB,
     outcome: DataTypes.JSONB,

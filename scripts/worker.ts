@@ -31,8 +31,8 @@ const lanes = Math.max(2, availableParallelism());
 const work = await workOn(handlersOf(runs), { "work-on-run": lanes });
 runs.start();
 log.info({ worker: runs.name, lanes }, "worker ready");
-// Tells the program that started this one, if it listens.
-process.send?.("ready");
+// Tells the program that started this one, if it listens, that it is ready and what it is called.
+process.send?.(runs.name);
 
 let stopping = false;
 // "disconnect": the program that started this one is gone, killed perhaps.

@@ -9,22 +9,27 @@ import type { RunKind } from "../vocabulary";
  * matter.
  */
 
-/** Whose item it is: nobody else may end it while worker and attempt are these. */
+/**
+ * Whose item it is: nobody else may end it while this claim stands. Every claim has an id that was never used before,
+ * so a token that was lost never becomes valid again, whoever takes the item next and however often it was tried.
+ */
 export interface LeaseToken {
   runId: string;
   position: number;
-  worker: string;
-  attempts: number;
+  claimId: string;
 }
 
 export interface ClaimedItem extends LeaseToken {
+  /** with this one */
+  attempts: number;
   estimateId: string;
   estimateVersion: number;
 }
 
 /**
  * Take the next item that waits, or whose worker has not been heard of since its lease ended. Workers pass over each
- * other's choices instead of queueing behind them.
+ * other's choices instead of queueing behind them. A claim whose answer is lost on the way is renewed by nobody, so its
+ * item is free again when the lease ends.
  */
 export async function claimRunItem(
   runId: string,
@@ -40,12 +45,13 @@ export async function claimRunItem(
         for update skip locked
       )
       update run_items
-      set state = 'running', worker = :worker, attempts = attempts + 1, progress = null,
+      set state = 'running', worker = :worker, claim_id = gen_random_uuid(),
+        attempts = attempts + 1, progress = null,
         leased_until = now() + make_interval(secs => :leaseSeconds)
       from next
       where run_items.run_id = next.run_id and run_items.position = next.position
-      returning run_items.run_id as "runId", run_items.position, worker, attempts,
-        estimate_id as "estimateId", estimate_version as "estimateVersion"`,
+      returning run_items.run_id as "runId", run_items.position,
+        claim_id as "claimId", attempts, estimate_id as "estimateId", estimate_version as "estimateVersion"`,
     {
       replacements: { runId, worker, leaseSeconds, mostAttempts },
       type: QueryTypes.SELECT,
@@ -54,54 +60,52 @@ export async function claimRunItem(
   return claimed ?? null;
 }
 
-/** Renew every lease of a worker. @returns the tokens that it still holds */
-export async function renewLeases(worker: string, leaseSeconds: number): Promise<LeaseToken[]> {
-  return sequelize.query<LeaseToken>(
+/** Renew the leases of these claims, and of no other. @returns the claims that still stand */
+export async function renewLeases(
+  claimIds: readonly string[],
+  leaseSeconds: number,
+): Promise<string[]> {
+  if (claimIds.length === 0) return [];
+  const renewed = await sequelize.query<{ claimId: string }>(
     `update run_items set leased_until = now() + make_interval(secs => :leaseSeconds)
-      where worker = :worker and state = 'running'
-      returning run_id as "runId", position, worker, attempts`,
-    { replacements: { worker, leaseSeconds }, type: QueryTypes.SELECT },
+      where claim_id in (:claimIds)
+      returning claim_id as "claimId"`,
+    { replacements: { claimIds: [...claimIds], leaseSeconds }, type: QueryTypes.SELECT },
   );
+  return renewed.map(({ claimId }) => claimId);
 }
 
 /** The item, held until the transaction ends, or null when it is no longer the token's. */
 export async function lockLeasedItem(
-  { runId, position, worker, attempts }: LeaseToken,
+  { runId, position, claimId }: LeaseToken,
   transaction: Transaction,
 ): Promise<RunItem | null> {
-  return RunItem.findOne({
-    where: { runId, position, worker, attempts, state: "running" },
-    transaction,
-    lock: true,
-  });
+  return RunItem.findOne({ where: { runId, position, claimId }, transaction, lock: true });
 }
 
 /** Let others have the item at once. An attempt that was broken off from outside is not counted. */
 export async function giveItemBack(token: LeaseToken, { counted }: { counted: boolean }) {
   await sequelize.query(
     `update run_items
-      set state = 'waiting', leased_until = null, progress = null,
+      set state = 'waiting', claim_id = null, leased_until = null, progress = null,
         attempts = attempts - case when :counted then 0 else 1 end
-      where run_id = :runId and position = :position and worker = :worker
-        and attempts = :attempts and state = 'running'`,
+      where run_id = :runId and position = :position and claim_id = :claimId`,
     { replacements: { ...token, counted } },
   );
 }
 
 /** Write how far an item is, if it is still the token's. */
 export async function saveItemProgress(token: LeaseToken, steps: RunStep[]): Promise<void> {
-  const { runId, position, worker, attempts } = token;
-  await RunItem.update(
-    { progress: steps },
-    { where: { runId, position, worker, attempts, state: "running" } },
-  );
+  const { runId, position, claimId } = token;
+  await RunItem.update({ progress: steps }, { where: { runId, position, claimId } });
 }
 
 /** Fail the items that were tried often enough and whose worker is gone. @returns how many */
 export async function failExhaustedItems(mostAttempts: number, reason: string): Promise<number> {
   const failed = await sequelize.query(
     `update run_items
-      set state = 'failed', leased_until = null, reason = :reason, finished_at = now()
+      set state = 'failed', claim_id = null, leased_until = null, reason = :reason,
+        finished_at = now()
       where attempts >= :mostAttempts and state = 'running' and leased_until < now()
       returning position`,
     { replacements: { mostAttempts, reason }, type: QueryTypes.SELECT },

@@ -12,7 +12,10 @@ const creator = { model: User, as: "creator", attributes: ["id", "name"] };
 
 const unfinished: RunState[] = ["waiting", "running"];
 
-/** Beginning and ending runs is one at a time, so that two people do not begin the same; goes with the transaction. */
+/**
+ * Recalculations, runs until settled and retries are begun one at a time, until the transaction ends, so that two people
+ * do not begin the same. Imports begin theirs without this, and ending a run locks its row.
+ */
 export async function lockRuns(transaction: Transaction): Promise<void> {
   await sequelize.query("select pg_advisory_xact_lock(hashtext('dewledger.runs'))", {
     type: QueryTypes.SELECT,
@@ -71,14 +74,13 @@ export async function findUnfinishedRecalculation(
   });
 }
 
-/** An unfinished run of a kind that still has this estimate before it. */
-export async function findUnfinishedRunOfEstimate(
-  kind: RunKind,
+/** The unfinished run of an estimate until it is settled. */
+export async function findUnfinishedSettling(
   estimateId: string,
   transaction: Transaction,
 ): Promise<Run | null> {
   return Run.findOne({
-    where: { kind, state: { [Op.in]: unfinished } },
+    where: { kind: "untilSettled" satisfies RunKind, state: { [Op.in]: unfinished } },
     include: [{ model: RunItem, as: "items", where: { estimateId }, attributes: [] }],
     transaction,
   });
@@ -116,11 +118,12 @@ export async function addRunItems(
 /** How the items of a run stand. */
 export interface RunTally {
   counts: Record<RunItemState, number>;
-  /** names of the workers that have had an item of it */
+  /** names of the workers that have had an item of it, in the order of their first items */
   workers: string[];
-  /** items that ended by being computed, or failing, within the last minute */
-  recentlyEnded: number;
+  /** items that ended by being computed, or failing, since work on the run last began: after a retry, since that */
   ended: number;
+  /** of these, within the last minute */
+  recentlyEnded: number;
   lastEndedAt: Date | null;
   /** whether a worker holds an item at this moment */
   held: boolean;
@@ -130,13 +133,13 @@ interface TallyRow {
   runId: string;
   state: RunItemState;
   count: number;
-  workers: string[] | null;
+  ended: number;
   recent: number;
   lastEndedAt: Date | null;
   held: boolean;
 }
 
-/** The tallies of these runs, by their ids, in one grouped query. */
+/** The tallies of these runs, by their ids, in two grouped queries. */
 export async function tallyRuns(
   runIds: readonly string[],
   transaction?: Transaction,
@@ -144,25 +147,43 @@ export async function tallyRuns(
   const tallies = new Map<string, RunTally>(runIds.map((id) => [id, emptyTally()]));
   if (runIds.length === 0) return tallies;
   const rows = await sequelize.query<TallyRow>(
-    `select run_id as "runId", state, count(*)::integer as count,
-        array_agg(distinct worker) filter (where worker is not null) as workers,
-        count(*) filter (where finished_at > now() - interval '60 seconds')::integer as recent,
-        max(finished_at) as "lastEndedAt",
+    `select run_id as "runId", run_items.state, count(*)::integer as count,
+        (count(*) filter (where run_items.finished_at >= runs.updated_at))::integer as ended,
+        (count(*) filter (where run_items.finished_at >=
+          greatest(runs.updated_at, now() - interval '60 seconds')))::integer as recent,
+        max(run_items.finished_at) as "lastEndedAt",
         coalesce(bool_or(leased_until > now()), false) as held
-      from run_items where run_id in (:runIds)
-      group by run_id, state`,
+      from run_items join runs on runs.id = run_items.run_id
+      where run_id in (:runIds)
+      group by run_id, run_items.state`,
     { replacements: { runIds: [...runIds] }, type: QueryTypes.SELECT, transaction },
   );
   for (const row of rows) addToTally(tallies.get(row.runId) ?? emptyTally(), row);
+  for (const { runId, worker } of await listWorkersOfRuns(runIds, transaction)) {
+    tallies.get(runId)?.workers.push(worker);
+  }
   return tallies;
+}
+
+/** Who has had items of these runs, in the order of their first items. */
+export async function listWorkersOfRuns(
+  runIds: readonly string[],
+  transaction?: Transaction,
+): Promise<{ runId: string; worker: string }[]> {
+  return sequelize.query<{ runId: string; worker: string }>(
+    `select run_id as "runId", worker from run_items
+      where run_id in (:runIds) and worker is not null
+      group by run_id, worker order by run_id, min(position)`,
+    { replacements: { runIds: [...runIds] }, type: QueryTypes.SELECT, transaction },
+  );
 }
 
 function emptyTally(): RunTally {
   return {
     counts: { waiting: 0, running: 0, done: 0, failed: 0, passedOver: 0 },
     workers: [],
-    recentlyEnded: 0,
     ended: 0,
+    recentlyEnded: 0,
     lastEndedAt: null,
     held: false,
   };
@@ -170,11 +191,10 @@ function emptyTally(): RunTally {
 
 function addToTally(tally: RunTally, row: TallyRow): void {
   tally.counts[row.state] = row.count;
-  tally.workers = [...new Set([...tally.workers, ...(row.workers ?? [])])].sort();
   tally.held ||= row.held;
   if (row.state === "done" || row.state === "failed") {
+    tally.ended += row.ended;
     tally.recentlyEnded += row.recent;
-    tally.ended += row.count;
   }
   const last = row.lastEndedAt;
   if (last && (!tally.lastEndedAt || last > tally.lastEndedAt)) tally.lastEndedAt = last;
@@ -231,7 +251,7 @@ export async function passOverOpenItems(
   await sequelize.query(
     `update run_items
       set reason = case state when 'running' then :running else :waiting end,
-        state = 'passedOver', leased_until = null, finished_at = :at
+        state = 'passedOver', claim_id = null, leased_until = null, finished_at = :at
       where run_id = :runId and state in ('waiting', 'running')`,
     { replacements: { runId, ...reasons, at }, transaction },
   );

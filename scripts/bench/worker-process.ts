@@ -1,7 +1,6 @@
 import { spawn } from "node:child_process";
 import { once } from "node:events";
 import { openSync } from "node:fs";
-import { hostname } from "node:os";
 import process from "node:process";
 
 export interface WorkerProcess {
@@ -20,8 +19,8 @@ export async function startWorker(env: NodeJS.ProcessEnv, logFile: string): Prom
   const log = openSync(logFile, "a");
   const child = spawn(process.execPath, args, { env, stdio: ["ignore", log, log, "ipc"] });
   const ended = once(child, "exit");
-  await Promise.race([
-    once(child, "message"),
+  const [name] = await Promise.race([
+    once(child, "message") as Promise<[string]>,
     ended.then(([code]) => {
       throw new Error(`the worker ended with ${code}; see ${logFile}`);
     }),
@@ -32,7 +31,7 @@ export async function startWorker(env: NodeJS.ProcessEnv, logFile: string): Prom
     await ended;
   };
   return {
-    name: `${hostname()}:${child.pid}`,
+    name,
     kill: () => end("SIGKILL"),
     stop: () => end("SIGTERM"),
     hasEnded: () => child.exitCode !== null || child.signalCode !== null,

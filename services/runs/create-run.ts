@@ -4,7 +4,7 @@ import {
   addRunItems,
   createRunRow,
   findUnfinishedRecalculation,
-  findUnfinishedRunOfEstimate,
+  findUnfinishedSettling,
   lockRuns,
 } from "@/models/queries/runs";
 import type { Run } from "@/models/run";
@@ -84,7 +84,7 @@ async function createUntilSettled(
   const estimate = await findEstimateWithPeople(estimateId, { transaction });
   if (!estimate?.reservoir?.field) throw new NotFoundError("estimate");
   assertPossible("estimate.run", estimate);
-  const existing = await findUnfinishedRunOfEstimate("untilSettled", estimateId, transaction);
+  const existing = await findUnfinishedSettling(estimateId, transaction);
   if (existing) {
     throw new ConflictError(
       "This estimate is being run until it is settled already.",

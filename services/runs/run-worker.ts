@@ -1,3 +1,4 @@
+import { randomBytes } from "node:crypto";
 import os from "node:os";
 import process from "node:process";
 import { setTimeout as sleep } from "node:timers/promises";
@@ -41,10 +42,9 @@ const PROGRESS_MS = 500;
 
 const exhausted =
   "The worker that computed this ended three times before it was done. It may need more memory than there is: try fewer trials.";
-const unforeseen = "Something went wrong here that is not the estimate's fault, three times. ";
 
 interface Held {
-  token: LeaseToken;
+  claimId: string;
   controller: AbortController;
 }
 
@@ -55,10 +55,19 @@ class WorkerStops extends Error {
   override readonly name = "WorkerStops";
 }
 
-/** Host and process: what a person needs to find it. */
+/**
+ * Host and process, what a person needs to find it, and a random end: a container that is started again has the same
+ * host and process, and is another worker.
+ */
 export function nameOfWorker(): string {
-  return `${os.hostname()}:${process.pid}`;
+  return `${os.hostname()}:${process.pid}:${randomBytes(3).toString("hex")}`;
 }
+
+/** What a person who has the sentence finds the item by in the workers' log. */
+const referenceOf = ({ runId, position }: LeaseToken) => `${runId.slice(0, 8)}-${position}`;
+
+const unforeseen = (token: LeaseToken) =>
+  `Something unforeseen went wrong three times. An administrator finds it in the workers’ log as item ${referenceOf(token)}.`;
 
 /**
  * This process's part in runs. Workers know nothing of each other: each takes items under a lease and stores a result
@@ -134,24 +143,22 @@ export class RunWorker {
   }
 
   private async treat(run: Run, item: ClaimedItem): Promise<void> {
-    const { runId, position, worker, attempts } = item;
-    const token = { runId, position, worker, attempts };
-    const held: Held = { token, controller: new AbortController() };
+    const held: Held = { claimId: item.claimId, controller: new AbortController() };
     const { signal } = held.controller;
     if (this.stopping.signal.aborted) held.controller.abort(this.stopping.signal.reason);
     this.held.add(held);
     const progress = new LatestOnly<RunStep[]>(PROGRESS_MS, (steps) =>
-      saveItemProgress(token, steps),
+      saveItemProgress(item, steps),
     );
     try {
       signal.throwIfAborted();
       const onSteps = (steps: RunStep[]) => progress.offer(steps);
       const ending = await patiently(() => computeItem(run, item, { signal, onSteps }), signal);
       await progress.settled();
-      await patiently(() => this.end(token, ending), signal);
+      await patiently(() => this.end(item, ending), signal);
     } catch (error) {
       await progress.settled();
-      await this.afterFault(token, signal, error);
+      await this.afterFault(item, signal, error);
     } finally {
       this.held.delete(held);
     }
@@ -173,12 +180,13 @@ export class RunWorker {
     await inTransaction(async (transaction) => {
       const item = await lockLeasedItem(token, transaction);
       if (item === null) {
-        log.warn({ ...token }, "run item lost, its result dropped");
+        log.warn({ item: referenceOf(token) }, "run item lost, its result dropped");
         return;
       }
       if (ending.state === "done") await ending.store?.(transaction);
       item.set({
         state: ending.state,
+        claimId: null,
         leasedUntil: null,
         finishedAt: now(),
         ...(ending.state === "done"
@@ -189,24 +197,26 @@ export class RunWorker {
     });
   }
 
-  private async afterFault(token: LeaseToken, signal: AbortSignal, error: unknown): Promise<void> {
+  private async afterFault(item: ClaimedItem, signal: AbortSignal, error: unknown): Promise<void> {
     const stops = signal.aborted && signal.reason instanceof WorkerStops;
     if (signal.aborted && !stops) return;
     try {
       if (stops) {
-        await giveItemBack(token, { counted: false });
+        await giveItemBack(item, { counted: false });
         return;
       }
-      log.error({ err: error, ...token }, "run item failed");
-      if (token.attempts < MOST_ATTEMPTS) {
-        await patiently(() => giveItemBack(token, { counted: true }), this.stopping.signal);
+      const { runId, estimateId, attempts } = item;
+      const context = { item: referenceOf(item), runId, estimateId, attempts };
+      log.error({ err: error, ...context }, "run item failed");
+      if (attempts < MOST_ATTEMPTS) {
+        await patiently(() => giveItemBack(item, { counted: true }), this.stopping.signal);
         return;
       }
-      const reason = unforeseen + (error instanceof Error ? error.message : String(error));
-      await patiently(() => this.write(token, { state: "failed", reason }), this.stopping.signal);
+      const ending: Ending = { state: "failed", reason: unforeseen(item) };
+      await patiently(() => this.write(item, ending), this.stopping.signal);
     } catch (fault) {
       // The lease ends by itself, and whoever takes the item then goes on from there.
-      log.warn({ err: fault, ...token }, "run item left to its lease");
+      log.warn({ err: fault, item: referenceOf(item) }, "run item left to its lease");
     }
   }
 
@@ -214,9 +224,10 @@ export class RunWorker {
     // Only what was held before asking: an item that is taken meanwhile is not in the answer.
     const asked = [...this.held];
     if (asked.length === 0) return;
-    const own = new Set((await renewLeases(this.name, LEASE_SECONDS)).map(keyOf));
-    for (const { token, controller } of asked) {
-      if (!own.has(keyOf(token))) controller.abort(new LeaseLost("the item is no longer ours"));
+    const claimIds = asked.map(({ claimId }) => claimId);
+    const standing = new Set(await renewLeases(claimIds, LEASE_SECONDS));
+    for (const { claimId, controller } of asked) {
+      if (!standing.has(claimId)) controller.abort(new LeaseLost("the item is no longer ours"));
     }
   }
 
@@ -236,8 +247,4 @@ export class RunWorker {
       await sleep(ms, undefined, { signal }).catch(() => undefined);
     }
   }
-}
-
-function keyOf({ runId, position, attempts }: LeaseToken): string {
-  return `${runId}/${position}/${attempts}`;
 }

@@ -8,6 +8,7 @@ import {
   renewLeases,
   type LeaseToken,
 } from "@/models/queries/run-leases";
+import { passOverOpenItems, returnEndedItems } from "@/models/queries/runs";
 import { sequelize } from "@/models/sequelize";
 import { queryRows } from "../support/database";
 
@@ -35,6 +36,20 @@ async function expire({ runId, position }: LeaseToken): Promise<void> {
     "update run_items set leased_until = now() - interval '1 s' where run_id = $1 and position = $2",
     [runId, position],
   );
+}
+
+/** Cancelled and set going again, as far as items go. */
+async function cancelAndRetry(runId: string): Promise<void> {
+  await sequelize.transaction(async (transaction) => {
+    const reasons = { waiting: "cancelled", running: "cancelled" };
+    await passOverOpenItems(runId, reasons, new Date(), transaction);
+    // Only what still has its estimate comes back.
+    await sequelize.query(
+      "update run_items set estimate_id = (select id from estimates limit 1) where run_id = :runId",
+      { replacements: { runId }, transaction },
+    );
+    expect(await returnEndedItems(runId, transaction)).toBe(1);
+  });
 }
 
 const isOwn = (token: LeaseToken) =>
@@ -67,7 +82,7 @@ describe("claimRunItem(runId, worker)", () => {
     expect(second).toMatchObject({ position: 1, attempts: 2 });
     expect(await isOwn(first)).toBe(false);
     expect(await isOwn(second)).toBe(true);
-    expect(await renewLeases(dead, 30)).toEqual([]);
+    expect(await renewLeases([first.claimId], 30)).toEqual([]);
   });
 
   it("lets a worker that took its own item again store under the new attempt alone", async () => {
@@ -77,15 +92,6 @@ describe("claimRunItem(runId, worker)", () => {
     await expire(first);
     const second = (await claimRunItem(runId, name, limits))!;
     expect([await isOwn(first), await isOwn(second)]).toEqual([false, true]);
-  });
-
-  it("keeps an item whose lease is renewed", async () => {
-    const runId = await runOf(1);
-    const name = worker();
-    const held = (await claimRunItem(runId, name, limits))!;
-    await expire(held);
-    expect(await renewLeases(name, 30)).toMatchObject([{ runId, position: 1, attempts: 1 }]);
-    expect(await claimRunItem(runId, worker(), limits)).toBeNull();
   });
 
   it("gives up after three attempts that ended with their workers", async () => {
@@ -101,6 +107,49 @@ describe("claimRunItem(runId, worker)", () => {
       runId,
     ]);
     expect(item).toEqual({ state: "failed", reason: "ended three times" });
+  });
+});
+
+describe("renewLeases(claimIds)", () => {
+  it("keeps an item whose lease is renewed", async () => {
+    const runId = await runOf(1);
+    const held = (await claimRunItem(runId, worker(), limits))!;
+    await expire(held);
+    expect(await renewLeases([held.claimId], 30)).toEqual([held.claimId]);
+    expect(await claimRunItem(runId, worker(), limits)).toBeNull();
+    expect(await renewLeases([], 30)).toEqual([]);
+  });
+
+  it("lets an item go that its living worker does not know it has", async () => {
+    const runId = await runOf(2);
+    const name = worker();
+    const held = (await claimRunItem(runId, name, limits))!;
+    // Committed, but the answer was lost on the way to the worker.
+    const orphan = (await claimRunItem(runId, name, limits))!;
+    await expire(held);
+    await expire(orphan);
+    expect(await renewLeases([held.claimId], 30)).toEqual([held.claimId]);
+    const taken = await claimRunItem(runId, worker(), limits);
+    expect(taken).toMatchObject({ position: orphan.position, attempts: 2 });
+    expect(await claimRunItem(runId, worker(), limits)).toBeNull();
+    expect([await isOwn(held), await isOwn(orphan), await isOwn(taken!)]).toEqual([
+      true,
+      false,
+      true,
+    ]);
+  });
+
+  it("knows a claim from before a retry as gone, though worker and attempt are the same again", async () => {
+    const runId = await runOf(1);
+    const name = worker();
+    const before = (await claimRunItem(runId, name, limits))!;
+    await cancelAndRetry(runId);
+    const after = (await claimRunItem(runId, name, limits))!;
+    expect([before.attempts, after.attempts]).toEqual([1, 1]);
+    expect([await isOwn(before), await isOwn(after)]).toEqual([false, true]);
+    expect(await renewLeases([before.claimId, after.claimId], 30)).toEqual([after.claimId]);
+    await giveItemBack(before, { counted: false });
+    expect(await isOwn(after)).toBe(true);
   });
 });
 
