@@ -77,12 +77,30 @@ export function progressWords(run: Pick<RunView, "counts" | "remainingSeconds">)
 export interface Comparison {
   /** estimates that had figures before */
   compared: number;
+  /** of these, the same to the last digit */
+  same: number;
   /** of these, moved by more than `MOVED_BEYOND` standard errors */
-  moved: number;
+  beyond: number;
+  /** largest move as a share of what was there, signed */
+  largestShare: number;
 }
 
-/** A change beyond two standard errors of the two runs is more than chance usually does. */
+/** Moves of more than this many standard errors are pointed out: larger than what the trials leave open. */
 export const MOVED_BEYOND = 2;
+
+export function compareOutcomes(outcomes: readonly RunItemView["outcome"][]): Comparison {
+  const comparison: Comparison = { compared: 0, same: 0, beyond: 0, largestShare: 0 };
+  for (const outcome of outcomes) {
+    const moved = outcome?.movedStandardErrors ?? null;
+    if (outcome === null || moved === null) continue;
+    comparison.compared += 1;
+    if (moved === 0) comparison.same += 1;
+    if (moved > MOVED_BEYOND) comparison.beyond += 1;
+    const share = outcome.movedShare ?? 0;
+    if (Math.abs(share) > Math.abs(comparison.largestShare)) comparison.largestShare = share;
+  }
+  return comparison;
+}
 
 /** The finding that heads a run's page. */
 export function runTitle(run: RunView, comparison: Comparison | null): string {
@@ -100,8 +118,12 @@ export function runTitle(run: RunView, comparison: Comparison | null): string {
     return `${whole(counts.failed)} of ${estimatesWords(counts.total)} could not be computed`;
   }
   if (kind === "recalculation" && comparison && comparison.compared > 0) {
-    const { compared, moved } = comparison;
-    return `${whole(compared - moved)} of ${estimatesWords(compared)} ${compared === 1 ? "repeats" : "repeat"} within ${compared === 1 ? "its" : "their"} sampling error`;
+    const { compared, same, beyond } = comparison;
+    const all = `${whole(compared)} of ${estimatesWords(compared)}`;
+    if (same === compared) return `${all} ${compared === 1 ? "repeats" : "repeat"} exactly`;
+    return beyond === 0
+      ? `${all} moved by ${MOVED_BEYOND} standard errors at most`
+      : `${whole(beyond)} of ${estimatesWords(compared)} moved by more than ${MOVED_BEYOND} standard errors`;
   }
   return `${whole(counts.done)} of ${estimatesWords(counts.total)} computed`;
 }
@@ -123,25 +145,30 @@ export function outcomeWords(run: RunView): string {
   }
 }
 
-/** "2.4 standard errors"; an estimate without earlier results has nothing to be compared with. */
-export function movedWords({ outcome }: Pick<RunItemView, "outcome">): string {
-  if (!outcome) return "–";
-  if (outcome.movedStandardErrors === null) return outcome.before ? "–" : "first results";
-  return outcome.movedStandardErrors === 0
-    ? "the same"
-    : `${formatFigure(outcome.movedStandardErrors, { digits: 2 })} SE`;
+/** "+0.42 %", and no more digits than tell moves apart. */
+function shareWords(share: number): string {
+  const size = Math.abs(share) * 100;
+  if (size < 0.005) return "under 0.01\u00a0%";
+  return formatPercent(share, { signed: true, decimals: size < 1 ? 2 : size < 10 ? 1 : 0 });
 }
 
-/**
- * Chance that at least one of P90, P50 and P10 moves by more than two standard errors when nothing but the sample
- * differs: 4.55 % for one; at most three times that, less the overlaps, for three (1 - 0.9545^3 were they independent).
- */
-const MOST_BY_CHANCE = 1 - 0.9545 ** 3;
+/** "+0.42 %, 2.4 SE"; an estimate without earlier results has nothing to be compared with. */
+export function movedWords({ outcome }: Pick<RunItemView, "outcome">): string {
+  if (!outcome) return "–";
+  const { before, movedShare, movedStandardErrors } = outcome;
+  if (movedStandardErrors === null) return before ? "–" : "first results";
+  if (movedStandardErrors === 0) return "the same";
+  const share = movedShare === null ? "from 0" : shareWords(movedShare);
+  return `${share}, ${standardErrorsWords(movedStandardErrors)}`;
+}
+
+const standardErrorsWords = (errors: number) =>
+  errors < 0.01 ? "under 0.01 SE" : `${formatFigure(errors, { digits: 2 })} SE`;
 
 /** What to think of estimates that moved, when the run has compared some. */
-export function movedNote({ compared, moved }: Comparison): string {
-  const expected = `Three percentiles of each are looked at, so up to ${formatPercent(MOST_BY_CHANCE)} of the estimates move this far by chance alone.`;
-  return moved > compared * MOST_BY_CHANCE
-    ? `${expected} More than that moved here: look at the largest.`
-    : expected;
+export function movedNote({ compared, same, largestShare }: Comparison): string {
+  const why =
+    "Both used the same random numbers, so a move is the engine’s doing, not chance; the standard error (SE) is only a yardstick for whether it matters.";
+  if (same === compared) return `${why} Nothing moved.`;
+  return `${why} ${whole(same)} of ${whole(compared)} repeat exactly; the largest move is ${shareWords(largestShare)}.`;
 }

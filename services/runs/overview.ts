@@ -2,12 +2,15 @@ import { tallyRuns, type RunTally } from "@/models/queries/runs";
 import type { Run } from "@/models/run";
 import { now } from "../clock";
 import { can, type Actor } from "../policy";
+import { workerNamesFor } from "./worker-names";
 
 /** A run with how it stands and what the person who looks can do with it. */
 export interface RunOverview {
   run: Run;
   tally: RunTally;
-  /** from the pace so far; null before anything is done and after the end */
+  /** who has had items of it, as the person who looks may know them */
+  workers: string[];
+  /** from the pace since work last began; null before anything is done after that, and after the end */
   remainingSeconds: number | null;
   /** nothing has moved for a while: no worker is there, or all are busy with other work */
   stalled: boolean;
@@ -51,6 +54,7 @@ export function overviewOf(actor: Actor, run: Run, tally: RunTally, at: Date): R
   return {
     run,
     tally,
+    workers: [...workerNamesFor(actor, tally.workers).values()],
     remainingSeconds: open ? remainingSeconds(run, tally, at) : null,
     stalled: isStalled(run, tally, at),
     can: {

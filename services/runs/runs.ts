@@ -3,6 +3,7 @@ import {
   findRunWithCreator,
   listRunItemsPage,
   listRunsPage,
+  listWorkersOfRuns,
   lockRuns,
   passOverOpenItems,
   returnEndedItems,
@@ -20,6 +21,7 @@ import { refuseOverlap } from "./create-run";
 import { markImport } from "./imports";
 import { sendLanes } from "./lanes";
 import { isUnfinished, mayCancel, mayRetry, overviewsOf, type RunOverview } from "./overview";
+import { workerNamesFor } from "./worker-names";
 
 /** Runs of everybody, newest first. */
 export async function listRuns(
@@ -40,16 +42,26 @@ export async function getRun(actor: Actor, id: string): Promise<RunOverview> {
   return overview;
 }
 
+/** An item of a run, with its worker as the person who looks may know it. */
+export interface RunItemOverview {
+  item: RunItem;
+  worker: string | null;
+}
+
 /** The estimates of a run, in the order of fields and reservoirs. */
 export async function listRunItems(
   actor: Actor,
   id: string,
   filter: RunItemFilter,
   page: PageRequest,
-): Promise<Page<RunItem>> {
+): Promise<Page<RunItemOverview>> {
   authorise(actor, "run.read");
   if (!(await findRun(id))) throw new NotFoundError("run");
-  return toPage(await listRunItemsPage(id, filter, page), page);
+  const { rows, count } = await listRunItemsPage(id, filter, page);
+  const workers = (await listWorkersOfRuns([id])).map(({ worker }) => worker);
+  const names = workerNamesFor(actor, workers);
+  const items = rows.map((item) => ({ item, worker: names.get(item.worker ?? "") ?? null }));
+  return toPage({ rows: items, count }, page);
 }
 
 /**

@@ -77,7 +77,12 @@ describe("POST /api/v1/runs", () => {
     });
     const run = await finished(asked.id);
     expect(run.counts).toMatchObject({ done: before.length, failed: 0, passedOver: 0 });
-    expect(run.workers.every((name) => /^.+:\d+$/.test(name))).toBe(true);
+    expect(run.workers.length).toBeGreaterThan(0);
+    expect(run.workers).toEqual(run.workers.map((_, index) => `worker ${index + 1}`));
+    const administrator = await as("administrator");
+    const named = made(await administrator.get<RunView>(`/api/v1/runs/${run.id}`));
+    expect(named.workers).toHaveLength(run.workers.length);
+    expect(named.workers.every((name) => /^.+:\d+:[0-9a-f]{6}$/.test(name))).toBe(true);
     expect(run).toMatchObject({ remainingSeconds: null, stalled: false });
     expect(await rows()).toEqual(before);
 
@@ -87,9 +92,11 @@ describe("POST /api/v1/runs", () => {
     expect(item).toMatchObject({
       state: "done",
       attempts: 1,
+      worker: expect.stringMatching(/^worker \d+$/),
       outcome: {
         before: { p90, p50, p10, mean },
         after: { p90, p50, p10, mean },
+        movedShare: 0,
         movedStandardErrors: 0,
         settled: null,
       },

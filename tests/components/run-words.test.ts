@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
 import type { RunView } from "@/app/api/v1/runs/schema";
 import {
+  compareOutcomes,
   durationWords,
   fractionOf,
   movedNote,
@@ -11,6 +12,7 @@ import {
   runTitle,
 } from "@/components/runs/run-words";
 
+const nothing = { compared: 0, same: 0, beyond: 0, largestShare: 0 };
 const range = { p90: 1, p50: 2, p10: 3, mean: 2 };
 
 function run(change: Partial<RunView> = {}, counts: Partial<RunView["counts"]> = {}): RunView {
@@ -72,23 +74,22 @@ describe("the progress of a run", () => {
 
 describe("runTitle(run, comparison)", () => {
   it("states the finding of a finished recalculation", () => {
-    expect(runTitle(run(), { compared: 22, moved: 0 })).toBe(
-      "22 of 22 estimates repeat within their sampling error",
-    );
-    expect(runTitle(run(), { compared: 22, moved: 3 })).toMatch(/^19 of 22 estimates repeat/);
-    expect(runTitle(run(), { compared: 1, moved: 0 })).toBe(
-      "1 of 1 estimate repeats within its sampling error",
-    );
+    const found = (same: number, beyond: number, compared = 22) =>
+      runTitle(run(), { compared, same, beyond, largestShare: 0.004 });
+    expect(found(22, 0)).toBe("22 of 22 estimates repeat exactly");
+    expect(found(1, 0, 1)).toBe("1 of 1 estimate repeats exactly");
+    expect(found(21, 0)).toBe("22 of 22 estimates moved by 2 standard errors at most");
+    expect(found(0, 3)).toBe("3 of 22 estimates moved by more than 2 standard errors");
   });
 
   it("puts failures before everything else", () => {
-    expect(runTitle(run({}, { done: 20, failed: 2 }), { compared: 20, moved: 0 })).toBe(
+    expect(runTitle(run({}, { done: 20, failed: 2 }), { ...nothing, compared: 20, same: 20 })).toBe(
       "2 of 22 estimates could not be computed",
     );
   });
 
   it("claims no comparison where there were no results before", () => {
-    expect(runTitle(run(), { compared: 0, moved: 0 })).toBe("22 of 22 estimates computed");
+    expect(runTitle(run(), nothing)).toBe("22 of 22 estimates computed");
     expect(runTitle(run(), null)).toBe("22 of 22 estimates computed");
   });
 
@@ -111,34 +112,50 @@ describe("outcomeWords(run)", () => {
   });
 });
 
-describe("movedWords(item)", () => {
+describe("how far figures moved", () => {
   const outcome = {
     trials: 16_384,
     engineVersion: "2.0.0",
     before: range,
     after: range,
     standardErrors: range,
+    movedShare: -0.0042,
     movedStandardErrors: 2.43,
     settled: null,
   };
+  const same = { ...outcome, movedShare: 0, movedStandardErrors: 0 };
+  const first = { ...outcome, before: null, movedShare: null, movedStandardErrors: null };
 
-  it("gives the change in standard errors", () => {
-    expect(movedWords({ outcome })).toBe("2.4 SE");
-    expect(movedWords({ outcome: { ...outcome, movedStandardErrors: 0 } })).toBe("the same");
+  it("is said in per cent, beside standard errors", () => {
+    expect(movedWords({ outcome })).toBe("−0.42\u00a0%, 2.4 SE");
+    expect(movedWords({ outcome: { ...outcome, movedShare: 0.123 } })).toBe("+12\u00a0%, 2.4 SE");
+    expect(movedWords({ outcome: same })).toBe("the same");
+  });
+
+  it("never calls the same what differs in its last digits, nor a move from 0 a share", () => {
+    const least = { ...outcome, movedShare: 1e-15, movedStandardErrors: 1e-12 };
+    expect(movedWords({ outcome: least })).toBe("under 0.01\u00a0%, under 0.01 SE");
+    expect(movedWords({ outcome: { ...outcome, movedShare: null } })).toBe("from 0, 2.4 SE");
   });
 
   it("compares nothing with results that were not there", () => {
-    const first = { ...outcome, before: null, movedStandardErrors: null };
     expect(movedWords({ outcome: first })).toBe("first results");
     expect(movedWords({ outcome: null })).toBe("–");
   });
-});
 
-describe("movedNote(comparison)", () => {
-  it("knows how many move by chance: 13 % at most, by SciPy 1.17.1's norm.cdf(2)", () => {
-    // 1 - (1 - 2 * (1 - norm.cdf(2))) ** 3 = 0.13038
-    expect(movedNote({ compared: 22, moved: 2 })).toMatch(/up to 13\s% of the estimates/);
-    expect(movedNote({ compared: 22, moved: 2 })).not.toMatch(/look at the largest/);
-    expect(movedNote({ compared: 22, moved: 5 })).toMatch(/More than that moved here/);
+  it("is counted over a run", () => {
+    expect(compareOutcomes([outcome, same, same, first, null])).toEqual({
+      compared: 3,
+      same: 2,
+      beyond: 1,
+      largestShare: -0.0042,
+    });
+  });
+
+  it("is put down to the engine, never to chance", () => {
+    const moved = movedNote(compareOutcomes([outcome, same, same]));
+    expect(moved).toMatch(/same random numbers, so a move is the engine’s doing, not chance/);
+    expect(moved).toMatch(/2 of 3 repeat exactly; the largest move is −0\.42\s%\.$/);
+    expect(movedNote(compareOutcomes([same]))).toMatch(/Nothing moved\.$/);
   });
 });

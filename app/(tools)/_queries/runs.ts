@@ -7,9 +7,10 @@ import {
   runSchema,
   runsSchema,
   type NewRunRequest,
+  type RunItemView,
   type RunView,
 } from "@/app/api/v1/runs/schema";
-import { MOVED_BEYOND, type Comparison } from "@/components/runs/run-words";
+import { MOVED_BEYOND, compareOutcomes, type Comparison } from "@/components/runs/run-words";
 import type { RunItemState } from "@/models/vocabulary";
 
 const keys = {
@@ -107,7 +108,7 @@ export function useComparison(run: RunView | undefined) {
     enabled: run?.kind === "recalculation" && !isUnderWay(run),
     staleTime: Infinity,
     queryFn: async ({ signal }): Promise<Comparison> => {
-      const moves: number[] = [];
+      const outcomes: RunItemView["outcome"][] = [];
       let offset = 0;
       let total = 1;
       while (offset < total) {
@@ -116,14 +117,11 @@ export function useComparison(run: RunView | undefined) {
           schema: runItemsSchema,
           signal,
         });
-        moves.push(...page.items.flatMap(({ outcome }) => outcome?.movedStandardErrors ?? []));
+        outcomes.push(...page.items.map(({ outcome }) => outcome));
         total = page.total;
         offset += WHOLE_PAGE;
       }
-      return {
-        compared: moves.length,
-        moved: moves.filter((standardErrors) => standardErrors > MOVED_BEYOND).length,
-      };
+      return compareOutcomes(outcomes);
     },
   });
 }

@@ -24,6 +24,7 @@ const outcome = {
   before: null,
   after: { p90: 1, p50: 2, p10: 3, mean: 2 },
   standardErrors: { p90: 0, p50: 0, p10: 0, mean: 0 },
+  movedShare: null,
   movedStandardErrors: null,
   settled: true,
 };

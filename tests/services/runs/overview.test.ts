@@ -32,6 +32,7 @@ function tally(values: Partial<RunTally> = {}): RunTally {
 }
 
 const engineer = actor("engineer", "owner");
+const workers = ["host:1:0c0ffe", "host:1:ab12cd"];
 
 describe("overviewOf(actor, run, tally, at)", () => {
   it("takes the remaining time from the pace of the last minute", () => {
@@ -56,6 +57,21 @@ describe("overviewOf(actor, run, tally, at)", () => {
     expect(overviewOf(engineer, run(), tally(), at).remainingSeconds).toBeNull();
     const finished = run({ state: "finished" });
     expect(overviewOf(engineer, finished, tally({ ended: 9 }), at).remainingSeconds).toBeNull();
+  });
+
+  it("promises nothing after a retry before something ended again", () => {
+    // 20 had ended before it; none of them belongs to the pace of what is left.
+    const again = run({ startedAt: before(9000), updatedAt: before(1) });
+    const counts = { waiting: 3, running: 1, done: 20, failed: 0, passedOver: 0 };
+    const found = overviewOf(engineer, again, tally({ counts, ended: 0 }), at);
+    expect(found.remainingSeconds).toBeNull();
+  });
+
+  it("numbers the workers, and names them to administrators", () => {
+    const seen = (who: Actor) => overviewOf(who, run(), tally({ workers }), at).workers;
+    expect(seen(engineer)).toEqual(["worker 1", "worker 2"]);
+    expect(seen(actor("planner"))).toEqual(["worker 1", "worker 2"]);
+    expect(seen(actor("administrator"))).toEqual(workers);
   });
 
   it("calls a run stalled when nobody holds an item and nothing ended for 15 s", () => {

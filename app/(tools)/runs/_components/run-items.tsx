@@ -23,7 +23,7 @@ const condensate = reportingUnits("field", "14.696").condensate;
 /**
  * Every estimate of a run, with what it had and what it has.
  *
- * @param moved  how many moved beyond chance; null until that is known
+ * @param moved  how many moved by more than `MOVED_BEYOND` standard errors; null until that is known
  */
 export function RunItems({ run, moved }: { run: RunView; moved: number | null }) {
   const [show, setShow] = useState<ItemFilter>("all");
@@ -75,7 +75,7 @@ function filtersOf({ counts }: RunView, moved: number | null) {
   const filters: { filter: ItemFilter; label: string; count: number | null }[] = [
     { filter: "all", label: "All", count: counts.total },
     { filter: "failed", label: "Failed", count: counts.failed },
-    { filter: "moved", label: `Moved beyond ${MOVED_BEYOND} standard errors`, count: moved },
+    { filter: "moved", label: `Moved by more than ${MOVED_BEYOND} standard errors`, count: moved },
     { filter: "waiting", label: "Waiting", count: counts.waiting },
     { filter: "running", label: "Running", count: counts.running },
     { filter: "done", label: "Done", count: counts.done },

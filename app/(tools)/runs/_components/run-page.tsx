@@ -65,7 +65,7 @@ export function RunPage({ id }: { id: string }) {
             <SettlingSteps id={id} live={isUnderWay(run)} />
           </Section>
         ) : (
-          <RunItems run={run} moved={comparison?.moved ?? null} />
+          <RunItems run={run} moved={comparison?.beyond ?? null} />
         )}
       </Stack>
     </Page>
@@ -94,9 +94,7 @@ function RunMeta({ run }: { run: RunView }) {
         <span>Took {durationWords((Date.parse(finishedAt) - Date.parse(startedAt)) / 1000)}</span>
       )}
       {workers.length > 0 && (
-        <span>
-          {workers.length === 1 ? "Worker" : `${workers.length} workers`}: {workers.join(", ")}
-        </span>
+        <span>{workers.length === 1 ? "One worker" : `${workers.length} workers`}</span>
       )}
     </>
   );
@@ -139,7 +137,7 @@ function RunState({
       )}
       {comparison && comparison.compared > 0 && (
         <p className="text-13 text-ink-soft">
-          Compared: recoverable condensate before and now, in standard errors of the difference.{" "}
+          Compared: P90, P50 and P10 of recoverable condensate, before and now.{" "}
           {movedNote(comparison)}
         </p>
       )}

@@ -1,11 +1,13 @@
-import type { RunItem } from "@/models/run-item";
+import { movedShare } from "@/services/runs/moved";
 import type { RunOverview } from "@/services/runs/overview";
+import type { RunItemOverview } from "@/services/runs/runs";
 import { presentMoment, presentPerson } from "../common-presenter";
 import type { RunItemView, RunView } from "./schema";
 
 /** @param overview  its run loaded with whoever began it */
-export function presentRun({ run, tally, remainingSeconds, stalled, can }: RunOverview): RunView {
-  const { counts, workers } = tally;
+export function presentRun(overview: RunOverview): RunView {
+  const { run, tally, workers, remainingSeconds, stalled, can } = overview;
+  const { counts } = tally;
   const total = Object.values(counts).reduce((sum, count) => sum + count, 0);
   return {
     id: run.id,
@@ -25,9 +27,9 @@ export function presentRun({ run, tally, remainingSeconds, stalled, can }: RunOv
   };
 }
 
-/** @param item  loaded with its reservoir and field */
-export function presentRunItem(item: RunItem): RunItemView {
-  const { reservoir } = item;
+/** @param overview  its item loaded with its reservoir and field */
+export function presentRunItem({ item, worker }: RunItemOverview): RunItemView {
+  const { reservoir, outcome } = item;
   if (!reservoir?.field) throw new Error("a run item is presented with its reservoir and field");
   return {
     estimateId: item.estimateId,
@@ -36,10 +38,13 @@ export function presentRunItem(item: RunItem): RunItemView {
     reservoir: { name: reservoir.name, slug: reservoir.slug },
     state: item.state,
     attempts: item.attempts,
-    worker: item.worker,
+    worker,
     finishedAt: presentMoment(item.finishedAt),
     reason: item.reason,
     progress: item.progress,
-    outcome: item.outcome,
+    outcome: outcome && {
+      ...outcome,
+      movedShare: outcome.before && movedShare(outcome.before, outcome.after),
+    },
   };
 }

@@ -42,9 +42,9 @@ export const runSchema = z.object({
     /** changed by somebody meanwhile, or cancelled before their turn */
     passedOver: z.number().int(),
   }),
-  /** from the pace so far; null before anything is done and after the end */
+  /** from the pace since work last began; null before anything is done after that, and after the end */
   remainingSeconds: z.number().nullable(),
-  /** names of the workers that have computed something of it */
+  /** who has computed something of it: "worker 1", "worker 2"; host, process and a random end to administrators */
   workers: z.array(z.string()),
   /** nothing has moved for a while: no worker is there, or all are busy with other work */
   stalled: z.boolean(),
@@ -66,6 +66,7 @@ export const runItemSchema = z.object({
   reservoir: place,
   state: z.enum(runItemStates),
   attempts: z.number().int(),
+  /** as in the run's `workers` */
   worker: z.string().nullable(),
   finishedAt: momentSchema.nullable(),
   /** why it failed or was passed over, in words */
@@ -90,7 +91,12 @@ export const runItemSchema = z.object({
       before: rangeSchema.nullable(),
       after: rangeSchema,
       standardErrors: rangeSchema,
-      /** largest change of P90, P50 or P10 in standard errors of the two; null without a before */
+      /**
+       * largest change of P90, P50 or P10 as a share of what it was, signed; null without a before, or from 0. A
+       * recalculation has the random numbers of before, so a move is the engine's doing, not chance.
+       */
+      movedShare: z.number().nullable(),
+      /** largest change of the three over the larger standard error of the two; null without a before */
       movedStandardErrors: z.number().nullable(),
       /** only of `untilSettled` */
       settled: z.boolean().nullable(),
@@ -101,7 +107,7 @@ export type RunItemView = z.infer<typeof runItemSchema>;
 
 export const runItemsQuery = pageQuery.extend({
   state: z.enum(runItemStates).optional(),
-  /** only those whose figures moved beyond this many standard errors */
+  /** only those whose figures moved by more than this many standard errors */
   movedBeyond: z.coerce.number().min(0).max(1000).optional(),
 });
 export const runItemsSchema = pageOf(runItemSchema);
