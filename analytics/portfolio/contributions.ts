@@ -1,3 +1,7 @@
+import type { Range } from "../volumetrics/results-schema";
+
+type Percentiles = Pick<Range, "p90" | "p50" | "p10">;
+
 /** What one member brings to a total, in the total's unit. They add up to the total's own figure in each column. */
 export interface Contribution {
   /** Cov(member, total) / Var(total); can be above 1 or below 0, adds up to 1 over all members */
@@ -6,6 +10,15 @@ export interface Contribution {
   p90: number;
   p50: number;
   p10: number;
+}
+
+/** How well the contributions are known before the total's own errors are. */
+export interface ContributionFit {
+  contribution: Contribution;
+  /** what each percentile's contribution moves by with the percentile: the slopes of all members add up to 1 */
+  slopes: Percentiles;
+  /** one standard error of the line at each percentile, from the scatter around it, for independent trials */
+  lineErrors: Percentiles;
 }
 
 /** The trials near a percentile of the total. */
@@ -38,6 +51,9 @@ const HALF_WIDTH = 0.025;
  * the percentile exactly, whatever the width. For jointly normal members the line is the truth,
  * mu_i + Cov(X_i, S) / Var(S) (q - mu_S).
  *
+ * The error of a line read at x is s sqrt(1 / n + (x - mean)^2 / squares), with s^2 the squared scatter around it over
+ * n - 2 (any textbook of regression).
+ *
  * @returns a function from a member's trials, in the order of the total's, to its contribution
  * @see D. Tasche, Risk contributions and performance measurement, Technische Universitaet Muenchen (1999), section 5
  *      (quantile-based risk measures); J. Fan, I. Gijbels, Local Polynomial Modelling and Its Applications (1996),
@@ -59,21 +75,49 @@ export function createContributions({ total, order, quantiles }: ContributionOpt
     p50: windowAt(0.5, quantiles.p50, total, order),
     p10: windowAt(0.9, quantiles.p10, total, order),
   };
-  return (member: ArrayLike<number>): Contribution => {
+  return (member: ArrayLike<number>): ContributionFit => {
     let sum = 0;
     let products = 0;
     for (let t = 0; t < count; t += 1) {
       sum += member[t];
       products += member[t] * centred[t];
     }
+    const p90 = lineAt(windows.p90, member, total);
+    const p50 = lineAt(windows.p50, member, total);
+    const p10 = lineAt(windows.p10, member, total);
     return {
-      shareOfVariance: squares > 0 ? products / squares : 0,
-      mean: sum / count,
-      p90: expectedAt(windows.p90, member, total),
-      p50: expectedAt(windows.p50, member, total),
-      p10: expectedAt(windows.p10, member, total),
+      contribution: {
+        shareOfVariance: squares > 0 ? products / squares : 0,
+        mean: sum / count,
+        p90: p90.value,
+        p50: p50.value,
+        p10: p10.value,
+      },
+      slopes: { p90: p90.slope, p50: p50.slope, p10: p10.slope },
+      lineErrors: { p90: p90.error, p50: p50.error, p10: p10.error },
     };
   };
+}
+
+/**
+ * One standard error of a member's contributions: of its line, and of the percentile at which the line is read. They
+ * hold what sampling leaves open of a straight line; its bend within the window is not in them.
+ *
+ * @param totalErrors  standard errors of the total's percentiles
+ * @param meanError    of the member's mean
+ * @param repeats      how often a row of the member is used in the total, at least 1: repeated rows say nothing new
+ */
+export function contributionErrors(
+  { slopes, lineErrors }: Omit<ContributionFit, "contribution">,
+  {
+    totalErrors,
+    meanError,
+    repeats,
+  }: { totalErrors: Percentiles; meanError: number; repeats: number },
+): Range {
+  const at = (key: keyof Percentiles) =>
+    Math.hypot(lineErrors[key] * Math.sqrt(repeats), slopes[key] * totalErrors[key]);
+  return { p90: at("p90"), p50: at("p50"), p10: at("p10"), mean: meanError };
 }
 
 function windowAt(p: number, target: number, total: Float64Array, order: Uint32Array): Window {
@@ -90,17 +134,26 @@ function windowAt(p: number, target: number, total: Float64Array, order: Uint32A
 }
 
 /** The member's line over a window, read at the percentile. */
-function expectedAt(
+function lineAt(
   { trials, mean, squares, target }: Window,
   member: ArrayLike<number>,
   total: Float64Array,
-): number {
+): { value: number; slope: number; error: number } {
   let sum = 0;
   let products = 0;
   for (const t of trials) {
     sum += member[t];
     products += member[t] * (total[t] - mean);
   }
+  const level = sum / trials.length;
   const slope = squares > 0 ? products / squares : 0;
-  return sum / trials.length + slope * (target - mean);
+  let scatter = 0;
+  for (const t of trials) scatter += (member[t] - level - slope * (total[t] - mean)) ** 2;
+  const lever = squares > 0 ? (target - mean) ** 2 / squares : 0;
+  const variance = scatter / Math.max(1, trials.length - 2);
+  return {
+    value: level + slope * (target - mean),
+    slope,
+    error: Math.sqrt(variance * (1 / trials.length + lever)),
+  };
 }

@@ -154,14 +154,19 @@ function overloaded(dependence: Dependence, fields: readonly PlacedField[]): Dep
     const basin = scoreCorrelation(basinRankOf(dependence, basinId));
     const total = followed.reduce((sum, { rank }) => sum + scoreCorrelation(rank), basin);
     if (total <= 1 + TOLERANCE) return [];
+    const ownRank = basinRankOf(dependence, basinId);
+    const ranks = [ownRank, ...followed.map(({ rank }) => rank)];
+    const counts = [...new Set(ranks)]
+      .map((rank) => `${rank} counts ${scoreCorrelation(rank).toFixed(2)}`)
+      .join(", ");
     const factors = followed.map((factor) => `${factor.name} (${factor.rank})`).join(", ");
     return [
       {
         input: `sharedFactors.${followed[followed.length - 1].index}.fieldIds`,
         message:
-          `${name} would share more than all of its spread: basin ${basinName} ` +
-          `(${basinRankOf(dependence, basinId)}) with ${factors} comes to ${total.toFixed(2)} as correlations of ` +
-          "normal scores, and 1 is the most.",
+          `${name} would share more than all of its spread: basin ${basinName} (${ownRank}) with ${factors} comes to ` +
+          `${total.toFixed(2)}, and 1 is the most. Rank correlations are added up as the slightly larger ` +
+          `correlations of normal scores: ${counts}.`,
       },
     ];
   });

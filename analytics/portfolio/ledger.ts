@@ -7,7 +7,12 @@ import {
 } from "../numerics/order-statistics";
 import { rangeOfSample, summariseSample, type SampleSummary } from "../uncertainty/summary";
 import { vectorNames, type Range, type VectorName } from "../volumetrics/results-schema";
-import { createContributions, type Contribution } from "./contributions";
+import {
+  contributionErrors,
+  createContributions,
+  type Contribution,
+  type ContributionFit,
+} from "./contributions";
 import type { FieldTrials, TrialVector } from "./field-trials";
 import { rankTrials, type RankSpread } from "./rank-trials";
 import { scaleRange } from "./ranking";
@@ -62,6 +67,8 @@ export interface LedgerEntry {
   ranges: VolumeRanges;
   /** to the total's recoverable condensate [STB] */
   contribution: Contribution;
+  /** one standard error of the contribution [STB], of sampling alone */
+  contributionErrors: Range;
 }
 
 export interface Ledger {
@@ -124,7 +131,13 @@ export function computeLedger(fields: readonly LedgerField[], options: LedgerOpt
 
   const condensate = total.condensateRecoverableStb;
   const summary = summariseSample(condensate, trials, counting);
-  const { entries, meanError } = entriesOf(sorted, condensate, summary, counting, options.risk);
+  const { entries, standardErrors } = entriesOf(
+    sorted,
+    condensate,
+    summary,
+    counting,
+    options.risk,
+  );
   const shareOf = (belongs: (field: LedgerField) => boolean) =>
     sorted
       .filter(belongs)
@@ -158,10 +171,7 @@ export function computeLedger(fields: readonly LedgerField[], options: LedgerOpt
       minimum,
       maximum,
       standardDeviation,
-      standardErrors: {
-        ...scaleErrors(summary.standardErrors, sorted, entries, trials),
-        mean: meanError,
-      },
+      standardErrors,
     },
     chanceOfSummedP90: shareAtLeast(condensate, summedP90),
     chanceOfNothing:
@@ -305,36 +315,49 @@ function rangesOf(
   };
 }
 
-/** Every field's ranges and contribution, and the standard error of the total's mean. */
+/** Every field's ranges and contribution, and the standard errors of the total. */
 function entriesOf(
   fields: readonly LedgerField[],
   total: Float64Array,
-  quantiles: Range,
+  summary: SampleSummary,
   counting: OrderWorkspace,
   risk: Risking,
-): { entries: Record<string, LedgerEntry>; meanError: number } {
+): { entries: Record<string, LedgerEntry>; standardErrors: Range } {
   const trials = total.length;
   const order = new Uint32Array(trials);
   rankByCounting(total, trials, counting, new Uint32Array(trials), order);
-  const contributionOf = createContributions({ total, order, quantiles });
+  const fitOf = createContributions({ total, order, quantiles: summary });
   const own = new Float64Array(trials);
-  const entries: Record<string, LedgerEntry> = {};
-  let squaredError = 0;
-  for (const field of fields) {
+  const fitted = fields.map((field) => {
     own.fill(0);
     const factor = factorOf(field, risk);
     const { volumes, comes } = field.trials;
     if (risk === "yesNo") addDrawn(own, volumes.condensateRecoverableStb, comes, factor);
     else addScaled(own, volumes.condensateRecoverableStb, factor);
+    const fit = fitOf(own);
+    const behind = Math.min(trials, field.sourceTrials);
+    const meanError = Math.sqrt(varianceAround(own, fit.contribution.mean) / behind);
+    return { field, factor, fit, meanError, repeats: trials / behind };
+  });
+  const standardErrors = {
+    ...scaleErrors(summary.standardErrors, fitted),
+    mean: Math.hypot(...fitted.map(({ meanError }) => meanError)),
+  };
+  const entries = fitted.map(({ field, factor, fit, ...known }): [string, LedgerEntry] => {
     const figures = field.figures[risk === "yesNo" ? "yesNo" : "certain"];
     const ranges = Object.fromEntries(
       vectorNames.map((name) => [name, scaleRange(figures[name], factor)]),
     ) as VolumeRanges;
-    const contribution = contributionOf(own);
-    entries[field.id] = { ranges, contribution };
-    squaredError += varianceAround(own, contribution.mean) / Math.min(trials, field.sourceTrials);
-  }
-  return { entries, meanError: Math.sqrt(squaredError) };
+    return [
+      field.id,
+      {
+        ranges,
+        contribution: fit.contribution,
+        contributionErrors: contributionErrors(fit, { ...known, totalErrors: standardErrors }),
+      },
+    ];
+  });
+  return { entries: Object.fromEntries(entries), standardErrors };
 }
 
 function varianceAround(values: Float64Array, mean: number): number {
@@ -345,14 +368,12 @@ function varianceAround(values: Float64Array, mean: number): number {
 
 function scaleErrors(
   errors: Range,
-  fields: readonly LedgerField[],
-  entries: Record<string, LedgerEntry>,
-  trials: number,
+  fields: readonly { fit: ContributionFit; repeats: number }[],
 ): Range {
-  const inverse = fields.reduce((sum, { id, sourceTrials }) => {
-    const share = Math.max(0, entries[id].contribution.shareOfVariance);
-    return sum + share * Math.max(1, trials / sourceTrials);
-  }, 0);
+  const inverse = fields.reduce(
+    (sum, { fit, repeats }) => sum + Math.max(0, fit.contribution.shareOfVariance) * repeats,
+    0,
+  );
   return scaleRange(errors, Math.sqrt(Math.max(1, inverse)));
 }
 

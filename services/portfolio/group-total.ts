@@ -29,7 +29,12 @@ export interface GroupTotal {
   /** chance that none of the fields comes, 0 to 1; null unless the basis draws yes or no */
   chanceOfNothing: number | null;
   /** of every field to the total's recoverable condensate [STB], the largest mean first; each column adds up */
-  contributions: ({ fieldId: string; slug: string; name: string } & Contribution)[];
+  contributions: ({
+    fieldId: string;
+    slug: string;
+    name: string;
+    standardErrors: Range;
+  } & Contribution)[];
 }
 
 /** Total of the fields among these that are in the figures, or null when none is. */
@@ -79,7 +84,9 @@ function contributionsOf(
   return fields
     .flatMap(({ id, slug, name }) => {
       const entry = ledger.fields[id];
-      return entry ? [{ fieldId: id, slug, name, ...entry.contribution }] : [];
+      if (!entry) return [];
+      const { contribution, contributionErrors: standardErrors } = entry;
+      return [{ fieldId: id, slug, name, ...contribution, standardErrors }];
     })
     .sort((a, b) => b.mean - a.mean || (a.slug < b.slug ? -1 : 1));
 }

@@ -162,6 +162,8 @@ export const contributionSchema = z.object({
   p90: z.number(),
   p50: z.number(),
   p10: z.number(),
+  /** one standard error of each of these, of sampling alone; they do not add up */
+  standardErrors: rangeSchema.optional(),
 });
 export type ContributionView = z.infer<typeof contributionSchema>;
 
