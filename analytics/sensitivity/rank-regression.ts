@@ -16,8 +16,12 @@ export interface RankRegression<Name extends string> {
   leftOut: { input: Name; reason: string }[];
 }
 
-/** An input is taken to follow from others when they leave no more than this share of its ranks' variance. */
-const LEAST_OWN_VARIANCE = 1e-6;
+/**
+ * An input is taken to follow from others when they leave no more than this share of its ranks' variance: a variance
+ * inflation of 20, where coefficients are made of how the others miss the input rather than of the input. Common
+ * practice warns from 5 or 10 on; 20 keeps correlations that people enter, up to 0.97.
+ */
+const LEAST_OWN_VARIANCE = 0.05;
 
 /**
  * Standardised rank regression: least squares of the result's ranks on the ranks of all inputs at once, everything scaled
@@ -25,7 +29,8 @@ const LEAST_OWN_VARIANCE = 1e-6;
  * fall with each input; `rSquared` says how far that is so. Inputs without spread have no coefficient.
  *
  * Inputs are taken in the order of their correlation with the result; one whose ranks follow from those taken before
- * (the cases of one set, for instance) would make the coefficients meaningless and is left out, with the reason.
+ * all but wholly (the cases of one set, for instance) would share their effect with it in a way that means nothing, and
+ * is left out, with the reason: the coefficients of those others hold its effect.
  *
  * @param labelOf  what reasons call a name
  * @throws {DomainError} when there are fewer than 3 trials more than inputs
@@ -61,6 +66,12 @@ export function rankRegression<Name extends string>(
   return { rSquared, coefficients, leftOut };
 }
 
+/** Inputs that share no more than this of another's variance are not why it is left out. */
+const LEAST_NAMED = 0.01;
+
+/** Less than this is what rounding leaves of no variance. */
+const EXACT = 1e-6;
+
 interface Column<Name> {
   name: Name;
   values: Float64Array;
@@ -87,10 +98,12 @@ function takeIndependent<Name extends string>(
       factor.push([...row, Math.sqrt(own)]);
       continue;
     }
-    const others = taken.filter((_, i) => Math.abs(row[i]) > 1e-3).map(({ name }) => labelOf(name));
+    const others = taken
+      .filter((_, i) => row[i] ** 2 > LEAST_NAMED)
+      .map(({ name }) => labelOf(name));
     leftOut.push({
       input: column.name,
-      reason: `Its ranks follow from those of ${others.join(", ")}, so that their effects cannot be told apart.`,
+      reason: `Its ranks follow ${own > EXACT ? `to ${Math.floor(100 * (1 - own))} % ` : ""}from those of ${others.join(", ")}, so that their effects cannot be told apart.`,
     });
   }
   return { taken, factor, leftOut };

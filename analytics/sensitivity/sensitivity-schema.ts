@@ -96,8 +96,11 @@ export type Change = z.infer<typeof changeSchema>;
 
 /** How much each difference explains of the move of one percentile; the effects add up to the move. */
 export const changeExplanationSchema = z.object({
+  /** the percentile at both ends, on the trials that the effects were worked out with */
   from: z.number(),
   to: z.number(),
+  /** the same of the two estimates on all their trials; differs where those are more than `trials` */
+  own: z.object({ from: z.number(), to: z.number() }),
   trials: z.number().int(),
   /** effects are averaged over all orders of making the changes, or over this many drawn at random */
   orders: z.union([z.literal("all"), z.number().int()]),

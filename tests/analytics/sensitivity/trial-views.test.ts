@@ -53,6 +53,30 @@ describe("rankRegression", () => {
     ]);
   });
 
+  it("counts two inputs that all but follow from each other as one, and keeps those merely correlated", () => {
+    const [a, b, noise] = normalColumns(3, 10_000);
+    const tied = (rho: number) => combine([rho, a], [Math.sqrt(1 - rho * rho), b]);
+    const regression = (rho: number) => {
+      const c = tied(rho);
+      return rankRegression(
+        [
+          { name: "a", ranks: ranksOf(a) },
+          { name: "c", ranks: ranksOf(c) },
+        ],
+        ranksOf(combine([1, a], [1, c], [0.5, noise])),
+      );
+    };
+    const near = regression(0.99);
+    // 1 - 0.99^2 is 2 % of own variance; corr(a + c + noise/2, a) = 1.99 / sqrt(2 + 2 x 0.99 + 0.25) = 0.968.
+    expect(near.coefficients).toHaveLength(1);
+    expect(near.coefficients[0].coefficient).toBeCloseTo(0.967, 2);
+    expect(near.leftOut[0].reason).toMatch(/^Its ranks follow to 9[78] % from those of/);
+    const merely = regression(0.9);
+    expect(merely.leftOut).toEqual([]);
+    const [first, second] = merely.coefficients.map(({ coefficient }) => coefficient);
+    expect(first / second).toBeLessThan(1.15);
+  });
+
   it("explains nothing of a result that does not vary", () => {
     const found = rankRegression(columns, ranksOf(new Array(60).fill(1)));
     expect(found.rSquared).toBe(0);

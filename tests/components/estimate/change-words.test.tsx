@@ -18,6 +18,7 @@ const input = (name: "netThicknessFt" | "porosity" | "areaAcres") => ({
 const explanation: Explanation = {
   from: 30e6,
   to: 37e6,
+  own: { from: 30e6, to: 37e6 },
   trials: 10_000,
   orders: "all",
   changes: [
