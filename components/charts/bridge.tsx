@@ -164,7 +164,7 @@ export function BridgeList({
           const left = bar.kind === "end" ? 0 : positionOn(scale, bar.low);
           return (
             <tr key={bar.label}>
-              <th scope="row" className={bar.kind === "end" ? undefined : "plain"}>
+              <th scope="row" className={bar.kind === "end" ? "wrap" : "wrap plain"}>
                 {bar.label}
               </th>
               <td className="bridge-cell" aria-hidden="true">

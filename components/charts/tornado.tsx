@@ -8,7 +8,7 @@ export interface TornadoDriver {
   /** the result with this input at its P90, and at its P10, the others at their P50 */
   atP90: number;
   atP10: number;
-  /** share of the spread, 0 to 1 */
+  /** squared rank correlation over the sum of them, 0 to 1 */
   share: number;
 }
 
@@ -25,7 +25,7 @@ export interface TornadoProps {
 }
 
 /**
- * Inputs ranked by their share of the spread, each drawn from the result at its P90 (pale) to the
+ * Inputs in the order given, each drawn from the result at its P90 (pale) to the
  * result at its P10 (full), whichever side that falls on.
  */
 export function Tornado({
@@ -54,7 +54,7 @@ export function Tornado({
       <div role="row" className="sr-only">
         <span role="columnheader">Input</span>
         <span role="columnheader">{`${name} at its P90 and P10, ${unit}`}</span>
-        <span role="columnheader">Share of the spread</span>
+        <span role="columnheader">Squared rank correlation, share of the sum</span>
       </div>
       {drivers.map((driver) => (
         <div key={driver.name} role="row" className="tornado-row">

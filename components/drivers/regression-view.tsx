@@ -3,6 +3,8 @@ import { ChartFrame } from "@/components/charts/chart-frame";
 import { InputBars } from "@/components/charts/input-bars";
 import type { Tone } from "@/components/charts/range-mark";
 import { scaleFor } from "@/components/charts/scale";
+import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
+import { caseSetWords } from "@/components/estimate/findings";
 import { formatFigure } from "@/components/ui/format";
 import { byStrength, regressionFinding, rSquaredWords } from "./driver-findings";
 import { inputLabel } from "./driver-names";
@@ -23,14 +25,21 @@ const leftOutWords = (inputs: Sensitivity["rankRegression"]["leftOut"]) =>
   inputs.map(({ input, reason }) => ` ${inputLabel(input)} is left out: ${reason}`).join("");
 
 /** By how many standard deviations of rank the result moves with each input, the others held. */
-export function RegressionView({ sensitivity, name, tone, fileName }: DriverViewProps) {
+export function RegressionView({
+  sensitivity,
+  name,
+  tone,
+  fileName,
+  inputs,
+}: DriverViewProps & { inputs: EstimateInputs }) {
   const { rankRegression, trials } = sensitivity;
   const rows = byStrength(rankRegression.coefficients);
+  const sets = caseSetWords(inputs);
   return (
     <ChartFrame
       level={3}
       title={regressionFinding(rankRegression)}
-      note={`${name}. Standard deviations of rank that the result moves when the input moves by one and the others stand, over ${trials.toLocaleString("en-US")} trials. ${rSquaredWords(rankRegression)}${leftOutWords(rankRegression.leftOut)}`}
+      note={`${name}. Standard deviations of rank that the result moves when the input moves by one and the others stand, over ${trials.toLocaleString("en-US")} trials. ${rSquaredWords(rankRegression)}${leftOutWords(rankRegression.leftOut)}${sets ? ` ${sets}` : ""}`}
       fileName={`${fileName}-rank-regression`}
       data={{
         columns: [{ label: "Input" }, { label: "Coefficient" }],

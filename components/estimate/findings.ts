@@ -1,5 +1,7 @@
 /** What a chart or a table shows, in a sentence with the figures in it. Nothing here is said that was not computed. */
+import { inputNames, type EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import type { Driver, DriverName, Range } from "@/analytics/volumetrics/results-schema";
+import { listWords } from "@/components/portfolio/reporting";
 import { formatFigure, formatPercent, lowerFirst } from "@/components/ui/format";
 import { driverCatalogue } from "./input-catalogue";
 
@@ -14,6 +16,30 @@ export function driverFinding(drivers: readonly Driver[]): string {
   }
   const both = first.shareOfSpread + second.shareOfSpread;
   return `${named(first.input)} and ${lowerFirst(named(second.input))} make ${formatPercent(both)} of the spread`;
+}
+
+/** "Net thickness alone swings it furthest: from 12.1 to 40.3 MMSTB"; drivers with the widest swing first. */
+export function swingFinding([first]: readonly Driver[], factor: number, unit: string): string {
+  if (!first) return "Nothing swings: every input is a constant";
+  const [low, high] = [first.swing.atP90, first.swing.atP10].sort((a, b) => a - b);
+  return `${named(first.input)} alone swings it furthest: from ${formatFigure(low * factor)} to ${formatFigure(high * factor)} ${unit}`;
+}
+
+/** Which inputs take the same case in every trial, so that none of them swings alone there; `null` without any. */
+export function caseSetWords({ uncertain }: Pick<EstimateInputs, "uncertain">): string | null {
+  const sets = new Map<string, string[]>();
+  for (const name of inputNames) {
+    const { distribution } = uncertain[name];
+    if (distribution.kind !== "scenarios" || distribution.caseSet === undefined) continue;
+    sets.set(distribution.caseSet, [...(sets.get(distribution.caseSet) ?? []), named(name)]);
+  }
+  const sentences = [...sets.values()]
+    .filter((names) => names.length > 1)
+    .map(
+      ([first, ...others]) =>
+        `${listWords([first, ...others.map(lowerFirst)])} take the same case in every trial and move together there; here each moves alone.`,
+    );
+  return sentences.length === 0 ? null : sentences.join(" ");
 }
 
 /** Below this a change of a percentile is of the size of the sampling error: it "barely moved". */

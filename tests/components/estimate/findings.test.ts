@@ -1,10 +1,13 @@
 import { describe, expect, it } from "vitest";
 import {
+  caseSetWords,
   changeFinding,
   differenceFinding,
   driverFinding,
   rangeFinding,
+  swingFinding,
 } from "@/components/estimate/findings";
+import { buildInputs } from "../../analytics/volumetrics/estimate-inputs";
 import type { Driver } from "@/analytics/volumetrics/results-schema";
 
 const driver = (input: Driver["input"], shareOfSpread: number): Driver => ({
@@ -32,6 +35,41 @@ describe("driverFinding(drivers)", () => {
 
   it("says so when every input is a constant", () => {
     expect(driverFinding([driver("areaAcres", 0)])).toMatch(/every input is a constant/);
+  });
+});
+
+describe("swingFinding(drivers, factor, unit)", () => {
+  it("gives both ends of the widest swing, the lower first", () => {
+    const saturation = { ...driver("waterSaturation", 0.1), swing: { atP90: 50e6, atP10: 30e6 } };
+    expect(swingFinding([saturation], 1e-6, "MMSTB")).toBe(
+      "Water saturation alone swings it furthest: from 30.0 to 50.0 MMSTB",
+    );
+    expect(swingFinding([], 1, "MMSTB")).toMatch(/every input is a constant/);
+  });
+});
+
+describe("caseSetWords(inputs)", () => {
+  it("names the inputs that take the same case", () => {
+    const cases = {
+      kind: "scenarios",
+      caseSet: "Contact",
+      scenarios: [
+        { name: "Low", weight: 0.3, distribution: { kind: "constant", value: 1500 } },
+        { name: "High", weight: 0.7, distribution: { kind: "constant", value: 3000 } },
+      ],
+    } as const;
+    const tied = (...names: ("areaAcres" | "netThicknessFt")[]) =>
+      caseSetWords(
+        buildInputs(
+          Object.fromEntries(
+            names.map((name) => [name, { ...cases, scenarios: [...cases.scenarios] }]),
+          ),
+        ),
+      );
+    expect(tied("areaAcres", "netThicknessFt")).toMatch(
+      /^Area and net thickness take the same case in every trial/,
+    );
+    expect(tied("areaAcres")).toBeNull();
   });
 });
 

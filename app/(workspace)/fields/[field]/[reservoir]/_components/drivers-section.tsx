@@ -62,7 +62,14 @@ function DriverView({ result, view }: { result: ResultName; view: View }) {
   if (view === "swings") {
     const { summary } = results;
     return summary && hasSwings(result) ? (
-      <Drivers summary={summary} basis={resultBasis} result={result} level={3} />
+      <Drivers
+        summary={summary}
+        basis={resultBasis}
+        result={result}
+        level={3}
+        by="swing"
+        inputs={question?.inputs}
+      />
     ) : (
       <p className="text-13 text-ink-soft">
         A run keeps the swings of wet gas in place and of condensate to the tank. The other three
@@ -101,7 +108,7 @@ function DriverView({ result, view }: { result: ResultName; view: View }) {
   };
   return (
     <div aria-busy={isStale} className={isStale ? "opacity-60" : undefined}>
-      {view === "regression" && <RegressionView {...shared} />}
+      {view === "regression" && <RegressionView {...shared} inputs={question.inputs} />}
       {view === "shares" && <VarianceView {...shared} inputs={question.inputs} />}
       {view === "knowing" && <KnowingView {...shared} />}
     </div>
