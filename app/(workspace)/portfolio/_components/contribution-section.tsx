@@ -6,6 +6,7 @@ import type { Statement } from "@/app/api/v1/portfolio/schema";
 import { useBasis } from "@/components/basis/use-basis";
 import { StackedTotals } from "@/components/charts/stacked-totals";
 import { capital, numberWords, type Reporting } from "@/components/portfolio/reporting";
+import { Figure } from "@/components/ui/figure";
 import { formatFigure, formatPercent } from "@/components/ui/format";
 import { Section } from "@/components/ui/section";
 import { ColumnHeading, FigureCell, FolioCell, LedgerTable, TotalRow } from "@/components/ui/table";
@@ -36,7 +37,7 @@ export function ContributionSection({
   return (
     <Section
       title={contributionTitle(totals.contributions, total)}
-      note={`What each field brings on average when the portfolio comes out at its own P90, P50 and P10, ${liquid.unit}, so that each column adds up. Ordered by share of the variance.`}
+      note={`What each field brings on average when the portfolio comes out at its own P90, P50 and P10, ${liquid.unit}, so that each column adds up. Ordered by share of the variance; ± is one standard error of sampling alone.`}
     >
       <StackedTotals
         label={`What fields bring to the portfolio’s ${liquid.name}`}
@@ -70,7 +71,16 @@ export function ContributionSection({
                 <Link href={withBasis(`/fields/${field.slug}`)}>{field.name}</Link>
               </th>
               {percentiles.map((key) => (
-                <FigureCell key={key} value={field[key] * liquid.perStb} />
+                <td key={key} className="right">
+                  <Figure value={field[key] * liquid.perStb} />
+                  {field.standardErrors && (
+                    <small className="block text-ink-soft">
+                      <span aria-hidden="true">±</span>
+                      <span className="sr-only">plus or minus </span>
+                      <Figure value={field.standardErrors[key] * liquid.perStb} digits={2} />
+                    </small>
+                  )}
+                </td>
               ))}
               <td className="right strong">{formatPercent(field.shareOfVariance)}</td>
             </tr>
