@@ -1,6 +1,5 @@
 import { basinRankOf } from "@/analytics/portfolio/factor-model";
 import type { Ledger } from "@/analytics/portfolio/ledger";
-import { spreadOf } from "@/analytics/portfolio/ranking-columns";
 import type { RankedField } from "@/analytics/portfolio/ranking";
 import { isUnmeasured } from "@/analytics/recovery/recovery-curve-schema";
 import type { PortfolioFieldRow, PortfolioReservoirRow } from "@/models/queries/portfolio";
@@ -35,7 +34,7 @@ export type Attention =
   | (At & {
       /** a range that is wide where it matters, or a place where people can get hurt */
       kind: "field";
-      /** P10 over P90; null when it is not remarkable */
+      /** P10 over P90 of the condensate when the field comes; null when it is not remarkable */
       spread: number | null;
       /** of the portfolio's mean recoverable condensate, 0 to 1 */
       share: number;
@@ -63,10 +62,14 @@ export type Attention =
 /**
  * What needs attention, most pressing first: decisions that wait, revisions that were forgotten, places where people
  * can get hurt, wide ranges that matter, fields without figures, and what the total hangs on.
+ *
+ * @param certain  the same book as if every field came: how wide a range is, a chance of nothing cannot say, because
+ *                 with it P90 may be nothing
  */
 export function attentionOf(
   { book, fields }: RankedBook,
   ledger: Ledger,
+  certain: Ledger,
   basis: PortfolioBasis,
   at: Date,
 ): Attention[] {
@@ -84,7 +87,8 @@ export function attentionOf(
   const remarkable = fields.flatMap((field): Attention[] => {
     if (field.ranges === null) return [];
     const share = shareOf(field);
-    const known = spreadOf(field);
+    const range = certain.fields[field.id]?.ranges.condensateRecoverableStb;
+    const known = range && range.p90 > 0 ? range.p10 / range.p90 : null;
     const isWide = known !== null && known >= WIDE_SPREAD && share >= MATERIAL_SHARE;
     if (!isWide && field.cautions.length === 0) return [];
     const { name, slug, cautions, hydrogenSulphide } = field;

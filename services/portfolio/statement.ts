@@ -8,7 +8,7 @@ import type { ChosenPrices, PortfolioBasis } from "./basis";
 import { describeDependence } from "./dependence";
 import { totalOf, withValues } from "./group-total";
 import { engineOf, loadRanking, type RankedBook } from "./ranking";
-import { chanceOf, interestOf, type Book } from "./roll-ups";
+import { chanceOf, interestOf, rollUpFields, type Book } from "./roll-ups";
 
 /** Fields that a statement names one by one; the others are added up. */
 const NAMED_FIELDS = 10;
@@ -22,6 +22,8 @@ export async function getStatement(actor: Actor, basis: PortfolioBasis) {
   const ranked = await loadRanking(basis);
   const { fields, ledger, prices, book } = ranked;
   const counted = fields.filter(({ ranges }) => ranges !== null);
+  const certain =
+    basis.risk === "yesNo" ? await rollUpFields(book, { ...basis, risk: "unrisked" }) : ledger;
   return {
     asOf: today(),
     prices,
@@ -39,7 +41,7 @@ export async function getStatement(actor: Actor, basis: PortfolioBasis) {
     })),
     others: await totalOf(ranked, basis, counted.slice(NAMED_FIELDS)),
     basins: ledger ? basinsOf(counted, ledger, prices) : [],
-    attention: ledger ? attentionOf(ranked, ledger, basis, now()) : [],
+    attention: ledger && certain ? attentionOf(ranked, ledger, certain, basis, now()) : [],
     year: await yearOf(book, basis, prices),
     engine: engineOf(book),
   };

@@ -257,6 +257,19 @@ describe("GET /api/v1/portfolio", () => {
     expect(unmeasured!.share).toBeLessThan(1);
   });
 
+  it("finds the same wide ranges whether a chance scales every trial or decides each of them", async () => {
+    const wideUnder = async (risk: string) => {
+      const { attention } = await get<Statement>(`/api/v1/portfolio?risk=${risk}`);
+      return attention.flatMap((item) =>
+        item.kind === "field" && item.spread !== null ? [[item.name, item.spread] as const] : [],
+      );
+    };
+    const [risked, yesNo] = [await wideUnder("risked"), await wideUnder("yesNo")];
+    expect(risked.length).toBeGreaterThan(0);
+    expect(yesNo.map(([name]) => name)).toEqual(risked.map(([name]) => name));
+    yesNo.forEach(([, spread], index) => expect(spread).toBeCloseTo(risked[index][1], 9));
+  });
+
   it("explains the year's change of the mean in steps that add up", async () => {
     const { year, totals } = await get<Statement>("/api/v1/portfolio");
     const change = sum(year!.moves.map(({ changeStb }) => changeStb));

@@ -29,8 +29,9 @@ describe("Bridge", () => {
     expect(html.match(/class="bridge-rise"/g)).toHaveLength(2);
   });
 
-  it("says that its axis does not start at zero", () => {
-    expect(html).toMatch(/axis starts at 5,[0-9]00\)/);
+  it("says that its axis does not start at zero, beside the plot and over the bars of a phone", () => {
+    expect(html).toMatch(/\(axis starts at 5,[0-9]00, not at 0\)/);
+    expect(html).toMatch(/<caption[^>]*>[^<]*axis starts at 5,[0-9]00, not at 0\.<\/caption>/);
   });
 
   it("starts at zero where the steps are as large as the total, and holds a total below zero", () => {

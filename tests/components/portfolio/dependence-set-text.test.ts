@@ -109,6 +109,10 @@ describe("readSetText(text, basins, fields)", () => {
     expect(faults["sharedFactors.1.fieldIds"]).toMatch(
       /Pellow North.*Survey \(0.5\), Plant \(0.5\)/,
     );
+    // 2 sin(pi r / 6) of 0.28 and 0.5: 0.2921 + 2 x 0.5176 = 1.3274 (Pearson 1907).
+    expect(faults["sharedFactors.1.fieldIds"]).toMatch(
+      /comes to 1.33, and 1 is the most.*0.28 counts 0.29, 0.5 counts 0.52/,
+    );
   });
 });
 

@@ -7,9 +7,11 @@ import {
   type RankingSortId,
 } from "@/analytics/portfolio/ranking-columns";
 import type { Ranking, RankingRow } from "@/app/api/v1/fields/ranking-schema";
+import type { Basis } from "@/components/basis/basis";
 import { useBasis } from "@/components/basis/use-basis";
 import { RangeMark, RangeScale } from "@/components/charts/range-mark";
 import { scaleFor, type Scale } from "@/components/charts/scale";
+import { nothingWords } from "@/components/portfolio/chance-words";
 import { shownRange, type Reporting } from "@/components/portfolio/reporting";
 import { fractionDigits } from "@/components/ui/format";
 import {
@@ -114,6 +116,7 @@ export function RankingTable({ state, ranking, reporting, selected, onSelect }: 
         scale={scale}
         fractions={fractions}
         sort={view.sort}
+        risk={state.basis.risk}
       />
     </LedgerTable>
   );
@@ -278,6 +281,7 @@ function RankingFoot({
   scale,
   fractions,
   sort,
+  risk,
 }: {
   ranking: Ranking;
   columns: Layout;
@@ -285,6 +289,7 @@ function RankingFoot({
   scale: Scale | null;
   fractions: Fractions;
   sort: RankingSortId;
+  risk: Basis["risk"];
 }) {
   if (!totals) return null;
   const firstFigure = columns.findIndex((id) => id === "mark" || rankingColumn(id).quantity);
@@ -331,6 +336,7 @@ function RankingFoot({
           Total, added up trial by trial{" "}
           <span className="font-normal text-ink-soft">
             {totals.fields} {totals.fields === 1 ? "field" : "fields"}
+            {risk === "yesNo" && `. ${nothingWords(totals.chanceOfNothing)}`}
           </span>
         </th>
         {cells("trialByTrial")}

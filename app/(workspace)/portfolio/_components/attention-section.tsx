@@ -24,10 +24,11 @@ export function AttentionSection({
   statement: Statement;
   reporting: Reporting;
 }) {
-  const { withBasis } = useBasis();
+  const { basis, withBasis } = useBasis();
   const words: Words = {
     liquid: liquidOf(statement, reporting),
     reporting,
+    ifItComes: basis.risk === "yesNo" ? "When it comes, " : "",
     link: (href, name) => <Link href={withBasis(href)}>{name}</Link>,
   };
   return (
@@ -40,6 +41,8 @@ export function AttentionSection({
 interface Words {
   liquid: Liquid;
   reporting: Reporting;
+  /** before the width of a range, where a field may come to nothing */
+  ifItComes: string;
   link: (href: string, name: string) => React.ReactNode;
 }
 
@@ -109,7 +112,7 @@ function waitingFinding(item: Waiting, words: Words): Finding {
 type Waiting = Extract<AttentionView, { kind: "submitted" | "returned" }>;
 
 function findingOf(item: AttentionView, words: Words): Finding {
-  const { reporting, link } = words;
+  const { reporting, link, ifItComes } = words;
   switch (item.kind) {
     case "submitted":
     case "returned":
@@ -117,7 +120,7 @@ function findingOf(item: AttentionView, words: Words): Finding {
     case "field": {
       const wide =
         item.spread !== null &&
-        `P10 is ${formatFigure(item.spread, { digits: 2 })} times P90, on ${formatPercent(item.share)} of the liquid; ${sampleWords(item.samples)}.`;
+        `${ifItComes}P10 is ${formatFigure(item.spread, { digits: 2 })} times P90, on ${formatPercent(item.share)} of the liquid; ${sampleWords(item.samples)}.`;
       const cautions = item.cautions.map((code) => cautionWords(code, item.hydrogenSulphide));
       const asides = [
         ...(item.spread === null ? [] : ["Wide range"]),

@@ -1,5 +1,6 @@
 import type { ContributionView } from "@/app/api/v1/fields/ranking-schema";
 import type { Basis } from "@/components/basis/basis";
+import { nothingWords } from "@/components/portfolio/chance-words";
 import { countOf } from "@/components/portfolio/reporting";
 import { formatFigure, formatPercent } from "@/components/ui/format";
 
@@ -59,17 +60,6 @@ export function riskNote(
     case "risked":
       return "Risked: every trial is multiplied by the field’s chance of commerciality, so means are exact and ranges leave out the chance of nothing.";
     case "yesNo":
-      return `Yes or no: in every trial a field comes or does not, by its chance of commerciality, independently of the others, so ranges hold the chance of failure. ${nothingWords(chanceOfNothing)} The P90 of a single field whose chance is under 90 % is nothing.`;
+      return `Yes or no: in every trial a field comes or does not, by its chance of commerciality, independently of the others, so ranges hold the chance of failure; means are those of risked totals beyond sampling. ${nothingWords(chanceOfNothing)} The P90 of a single field whose chance is under 90 % is nothing.`;
   }
-}
-
-function nothingWords(chance: number | null): string {
-  if (chance === null || chance === 0) {
-    return "A field that is certain to come is among them, so the total is never nothing.";
-  }
-  if (chance < 1e-6) return "The chance that none of them comes is under one in a million.";
-  const odds = 1 / chance;
-  return chance >= 0.01
-    ? `The chance that none of them comes is ${formatPercent(chance, { decimals: 1 })}.`
-    : `The chance that none of them comes is one in ${Math.round(Number(odds.toPrecision(2))).toLocaleString("en-GB")}.`;
 }
