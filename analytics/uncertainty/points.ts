@@ -1,40 +1,34 @@
 import { fillNormalProbabilities, fillNormalQuantiles } from "../numerics/normal-table";
-import { rankByCounting } from "../numerics/order-statistics";
+import { rankByCounting, type OrderWorkspace } from "../numerics/order-statistics";
 import { createRandom, fillPermutation, type RandomStream } from "../numerics/random";
-import { fillStrata } from "./latin-hypercube";
-import {
-  combineScores,
-  fillCorrelatedRanks,
-  type CorrelationBlock,
-  type RankWorkspace,
-} from "./rank-correlation";
+import { fillByRank, fillStrata } from "./latin-hypercube";
+import { combineScores, correlateScores, type CorrelationBlock } from "./rank-correlation";
 import type { SamplingMethod } from "./sampling-schema";
 import { fillScrambled, toProbability } from "./sobol";
 
 /** Arrays as long as the longest replicate. */
-export interface PointsWorkspace extends RankWorkspace {
+export interface PointsWorkspace {
+  readonly words: Uint32Array;
+  readonly order: Uint32Array;
   readonly points: Uint32Array;
+  /** one for every dimension that can be correlated */
+  readonly scoreColumns: readonly Float64Array[];
+  readonly counting: OrderWorkspace;
   /** of the dimension drawn last: the stratum that each trial lies in, 0 to count - 1 */
   readonly ranks: Uint32Array;
   /** of the dimension drawn last: the probability in each stratum, ascending */
   readonly probabilities: Float64Array;
-  readonly rankColumns: readonly Uint32Array[];
 }
 
 /** Draws replicate after replicate; each continues the random streams where the last one left them. */
 export interface PointSource<Name extends string> {
   /** Fills `ranks` and `probabilities` with one dimension that depends on no other. */
   fill(dimension: number, count: number): void;
-  /**
-   * Draws dimensions that are correlated, and says for one after the other that `ranks` and `probabilities` are its.
-   *
-   * @param scores  normal scores of `count` trials
-   */
+  /** Draws dimensions that are correlated, and says for one after the other that `ranks` and `probabilities` are its. */
   fillCorrelated(
     block: CorrelationBlock<Name>,
     dimensionOf: (name: Name) => number,
     count: number,
-    scores: Float64Array,
     filled: (name: Name) => void,
   ): void;
 }
@@ -57,33 +51,56 @@ export function createPoints<Name extends string>(
   return sampling === "sobol" ? sobolPoints(seed, workspace) : hypercubePoints(seed, workspace);
 }
 
+/** Replicates shorter than this many trials an input are left with the correlations that chance gave them. */
+const TRIALS_PER_INPUT = 5;
+
 /**
- * Latin hypercubes: in each dimension one draw from each of `count` strata, in random order; the order of correlated
- * dimensions after Iman and Conover.
+ * Latin hypercubes: in each dimension one draw from each of `count` strata, in random order.
+ *
+ * Correlated dimensions are normal scores of such draws, whole draws and not their ranks: exchanging ranks would leave
+ * the places within strata independent, and with them the farthest tails, where the top stratum of a short replicate is
+ * wide. Chance correlations between the columns are taken out first (Iman and Conover). The first dimension of a block
+ * keeps its strata; the others, mixed from several, are about as even, not exactly so.
  */
 function hypercubePoints<Name extends string>(
   seed: number,
   workspace: PointsWorkspace,
 ): PointSource<Name> {
-  const { ranks, probabilities, words, rankColumns } = workspace;
+  const { ranks, probabilities, words } = workspace;
   const within = streams(seed, 0);
   const order = streams(seed, 1);
+  const fill = (dimension: number, count: number) => {
+    fillPermutation(order(dimension), ranks, count, words);
+    fillStrata(within(dimension), count, probabilities, words);
+  };
   return {
-    fill(dimension, count) {
-      fillPermutation(order(dimension), ranks, count, words);
-      fillStrata(within(dimension), count, probabilities, words);
-    },
-    fillCorrelated({ names, factor }, dimensionOf, count, scores, filled) {
-      const own = rankColumns.slice(0, names.length);
-      const randoms = names.map((name) => order(dimensionOf(name)));
-      fillCorrelatedRanks(factor, randoms, count, scores, workspace, own);
+    fill,
+    fillCorrelated({ names, factor }, dimensionOf, count, filled) {
+      const columns = workspace.scoreColumns.slice(0, names.length);
       names.forEach((name, i) => {
-        for (let t = 0; t < count; t += 1) ranks[t] = own[i][t];
-        fillStrata(within(dimensionOf(name)), count, probabilities, words);
-        filled(name);
+        fill(dimensionOf(name), count);
+        fillByRank(probabilities, ranks, count, columns[i]);
+        fillNormalQuantiles(columns[i], count, columns[i]);
       });
+      if (count < TRIALS_PER_INPUT * names.length) combineScores(columns, count, factor);
+      else correlateScores(columns, count, factor);
+      placeScores(names, count, workspace, filled);
     },
   };
+}
+
+/** Turns the scores of one dimension after the other back into ranks and probabilities, and says whose they are. */
+function placeScores<Name extends string>(
+  names: readonly Name[],
+  count: number,
+  { ranks, probabilities, scoreColumns, counting, order }: PointsWorkspace,
+  filled: (name: Name) => void,
+): void {
+  names.forEach((name, i) => {
+    rankByCounting(scoreColumns[i], count, counting, ranks, order);
+    fillNormalProbabilities(scoreColumns[i], order, count, probabilities);
+    filled(name);
+  });
 }
 
 /** Streams of scrambles, apart from those of hypercubes. */
@@ -98,7 +115,7 @@ function sobolPoints<Name extends string>(
   seed: number,
   workspace: PointsWorkspace,
 ): PointSource<Name> {
-  const { points, ranks, probabilities, scoreColumns, counting, order } = workspace;
+  const { points, ranks, probabilities, scoreColumns } = workspace;
   const scrambles = streams(seed, SCRAMBLES);
   const draw = (dimension: number, count: number) => {
     const log2 = 31 - Math.clz32(count);
@@ -115,7 +132,7 @@ function sobolPoints<Name extends string>(
   };
   return {
     fill,
-    fillCorrelated({ names, factor }, dimensionOf, count, _scores, filled) {
+    fillCorrelated({ names, factor }, dimensionOf, count, filled) {
       const columns = scoreColumns.slice(0, names.length);
       names.forEach((name, i) => {
         draw(dimensionOf(name), count);
@@ -123,11 +140,7 @@ function sobolPoints<Name extends string>(
         fillNormalQuantiles(columns[i], count, columns[i]);
       });
       combineScores(columns, count, factor);
-      names.forEach((name, i) => {
-        rankByCounting(columns[i], count, counting, ranks, order);
-        fillNormalProbabilities(columns[i], order, count, probabilities);
-        filled(name);
-      });
+      placeScores(names, count, workspace, filled);
     },
   };
 }

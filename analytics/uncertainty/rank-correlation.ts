@@ -1,8 +1,6 @@
 import { DomainError } from "../errors";
 import { choleskyFactor, invertLower } from "../numerics/cholesky";
 import { normalQuantile } from "../numerics/normal";
-import { rankByCounting, type OrderWorkspace } from "../numerics/order-statistics";
-import { fillPermutation, type RandomStream } from "../numerics/random";
 
 export interface CorrelatedPair<Name extends string> {
   a: Name;
@@ -144,7 +142,6 @@ function contradictoryTriple<Name extends string>(
 
 /**
  * Normal scores of van der Waerden: quantiles of i / (n + 1), i = 1..n, ascending and scaled to unit variance.
- * They depend on n alone, so a workspace keeps them.
  */
 export function normalScores(count: number): Float64Array {
   const scores = Float64Array.from({ length: count }, (_, i) =>
@@ -156,10 +153,13 @@ export function normalScores(count: number): Float64Array {
 }
 
 /**
- * Gives columns of scores the wanted correlations: T = M F^-1 C of Iman and Conover, with M'M / n = F'F and the
- * target C'C. The first column keeps its order; the columns are overwritten.
+ * Gives columns of scores the wanted correlations: T = M F^-1 C of Iman and Conover, with F'F the columns' own
+ * correlations and the target C'C. The first column stays as it is; the columns are overwritten.
  *
- * @param columns  k columns of n scores with mean 0
+ * Where columns are not of unit variance, each keeps about its own: to make them so would pull in whichever far draw the
+ * tails happen to hold, and with it the variance of what is computed.
+ *
+ * @param columns  k columns of n scores with mean about 0 and variance about 1
  * @param factor   lower Cholesky factor of the target, k x k
  * @throws {DomainError} when n is too small for k columns (their own correlations are then singular)
  * @see R. L. Iman, W. J. Conover, A distribution-free approach to inducing rank correlation among input variables,
@@ -171,9 +171,13 @@ export function correlateScores(
   factor: Float64Array,
 ): void {
   const k = columns.length;
+  const lengths = columns.map((column) => Math.sqrt(dot(column, column, count)));
   const own = new Float64Array(k * k);
   for (let i = 0; i < k; i += 1) {
-    for (let j = 0; j <= i; j += 1) own[i * k + j] = dot(columns[i], columns[j], count) / count;
+    own[i * k + i] = 1;
+    for (let j = 0; j < i; j += 1) {
+      own[i * k + j] = dot(columns[i], columns[j], count) / (lengths[i] * lengths[j]);
+    }
   }
   const ownFactor = choleskyFactor(own, k);
   if (ownFactor === null) {
@@ -229,55 +233,4 @@ function product(left: Float64Array, right: Float64Array, n: number): Float64Arr
     }
   }
   return out;
-}
-
-/** Scratch for {@link fillCorrelatedRanks}. */
-export interface RankWorkspace {
-  readonly words: Uint32Array;
-  readonly order: Uint32Array;
-  readonly scoreColumns: readonly Float64Array[];
-  readonly counting: OrderWorkspace;
-}
-
-/**
- * Draws the ranks of a block's inputs, one array per input, so that values put in that order have the block's rank
- * correlations. Each input keeps exactly its own values: only their order is chosen.
- *
- * @param randoms  one stream per input of the block
- * @param scores   `normalScores(count)`
- * @param ranks    one array of n ranks per input, overwritten
- */
-export function fillCorrelatedRanks(
-  factor: Float64Array,
-  randoms: readonly RandomStream[],
-  count: number,
-  scores: Float64Array,
-  workspace: RankWorkspace,
-  ranks: readonly Uint32Array[],
-): void {
-  const columns = workspace.scoreColumns.slice(0, ranks.length);
-  ranks.forEach((own, i) => {
-    fillPermutation(randoms[i], own, count, workspace.words);
-    const column = columns[i];
-    for (let t = 0; t < count; t += 1) column[t] = scores[own[t]];
-  });
-  correlateScores(columns, count, factor);
-  for (let i = 1; i < ranks.length; i += 1) {
-    rankByCounting(columns[i], count, workspace.counting, ranks[i], workspace.order);
-  }
-}
-
-/**
- * Spearman's rank correlation of two sets of ranks 0..n-1 without ties.
- *
- *     1 - 6 sum (a - b)^2 / (n (n^2 - 1))
- */
-export function spearman(a: Uint32Array, b: Uint32Array, count: number): number {
-  if (count < 2) return 0;
-  let sum = 0;
-  for (let i = 0; i < count; i += 1) {
-    const difference = a[i] - b[i];
-    sum += difference * difference;
-  }
-  return 1 - (6 * sum) / (count * (count * count - 1));
 }

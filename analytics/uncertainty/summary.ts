@@ -85,11 +85,17 @@ export function rangeOfStrata(sorted: Float64Array, count: number): SampleRange 
  *
  * with s the standard deviation (R - 1) and f the density there, from the slope of the sample's own distribution. With
  * 16 replicates the error is itself known to about 18 % (1 / sqrt(2 x 15)), and an interval of a chance stated takes
- * Student's t with R - 1 degrees of freedom.
+ * Student's t with R - 1 degrees of freedom (`halfWidth95`). A share of m trials is a multiple of 1 / m, so s(F) counts
+ * as at least what rounding to that alone would make it, 1 / (m sqrt(12)): replicates that agree do not know a
+ * percentile exactly.
  *
- * With one replicate they are those of independent trials, sd / sqrt(n) and sqrt(p (1 - p) / n) / f: for runs too short
- * to divide. For a Latin hypercube that is on the safe side: its variance is at most n / (n - 1) times that of
- * independent trials and usually about half.
+ * The error of the mean is a little small where a few far trials decide it, because most replicates have none of them.
+ * Of a product of lognormals whose logarithm has a standard deviation of 0.8, and of means of scrambled nets, errors are
+ * 1.1 to 1.35 times those stated and an interval of 95 % holds in 90 to 95 % of runs; percentiles have no such fault.
+ *
+ * With one replicate they are those of independent trials, sd / sqrt(n) and sqrt(p (1 - p) / n) / f: at most that much,
+ * for trials spread more evenly than independent ones. The variance of a Latin hypercube is at most n / (n - 1) times
+ * that of independent trials and usually about half.
  *
  * @param values  finite numbers, not changed
  * @param count   how many of them to use
@@ -167,13 +173,15 @@ function sectioned(
       squares[level] += change * (value - shares[level]);
     }
   }
-  const error = (level: keyof SampleRange) =>
-    Math.sqrt(squares[level] / (replicates - 1) / replicates);
+  const variance = (level: keyof SampleRange) => squares[level] / (replicates - 1);
+  const rounding = (replicates / count) ** 2 / 12;
+  const ofShare = (level: keyof SampleRange) =>
+    Math.sqrt(Math.max(variance(level), rounding) / replicates);
   return {
-    p90: error("p90") * slopeAt(quantiles, 10, count),
-    p50: error("p50") * slopeAt(quantiles, 50, count),
-    p10: error("p10") * slopeAt(quantiles, 90, count),
-    mean: error("mean"),
+    p90: ofShare("p90") * slopeAt(quantiles, 10, count),
+    p50: ofShare("p50") * slopeAt(quantiles, 50, count),
+    p10: ofShare("p10") * slopeAt(quantiles, 90, count),
+    mean: Math.sqrt(variance("mean") / replicates),
   };
 }
 

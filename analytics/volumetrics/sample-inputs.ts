@@ -68,14 +68,14 @@ export function createInputSampler(
   return {
     rangeOf: ranges.of,
     fill(index) {
-      const { count, scores } = workspace.replicates[index];
+      const { count } = workspace.replicates[index];
       const columnOf = (name: DriverName) => columnIn(workspace, index, name);
       const place = ({ name, distribution }: SampledInput) => {
         placeByRank(distribution, count, workspace, columnOf(name));
         ranges.add(name, rangeOfStrata(workspace.sorted, count), count);
       };
       for (const block of prepared.blocks) {
-        source.fillCorrelated(block, dimensionOf, count, scores, (name) => {
+        source.fillCorrelated(block, dimensionOf, count, (name) => {
           place({ name, distribution: prepared.distributions[name] });
         });
       }

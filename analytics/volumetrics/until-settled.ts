@@ -1,4 +1,5 @@
 import { DomainError } from "../errors";
+import { halfWidth95, replicatesOf } from "../uncertainty/replicates";
 import type { SamplingMethod } from "../uncertainty/sampling-schema";
 import type { EstimateInputs } from "./inputs-schema";
 import type { Range, SimulationSummary } from "./results-schema";
@@ -32,9 +33,6 @@ export interface SettledSimulation {
   settled: boolean;
   steps: SettleStep[];
 }
-
-/** 0.975 quantile of Student's t with 15 degrees of freedom: standard errors come from 16 replicates. */
-const HALF_WIDTH_95 = 2.13145;
 
 /**
  * Twice as many trials, from 1,024 on, until the percentiles of wet gas in place and recoverable condensate are known to
@@ -78,11 +76,12 @@ export function simulateUntilSettled(
 }
 
 function stepOf({ trials, results }: SimulationSummary): SettleStep {
+  const halfWidth = halfWidth95(replicatesOf(trials));
   const widths = [results.wetGasInPlaceScf, results.condensateRecoverableStb].flatMap((result) =>
     (["p90", "p50", "p10"] as const).map((name) => {
       const error = result.standardErrors[name];
       // A result that is always 0 is known.
-      return error === 0 ? 0 : (HALF_WIDTH_95 * error) / Math.abs(result[name]);
+      return error === 0 ? 0 : (halfWidth * error) / Math.abs(result[name]);
     }),
   );
   const { p90, p50, p10, mean, standardErrors } = results.condensateRecoverableStb;

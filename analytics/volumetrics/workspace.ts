@@ -1,7 +1,6 @@
 import { createOrderWorkspace, type OrderWorkspace } from "../numerics/order-statistics";
 import { planInputNames, type PlanInputName } from "../recovery/recovery-plan-schema";
 import { createRecoveryColumns, type RecoveryColumns } from "../recovery/trial-recovery";
-import { normalScores } from "../uncertainty/rank-correlation";
 import type { PointsWorkspace } from "../uncertainty/points";
 import { replicateStarts } from "../uncertainty/replicates";
 import { inputNames, type InputName } from "./inputs-schema";
@@ -50,7 +49,6 @@ export interface Replicate {
   /** the first trial */
   readonly start: number;
   readonly count: number;
-  readonly scores: Float64Array;
   readonly inputs: TrialColumns<InputName>;
   /** the stratum of each trial's input, 0 to count - 1: its rank in the replicate, unless a set of cases decides */
   readonly strata: Record<InputName, Uint16Array>;
@@ -125,14 +123,12 @@ export function createWorkspace(
   const inputs = columns(inputNames, () => new Float64Array(keepInputs ? trials : longest));
   const strata = columns(inputNames, () => new Uint16Array(trials));
   const outputs = columns([...resultNames, ...derivedNames], () => new Float64Array(trials));
-  const scoresOf = scoreTables(spans);
   return {
     trials,
     starts,
     replicates: spans.map(({ start, count }) => ({
       start,
       count,
-      scores: scoresOf(count),
       inputs: part(inputs, keepInputs ? start : 0, count),
       strata: part(strata, start, count),
       outputs: part(outputs, start, count),
@@ -141,7 +137,6 @@ export function createWorkspace(
     order: integers(),
     ranks: integers(),
     points: integers(),
-    rankColumns: inputNames.map(integers),
     cases: new Uint8Array(longest),
     scoreColumns: inputNames.map(numbers),
     counting: createOrderWorkspace(longest),
@@ -181,15 +176,6 @@ export function columnOf(
 
 function isPlanInput(name: DriverName): name is PlanInputName {
   return (planInputNames as readonly string[]).includes(name);
-}
-
-/** Replicates have one of two lengths, and normal scores depend on nothing else. */
-function scoreTables(spans: readonly { count: number }[]): (count: number) => Float64Array {
-  const tables = new Map<number, Float64Array>();
-  for (const { count } of spans) {
-    if (!tables.has(count)) tables.set(count, normalScores(count));
-  }
-  return (count) => tables.get(count) ?? normalScores(count);
 }
 
 const longestOf = (spans: readonly { count: number }[]) =>

@@ -7,7 +7,7 @@ import {
   viewFieldTrials,
 } from "@/analytics/portfolio/field-trials";
 import { alignFields } from "@/analytics/portfolio/roll-up";
-import { spearman } from "@/analytics/uncertainty/rank-correlation";
+import { spearman } from "../../support/spearman";
 import { fieldOf, independent, rankOf, reservoirOf, sampleOf } from "./book";
 
 const lognormal = { kind: "lognormalP90P10", p90: 50, p10: 200 } as const;

@@ -1,14 +1,10 @@
-import * as statistics from "simple-statistics";
 import { describe, expect, it } from "vitest";
 import { choleskyFactor } from "@/analytics/numerics/cholesky";
 import { createOrderWorkspace, rankByCounting } from "@/analytics/numerics/order-statistics";
-import { createRandom } from "@/analytics/numerics/random";
 import {
   correlateScores,
   correlationBlocks,
-  fillCorrelatedRanks,
   normalScores,
-  spearman,
 } from "@/analytics/uncertainty/rank-correlation";
 
 const integers = (n: number) => new Uint32Array(n);
@@ -116,47 +112,5 @@ describe("correlationBlocks", () => {
     ],
   ] as const)("refuses %j", (pairs, message) => {
     expect(() => correlationBlocks(order, pairs)).toThrow(message);
-  });
-});
-
-describe("fillCorrelatedRanks", () => {
-  it("gives Spearman correlations of what was asked, to sampling error", () => {
-    const n = 10_000;
-    const names = ["a", "b", "c"] as const;
-    const wanted = [
-      { a: "a", b: "b", rank: 0.8 },
-      { a: "a", b: "c", rank: -0.4 },
-      { a: "b", b: "c", rank: -0.1 },
-    ] as const;
-    const [block] = correlationBlocks(names, wanted);
-    const ranks = names.map(() => integers(n));
-    fillCorrelatedRanks(
-      block.factor,
-      names.map((_, i) => createRandom(5, i)),
-      n,
-      normalScores(n),
-      {
-        words: integers(n),
-        order: integers(n),
-        scoreColumns: names.map(() => new Float64Array(n)),
-        counting: createOrderWorkspace(n),
-      },
-      ranks,
-    );
-    for (const { a, b, rank } of wanted) {
-      const [x, y] = [names.indexOf(a), names.indexOf(b)];
-      // The scores hit their target exactly; ranks follow to about 1 / n.
-      expect(Math.abs(spearman(ranks[x], ranks[y], n) - rank)).toBeLessThan(0.005);
-    }
-    for (const own of ranks) expect(new Set(own).size).toBe(n);
-  });
-});
-
-describe("spearman", () => {
-  it("agrees with simple-statistics", () => {
-    const a = [3, 0, 2, 1, 4, 5];
-    const b = [2, 1, 3, 0, 5, 4];
-    const expected = statistics.sampleRankCorrelation(a, b);
-    expect(spearman(Uint32Array.from(a), Uint32Array.from(b), 6)).toBeCloseTo(expected, 12);
   });
 });

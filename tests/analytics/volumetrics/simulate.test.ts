@@ -199,11 +199,13 @@ describe("simulate", () => {
   );
 
   it("gives the sampled inputs the percentiles of their distributions", () => {
+    const tied = new Set(inputs.correlations.flatMap(({ a, b }) => [a, b]));
     for (const name of inputNames) {
       const { range, mean } = compileDistribution(inputs.uncertain[name].distribution);
+      // A Latin hypercube of n draws is within about 1 / n of each percentile; scores mixed from two are less even.
+      const within = tied.has(name) ? 0.003 : 0.0005;
       for (const level of ["p90", "p50", "p10"] as const) {
-        // A Latin hypercube of n draws is within about 1 / n of each percentile.
-        expect(summary.inputs[name][level] / range[level]).toBeCloseTo(1, 3);
+        expect(Math.abs(summary.inputs[name][level] / range[level] - 1)).toBeLessThan(within);
       }
       expect(summary.inputs[name].mean / mean).toBeCloseTo(1, 3);
     }
