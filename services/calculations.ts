@@ -27,7 +27,7 @@ import {
   convertGasVolume,
 } from "@/analytics/units/standard-conditions";
 import { inPlace } from "@/analytics/volumetrics/in-place";
-import { checkInputs } from "@/analytics/volumetrics/check-inputs";
+import { requirePossibleInputs } from "@/analytics/volumetrics/check-inputs";
 import { extremeConditionWarnings } from "@/analytics/volumetrics/extreme-conditions";
 import {
   inputNames,
@@ -235,7 +235,7 @@ export async function calculateSimulation(
 ): Promise<SimulationSummary> {
   const { inputs, trials, seed, sampling } = question;
   refuseImpossible("", () => checkTrials(trials, sampling));
-  refuseImpossible("inputs", () => checkInputs(inputs));
+  refuseImpossible("inputs", () => requirePossibleInputs(inputs));
   const { summary } = await runSimulation(inputs, { trials, seed, sampling }, options);
   return summary;
 }

@@ -32,7 +32,10 @@ export interface CompiledDistribution {
   readonly range: { p90: number; p50: number; p10: number };
   /** the interval it lies in; infinite where it has no end */
   readonly support: { minimum: number; maximum: number };
-  /** probability that truncation removed from the distribution as described, 0 to 0.99 */
+  /**
+   * probability that truncation removed from the distribution as described, 0 to 0.99; of scenarios, the mean over all
+   * cases by their weights
+   */
   readonly lostMass: number;
   /** values with chances of their own, ascending; empty for a distribution that has a density everywhere */
   readonly atoms: readonly Atom[];

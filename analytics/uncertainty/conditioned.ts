@@ -22,9 +22,10 @@ export function condition(definition: Bounded, family: Family): CompiledDistribu
   const above = maximum < family.maximum ? family.cdf(maximum) : 1;
   const kept = above - below;
   if (!(kept >= LEAST_KEPT_MASS)) {
+    const but = kept > 0 ? ` but ${Number((100 * kept).toPrecision(2))} %` : "";
     const input = definition.minimum !== undefined && below > 1 - above ? "minimum" : "maximum";
     throw new DomainError(
-      `The bounds ${describeBounds(definition)} leave out ${(100 * (1 - kept)).toFixed(1)} % of the distribution. ` +
+      `The bounds ${describeBounds(definition)} leave out all${but} of the distribution. ` +
         "Its parameters and its bounds contradict each other.",
       { input, value: definition[input] },
     );

@@ -1,6 +1,7 @@
 import { DomainError } from "../errors";
 import type { DataShape } from "./distribution-schema";
 import { empiricalFamily } from "./empirical";
+import { requireHonestSigma } from "./parameter-checks";
 import { lognormalFamily, normalFamily, type Family } from "./families";
 
 export interface DataFit {
@@ -13,7 +14,7 @@ export interface DataFit {
  * A distribution from measured values: the values themselves, or the normal or lognormal distribution of maximum
  * likelihood, whose mean and standard deviation (divisor n) are those of the values or of their logarithms.
  *
- * @throws {DomainError} when the values are all the same, one is not a number, or a lognormal has a value of 0 or below;
+ * @throws {DomainError} when the values are all the same to nine digits or too large or small for a deviation, one is not a number, or a lognormal has a value of 0 or below;
  *   `input` is `values` or a path such as `values.3`
  */
 export function fitData(shape: DataShape, values: readonly number[]): DataFit {
@@ -27,9 +28,10 @@ export function fitData(shape: DataShape, values: readonly number[]): DataFit {
       { input: "values", value: values[0] },
     );
   }
+  const parameters = likeliest(values);
+  requireSpread(values, parameters.standardDeviation);
   if (shape === "empirical") return { family: empiricalFamily(values), parameters: null };
   if (shape === "normal") {
-    const parameters = likeliest(values);
     return {
       family: normalFamily(parameters.mean, parameters.standardDeviation),
       parameters,
@@ -42,11 +44,32 @@ export function fitData(shape: DataShape, values: readonly number[]): DataFit {
       { input: `values.${wrong}`, value: values[wrong] },
     );
   }
-  const parameters = likeliest(values.map((value) => Math.log(value)));
+  const ofLogs = likeliest(values.map((value) => Math.log(value)));
+  requireHonestSigma("values", ofLogs.standardDeviation);
   return {
-    family: lognormalFamily(parameters.mean, parameters.standardDeviation),
-    parameters,
+    family: lognormalFamily(ofLogs.mean, ofLogs.standardDeviation),
+    parameters: ofLogs,
   };
+}
+
+/** Measured values that differ by less, relative to the largest, differ by rounding alone. */
+const LEAST_SPREAD = 1e-9;
+
+/** What passes has logarithms that vary as well: they differ by at least the difference over the larger value. */
+function requireSpread(values: readonly number[], standardDeviation: number): void {
+  const largest = values.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
+  if (!Number.isFinite(standardDeviation) || !(largest > Number.MIN_VALUE / Number.EPSILON)) {
+    throw new DomainError("The values are too large or too small to be measured values.", {
+      input: "values",
+      value: largest,
+    });
+  }
+  if (standardDeviation > LEAST_SPREAD * largest) return;
+  throw new DomainError(
+    `The ${values.length} values differ by less than a billionth of the largest, ${largest}, which is rounding. For a ` +
+      "value without uncertainty use a constant.",
+    { input: "values", value: largest },
+  );
 }
 
 /** Mean, and standard deviation with divisor n. */

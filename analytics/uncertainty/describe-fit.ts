@@ -57,8 +57,8 @@ function dataFit({ shape, values }: OfKind<"data">): DataFitReport {
   const mean = values.reduce((sum, value) => sum + value, 0) / n;
   const squares = values.reduce((sum, value) => sum + (value - mean) ** 2, 0);
   const sorted = [...values].sort((a, b) => a - b);
-  const steps = sorted.flatMap((value, i) =>
-    sorted[i + 1] === value ? [] : [{ value, share: (i + 1) / n }],
+  const steps = thinned(
+    sorted.flatMap((value, i) => (sorted[i + 1] === value ? [] : [{ value, share: (i + 1) / n }])),
   );
   return {
     kind: "data",
@@ -73,6 +73,16 @@ function dataFit({ shape, values }: OfKind<"data">): DataFitReport {
     },
     stairs: { values: steps.map(({ value }) => value), shares: steps.map(({ share }) => share) },
   };
+}
+
+/** As many as a drawing can show. */
+const MOST_STAIRS = 200;
+
+/** Evenly chosen steps, the first and the last among them; each that stays is where it was. */
+function thinned<Step>(steps: readonly Step[]): readonly Step[] {
+  if (steps.length <= MOST_STAIRS) return steps;
+  const gap = (steps.length - 1) / (MOST_STAIRS - 1);
+  return Array.from({ length: MOST_STAIRS }, (_, i) => steps[Math.round(i * gap)]);
 }
 
 function goodness(name: "normal" | "lognormal", values: readonly number[]): Goodness {

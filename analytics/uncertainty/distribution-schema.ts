@@ -23,10 +23,17 @@ export const percentileFamilies = [
 ] as const;
 export type PercentileFamily = (typeof percentileFamilies)[number];
 
+/**
+ * Chances that a stated percentile may have. Nobody knows what is exceeded once in 10,000 times, and a figure further out
+ * would set the whole distribution by the part of it that is known least.
+ */
+export const EXCEEDANCES = [0.0001, 0.9999] as const;
+const EXCEEDANCE_REASON = "must lie between 0.0001 and 0.9999: nobody knows what lies further out";
+
 /** How pasted data become a distribution. */
 export const dataShapes = ["empirical", "normal", "lognormal"] as const;
 export type DataShape = (typeof dataShapes)[number];
-/** Fewer say nothing of a shape; more belong in a file. */
+/** Fewer say nothing of a shape; more belong in a file. Of an input with cases, the most holds for all of them together. */
 export const DATA_VALUES = [5, 2_000] as const;
 
 const simpleKinds = [
@@ -65,9 +72,19 @@ const simpleKinds = [
     .object({
       kind: z.literal("percentiles"),
       family: z.enum(percentileFamilies),
-      /** `exceedance` is the chance of at least `value`, between 0 and 1: 0.9 for a P90 */
+      /** `exceedance` is the chance of at least `value`: 0.9 for a P90 */
       points: z
-        .array(z.object({ exceedance: z.number().gt(0).lt(1), value: finite }).strict())
+        .array(
+          z
+            .object({
+              exceedance: z
+                .number()
+                .min(EXCEEDANCES[0], EXCEEDANCE_REASON)
+                .max(EXCEEDANCES[1], EXCEEDANCE_REASON),
+              value: finite,
+            })
+            .strict(),
+        )
         .min(2)
         .max(3),
       ...truncation,
@@ -98,6 +115,13 @@ export const scenarioSchema = z
   .strict();
 export type Scenario = z.infer<typeof scenarioSchema>;
 
+function countValues(scenarios: readonly Scenario[]): number {
+  return scenarios.reduce(
+    (count, { distribution: d }) => count + (d.kind === "data" ? d.values.length : 0),
+    0,
+  );
+}
+
 /**
  * How an uncertain input is described. P90 is the low case (90 % chance of at least this much), P10 the high case.
  * The shape only; `distribution.ts` refuses parameters that make no distribution (low above high, negative spread).
@@ -112,7 +136,15 @@ export const distributionSchema = z.discriminatedUnion("kind", [
        * a thicker column); their cases then have the same names and weights
        */
       caseSet: z.string().trim().min(1).max(60).optional(),
-      scenarios: z.array(scenarioSchema).min(2).max(12),
+      scenarios: z
+        .array(scenarioSchema)
+        .min(2)
+        .max(12)
+        .refine(
+          (scenarios) => countValues(scenarios) <= DATA_VALUES[1],
+          `may have ${DATA_VALUES[1].toLocaleString("en-GB")} measured values in all their cases together: more belong in ` +
+            "a file, of which a case takes the average or the percentiles",
+        ),
     })
     .strict(),
 ]);

@@ -1,4 +1,6 @@
 import type { CompiledDistribution } from "./compiled-distribution";
+import { DomainError } from "../errors";
+import { requireMagnitudes } from "./parameter-magnitudes";
 import { condition } from "./conditioned";
 import { fitData } from "./data-fit";
 import { drawnDensity, drawnEnds } from "./drawn-density";
@@ -14,6 +16,7 @@ import {
 import {
   requireAbove,
   requireFinite,
+  requireHonestSigma,
   requireMode,
   requirePositive,
   requireProbability,
@@ -31,14 +34,23 @@ const Z_P10 = 1.2815515655446004;
  * Checks a distribution's parameters and makes it usable. With `minimum` or `maximum` it is conditioned on lying
  * inside them (values outside are left out, not moved to the bound), and `lostMass` says how much that removed.
  *
- * @throws {DomainError} when the parameters make no distribution, or the bounds leave under 1 % of it; the message
- *   names the parameter and says why
+ * @throws {DomainError} when the parameters make no distribution or one whose mean and deviation cannot be worked out, or
+ *   the bounds leave under 1 % of it; the message names the parameter and says why
  * @example compileDistribution({ kind: "lognormalP90P10", p90: 50, p10: 500 }).mean // => 236.710864...
  */
 export function compileDistribution(definition: Distribution): CompiledDistribution {
   if (definition.kind === "scenarios") return compileScenarios(definition, compileDistribution);
+  const largest = requireMagnitudes(definition);
   if (definition.kind === "constant") return constant(definition, definition.value);
-  return condition(definition, familyOf(definition));
+  const compiled = condition(definition, familyOf(definition));
+  const { range, mean, standardDeviation } = compiled;
+  const figures = [mean, standardDeviation, range.p90, range.p50, range.p10];
+  if (figures.every(Number.isFinite) && standardDeviation > 0) return compiled;
+  throw new DomainError(
+    "With these parameters the distribution is too narrow, or lies too close to 0, for a mean and a standard deviation. " +
+      "For a value without uncertainty use a constant.",
+    { input: largest },
+  );
 }
 
 function familyOf(d: Exclude<SimpleDistribution, { kind: "constant" }>): Family {
@@ -59,17 +71,18 @@ function familyOf(d: Exclude<SimpleDistribution, { kind: "constant" }>): Family 
       return normalFamily(requireFinite("mean", d.mean), d.standardDeviation);
     case "lognormal":
       requirePositive("sigma", "Sigma, the standard deviation of the logarithm,", d.sigma);
-      return lognormalFamily(requireFinite("mu", d.mu), d.sigma);
+      requireHonestSigma("sigma", d.sigma);
+      return lognormalFamily(d.mu, d.sigma);
     case "normalP90P10":
       requireAbove("p10", d.p10, "p90", d.p90);
       return normalFamily((d.p90 + d.p10) / 2, (d.p10 - d.p90) / (2 * Z_P10));
-    case "lognormalP90P10":
+    case "lognormalP90P10": {
       requirePositive("p90", "The P90 of a lognormal distribution", d.p90);
       requireAbove("p10", d.p10, "p90", d.p90);
-      return lognormalFamily(
-        (Math.log(d.p90) + Math.log(d.p10)) / 2,
-        Math.log(d.p10 / d.p90) / (2 * Z_P10),
-      );
+      const sigma = Math.log(d.p10 / d.p90) / (2 * Z_P10);
+      requireHonestSigma("p10", sigma);
+      return lognormalFamily((Math.log(d.p90) + Math.log(d.p10)) / 2, sigma);
+    }
     case "percentiles":
       return fitPercentiles(d.family, d.points).family;
     case "data":

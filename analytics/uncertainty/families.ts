@@ -185,10 +185,12 @@ export function lognormalFamily(mu: number, sigma: number): Family {
       const a = low > 0 ? standard(low) : -Infinity;
       const b = standard(high);
       const mass = normalMass(a, b);
-      const first = Math.exp(mu + sigma ** 2 / 2) * (normalMass(a - sigma, b - sigma) / mass);
-      const second =
-        Math.exp(2 * mu + 2 * sigma ** 2) * (normalMass(a - 2 * sigma, b - 2 * sigma) / mass);
-      return { mean: first, variance: second - first ** 2 };
+      const ofFirst = normalMass(a - sigma, b - sigma) / mass;
+      const ofSecond = normalMass(a - 2 * sigma, b - 2 * sigma) / mass;
+      const mean = Math.exp(mu + sigma ** 2 / 2) * ofFirst;
+      // E(x^2) / mean^2 - 1 = e^(sigma^2) ofSecond / ofFirst^2 - 1, whose digits a small sigma would cancel.
+      const relative = Math.expm1(sigma ** 2 + Math.log(ofSecond / ofFirst ** 2));
+      return { mean, variance: mean ** 2 * relative };
     },
     fillQuantiles(probabilities, count, out) {
       fillNormalQuantiles(probabilities, count, out);

@@ -45,7 +45,7 @@ export const rangeFitSchema = z.discriminatedUnion("kind", [
     parameters: z.object({ mean: z.number(), standardDeviation: z.number() }).nullable(),
     /** whichever shape was chosen; null for the lognormal when a value is 0 or below */
     tests: z.object({ normal: goodnessSchema, lognormal: goodnessSchema.nullable() }),
-    /** stairs of the values: the share of them that is at most `values[i]`, ascending, ties once */
+    /** stairs of the values: the share of them that is at most `values[i]`, ascending, ties once; 200 steps at most, evenly chosen */
     stairs: z.object({ values: z.array(z.number()), shares: z.array(z.number()) }),
   }),
 ]);

@@ -25,6 +25,10 @@ export const CONTRADICTED_BELOW = 0.05;
  * Two tests of normality with estimated mean and standard deviation (divisor n - 1). For a lognormal distribution give
  * the logarithms.
  *
+ * How near the p-values come (100,000 simulated samples of each size): up to 0.1, where a fit is judged, both are within
+ * 0.01 at every size. Above, Lilliefors' is within 0.035 at 5 values and 0.02 from 6 on, Anderson and Darling's within
+ * 0.06 at 8 values, 0.04 at 12 and 0.03 from 20 on.
+ *
  * @param values  at least 2, not all the same
  * @see M. A. Stephens, in R. B. D'Agostino, M. A. Stephens (eds), Goodness-of-Fit Techniques (1986), table 4.9
  * @see G. E. Dallal, L. Wilkinson, An analytic approximation to the distribution of Lilliefors's test statistic for

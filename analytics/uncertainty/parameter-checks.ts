@@ -17,6 +17,24 @@ export function requireFinite(input: string, value: number): number {
   return value;
 }
 
+/**
+ * Largest standard deviation of the logarithm of one input: its P10 is then 168 times its P90, and one value in a
+ * hundred is above 100 times its P50. A wider one says that the input is not known at all, and its mean comes from values
+ * that nobody has thought of. Common practice, no source.
+ */
+export const MOST_SIGMA = 2;
+
+/** @param sigma  of a lognormal distribution, > 0 */
+export function requireHonestSigma(input: string, sigma: number): void {
+  // A P90 and a P10 that were worked out from the largest sigma come back with their last digits rounded.
+  if (sigma <= MOST_SIGMA * (1 + 1e-6)) return;
+  throw new DomainError(
+    `The logarithm would have a standard deviation of ${Number(sigma.toPrecision(4))}; no input is so uncertain that it ` +
+      `has more than ${MOST_SIGMA} (a P10 of 168 times the P90). Its mean would rest on values that nobody has thought of.`,
+    { input, value: sigma },
+  );
+}
+
 export function requireAbove(input: string, value: number, other: string, bound: number): void {
   requireFinite(input, value);
   requireFinite(other, bound);

@@ -1,7 +1,7 @@
 import { DomainError } from "../errors";
 import { normalQuantile } from "../numerics/normal";
 import { findRoot } from "../numerics/root";
-import type { PercentileFamily } from "./distribution-schema";
+import { EXCEEDANCES, type PercentileFamily } from "./distribution-schema";
 import {
   lognormalFamily,
   normalFamily,
@@ -9,12 +9,13 @@ import {
   triangularFamily,
   type Family,
 } from "./families";
+import { MOST_SIGMA, requireHonestSigma } from "./parameter-checks";
 import { unitQuantile, type Limits, type ModeFamily } from "./range-ends";
 import { growth, shiftedLognormalFamily } from "./shifted-lognormal";
 
 /** A stated percentile: the chance of at least `value`. */
 export interface PercentilePoint {
-  /** 0 to 1, exclusive */
+  /** within `EXCEEDANCES` */
   readonly exceedance: number;
   readonly value: number;
 }
@@ -44,7 +45,7 @@ const NAMES: Record<PercentileFamily, string> = {
  * limits, and is otherwise the closest one, its mode at a limit, by least squares.
  *
  * @throws {DomainError} when a smaller chance of exceeding goes with a smaller or the same value, points are too few for
- *   the family, a lognormal has a value of 0 or below, or the points are too skew; `input` is a path such as
+ *   the family, a chance lies too far out, a lognormal has a value of 0 or below, or the points are too skew; `input` is a path such as
  *   `points.1.value`
  */
 export function fitPercentiles(
@@ -73,6 +74,13 @@ function inOrder(points: readonly PercentilePoint[]): PercentilePoint[] {
   const inputOf = (point: PercentilePoint, part: string) =>
     `points.${points.indexOf(point)}.${part}`;
   ordered.forEach((point, i) => {
+    if (!(point.exceedance >= EXCEEDANCES[0] && point.exceedance <= EXCEEDANCES[1])) {
+      throw new DomainError(
+        `The chance of a percentile must lie between 0.0001 and 0.9999; ${point.exceedance} does not. Nobody knows what ` +
+          "lies further out.",
+        { input: inputOf(point, "exceedance"), value: point.exceedance },
+      );
+    }
     if (i === 0) return;
     const before = ordered[i - 1];
     if (point.exceedance === before.exceedance) {
@@ -103,7 +111,7 @@ function fitOrdered(
   ordered: readonly PercentilePoint[],
   points: readonly PercentilePoint[],
 ): Omit<PercentileFit, "given"> {
-  const scores = ordered.map(({ exceedance }) => normalQuantile(1 - exceedance));
+  const scores = ordered.map(({ exceedance }) => -normalQuantile(exceedance));
   const values = ordered.map(({ value }) => value);
   switch (family) {
     case "normal": {
@@ -121,6 +129,7 @@ function fitOrdered(
         scores,
         values.map((value) => Math.log(value)),
       );
+      requireHonestSigma("points", slope);
       return { family: lognormalFamily(intercept, slope), limits: null };
     }
     case "shiftedLognormal":
@@ -150,24 +159,24 @@ function straightLine(x: readonly number[], y: readonly number[]) {
   return { intercept: meanY - slope * meanX, slope };
 }
 
-/** Largest spread of the logarithm; with P90, P50 and P10 the upper part is then 600 times the lower. */
-const MOST_SIGMA = 5;
-
 /**
  * The shifted lognormal through three points. Its sigma is where
  *
  *     (e^(sigma z3) - e^(sigma z2)) / (e^(sigma z2) - e^(sigma z1)) = (x3 - x2) / (x2 - x1)
  *
- * whose left side rises with sigma from 0 to infinity, so there is one for any three points in order.
+ * whose left side rises with sigma from 0 to infinity, so there is one for any three points in order. One beyond
+ * `MOST_SIGMA` is refused: with P90, P50 and P10 one gap is then more than 13 times the other.
  */
 function throughThree([z1, z2, z3]: readonly number[], [x1, x2, x3]: readonly number[]): Family {
   const skew = Math.log((x3 - x2) / (x2 - x1));
   const shape = (sigma: number) =>
     Math.log(((z3 - z2) * growth(sigma * (z3 - z2))) / ((z2 - z1) * growth(-sigma * (z2 - z1))));
   if (!(skew > shape(-MOST_SIGMA) && skew < shape(MOST_SIGMA))) {
+    const ratio = Math.exp(Math.abs(skew));
+    const times = ratio < 1e6 ? `${Number(ratio.toPrecision(3))}` : "more than a million";
     throw new DomainError(
-      `The three values are too skew for a distribution: one of the two gaps is ` +
-        `${Math.exp(Math.abs(skew)).toPrecision(3)} times the other. Check the middle value.`,
+      `The three values are too skew for a distribution: one of the two gaps is ${times} times the other, so its long end ` +
+        "would reach far beyond what was stated and carry the mean. Check the middle value.",
       { input: "points", value: x2 },
     );
   }

@@ -25,12 +25,30 @@ export function checkInputs(inputs: EstimateInputs): Warning[] {
   return warningsOf(inputs, prepareInputs(inputs));
 }
 
-/** The same for inputs that have been prepared already. */
+/**
+ * The refusals of {@link checkInputs} without its warnings, for a caller that asks only whether a simulation may start:
+ * the tests of measured values take longer than everything else and refuse nothing.
+ *
+ * @throws {DomainError} as `checkInputs`
+ */
+export function requirePossibleInputs(inputs: EstimateInputs): void {
+  stateAndPlanWarnings(inputs, prepareInputs(inputs));
+}
+
+/** `checkInputs` for inputs that have been prepared already. */
 export function warningsOf(inputs: EstimateInputs, prepared: PreparedInputs): Warning[] {
-  const { distributions, inputNames, wellstream, plan } = prepared;
+  const { distributions, inputNames } = prepared;
   return [
     ...inputNames.flatMap((name) => inputWarnings(name, distributions[name])),
     ...planFitWarnings(prepared),
+    ...stateAndPlanWarnings(inputs, prepared),
+  ];
+}
+
+/** What follows from several inputs together; working it out can find a state that is impossible. */
+function stateAndPlanWarnings(inputs: EstimateInputs, prepared: PreparedInputs): Warning[] {
+  const { distributions, wellstream, plan } = prepared;
+  return [
     ...correlationWarnings(inputs, prepared),
     ...caseSetWarnings(prepared),
     ...depthWarnings(inputs, prepared),

@@ -28,32 +28,46 @@ const HEAVY_TRUNCATION = 0.05;
 
 /**
  * What a reviewer would ask about how the figures of a range became its distribution: too few values, a shape that they
- * contradict, a percentile that is missed, bounds that cut off much. Scenarios are looked at case by case.
+ * contradict, a percentile that is missed, bounds that cut off much, a mean that a long end carries. Scenarios are looked
+ * at case by case, and their mean as a whole.
  */
 export function fitWarnings(quantity: Quantity, compiled: CompiledDistribution): Warning[] {
   if (compiled.cases) {
-    return compiled.cases.flatMap(({ name: ofCase, compiled: one }) =>
+    const ofCases = compiled.cases.flatMap(({ name: ofCase, compiled: one }) =>
       fitWarnings(quantity, one).map((warning) => ({
         ...warning,
         message: `In the case “${ofCase}”: ${warning.message}`,
       })),
     );
+    return [...ofCases, ...asWarnings(quantity, heavyTail(quantity, compiled))];
   }
   const fit = describeFit(compiled.definition);
-  const found = [
+  return asWarnings(quantity, [
     ...(fit?.kind === "data" ? ofData(quantity, fit) : []),
     ...(fit?.kind === "percentiles" ? ofPercentiles(quantity, fit, compiled.lostMass) : []),
     ...(compiled.lostMass > HEAVY_TRUNCATION ? [truncated(quantity, compiled.lostMass)] : []),
-  ];
-  return found.map(([code, message]) => ({
-    code,
-    severity: "warning",
-    input: quantity.input,
-    message,
-  }));
+    ...heavyTail(quantity, compiled),
+  ]);
 }
 
 type Found = readonly [code: string, message: string];
+
+function asWarnings({ input }: Quantity, found: readonly Found[]): Warning[] {
+  return found.map(([code, message]) => ({ code, severity: "warning", input, message }));
+}
+
+/** Less than one trial in ten then decides the mean of everything that follows. */
+function heavyTail({ label, unit }: Quantity, { mean, range }: CompiledDistribution): Found[] {
+  // A constant's mean differs from it by rounding at most.
+  if (!(mean - range.p10 > 1e-9 * Math.abs(mean))) return [];
+  return [
+    [
+      "heavy_tail",
+      `The mean of the ${label}, ${figure(mean)} ${unit}, is above its P10, ${figure(range.p10)}: a chance of less than ` +
+        "10 % carries it. Is the highest value possible, and with that chance?",
+    ],
+  ];
+}
 
 function ofData(
   { label, isAverage }: Quantity,

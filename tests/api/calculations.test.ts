@@ -282,6 +282,33 @@ describe("POST /api/v1/calculations/distribution of what was given", () => {
     expect(range.mean).toBeCloseTo(135, 10);
   });
 
+  const percentiles = (exceedance: number) => ({
+    kind: "percentiles",
+    family: "normal",
+    points: [
+      { exceedance: 0.9, value: 1 },
+      { exceedance, value: 2 },
+    ],
+  });
+  const data = (shape: string, ...values: number[]) => ({ kind: "data", shape, values });
+
+  it.each([
+    ["a chance of 1e-17", percentiles(1e-17), "/points/1/exceedance"],
+    ["a chance of 1e-300", percentiles(1e-300), "/points/1/exceedance"],
+    ["values of 1e200", data("normal", 1e200, 2e200, 3e200, 4e200, 5e200), "/values/0"],
+    ["opposite ends", data("empirical", 1e308, -1e308, 1e308, -1e308, 0), "/values/0"],
+    ["a last digit", data("lognormal", 1e8, 1e8, 1e8, 1e8, 1e8 + 2 ** -26), "/values"],
+    ["a last bit", data("normal", 2, 2, 2, 2, 2.0000000000000004), "/values"],
+    ["a sigma of 50", { kind: "lognormal", mu: 7, sigma: 50 }, "/sigma"],
+    ["a mu of 700", { kind: "lognormal", mu: 700, sigma: 1 }, "/mu"],
+    ["a mean of 1e308", { kind: "normal", mean: 1e308, standardDeviation: 1e308 }, "/mean"],
+    ["a width of 2e308", { kind: "uniform", low: -1e308, high: 1e308 }, "/low"],
+  ])("refuses %s rather than answer with null", async (_, distribution, pointer) => {
+    const problem = await refused("distribution", { distribution });
+    expect(problem.errors?.[0].pointer).toBe(`#/distribution${pointer}`);
+    expect(JSON.stringify(problem)).not.toMatch(/NaN|Infinity/);
+  });
+
   it("refuses weights that do not add up, and a case by its place", async () => {
     const scenarios = (weight: number, high: number) => ({
       distribution: {

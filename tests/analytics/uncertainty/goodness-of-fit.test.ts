@@ -78,6 +78,16 @@ describe("describeFit", () => {
     expect(fit.stairs.shares.slice(0, 3)).toEqual([1 / 12, 3 / 12, 4 / 12]);
   });
 
+  it("draws 2,000 values with 200 stairs, the ends among them and each where it was", () => {
+    const values = Array.from({ length: 2000 }, (_, i) => i + 1);
+    const fit = describeFit({ kind: "data", shape: "empirical", values });
+    if (fit?.kind !== "data") throw new Error("Not a fit of data.");
+    const { values: stairs, shares } = fit.stairs;
+    expect(stairs).toHaveLength(200);
+    expect([stairs[0], stairs[199]]).toEqual([1, 2000]);
+    stairs.forEach((value, i) => expect(shares[i]).toBe(value / 2000));
+  });
+
   it("has no test of a lognormal for data that reach 0", () => {
     const fit = describeFit({ kind: "data", shape: "normal", values: [0, 1, 2, 3, 5] });
     expect(fit?.kind === "data" && fit.tests.lognormal).toBeNull();

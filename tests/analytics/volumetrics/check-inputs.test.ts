@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { DomainError } from "@/analytics/errors";
 import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
-import { checkInputs } from "@/analytics/volumetrics/check-inputs";
+import { checkInputs, requirePossibleInputs } from "@/analytics/volumetrics/check-inputs";
 import {
   inputNames,
   type EstimateInputs,
@@ -27,7 +27,39 @@ function refusal(inputs: EstimateInputs): DomainError {
   throw new Error("The inputs were accepted.");
 }
 
+describe("requirePossibleInputs", () => {
+  it("refuses what checkInputs refuses, in the same words", () => {
+    const impossible = [
+      buildInputs({ porosity: { kind: "constant", value: 0.6 } }),
+      buildInputs({}, { correlations: [{ a: "porosity", b: "porosity", rank: 0.2 }] }),
+      buildInputs({ areaAcres: { kind: "lognormal", mu: 7, sigma: 50 } }),
+    ];
+    for (const inputs of impossible) {
+      expect(() => requirePossibleInputs(inputs)).toThrow(refusal(inputs).message);
+    }
+    expect(() => requirePossibleInputs(buildInputs())).not.toThrow();
+  });
+});
+
 describe("checkInputs", () => {
+  it("asks about a mean that less than one trial in ten carries", () => {
+    const cases = (high: number): Distribution => ({
+      kind: "scenarios",
+      scenarios: [
+        { name: "Field", weight: 0.95, distribution: { kind: "uniform", low: 900, high: 1100 } },
+        { name: "Basin", weight: 0.05, distribution: { kind: "constant", value: high } },
+      ],
+    });
+    // mean = 0.95 x 1000 + 0.05 x 20,000 = 1950; P10 = 900 + 200 x 0.9 / 0.95 = 1089
+    expect(warningOf(buildInputs({ areaAcres: cases(20_000) }), "heavy_tail")).toMatchObject({
+      input: "uncertain.areaAcres",
+      message: expect.stringContaining(
+        "The mean of the area, 1,950 acres, is above its P10, 1,090",
+      ),
+    });
+    expect(warningOf(buildInputs({ areaAcres: cases(2_000) }), "heavy_tail")).toBeUndefined();
+  });
+
   it("has nothing to say about an ordinary reservoir", () => {
     expect(checkInputs(buildInputs())).toEqual([]);
   });
