@@ -104,7 +104,7 @@ export const estimates: MethodGroup = {
       range:
         "Mean and standard deviation estimated from the same values. From 8 and from 5 values. Below 0.05 a fit counts as contradicted.",
       error: measured(
-        "R's nortest 1.0-4 to 8 digits; within 0.01 of 200,000 simulated samples of each size tried.",
+        "R's nortest 1.0-4 to 8 digits. Against 100,000 simulated samples of each size from 5 to 50: within 0.01 for chances up to 0.1, which the judgement rests on; above, within 0.035 (Lilliefors) and 0.06 (Anderson–Darling), worst for the fewest values.",
       ),
       usedIn: "Inputs from data, calculation “distribution”",
     },
