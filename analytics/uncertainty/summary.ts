@@ -91,7 +91,7 @@ export function rangeOfStrata(sorted: Float64Array, count: number): SampleRange 
  *
  * The error of the mean is a little small where a few far trials decide it, because most replicates have none of them.
  * Of a product of lognormals whose logarithm has a standard deviation of 0.8, and of means of scrambled nets, errors are
- * 1.1 to 1.35 times those stated and an interval of 95 % holds in 90 to 95 % of runs; percentiles have no such fault.
+ * 1.1 to 1.4 times those stated and an interval of 95 % holds in 90 to 95 % of runs; percentiles have no such fault.
  *
  * With one replicate they are those of independent trials, sd / sqrt(n) and sqrt(p (1 - p) / n) / f: at most that much,
  * for trials spread more evenly than independent ones. The variance of a Latin hypercube is at most n / (n - 1) times

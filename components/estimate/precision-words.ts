@@ -1,5 +1,6 @@
 /** How well the trials of a run know its percentiles, in words. */
 import { digitsKnown } from "@/analytics/uncertainty/digits-known";
+import { halfWidth95, replicatesOf } from "@/analytics/uncertainty/replicates";
 import type { QuantitySummary, SimulationSummary } from "@/analytics/volumetrics/results-schema";
 import type { SamplingMethod } from "@/analytics/uncertainty/sampling-schema";
 import { numberWords } from "@/components/portfolio/reporting";
@@ -38,7 +39,8 @@ export function precisionFinding(trials: number, quantity: Quantity, factor: num
     .filter((level) => !knownOf(quantity, level, factor, trials).enough)
     .sort((a, b) => share(quantity, b) - share(quantity, a));
   if (!worst) return `${count} trials hold all three digits of every percentile`;
-  const error = formatPercent(1.96 * share(quantity, worst), { decimals: 1 });
+  const halfWidth = halfWidth95(replicatesOf(trials)) * share(quantity, worst);
+  const error = formatPercent(halfWidth, { decimals: 1 });
   const { digits } = knownOf(quantity, worst, factor, trials);
   const held =
     digits === 0
