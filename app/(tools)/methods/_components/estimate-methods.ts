@@ -32,9 +32,10 @@ export const estimates: MethodGroup = {
       gives: "How far sampling alone may have moved each percentile and the mean.",
       source:
         "Sectioning over 16 independent replicates: M. K. Nakayama, ACM Trans. Model. Comput. Simul. 24 (2014) 19",
-      range: "From 800 trials; shorter runs take the formula for independent trials.",
+      range:
+        "From 320 trials; shorter runs have fewer replicates, 5 of them at 100 trials, and take Student's t for it.",
       error: measured(
-        "Over 200 seeds one error holds the closed form of a product of lognormals in 67 % of runs and 1.96 errors in 93 %, as Student's t with 15 degrees of freedom says; the mean of Sobol points in 90 %.",
+        "Over 200 seeds one error holds the closed form of a product of lognormals in 67 % of runs and 1.96 errors in 93 %, as Student's t with 15 degrees of freedom says. Intervals of 95 % by Student's t hold percentiles in 93 to 97 % of runs. The mean's error is stated a little small: 1.1 to 1.4 times that for Sobol points and for strongly correlated inputs, whose intervals of 95 % hold in 90 to 95 %.",
       ),
       usedIn: "Every estimate, running until settled",
     },
@@ -50,10 +51,11 @@ export const estimates: MethodGroup = {
     {
       name: "Rank correlation",
       gives: "Inputs that move together.",
-      source: "R. L. Iman, W. J. Conover, Commun. Stat. Simul. Comput. 11 (1982) 311–334",
+      source:
+        "Normal scores with 2 sin(π r / 6), K. Pearson (1907); of a Latin hypercube, chance correlations taken out first after R. L. Iman, W. J. Conover, Commun. Stat. Simul. Comput. 11 (1982) 311–334",
       range: "A set of correlations that cannot be is refused.",
       error: measured(
-        "A published worked example by S. J. Mildenhall (2006) to its last digit; Spearman correlations of what was asked, to sampling error.",
+        "A published worked example by S. J. Mildenhall (2006) to its last digit; Spearman correlations of what was asked, to sampling error; the closed form of a product of correlated lognormals without bias, its mean to 0.15 % over 400 seeds.",
       ),
       usedIn: "Every estimate with correlations",
     },
