@@ -16,13 +16,18 @@ export async function up({ context }: { context: QueryInterface }): Promise<void
   `);
 }
 
+/**
+ * Puts the former limit back for what is written from then on. Estimates that have more trials keep them (`not valid`),
+ * because a number of trials that somebody chose is not changed by going down; a draft of them takes changes again with
+ * fewer trials, and an approved one, which nothing changes, after going up.
+ */
 export async function down({ context }: { context: QueryInterface }): Promise<void> {
   await context.sequelize.query(`
     ${protectDecidedEstimate("or new.seed <> old.seed or new.trials <> old.trials")}
     alter table estimates
       drop column sampling,
       drop constraint estimates_trials_check,
-      add constraint estimates_trials_check check (trials between 100 and 1000000);
+      add constraint estimates_trials_check check (trials between 100 and 1000000) not valid;
   `);
 }
 

@@ -16,7 +16,7 @@ export function requireMagnitudes(definition: SimpleDistribution): string {
   for (const [input, value] of parameters) {
     if (Math.abs(requireFinite(input, value)) <= LARGEST) continue;
     throw new DomainError(
-      `${value} is beyond what any quantity of a reservoir can be, in any unit (1e20).`,
+      `${Number(value.toPrecision(6))} is beyond what any quantity of a reservoir can be, in any unit (1e20).`,
       { input, value },
     );
   }
