@@ -79,15 +79,24 @@ export type Outcome<Value> =
       details: Record<string, unknown>;
     };
 
-/** The arrays of the last run, reused while the number of trials stays the same. */
-let workspace: SimulationWorkspace | null = null;
+/** The arrays of the last run that was not large, reused while the number of trials stays the same. */
+let kept: SimulationWorkspace | null = null;
+
+/** Larger workspaces (13 MB and more, 200 MB for the longest run) are made for one run and let go. */
+const MOST_TRIALS_KEPT = 65_536;
+
+function workspaceOf(trials: number): SimulationWorkspace {
+  if (kept?.trials === trials) return kept;
+  const made = createWorkspace(trials);
+  if (trials <= MOST_TRIALS_KEPT) kept = made;
+  return made;
+}
 
 export function simulate({ inputs, options }: SimulationTask) {
   return answer<Simulation>(
     () => {
       const trials = options.trials ?? DEFAULT_TRIALS;
-      if (workspace?.trials !== trials) workspace = createWorkspace(trials);
-      return simulateReservoir(inputs, { ...options, trials, workspace });
+      return simulateReservoir(inputs, { ...options, trials, workspace: workspaceOf(trials) });
     },
     ({ vectors }) => Object.values(vectors).map(({ buffer }) => buffer as ArrayBuffer),
   );
