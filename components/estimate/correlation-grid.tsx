@@ -117,11 +117,13 @@ interface CellProps {
 
 const written = (rank: number) => (rank === 0 ? "0" : rank.toFixed(2).replace("-", "−"));
 
-/** Reads "0.4", ".4", "-0.4" and "−0,4"; anything outside −1 to 1 is no correlation. */
+/** Reads "0.4", ".4", "-0.4" and "−0,4". At −1 or 1 one input would follow from the other, so neither is one. */
 export function readRank(text: string): number | null {
   const value = Number(text.trim().replace("−", "-").replace(",", "."));
-  return text.trim() !== "" && value >= -1 && value <= 1 ? value : null;
+  return text.trim() !== "" && value > -1 && value < 1 ? value : null;
 }
+
+const unreadable = "A rank correlation lies between −1 and 1, such as 0.4; exactly 1 is none.";
 
 function Cell({ a, b, rank, isMirror, isConflict, onChange }: CellProps) {
   const [typed, setTyped] = useState<string | null>(null);
@@ -146,7 +148,7 @@ function Cell({ a, b, rank, isMirror, isConflict, onChange }: CellProps) {
         tabIndex={isMirror ? -1 : undefined}
         aria-label={label}
         aria-invalid={isInvalid || isConflict || undefined}
-        title={isInvalid ? "From −1 to 1" : undefined}
+        title={isInvalid ? unreadable : undefined}
         value={typed ?? written(rank)}
         onFocus={(event) => event.target.select()}
         onChange={(event) => {
@@ -154,8 +156,16 @@ function Cell({ a, b, rank, isMirror, isConflict, onChange }: CellProps) {
           const read = readRank(event.target.value);
           if (read !== null && read !== rank) onChange(a, b, read);
         }}
-        onBlur={() => setTyped(null)}
+        onBlur={() => {
+          // What cannot be read stays to be put right, rather than turning back into what was there.
+          if (!isInvalid) setTyped(null);
+        }}
       />
+      {isInvalid && (
+        <span role="alert" className="sr-only">
+          {label}: {unreadable}
+        </span>
+      )}
     </td>
   );
 }

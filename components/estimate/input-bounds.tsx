@@ -1,4 +1,7 @@
-import { compileDistribution } from "@/analytics/uncertainty/distribution";
+import {
+  compileDistribution,
+  type CompiledDistribution,
+} from "@/analytics/uncertainty/distribution";
 import { formatFigure, formatPercent } from "@/components/ui/format";
 import type { InputDescription } from "./input-catalogue";
 import type { InputReading } from "./input-reading";
@@ -8,6 +11,8 @@ import { hasEnds } from "./shapes";
 
 /** Bounds that cut away less than this are a safeguard, not a description. */
 const LEAST_LOST_MASS = 0.0005;
+/** From here on the figures typed and the figures sampled tell two stories. Common practice, no source. */
+const MUCH_LOST_MASS = 0.05;
 
 export interface InputBoundsProps {
   about: InputDescription;
@@ -62,11 +67,21 @@ export function InputBounds({ about, text, reading, notesId, onChange }: InputBo
             />
           </span>
         ))}
-      {lost >= LEAST_LOST_MASS && (
-        <span>Cuts away {formatPercent(lost, { decimals: 1 })} of the curve</span>
+      {lost >= LEAST_LOST_MASS && reading.compiled && (
+        <span className={lost >= MUCH_LOST_MASS ? "text-warning-ink" : undefined}>
+          Cuts away {formatPercent(lost, { decimals: 1 })} of the curve.{" "}
+          {leftWords(reading.compiled, unit)}
+        </span>
       )}
     </div>
   );
+}
+
+/** A cut curve's percentiles are no longer those that were typed; the trials follow these. */
+function leftWords({ range }: CompiledDistribution, unit: string): string {
+  const figures = [range.p90, range.p50, range.p10].map((value) => formatFigure(value));
+  const [p90, p50, p10] = figures;
+  return `What is left has P90 ${p90}, P50 ${p50} and P10 ${p10}${unit && ` ${unit}`}`;
 }
 
 /** Ends of the curve before anything is cut off. */

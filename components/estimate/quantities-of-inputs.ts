@@ -50,7 +50,16 @@ export function readField(
   inUnit: boolean,
   unit: string,
 ): FieldReading {
-  return inUnit ? readQuantity(text, quantityOfInput[name], unit) : readPlain(text);
+  if (!inUnit) return readPlain(text);
+  const read = readQuantity(text, quantityOfInput[name], unit);
+  const isShare = quantityOfInput[name] === "fraction" && name !== "condensateCurveFactor";
+  if (!isShare || read.value === null || read.value <= 1) return read;
+  const typed = typedFigure(read.value);
+  const meant =
+    read.value <= 100
+      ? ` Is it in per cent? Enter ${typedFigure(read.value / 100)} for ${typed} %.`
+      : "";
+  return { ...read, value: null, problem: `A fraction is at most 1.${meant}` };
 }
 
 /**

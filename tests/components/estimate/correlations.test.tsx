@@ -92,10 +92,11 @@ describe("withNearest(text, nearest)", () => {
 
 describe("readRank(text)", () => {
   it("reads decimals as people type them, and nothing outside −1 to 1", () => {
-    expect(["0.4", ".4", "−0,4", "1.2", "", "x"].map(readRank)).toEqual([
+    expect(["0.4", ".4", "−0,4", "1.2", "1", "", "x"].map(readRank)).toEqual([
       0.4,
       0.4,
       -0.4,
+      null,
       null,
       null,
       null,
