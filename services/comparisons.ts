@@ -5,7 +5,7 @@ import { planForConcept } from "@/analytics/recovery/starting-plan";
 import type { EstimateRun } from "@/analytics/sensitivity/estimate-changes";
 import type { ChangeExplanation } from "@/analytics/sensitivity/sensitivity-schema";
 import { compileDistribution } from "@/analytics/uncertainty/distribution";
-import { checkInputs } from "@/analytics/volumetrics/check-inputs";
+import { requirePossibleInputs } from "@/analytics/volumetrics/check-inputs";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import {
   vectorNames,
@@ -187,7 +187,7 @@ async function simulated(
   options: ComputeOptions,
 ): Promise<SimulationSummary> {
   try {
-    checkInputs(inputs);
+    requirePossibleInputs(inputs);
     return (await runSimulation(inputs, how, options)).summary;
   } catch (error) {
     if (!(error instanceof DomainError)) throw error;

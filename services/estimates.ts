@@ -1,7 +1,7 @@
 import { isDeepStrictEqual } from "node:util";
 import type { Transaction } from "sequelize";
 import type { SamplingMethod } from "@/analytics/uncertainty/sampling-schema";
-import { checkInputs } from "@/analytics/volumetrics/check-inputs";
+import { requirePossibleInputs } from "@/analytics/volumetrics/check-inputs";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import { checkTrials, DEFAULT_TRIALS, samplingFor } from "@/analytics/volumetrics/trial-counts";
 import type { Estimate } from "@/models/estimate";
@@ -109,7 +109,7 @@ export async function createDraft(
     }
     const inherited = input.inputs ? null : (approved?.fluidSampleId ?? null);
     const inputs = await withSampleSheet(start, input.fluidSampleId, reservoirId, transaction);
-    refuseImpossible("inputs", () => checkInputs(inputs));
+    refuseImpossible("inputs", () => requirePossibleInputs(inputs));
     const trials = input.trials ?? approved?.trials ?? DEFAULT_TRIALS;
     const sampling = input.sampling ?? approved?.sampling ?? samplingFor(trials);
     refuseImpossible("", () => checkTrials(trials, sampling));
@@ -176,7 +176,7 @@ export async function updateDraft(
       { inputs: estimate.inputs, fluidSampleId, note, seed, trials, sampling },
       { ...patch, inputs, fluidSampleId: source },
     );
-    if (changes.after.inputs) refuseImpossible("inputs", () => checkInputs(inputs));
+    if (changes.after.inputs) refuseImpossible("inputs", () => requirePossibleInputs(inputs));
 
     const { after } = changes;
     refuseImpossible("", () => checkTrials(after.trials ?? trials, after.sampling ?? sampling));
