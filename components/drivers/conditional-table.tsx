@@ -16,14 +16,17 @@ const levels = ["p90", "p50", "p10"] as const;
 export function ConditionalTable({
   view,
   trials,
+  storedTrials,
   name,
   unit,
   factor,
   fileName,
 }: {
   view: View;
-  /** in all */
+  /** in all, of those looked at */
   trials: number;
+  /** that the estimate has */
+  storedTrials: number;
   /** of the result */
   name: string;
   unit: string;
@@ -37,7 +40,7 @@ export function ConditionalTable({
     <ChartFrame
       level={3}
       title={conditionalFinding(view)}
-      note={`${view.trials.toLocaleString("en-US")} of ${trials.toLocaleString("en-US")} trials, ${name.toLowerCase()} P90 ${formatFigure(result.p90 * factor)} to P10 ${formatFigure(result.p10 * factor)} ${unit} among them. Box and soft figures: all trials. Line: the chosen ones. Rank: where the chosen trials stand on average, 50 % for an input that does not matter.`}
+      note={`${view.trials.toLocaleString("en-US")} of ${trials.toLocaleString("en-US")} trials${storedTrials > trials ? ` (drawn anew: the ${storedTrials.toLocaleString("en-US")} of the estimate are more than are looked at)` : ""}, ${name.toLowerCase()} P90 ${formatFigure(result.p90 * factor)} to P10 ${formatFigure(result.p10 * factor)} ${unit} among them. Box and soft figures: all trials. Line: the chosen ones. Rank: where the chosen trials stand on average, 50 % for an input that does not matter.`}
       fileName={`${fileName}-chosen-trials`}
       data={{
         columns: [
@@ -117,7 +120,10 @@ export function ConditionalTable({
                     />
                   )}
                 </td>
-                <td className="stacked-aside right strong">{formatPercent(meanRank)}</td>
+                <td className="stacked-aside right strong">
+                  {formatPercent(meanRank)}
+                  <small className="hidden font-normal text-ink-soft phone:block">mean rank</small>
+                </td>
               </tr>
             );
           })}

@@ -17,7 +17,8 @@ function shareText({ value, standardError }: { value: number; standardError: num
   const half = 196 * standardError;
   if (value < 0.0005 && half < 0.05) return "0 %";
   const decimals = half < 0.95 ? 1 : 0;
-  return `${formatPercent(possibleShare(value), { decimals })} ± ${half.toFixed(decimals)}`;
+  const error = half > 0 && half < 0.05 ? "<0.1" : half.toFixed(decimals);
+  return `${formatPercent(possibleShare(value), { decimals })} ± ${error}`;
 }
 
 /** Shares of the variance: what goes when a factor alone is known, and what stays when all others are. */

@@ -73,6 +73,8 @@ function DifferenceRow({
     ...(before && !isSame ? [before.p90, before.p50, before.p10] : []),
   ]);
   const shown = isSame ? undefined : before;
+  const isMove =
+    !isSame && medianChange !== null && !(Math.abs(medianChange) < 0.0005 && shapeChanged);
   return (
     <tr className={warning ? "flagged" : undefined}>
       <td className="folio">{line}</td>
@@ -126,12 +128,15 @@ function DifferenceRow({
           ? "same"
           : medianChange === null
             ? "new"
-            : Math.abs(medianChange) < 0.0005 && shapeChanged
+            : !isMove
               ? "shape"
               : formatPercent(medianChange, {
                   signed: true,
                   decimals: Math.abs(medianChange) < 0.1 ? 1 : 0,
                 })}
+        {isMove && (
+          <small className="hidden font-normal text-ink-soft phone:block">P50 moves</small>
+        )}
       </td>
     </tr>
   );

@@ -24,6 +24,9 @@ export const levelLabels: Record<Level, string> = {
   mean: "Mean",
 };
 
+/** That a run may have. */
+const MOST_TRIALS = 1_048_576;
+
 type Quantity = Pick<QuantitySummary, Level | "standardErrors">;
 
 /** What the trials know of a percentile as it is shown, times a factor. */
@@ -49,16 +52,28 @@ export function precisionFinding(trials: number, quantity: Quantity, factor: num
   return `${count} trials are too few for three digits: ${levelLabels[worst]} is known to ±${error}, ${held}`;
 }
 
-/** Trials at which every percentile would have its three digits, as sampling error falls; `null` when they have. */
-export function enoughTrials(trials: number, quantity: Quantity, factor: number): string | null {
-  const needed = Math.max(
-    ...levels.map((level) => knownOf(quantity, level, factor, trials).trialsNeeded ?? 0),
-  );
-  if (needed === 0) return null;
-  const rounded = Number(needed.toPrecision(2)).toLocaleString("en-US");
-  return needed > 1_048_576
-    ? `Three digits would take about ${rounded} trials, more than a run may have: read two.`
-    : `About ${rounded} trials would be enough.`;
+/**
+ * Trials at which every percentile would have its three digits, as sampling error falls, and which of them asks for the
+ * most; `null` when they have. Sobol points come in powers of two.
+ */
+export function enoughTrials(
+  { trials, sampling }: Pick<SimulationSummary, "trials" | "sampling">,
+  quantity: Quantity,
+  factor: number,
+): string | null {
+  const [most] = levels
+    .map((level) => ({ level, needed: knownOf(quantity, level, factor, trials).trialsNeeded ?? 0 }))
+    .sort((a, b) => b.needed - a.needed);
+  if (most.needed === 0) return null;
+  const possible =
+    sampling === "sobol"
+      ? 2 ** Math.ceil(Math.log2(most.needed))
+      : Number(most.needed.toPrecision(2));
+  const count = possible.toLocaleString("en-US");
+  const name = levelLabels[most.level];
+  return most.needed > MOST_TRIALS
+    ? `Three digits of ${name === "Mean" ? "the mean" : name} would take about ${count} trials, more than a run may have: read two.`
+    : `About ${count} trials would be enough: ${name === "Mean" ? "the mean" : name} asks for the most.`;
 }
 
 const share = (quantity: Quantity, level: Level) =>

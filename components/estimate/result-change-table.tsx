@@ -75,6 +75,9 @@ export function ResultChangeTable({
               </td>
               <td className="stacked-aside right strong">
                 {before ? formatPercent(range.mean / before.mean - 1, { signed: true }) : "new"}
+                {before && (
+                  <small className="hidden font-normal text-ink-soft phone:block">mean moves</small>
+                )}
               </td>
             </tr>
           );

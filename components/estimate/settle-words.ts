@@ -53,6 +53,13 @@ export interface SettleEnd {
   detail: string;
 }
 
+/** What became of the figures that a run found: "… in place of the figures before, whose P50 moved by +0.4 %." */
+function replacedWords({ before, after }: NonNullable<RunItemView["outcome"]>): string {
+  if (before === null || before.p50 === 0) return "The figures above are of this run.";
+  const move = formatPercent(after.p50 / before.p50 - 1, { decimals: 1, signed: true });
+  return `The figures above are of this run and replace those before it: P50 of condensate to the tank moved by ${move}.`;
+}
+
 /** What came of it and what to do; `null` while it goes on. */
 export function settleEnd(
   run: Pick<RunView, "state">,
@@ -71,7 +78,7 @@ export function settleEnd(
       return {
         tone: "success",
         title: `Settled at ${trials} trials.`,
-        detail: `P90, P50 and P10 of gas and of condensate are within ${worst ?? halfWidthText(tolerance)}. The figures above are of this run.`,
+        detail: `P90, P50 and P10 of gas and of condensate are within ${worst ?? halfWidthText(tolerance)}. ${replacedWords(item.outcome)}`,
       };
     }
     const needed = last ? trialsNeeded(last, tolerance) : null;
@@ -82,7 +89,7 @@ export function settleEnd(
         needed !== null && needed > mostTrials && needed <= 1_048_576
           ? `About ${trialsText(needed)} trials would do: allow more, or ask for less.`
           : "Ask for less, or look for an input whose tail makes the percentiles wild."
-      } The figures above are of this run.`,
+      } ${replacedWords(item.outcome)}`,
     };
   }
   if (item?.state === "failed") {

@@ -1,6 +1,9 @@
 import { describe, expect, it } from "vitest";
+import { possibleRevisions } from "@/app/(workspace)/compare/_components/side-picker";
+import type { RevisionRangeView } from "@/app/api/v1/fields/file-schema";
 import {
   comparisonFinding,
+  distinctLabels,
   inputsFinding,
   otherDifferences,
   shortLabels,
@@ -89,6 +92,40 @@ describe("otherDifferences", () => {
     expect(
       otherDifferences(pair("areaAcres", "porosity"), pair("porosity", "areaAcres")),
     ).toBeNull();
+  });
+});
+
+describe("possibleRevisions", () => {
+  it("takes for a concept only revisions with a recovery plan that were run", () => {
+    const revision = (
+      estimateId: string,
+      recoveryRoute: "depletionExperiment" | null,
+      p50: number | null,
+    ) =>
+      ({
+        estimateId,
+        recoveryRoute,
+        condensateRecoverableStb: p50 === null ? null : range(p50),
+      }) as RevisionRangeView;
+    const revisions = [
+      revision("typed", null, 30),
+      revision("planned", "depletionExperiment", 30),
+      revision("not run", "depletionExperiment", null),
+    ];
+    const idsOf = (kind: "estimate" | "concept") =>
+      possibleRevisions(revisions, kind).map(({ estimateId }) => estimateId);
+    expect(idsOf("estimate")).toEqual(["typed", "planned"]);
+    expect(idsOf("concept")).toEqual(["planned"]);
+  });
+});
+
+describe("distinctLabels", () => {
+  it("names the two however long their names are", () => {
+    expect(distinctLabels("Larkhaven, Main sand, r3", "Pellow North, Marrow sand, r2")).toEqual([
+      "Larkhaven, Main sand, r3",
+      "Pellow North, Marrow sand, r2",
+    ]);
+    expect(distinctLabels("Larkhaven", "Larkhaven")).toEqual(["Left", "Right"]);
   });
 });
 

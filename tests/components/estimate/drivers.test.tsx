@@ -161,6 +161,7 @@ describe("ConditionalTable", () => {
       <ConditionalTable
         view={conditional}
         trials={10_000}
+        storedTrials={10_000}
         name="Condensate to the tank"
         unit="MMSTB"
         factor={1e-6}
@@ -176,6 +177,24 @@ describe("ConditionalTable", () => {
     expect(html).toContain(
       "Net thickness of the chosen trials: P90 90.0, P50 142, mean 142, P10 210 ft; in all P90 50.0",
     );
+  });
+});
+
+describe("ConditionalTable of an estimate with more trials", () => {
+  it("says that fewer are looked at, and names the rank on a phone", () => {
+    const html = renderToStaticMarkup(
+      <ConditionalTable
+        view={conditional}
+        trials={65_536}
+        storedTrials={262_144}
+        name="Condensate to the tank"
+        unit="MMSTB"
+        factor={1e-6}
+        fileName="x"
+      />,
+    );
+    expect(words(html)).toMatch(/of 65,536 trials \(drawn anew: the 262,144 of the estimate/);
+    expect(words(html)).toMatch(/81 % mean rank/);
   });
 });
 

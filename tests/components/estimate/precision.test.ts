@@ -79,9 +79,20 @@ describe("enoughTrials", () => {
 
   it("says how many would do, or that no run may have so many", () => {
     // by hand: an error of 0.2 has to fall to 0.05, so 16 times as many
-    expect(enoughTrials(1_000, quantity(0.2), 1)).toBe("About 16,000 trials would be enough.");
-    expect(enoughTrials(1_000, quantity(5), 1)).toMatch(/more than a run may have: read two/);
-    expect(enoughTrials(1_000, quantity(0.01), 1)).toBeNull();
+    expect(enoughTrials({ trials: 1_000 }, quantity(0.2), 1)).toBe(
+      "About 16,000 trials would be enough: P10 asks for the most.",
+    );
+    expect(enoughTrials({ trials: 1_000 }, quantity(5), 1)).toMatch(
+      /^Three digits of P10 .* more than a run may have: read two/,
+    );
+    expect(enoughTrials({ trials: 1_000 }, quantity(0.01), 1)).toBeNull();
+  });
+
+  it("gives Sobol points a number that they can have", () => {
+    // by hand: (0.158 / 0.05)^2 x 16,384 = 163,603, and the next power of two
+    expect(enoughTrials({ trials: 16_384, sampling: "sobol" }, quantity(0.158), 1)).toMatch(
+      /^About 262,144 trials/,
+    );
   });
 });
 

@@ -82,6 +82,20 @@ describe("settleEnd", () => {
     expect(plain(end?.detail ?? "")).toMatch(/within ±1\.4 %\. About 131,072 trials would do/);
   });
 
+  it("says which figures it replaced, settled or not", () => {
+    const before = { p90: 1, p50: 2.5, p10: 3, mean: 2 };
+    for (const settled of [true, false]) {
+      const end = settleEnd(
+        { state: "finished" },
+        { ...item, outcome: { ...outcome, settled, before } },
+        wish,
+      );
+      expect(plain(end?.detail ?? "")).toMatch(
+        /replace those before it: .* moved by \u221220\.0 %\.$/,
+      );
+    }
+  });
+
   it("says that results stand when it was cancelled, failed or passed over", () => {
     const none = { ...item, outcome: null };
     const ends = [

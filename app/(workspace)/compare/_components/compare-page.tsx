@@ -1,7 +1,7 @@
 "use client";
 
 import { useRouter, useSearchParams } from "next/navigation";
-import { errorWords } from "@/app/_client/request";
+import { errorWords, ProblemError } from "@/app/_client/request";
 import type { ComparisonSide } from "@/app/api/v1/comparisons/schema";
 import { useBasis } from "@/components/basis/use-basis";
 import { comparisonHref, readComparison, type ComparisonAddress } from "@/components/compare/sides";
@@ -19,6 +19,9 @@ export function ComparePage() {
   const address = readComparison(useSearchParams());
   const { left, right, result } = address;
   const query = useComparison(left && right ? { left, right, result } : null, basis);
+
+  // The same question would be refused again.
+  const isRefused = query.error instanceof ProblemError && query.error.status === 422;
 
   function go(change: Partial<ComparisonAddress>) {
     router.replace(withBasis(comparisonHref({ ...address, ...change })), { scroll: false });
@@ -49,12 +52,14 @@ export function ComparePage() {
           tone="error"
           title="The two could not be compared."
           actions={
-            <Button size="small" onClick={() => void query.refetch()}>
-              Try again
-            </Button>
+            !isRefused && (
+              <Button size="small" onClick={() => void query.refetch()}>
+                Try again
+              </Button>
+            )
           }
         >
-          {errorWords(query.error)} Choose another side above, or try again.
+          {errorWords(query.error)} Choose another side above{isRefused ? "." : ", or try again."}
         </Notice>
       ) : query.data ? (
         <div

@@ -25,6 +25,25 @@ export function defaultRevision(revisions: readonly RevisionRangeView[]): Revisi
   return run.find(({ state }) => state === "approved") ?? run[0] ?? null;
 }
 
+/** Revisions that a side of a kind can be: another concept is worked out on the curve of a recovery plan. */
+export function possibleRevisions(
+  revisions: readonly RevisionRangeView[],
+  kind: "estimate" | "concept",
+): RevisionRangeView[] {
+  return revisions.filter(
+    ({ condensateRecoverableStb, recoveryRoute }) =>
+      condensateRecoverableStb !== null && (kind === "estimate" || recoveryRoute !== null),
+  );
+}
+
+const NO_PLAN = "recoveries typed, no plan";
+
+/** Why a reservoir cannot be a side of a kind; nothing when it can. */
+function whyNot(revisions: readonly RevisionRangeView[], kind: "estimate" | "concept") {
+  if (possibleRevisions(revisions, kind).length > 0) return undefined;
+  return defaultRevision(revisions) === null ? "nothing was run yet" : NO_PLAN;
+}
+
 /** Chooses one side: a field, then one of its reservoirs and revisions, or a way of producing it. */
 export function SidePicker({
   title,
@@ -54,7 +73,10 @@ export function SidePicker({
     if (side === null || side.kind === "field") return;
     const { estimateId } = side;
     if (next === "estimate") take({ kind: "estimate", estimateId });
-    if (next === "concept") take({ kind: "concept", estimateId, concept: "depletion" });
+    // Without a plan there is nothing to take yet: the fields below say so, and where there is one.
+    if (next === "concept" && place?.inputs?.recoveryPlan) {
+      take({ kind: "concept", estimateId, concept: "depletion" });
+    }
   }
 
   function chooseField(next: string) {
@@ -117,6 +139,8 @@ function RevisionFields({
     revisions.some(({ estimateId }) => estimateId === side?.estimateId),
   );
   const concept = side?.kind === "concept" ? side.concept : "depletion";
+  const shown = reservoir?.revisions.find(({ estimateId }) => estimateId === side?.estimateId);
+  const lacksPlan = kind === "concept" && shown !== undefined && shown.recoveryRoute === null;
   const take = (estimateId: string, next = concept) =>
     onTake(
       kind === "estimate" ? { kind, estimateId } : { kind: "concept", estimateId, concept: next },
@@ -131,12 +155,12 @@ function RevisionFields({
         options={reservoirs.map(({ id, name, revisions }) => ({
           value: id,
           label: name,
-          note: defaultRevision(revisions) ? undefined : "nothing was run yet",
-          disabled: defaultRevision(revisions) === null,
+          note: whyNot(revisions, kind),
+          disabled: whyNot(revisions, kind) !== undefined,
         }))}
         onChange={(id) => {
           const chosen = reservoirs.find((known) => known.id === id);
-          const revision = chosen && defaultRevision(chosen.revisions);
+          const revision = chosen && defaultRevision(possibleRevisions(chosen.revisions, kind));
           if (revision) take(revision.estimateId);
         }}
       />
@@ -144,24 +168,35 @@ function RevisionFields({
         <Select
           label="Revision"
           value={side.estimateId}
-          options={reservoir.revisions.map(
-            ({ estimateId, revision, state, note, condensateRecoverableStb }) => ({
-              value: estimateId,
-              label: `r${revision}, ${state}`,
-              note: condensateRecoverableStb ? note || undefined : "not run yet",
-              disabled: condensateRecoverableStb === null,
-            }),
-          )}
+          options={reservoir.revisions.map((known) => ({
+            value: known.estimateId,
+            label: `r${known.revision}, ${known.state}`,
+            note:
+              known.condensateRecoverableStb === null
+                ? "not run yet"
+                : kind === "concept" && known.recoveryRoute === null
+                  ? NO_PLAN
+                  : known.note || undefined,
+            disabled: possibleRevisions([known], kind).length === 0,
+          }))}
           onChange={(estimateId) => take(estimateId)}
         />
       )}
       {kind === "concept" && side && (
         <Select
           label="Produced by"
-          value={concept}
+          value={lacksPlan ? null : concept}
+          placeholder="Needs a recovery plan"
+          disabled={lacksPlan}
           options={producingConcepts.map((value) => ({ value, label: conceptLabels[value] }))}
           onChange={(next) => take(side.estimateId, next)}
         />
+      )}
+      {lacksPlan && (
+        <p className="col-span-full text-13 text-ink-soft" role="status">
+          The recoveries of r{shown.revision} were typed. Another concept needs the curve of a
+          recovery plan: choose a reservoir or a revision that has one.
+        </p>
       )}
     </>
   );

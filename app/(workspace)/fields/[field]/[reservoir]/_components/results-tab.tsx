@@ -208,7 +208,7 @@ function SamplingSection() {
   if (!summary) return null;
   const name = "condensateRecoverableStb";
   const factor = resultFactor(name, resultBasis);
-  const enough = enoughTrials(summary.trials, summary.results[name], factor);
+  const enough = enoughTrials(summary, summary.results[name], factor);
   const at =
     shown?.computedAt && results.isFull ? `, run ${formatDate(shown.computedAt, "time")} UTC` : "";
   return (

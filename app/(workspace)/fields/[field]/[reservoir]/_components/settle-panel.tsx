@@ -30,8 +30,7 @@ const caps = [16_384, 65_536, 262_144, 1_048_576].map((trials) => ({
 export function readTolerance(text: string): { tolerance: number } | { problem: string } {
   const percent = Number(text.replace("%", "").replace(",", ".").trim());
   if (text.trim() === "" || !Number.isFinite(percent)) return { problem: "Type a number." };
-  if (percent < 0.05) return { problem: "At least 0.05 %." };
-  if (percent > 10) return { problem: "At most 10 %." };
+  if (percent < 0.05 || percent > 10) return { problem: "From 0.05 to 10 %." };
   return { tolerance: percent / 100 };
 }
 
@@ -58,7 +57,7 @@ function OpenPanel({ estimate }: { estimate: EstimateBodyView }) {
   return (
     <Section
       title="Run until the percentiles are settled"
-      note="Trials are doubled until P90, P50 and P10 of gas in place and of condensate to the tank are known well enough. It runs in the background; this page may be left."
+      note="Trials are doubled until P90, P50 and P10 of gas in place and of condensate to the tank are known well enough: until the half-width of the 95 % interval of each is no more than this share of it. It runs in the background; this page may be left."
     >
       {!isUnderWay && (
         <form
@@ -71,7 +70,7 @@ function OpenPanel({ estimate }: { estimate: EstimateBodyView }) {
           }}
         >
           <NumberField
-            label="Within ±"
+            label="Within ±, 95 %"
             unit="%"
             className="w-28"
             value={text}
