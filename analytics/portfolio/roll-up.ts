@@ -61,18 +61,34 @@ export function alignPieces(
   });
 }
 
-/** Fields with their trials in the portfolio's order, ready for any sum of them. */
+/**
+ * How a field comes into the portfolio's order: the factors that its reservoirs follow, and the reservoirs in the order
+ * in which they are added.
+ *
+ * @throws {DomainError} as `loadingsOf`
+ */
+export function planField<Reservoir extends Pick<ReservoirTrials, "id">>(
+  { id, basinId, basinSlug }: Pick<RollUpField, "id" | "basinId" | "basinSlug">,
+  reservoirs: readonly Reservoir[],
+  dependence: Dependence,
+): { loadings: FactorLoading[]; reservoirs: Reservoir[] } {
+  return {
+    loadings: loadingsOf(dependence, { fieldId: id, basinId, basinSlug }),
+    reservoirs: [...reservoirs].sort((a, b) => (a.id < b.id ? -1 : 1)),
+  };
+}
+
+/** Fields with their trials in the portfolio's order, ready for any sum of them, all in one go. */
 export function alignFields(
   fields: readonly RollUpField[],
   { dependence, ...options }: AlignmentOptions & { dependence: Dependence },
 ): LedgerField[] {
-  const pieces = fields.map(({ id, slug, basinId, basinSlug, chance, reservoirs }) => ({
-    slug,
-    chance,
-    loadings: loadingsOf(dependence, { fieldId: id, basinId, basinSlug }),
+  const pieces = fields.map((field) => ({
+    slug: field.slug,
+    chance: field.chance,
     buffer: new ArrayBuffer(bytesOfFieldTrials(options.trials)),
-    reservoirs: [...reservoirs].sort((a, b) => (a.id < b.id ? -1 : 1)),
     isLast: true,
+    ...planField(field, field.reservoirs, dependence),
   }));
   const figures = alignPieces(pieces, options);
   return fields.flatMap(({ reservoirs, basinSlug: _, ...field }, index) => {

@@ -4,10 +4,11 @@
  * anew when one of its revisions is approved or computed again, or when a dependence set changes how it moves.
  */
 import { createHash } from "node:crypto";
-import { loadingsOf, type FactorLoading } from "@/analytics/portfolio/factor-model";
+import type { FactorLoading } from "@/analytics/portfolio/factor-model";
 import type { Dependence } from "@/analytics/portfolio/dependence-schema";
 import { bytesOfFieldTrials, type ReservoirTrials } from "@/analytics/portfolio/field-trials";
 import type { FieldFigures } from "@/analytics/portfolio/ledger";
+import { planField } from "@/analytics/portfolio/roll-up";
 import { vectorNames } from "@/analytics/volumetrics/results-schema";
 import {
   listTrialVectors,
@@ -132,6 +133,9 @@ async function findOrLoad(requests: readonly Request[]): Promise<Map<string, Ali
   return new Map(found);
 }
 
+/** Names a reservoir's draws. */
+const addressOf = ({ field, reservoir }: CountedReservoir) => `${field.slug}/${reservoir.slug}`;
+
 function requestsOf(
   counted: readonly CountedReservoir[],
   trials: number,
@@ -145,13 +149,12 @@ function requestsOf(
   }
   return [...fields.values()].map((reservoirs) => {
     const [{ field }] = reservoirs;
-    const inOrder = [...reservoirs].sort((a, b) => (a.reservoir.slug < b.reservoir.slug ? -1 : 1));
-    const loadings = loadingsOf(dependence, {
-      fieldId: field.id,
-      basinId: field.basinId,
-      basinSlug: field.basinSlug,
-    });
-    const parts = inOrder.map(({ reservoir }) => [
+    const { loadings, reservoirs: inOrder } = planField(
+      field,
+      reservoirs.map((member) => ({ id: addressOf(member), member })),
+      dependence,
+    );
+    const parts = inOrder.map(({ member: { reservoir } }) => [
       reservoir.slug,
       reservoir.estimateId,
       reservoir.computedAt.getTime(),
@@ -169,7 +172,7 @@ function requestsOf(
         ]),
       )
       .digest("base64");
-    return { key, field, loadings, counted: inOrder, trials };
+    return { key, field, loadings, counted: inOrder.map(({ member }) => member), trials };
   });
 }
 
@@ -227,14 +230,15 @@ async function readPieces(
     vectorNames,
   );
   const byEstimate = new Map(rows.map((row) => [row.estimateId, row]));
-  return batch.map(({ waiting: { request }, member: { reservoir }, isLast }) => {
+  return batch.map(({ waiting: { request }, member, isLast }) => {
+    const { reservoir } = member;
     const row = byEstimate.get(reservoir.estimateId);
     const buffer = buffers.get(request.key);
     if (!row || !buffer) {
       throw new Error(`estimate ${reservoir.estimateId} has a summary but no trials`);
     }
     const trials: ReservoirTrials = {
-      id: `${request.field.slug}/${reservoir.slug}`,
+      id: addressOf(member),
       vectors: {
         wetGasInPlaceScf: decodeVector(row.wetGasInPlaceScf),
         dryGasInPlaceScf: decodeVector(row.dryGasInPlaceScf),

@@ -93,8 +93,8 @@ describe("computeLedger(fields, options)", () => {
 
   /**
    * Four normals by the factor model, whose contributions are known in closed form (Tasche 1999, above). Over 60 seeds,
-   * 95 % of 720 contributions would lie within 1.96 standard errors if these were exact; trials that are spread evenly
-   * make them wider than needed, never narrower.
+   * 95 % of 720 contributions would lie within 1.96 standard errors if these were exact; evenly spread trials know the
+   * percentile of the total better than that.
    */
   it("has standard errors that cover the closed form of contributions", () => {
     const trials = 4000;

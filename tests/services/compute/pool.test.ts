@@ -3,10 +3,9 @@ import { availableParallelism } from "node:os";
 import path from "node:path";
 import { afterAll, beforeAll, describe, expect, it, vi } from "vitest";
 import { DomainError } from "@/analytics/errors";
-import { loadingsOf } from "@/analytics/portfolio/factor-model";
 import { summariseField } from "@/analytics/portfolio/field-summary";
 import { bytesOfFieldTrials, viewFieldTrials } from "@/analytics/portfolio/field-trials";
-import { rollUp } from "@/analytics/portfolio/roll-up";
+import { planField, rollUp } from "@/analytics/portfolio/roll-up";
 import { explainChange } from "@/analytics/sensitivity/explain-change";
 import { computeSensitivity } from "@/analytics/sensitivity/sensitivity";
 import { vectorNames } from "@/analytics/volumetrics/results-schema";
@@ -140,13 +139,12 @@ describe("runAlignment and runLedger", () => {
     const options = { trials, risk: "yesNo", withRanks: true } as const;
     const expected = rollUp(fields, { ...options, seed: 4, dependence });
 
-    const pieces = fields.map(({ id, slug, basinId, basinSlug, chance, reservoirs }) => ({
-      slug,
-      chance,
-      loadings: loadingsOf(dependence, { fieldId: id, basinId, basinSlug }),
+    const pieces = fields.map((field) => ({
+      slug: field.slug,
+      chance: field.chance,
       buffer: new SharedArrayBuffer(bytesOfFieldTrials(trials)),
-      reservoirs,
       isLast: true,
+      ...planField(field, field.reservoirs, dependence),
     }));
     const figures = await runAlignment(pieces, { trials, seed: 4 });
     const aligned = fields.flatMap(({ reservoirs: _, ...field }, index) => {
