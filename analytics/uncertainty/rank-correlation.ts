@@ -75,7 +75,7 @@ function checkPair<Name extends string>(
   if (!(Math.abs(rank) < 1)) {
     throw new DomainError(
       `The rank correlation of ${pair} is ${rank}; it must lie between -1 and 1. Exactly 1 or -1 would make ` +
-        "one input follow from the other: use at most 0.99.",
+        "one input follow from the other: use at most 0.999.",
       details,
     );
   }

@@ -43,6 +43,16 @@ describe("checkCorrelations", () => {
     expect(nearest?.added).toBe(0);
   });
 
+  it.each([1, -1])("proposes for a correlation of %d what its reason asks for", (rank) => {
+    const { reason, nearest } = check([pair("area", "thickness", rank)]);
+    expect(reason).toContain("use at most 0.999.");
+    const proposed = Math.abs(nearest?.correlations[0].rank ?? NaN);
+    expect(proposed).toBeLessThanOrEqual(0.999);
+    expect(proposed).toBeGreaterThan(0.99);
+    // What it asks for is possible.
+    expect(check([pair("area", "thickness", 0.999 * rank)]).possible).toBe(true);
+  });
+
   it("counts pairs that were not listed and would no longer be 0", () => {
     const { nearest } = check([pair("area", "thickness", 0.9), pair("area", "porosity", 0.9)]);
     expect(nearest?.added).toBe(1);
