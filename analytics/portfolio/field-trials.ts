@@ -1,5 +1,5 @@
 import { DomainError } from "../errors";
-import { createOrderWorkspace, rankByCounting } from "../numerics/order-statistics";
+import { createRankingWorkspace, rankByCounting } from "../numerics/ranking";
 import { createRandom, fillPermutation, streamOf } from "../numerics/random";
 import { normalScores } from "../uncertainty/rank-correlation";
 import { vectorNames, type VectorName } from "../volumetrics/results-schema";
@@ -96,7 +96,7 @@ export function createAligner({ trials, seed }: AlignmentOptions): Aligner {
   const scores = normalScores(trials);
   const mixed = new Float64Array(trials);
   const factors = new Map<string, Float64Array>();
-  const counting = createOrderWorkspace(trials);
+  const counting = createRankingWorkspace(trials);
   /** for members with more trials than the total; grows with the largest */
   let sorting = { counting, ranks: integers(), ascending: integers() };
 
@@ -135,7 +135,7 @@ export function createAligner({ trials, seed }: AlignmentOptions): Aligner {
   function sortRows({ vectors }: ReservoirTrials, count: number): Uint32Array {
     if (sorting.ascending.length < count) {
       sorting = {
-        counting: createOrderWorkspace(count),
+        counting: createRankingWorkspace(count),
         ranks: new Uint32Array(count),
         ascending: new Uint32Array(count),
       };

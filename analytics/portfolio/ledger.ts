@@ -2,9 +2,9 @@ import { DomainError } from "../errors";
 import {
   countSample,
   createOrderWorkspace,
-  rankByCounting,
   type OrderWorkspace,
 } from "../numerics/order-statistics";
+import { rankByCounting } from "../numerics/ranking";
 import { rangeOfSample, summariseSample, type SampleSummary } from "../uncertainty/summary";
 import { vectorNames, type Range, type VectorName } from "../volumetrics/results-schema";
 import {

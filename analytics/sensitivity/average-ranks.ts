@@ -1,4 +1,4 @@
-import { rankByCounting, type OrderWorkspace } from "../numerics/order-statistics";
+import { rankByCounting, type RankingWorkspace } from "../numerics/ranking";
 
 /** Values from smallest to largest, and what rank each has. */
 export interface Ranking {
@@ -16,7 +16,7 @@ export interface Ranking {
  * @example averageRanks(Float64Array.of(10, 30, 20, 20), workspace).ranks // => [1, 4, 2.5, 2.5]
  * @see M. G. Kendall, The treatment of ties in ranking problems, Biometrika 33 (1945) 239-251
  */
-export function averageRanks(values: Float64Array, workspace: OrderWorkspace): Ranking {
+export function averageRanks(values: Float64Array, workspace: RankingWorkspace): Ranking {
   const count = values.length;
   const order = new Uint32Array(count);
   rankByCounting(values, count, workspace, new Uint32Array(count), order);

@@ -1,5 +1,5 @@
 import { normalCdf, normalQuantileUnchecked } from "../numerics/normal";
-import { createOrderWorkspace, rankByCounting } from "../numerics/order-statistics";
+import { createRankingWorkspace, rankByCounting } from "../numerics/ranking";
 import { planInputNames } from "../recovery/recovery-plan-schema";
 import { createRecoveryColumns } from "../recovery/trial-recovery";
 import type { CompiledDistribution } from "../uncertainty/distribution";
@@ -119,7 +119,7 @@ type FillQuantiles = (
 
 /** Quantiles of probabilities in any order, of all trials or of some: sorted first, for distributions take them so. */
 function createQuantiles(capacity: number): FillQuantiles {
-  const counting = createOrderWorkspace(capacity);
+  const counting = createRankingWorkspace(capacity);
   const ranks = new Uint32Array(capacity);
   const order = new Uint32Array(capacity);
   const sorted = new Float64Array(capacity);

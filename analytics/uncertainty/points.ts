@@ -1,6 +1,6 @@
 import { fillNormalProbabilities, fillNormalQuantiles } from "../numerics/normal-table";
-import { rankByCounting, type OrderWorkspace } from "../numerics/order-statistics";
 import { createRandom, fillPermutation, type RandomStream } from "../numerics/random";
+import { rankByCounting, type RankingWorkspace } from "../numerics/ranking";
 import { fillByRank, fillStrata } from "./latin-hypercube";
 import { combineScores, correlateScores, type CorrelationBlock } from "./rank-correlation";
 import type { SamplingMethod } from "./sampling-schema";
@@ -13,7 +13,7 @@ export interface PointsWorkspace {
   readonly points: Uint32Array;
   /** one for every dimension that can be correlated */
   readonly scoreColumns: readonly Float64Array[];
-  readonly counting: OrderWorkspace;
+  readonly counting: RankingWorkspace;
   /** of the dimension drawn last: the stratum that each trial lies in, 0 to count - 1 */
   readonly ranks: Uint32Array;
   /** of the dimension drawn last: the probability in each stratum, ascending */

@@ -1,4 +1,4 @@
-import { rankByCounting } from "../numerics/order-statistics";
+import { rankByCounting } from "../numerics/ranking";
 import type { PointSource } from "../uncertainty/points";
 import { rangeOfSample } from "../uncertainty/summary";
 import type { InputName } from "./inputs-schema";

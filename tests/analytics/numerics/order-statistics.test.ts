@@ -5,7 +5,6 @@ import {
   countSample,
   createOrderWorkspace,
   quantileSorted,
-  rankByCounting,
 } from "@/analytics/numerics/order-statistics";
 import { createRandom } from "@/analytics/numerics/random";
 
@@ -111,41 +110,5 @@ describe("countSample", () => {
     expect([...quantiles]).toEqual([3, 3]);
     expect(standardDeviation).toBe(0);
     expect(histogram[0]).toBe(50);
-  });
-});
-
-describe("rankByCounting", () => {
-  const rank = (values: ArrayLike<number>) => {
-    const n = values.length;
-    const ranks = new Uint32Array(n);
-    const order = new Uint32Array(n);
-    rankByCounting(values, n, createOrderWorkspace(n), ranks, order);
-    return { ranks, order };
-  };
-
-  it("ranks from 0 and lists positions from smallest to largest", () => {
-    const { ranks, order } = rank([30, 10, 20]);
-    expect([...ranks]).toEqual([2, 0, 1]);
-    expect([...order]).toEqual([1, 2, 0]);
-  });
-
-  it("agrees with sorting, ties in the order in which they stand", () => {
-    fc.assert(
-      fc.property(
-        fc.array(fc.double({ min: -1e6, max: 1e6, noNaN: true }), { minLength: 1, maxLength: 200 }),
-        (values) => {
-          const expected = values.map((_, i) => i).sort((a, b) => values[a] - values[b] || a - b);
-          expect([...rank(values).order]).toEqual(expected);
-        },
-      ),
-    );
-  });
-
-  it("survives values so skewed that nearly all share a key", () => {
-    const values = uniforms(5000, 2);
-    values[17] = 1e15;
-    const { order } = rank(values);
-    for (let i = 1; i < 5000; i += 1)
-      expect(values[order[i]]).toBeGreaterThanOrEqual(values[order[i - 1]]);
   });
 });

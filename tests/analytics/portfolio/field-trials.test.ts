@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { createOrderWorkspace, rankByCounting } from "@/analytics/numerics/order-statistics";
+import { createRankingWorkspace, rankByCounting } from "@/analytics/numerics/ranking";
 import type { Dependence } from "@/analytics/portfolio/dependence-schema";
 import {
   bytesOfFieldTrials,
@@ -19,7 +19,7 @@ const emptyField = (trials: number) =>
 function ranksOf(values: ArrayLike<number>): Uint32Array {
   const count = values.length;
   const ranks = new Uint32Array(count);
-  rankByCounting(values, count, createOrderWorkspace(count), ranks, new Uint32Array(count));
+  rankByCounting(values, count, createRankingWorkspace(count), ranks, new Uint32Array(count));
   return ranks;
 }
 

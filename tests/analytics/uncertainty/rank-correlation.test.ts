@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { choleskyFactor } from "@/analytics/numerics/cholesky";
-import { createOrderWorkspace, rankByCounting } from "@/analytics/numerics/order-statistics";
+import { createRankingWorkspace, rankByCounting } from "@/analytics/numerics/ranking";
 import {
   correlateScores,
   correlationBlocks,
@@ -51,7 +51,7 @@ describe("correlateScores", () => {
 
   it.each([0, 1, 2, 3])("puts column %d of Mildenhall's example in the published order", (j) => {
     const ranks = integers(20);
-    rankByCounting(columns[j], 20, createOrderWorkspace(20), ranks, integers(20));
+    rankByCounting(columns[j], 20, createRankingWorkspace(20), ranks, integers(20));
     expect([...ranks]).toEqual(MILDENHALL.ranksOfY[j]);
   });
 
