@@ -5,7 +5,10 @@
 import { DomainError } from "@/analytics/errors";
 import type { ChangeQuestion } from "@/analytics/sensitivity/explain-change";
 import type { SensitivityOptions } from "@/analytics/sensitivity/sensitivity";
-import type { ChangeExplanation, Sensitivity } from "@/analytics/sensitivity/sensitivity-schema";
+import type {
+  ChangeExplanation,
+  SensitivityAnswer,
+} from "@/analytics/sensitivity/sensitivity-schema";
 import { checkInputs } from "@/analytics/volumetrics/check-inputs";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import { DEFAULT_TRIALS, samplingFor } from "@/analytics/volumetrics/trial-counts";
@@ -28,7 +31,7 @@ export interface SensitivityQuestion extends Omit<SensitivityOptions, "trials" |
 export async function calculateSensitivity(
   { inputs, trials = DEFAULT_TRIALS, sampling = samplingFor(trials), ...rest }: SensitivityQuestion,
   options: ComputeOptions = {},
-): Promise<Sensitivity> {
+): Promise<SensitivityAnswer> {
   refuseImpossible("inputs", () => checkInputs(inputs));
   return refuseLater(["seed", "trials", "chosen"], "inputs", () =>
     runSensitivity(inputs, { ...rest, trials, sampling }, options),

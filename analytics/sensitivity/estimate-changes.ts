@@ -106,20 +106,26 @@ function planSteps(before: RecoveryPlan | null, to: EstimateRun): SingleStep[] {
   return sameValue(withoutInputs(before), withoutInputs(after)) ? inputs : [...inputs, rest];
 }
 
-function restSteps(from: EstimateRun, to: EstimateRun): SingleStep[] {
-  const pairs = ({ inputs }: EstimateRun) =>
-    inputs.correlations
-      .filter(
-        ({ a, b, rank }) =>
-          rank !== 0 &&
-          !(from.inputs.recoveryPlan && to.inputs.recoveryPlan && (isRecovery(a) || isRecovery(b))),
-      )
+/**
+ * Whether two estimates have the same rank correlations, whatever their order; one of 0 is none. Those of recoveries do not
+ * count where both have a plan that replaces them.
+ */
+export function sameCorrelations(from: EstimateInputs, to: EstimateInputs): boolean {
+  const isReplaced = (name: InputName) =>
+    from.recoveryPlan && to.recoveryPlan ? isRecovery(name) : false;
+  const pairs = ({ correlations }: EstimateInputs) =>
+    correlations
+      .filter(({ a, b, rank }) => rank !== 0 && !isReplaced(a) && !isReplaced(b))
       .map(({ a, b, rank }) => `${[a, b].sort().join(" ")} ${rank}`)
       .sort();
+  return sameValue(pairs(from), pairs(to));
+}
+
+function restSteps(from: EstimateRun, to: EstimateRun): SingleStep[] {
   const { correlations, fluid } = to.inputs;
   const { seed, trials, sampling } = to;
   const steps: SingleStep[] = [];
-  if (!sameValue(pairs(from), pairs(to))) {
+  if (!sameCorrelations(from.inputs, to.inputs)) {
     steps.push({
       change: { kind: "correlations" },
       make: (run) => ({ ...run, inputs: { ...run.inputs, correlations } }),

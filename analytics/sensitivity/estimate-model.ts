@@ -6,6 +6,7 @@ import type { CompiledDistribution } from "../uncertainty/distribution";
 import type { CorrelationBlock } from "../uncertainty/rank-correlation";
 import { inputNames, type EstimateInputs, type InputName } from "../volumetrics/inputs-schema";
 import { prepareInputs, type PreparedInputs } from "../volumetrics/prepare-inputs";
+import { sampledInputs, type SampledInput } from "../volumetrics/sample-inputs";
 import {
   derivedNames,
   resultNames,
@@ -32,14 +33,9 @@ export interface EstimateModel {
   readonly evaluate: ColumnModel;
 }
 
-interface Source {
-  readonly name: DriverName;
-  readonly distribution: CompiledDistribution;
-}
-
 /** Part of a sample that is independent of the rest. */
 interface Part {
-  readonly sources: readonly Source[];
+  readonly sources: readonly SampledInput[];
   readonly dimensions: number;
   readonly fill: (
     uniforms: readonly Float64Array[],
@@ -77,21 +73,13 @@ export function estimateModel(
   };
 }
 
-const varies = ({ distribution }: Source) => distribution.standardDeviation > 0;
-
-function sourcesOf({ inputNames: names, distributions, plan }: PreparedInputs): Source[] {
-  const ofPlan = (plan?.inputNames ?? []).flatMap((name): Source[] => {
-    const distribution = plan?.distributions[name];
-    return distribution ? [{ name, distribution }] : [];
-  });
-  return [...names.map((name) => ({ name, distribution: distributions[name] })), ...ofPlan];
-}
+const varies = ({ distribution }: SampledInput) => distribution.standardDeviation > 0;
 
 function partsOf(prepared: PreparedInputs, count: number): Part[] {
   const fillQuantiles = createQuantiles(count);
   const parts: Part[] = [];
   const placed = new Set<DriverName>();
-  const sources = sourcesOf(prepared);
+  const sources = sampledInputs(prepared);
   for (const source of sources) {
     if (placed.has(source.name)) continue;
     const block = prepared.blocks.find(({ names }) => names.some((name) => name === source.name));
@@ -135,7 +123,7 @@ function createQuantiles(capacity: number): FillQuantiles {
   };
 }
 
-function singlePart(source: Source, fillQuantiles: FillQuantiles): Part {
+function singlePart(source: SampledInput, fillQuantiles: FillQuantiles): Part {
   return {
     sources: [source],
     dimensions: 1,
@@ -147,7 +135,7 @@ function singlePart(source: Source, fillQuantiles: FillQuantiles): Part {
 }
 
 function correlatedPart(
-  sources: readonly Source[],
+  sources: readonly SampledInput[],
   { factor }: CorrelationBlock<InputName>,
   fillQuantiles: FillQuantiles,
 ): Part {
@@ -171,7 +159,7 @@ function correlatedPart(
   };
 }
 
-function casePart(sources: readonly Source[], fillQuantiles: FillQuantiles): Part {
+function casePart(sources: readonly SampledInput[], fillQuantiles: FillQuantiles): Part {
   const weights = sources[0].distribution.cases?.map(({ weight }) => weight) ?? [];
   return {
     sources,
@@ -208,8 +196,8 @@ function createEvaluation(
   const outputs = record([...resultNames, ...derivedNames], column);
   const recoveryColumns = prepared.plan && createRecoveryColumns(capacity);
   const constants = new Map(
-    sourcesOf(prepared).map(({ name, distribution }) => [
-      name as DriverName,
+    sampledInputs(prepared).map(({ name, distribution }) => [
+      name,
       column().fill(distribution.range.p50),
     ]),
   );

@@ -77,6 +77,18 @@ export const sensitivitySchema = z.object({
 });
 export type Sensitivity = z.infer<typeof sensitivitySchema>;
 
+/** What can be asked for by itself. */
+export const sensitivityParts = [
+  "rankRegression",
+  "varianceShares",
+  "knowing",
+  "conditional",
+] as const;
+export type SensitivityPart = (typeof sensitivityParts)[number];
+/** The parts that were asked for. */
+export const sensitivityAnswerSchema = sensitivitySchema.partial().required({ trials: true });
+export type SensitivityAnswer = z.infer<typeof sensitivityAnswerSchema>;
+
 const singleChanges = [
   z.object({ kind: z.literal("input"), input: driverName }),
   z.object({ kind: z.enum(["correlations", "fluid", "recoveryPlan", "sampling"]) }),

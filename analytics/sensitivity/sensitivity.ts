@@ -14,10 +14,10 @@ import { conditionalView, type RankedInput } from "./conditional";
 import { estimateModel } from "./estimate-model";
 import { valueOfKnowing } from "./knowing";
 import { rankRegression } from "./rank-regression";
-import type { Sensitivity } from "./sensitivity-schema";
+import { sensitivityParts, type Sensitivity, type SensitivityPart } from "./sensitivity-schema";
 import { sobolIndices } from "./sobol-indices";
 
-export interface SensitivityOptions {
+export interface SensitivityOptions<Part extends SensitivityPart = SensitivityPart> {
   /** with seed, trials and method of a revision, the trials looked at are that revision's */
   seed: number;
   trials: number;
@@ -25,6 +25,8 @@ export interface SensitivityOptions {
   result: ResultName;
   /** cumulative probabilities of the result that the conditional view lies between */
   chosen: { from: number; to: number };
+  /** what is wanted; all of it unless said */
+  parts?: readonly Part[];
 }
 
 /** Trials of one replicate and replicates of the variance-based study: 8,192 base trials. */
@@ -36,14 +38,16 @@ const REPLICATES = 16;
  * what the trials between two chances have in common.
  *
  * All but the variance-based shares are read off the estimate's own trials; those need two independent samples of the
- * inputs, made from the same seed. Inputs without spread do not appear.
+ * inputs, made from the same seed. Inputs without spread do not appear. A part that is not asked for takes no time: other
+ * chosen trials need no second study of the variance.
  *
  * @throws {DomainError} as `simulate`, or when no trial lies between the two chances
  */
-export function computeSensitivity(
+export function computeSensitivity<Part extends SensitivityPart = SensitivityPart>(
   inputs: EstimateInputs,
-  { seed, trials, sampling, result, chosen }: SensitivityOptions,
-): Sensitivity {
+  options: SensitivityOptions<Part>,
+): Pick<Sensitivity, "trials" | Part> {
+  const { seed, trials, sampling, result, chosen, parts = sensitivityParts } = options;
   const workspace = createWorkspace(trials, { keepInputs: true });
   const { summary } = simulate(inputs, { seed, trials, sampling, workspace });
   const counting = createOrderWorkspace(trials);
@@ -55,23 +59,27 @@ export function computeSensitivity(
         ? [{ name, values: column, ranking: averageRanks(column, counting) }]
         : [],
   );
-  const { p90, p10 } = summary.results[result];
-  return {
-    trials,
-    rankRegression: rankRegression(
-      drivers.map(({ name, ranking: { ranks } }) => ({ name, ranks })),
-      ranking.ranks,
-      labelsOf(inputs),
-    ),
-    varianceShares: varianceShares(inputs, result, seed),
-    knowing: drivers
-      .map(({ name, values: column, ranking: order }) => ({
-        input: name,
-        ...valueOfKnowing(column, order, values, p10 - p90, workspace.starts),
-      }))
-      .sort((a, b) => b.varianceRemoved - a.varianceRemoved),
-    conditional: conditionalView(drivers, values, ranking, chosen),
+  const compute: { [Name in SensitivityPart]: () => Sensitivity[Name] } = {
+    rankRegression: () =>
+      rankRegression(
+        drivers.map(({ name, ranking: { ranks } }) => ({ name, ranks })),
+        ranking.ranks,
+        labelsOf(inputs),
+      ),
+    varianceShares: () => varianceShares(inputs, result, seed),
+    knowing() {
+      const { p90, p10 } = summary.results[result];
+      return drivers
+        .map(({ name, values: column, ranking: order }) => ({
+          input: name,
+          ...valueOfKnowing(column, order, values, p10 - p90, workspace.starts),
+        }))
+        .sort((a, b) => b.varianceRemoved - a.varianceRemoved);
+    },
+    conditional: () => conditionalView(drivers, values, ranking, chosen),
   };
+  const wanted = parts.map((part) => [part, compute[part]()]);
+  return { trials, ...Object.fromEntries(wanted) } as Pick<Sensitivity, "trials" | Part>;
 }
 
 /** The columns that the trials of a simulation were evaluated on. */

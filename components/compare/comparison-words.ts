@@ -1,3 +1,4 @@
+import { sameCorrelations } from "@/analytics/sensitivity/estimate-changes";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import type { Range } from "@/analytics/volumetrics/results-schema";
 import { isSameFluid, type InputDifference } from "@/components/estimate/differences";
@@ -28,14 +29,8 @@ export function inputsFinding(differences: readonly InputDifference[]): string {
 
 /** What differs besides the ranges: "The rank correlations and the separator test differ too." `null` when nothing does. */
 export function otherDifferences(left: EstimateInputs, right: EstimateInputs): string | null {
-  const pairs = ({ correlations }: EstimateInputs) =>
-    correlations
-      .filter(({ rank }) => rank !== 0)
-      .map(({ a, b, rank }) => `${[a, b].sort().join(" ")} ${rank}`)
-      .sort()
-      .join("; ");
   const parts = [
-    pairs(left) !== pairs(right) && "the rank correlations",
+    !sameCorrelations(left, right) && "the rank correlations",
     !isSameFluid(left.fluid, right.fluid) && "the separator test",
   ].filter((part): part is string => part !== false);
   if (parts.length === 0) return null;

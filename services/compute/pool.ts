@@ -10,7 +10,10 @@ import type { FieldFigures, Ledger } from "@/analytics/portfolio/ledger";
 import type { FieldPiece } from "@/analytics/portfolio/roll-up";
 import type { ChangeQuestion } from "@/analytics/sensitivity/explain-change";
 import type { SensitivityOptions } from "@/analytics/sensitivity/sensitivity";
-import type { ChangeExplanation, Sensitivity } from "@/analytics/sensitivity/sensitivity-schema";
+import type {
+  ChangeExplanation,
+  SensitivityAnswer,
+} from "@/analytics/sensitivity/sensitivity-schema";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import type { QuantitySummary, VectorName } from "@/analytics/volumetrics/results-schema";
 import type { Simulation, SimulationOptions } from "@/analytics/volumetrics/simulate";
@@ -165,8 +168,8 @@ export async function runSensitivity(
   inputs: EstimateInputs,
   options: SensitivityOptions,
   { signal }: ComputeOptions = {},
-): Promise<Sensitivity> {
-  return run<Sensitivity>("sensitivity", { inputs, options }, { signal });
+): Promise<SensitivityAnswer> {
+  return run<SensitivityAnswer>("sensitivity", { inputs, options }, { signal });
 }
 
 /**

@@ -17,7 +17,10 @@ import {
 import { alignPieces, type FieldPiece } from "@/analytics/portfolio/roll-up";
 import { explainChange, type ChangeQuestion } from "@/analytics/sensitivity/explain-change";
 import { computeSensitivity, type SensitivityOptions } from "@/analytics/sensitivity/sensitivity";
-import type { ChangeExplanation, Sensitivity } from "@/analytics/sensitivity/sensitivity-schema";
+import type {
+  ChangeExplanation,
+  SensitivityAnswer,
+} from "@/analytics/sensitivity/sensitivity-schema";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import type { QuantitySummary, VectorName } from "@/analytics/volumetrics/results-schema";
 import {
@@ -122,7 +125,7 @@ export function settle({ inputs, options, progress }: SettleTask) {
 
 /** What drives one result of an estimate. */
 export function sensitivity({ inputs, options }: SensitivityTask) {
-  return answer<Sensitivity>(
+  return answer<SensitivityAnswer>(
     () => computeSensitivity(inputs, options),
     () => [],
   );

@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import type { Problem } from "@/app/_server/problem";
 import { changeResponseSchema, type ChangeRequest } from "@/app/api/v1/calculations/change/schema";
-import { sensitivityResponseSchema } from "@/app/api/v1/calculations/sensitivity/schema";
+import { wholeSensitivitySchema } from "@/app/api/v1/calculations/sensitivity/schema";
 import { comparisonSchema, type Comparison } from "@/app/api/v1/comparisons/schema";
 import type { EstimateView } from "@/app/api/v1/estimates/schema";
 import type { ReservoirView } from "@/app/api/v1/reservoirs/schema";
@@ -38,7 +38,7 @@ describe("POST /api/v1/calculations/sensitivity", () => {
     const engineer = await as("engineer");
     const answer = await engineer.post(sensitivityPath, question);
     expect(answer).toMatchObject({ status: 200 });
-    const body = sensitivityResponseSchema.parse(answer.body);
+    const body = wholeSensitivitySchema.parse(answer.body);
     expect(body.trials).toBe(2_000);
     expect(body.knowing[0].input).toBe("areaAcres");
     expect(body.conditional).toMatchObject({ from: 0.9, to: 1, trials: 200 });
@@ -56,7 +56,7 @@ describe("POST /api/v1/calculations/sensitivity", () => {
       ...{ inputs, seed, trials, sampling, result: "salesGasScf" },
       chosen: { from: 0, to: 1 },
     });
-    const { conditional } = sensitivityResponseSchema.parse(made(answer));
+    const { conditional } = wholeSensitivitySchema.parse(made(answer));
     const { p90, p50, p10 } = run.summary?.results.salesGasScf ?? {};
     expect(conditional.result).toMatchObject({ p90, p50, p10 });
   });

@@ -82,6 +82,12 @@ describe("computeSensitivity", () => {
     expect(thicknesses?.all.p50).toBeCloseTo(summary.inputs.netThicknessFt.p50, 2);
   });
 
+  it("works out the parts that are asked for alone, as they are with the rest", () => {
+    const whole = computeSensitivity(product, options);
+    const part = computeSensitivity(product, { ...options, parts: ["conditional"] });
+    expect(part).toEqual({ trials: 10_000, conditional: whole.conditional });
+  });
+
   it("has rank coefficients whose squares share the fit of a near product", () => {
     const { rankRegression } = computeSensitivity(product, options);
     // Normal scores of a product of lognormals are linear in those of its factors, and ranks nearly so.

@@ -4,7 +4,8 @@ import { sensitivityRequestSchema } from "./schema";
 
 /**
  * POST /api/v1/calculations/sensitivity: what drives one result of an estimate, without keeping it. The trials are made
- * anew from inputs, seed, method and number, so a revision's own give that revision's trials. Runs on the thread pool.
+ * anew from inputs, seed, method and number, so a revision's own give that revision's trials. `parts` names what is wanted,
+ * all of it unless said. Runs on the thread pool.
  *
  * @example request
  * { "inputs": { ... }, "seed": 1, "trials": 10000, "result": "condensateRecoverableStb",

@@ -1,5 +1,9 @@
 import { z } from "zod";
-import { sensitivitySchema } from "@/analytics/sensitivity/sensitivity-schema";
+import {
+  sensitivityAnswerSchema,
+  sensitivityParts,
+  sensitivitySchema,
+} from "@/analytics/sensitivity/sensitivity-schema";
 import { samplingMethods } from "@/analytics/uncertainty/sampling-schema";
 import { estimateInputsSchema } from "@/analytics/volumetrics/inputs-schema";
 import { resultNames } from "@/analytics/volumetrics/results-schema";
@@ -18,8 +22,18 @@ export const sensitivityRequestSchema = z
       .strict()
       .refine(({ from, to }) => to - from >= 0.01, "must be at least 1 % of the trials")
       .default({ from: 0.9, to: 1 }),
+    /** what is wanted; all of it unless said. Other chosen trials alone need only "conditional". */
+    parts: z.array(z.enum(sensitivityParts)).min(1).max(sensitivityParts.length).optional(),
   })
   .strict();
 export type SensitivityRequest = z.infer<typeof sensitivityRequestSchema>;
 
-export const sensitivityResponseSchema = sensitivitySchema;
+/** The number of trials and the parts asked for. */
+export const sensitivityResponseSchema = sensitivityAnswerSchema;
+/** All parts, when none were named. */
+export const wholeSensitivitySchema = sensitivitySchema;
+/** What the chosen trials have in common, when that alone was asked for. */
+export const conditionalResponseSchema = sensitivitySchema.pick({
+  trials: true,
+  conditional: true,
+});

@@ -19,7 +19,7 @@ import { Notice, Skeleton } from "@/components/ui/status";
 import { useReservoir } from "../_editor/reservoir-context";
 import { ABOVE_P10, useQuestion } from "../_editor/use-question";
 import { useSettled } from "../_editor/use-live-results";
-import { useSensitivity } from "../_queries/sensitivity";
+import { useConditional } from "../_queries/sensitivity";
 
 type Choice = "aboveP10" | "aboveP50" | "belowP90" | "window";
 interface Chances {
@@ -88,7 +88,7 @@ export function ConditionalSection({ result }: { result: ResultName }) {
   const isTooThin = chosen.to - chosen.from < LEAST_SHARE;
   const question = useQuestion(result, settled);
   const asked = settled.to - settled.from >= LEAST_SHARE;
-  const query = useSensitivity(asked ? question : null);
+  const query = useConditional(asked ? question : null);
   const factor = resultFactor(result, resultBasis);
   const unit = resultUnit(result, resultBasis);
   const name = resultLabels[result];
@@ -142,11 +142,12 @@ export function ConditionalSection({ result }: { result: ResultName }) {
         >
           {errorWords(query.error)}
         </Notice>
-      ) : query.sensitivity ? (
+      ) : query.view ? (
         <div aria-busy={query.isStale} className={query.isStale ? "opacity-60" : undefined}>
           <ConditionalTable
-            view={query.sensitivity.conditional}
-            trials={query.sensitivity.trials}
+            view={query.view.conditional}
+            trials={query.view.trials}
+            storedTrials={results.summary.trials}
             name={name}
             unit={unit}
             factor={factor}

@@ -1,41 +1,30 @@
 "use client";
 
-import { keepPreviousData, useQuery } from "@tanstack/react-query";
-import { request } from "@/app/_client/request";
 import {
-  sensitivityResponseSchema,
+  conditionalResponseSchema,
+  wholeSensitivitySchema,
   type SensitivityRequest,
 } from "@/app/api/v1/calculations/sensitivity/schema";
+import { useAnswer } from "./answer";
 
 export type SensitivityQuestion = SensitivityRequest;
 
 /**
- * What drives a result of an estimate, from its own trials made again. The last answer stays while another is worked
- * out.
+ * What drives a result of an estimate, from its own trials made again.
  *
- * @param question  `null` while the inputs are not complete
+ * @param question  for all parts; `null` while the inputs are not complete
  */
-export function useSensitivity(question: SensitivityQuestion | null) {
-  const query = useQuery({
-    queryKey: ["sensitivity", question],
-    queryFn: ({ signal }) =>
-      request("/api/v1/calculations/sensitivity", {
-        method: "POST",
-        body: question,
-        schema: sensitivityResponseSchema,
-        signal,
-      }),
-    enabled: question !== null,
-    placeholderData: keepPreviousData,
-    staleTime: Infinity,
-    gcTime: 10 * 60_000,
-    retry: false,
-  });
-  return {
-    sensitivity: query.data ?? null,
-    isStale: query.isPlaceholderData,
-    isPending: query.isPending && question !== null,
-    error: query.error,
-    refetch: () => void query.refetch(),
-  };
+export function useSensitivity(question: Omit<SensitivityQuestion, "parts"> | null) {
+  const { answer, ...state } = useAnswer("sensitivity", question, wholeSensitivitySchema);
+  return { ...state, sensitivity: answer };
+}
+
+/** What the chosen trials have in common, without the study of the variance, which no choice of trials changes. */
+export function useConditional(question: Omit<SensitivityQuestion, "parts"> | null) {
+  const { answer, ...state } = useAnswer(
+    "sensitivity",
+    question && { ...question, parts: ["conditional"] },
+    conditionalResponseSchema,
+  );
+  return { ...state, view: answer };
 }
