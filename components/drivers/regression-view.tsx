@@ -20,9 +20,14 @@ export interface DriverViewProps {
 
 const coefficientText = (value: number) => formatFigure(value, { decimals: 2 });
 
-/** " Net thickness is left out: …" */
+/** " Net thickness is left out: … What it does is in the coefficients shown." */
 const leftOutWords = (inputs: Sensitivity["rankRegression"]["leftOut"]) =>
-  inputs.map(({ input, reason }) => ` ${inputLabel(input)} is left out: ${reason}`).join("");
+  inputs
+    .map(
+      ({ input, reason }) =>
+        ` ${inputLabel(input)} is left out: ${reason} What it does is in the coefficients shown.`,
+    )
+    .join("");
 
 /** By how many standard deviations of rank the result moves with each input, the others held. */
 export function RegressionView({
