@@ -38,14 +38,20 @@ export function BasinSection({
   return (
     <Section
       title={findingOf(basins)}
-      note={`Mean ${liquid.name}, ${liquid.unit}, by basin and PRMS class. Variance: its share, by covariance with the total.`}
+      note={
+        <>
+          Mean {liquid.name}, {liquid.unit}, by basin and PRMS class. Variance: its share, by
+          covariance with the total.
+          <span className="hidden phone:inline"> Classes have columns on a wider screen.</span>
+        </>
+      }
     >
       <LedgerTable caption={`Mean ${liquid.name} by basin and class`} density="executive">
         <thead>
           <tr>
             <ColumnHeading>Basin</ColumnHeading>
             {classes.map((name) => (
-              <ColumnHeading key={name} align="right">
+              <ColumnHeading key={name} align="right" className="hide-phone">
                 {capital(name)}
               </ColumnHeading>
             ))}
@@ -65,7 +71,11 @@ export function BasinSection({
               {classes.map((prmsClass) => {
                 const mean = condensateMeanStbByClass[prmsClass];
                 return (
-                  <FigureCell key={prmsClass} value={mean === null ? null : mean * liquid.perStb} />
+                  <FigureCell
+                    key={prmsClass}
+                    value={mean === null ? null : mean * liquid.perStb}
+                    className="hide-phone"
+                  />
                 );
               })}
               <FigureCell value={range.mean} strong />
@@ -87,7 +97,7 @@ export function BasinSection({
           <TotalRow>
             <th scope="row">All</th>
             {classes.map((name) => (
-              <FigureCell key={name} value={classMean(name)} />
+              <FigureCell key={name} value={classMean(name)} className="hide-phone" />
             ))}
             <FigureCell value={classes.reduce((sum, name) => sum + classMean(name), 0)} />
             <td className="right">{formatPercent(1)}</td>
