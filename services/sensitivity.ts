@@ -9,7 +9,7 @@ import type {
   ChangeExplanation,
   SensitivityAnswer,
 } from "@/analytics/sensitivity/sensitivity-schema";
-import { checkInputs } from "@/analytics/volumetrics/check-inputs";
+import { requirePossibleInputs } from "@/analytics/volumetrics/check-inputs";
 import type { EstimateInputs } from "@/analytics/volumetrics/inputs-schema";
 import { DEFAULT_TRIALS, samplingFor } from "@/analytics/volumetrics/trial-counts";
 import { runChange, runSensitivity, type ComputeOptions } from "./compute/pool";
@@ -32,7 +32,7 @@ export async function calculateSensitivity(
   { inputs, trials = DEFAULT_TRIALS, sampling = samplingFor(trials), ...rest }: SensitivityQuestion,
   options: ComputeOptions = {},
 ): Promise<SensitivityAnswer> {
-  refuseImpossible("inputs", () => checkInputs(inputs));
+  refuseImpossible("inputs", () => requirePossibleInputs(inputs));
   return refuseLater(["seed", "trials", "chosen"], "inputs", () =>
     runSensitivity(inputs, { ...rest, trials, sampling }, options),
   );
@@ -50,7 +50,7 @@ export async function calculateChange(
   options: ComputeOptions = {},
 ): Promise<ChangeExplanation> {
   for (const side of ["from", "to"] as const) {
-    refuseImpossible(`${side}.inputs`, () => checkInputs(question[side].inputs));
+    refuseImpossible(`${side}.inputs`, () => requirePossibleInputs(question[side].inputs));
   }
   return refuseLater(["from", "to"], "", () => runChange(question, options));
 }

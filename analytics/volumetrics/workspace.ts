@@ -27,6 +27,7 @@ export interface SimulationWorkspace extends PointsWorkspace, TrialScratch {
   /** where each replicate begins, and the number of trials last */
   readonly starts: readonly number[];
   readonly replicates: readonly Replicate[];
+  readonly counting: OrderWorkspace;
   readonly sorted: Float64Array;
   readonly caseProbabilities: Float64Array;
   /** which case of a set each trial takes */
