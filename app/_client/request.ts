@@ -25,6 +25,13 @@ export class ProblemError extends Error {
   }
 }
 
+/** The row as it is now, when somebody else saved first; null for any other error. */
+export function currentRow<Row>(error: unknown, schema: z.ZodType<Row>): Row | null {
+  if (!(error instanceof ProblemError) || error.status !== 412) return null;
+  const parsed = schema.safeParse(error.current);
+  return parsed.success ? parsed.data : null;
+}
+
 export interface RequestOptions<Schema extends z.ZodType> {
   method?: "GET" | "POST" | "PATCH" | "PUT" | "DELETE";
   /** sent as JSON, or as it is when it is a form */

@@ -1,10 +1,11 @@
 "use client";
 
 import { useRouter, useSearchParams } from "next/navigation";
-import { errorWords } from "@/app/_client/request";
+
+import { ReadError } from "@/app/_client/read-error";
 import { Button } from "@/components/ui/button";
 import { Page, PageHead } from "@/components/ui/section";
-import { EmptyState, Notice, Skeleton } from "@/components/ui/status";
+import { EmptyState, Skeleton } from "@/components/ui/status";
 import { useAuditEvents } from "../_queries/audit-events";
 import { AuditFilterBar } from "./audit-filter-bar";
 import { AuditTable } from "./audit-table";
@@ -42,17 +43,9 @@ export function AuditTrail() {
       <AuditFilterBar filter={filter} onChange={handleFilter} />
       {!data && !error && <Skeleton lines={12} label="Loading the audit trail" />}
       {error && (
-        <Notice
-          tone="error"
-          title={errorWords(error)}
-          actions={
-            <Button size="small" onClick={() => void refetch()}>
-              Try again
-            </Button>
-          }
-        >
+        <ReadError error={error} onRetry={refetch}>
           The trail itself is kept; only this list could not be read.
-        </Notice>
+        </ReadError>
       )}
       {data?.items.length === 0 && (
         <EmptyState

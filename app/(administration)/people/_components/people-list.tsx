@@ -1,13 +1,14 @@
 "use client";
 
 import { useState } from "react";
-import { errorWords } from "@/app/_client/request";
+
+import { ReadError } from "@/app/_client/read-error";
 import { countWord } from "@/app/_client/words";
 import type { UserView } from "@/app/api/v1/users/schema";
 import { Button } from "@/components/ui/button";
 import { SearchField } from "@/components/ui/field";
 import { Page, PageHead } from "@/components/ui/section";
-import { EmptyState, Notice, Skeleton } from "@/components/ui/status";
+import { EmptyState, Skeleton } from "@/components/ui/status";
 import { useUsers } from "../_queries/users";
 import { AddPersonDialog } from "./add-person-dialog";
 import { PeopleTable } from "./people-table";
@@ -43,17 +44,9 @@ export function PeopleList({ ownId }: { ownId: string }) {
       />
       {!data && !error && <Skeleton lines={8} label="Loading the people" />}
       {error && (
-        <Notice
-          tone="error"
-          title={errorWords(error)}
-          actions={
-            <Button size="small" onClick={() => void refetch()}>
-              Try again
-            </Button>
-          }
-        >
+        <ReadError error={error} onRetry={refetch}>
           The accounts are kept; only this list could not be read.
-        </Notice>
+        </ReadError>
       )}
       {data && (
         <>

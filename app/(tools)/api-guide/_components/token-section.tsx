@@ -1,6 +1,7 @@
 "use client";
 
 import { useState } from "react";
+import { ReadError } from "@/app/_client/read-error";
 import { errorWords } from "@/app/_client/request";
 import type { ApiTokenView } from "@/app/api/v1/api-tokens/schema";
 import { Button } from "@/components/ui/button";
@@ -26,17 +27,9 @@ export function TokenSection() {
         <NewToken />
         {isPending && <Skeleton lines={3} label="Loading your tokens" />}
         {!isPending && !data && (
-          <Notice
-            tone="error"
-            title={errorWords(error)}
-            actions={
-              <Button size="small" onClick={() => void refetch()}>
-                Try again
-              </Button>
-            }
-          >
+          <ReadError error={error} onRetry={refetch}>
             Your tokens work as before; only this list could not be read.
-          </Notice>
+          </ReadError>
         )}
         {live.length > 0 && <TokenTable tokens={live} onRevoke={setRevoking} />}
       </div>

@@ -1,12 +1,13 @@
 "use client";
 
 import { useState } from "react";
-import { errorWords } from "@/app/_client/request";
+
+import { ReadError } from "@/app/_client/read-error";
 import type { ImportDetail, RowKind } from "@/app/api/v1/imports/schema";
-import { Button, LinkButton } from "@/components/ui/button";
+import { LinkButton } from "@/components/ui/button";
 import { formatDate } from "@/components/ui/format";
 import { Page, PageHead, Section, Stack } from "@/components/ui/section";
-import { Notice, Skeleton } from "@/components/ui/status";
+import { Skeleton } from "@/components/ui/status";
 import { useImport, useTake } from "../_queries/imports";
 import { ImportNotices } from "./import-notices";
 import { ImportProgress } from "./import-progress";
@@ -36,17 +37,9 @@ export function ImportFile({ id }: { id: string }) {
     return (
       <Page>
         <PageHead title="Import" crumbs={crumbs} />
-        <Notice
-          tone="error"
-          title={errorWords(error)}
-          actions={
-            <Button size="small" onClick={() => void refetch()}>
-              Try again
-            </Button>
-          }
-        >
+        <ReadError error={error} onRetry={refetch}>
           The sheet is kept; only this page could not be read.
-        </Notice>
+        </ReadError>
       </Page>
     );
   }

@@ -1,11 +1,11 @@
 "use client";
 
 import Link from "next/link";
-import { errorWords } from "@/app/_client/request";
-import { Button } from "@/components/ui/button";
+
+import { ReadError } from "@/app/_client/read-error";
 import { formatDate } from "@/components/ui/format";
 import { Section } from "@/components/ui/section";
-import { EmptyState, Notice, Skeleton } from "@/components/ui/status";
+import { EmptyState, Skeleton } from "@/components/ui/status";
 import { LedgerTable } from "@/components/ui/table";
 import { useImports } from "../_queries/imports";
 import { outcomeWords } from "./import-words";
@@ -16,17 +16,9 @@ export function ImportList() {
   if (isPending) return <Skeleton lines={4} label="Loading earlier imports" />;
   if (!data) {
     return (
-      <Notice
-        tone="error"
-        title={errorWords(error)}
-        actions={
-          <Button size="small" onClick={() => void refetch()}>
-            Try again
-          </Button>
-        }
-      >
+      <ReadError error={error} onRetry={refetch}>
         Earlier imports are kept; only this list could not be read.
-      </Notice>
+      </ReadError>
     );
   }
   if (data.items.length === 0) {

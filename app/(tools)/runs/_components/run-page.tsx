@@ -2,9 +2,10 @@
 
 import { useQueryClient } from "@tanstack/react-query";
 import { useEffect, useRef } from "react";
-import { errorWords } from "@/app/_client/request";
+
+import { ReadError } from "@/app/_client/read-error";
 import type { RunView } from "@/app/api/v1/runs/schema";
-import { Button } from "@/components/ui/button";
+
 import { formatDate } from "@/components/ui/format";
 import { Page, PageHead, Section, Stack } from "@/components/ui/section";
 import { Notice, Skeleton } from "@/components/ui/status";
@@ -29,17 +30,9 @@ export function RunPage({ id }: { id: string }) {
       <Page>
         <PageHead title="Run" crumbs={crumbs} />
         {error ? (
-          <Notice
-            tone="error"
-            title={errorWords(error)}
-            actions={
-              <Button size="small" onClick={() => void refetch()}>
-                Try again
-              </Button>
-            }
-          >
+          <ReadError error={error} onRetry={refetch}>
             What the run has done is kept; only this page could not be read.
-          </Notice>
+          </ReadError>
         ) : (
           <Skeleton lines={8} label="Loading the run" />
         )}

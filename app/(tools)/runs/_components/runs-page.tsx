@@ -2,13 +2,14 @@
 
 import Link from "next/link";
 import { useState } from "react";
-import { errorWords } from "@/app/_client/request";
+
+import { ReadError } from "@/app/_client/read-error";
 import { useCan } from "@/app/_client/use-session";
 import type { RunView } from "@/app/api/v1/runs/schema";
 import { Button } from "@/components/ui/button";
 import { formatDate } from "@/components/ui/format";
 import { Page, PageHead, Section, Stack } from "@/components/ui/section";
-import { EmptyState, Notice, Skeleton } from "@/components/ui/status";
+import { EmptyState, Skeleton } from "@/components/ui/status";
 import { LedgerTable } from "@/components/ui/table";
 import { RUNS_PER_PAGE, isUnderWay, lastHeardOf, useRuns } from "../../_queries/runs";
 import { Pager } from "./pager";
@@ -39,19 +40,11 @@ export function RunsPage() {
       <Stack>
         {isPending && <Skeleton lines={6} label="Loading the runs" />}
         {error && (
-          <Notice
-            tone="error"
-            title={errorWords(error)}
-            actions={
-              <Button size="small" onClick={() => void refetch()}>
-                Try again
-              </Button>
-            }
-          >
+          <ReadError error={error} onRetry={refetch}>
             {lastHeard
               ? `The list is as it was when last heard, ${formatDate(lastHeard, "clock")} UTC. What was done is kept.`
               : "The list could not be read. What was done is kept."}
-          </Notice>
+          </ReadError>
         )}
         {data?.items.length === 0 && (
           <EmptyState title="Nothing has been computed in the background yet" action={start}>

@@ -1,8 +1,9 @@
 "use client";
 
 import { useRouter } from "next/navigation";
-import { useEffect, useState } from "react";
-import { errorWords, ProblemError } from "@/app/_client/request";
+import { useState } from "react";
+import { useLeaveWarning } from "@/app/_client/use-leave-warning";
+import { currentRow, errorWords, ProblemError } from "@/app/_client/request";
 import { priceDeckSchema, type PriceDeckView } from "@/app/api/v1/price-decks/schema";
 import { useBasis } from "@/components/basis/use-basis";
 import { Button } from "@/components/ui/button";
@@ -42,7 +43,7 @@ export function DeckEditor({ deck, before, crumbs }: DeckEditorProps) {
   const { body, faults } = readDeckText(text);
   const isFaulty = Object.keys(faults).length > 0;
   const isDirty = JSON.stringify(text) !== JSON.stringify(deckTextOf(base));
-  const theirs = currentOf(problem);
+  const theirs = currentRow(problem, priceDeckSchema);
   useLeaveWarning(isDirty);
 
   const change = (part: Partial<DeckText>) => setText((now) => ({ ...now, ...part }));
@@ -242,21 +243,4 @@ function withPrice(
 function problemWords(error: unknown): string {
   if (!(error instanceof ProblemError) || error.errors.length < 2) return errorWords(error);
   return `${error.errors.map(({ detail }) => detail).join("; ")}.`;
-}
-
-/** The deck as it is now, when somebody else saved first. */
-function currentOf(error: unknown): PriceDeckView | null {
-  if (!(error instanceof ProblemError) || error.status !== 412) return null;
-  const parsed = priceDeckSchema.safeParse(error.current);
-  return parsed.success ? parsed.data : null;
-}
-
-/** The browser asks before a page with unsaved work is left. */
-function useLeaveWarning(isDirty: boolean): void {
-  useEffect(() => {
-    if (!isDirty) return;
-    const warn = (event: BeforeUnloadEvent) => event.preventDefault();
-    window.addEventListener("beforeunload", warn);
-    return () => window.removeEventListener("beforeunload", warn);
-  }, [isDirty]);
 }

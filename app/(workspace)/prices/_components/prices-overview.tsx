@@ -1,14 +1,15 @@
 "use client";
 
 import { useState } from "react";
-import { errorWords } from "@/app/_client/request";
+
+import { ReadError } from "@/app/_client/read-error";
 import { useCan } from "@/app/_client/use-session";
 import type { PriceDeckView } from "@/app/api/v1/price-decks/schema";
 import { useBasis } from "@/components/basis/use-basis";
 import { Button, LinkButton } from "@/components/ui/button";
 import { formatDate } from "@/components/ui/format";
 import { Page, PageHead, Section, Stack } from "@/components/ui/section";
-import { EmptyState, Notice, Skeleton } from "@/components/ui/status";
+import { EmptyState, Skeleton } from "@/components/ui/status";
 import { usePriceDecks } from "../_queries/price-decks";
 import {
   condensateMove,
@@ -34,17 +35,9 @@ export function PricesOverview() {
       <Page>
         <PageHead title="Prices" />
         {error ? (
-          <Notice
-            tone="error"
-            title={errorWords(error)}
-            actions={
-              <Button size="small" onClick={() => void refetch()}>
-                Try again
-              </Button>
-            }
-          >
+          <ReadError error={error} onRetry={refetch}>
             The decks are kept; only this list could not be read.
-          </Notice>
+          </ReadError>
         ) : (
           <Skeleton lines={10} label="Loading the price decks" />
         )}

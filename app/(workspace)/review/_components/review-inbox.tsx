@@ -1,12 +1,12 @@
 "use client";
 
-import { errorWords } from "@/app/_client/request";
+import { ReadError } from "@/app/_client/read-error";
 import { countWord } from "@/app/_client/words";
 import { useSession } from "@/app/_client/use-session";
 import { useBasis } from "@/components/basis/use-basis";
-import { Button, LinkButton } from "@/components/ui/button";
+import { LinkButton } from "@/components/ui/button";
 import { Page, PageHead, Section, Stack } from "@/components/ui/section";
-import { EmptyState, Notice, Skeleton } from "@/components/ui/status";
+import { EmptyState, Skeleton } from "@/components/ui/status";
 import { useReview } from "../_queries/review";
 import { ReviewTable } from "./review-table";
 import { inboxTitle } from "./waiting";
@@ -30,17 +30,9 @@ export function ReviewInbox() {
     return (
       <Page>
         <PageHead title="Review" />
-        <Notice
-          tone="error"
-          title={errorWords(error)}
-          actions={
-            <Button size="small" onClick={() => void refetch()}>
-              Try again
-            </Button>
-          }
-        >
+        <ReadError error={error} onRetry={refetch}>
           What waits is kept; only this list could not be read.
-        </Notice>
+        </ReadError>
       </Page>
     );
   }

@@ -1,7 +1,8 @@
 "use client";
 
 import { useSearchParams } from "next/navigation";
-import { errorWords } from "@/app/_client/request";
+
+import { ReadError } from "@/app/_client/read-error";
 import { useCan } from "@/app/_client/use-session";
 import { useDependenceSets } from "@/app/_workspace/use-dependence-sets";
 import type { DependenceSetView } from "@/app/api/v1/dependence-sets/schema";
@@ -32,17 +33,9 @@ export function DependencePage() {
       <Page>
         <PageHead title="How fields move together" crumbs={crumbs} />
         {error ? (
-          <Notice
-            tone="error"
-            title={errorWords(error)}
-            actions={
-              <Button size="small" onClick={() => void refetch()}>
-                Try again
-              </Button>
-            }
-          >
+          <ReadError error={error} onRetry={refetch}>
             The sets are kept; only this page could not be read.
-          </Notice>
+          </ReadError>
         ) : (
           <Skeleton lines={10} label="Loading the dependence sets" />
         )}

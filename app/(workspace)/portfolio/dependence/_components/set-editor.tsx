@@ -1,8 +1,9 @@
 "use client";
 
 import { useRouter } from "next/navigation";
-import { useEffect, useState } from "react";
-import { errorWords, ProblemError } from "@/app/_client/request";
+import { useState } from "react";
+import { useLeaveWarning } from "@/app/_client/use-leave-warning";
+import { currentRow, errorWords, ProblemError } from "@/app/_client/request";
 import type { PlacedField } from "@/analytics/portfolio/factor-model";
 import type { BasinView } from "@/app/api/v1/basins/schema";
 import { dependenceSetSchema, type DependenceSetView } from "@/app/api/v1/dependence-sets/schema";
@@ -43,7 +44,7 @@ export function SetEditor({ set, sets, basins, fields, totals }: SetEditorProps)
   const { body, faults } = readSetText(text, basins, fields);
   const isFaulty = Object.keys(faults).length > 0;
   const isDirty = JSON.stringify(text) !== JSON.stringify(startOf(base, standing));
-  const theirs = currentOf(problem);
+  const theirs = currentRow(problem, dependenceSetSchema);
   const told = { ...serverFaults(problem), ...faults };
   useLeaveWarning(isDirty);
 
@@ -225,21 +226,4 @@ function serverFaults(error: unknown): Record<string, string> {
 function problemWords(error: unknown): string {
   if (!(error instanceof ProblemError) || error.errors.length < 2) return errorWords(error);
   return error.errors.map(({ detail }) => detail).join(" ");
-}
-
-/** The set as it is now, when somebody else saved first. */
-function currentOf(error: unknown): DependenceSetView | null {
-  if (!(error instanceof ProblemError) || error.status !== 412) return null;
-  const parsed = dependenceSetSchema.safeParse(error.current);
-  return parsed.success ? parsed.data : null;
-}
-
-/** The browser asks before a page with unsaved work is left. */
-function useLeaveWarning(isDirty: boolean): void {
-  useEffect(() => {
-    if (!isDirty) return;
-    const warn = (event: BeforeUnloadEvent) => event.preventDefault();
-    window.addEventListener("beforeunload", warn);
-    return () => window.removeEventListener("beforeunload", warn);
-  }, [isDirty]);
 }

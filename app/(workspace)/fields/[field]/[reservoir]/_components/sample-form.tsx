@@ -2,7 +2,7 @@
 
 import { useState } from "react";
 import type { SeparatorTest } from "@/analytics/fluid/separator-test-schema";
-import { errorWords, ProblemError } from "@/app/_client/request";
+import { currentRow, errorWords, ProblemError } from "@/app/_client/request";
 import { fluidSampleSchema, type FluidSampleView } from "@/app/api/v1/fluid-samples/schema";
 import { isSameFluid } from "@/components/estimate/differences";
 import { SampleConflict } from "@/components/fluid/sample-conflict";
@@ -70,7 +70,7 @@ export function SampleForm({
           });
           onSaved(saved);
         },
-        onError: (error) => setTheirs(currentOf(error)),
+        onError: (error) => setTheirs(currentRow(error, fluidSampleSchema)),
       },
     );
   }
@@ -151,11 +151,4 @@ export function SampleForm({
       )}
     </Section>
   );
-}
-
-/** The other person's version, when that is why saving was refused. */
-function currentOf(error: Error): FluidSampleView | null {
-  if (!(error instanceof ProblemError) || error.status !== 412) return null;
-  const current = fluidSampleSchema.safeParse(error.current);
-  return current.success ? current.data : null;
 }

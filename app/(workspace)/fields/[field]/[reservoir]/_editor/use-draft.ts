@@ -1,6 +1,7 @@
 "use client";
 
 import { useCallback, useEffect, useMemo, useRef, useState } from "react";
+import { useLeaveWarning } from "@/app/_client/use-leave-warning";
 import type { EstimateInputs, InputName } from "@/analytics/volumetrics/inputs-schema";
 import type { DriverName } from "@/analytics/volumetrics/results-schema";
 import { errorWords, ProblemError } from "@/app/_client/request";
@@ -157,13 +158,7 @@ export function useDraft(start: DraftStart) {
     return () => clearTimeout(timer);
   }, [isSaved, text, base, reservoirId, initial.text]);
 
-  const isUnsafe = !isSaved && text !== initial.text;
-  useEffect(() => {
-    if (!isUnsafe) return;
-    const warn = (event: BeforeUnloadEvent) => event.preventDefault();
-    addEventListener("beforeunload", warn);
-    return () => removeEventListener("beforeunload", warn);
-  }, [isUnsafe]);
+  useLeaveWarning(!isSaved && text !== initial.text);
 
   const change = useCallback((next: (text: EstimateText) => EstimateText) => {
     setText(next);
