@@ -7,7 +7,7 @@ import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
 import type { EstimateInputs, InputName } from "@/analytics/volumetrics/inputs-schema";
 import { simulate } from "@/analytics/volumetrics/simulate";
 import { buildPlan } from "../recovery/published-curve";
-import { buildInputs, constants } from "../volumetrics/estimate-inputs";
+import { buildInputs, withoutSpread } from "../volumetrics/estimate-inputs";
 
 const run = (inputs: EstimateInputs, changes: Partial<EstimateRun> = {}): EstimateRun => ({
   inputs,
@@ -43,23 +43,11 @@ const lognormal = (median: number, ratio: number): Distribution => ({
   p90: median / ratio,
   p10: median * ratio,
 });
-const fixed = constants({
-  areaAcres: 2000,
-  netThicknessFt: 80,
-  porosity: 0.15,
-  waterSaturation: 0.25,
-  pressurePsia: 6500,
-  temperatureDegF: 260,
-  condensateYieldStbPerMmscf: 80,
-  gasRecovery: 0.7,
-  condensateRecovery: 0.35,
-  salesGasFraction: 0.93,
-});
 const product = (areaMedian: number, thicknessMedian: number, more = {}) =>
   run(
     buildInputs(
       {
-        ...fixed,
+        ...withoutSpread,
         areaAcres: lognormal(areaMedian, 1.7),
         netThicknessFt: lognormal(thicknessMedian, 1.4),
         ...more,
@@ -95,7 +83,7 @@ describe("explainChange", () => {
     { timeout: 60_000 },
     () => {
       const shifted = Object.fromEntries(
-        Object.entries(fixed).map(([name, distribution]) => [
+        Object.entries(withoutSpread).map(([name, distribution]) => [
           name,
           { kind: "constant", value: (distribution as { value: number }).value * 1.02 },
         ]),
@@ -166,13 +154,13 @@ describe("explainChange", () => {
 
   it("averages over drawn orders, with standard errors, when much has changed", () => {
     const shifted = Object.fromEntries(
-      Object.entries(fixed).map(([name, distribution]) => [
+      Object.entries(withoutSpread).map(([name, distribution]) => [
         name,
         { kind: "constant", value: (distribution as { value: number }).value * 1.02 },
       ]),
     ) as Record<InputName, Distribution>;
     const explanation = explain(
-      run(buildInputs(fixed, { correlations: [] }), { trials: 200 }),
+      run(buildInputs(withoutSpread, { correlations: [] }), { trials: 200 }),
       run(buildInputs(shifted, { correlations: [] }), { trials: 200 }),
     );
     expect(explanation.orders).toBe(64);

@@ -7,7 +7,7 @@ import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
 import { samplingMethods } from "@/analytics/uncertainty/sampling-schema";
 import { simulate } from "@/analytics/volumetrics/simulate";
 import { createWorkspace } from "@/analytics/volumetrics/workspace";
-import { buildInputs, constants } from "../volumetrics/estimate-inputs";
+import { buildInputs, withoutSpread } from "../volumetrics/estimate-inputs";
 
 /** The result is area times thickness times porosity times what is constant: a product of three lognormals. */
 const names = ["areaAcres", "netThicknessFt", "porosity"] as const;
@@ -18,18 +18,7 @@ const distributions: Record<(typeof names)[number], Distribution> = {
 };
 const inputs = buildInputs(
   {
-    ...constants({
-      areaAcres: 2000,
-      netThicknessFt: 80,
-      porosity: 0.15,
-      waterSaturation: 0.25,
-      pressurePsia: 6500,
-      temperatureDegF: 260,
-      condensateYieldStbPerMmscf: 80,
-      gasRecovery: 0.7,
-      condensateRecovery: 0.35,
-      salesGasFraction: 0.93,
-    }),
+    ...withoutSpread,
     ...distributions,
   },
   { correlations: [] },

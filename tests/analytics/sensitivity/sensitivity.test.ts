@@ -5,7 +5,7 @@ import { compileDistribution } from "@/analytics/uncertainty/distribution";
 import type { Distribution } from "@/analytics/uncertainty/distribution-schema";
 import { simulate } from "@/analytics/volumetrics/simulate";
 import { buildCycling, buildPlan, psia } from "../recovery/published-curve";
-import { buildInputs, constants } from "../volumetrics/estimate-inputs";
+import { buildInputs, withoutSpread } from "../volumetrics/estimate-inputs";
 
 const options = {
   seed: 11,
@@ -15,23 +15,11 @@ const options = {
   chosen: { from: 0.9, to: 1 },
 } as const;
 
-const fixed = constants({
-  areaAcres: 2000,
-  netThicknessFt: 80,
-  porosity: 0.15,
-  waterSaturation: 0.25,
-  pressurePsia: 6500,
-  temperatureDegF: 260,
-  condensateYieldStbPerMmscf: 80,
-  gasRecovery: 0.7,
-  condensateRecovery: 0.35,
-  salesGasFraction: 0.93,
-});
 /** Area times thickness times what is constant: a product of two lognormals. */
 const area: Distribution = { kind: "lognormalP90P10", p90: 1400, p10: 4200 };
 const thickness: Distribution = { kind: "lognormalP90P10", p90: 50, p10: 120 };
 const product = buildInputs(
-  { ...fixed, areaAcres: area, netThicknessFt: thickness },
+  { ...withoutSpread, areaAcres: area, netThicknessFt: thickness },
   { correlations: [] },
 );
 const variances = [area, thickness].map((distribution) => {
@@ -163,7 +151,10 @@ describe("computeSensitivity", () => {
   });
 
   it("has nothing to say of an estimate that does not vary", () => {
-    const sensitivity = computeSensitivity(buildInputs(fixed, { correlations: [] }), options);
+    const sensitivity = computeSensitivity(
+      buildInputs(withoutSpread, { correlations: [] }),
+      options,
+    );
     expect(sensitivity.knowing).toEqual([]);
     expect(sensitivity.varianceShares.factors).toEqual([]);
     expect(sensitivity.rankRegression).toEqual({ rSquared: 0, coefficients: [], leftOut: [] });

@@ -4,29 +4,16 @@ import { halfWidth95 } from "@/analytics/uncertainty/replicates";
 import type { SamplingMethod } from "@/analytics/uncertainty/sampling-schema";
 import { simulate } from "@/analytics/volumetrics/simulate";
 import { createWorkspace } from "@/analytics/volumetrics/workspace";
-import { buildInputs, constants } from "./estimate-inputs";
+import { buildInputs, oneAcreFoot } from "./estimate-inputs";
 
 const MU = { area: 7, thickness: 4 };
 const SIGMA = { area: 0.5, thickness: 0.35 };
 const LEVELS = ["p90", "p50", "p10", "mean"] as const;
 
-const fixed = constants({
-  areaAcres: 1,
-  netThicknessFt: 1,
-  porosity: 0.1,
-  waterSaturation: 0.25,
-  pressurePsia: 6500,
-  temperatureDegF: 260,
-  condensateYieldStbPerMmscf: 80,
-  gasRecovery: 0.7,
-  condensateRecovery: 0.4,
-  salesGasFraction: 0.9,
-});
-
 function reservoir(rank: number) {
   return buildInputs(
     {
-      ...fixed,
+      ...oneAcreFoot,
       areaAcres: { kind: "lognormal", mu: MU.area, sigma: SIGMA.area },
       netThicknessFt: { kind: "lognormal", mu: MU.thickness, sigma: SIGMA.thickness },
     },
@@ -39,8 +26,8 @@ function reservoir(rank: number) {
  * correlation of normal scores that a rank correlation stands for, 2 sin(pi rank / 6) (Pearson 1907).
  */
 function closedForm(rank: number) {
-  const unit = simulate(buildInputs(fixed, { correlations: [] }), { trials: 100, seed: 1 }).summary
-    .deterministic.wetGasInPlaceScf;
+  const unit = simulate(buildInputs(oneAcreFoot, { correlations: [] }), { trials: 100, seed: 1 })
+    .summary.deterministic.wetGasInPlaceScf;
   const r = 2 * Math.sin((Math.PI * rank) / 6);
   const variance = SIGMA.area ** 2 + SIGMA.thickness ** 2 + 2 * r * SIGMA.area * SIGMA.thickness;
   const product = compileDistribution({

@@ -2,23 +2,11 @@ import { describe, expect, it } from "vitest";
 import { compileDistribution } from "@/analytics/uncertainty/distribution";
 import { simulate } from "@/analytics/volumetrics/simulate";
 import { createWorkspace } from "@/analytics/volumetrics/workspace";
-import { buildInputs, constants } from "./estimate-inputs";
+import { buildInputs, oneAcreFoot } from "./estimate-inputs";
 
 const SEEDS = 200;
 const LEVELS = ["p90", "p50", "p10", "mean"] as const;
 
-const fixed = constants({
-  areaAcres: 1,
-  netThicknessFt: 1,
-  porosity: 0.1,
-  waterSaturation: 0.25,
-  pressurePsia: 6500,
-  temperatureDegF: 260,
-  condensateYieldStbPerMmscf: 80,
-  gasRecovery: 0.7,
-  condensateRecovery: 0.4,
-  salesGasFraction: 0.9,
-});
 const ranges = { areaAcres: [1000, 4000], netThicknessFt: [30, 120], porosity: [0.12, 0.2] };
 const lognormals = Object.fromEntries(
   Object.entries(ranges).map(([name, [p90, p10]]) => [
@@ -26,11 +14,11 @@ const lognormals = Object.fromEntries(
     { kind: "lognormalP90P10" as const, p90, p10 },
   ]),
 );
-const inputs = buildInputs({ ...fixed, ...lognormals }, { correlations: [] });
+const inputs = buildInputs({ ...oneAcreFoot, ...lognormals }, { correlations: [] });
 
 /** Area, thickness and porosity enter as a product, so gas in place is lognormal: means and variances of logarithms add up. */
 function closedForm() {
-  const { deterministic } = simulate(buildInputs(fixed, { correlations: [] }), {
+  const { deterministic } = simulate(buildInputs(oneAcreFoot, { correlations: [] }), {
     trials: 100,
     seed: 1,
   }).summary;

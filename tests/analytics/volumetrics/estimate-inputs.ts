@@ -59,3 +59,31 @@ export function constants(values: Record<InputName, number>): Record<InputName, 
     inputNames.map((name) => [name, { kind: "constant", value: values[name] }]),
   ) as Record<InputName, Distribution>;
 }
+
+/** An acre-foot of rock in which nothing is uncertain: volumes per unit of what a test then varies. */
+export const oneAcreFoot = constants({
+  areaAcres: 1,
+  netThicknessFt: 1,
+  porosity: 0.1,
+  waterSaturation: 0.25,
+  pressurePsia: 6500,
+  temperatureDegF: 260,
+  condensateYieldStbPerMmscf: 80,
+  gasRecovery: 0.7,
+  condensateRecovery: 0.4,
+  salesGasFraction: 0.9,
+});
+
+/** A whole reservoir in which nothing is uncertain. */
+export const withoutSpread = constants({
+  areaAcres: 2000,
+  netThicknessFt: 80,
+  porosity: 0.15,
+  waterSaturation: 0.25,
+  pressurePsia: 6500,
+  temperatureDegF: 260,
+  condensateYieldStbPerMmscf: 80,
+  gasRecovery: 0.7,
+  condensateRecovery: 0.35,
+  salesGasFraction: 0.93,
+});

@@ -12,7 +12,7 @@ import { ENGINE_VERSION, simulate } from "@/analytics/volumetrics/simulate";
 import { fillZFactors } from "@/analytics/volumetrics/trial-z";
 import { createWorkspace } from "@/analytics/volumetrics/workspace";
 import chain from "../../fixtures/whole-chain.json";
-import { buildInputs, constants } from "./estimate-inputs";
+import { buildInputs, constants, oneAcreFoot } from "./estimate-inputs";
 
 const TRIALS = 4000;
 
@@ -137,19 +137,7 @@ describe("simulate", () => {
     { timeout: 60_000 },
     () => {
       // ln(A h phi) is normal: the means and variances of the logarithms of the three add up.
-      const fixed = constants({
-        areaAcres: 1,
-        netThicknessFt: 1,
-        porosity: 0.1,
-        waterSaturation: 0.25,
-        pressurePsia: 6500,
-        temperatureDegF: 260,
-        condensateYieldStbPerMmscf: 80,
-        gasRecovery: 0.7,
-        condensateRecovery: 0.4,
-        salesGasFraction: 0.9,
-      });
-      const one = simulate(buildInputs(fixed, { correlations: [] }), {
+      const one = simulate(buildInputs(oneAcreFoot, { correlations: [] }), {
         trials: 100,
         seed: 1,
       }).summary;
@@ -157,7 +145,7 @@ describe("simulate", () => {
       const { summary: run } = simulate(
         buildInputs(
           {
-            ...fixed,
+            ...oneAcreFoot,
             areaAcres: { kind: "lognormalP90P10", p90: 1000, p10: 4000 },
             netThicknessFt: { kind: "lognormalP90P10", p90: 30, p10: 120 },
             porosity: { kind: "lognormalP90P10", p90: 0.12, p10: 0.2 },
