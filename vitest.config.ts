@@ -16,7 +16,18 @@ export default defineConfig({
         test: {
           name: "unit",
           setupFiles: ["tests/support/property-seed.ts"],
-          include: ["tests/{analytics,components,policy,services,scripts}/**/*.test.{ts,tsx}"],
+          include: ["tests/{analytics,components,policy,scripts}/**/*.test.{ts,tsx}"],
+          environment: "node",
+          // Pure functions: loading everything anew for each file took longer than the tests.
+          isolate: false,
+        },
+      },
+      {
+        resolve: { alias },
+        test: {
+          name: "services",
+          setupFiles: ["tests/support/property-seed.ts"],
+          include: ["tests/services/**/*.test.ts"],
           environment: "node",
         },
       },

@@ -23,7 +23,7 @@ import { failureFromOutput } from "./lib/failure.mjs";
 import { readJsonIfAny, root } from "./lib/paths.mjs";
 import { stopOnSignal } from "./lib/processes.mjs";
 import { run, stopRunning } from "./lib/run.mjs";
-import { needsBrowser, needsProduct, selectsByName } from "./lib/test-needs.mjs";
+import { needsBrowser, needsProduct, selectsByName, UNIT_PROJECTS } from "./lib/test-needs.mjs";
 import { prepareProduct, startTestProduct } from "./lib/test-product.mjs";
 
 const dev = process.argv.includes("--dev");
@@ -96,7 +96,8 @@ async function environment(args) {
 
 async function everything() {
   await checkSources();
-  await vitest("Unit tests", ["--project", "unit"], process.env);
+  const unit = UNIT_PROJECTS.flatMap((project) => ["--project", project]);
+  await vitest("Unit tests", unit, process.env);
   const env = await environment([]);
   if (env === null) {
     say("API and browser tests could not run.");

@@ -1,5 +1,7 @@
 /** What the tests that were asked for need besides the code. No argument means all tests. */
 
+/** Projects of tests that need nothing but the code. */
+export const UNIT_PROJECTS = ["unit", "services"];
 const UNIT = /(^|\/)tests\/(analytics|components|policy|services|scripts)(\/|$)/;
 const BROWSER = /(^|\/)tests\/e2e(\/|$)/;
 
@@ -7,7 +9,7 @@ const BROWSER = /(^|\/)tests\/e2e(\/|$)/;
 export function needsProduct(args) {
   const projects = projectsOf(args);
   const files = filesOf(args);
-  if (projects.length > 0) return projects.some((project) => project !== "unit");
+  if (projects.length > 0) return projects.some((project) => !UNIT_PROJECTS.includes(project));
   return files.length === 0 || files.some((file) => !UNIT.test(file));
 }
 

@@ -37,7 +37,10 @@ async function toTheTank(page: Page): Promise<string> {
 
 async function shape(page: Page, input: string, name: string) {
   await page.getByRole("button", { name: new RegExp(`^Shape of ${input}:`) }).click();
-  await page.getByRole("menuitem", { name: new RegExp(`^${name}`) }).click();
+  await page.getByRole("menuitem", { name: new RegExp(`^${name}`) }).waitFor();
+  // By its first letters, as from a keyboard: the menu moves while the rows above it find their height.
+  await page.keyboard.type(name);
+  await page.keyboard.press("Enter");
 }
 
 async function choose(page: Page, option: RegExp) {

@@ -36,6 +36,7 @@ describe("needsProduct", () => {
   it.each([
     [[], true],
     [["--project", "unit"], false],
+    [["--project", "services"], false],
     [["--project=api"], true],
     [["tests/analytics/gas/z-factor.test.ts"], false],
     [["tests/api/fields.test.ts", "-t", "answers 403"], true],
