@@ -28,7 +28,9 @@ process.on("unhandledRejection", (error) => {
 const runs = new RunWorker();
 // One lane more than there are calculation threads, which have work then while one lane stores its result.
 const lanes = Math.max(2, availableParallelism());
-const work = await workOn(handlersOf(runs), { "work-on-run": lanes });
+// Each looks for a letter once a second; a day's decisions should not wait for one another.
+const letters = 4;
+const work = await workOn(handlersOf(runs), { "work-on-run": lanes, "send-mail": letters });
 runs.start();
 log.info({ worker: runs.name, lanes }, "worker ready");
 // Tells the program that started this one, if it listens, that it is ready and what it is called.
