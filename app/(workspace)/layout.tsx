@@ -1,12 +1,12 @@
 import type { ReactNode } from "react";
-import { loadDecks, loadWorkspace } from "@/app/_workspace/load-workspace";
+import { loadBasisChoices, loadWorkspace } from "@/app/_workspace/load-workspace";
 import { WorkspaceFrame } from "@/app/_workspace/workspace-frame";
 
 /** Pages whose figures stand on the basis. Takes a signed-in person. */
 export default async function WorkspaceLayout({ children }: { children: ReactNode }) {
-  const [workspace, decks] = await Promise.all([loadWorkspace(), loadDecks()]);
+  const [workspace, choices] = await Promise.all([loadWorkspace(), loadBasisChoices()]);
   return (
-    <WorkspaceFrame {...workspace} decks={decks}>
+    <WorkspaceFrame {...workspace} choices={choices}>
       {children}
     </WorkspaceFrame>
   );

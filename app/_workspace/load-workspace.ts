@@ -1,8 +1,9 @@
 import "server-only";
 import { ENGINE_VERSION } from "@/analytics/volumetrics/simulate";
 import { requireActor } from "@/app/_server/session";
-import type { DeckChoice } from "@/components/layout/basis-strip";
+import type { BasisChoices } from "@/components/layout/basis-strip";
 import type { NavItem, Person } from "@/components/layout/top-bar";
+import { listDependenceSets } from "@/services/dependence-sets";
 import { can, type Actor } from "@/services/policy";
 import { listPriceDecks } from "@/services/price-decks";
 
@@ -20,15 +21,25 @@ export async function loadWorkspace(): Promise<Workspace> {
   return { person: personOf(actor), nav: sectionsOf(actor), engineVersion: ENGINE_VERSION };
 }
 
-/** Published price decks, latest first, for the basis strip. */
-export async function loadDecks(): Promise<DeckChoice[]> {
+/**
+ * Published price decks, latest first, and dependence sets, the book's own first, for the basis strip. They come with
+ * the page: a layout that asked for them in the browser could have them before the page beneath it is hydrated.
+ */
+export async function loadBasisChoices(): Promise<BasisChoices> {
   const actor = await requireActor();
-  const decks = await listPriceDecks(actor, { state: "published" }, { limit: 50, offset: 0 });
-  return decks.items.map(({ id, name, versionNumber, asOfOn }) => ({
-    id,
-    name: `${name} v${versionNumber}`,
-    asOf: asOfOn,
-  }));
+  const [decks, sets] = await Promise.all([
+    listPriceDecks(actor, { state: "published" }, { limit: 50, offset: 0 }),
+    listDependenceSets(actor),
+  ]);
+  return {
+    decks: decks.items.map(({ id, name, versionNumber, asOfOn }) => ({
+      id,
+      name: `${name} v${versionNumber}`,
+      asOf: asOfOn,
+    })),
+    dependenceSets: sets.map(({ id, name, isDefault }) => ({ id, name, isDefault })),
+    mayEditSets: can(actor, "dependenceSet.update"),
+  };
 }
 
 function personOf({ name, role }: Actor): Person {

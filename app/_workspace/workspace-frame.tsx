@@ -2,12 +2,10 @@
 
 import { signOut } from "next-auth/react";
 import { useLayoutEffect, type ReactNode } from "react";
-import type { DeckChoice } from "@/components/layout/basis-strip";
+import type { BasisChoices } from "@/components/layout/basis-strip";
 import type { NavItem, Person } from "@/components/layout/top-bar";
 import { applyTheme, rememberedTheme } from "@/components/layout/theme";
 import { WorkspaceShell } from "@/components/layout/workspace-shell";
-import { useCan } from "@/app/_client/use-session";
-import { useDependenceSets } from "./use-dependence-sets";
 import { useSessionWatch } from "./use-session-watch";
 import { useWaitingCount } from "./use-waiting-count";
 
@@ -16,7 +14,7 @@ export interface WorkspaceFrameProps {
   nav: readonly NavItem[];
   engineVersion: string;
   /** left out on pages whose figures stand on no basis */
-  decks?: readonly DeckChoice[];
+  choices?: BasisChoices;
   children: ReactNode;
 }
 
@@ -25,21 +23,18 @@ export function WorkspaceFrame({
   person,
   nav,
   engineVersion,
-  decks,
+  choices,
   children,
 }: WorkspaceFrameProps) {
   useSessionWatch();
   // A page that answers 403 is drawn anew in the browser, and with it the document's own attributes.
   useLayoutEffect(() => applyTheme(rememberedTheme()), []);
   const waiting = useWaitingCount();
-  const may = useCan();
-  const { data: dependenceSets } = useDependenceSets({ enabled: decks !== undefined });
   return (
     <WorkspaceShell
       person={person}
       nav={nav.map((item) => (item.href === "/review" ? { ...item, count: waiting } : item))}
-      decks={decks}
-      dependence={{ dependenceSets, mayEditSets: may("dependenceSet.update") }}
+      choices={choices}
       account={[
         {
           entries: [
@@ -50,7 +45,7 @@ export function WorkspaceFrame({
           ],
         },
       ]}
-      provenance={decks && `Engine ${engineVersion}`}
+      provenance={choices && `Engine ${engineVersion}`}
     >
       {children}
     </WorkspaceShell>

@@ -23,12 +23,15 @@ export interface DependenceChoice {
   isDefault: boolean;
 }
 
-export interface BasisStripProps {
+/** What a person can choose the basis from. */
+export interface BasisChoices {
   decks: readonly DeckChoice[];
-  /** undefined until they are known */
-  dependenceSets?: readonly DependenceChoice[];
+  dependenceSets: readonly DependenceChoice[];
   /** the person may change sets, not only look at them */
-  mayEditSets?: boolean;
+  mayEditSets: boolean;
+}
+
+export interface BasisStripProps extends BasisChoices {
   /** parts that a page fixes itself (a frozen round fixes its deck and its estimates), with what they say */
   fixed?: Partial<Record<keyof Basis, string>>;
 }
@@ -110,12 +113,7 @@ function dependencePart(
  * Says on what every number of the page stands. Each part opens to change it; what is not the
  * approved default turns warning ink.
  */
-export function BasisStrip({
-  decks,
-  dependenceSets = [],
-  mayEditSets = false,
-  fixed = {},
-}: BasisStripProps) {
+export function BasisStrip({ decks, dependenceSets, mayEditSets, fixed = {} }: BasisStripProps) {
   const { basis, setBasis, withBasis } = useBasis();
   const latest = decks[0];
   const deck = basis.deck === "latest" ? latest : decks.find(({ id }) => id === basis.deck);

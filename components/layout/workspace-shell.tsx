@@ -1,6 +1,6 @@
 import { Suspense, type ReactNode } from "react";
 import type { MenuGroup } from "@/components/ui/choice";
-import { BasisStrip, type BasisStripProps, type DeckChoice } from "./basis-strip";
+import { BasisStrip, type BasisChoices } from "./basis-strip";
 import { Footer } from "./footer";
 import { TopBar, type NavItem, type Person } from "./top-bar";
 
@@ -8,9 +8,7 @@ export interface WorkspaceShellProps {
   person: Person;
   nav: readonly NavItem[];
   /** for the basis strip; left out on pages whose figures stand on no basis */
-  decks?: readonly DeckChoice[];
-  /** for the strip's dependence */
-  dependence?: Pick<BasisStripProps, "dependenceSets" | "mayEditSets">;
+  choices?: BasisChoices;
   account: MenuGroup[];
   tools?: ReactNode;
   /** what made the numbers, for the footer */
@@ -22,8 +20,7 @@ export interface WorkspaceShellProps {
 export function WorkspaceShell({
   person,
   nav,
-  decks,
-  dependence,
+  choices,
   account,
   tools,
   provenance,
@@ -37,7 +34,7 @@ export function WorkspaceShell({
       {/* Both read the address, which is known only in the browser while a page is prerendered. */}
       <Suspense fallback={<div className="h-[88px]" />}>
         <TopBar person={person} nav={nav} account={account} tools={tools} />
-        {decks && <BasisStrip decks={decks} {...dependence} />}
+        {choices && <BasisStrip {...choices} />}
       </Suspense>
       {children}
       <Footer provenance={provenance} />

@@ -91,7 +91,7 @@ async function findingsOf(page: Page) {
 describe.each(Object.keys(pages) as (keyof typeof pages)[])("every page for a %s", (role) => {
   it("breaks no accessibility rule in either theme, and never scrolls sideways", async () => {
     const opened = await openPage(browser, { as: role === "visitor" ? undefined : role });
-    const { page, context } = opened;
+    const { page, context, problems } = opened;
     const found: Record<string, unknown> = {};
     for (const path of pages[role]?.() ?? []) {
       await page.setViewportSize({ width: views[0].width, height: 900 });
@@ -103,6 +103,7 @@ describe.each(Object.keys(pages) as (keyof typeof pages)[])("every page for a %s
       if (findings.length > 0) found[path] = findings;
     }
     expect(found).toEqual({});
+    expect(problems).toEqual([]);
     await context.close();
   });
 });

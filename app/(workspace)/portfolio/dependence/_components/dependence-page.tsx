@@ -4,13 +4,12 @@ import { useSearchParams } from "next/navigation";
 
 import { ReadError } from "@/app/_client/read-error";
 import { useCan } from "@/app/_client/use-session";
-import { useDependenceSets } from "@/app/_workspace/use-dependence-sets";
 import type { DependenceSetView } from "@/app/api/v1/dependence-sets/schema";
 import { useBasis } from "@/components/basis/use-basis";
 import { Button, LinkButton } from "@/components/ui/button";
 import { Page, PageHead, Stack } from "@/components/ui/section";
 import { EmptyState, Notice, Skeleton } from "@/components/ui/status";
-import { useBasins, useBookFields, useSetTotals } from "../_queries/dependence";
+import { useBasins, useBookFields, useDependenceSets, useSetTotals } from "../_queries/dependence";
 import { RankMeaning } from "./rank-meaning";
 import { basinRankWords } from "./rank-words";
 import { SetEditor } from "./set-editor";

@@ -1,11 +1,13 @@
 "use client";
 
 import { useMutation, useQueries, useQuery, useQueryClient } from "@tanstack/react-query";
+import { useRouter } from "next/navigation";
 import { z } from "zod";
 import { request } from "@/app/_client/request";
 import { basinsSchema } from "@/app/api/v1/basins/schema";
 import {
   dependenceSetSchema,
+  dependenceSetsSchema,
   type DependenceSetPatchRequest,
   type DependenceSetView,
   type NewDependenceSetRequest,
@@ -13,6 +15,16 @@ import {
 import { rankingSchema, type Ranking } from "@/app/api/v1/fields/ranking-schema";
 import type { PlacedField } from "@/analytics/portfolio/factor-model";
 import { basisParams, type Basis } from "@/components/basis/basis";
+
+/** Every named answer to how fields move together, the book's own first. There are a few. */
+export function useDependenceSets() {
+  return useQuery({
+    queryKey: ["dependence-sets"],
+    queryFn: ({ signal }) =>
+      request("/api/v1/dependence-sets", { schema: dependenceSetsSchema, signal }),
+    select: ({ items }) => items,
+  });
+}
 
 export function useBasins() {
   return useQuery({
@@ -65,10 +77,14 @@ export function useSetTotals(basis: Basis, sets: readonly DependenceSetView[]) {
   });
 }
 
-/** Totals stand on sets, so that whatever a page shows is read anew. */
+/** Totals stand on sets and the basis strip lists them, so the shell and whatever a page shows are read anew. */
 function useRefresh() {
   const client = useQueryClient();
-  return () => client.invalidateQueries();
+  const router = useRouter();
+  return () => {
+    router.refresh();
+    return client.invalidateQueries();
+  };
 }
 
 export function useCreateSet() {
