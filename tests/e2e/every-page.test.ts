@@ -67,9 +67,6 @@ const views = [
   { width: 360, theme: "dark" },
 ] as const;
 
-/** Longer than any transition of a colour. */
-const COLOURS_CHANGE_MS = 400;
-
 async function findingsOf(page: Page) {
   const findings: unknown[] = [];
   for (const { width, theme } of views) {
@@ -77,8 +74,6 @@ async function findingsOf(page: Page) {
     await page.evaluate((name) => {
       document.documentElement.dataset.theme = name;
     }, theme);
-    // Half-way between two themes, colours are neither's.
-    await page.waitForTimeout(COLOURS_CHANGE_MS);
     const violations = await axeViolations(page);
     const tooWide = await page.evaluate(
       () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
